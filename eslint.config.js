@@ -1,0 +1,98 @@
+import js from '@eslint/js';
+import prettier from 'eslint-config-prettier';
+import checkFile from 'eslint-plugin-check-file';
+import reactHooks from 'eslint-plugin-react-hooks';
+import { defineConfig } from 'eslint/config';
+import globals from 'globals';
+import ts from 'typescript-eslint';
+
+const IMPURE_GLOBALS = [
+  'process',
+  'console',
+  'performance',
+  'Date',
+  'crypto',
+  'fetch',
+  'setTimeout',
+  'setInterval',
+];
+
+/** @type {import('eslint').Linter.Config} */
+const everywhere = {
+  languageOptions: {
+    parserOptions: { projectService: true, tsconfigRootDir: import.meta.dirname },
+  },
+  plugins: { 'check-file': checkFile },
+  rules: {
+    'check-file/filename-naming-convention': [
+      'error',
+      { '**/*.{ts,tsx,js,mjs}': 'KEBAB_CASE' },
+      { ignoreMiddleExtensions: true },
+    ],
+    'max-lines': ['warn', { max: 350 }],
+    'max-params': ['error', { max: 4 }],
+    'no-restricted-syntax': [
+      'error',
+      { selector: 'TSEnumDeclaration', message: 'Use an `as const` array with a derived union.' },
+      { selector: 'ExportAllDeclaration', message: 'No barrel files: import from the file that defines it.' },
+    ],
+    eqeqeq: ['error', 'always', { null: 'ignore' }],
+    '@typescript-eslint/consistent-type-imports': ['error', { fixStyle: 'inline-type-imports' }],
+    '@typescript-eslint/no-non-null-assertion': 'off',
+    '@typescript-eslint/no-unused-vars': ['error', { argsIgnorePattern: '^_', ignoreRestSiblings: true }],
+    '@typescript-eslint/restrict-template-expressions': ['error', { allowNumber: true, allowBoolean: true }],
+    '@typescript-eslint/no-misused-promises': ['error', { checksVoidReturn: { attributes: false } }],
+  },
+};
+
+/**
+ * The engine and the sweep give the same answer for the same input: no clock, no chance, no surroundings.
+ *
+ * @type {import('eslint').Linter.Config}
+ */
+const pure = {
+  files: ['shared/engine/**', 'shared/sweep/**'],
+  rules: {
+    'no-restricted-globals': ['error', ...IMPURE_GLOBALS],
+    'no-restricted-properties': ['error', { object: 'Math', property: 'random' }],
+  },
+};
+
+export default defineConfig(
+  { ignores: ['dist', 'node_modules', '.data', 'drizzle'] },
+  js.configs.recommended,
+  ts.configs.recommendedTypeChecked,
+  everywhere,
+  pure,
+  {
+    files: ['shared/**'],
+    rules: {
+      'no-restricted-imports': ['error', { patterns: ['node:*', '#server/*', '#client/*'] }],
+    },
+  },
+  {
+    files: ['client/**/*.{ts,tsx}'],
+    extends: [reactHooks.configs.flat['recommended-latest']],
+  },
+  {
+    // Plain JavaScript with JSDoc, run before any package is installed.
+    files: ['**/*.{js,mjs}'],
+    languageOptions: { globals: globals.node },
+    rules: {
+      '@typescript-eslint/no-unsafe-assignment': 'off',
+      '@typescript-eslint/no-unsafe-return': 'off',
+    },
+  },
+  {
+    // A mocked response or a fixture read from JSON is `any` until the assertion pins it down.
+    files: ['tests/**'],
+    rules: {
+      '@typescript-eslint/no-unsafe-assignment': 'off',
+      '@typescript-eslint/no-unsafe-member-access': 'off',
+      '@typescript-eslint/no-unsafe-argument': 'off',
+      '@typescript-eslint/no-unsafe-return': 'off',
+      '@typescript-eslint/no-unsafe-call': 'off',
+    },
+  },
+  prettier,
+);
