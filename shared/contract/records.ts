@@ -1,0 +1,258 @@
+import { z } from 'zod';
+import type { Evaluation } from '../engine/evaluation.ts';
+import type { ViewResult } from '../sweep/result.ts';
+import { designBasisSchema, fullBasisSchema, priceBookSchema } from './design-basis.ts';
+import { bounded, depthMmSchema, idSchema, momentNmmSchema, nonEmptyText } from './numbers.ts';
+import { demandSchema, sectionInputSchema, userRulesSchema } from './section-input.ts';
+import { sweepDefinitionSchema, viewSchema } from './sweep-definition.ts';
+
+/** The engine's and the sweep's own outputs are trusted on the way out; the schema names them without re-checking. */
+export const evaluationSchema = z.custom<Evaluation>((v) => typeof v === 'object' && v !== null);
+export const viewResultSchema = z.custom<ViewResult>((v) => typeof v === 'object' && v !== null);
+
+export const ROLES = ['admin', 'engineer', 'checker', 'estimator', 'viewer'] as const;
+export type Role = (typeof ROLES)[number];
+
+const timestamp = z.iso.datetime();
+
+export const personSchema = z.object({
+  id: idSchema,
+  name: z.string(),
+  email: z.string(),
+  role: z.enum(ROLES),
+});
+export type Person = z.infer<typeof personSchema>;
+
+export const sessionSchema = z.object({ person: personSchema.nullable(), csrfToken: z.string() });
+export type Session = z.infer<typeof sessionSchema>;
+
+export const signInSchema = z.object({
+  email: z.string({ error: 'E-mail is missing' }).trim().min(1, 'E-mail is missing').max(200),
+  password: z.string({ error: 'Password is missing' }).min(1, 'Password is missing').max(200),
+});
+
+export const projectInputSchema = z.object({
+  name: nonEmptyText('Project name', 120),
+  number: nonEmptyText('Project number', 40),
+  designBasis: designBasisSchema,
+});
+export const projectSchema = projectInputSchema.extend({
+  id: idSchema,
+  createdAt: timestamp,
+  beamCount: z.number(),
+  candidateCount: z.number(),
+  approvedCount: z.number(),
+  members: z.array(personSchema),
+  /** Null where the reader may not see rates, or none are set. */
+  priceBook: priceBookSchema.nullable(),
+});
+export type Project = z.infer<typeof projectSchema>;
+
+export const beamInputSchema = z.object({
+  mark: nonEmptyText('Mark', 40),
+  location: z.string().trim().max(200),
+  spanMm: bounded('Span', 100, 100_000, 'mm'),
+  count: z
+    .number({ error: 'Count must be a whole number' })
+    .int('Count must be a whole number')
+    .min(1, 'Count must be at least 1')
+    .max(10_000, 'Count must be at most 10000'),
+  muNmm: momentNmmSchema,
+  /** Kept with the beam for the shear design; null where not known yet. */
+  vuN: bounded('Shear Vu', 0, 1e9, 'N').nullable(),
+  ductilityTarget: bounded('Ductility target μφ', 0, 100, '').nullable(),
+  depthCapMm: depthMmSchema.nullable(),
+});
+export const beamSchema = beamInputSchema.extend({
+  id: idSchema,
+  projectId: idSchema,
+  sweepCount: z.number(),
+  candidateCount: z.number(),
+});
+export type BeamInput = z.infer<typeof beamInputSchema>;
+export type Beam = z.infer<typeof beamSchema>;
+
+export const RUN_STATES = ['queued', 'running', 'finished', 'cancelled', 'failed'] as const;
+export type RunState = (typeof RUN_STATES)[number];
+
+/** Live state of one view of a run; what the event stream sends. */
+export const viewProgressSchema = z.object({
+  viewId: idSchema,
+  view: viewSchema,
+  state: z.enum(RUN_STATES),
+  evaluated: z.number(),
+  feasible: z.number(),
+  sectionCount: z.number(),
+  elapsedMs: z.number(),
+  /** The final result, or the part that is done. Null until the first chunk. */
+  result: viewResultSchema.nullable(),
+  message: z.string().nullable(),
+});
+export type ViewProgress = z.infer<typeof viewProgressSchema>;
+
+export const runSummarySchema = z.object({
+  id: idSchema,
+  sweepId: idSchema,
+  number: z.number(),
+  state: z.enum(RUN_STATES),
+  sectionCount: z.number(),
+  evaluated: z.number(),
+  feasible: z.number(),
+  frontCount: z.number(),
+  hash: z.string().nullable(),
+  engineVersion: z.string(),
+  startedBy: personSchema.pick({ id: true, name: true }),
+  createdAt: timestamp,
+  elapsedMs: z.number().nullable(),
+});
+export type RunSummary = z.infer<typeof runSummarySchema>;
+
+/** One immutable execution: everything frozen, and its views. */
+export const runSchema = runSummarySchema.extend({
+  projectId: idSchema,
+  beam: beamSchema.pick({ id: true, mark: true, location: true, spanMm: true, count: true }),
+  sweepName: z.string(),
+  definition: sweepDefinitionSchema,
+  /** Rates are null where the reader may not see them. */
+  basis: fullBasisSchema,
+  views: z.array(viewProgressSchema.omit({ result: true })),
+});
+export type Run = z.infer<typeof runSchema>;
+
+export const sweepInputSchema = z.object({
+  name: nonEmptyText('Sweep name', 120),
+  definition: sweepDefinitionSchema,
+});
+export const sweepSchema = sweepInputSchema.extend({
+  id: idSchema,
+  projectId: idSchema,
+  beamId: idSchema,
+  beamMark: z.string(),
+  createdAt: timestamp,
+  updatedAt: timestamp,
+  runs: z.array(runSummarySchema),
+});
+export type Sweep = z.infer<typeof sweepSchema>;
+
+/** A typed section judged on the project's basis. */
+export const evaluateInputSchema = z.object({
+  section: sectionInputSchema,
+  demand: demandSchema,
+  rules: userRulesSchema,
+  /** Override of the project's basis for this one evaluation, e.g. to reproduce a printed example. */
+  basis: designBasisSchema.omit({ units: true, fyMPa: true, fytMPa: true, coverMm: true }).partial(),
+});
+export type EvaluateInput = z.infer<typeof evaluateInputSchema>;
+export const evaluateOutputSchema = z.object({ section: sectionInputSchema, evaluation: evaluationSchema });
+
+export const CANDIDATE_STATES = ['proposed', 'checked', 'approved', 'returned', 'superseded'] as const;
+export type CandidateState = (typeof CANDIDATE_STATES)[number];
+
+/** What is frozen when a candidate is pinned; `hash` is SHA-256 over its canonical JSON. */
+export const snapshotSchema = z.object({
+  section: sectionInputSchema,
+  demand: demandSchema,
+  rules: userRulesSchema,
+  basis: fullBasisSchema,
+  engineVersion: z.string(),
+  evaluation: evaluationSchema,
+});
+export type Snapshot = z.infer<typeof snapshotSchema>;
+
+export const pinInputSchema = z.object({
+  beamId: idSchema,
+  source: z.discriminatedUnion('kind', [
+    z.object({ kind: z.literal('run'), runId: idSchema, index: z.number().int().min(0) }),
+    z.object({ kind: z.literal('section'), section: sectionInputSchema }),
+  ]),
+  note: z.string().trim().max(2000, 'The note is longer than 2000 characters'),
+});
+export type PinInput = z.infer<typeof pinInputSchema>;
+
+export const commentSchema = z.object({
+  id: idSchema,
+  author: personSchema.pick({ id: true, name: true, role: true }),
+  text: z.string(),
+  createdAt: timestamp,
+});
+export type Comment = z.infer<typeof commentSchema>;
+
+export const transitionSchema = z.object({
+  id: idSchema,
+  from: z.enum(CANDIDATE_STATES).nullable(),
+  to: z.enum(CANDIDATE_STATES),
+  by: personSchema.pick({ id: true, name: true, role: true }),
+  note: z.string(),
+  createdAt: timestamp,
+});
+
+/** Tonnes by bar size for span × count; null cost where a rate is missing or hidden. */
+export const takeoffSchema = z.object({
+  spanMm: z.number(),
+  count: z.number(),
+  lines: z.array(
+    z.object({
+      bar: z.string(),
+      position: z.enum(['tension', 'compression', 'stirrups']),
+      tonnes: z.number(),
+    }),
+  ),
+  netTonnes: z.number(),
+  lapsTonnes: z.number(),
+  wasteTonnes: z.number(),
+  totalTonnes: z.number(),
+  concreteM3: z.number(),
+  formworkM2: z.number(),
+  cost: z.number().nullable(),
+  currency: z.string().nullable(),
+  co2eKg: z.number().nullable(),
+});
+export type Takeoff = z.infer<typeof takeoffSchema>;
+
+export const candidateSchema = z.object({
+  id: idSchema,
+  projectId: idSchema,
+  beam: beamSchema.pick({ id: true, mark: true, location: true, spanMm: true, count: true }),
+  /** Short label within the project, A, B, … Z, AA. */
+  label: z.string(),
+  state: z.enum(CANDIDATE_STATES),
+  note: z.string(),
+  author: personSchema.pick({ id: true, name: true }),
+  runId: idSchema.nullable(),
+  sectionIndex: z.number().nullable(),
+  snapshot: snapshotSchema,
+  hash: z.string(),
+  /** False when today's engine gives other numbers than the frozen ones. */
+  isReproducedByCurrentEngine: z.boolean(),
+  takeoff: takeoffSchema,
+  comments: z.array(commentSchema),
+  transitions: z.array(transitionSchema),
+  createdAt: timestamp,
+  /** States the reader may move it to now. */
+  allowedTransitions: z.array(z.enum(CANDIDATE_STATES)),
+});
+export type Candidate = z.infer<typeof candidateSchema>;
+
+export const transitionInputSchema = z.object({
+  to: z.enum(CANDIDATE_STATES),
+  note: z.string().trim().max(2000, 'The note is longer than 2000 characters'),
+});
+export const commentInputSchema = z.object({ text: nonEmptyText('Comment', 4000) });
+
+export const shareLinkSchema = z.object({
+  id: idSchema,
+  token: z.string(),
+  createdBy: z.string(),
+  createdAt: timestamp,
+  expiresAt: timestamp,
+});
+export type ShareLink = z.infer<typeof shareLinkSchema>;
+
+/** What a link shows without signing in: the shortlist, no rates, no comments. */
+export const sharedShortlistSchema = z.object({
+  projectName: z.string(),
+  projectNumber: z.string(),
+  units: designBasisSchema.shape.units,
+  candidates: z.array(candidateSchema.omit({ comments: true, transitions: true, allowedTransitions: true })),
+});
+export type SharedShortlist = z.infer<typeof sharedShortlistSchema>;

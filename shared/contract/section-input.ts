@@ -1,0 +1,98 @@
+import { z } from 'zod';
+import { FACES, type Demand, type SectionInput, type Stirrup, type UserRules } from '../engine/section.ts';
+import {
+  bounded,
+  coverMmSchema,
+  depthMmSchema,
+  fcMPaSchema,
+  fyMPaSchema,
+  momentNmmSchema,
+  nonEmptyText,
+  widthMmSchema,
+} from './numbers.ts';
+
+const wholeCount = (label: string, low: number, high: number) =>
+  z
+    .number({ error: `${label} must be a whole number` })
+    .int(`${label} must be a whole number`)
+    .min(low, `${label} must be at least ${low}`)
+    .max(high, `${label} must be at most ${high}`);
+
+export const barDesignationSchema = nonEmptyText('Bar size', 8);
+export const barCountNumberSchema = wholeCount('Number of bars', 1, 60);
+
+const barGroupSchema = z
+  .array(z.object({ bar: barDesignationSchema, count: barCountNumberSchema }))
+  .max(2, 'A face takes at most two bar sizes');
+
+export const stirrupSchema = z.object({
+  bar: barDesignationSchema,
+  legs: wholeCount('Stirrup legs', 2, 12),
+  spacingMm: bounded('Stirrup spacing', 25, 2000, 'mm'),
+}) satisfies z.ZodType<Stirrup>;
+
+export const reinforcementSchema = z.discriminatedUnion('kind', [
+  z.object({ kind: z.literal('bars'), tension: barGroupSchema, compression: barGroupSchema }),
+  z.object({
+    kind: z.literal('layers'),
+    layers: z
+      .array(
+        z.object({
+          depthMm: bounded('Layer depth', 0, 5000, 'mm'),
+          areaMm2: bounded('Layer area', 0, 1e6, 'mm²'),
+          face: z.enum(FACES),
+        }),
+      )
+      .min(1, 'Enter at least one layer of steel')
+      .max(20, 'A section takes at most 20 layers'),
+  }),
+]);
+
+export const sectionInputSchema = z
+  .object({
+    widthMm: widthMmSchema,
+    depthMm: depthMmSchema,
+    fcMPa: fcMPaSchema,
+    fyMPa: fyMPaSchema,
+    coverMm: coverMmSchema,
+    stirrup: stirrupSchema.nullable(),
+    reinforcement: reinforcementSchema,
+  })
+  .superRefine((section, ctx) => {
+    if (section.reinforcement.kind !== 'layers') return;
+    section.reinforcement.layers.forEach((layer, i) => {
+      if (layer.depthMm >= section.depthMm)
+        ctx.addIssue({
+          code: 'custom',
+          path: ['reinforcement', 'layers', i, 'depthMm'],
+          message: 'The layer lies outside the section: its depth must be less than h',
+        });
+    });
+  }) satisfies z.ZodType<SectionInput>;
+
+export const demandSchema = z.object({
+  muNmm: momentNmmSchema.nullable(),
+  ductilityTarget: bounded('Ductility target μφ', 0, 100, '').nullable(),
+  depthCapMm: depthMmSchema.nullable(),
+}) satisfies z.ZodType<Demand>;
+
+export const userRulesSchema = z
+  .object({
+    minDepthToWidth: bounded('Least h/b', 0.1, 20, '').nullable(),
+    maxDepthToWidth: bounded('Largest h/b', 0.1, 20, '').nullable(),
+    maxLayers: wholeCount('Layers', 1, 4),
+    oneSizePerFace: z.boolean(),
+    excludedBars: z.array(barDesignationSchema).max(40),
+    columnWidthMm: widthMmSchema.nullable(),
+    minCompressionShare: bounded('Least A′s/As', 0, 1, '').nullable(),
+    requireHangers: z.boolean(),
+  })
+  .superRefine((rules, ctx) => {
+    const { minDepthToWidth: low, maxDepthToWidth: high } = rules;
+    if (low !== null && high !== null && low > high)
+      ctx.addIssue({
+        code: 'custom',
+        path: ['maxDepthToWidth'],
+        message: 'Largest h/b is below the least h/b',
+      });
+  }) satisfies z.ZodType<UserRules>;

@@ -1,0 +1,106 @@
+import { z } from 'zod';
+import { MEASURE_IDS } from '../engine/measures.ts';
+import type { AxisDefinition, SpaceDefinition, SteelSetsDefinition, View } from '../sweep/problem.ts';
+import { bounded, coverMmSchema, depthMmSchema, fcMPaSchema, fyMPaSchema, widthMmSchema } from './numbers.ts';
+import {
+  barCountNumberSchema,
+  barDesignationSchema,
+  demandSchema,
+  stirrupSchema,
+  userRulesSchema,
+} from './section-input.ts';
+
+/** Longest axis accepted: finer than any bar or form is cut, and it keeps a typing slip from filling memory. */
+export const MAX_AXIS_VALUES = 2000;
+/** Largest run accepted: about a minute on two threads. Larger spaces are refused with the axis to coarsen. */
+export const MAX_SECTIONS_PER_RUN = 200_000_000;
+
+const axisSchema = (label: string, value: z.ZodType<number>) =>
+  z.discriminatedUnion('kind', [
+    z
+      .object({
+        kind: z.literal('range'),
+        from: value,
+        to: value,
+        step: z
+          .number({ error: `${label}: the step must be a number` })
+          .refine(Number.isFinite, `${label}: the step must be a number`)
+          .refine((v) => v > 0, `${label}: the step must be more than zero`),
+      })
+      .superRefine((range, ctx) => {
+        if (range.from > range.to)
+          ctx.addIssue({ code: 'custom', path: ['to'], message: `${label}: the end is below the start` });
+        else if ((range.to - range.from) / range.step > MAX_AXIS_VALUES)
+          ctx.addIssue({
+            code: 'custom',
+            path: ['step'],
+            message: `${label}: the step makes more than ${MAX_AXIS_VALUES} values`,
+          });
+      }),
+    z.object({
+      kind: z.literal('list'),
+      values: z
+        .array(value)
+        .min(1, `${label}: enter at least one value`)
+        .max(MAX_AXIS_VALUES, `${label}: at most ${MAX_AXIS_VALUES} values`),
+    }),
+  ]) satisfies z.ZodType<AxisDefinition>;
+
+const steelSetsSchema = (label: string, isEmptyAllowed: boolean) =>
+  z
+    .discriminatedUnion('kind', [
+      z.object({
+        kind: z.literal('bars'),
+        sizes: z.array(barDesignationSchema).max(20, `${label}: at most 20 sizes`),
+        counts: z.array(barCountNumberSchema).max(60, `${label}: at most 60 counts`),
+        none: z.boolean(),
+      }),
+      z.object({
+        kind: z.literal('areas'),
+        areasMm2: z
+          .array(bounded(`${label}: area`, 0, 1e6, 'mm²'))
+          .min(1, `${label}: enter at least one area`)
+          .max(5000, `${label}: at most 5000 areas`),
+        at: z.union([
+          z.object({ offsetMm: bounded('Distance from the face', 0, 2000, 'mm') }),
+          z.object({ shareOfDepth: bounded('Share of h', 0, 0.5, '') }),
+        ]),
+      }),
+    ])
+    .superRefine((sets, ctx) => {
+      if (sets.kind !== 'bars' || (isEmptyAllowed && sets.none)) return;
+      if (sets.sizes.length === 0)
+        ctx.addIssue({ code: 'custom', path: ['sizes'], message: `${label}: choose at least one size` });
+      if (sets.counts.length === 0)
+        ctx.addIssue({ code: 'custom', path: ['counts'], message: `${label}: enter at least one count` });
+    }) satisfies z.ZodType<SteelSetsDefinition>;
+
+export const spaceSchema = z.object({
+  width: axisSchema('Width b', widthMmSchema),
+  depth: axisSchema('Depth h', depthMmSchema),
+  fc: axisSchema('Concrete strength f′c', fcMPaSchema),
+  fy: axisSchema('Yield strength fy', fyMPaSchema),
+  cover: axisSchema('Clear cover', coverMmSchema),
+  stirrups: z
+    .array(stirrupSchema.nullable())
+    .min(1, 'Choose a stirrup, or none')
+    .max(20, 'At most 20 stirrup choices'),
+  tension: steelSetsSchema('Tension bars', false),
+  compression: steelSetsSchema('Compression bars', true),
+}) satisfies z.ZodType<SpaceDefinition>;
+
+export const viewSchema = z
+  .object({ x: z.enum(MEASURE_IDS), y: z.enum(MEASURE_IDS) })
+  .refine((view) => view.x !== view.y, {
+    path: ['y'],
+    message: 'Choose two different measures',
+  }) satisfies z.ZodType<View>;
+
+/** What a saved sweep holds; the basis and rates join it when a run is frozen. */
+export const sweepDefinitionSchema = z.object({
+  space: spaceSchema,
+  demand: demandSchema,
+  rules: userRulesSchema,
+  view: viewSchema,
+});
+export type SweepDefinition = z.infer<typeof sweepDefinitionSchema>;

@@ -1,0 +1,81 @@
+import type { CheckId } from '../engine/evaluation.ts';
+import type { MeasureId } from '../engine/measures.ts';
+import type { View } from './problem.ts';
+
+/** A section of the space with the two measures of the view. */
+export interface Point {
+  readonly index: number;
+  readonly x: number;
+  readonly y: number;
+}
+
+/** A vertex of the front: the lowest index stands for all sections that tie with it exactly. */
+export interface FrontPoint extends Point {
+  /** Sections with exactly these two measures, the representative included. */
+  readonly tieCount: number;
+  /** The lowest indices among the ties, ascending, at most MAX_TIES_KEPT. */
+  readonly ties: readonly number[];
+}
+
+/** Feasible sections in one cell of the density grid; bounds are [x0, x1) × [y0, y1) in the measures' SI units. */
+export interface DensityCell {
+  readonly x0: number;
+  readonly x1: number;
+  readonly y0: number;
+  readonly y1: number;
+  readonly count: number;
+}
+
+/** One value of one axis and how many feasible sections have it. */
+export interface AxisCount {
+  readonly value: number;
+  readonly feasible: number;
+  readonly evaluated: number;
+}
+
+export interface CheckFailures {
+  readonly check: CheckId;
+  /** Sections failing it, whatever else they fail. */
+  readonly failed: number;
+  /** Sections failing nothing else. */
+  readonly failedOnlyThis: number;
+  /** Best section in the leading measure among those failing only this; null where there is none or it has no numbers. */
+  readonly bestWithout: Point | null;
+}
+
+/** The axes whose use at their limit is worth a warning. */
+export const EDGE_AXES = ['width', 'depth', 'fc'] as const;
+export type EdgeAxis = (typeof EDGE_AXES)[number];
+
+/** How much of the front sits on an end of a range that has more than one value. */
+export interface EdgeShare {
+  readonly axis: EdgeAxis;
+  readonly end: 'low' | 'high';
+  readonly share: number;
+}
+
+/** The finished (or partial) result of a run seen through one view. Plain JSON. */
+export interface ViewResult {
+  readonly view: View;
+  readonly sectionCount: number;
+  readonly evaluated: number;
+  readonly feasible: number;
+  readonly cannotFit: number;
+  readonly failures: readonly CheckFailures[];
+  /** Non-dominated sections ordered from best x. */
+  readonly front: readonly FrontPoint[];
+  /** Feasible sections within 10 % of the best x, best first, at most MAX_BAND_KEPT. */
+  readonly band: readonly Point[];
+  readonly isBandCut: boolean;
+  /** Best feasible section of each measure, in its own direction. */
+  readonly best: readonly { readonly measure: MeasureId; readonly index: number; readonly value: number }[];
+  readonly density: readonly DensityCell[];
+  readonly axisCounts: {
+    readonly width: readonly AxisCount[];
+    readonly depth: readonly AxisCount[];
+    readonly fc: readonly AxisCount[];
+  };
+  readonly edges: readonly EdgeShare[];
+  /** 16 hex digits in groups of four; equal for equal results whatever the threads and chunks. */
+  readonly hash: string;
+}
