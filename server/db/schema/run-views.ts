@@ -1,0 +1,62 @@
+import { sql } from 'drizzle-orm';
+import {
+  bigint,
+  check,
+  doublePrecision,
+  index,
+  integer,
+  jsonb,
+  pgTable,
+  text,
+  timestamp,
+  unique,
+  uuid,
+} from 'drizzle-orm/pg-core';
+import { RUN_STATES } from '#shared/contract/records.ts';
+import { MEASURE_IDS } from '#shared/engine/measures.ts';
+import type { ViewResult } from '#shared/sweep/result.ts';
+import { oneOf } from './one-of.ts';
+import { runs } from './runs.ts';
+
+/** A run seen through two measures: computed once from the run's frozen inputs, then kept. */
+export const runViews = pgTable(
+  'run_views',
+  {
+    id: uuid().primaryKey().defaultRandom(),
+    runId: uuid('run_id')
+      .notNull()
+      .references(() => runs.id),
+    x: text({ enum: MEASURE_IDS }).notNull(),
+    y: text({ enum: MEASURE_IDS }).notNull(),
+    state: text({ enum: RUN_STATES }).notNull().default('queued'),
+    evaluated: bigint({ mode: 'number' }).notNull().default(0),
+    feasible: bigint({ mode: 'number' }).notNull().default(0),
+    elapsedMs: doublePrecision('elapsed_ms').notNull().default(0),
+    /** The final result, or the part that was done when it was cancelled. */
+    result: jsonb().$type<ViewResult>(),
+    frontCount: integer('front_count').notNull().default(0),
+    hash: text(),
+    /** Why it failed, in words for the person who reads it. */
+    message: text(),
+    /** Worker that holds the job, see job_workers; null when nobody does. */
+    workerId: text('worker_id'),
+    createdAt: timestamp('created_at', { withTimezone: true }).notNull().defaultNow(),
+    startedAt: timestamp('started_at', { withTimezone: true }),
+    finishedAt: timestamp('finished_at', { withTimezone: true }),
+  },
+  (t) => [
+    unique('run_views_measures_key').on(t.runId, t.x, t.y),
+    index('run_views_unfinished_idx')
+      .on(t.state)
+      .where(sql`${t.state} in ('queued', 'running')`),
+    check('run_views_x_check', oneOf(t.x, MEASURE_IDS)),
+    check('run_views_y_check', oneOf(t.y, MEASURE_IDS)),
+    check('run_views_two_measures_check', sql`${t.x} <> ${t.y}`),
+    check('run_views_state_check', oneOf(t.state, RUN_STATES)),
+    check('run_views_counts_check', sql`0 <= ${t.feasible} and ${t.feasible} <= ${t.evaluated}`),
+    check(
+      'run_views_finished_check',
+      sql`${t.state} <> 'finished' or (${t.result} is not null and ${t.hash} is not null)`,
+    ),
+  ],
+);
