@@ -64,12 +64,6 @@ CREATE TABLE "candidates" (
 	CONSTRAINT "candidates_section_index_check" CHECK ("candidates"."section_index" >= 0)
 );
 --> statement-breakpoint
-CREATE TABLE "job_workers" (
-	"id" text PRIMARY KEY NOT NULL,
-	"started_at" timestamp with time zone DEFAULT now() NOT NULL,
-	"heartbeat_at" timestamp with time zone DEFAULT now() NOT NULL
-);
---> statement-breakpoint
 CREATE TABLE "people" (
 	"id" uuid PRIMARY KEY DEFAULT gen_random_uuid() NOT NULL,
 	"name" text NOT NULL,
@@ -115,6 +109,8 @@ CREATE TABLE "run_views" (
 	"hash" text,
 	"message" text,
 	"worker_id" text,
+	"sequence" bigint DEFAULT 0 NOT NULL,
+	"cancel_requested_at" timestamp with time zone,
 	"created_at" timestamp with time zone DEFAULT now() NOT NULL,
 	"started_at" timestamp with time zone,
 	"finished_at" timestamp with time zone,
@@ -138,7 +134,7 @@ CREATE TABLE "runs" (
 	"state" text DEFAULT 'queued' NOT NULL,
 	"started_by" uuid NOT NULL,
 	"created_at" timestamp with time zone DEFAULT now() NOT NULL,
-	"cancel_requested_at" timestamp with time zone,
+	"event_sequence" bigint DEFAULT 0 NOT NULL,
 	"finished_at" timestamp with time zone,
 	CONSTRAINT "runs_number_key" UNIQUE("sweep_id","number"),
 	CONSTRAINT "runs_number_check" CHECK ("runs"."number" > 0),
@@ -195,6 +191,7 @@ ALTER TABLE "sweeps" ADD CONSTRAINT "sweeps_created_by_people_id_fk" FOREIGN KEY
 CREATE UNIQUE INDEX "beams_mark_key" ON "beams" USING btree ("project_id",lower("mark"));--> statement-breakpoint
 CREATE INDEX "candidate_comments_candidate_idx" ON "candidate_comments" USING btree ("candidate_id","position");--> statement-breakpoint
 CREATE INDEX "candidate_transitions_candidate_idx" ON "candidate_transitions" USING btree ("candidate_id","position");--> statement-breakpoint
+CREATE UNIQUE INDEX "candidates_snapshot_key" ON "candidates" USING btree ("beam_id","hash") WHERE "candidates"."state" <> 'superseded';--> statement-breakpoint
 CREATE INDEX "candidates_beam_idx" ON "candidates" USING btree ("beam_id");--> statement-breakpoint
 CREATE INDEX "candidates_run_idx" ON "candidates" USING btree ("run_id");--> statement-breakpoint
 CREATE UNIQUE INDEX "people_email_key" ON "people" USING btree (lower("email"));--> statement-breakpoint

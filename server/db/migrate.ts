@@ -1,6 +1,7 @@
 import { fileURLToPath } from 'node:url';
 import { drizzle } from 'drizzle-orm/node-postgres';
 import { migrate } from 'drizzle-orm/node-postgres/migrator';
+import { runMigrations } from 'graphile-worker';
 import pg from 'pg';
 
 /** Any number will do as long as nothing else in this database locks it. */
@@ -10,7 +11,7 @@ const MIGRATION_LOCK = 72_710_215;
 const MIGRATIONS_FOLDER = fileURLToPath(new URL('../../drizzle', import.meta.url));
 
 /**
- * Brings a database to the newest schema. Two services may start at once and Drizzle's migrator takes no lock of
+ * Brings a database to the newest schema, and the job queue's own schema with it. Two services may start at once and Drizzle's migrator takes no lock of
  * its own, so one connection holds an advisory lock for the whole of it; ending the connection frees the lock,
  * also after a failure.
  */
@@ -20,6 +21,7 @@ export async function migrateDatabase(databaseUrl: string): Promise<void> {
   try {
     await connection.query('select pg_advisory_lock($1)', [MIGRATION_LOCK]);
     await migrate(drizzle({ client: connection }), { migrationsFolder: MIGRATIONS_FOLDER });
+    await runMigrations({ connectionString: databaseUrl });
   } finally {
     await connection.end();
   }

@@ -9,6 +9,7 @@ import {
   text,
   timestamp,
   unique,
+  uniqueIndex,
   uuid,
 } from 'drizzle-orm/pg-core';
 import { CANDIDATE_STATES, type Snapshot } from '#shared/contract/records.ts';
@@ -48,6 +49,10 @@ export const candidates = pgTable(
       columns: [t.beamId, t.projectId],
       foreignColumns: [beams.id, beams.projectId],
     }),
+    // The same section is pinned once per beam, unless the earlier pin has been superseded.
+    uniqueIndex('candidates_snapshot_key')
+      .on(t.beamId, t.hash)
+      .where(sql`${t.state} <> 'superseded'`),
     index('candidates_beam_idx').on(t.beamId),
     index('candidates_run_idx').on(t.runId),
     check('candidates_state_check', oneOf(t.state, CANDIDATE_STATES)),

@@ -38,8 +38,11 @@ export const runViews = pgTable(
     hash: text(),
     /** Why it failed, in words for the person who reads it. */
     message: text(),
-    /** Worker that holds the job, see job_workers; null when nobody does. */
+    /** The queue's worker that computes it: only that one may write to it. Null when nobody does. */
     workerId: text('worker_id'),
+    /** The run's event this state was sent with. */
+    sequence: bigint({ mode: 'number' }).notNull().default(0),
+    cancelRequestedAt: timestamp('cancel_requested_at', { withTimezone: true }),
     createdAt: timestamp('created_at', { withTimezone: true }).notNull().defaultNow(),
     startedAt: timestamp('started_at', { withTimezone: true }),
     finishedAt: timestamp('finished_at', { withTimezone: true }),

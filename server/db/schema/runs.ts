@@ -40,7 +40,8 @@ export const runs = pgTable(
       .notNull()
       .references(() => people.id),
     createdAt: timestamp('created_at', { withTimezone: true }).notNull().defaultNow(),
-    cancelRequestedAt: timestamp('cancel_requested_at', { withTimezone: true }),
+    /** Number of the last event of the run's stream; taken by every write to one of its views, in order of commit. */
+    eventSequence: bigint('event_sequence', { mode: 'number' }).notNull().default(0),
     finishedAt: timestamp('finished_at', { withTimezone: true }),
   },
   (t) => [
