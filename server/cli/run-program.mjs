@@ -1,14 +1,16 @@
 import { spawn } from 'node:child_process';
 
 /** @type {Set<import('node:child_process').ChildProcess>} */
-const running = new Set();
+const interruptible = new Set();
 
 /**
- * Runs a program to its end. Without `isQuiet` it writes straight to this terminal and `output` stays empty.
+ * Runs a program to its end. With `isQuiet` what it writes is collected in `output`, otherwise it goes to this
+ * terminal. A detached program is left alone by `interruptPrograms`.
  *
  * @param {string} command
  * @param {readonly string[]} args
- * @param {import('node:child_process').SpawnOptions & { isQuiet?: boolean }} [options]
+ * @param {Omit<import('node:child_process').SpawnOptions, 'stdio'> & {
+ *   isQuiet?: boolean, stdio?: import('node:child_process').StdioOptions }} [options]
  * @returns {Promise<{ code: number, output: string }>}
  */
 export function runProgram(command, args, { isQuiet = false, ...options } = {}) {
@@ -17,17 +19,17 @@ export function runProgram(command, args, { isQuiet = false, ...options } = {}) 
       stdio: isQuiet ? ['ignore', 'pipe', 'pipe'] : 'inherit',
       ...options,
     });
-    running.add(child);
+    if (options.detached !== true) interruptible.add(child);
     let output = '';
     const collect = (/** @type {Buffer} */ chunk) => (output += chunk.toString());
     child.stdout?.on('data', collect);
     child.stderr?.on('data', collect);
     child.on('error', (error) => {
-      running.delete(child);
+      interruptible.delete(child);
       reject(error);
     });
     child.on('close', (code) => {
-      running.delete(child);
+      interruptible.delete(child);
       resolve({ code: code ?? 1, output });
     });
   });
@@ -46,7 +48,6 @@ export async function requireProgram(command, args, options) {
   return output;
 }
 
-/** @param {NodeJS.Signals} signal */
-export function signalRunningPrograms(signal) {
-  for (const child of running) child.kill(signal);
+export function interruptPrograms() {
+  for (const child of interruptible) child.kill('SIGTERM');
 }

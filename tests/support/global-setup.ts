@@ -33,7 +33,7 @@ export default async function setup(project: TestProject): Promise<() => Promise
   return () => leavePostgres(TEST_FOLDER);
 }
 
-/** Named after the migrations, so that a change of schema makes a new one and never disturbs a run on the old. */
+/** Named after all that shapes it, so that a change of schema makes a new one and never disturbs a run on the old. */
 async function ensureTemplate(admin: pg.Client, maintenanceUrl: string): Promise<string> {
   const name = `template_${await digestMigrations()}`;
   const existing = await admin.query('select 1 from pg_database where datname = $1', [name]);
@@ -48,7 +48,7 @@ async function ensureTemplate(admin: pg.Client, maintenanceUrl: string): Promise
 
 async function digestMigrations(): Promise<string> {
   const folder = path.join(PROJECT_ROOT, 'drizzle');
-  const hash = createHash('sha256');
+  const hash = createHash('sha256').update(await readFile(path.join(PROJECT_ROOT, 'server/db/migrate.ts')));
   const files = (await readdir(folder, { recursive: true })).sort();
   for (const file of files.filter((name) => /[.](sql|json)$/.test(name))) {
     hash.update(file).update(await readFile(path.join(folder, file)));

@@ -1,0 +1,37 @@
+import fs from 'node:fs';
+import path from 'node:path';
+import { PROJECT_ROOT, TEST_FOLDER } from './project-paths.mjs';
+import { runProgram } from './run-program.mjs';
+
+/**
+ * Runs every test project and counts. A test file that cannot even be loaded counts as one failure, and so does a run
+ * that ends red for any other reason (an unhandled error, a crash).
+ *
+ * @param {string[]} filters handed on to vitest
+ */
+export async function runTests(filters) {
+  fs.mkdirSync(TEST_FOLDER, { recursive: true });
+  const report = path.join(TEST_FOLDER, 'vitest.json');
+  fs.rmSync(report, { force: true });
+  const vitest = path.join(PROJECT_ROOT, 'node_modules', 'vitest', 'vitest.mjs');
+  const reporters = ['--reporter=default', '--reporter=json', `--outputFile.json=${report}`];
+  const { code } = await runProgram(process.execPath, [vitest, 'run', ...reporters, ...filters], {
+    cwd: PROJECT_ROOT,
+  });
+  const counts = fs.existsSync(report) ? countResults(report) : { passed: 0, failed: 0, skipped: 0 };
+  if (code !== 0 && counts.failed === 0) counts.failed = 1;
+  return counts;
+}
+
+/** @param {string} report */
+function countResults(report) {
+  /** @type {{ testResults: Array<{ status: string, assertionResults: Array<{ status: string }> }> }} */
+  const { testResults } = JSON.parse(fs.readFileSync(report, 'utf8'));
+  const statuses = testResults.flatMap(({ status, assertionResults }) => {
+    const ofTests = assertionResults.map((assertion) => assertion.status);
+    return status === 'failed' && !ofTests.includes('failed') ? [...ofTests, 'failed'] : ofTests;
+  });
+  const passed = statuses.filter((status) => status === 'passed').length;
+  const failed = statuses.filter((status) => status === 'failed').length;
+  return { passed, failed, skipped: statuses.length - passed - failed };
+}
