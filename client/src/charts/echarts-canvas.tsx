@@ -1,0 +1,37 @@
+import { CustomChart, LineChart, ScatterChart } from 'echarts/charts';
+import { GridComponent, TooltipComponent } from 'echarts/components';
+import * as echarts from 'echarts/core';
+import type { EChartsCoreOption, EChartsType } from 'echarts/core';
+import { CanvasRenderer } from 'echarts/renderers';
+import ReactECharts from 'echarts-for-react/esm/core';
+import { useEffect, useRef } from 'react';
+
+echarts.use([CustomChart, LineChart, ScatterChart, GridComponent, TooltipComponent, CanvasRenderer]);
+
+interface EChartsCanvasProps {
+  readonly option: EChartsCoreOption;
+  readonly onPoint: (xPx: number, yPx: number) => void;
+}
+
+const FILL = { width: '100%', height: '100%' };
+const REPLACED = ['series'];
+
+/** The only place that knows the chart library's component; loaded lazily, being the largest script we ship. */
+export default function EChartsCanvas({ option, onPoint }: EChartsCanvasProps) {
+  const latest = useRef(onPoint);
+  useEffect(() => {
+    latest.current = onPoint;
+  }, [onPoint]);
+  const listen = (chart: EChartsType) => {
+    chart.getZr().on('click', (event) => latest.current(event.offsetX, event.offsetY));
+  };
+  return (
+    <ReactECharts
+      echarts={echarts}
+      option={option}
+      replaceMerge={REPLACED}
+      onChartReady={listen}
+      style={FILL}
+    />
+  );
+}

@@ -1,0 +1,170 @@
+import type { EChartsCoreOption } from 'echarts/core';
+import type { Point } from '#shared/sweep/result.ts';
+import { displayCells } from './density-cells.ts';
+import { bandTint, densityRects, pinFlags, targetLine } from './front-chart-shapes.ts';
+import { axisTitle, betterWords, type ChartAxis, type FrontChartInput } from './front-chart-input.ts';
+import { frontSteps, type XY } from './front-steps.ts';
+import type { AxisExtent } from './axis-extent.ts';
+
+/** Layers of the drawing, from the back. */
+const Z = { density: 1, band: 2, target: 3, bandMarks: 4, steps: 5, marks: 6, pins: 7, selected: 8 } as const;
+
+const NUMBER_FONT = "'IBM Plex Mono', ui-monospace, monospace";
+const WORD_FONT = "'Archivo Variable', Arial, sans-serif";
+
+function axisOption(axis: ChartAxis, extent: AxisExtent, input: FrontChartInput, side: 'x' | 'y') {
+  const { colours } = input;
+  const isX = side === 'x';
+  return {
+    type: 'value',
+    min: extent.min,
+    max: extent.max,
+    interval: extent.step,
+    name: `${axisTitle(axis)}   ${betterWords(side, axis.direction)}`,
+    nameLocation: isX ? 'middle' : 'end',
+    nameGap: isX ? 30 : 14,
+    nameTextStyle: {
+      color: colours.ink,
+      fontFamily: WORD_FONT,
+      fontSize: 12,
+      align: isX ? 'center' : 'left',
+      padding: isX ? 0 : [0, 0, 0, 8 - input.frame.left],
+    },
+    axisLine: { show: isX, lineStyle: { color: colours.ink, width: 1 } },
+    axisTick: { show: isX, lineStyle: { color: colours.ink } },
+    axisLabel: {
+      color: colours.muted,
+      fontFamily: NUMBER_FONT,
+      fontSize: 11,
+      formatter: axis.formatTick,
+      hideOverlap: true,
+    },
+    splitLine: { show: !isX, lineStyle: { color: colours.rule, width: 1 } },
+  };
+}
+
+const shown = (input: FrontChartInput, point: XY): [number, number] => [
+  point.x * input.x.perSi,
+  point.y * input.y.perSi,
+];
+
+/** The far corner of the plot in SI: the front's step line runs out to it on both sides. */
+function worstCorner(input: FrontChartInput): XY {
+  const { x, y, xExtent, yExtent } = input;
+  return {
+    x: (x.direction === 'less' ? xExtent.max : xExtent.min) / x.perSi,
+    y: (y.direction === 'less' ? yExtent.max : yExtent.min) / y.perSi,
+  };
+}
+
+function densitySeries(input: FrontChartInput) {
+  const { frame, xExtent, yExtent, x, y } = input;
+  const cells = displayCells(input.cells, {
+    xPxPerUnit: ((frame.width - frame.left - frame.right) / (xExtent.max - xExtent.min)) * x.perSi,
+    yPxPerUnit: ((frame.height - frame.top - frame.bottom) / (yExtent.max - yExtent.min)) * y.perSi,
+  });
+  return densityRects(cells, input);
+}
+
+function marks(input: FrontChartInput, points: readonly Point[], style: object) {
+  return {
+    type: 'scatter',
+    clip: true,
+    animation: false,
+    data: points.map((point) => ({ value: [...shown(input, point), point.index] })),
+    ...style,
+  };
+}
+
+function seriesOf(input: FrontChartInput) {
+  const { colours, front, band, selected } = input;
+  const inBand = input.bandShare > 0 ? band : [];
+  return [
+    { id: 'density', z: Z.density, ...densitySeries(input) },
+    { id: 'band-tint', z: Z.band, ...bandTint(input) },
+    { id: 'target', z: Z.target, ...targetLine(input) },
+    marks(input, inBand, {
+      id: 'band',
+      z: Z.bandMarks,
+      symbol: 'circle',
+      symbolSize: 3,
+      itemStyle: { color: colours.near, opacity: 0.75 },
+    }),
+    {
+      id: 'front-steps',
+      z: Z.steps,
+      type: 'line',
+      clip: true,
+      silent: true,
+      animation: false,
+      symbol: 'none',
+      lineStyle: { color: colours.ink, width: 1.4 },
+      data: frontSteps(front, worstCorner(input)).map((corner) => shown(input, corner)),
+    },
+    marks(input, front, {
+      id: 'front',
+      z: Z.marks,
+      symbol: 'diamond',
+      symbolSize: front.length > 60 ? 7 : 9,
+      itemStyle: { color: colours.paper, borderColor: colours.ink, borderWidth: 1.3 },
+    }),
+    { id: 'pins', z: Z.pins, ...pinFlags(input) },
+    marks(input, selected === null ? [] : [selected], {
+      id: 'selected',
+      z: Z.selected,
+      symbol: 'diamond',
+      symbolSize: 15,
+      silent: true,
+      itemStyle: { color: colours.steel, borderColor: colours.paper, borderWidth: 1.5 },
+    }),
+  ];
+}
+
+interface Hovered {
+  readonly seriesId?: string;
+  readonly value?: readonly number[];
+}
+
+/** Text under the pointer: a section's own words, or how many sections a cell holds. */
+function hoverText(input: FrontChartInput, hovered: Hovered): string {
+  const value = hovered.value ?? [];
+  if (hovered.seriesId === 'density') {
+    const count = value[4] ?? 0;
+    return `${count.toLocaleString('en-US')} ${count === 1 ? 'section meets' : 'sections meet'} every check here`;
+  }
+  const index = value[2];
+  return index === undefined ? '' : input.describe(index).replaceAll('\n', '<br>');
+}
+
+/** The front chart as plain data: the same input always draws the same picture. */
+export function frontChartOption(input: FrontChartInput): EChartsCoreOption {
+  const { frame, colours } = input;
+  return {
+    animation: false,
+    backgroundColor: 'transparent',
+    textStyle: { fontFamily: WORD_FONT },
+    grid: {
+      left: frame.left,
+      right: frame.right,
+      top: frame.top,
+      bottom: frame.bottom,
+      outerBoundsMode: 'none',
+    },
+    xAxis: axisOption(input.x, input.xExtent, input, 'x'),
+    yAxis: axisOption(input.y, input.yExtent, input, 'y'),
+    tooltip: {
+      trigger: 'item',
+      confine: true,
+      transitionDuration: 0,
+      backgroundColor: colours.paper,
+      borderColor: colours.ink,
+      borderWidth: 1,
+      borderRadius: 0,
+      padding: [6, 9],
+      extraCssText: 'box-shadow:none',
+      textStyle: { color: colours.ink, fontFamily: NUMBER_FONT, fontSize: 12 },
+      formatter: (hovered: Hovered) => hoverText(input, hovered),
+    },
+    series: seriesOf(input),
+  };
+}

@@ -1,0 +1,22 @@
+import type { CheckId } from '#shared/engine/evaluation.ts';
+
+export interface CheckLabel {
+  readonly name: string;
+  readonly symbol: string;
+}
+
+const CHECKS: Readonly<Record<CheckId, CheckLabel>> = {
+  'bar-fit': { name: 'Bar fit', symbol: 'b' },
+  'hanger-bars': { name: 'Hanger bars', symbol: '' },
+  strength: { name: 'Strength', symbol: 'φMn' },
+  'curvature-ductility': { name: 'Curvature ductility', symbol: 'μφ' },
+  'tension-strain': { name: 'Tension strain', symbol: 'εt' },
+  'least-steel': { name: 'Least steel', symbol: 'As' },
+  'depth-to-width': { name: 'Depth to width', symbol: 'h/b' },
+  'depth-cap': { name: 'Depth cap', symbol: 'h' },
+  'column-width': { name: 'Column width', symbol: 'b' },
+  'compression-share': { name: 'Compression share', symbol: 'A′s/As' },
+  'bar-rules': { name: 'Bar rules', symbol: '' },
+};
+
+export const checkLabel = (id: CheckId): CheckLabel => CHECKS[id];

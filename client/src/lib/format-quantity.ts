@@ -1,0 +1,118 @@
+import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import { displayUnit, toDisplay, type DisplayKind } from './units.ts';
+
+interface NumberStyle {
+  /** Significant figures. */
+  readonly digits: number;
+  /** Drop zeros at the end: for values that were chosen (27 in, 4 ksi), not computed (μφ 6.00). */
+  readonly isTrimmed: boolean;
+}
+
+const CHOSEN: NumberStyle = { digits: 4, isTrimmed: true };
+const COMPUTED: NumberStyle = { digits: 3, isTrimmed: false };
+
+const STYLE: Partial<Record<DisplayKind, NumberStyle>> = {
+  length: CHOSEN,
+  span: CHOSEN,
+  stress: CHOSEN,
+  count: { digits: 6, isTrimmed: true },
+  strain: { digits: 3, isTrimmed: false },
+  percent: { digits: 3, isTrimmed: true },
+  moment: { digits: 4, isTrimmed: true },
+  force: { digits: 4, isTrimmed: true },
+  money: { digits: 4, isTrimmed: true },
+  'money-per-mass': CHOSEN,
+  'money-per-volume': CHOSEN,
+  'money-per-surface': CHOSEN,
+  'co2e-per-mass': CHOSEN,
+  'co2e-per-volume': CHOSEN,
+};
+
+export interface FormatOptions {
+  /** Significant figures instead of the kind's own. */
+  readonly digits?: number;
+  /** Leave the unit out, where a heading carries it. */
+  readonly hideUnit?: boolean;
+}
+
+/** A number for reading: figures beyond `digits` are rounded away, thousands are grouped, minus is a true minus. */
+export function formatNumber(value: number, digits = 3, isTrimmed = false): string {
+  if (!Number.isFinite(value)) return '';
+  const magnitude = value === 0 ? 0 : Math.floor(Math.log10(Math.abs(value)));
+  const rounded = Number(value.toPrecision(digits));
+  const decimals = Math.max(0, digits - 1 - (rounded === 0 ? 0 : Math.max(magnitude, exponent(rounded))));
+  return rounded
+    .toLocaleString('en-US', {
+      minimumFractionDigits: isTrimmed || value === 0 ? 0 : Math.min(decimals, 12),
+      maximumFractionDigits: Math.min(decimals, 12),
+    })
+    .replace('-', '−');
+}
+
+const exponent = (value: number): number => Math.floor(Math.log10(Math.abs(value)));
+
+/** Prints a stored value in the project's units. What is not known prints as nothing, never as zero. */
+export function formatQuantity(
+  stored: number | null | undefined,
+  kind: DisplayKind,
+  units: UnitSystem,
+  options: FormatOptions = {},
+): string {
+  if (stored === null || stored === undefined || !Number.isFinite(stored)) return '';
+  const style = STYLE[kind] ?? COMPUTED;
+  const text = formatNumber(toDisplay(stored, kind, units), options.digits ?? style.digits, style.isTrimmed);
+  const { label } = displayUnit(kind, units);
+  if (options.hideUnit || label === '') return text;
+  return label === '%' || label.startsWith('/') ? `${text}${label}` : `${text} ${label}`;
+}
+
+/** A difference with its sign in front, `+1.20` or `−1.20`; `0` when the two print alike. */
+export function formatDifference(
+  stored: number | null | undefined,
+  kind: DisplayKind,
+  units: UnitSystem,
+  options: FormatOptions = {},
+): string {
+  if (stored === null || stored === undefined || !Number.isFinite(stored)) return '';
+  if (Math.abs(stored) < 1e-9) return '0';
+  const text = formatQuantity(stored, kind, units, options);
+  return stored > 0 ? `+${text}` : text;
+}
+
+/** Money with its currency in front, `USD 99.20/ft`; nothing where a rate is missing. */
+export function formatMoney(
+  stored: number | null | undefined,
+  currency: string | null | undefined,
+  kind: 'money' | 'money-per-length',
+  units: UnitSystem,
+): string {
+  const text = formatQuantity(stored, kind, units);
+  return text === '' ? '' : `${currency ?? ''} ${text}`.trim();
+}
+
+/** What a field shows for a stored value: every figure that was typed, no grouping, no noise of conversion. */
+export function fieldText(stored: number | null, kind: DisplayKind, units: UnitSystem): string {
+  if (stored === null || !Number.isFinite(stored)) return '';
+  const displayed = Number(toDisplay(stored, kind, units).toPrecision(9));
+  return Math.abs(displayed) >= 1e-6 && Math.abs(displayed) < 1e15
+    ? displayed.toLocaleString('en-US', { useGrouping: false, maximumFractionDigits: 9 })
+    : String(displayed);
+}
+
+export const formatWhole = (value: number): string => Math.round(value).toLocaleString('en-US');
+
+/** `1.2 s`, `340 ms`, `2 min 5 s`. */
+export function formatDuration(ms: number): string {
+  if (ms < 1000) return `${Math.round(ms)} ms`;
+  if (ms < 60_000) return `${formatNumber(ms / 1000, 2)} s`;
+  return `${Math.floor(ms / 60_000)} min ${Math.round((ms % 60_000) / 1000)} s`;
+}
+
+/** A day a reader can place at once, `14 May 2026`; with the time of day when `isTimed`. */
+export function formatDate(iso: string, isTimed = false): string {
+  const day: Intl.DateTimeFormatOptions = { day: 'numeric', month: 'short', year: 'numeric' };
+  const time: Intl.DateTimeFormatOptions = isTimed
+    ? { hour: '2-digit', minute: '2-digit', hour12: false }
+    : {};
+  return new Date(iso).toLocaleString('en-GB', { ...day, ...time });
+}
