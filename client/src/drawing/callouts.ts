@@ -1,0 +1,53 @@
+import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import type { SectionInput } from '#shared/engine/section.ts';
+import { formatQuantity } from '#client/src/lib/format-quantity.ts';
+import { barsText } from '#client/src/lib/section-text.ts';
+import type { SectionGeometry } from './section-geometry.ts';
+
+/** A word beside the section with a line to what it names; mm in the section's own coordinates. */
+export interface Callout {
+  readonly text: string;
+  readonly tone: 'steel' | 'ink';
+  readonly xMm: number;
+  readonly yMm: number;
+}
+
+/** Words for every layer of steel, the stirrup and the neutral axis, from the top down. */
+export function calloutsOf(section: SectionInput, geometry: SectionGeometry, units: UnitSystem): Callout[] {
+  const rows = geometry.rows.map((row): Callout => ({
+    text: barsText(row.groups),
+    tone: 'steel',
+    xMm: row.rightMm,
+    yMm: row.yMm,
+  }));
+  const bands = geometry.bands.map((band): Callout => ({
+    text: formatQuantity(band.areaMm2, 'area', units),
+    tone: 'steel',
+    xMm: band.xMm + band.widthMm,
+    yMm: band.yMm + band.heightMm / 2,
+  }));
+  const { stirrup } = geometry;
+  const ties: Callout[] =
+    stirrup === null || section.stirrup === null || !geometry.fits
+      ? []
+      : [
+          {
+            text: `${section.stirrup.bar} @ ${formatQuantity(section.stirrup.spacingMm, 'length', units)}`,
+            tone: 'steel',
+            xMm: stirrup.xMm + stirrup.widthMm,
+            yMm: geometry.depthMm * 0.56,
+          },
+        ];
+  const axis: Callout[] =
+    geometry.neutralAxisMm === null
+      ? []
+      : [
+          {
+            text: `c ${formatQuantity(geometry.neutralAxisMm, 'length', units, { hideUnit: true, digits: 3 })}`,
+            tone: 'ink',
+            xMm: geometry.widthMm,
+            yMm: geometry.neutralAxisMm,
+          },
+        ];
+  return [...rows, ...bands, ...ties, ...axis].toSorted((a, b) => a.yMm - b.yMm);
+}
