@@ -11,9 +11,9 @@ const MIGRATION_LOCK = 72_710_215;
 const MIGRATIONS_FOLDER = fileURLToPath(new URL('../../drizzle', import.meta.url));
 
 /**
- * Brings a database to the newest schema, and the job queue's own schema with it. Two services may start at once and Drizzle's migrator takes no lock of
- * its own, so one connection holds an advisory lock for the whole of it; ending the connection frees the lock,
- * also after a failure.
+ * Brings a database to the newest schema, and the job queue's own schema with it. Two services may start at once and
+ * Drizzle's migrator takes no lock of its own, so one connection holds an advisory lock for the whole of it; ending
+ * the connection frees the lock, also after a failure.
  */
 export async function migrateDatabase(databaseUrl: string): Promise<void> {
   const connection = new pg.Client({ connectionString: databaseUrl });

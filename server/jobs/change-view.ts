@@ -1,0 +1,79 @@
+import { and, eq, inArray, sql } from 'drizzle-orm';
+import type { RunState } from '#shared/contract/records.ts';
+import type { Database } from '../db/client.ts';
+import { runViews } from '../db/schema/run-views.ts';
+import { runs } from '../db/schema/runs.ts';
+import { notifyViewChanged } from './run-notifications.ts';
+
+export interface ViewTarget {
+  readonly runId: string;
+  readonly viewId: string;
+  /** States the view must be in; in any other the change is refused. */
+  readonly from: readonly RunState[];
+  /** The worker that must hold it, where the change comes from one. */
+  readonly heldBy?: string;
+}
+
+export type ViewChange = Partial<
+  Pick<
+    typeof runViews.$inferInsert,
+    | 'state'
+    | 'evaluated'
+    | 'feasible'
+    | 'elapsedMs'
+    | 'result'
+    | 'frontCount'
+    | 'hash'
+    | 'message'
+    | 'workerId'
+    | 'startedAt'
+    | 'finishedAt'
+    | 'cancelRequestedAt'
+  >
+>;
+
+const ENDED: readonly RunState[] = ['finished', 'cancelled', 'failed'];
+
+/**
+ * The one way to change a view: writes it, keeps the run's own state in step, and tells whoever follows the run.
+ * Answers the view's row as it is now, or undefined where the target did not allow it.
+ */
+export async function changeView(
+  db: Database,
+  target: ViewTarget,
+  change: ViewChange,
+): Promise<typeof runViews.$inferSelect | undefined> {
+  return db.transaction(async (tx) => {
+    // The run's row first, always: its lock puts the events of all its views in order of commit, without deadlocks.
+    const [run] = await tx
+      .update(runs)
+      .set({ eventSequence: sql`${runs.eventSequence} + 1` })
+      .where(eq(runs.id, target.runId))
+      .returning({ sequence: runs.eventSequence, view: sql<{ x: string; y: string }>`definition->'view'` });
+    if (run === undefined) return undefined;
+    const [view] = await tx
+      .update(runViews)
+      .set({ ...change, sequence: run.sequence })
+      .where(
+        and(
+          eq(runViews.id, target.viewId),
+          inArray(runViews.state, [...target.from]),
+          target.heldBy === undefined ? undefined : eq(runViews.workerId, target.heldBy),
+        ),
+      )
+      .returning();
+    if (view === undefined) return undefined;
+    const isOwnView = run.view.x === view.x && run.view.y === view.y;
+    if (isOwnView && change.state !== undefined) await setRunState(tx, target.runId, change.state);
+    await notifyViewChanged(tx, { runId: target.runId, viewId: view.id, sequence: run.sequence });
+    return view;
+  });
+}
+
+/** A run is in the state of its own view, the one its definition asks for; opening another does not change it. */
+async function setRunState(tx: Database, runId: string, state: RunState): Promise<void> {
+  await tx
+    .update(runs)
+    .set({ state, finishedAt: ENDED.includes(state) ? sql`now()` : null })
+    .where(eq(runs.id, runId));
+}

@@ -1,0 +1,62 @@
+import type { ChunkResult } from '#shared/sweep/chunk.ts';
+import { finishResult } from '#shared/sweep/finish.ts';
+import type { Database } from '../../db/client.ts';
+import type { Log } from '../../log.ts';
+import { changeView, type ViewTarget } from '../change-view.ts';
+import { describeResult } from '../describe-result.ts';
+import type { ClaimedView } from './claim-view.ts';
+
+/** Often enough for a front that seems to grow by itself, seldom enough to cost nothing. */
+const INTERVAL_MS = 150;
+
+interface ProgressOptions {
+  readonly claimed: ClaimedView;
+  /** By performance.now(). */
+  readonly startedAt: number;
+  /** A cancel was asked for, and its notification may have been missed. */
+  readonly onCancelled: () => void;
+  /** Another worker holds the view now. */
+  readonly onLost: () => void;
+}
+
+/** Writes what is done so far, at most every INTERVAL_MS and one write at a time; what comes in between is skipped. */
+export class ProgressWriter {
+  readonly #context: { db: Database; log: Log };
+  readonly #target: ViewTarget;
+  readonly #options: ProgressOptions;
+  #lastWriteAt = -Infinity;
+  #writing: Promise<void> | undefined;
+
+  constructor(context: { db: Database; log: Log }, target: ViewTarget, options: ProgressOptions) {
+    this.#context = context;
+    this.#target = target;
+    this.#options = options;
+  }
+
+  offer(merged: ChunkResult): void {
+    if (this.#writing !== undefined || performance.now() - this.#lastWriteAt < INTERVAL_MS) return;
+    this.#lastWriteAt = performance.now();
+    this.#writing = this.#write(merged).finally(() => {
+      this.#writing = undefined;
+    });
+  }
+
+  /** Waits for a write in progress, so that it cannot overtake what is written next. */
+  async settle(): Promise<void> {
+    await this.#writing;
+  }
+
+  async #write(merged: ChunkResult): Promise<void> {
+    const { claimed, startedAt, onCancelled, onLost } = this.#options;
+    try {
+      const result = finishResult(claimed.problem, claimed.view, merged);
+      const elapsedMs = performance.now() - startedAt;
+      const view = await changeView(this.#context.db, this.#target, { ...describeResult(result), elapsedMs });
+      if (view === undefined) onLost();
+      else if (view.cancelRequestedAt !== null) onCancelled();
+    } catch (error) {
+      // Progress is worth nothing later: the next write, or the final one, tells more.
+      this.#context.log.warn({ err: error }, 'Progress could not be written');
+    }
+  }
+}
