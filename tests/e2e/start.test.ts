@@ -1,0 +1,180 @@
+import { readFileSync, rmSync } from 'node:fs';
+import path from 'node:path';
+import pg from 'pg';
+import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
+import { DEMO_ACCOUNTS, DEMO_PASSWORD } from '#server/cli/demo-accounts.mjs';
+import { findFreePort, isPortFree } from '#server/cli/free-port.mjs';
+import { TEST_FOLDER } from '#server/cli/project-paths.mjs';
+import {
+  type FairweightProcess,
+  isHealthy,
+  launchFairweight,
+  pressCtrlC,
+  waitFor,
+} from '../support/fairweight-process.ts';
+
+const folder = path.join(TEST_FOLDER, `start-${process.pid}`);
+const launched: FairweightProcess[] = [];
+
+const untouchedFolder = `${folder}-interrupted`;
+
+async function launch(port?: number, dataFolder = folder): Promise<FairweightProcess> {
+  const fairweight = await launchFairweight(dataFolder, port);
+  launched.push(fairweight);
+  return fairweight;
+}
+
+function readCluster(dataFolder = folder): { port: number; password: string } {
+  return JSON.parse(readFileSync(path.join(dataFolder, 'postgres.json'), 'utf8'));
+}
+
+const isPostgresStopped = () => isPortFree(readCluster().port, '127.0.0.1');
+
+/** How many people, projects and candidates the office has: a start must neither lose any nor seed a second set. */
+async function countRecords(dataFolder = folder): Promise<unknown> {
+  const { port, password } = readCluster(dataFolder);
+  const database = new pg.Client({
+    host: '127.0.0.1',
+    port,
+    user: 'fairweight',
+    database: 'fairweight',
+    password,
+  });
+  await database.connect();
+  try {
+    const counts = ['people', 'projects', 'runs', 'candidates'].map(
+      (table) => `(select count(*) from ${table}) ${table}`,
+    );
+    return (await database.query(`select ${counts.join(', ')}`)).rows[0];
+  } finally {
+    await database.end();
+  }
+}
+
+async function expectNothingLeft(fairweight: FairweightProcess): Promise<void> {
+  await waitFor('the service is gone', async () => !(await isHealthy(fairweight.origin)));
+  await waitFor('PostgreSQL is stopped', isPostgresStopped);
+}
+
+/** `node server/cli/start.mjs`, which npm runs in its own place of `sh`. */
+function findStartPid({ npm }: FairweightProcess): number {
+  const children = readFileSync(`/proc/${npm.pid}/task/${npm.pid}/children`, 'utf8').trim().split(' ');
+  return Number(children[0]);
+}
+
+describe('npm start', () => {
+  // The first start on an empty folder creates the database, the schema and the demo office.
+  beforeAll(async () => {
+    const first = await launch();
+    await first.ready;
+    for (const { email } of DEMO_ACCOUNTS) expect(first.output()).toContain(email);
+    expect(first.output()).toContain(DEMO_PASSWORD);
+    expect(first.output()).toContain(first.origin);
+    pressCtrlC(first);
+    expect(await first.ended).toBe(0);
+    await expectNothingLeft(first);
+  });
+
+  afterEach(async () => {
+    for (const fairweight of launched.splice(0)) {
+      pressCtrlC(fairweight);
+      await fairweight.ended;
+    }
+  });
+
+  afterAll(() => {
+    for (const used of [folder, untouchedFolder]) rmSync(used, { recursive: true, force: true });
+  });
+
+  it('is ready within some five seconds once everything is in place', async () => {
+    const startedAt = performance.now();
+    const fairweight = await launch();
+    await fairweight.ready;
+    const seconds = (performance.now() - startedAt) / 1000;
+    console.log(`warm start: ${seconds.toFixed(1)} s`);
+    expect(await isHealthy(fairweight.origin)).toBe(true);
+    expect(seconds).toBeLessThan(8);
+  });
+
+  it('stops service and database when npm alone gets a TERM', async () => {
+    const fairweight = await launch();
+    await fairweight.ready;
+    process.kill(fairweight.npm.pid!, 'SIGTERM');
+    await fairweight.ended;
+    await expectNothingLeft(fairweight);
+  });
+
+  it('frees its port after kill -9, and the next start finds the data as it was', async () => {
+    const port = await findFreePort();
+    const killed = await launch(port);
+    await killed.ready;
+    const database = readCluster();
+    const records = await countRecords();
+    process.kill(findStartPid(killed), 'SIGKILL');
+    await killed.ended;
+    await waitFor('the orphaned service gives its port free', () => isPortFree(port, '127.0.0.1'));
+
+    const next = await launch(port);
+    await next.ready;
+    expect(readCluster(), 'joins the database that was left running').toEqual(database);
+    expect(await countRecords()).toEqual(records);
+    pressCtrlC(next);
+    expect(await next.ended).toBe(0);
+    await expectNothingLeft(next);
+  });
+
+  it('recovers when npm, the start and the database are all killed at once', async () => {
+    const killed = await launch();
+    await killed.ready;
+    const records = await countRecords();
+    const pidFile = readFileSync(path.join(folder, 'postgres', 'postmaster.pid'), 'utf8');
+    process.kill(Number(pidFile.split('\n')[0]), 'SIGKILL');
+    process.kill(-killed.npm.pid!, 'SIGKILL');
+    await killed.ended;
+    await waitFor('the orphaned service is gone', async () => !(await isHealthy(killed.origin)));
+
+    const next = await launch();
+    await next.ready;
+    expect(await isHealthy(next.origin)).toBe(true);
+    expect(await countRecords()).toEqual(records);
+  });
+
+  it('refuses a taken port in plain words and leaves the first instance alone', async () => {
+    const port = await findFreePort();
+    const first = await launch(port);
+    await first.ready;
+    const second = await launch(port);
+    expect(await second.ended).toBe(1);
+    expect(second.output()).toContain(`http://127.0.0.1:${port} is taken`);
+    expect(await isHealthy(first.origin)).toBe(true);
+  });
+
+  it('shares the database between two instances, and the last one out stops it', async () => {
+    const first = await launch();
+    await first.ready;
+    const second = await launch();
+    await second.ready;
+    pressCtrlC(first);
+    expect(await first.ended).toBe(0);
+    expect(await isPostgresStopped()).toBe(false);
+    expect(await isHealthy(second.origin)).toBe(true);
+    pressCtrlC(second);
+    expect(await second.ended).toBe(0);
+    await expectNothingLeft(second);
+  });
+
+  it('leaves nothing half done when it is stopped during its very first start', async () => {
+    for (const written of ['Packages:', 'Database:', 'Build:']) {
+      const interrupted = await launch(undefined, untouchedFolder);
+      await waitFor(written, () => interrupted.output().includes(written));
+      pressCtrlC(interrupted);
+      expect(await interrupted.ended).toBe(0);
+      expect(interrupted.output()).not.toContain('Fairweight is ready');
+    }
+    const next = await launch(undefined, untouchedFolder);
+    await next.ready;
+    const complete = await launch();
+    await complete.ready;
+    expect(await countRecords(untouchedFolder)).toEqual(await countRecords());
+  });
+});
