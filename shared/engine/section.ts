@@ -83,9 +83,9 @@ export interface Rates {
   readonly concrete: readonly ConcreteRate[];
   /** A1–A3 factor of reinforcing steel, kg CO2e per kg. */
   readonly steelCo2ePerKg: number | null;
-  /** Laps as a share of net steel, e.g. 0.08. */
+  /** Laps as a share of net longitudinal steel, e.g. 0.08. */
   readonly lapShare: number;
-  /** Waste as a share of net steel and laps, e.g. 0.03. */
+  /** Waste as a share of net steel (stirrups too) and laps, e.g. 0.03. */
   readonly wasteShare: number;
 }
 

@@ -1,0 +1,118 @@
+import { crackedAxisDepth } from './cracked-section.ts';
+import type { DuctilityResult, ElasticResult, FlexureResult } from './evaluation.ts';
+import type { RuleSet } from './rules/rule-set.ts';
+import type { DesignBasis, SectionInput } from './section.ts';
+import type { SteelLayout } from './steel-layout.ts';
+
+/** Above this share of f′c concrete leaves its straight line and the elastic yield picture is doubtful (engine rule). */
+const DOUBTFUL_CONCRETE_SHARE = 0.7;
+
+/** Modular ratio counted for steel above the axis. */
+function ratioAbove(modularRatio: number, basis: DesignBasis): number {
+  return basis.displacedConcrete === 'ignore' ? modularRatio : modularRatio - 1;
+}
+
+/**
+ * Uncracked and cracked linear elastic section: cracking moment at the modulus of rupture, and first yield of the
+ * tension steel. Cracked: n A below the axis, (n − 1) A above it.
+ */
+export function elasticSection(
+  section: SectionInput,
+  layout: SteelLayout,
+  basis: DesignBasis,
+  rules: RuleSet,
+): ElasticResult {
+  const ecMPa = rules.concreteModulusMPa(section.fcMPa);
+  const modularRatio = basis.esMPa / ecMPa;
+  const uncracked = uncrackedSection(section, layout, modularRatio);
+  const ruptureModulusMPa = rules.ruptureModulusMPa(section.fcMPa);
+  const crackingCurvaturePerMm = ruptureModulusMPa / ecMPa / (section.depthMm - uncracked.axisMm);
+  const kd = crackedAxisDepth(layout.depths, layout.areas, layout.depths.length, {
+    widthMm: section.widthMm,
+    modularRatio,
+    ratioAbove: ratioAbove(modularRatio, basis),
+  });
+  const crackedInertiaMm4 = crackedInertia(section.widthMm, layout, kd, basis, modularRatio);
+  const curvature = yieldCurvature(section, layout, basis, kd);
+  const concreteStress = ecMPa * curvature * kd;
+  const share = concreteStress / section.fcMPa;
+  return {
+    ecMPa,
+    modularRatio,
+    uncrackedAxisMm: uncracked.axisMm,
+    uncrackedInertiaMm4: uncracked.inertiaMm4,
+    ruptureModulusMPa,
+    crackingMomentNmm: ecMPa * uncracked.inertiaMm4 * crackingCurvaturePerMm,
+    crackingCurvaturePerMm,
+    crackedAxisMm: kd,
+    crackedInertiaMm4,
+    yieldMomentNmm: ecMPa * crackedInertiaMm4 * curvature,
+    concreteStressAtYieldMPa: concreteStress,
+    concreteStressShareAtYield: share,
+    isElasticPictureDoubtful: share > DOUBTFUL_CONCRETE_SHARE,
+  };
+}
+
+/** φy = εy / (depth of the measured steel − kd), 1/mm. */
+function yieldCurvature(section: SectionInput, layout: SteelLayout, basis: DesignBasis, kd: number): number {
+  const measuredAt = basis.yieldCurvatureAt === 'centroid' ? layout.dMm : layout.dtMm;
+  return section.fyMPa / basis.esMPa / (measuredAt - kd);
+}
+
+function uncrackedSection(section: SectionInput, layout: SteelLayout, modularRatio: number) {
+  const { widthMm: b, depthMm: h } = section;
+  const added = modularRatio - 1;
+  let area = b * h;
+  let moment = (b * h * h) / 2;
+  layout.depths.forEach((depth, i) => {
+    area += added * layout.areas[i]!;
+    moment += added * layout.areas[i]! * depth;
+  });
+  const axisMm = moment / area;
+  let inertiaMm4 = (b * h * h * h) / 12 + b * h * (h / 2 - axisMm) ** 2;
+  layout.depths.forEach((depth, i) => {
+    inertiaMm4 += added * layout.areas[i]! * (depth - axisMm) ** 2;
+  });
+  return { axisMm, inertiaMm4 };
+}
+
+function crackedInertia(
+  b: number,
+  layout: SteelLayout,
+  kd: number,
+  basis: DesignBasis,
+  modularRatio: number,
+): number {
+  const above = ratioAbove(modularRatio, basis);
+  let inertia = (b * kd * kd * kd) / 3;
+  layout.depths.forEach((depth, i) => {
+    inertia += (depth < kd ? above : modularRatio) * layout.areas[i]! * (depth - kd) ** 2;
+  });
+  return inertia;
+}
+
+/** μφ = φu / φy of the closed path, with the convention spelled out. */
+export function ductilityOf(
+  section: SectionInput,
+  layout: SteelLayout,
+  basis: DesignBasis,
+  { flexure, elastic }: { readonly flexure: FlexureResult; readonly elastic: ElasticResult },
+): DuctilityResult {
+  const curvatureYieldPerMm = yieldCurvature(section, layout, basis, elastic.crackedAxisMm);
+  const curvatureUltimatePerMm = flexure.epsilonCu / flexure.neutralAxisMm;
+  const where =
+    basis.yieldCurvatureAt === 'centroid'
+      ? 'the centroid of the tension steel'
+      : 'the outermost tension layer';
+  const displaced = {
+    deduct: 'concrete displaced by bars inside the block deducted',
+    'deduct-above-axis': 'concrete displaced by bars above the neutral axis deducted',
+    ignore: 'displaced concrete ignored',
+  }[basis.displacedConcrete];
+  return {
+    curvatureYieldPerMm,
+    curvatureUltimatePerMm,
+    curvatureDuctility: curvatureUltimatePerMm / curvatureYieldPerMm,
+    definition: `μφ = φu/φy; φy = εy/(d − kd) on the cracked elastic section at ${where}; φu = εcu/c with εcu = ${flexure.epsilonCu}; ${displaced}`,
+  };
+}

@@ -1,0 +1,137 @@
+import { barTotal, checksOf } from './checks.ts';
+import { ductilityOf, elasticSection } from './elastic.ts';
+import type { Evaluation, FlexureResult, Quantities } from './evaluation.ts';
+import { flexureAtUltimate } from './flexure.ts';
+import type { Measures } from './measures.ts';
+import { NOT_CHECKED } from './not-checked.ts';
+import { assertNotNegative, assertPositive, InvalidSectionError } from './preconditions.ts';
+import { quantitiesOf } from './quantities.ts';
+import { RULE_SETS } from './rules/rule-sets.ts';
+import type { DesignBasis, Demand, Reinforcement, SectionInput, UserRules } from './section.ts';
+import { placeSteel, type SteelLayout } from './steel-layout.ts';
+import { ENGINE_VERSION } from './version.ts';
+import { workingOf } from './working.ts';
+
+/** What a section is judged by. */
+export interface EvaluationContext {
+  readonly basis: DesignBasis;
+  readonly demand: Demand;
+  readonly rules: UserRules;
+}
+
+/**
+ * One section in, every quantity with its working out: bars placed, strength at ultimate, cracked elastic section,
+ * curvature ductility, checks, measures, quantities. A section that fails a check, or cannot be built, is data.
+ * @throws InvalidSectionError on a broken precondition (negative width, NaN, unknown bar), naming the value.
+ */
+export function evaluateSection(section: SectionInput, context: EvaluationContext): Evaluation {
+  assertSection(section);
+  const { basis, demand, rules } = context;
+  const ruleSet = RULE_SETS[basis.ruleSet];
+  const placed = placeSteel(section, basis, rules.maxLayers);
+  const { layout } = placed;
+  const quantities = quantitiesOf(section, basis);
+  const flexure = layout && flexureAtUltimate(section, layout, basis, ruleSet);
+  const elastic = layout && elasticSection(section, layout, basis, ruleSet);
+  const ductility = layout && flexure && elastic && ductilityOf(section, layout, basis, { flexure, elastic });
+  const checks = checksOf({ section, basis, demand, rules, ruleSet, placed, flexure, ductility });
+  const measures = measuresOf(section, demand, quantities, {
+    flexure,
+    curvatureDuctility: ductility?.curvatureDuctility ?? null,
+  });
+  return {
+    engineVersion: ENGINE_VERSION,
+    ruleSet: { id: ruleSet.id, title: ruleSet.title },
+    conventions: {
+      displacedConcrete: basis.displacedConcrete,
+      yieldCurvatureAt: basis.yieldCurvatureAt,
+      bendAllowance: basis.bendAllowance,
+    },
+    geometry: layout && geometryOf(section, layout),
+    arrangement: placed.arrangement,
+    flexure,
+    elastic,
+    ductility,
+    checks,
+    meetsListedChecks: flexure !== null && checks.every((check) => check.passes),
+    measures,
+    quantities,
+    working:
+      layout && flexure && elastic && ductility
+        ? workingOf({ section, basis, demand, ruleSet, layout, flexure, elastic, ductility, quantities })
+        : [],
+    notChecked: NOT_CHECKED,
+  };
+}
+
+function geometryOf({ widthMm }: SectionInput, layout: SteelLayout): Evaluation['geometry'] {
+  const { dMm, dtMm, dPrimeMm, asMm2, asPrimeMm2 } = layout;
+  const area = widthMm * dMm;
+  return { dMm, dtMm, dPrimeMm, asMm2, asPrimeMm2, rho: asMm2 / area, rhoPrime: asPrimeMm2 / area };
+}
+
+function measuresOf(
+  section: SectionInput,
+  demand: Demand,
+  quantities: Quantities,
+  results: { readonly flexure: FlexureResult | null; readonly curvatureDuctility: number | null },
+): Measures {
+  const strength = results.flexure?.designMomentNmm ?? null;
+  return {
+    steelKgPerM: quantities.netSteelKgPerM,
+    costPerM: quantities.cost?.total ?? null,
+    co2eKgPerM: quantities.co2eKgPerM,
+    depthMm: section.depthMm,
+    widthMm: section.widthMm,
+    concreteM3PerM: quantities.concreteM3PerM,
+    formworkM2PerM: quantities.formworkM2PerM,
+    curvatureDuctility: results.curvatureDuctility,
+    designStrengthNmm: strength,
+    utilisation: demand.muNmm === null || strength === null ? null : demand.muNmm / strength,
+    barCount: barCountOf(section.reinforcement),
+  };
+}
+
+function barCountOf(reinforcement: Reinforcement): number | null {
+  if (reinforcement.kind === 'layers') return null;
+  return barTotal(reinforcement.tension) + barTotal(reinforcement.compression);
+}
+
+function assertSection(section: SectionInput): void {
+  assertPositive(section.widthMm, 'Width b', ['widthMm']);
+  assertPositive(section.depthMm, 'Depth h', ['depthMm']);
+  assertPositive(section.fcMPa, 'Concrete strength f′c', ['fcMPa']);
+  assertPositive(section.fyMPa, 'Yield strength fy', ['fyMPa']);
+  assertNotNegative(section.coverMm, 'Clear cover', ['coverMm']);
+  if (section.stirrup) {
+    assertPositive(section.stirrup.spacingMm, 'Stirrup spacing', ['stirrup', 'spacingMm']);
+    assertPositive(section.stirrup.legs, 'Stirrup legs', ['stirrup', 'legs']);
+  }
+  assertReinforcement(section.reinforcement, section.depthMm);
+}
+
+function assertReinforcement(reinforcement: Reinforcement, depthMm: number): void {
+  if (reinforcement.kind === 'layers') {
+    reinforcement.layers.forEach((layer, i) => {
+      const path = ['reinforcement', 'layers', i];
+      assertPositive(layer.depthMm, 'Layer depth', [...path, 'depthMm']);
+      assertNotNegative(layer.areaMm2, 'Layer area', [...path, 'areaMm2']);
+      if (layer.depthMm >= depthMm)
+        throw new InvalidSectionError(`Layer depth ${layer.depthMm} mm is not inside h = ${depthMm} mm`, [
+          ...path,
+          'depthMm',
+        ]);
+    });
+    return;
+  }
+  for (const face of ['tension', 'compression'] as const)
+    reinforcement[face].forEach(({ count }, i) => {
+      if (!Number.isInteger(count) || count < 1)
+        throw new InvalidSectionError(`Number of bars must be a whole number above zero, not ${count}`, [
+          'reinforcement',
+          face,
+          i,
+          'count',
+        ]);
+    });
+}

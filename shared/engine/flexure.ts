@@ -1,0 +1,75 @@
+import type { FlexureResult, LayerState } from './evaluation.ts';
+import { neutralAxisDepth } from './neutral-axis.ts';
+import type { RuleSet } from './rules/rule-set.ts';
+import type { DesignBasis, SectionInput } from './section.ts';
+import type { SteelLayout } from './steel-layout.ts';
+
+/**
+ * Strength at ultimate of a section with placed steel: plane sections, rectangular block, elastic–perfectly plastic
+ * steel with each layer's own strain (ACI 318 22.2). Moments are taken about the compression face.
+ */
+export function flexureAtUltimate(
+  section: SectionInput,
+  layout: SteelLayout,
+  basis: DesignBasis,
+  rules: RuleSet,
+): FlexureResult {
+  const { widthMm, fcMPa, fyMPa } = section;
+  const { depths, areas, faces } = layout;
+  const n = depths.length;
+  const blockStressMPa = rules.blockStressMPa(fcMPa);
+  const beta1 = rules.blockDepthFactor(fcMPa);
+  const epsilonCu = rules.epsilonCu;
+  const blockForcePerMm = blockStressMPa * widthMm * beta1;
+  const c = neutralAxisDepth(depths, areas, n, {
+    blockForcePerMm,
+    blockStressMPa,
+    blockDepthFactor: beta1,
+    fyMPa,
+    esMPa: basis.esMPa,
+    epsilonCu,
+    displacedConcrete: basis.displacedConcrete,
+  });
+  const a = beta1 * c;
+  const deductionDepth = { deduct: a, 'deduct-above-axis': c, ignore: -1 }[basis.displacedConcrete];
+  const concreteForceN = blockForcePerMm * c;
+  let nominalMomentNmm = -concreteForceN * (a / 2);
+  let steelForceN = 0;
+  const layers: LayerState[] = [];
+  for (let i = 0; i < n; i++) {
+    const depthMm = depths[i]!;
+    const areaMm2 = areas[i]!;
+    const strain = (epsilonCu * (depthMm - c)) / c;
+    const elastic = basis.esMPa * strain;
+    const stressMPa = elastic > fyMPa ? fyMPa : elastic < -fyMPa ? -fyMPa : elastic;
+    const isDeducted = depthMm < deductionDepth;
+    const forceN = areaMm2 * (isDeducted ? stressMPa + blockStressMPa : stressMPa);
+    nominalMomentNmm += forceN * depthMm;
+    steelForceN += forceN;
+    layers.push({
+      face: faces[i]!,
+      depthMm,
+      areaMm2,
+      strain,
+      stressMPa,
+      forceN,
+      yields: Math.abs(elastic) >= fyMPa,
+      displacedConcreteDeducted: isDeducted,
+    });
+  }
+  const tensionStrain = (epsilonCu * (layout.dtMm - c)) / c;
+  const strengthReduction = rules.strengthReduction(tensionStrain, fyMPa / basis.esMPa);
+  return {
+    beta1,
+    epsilonCu,
+    neutralAxisMm: c,
+    blockDepthMm: a,
+    concreteForceN,
+    layers,
+    equilibriumResidual: (steelForceN - concreteForceN) / concreteForceN,
+    nominalMomentNmm,
+    tensionStrain,
+    strengthReduction,
+    designMomentNmm: strengthReduction * nominalMomentNmm,
+  };
+}

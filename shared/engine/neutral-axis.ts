@@ -1,0 +1,135 @@
+import type { DisplacedConcrete } from './section.ts';
+
+/** Constants of one concrete, one steel and one width at ultimate. */
+export interface UltimateConstants {
+  /** Block force per mm of neutral-axis depth: block stress × block depth factor × width, N/mm. */
+  blockForcePerMm: number;
+  blockStressMPa: number;
+  blockDepthFactor: number;
+  fyMPa: number;
+  esMPa: number;
+  epsilonCu: number;
+  displacedConcrete: DisplacedConcrete;
+}
+
+const MAX_STATE_CHANGES = 12;
+
+/**
+ * Depth of the neutral axis at ultimate, mm, for layers sorted by depth (mm, mm²; the first n entries are used).
+ *
+ * Steel is elastic–perfectly plastic in both signs. With the yield state of each layer fixed, axial equilibrium times c
+ * is the quadratic α c² + P c − Q = 0; the state that its own root confirms is the answer. Without displaced concrete the
+ * unbalanced force rises steadily with c, so there is one root. Deducting displaced concrete makes it drop by σ A where
+ * the block reaches a layer, so that two roots can lie side by side; the deeper axis is taken: bars are deducted whenever
+ * there is an equilibrium with them inside the block, which gives the lower ductility.
+ *
+ * Shared by `evaluateSection` and the sweep's hot loop. Returns NaN where no equilibrium exists (no steel in tension).
+ */
+export function neutralAxisDepth(
+  depths: Float64Array,
+  areas: Float64Array,
+  n: number,
+  k: UltimateConstants,
+): number {
+  let deducted = 0;
+  if (k.displacedConcrete !== 'ignore') {
+    const reach = k.displacedConcrete === 'deduct' ? k.blockDepthFactor : 1;
+    // The deepest layer is never inside the block: it is the one that pulls.
+    for (let count = n - 1; count > 0; count--) {
+      const atLayer = depths[count - 1]! / reach;
+      if (unbalancedForce(depths, areas, n, k, atLayer, count) < 0) {
+        deducted = count;
+        break;
+      }
+    }
+  }
+  return rootWithDeducted(depths, areas, n, k, deducted);
+}
+
+/** Compression minus tension, N, with the axis at c and the first `deducted` layers displacing concrete. */
+function unbalancedForce(
+  depths: Float64Array,
+  areas: Float64Array,
+  n: number,
+  k: UltimateConstants,
+  c: number,
+  deducted: number,
+): number {
+  const strainScale = (k.esMPa * k.epsilonCu) / c;
+  let force = k.blockForcePerMm * c;
+  for (let i = 0; i < n; i++) {
+    const elastic = strainScale * (c - depths[i]!);
+    const stress = elastic > k.fyMPa ? k.fyMPa : elastic < -k.fyMPa ? -k.fyMPa : elastic;
+    force += areas[i]! * (i < deducted ? stress - k.blockStressMPa : stress);
+  }
+  return force;
+}
+
+/** The one root with a fixed set of deducted layers. */
+function rootWithDeducted(
+  depths: Float64Array,
+  areas: Float64Array,
+  n: number,
+  k: UltimateConstants,
+  deducted: number,
+): number {
+  const yieldRatio = k.fyMPa / (k.esMPa * k.epsilonCu);
+  const elasticStress = k.esMPa * k.epsilonCu;
+  let displaced = 0;
+  for (let i = 0; i < deducted; i++) displaced += areas[i]!;
+  displaced *= k.blockStressMPa;
+
+  let c = 0.25 * depths[n - 1]!;
+  let lastState = -1;
+  for (let change = 0; change < MAX_STATE_CHANGES; change++) {
+    const tensionYieldDepth = (1 + yieldRatio) * c;
+    const compressionYieldDepth = (1 - yieldRatio) * c;
+    let p = -displaced;
+    let q = 0;
+    let state = 0;
+    for (let i = 0; i < n; i++) {
+      const d = depths[i]!;
+      const a = areas[i]!;
+      if (d >= tensionYieldDepth) {
+        p -= a * k.fyMPa;
+        state = state * 3;
+      } else if (d <= compressionYieldDepth) {
+        p += a * k.fyMPa;
+        state = state * 3 + 2;
+      } else {
+        p += a * elasticStress;
+        q += a * elasticStress * d;
+        state = state * 3 + 1;
+      }
+    }
+    if (state === lastState) return c;
+    lastState = state;
+    c = positiveRoot(k.blockForcePerMm, p, q);
+  }
+  return bracketedRoot(depths, areas, n, k, deducted);
+}
+
+/** Positive root of α c² + P c − Q = 0, in the form that does not cancel. */
+function positiveRoot(alpha: number, p: number, q: number): number {
+  const root = Math.sqrt(p * p + 4 * alpha * q);
+  return p > 0 ? (2 * q) / (p + root) : (root - p) / (2 * alpha);
+}
+
+/** Bisection to the last bit, for the rare state cycle. */
+function bracketedRoot(
+  depths: Float64Array,
+  areas: Float64Array,
+  n: number,
+  k: UltimateConstants,
+  deducted: number,
+): number {
+  let low = 0;
+  let high = 4 * depths[n - 1]!;
+  if (!(unbalancedForce(depths, areas, n, k, high, deducted) > 0)) return NaN;
+  for (;;) {
+    const mid = 0.5 * (low + high);
+    if (mid <= low || mid >= high) return mid;
+    if (unbalancedForce(depths, areas, n, k, mid, deducted) > 0) high = mid;
+    else low = mid;
+  }
+}

@@ -1,0 +1,43 @@
+import type { Rates } from './section.ts';
+
+/** Rates of one run and one mix with missing ones as NaN, so that a missing rate spreads to the total by itself. */
+export interface Pricing {
+  readonly longitudinalPerKg: number;
+  readonly stirrupPerKg: number;
+  readonly concretePerM3: number;
+  readonly formworkPerM2: number;
+  readonly steelCo2ePerKg: number;
+  readonly concreteCo2ePerM3: number;
+  readonly lapShare: number;
+  readonly wasteShare: number;
+}
+
+/** Two strengths within this are the same mix, MPa. */
+const SAME_MIX_MPA = 0.01;
+
+const orMissing = (rate: number | null | undefined) => rate ?? NaN;
+
+/** The rates that apply to concrete of strength f′c (MPa). Without a price book allowances are nil and rates missing. */
+export function pricingFor(rates: Rates | null, fcMPa: number): Pricing {
+  const mix = rates?.concrete.find((rate) => Math.abs(rate.fcMPa - fcMPa) <= SAME_MIX_MPA);
+  return {
+    longitudinalPerKg: orMissing(rates?.steelPerKg),
+    stirrupPerKg: orMissing(rates?.stirrupPerKg),
+    concretePerM3: orMissing(mix?.costPerM3),
+    formworkPerM2: orMissing(rates?.formworkPerM2),
+    steelCo2ePerKg: orMissing(rates?.steelCo2ePerKg),
+    concreteCo2ePerM3: orMissing(mix?.co2eKgPerM3),
+    lapShare: rates?.lapShare ?? 0,
+    wasteShare: rates?.wasteShare ?? 0,
+  };
+}
+
+/** Formed surface per metre: soffit and two sides, less the slab's height on each side, m²/m. */
+export function formworkM2PerM(widthMm: number, depthMm: number, slabMm: number): number {
+  return (widthMm + 2 * Math.max(0, depthMm - slabMm)) / 1000;
+}
+
+/** Gross concrete per metre, m³/m; the steel's volume is not taken off (common practice). */
+export function concreteM3PerM(widthMm: number, depthMm: number): number {
+  return (widthMm * depthMm) / 1e6;
+}

@@ -1,0 +1,109 @@
+import type { RuleSetId } from '../section.ts';
+import { MM_PER_IN, MPA_PER_PSI } from '../units.ts';
+import type { Clauses, RuleSet } from './rule-set.ts';
+
+/**
+ * ACI 318, editions 2014 and 2019, US customary and metric. The editions differ in the strain limits; the metric books
+ * differ in rounded coefficients (3√f′c psi is 0.249√f′c MPa, the metric text says 0.25). Clause numbers from memory of
+ * the standards.
+ */
+const EPSILON_CU = 0.003; // 22.2.2.1
+const BLOCK_STRESS_SHARE = 0.85; // 22.2.2.4.1
+const COMPRESSION_CONTROLLED = 0.65; // Table 21.2.2, ties
+const TENSION_CONTROLLED = 0.9; // Table 21.2.2
+
+/** The numbers that the US and the metric book round differently. */
+interface Coefficients {
+  readonly units: 'us' | 'si';
+  readonly blockDepthFactor: (fcMPa: number) => number;
+  readonly concreteModulusMPa: (fcMPa: number) => number;
+  readonly ruptureModulusMPa: (fcMPa: number) => number;
+  /** Least steel ratio before fy: max(3√f′c, 200) psi or max(0.25√f′c, 1.4) MPa, as MPa. */
+  readonly leastSteelStressMPa: (fcMPa: number) => number;
+  /** Largest fy that may be put into the least steel. */
+  readonly leastSteelFyCapMPa: number;
+  readonly gapMm: number;
+  readonly hookTailLeastMm: number;
+  readonly largestTightBendMm: number;
+}
+
+const beta1 = (strengthAboveKnee: number) => Math.max(0.65, Math.min(0.85, 0.85 - 0.05 * strengthAboveKnee));
+
+const US: Coefficients = {
+  units: 'us',
+  blockDepthFactor: (fcMPa) => beta1((fcMPa / MPA_PER_PSI - 4000) / 1000),
+  concreteModulusMPa: (fcMPa) => 57000 * Math.sqrt(fcMPa / MPA_PER_PSI) * MPA_PER_PSI,
+  ruptureModulusMPa: (fcMPa) => 7.5 * Math.sqrt(fcMPa / MPA_PER_PSI) * MPA_PER_PSI,
+  leastSteelStressMPa: (fcMPa) => Math.max(3 * Math.sqrt(fcMPa / MPA_PER_PSI), 200) * MPA_PER_PSI,
+  leastSteelFyCapMPa: 80000 * MPA_PER_PSI,
+  gapMm: MM_PER_IN,
+  hookTailLeastMm: 3 * MM_PER_IN,
+  largestTightBendMm: 0.625 * MM_PER_IN,
+};
+
+const METRIC: Coefficients = {
+  units: 'si',
+  // The straight line runs on to its floor at 56 MPa; the printed table jumps to 0.65 at 55 MPa, 1 % below it.
+  blockDepthFactor: (fcMPa) => beta1((fcMPa - 28) / 7),
+  concreteModulusMPa: (fcMPa) => 4700 * Math.sqrt(fcMPa),
+  ruptureModulusMPa: (fcMPa) => 0.62 * Math.sqrt(fcMPa),
+  leastSteelStressMPa: (fcMPa) => Math.max(0.25 * Math.sqrt(fcMPa), 1.4),
+  leastSteelFyCapMPa: 550,
+  gapMm: 25,
+  hookTailLeastMm: 75,
+  largestTightBendMm: 16,
+};
+
+const clausesOf = (book: string): Clauses => ({
+  block: `${book} 22.2.2.4`,
+  strengthReduction: `${book} Table 21.2.2`,
+  strength: `${book} 9.5.1.1, 22.2`,
+  tensionStrain: `${book} 9.3.3.1`,
+  concreteModulus: `${book} 19.2.2.1`,
+  ruptureModulus: `${book} 19.2.3.1`,
+  leastSteel: `${book} 9.6.1.2, 9.6.1.3`,
+  barSpacing: `${book} 25.2.1, 25.2.2`,
+  hangers: `${book} 25.7.1.1`,
+});
+
+interface Edition {
+  readonly id: RuleSetId;
+  readonly year: '14' | '19';
+  readonly isMetric: boolean;
+}
+
+/** One ACI 318 rule set. */
+export function aci318({ id, year, isMetric }: Edition): RuleSet {
+  const book = `ACI 318${isMetric ? 'M' : ''}-${year}`;
+  const c = isMetric ? METRIC : US;
+  /** Strain from which a section is tension-controlled, Table 21.2.2. */
+  const tensionControlledStrain = (epsilonTy: number) => (year === '19' ? epsilonTy + 0.003 : 0.005);
+  return {
+    id,
+    title: book,
+    units: c.units,
+    epsilonCu: EPSILON_CU,
+    blockStressMPa: (fcMPa) => BLOCK_STRESS_SHARE * fcMPa,
+    blockDepthFactor: c.blockDepthFactor,
+    concreteModulusMPa: c.concreteModulusMPa,
+    ruptureModulusMPa: c.ruptureModulusMPa,
+    strengthReduction(epsilonT, epsilonTy) {
+      const share = (epsilonT - epsilonTy) / (tensionControlledStrain(epsilonTy) - epsilonTy);
+      return (
+        COMPRESSION_CONTROLLED +
+        (TENSION_CONTROLLED - COMPRESSION_CONTROLLED) * Math.max(0, Math.min(1, share))
+      );
+    },
+    leastTensionStrain: (epsilonTy) => (year === '19' ? epsilonTy + 0.003 : 0.004),
+    leastSteelMm2: ({ fcMPa, fyMPa, widthMm, dMm }) =>
+      (c.leastSteelStressMPa(fcMPa) / Math.min(fyMPa, c.leastSteelFyCapMPa)) * widthMm * dMm,
+    leastSteelWaiver: 4 / 3,
+    tensionControlledReduction: TENSION_CONTROLLED,
+    barGapMm: (diameterMm, aggregateMm) => Math.max(c.gapMm, diameterMm, (4 / 3) * aggregateMm),
+    layerGapMm: c.gapMm,
+    // Table 25.3.2: inside bend diameter 4 db to #5 / 16 mm, 6 db above
+    bendRadiusMm: (ds) => (ds <= c.largestTightBendMm + 0.01 ? 2 * ds : 3 * ds),
+    hookTailMm: (ds) => Math.max(6 * ds, c.hookTailLeastMm),
+    clauses: clausesOf(book),
+  };
+}

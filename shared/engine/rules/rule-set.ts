@@ -1,0 +1,51 @@
+import type { RuleSetId } from '../section.ts';
+
+/** Clause and edition printed beside each result. */
+export interface Clauses {
+  readonly block: string;
+  readonly strengthReduction: string;
+  readonly strength: string;
+  readonly tensionStrain: string;
+  readonly concreteModulus: string;
+  readonly ruptureModulus: string;
+  readonly leastSteel: string;
+  readonly barSpacing: string;
+  readonly hangers: string;
+}
+
+/**
+ * A design code as data plus small functions. Stresses MPa, lengths mm, areas mm². Adding a code is adding one file
+ * that makes one of these, and its id in section.ts.
+ */
+export interface RuleSet {
+  readonly id: RuleSetId;
+  readonly title: string;
+  readonly units: 'us' | 'si';
+  /** Crushing strain of the extreme compression fibre. */
+  readonly epsilonCu: number;
+  /** Stress of the rectangular block. */
+  blockStressMPa(fcMPa: number): number;
+  /** Depth of the block over the depth of the neutral axis. */
+  blockDepthFactor(fcMPa: number): number;
+  concreteModulusMPa(fcMPa: number): number;
+  ruptureModulusMPa(fcMPa: number): number;
+  /** Strength reduction factor φ for strain εt of the outermost tension layer and yield strain εty. */
+  strengthReduction(epsilonT: number, epsilonTy: number): number;
+  /** Least εt of a beam. */
+  leastTensionStrain(epsilonTy: number): number;
+  /** Least tension steel of a beam of web width and effective depth, without the waiver. */
+  leastSteelMm2(section: { fcMPa: number; fyMPa: number; widthMm: number; dMm: number }): number;
+  /** Provided over required steel at which the least steel is waived. */
+  readonly leastSteelWaiver: number;
+  /** Strength reduction of a tension-controlled section, used for the required steel of the waiver. */
+  readonly tensionControlledReduction: number;
+  /** Least clear gap between bars of one layer. */
+  barGapMm(diameterMm: number, aggregateMm: number): number;
+  /** Least clear gap between layers. */
+  readonly layerGapMm: number;
+  /** Inside bend radius of a stirrup. */
+  bendRadiusMm(stirrupDiameterMm: number): number;
+  /** Straight end of a 135° stirrup hook. */
+  hookTailMm(stirrupDiameterMm: number): number;
+  readonly clauses: Clauses;
+}
