@@ -1,4 +1,4 @@
-import { and, eq, sql } from 'drizzle-orm';
+import { and, eq, sql, type SQL } from 'drizzle-orm';
 import type { Person, Role } from '#shared/contract/records.ts';
 import type { Database } from '../db/client.ts';
 import { projectMembers } from '../db/schema/project-members.ts';
@@ -6,6 +6,15 @@ import { projects } from '../db/schema/projects.ts';
 import { forbidden, notFound } from '../errors.ts';
 
 export type ProjectRow = typeof projects.$inferSelect;
+
+/** The condition, in a query that names `projects`, that the person may read the project. None for an admin. */
+export function isWithinReach(db: Database, person: Person): SQL | undefined {
+  if (person.role === 'admin') return undefined;
+  return sql`exists (${db
+    .select({ one: sql`1` })
+    .from(projectMembers)
+    .where(and(eq(projectMembers.projectId, projects.id), eq(projectMembers.personId, person.id)))})`;
+}
 
 /**
  * The project, where the person may read it: its members do, and an admin reads all. To everyone else it does not
@@ -16,14 +25,10 @@ export async function requireReadableProject(
   person: Person,
   { projectId, what }: { projectId: string; what: string },
 ): Promise<ProjectRow> {
-  const isMember = sql`exists (${db
-    .select({ one: sql`1` })
-    .from(projectMembers)
-    .where(and(eq(projectMembers.projectId, projects.id), eq(projectMembers.personId, person.id)))})`;
   const [project] = await db
     .select()
     .from(projects)
-    .where(and(eq(projects.id, projectId), person.role === 'admin' ? undefined : isMember));
+    .where(and(eq(projects.id, projectId), isWithinReach(db, person)));
   if (project === undefined) throw notFound(what);
   return project;
 }

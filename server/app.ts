@@ -1,0 +1,54 @@
+import compression from 'compression';
+import express, { Router, type Express, type Request, type Response } from 'express';
+import type { Deps } from './deps.ts';
+import { notFound } from './errors.ts';
+import { errorHandler } from './http/error-handler.ts';
+import { health } from './http/health.ts';
+import { createOpenApiDocument } from './http/openapi.ts';
+import { limitRequests } from './http/rate-limit.ts';
+import { requestLog } from './http/request-log.ts';
+import { securityHeaders } from './http/security-headers.ts';
+import { sessionMiddleware } from './http/session.ts';
+import { staticClient } from './http/static-client.ts';
+
+/** A saved sweep with every axis a full list is about 200 kB. */
+const LARGEST_BODY = '1mb';
+
+// Compression would hold events back until its buffer is full.
+const isCompressible = (req: Request, res: Response) =>
+  !String(res.getHeader('content-type')).startsWith('text/event-stream') && compression.filter(req, res);
+
+function buildApi(deps: Deps): Router {
+  const api = Router();
+  api.use((_req, res, next) => {
+    res.set('cache-control', 'no-store');
+    next();
+  });
+  api.get('/health', health(deps.pool));
+  api.use(limitRequests(deps.config.apiRequestsPerMinute));
+  const openApi = createOpenApiDocument();
+  api.get('/openapi.json', (_req, res) => void res.json(openApi));
+  api.use(sessionMiddleware(deps.config, deps.sessionStore));
+  api.use(express.json({ limit: LARGEST_BODY }));
+  api.use(() => {
+    throw notFound('This address');
+  });
+  return api;
+}
+
+/** The whole HTTP side, not listening yet. */
+export function buildApp(deps: Deps): Express {
+  const app = express();
+  app.disable('x-powered-by');
+  app.set('etag', false);
+  app.set('trust proxy', false);
+  app.set('query parser', 'simple');
+  app.use(requestLog(deps.log), securityHeaders(), compression({ filter: isCompressible }));
+  app.use('/api', buildApi(deps));
+  app.use(staticClient(deps.config.appRoot));
+  app.use(() => {
+    throw notFound('This page');
+  });
+  app.use(errorHandler(deps.log));
+  return app;
+}

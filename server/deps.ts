@@ -1,0 +1,18 @@
+import type { Store } from 'express-session';
+import type pg from 'pg';
+import type { Passwords } from './compute/passwords.ts';
+import type { ComputePool } from './compute/pool.ts';
+import type { Config } from './config.ts';
+import type { Database } from './db/client.ts';
+import type { Log } from './log.ts';
+
+/** What routes and jobs are handed; made and ended by services.ts. */
+export interface Deps {
+  readonly config: Config;
+  readonly log: Log;
+  readonly pool: pg.Pool;
+  readonly db: Database;
+  readonly sessionStore: Store;
+  readonly passwords: Passwords;
+  readonly compute: ComputePool;
+}
