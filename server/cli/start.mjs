@@ -71,6 +71,9 @@ function announce() {
 
 async function serve() {
   const database = await step('Database', () => joinPostgres(folder));
+  if (!database.cluster.startsWith(folder)) {
+    console.log(`The database lies in ${database.cluster}, because its own account may not enter ${folder}`);
+  }
   await step('Build', ensureBuilt);
   const environment = {
     NODE_ENV: 'production',

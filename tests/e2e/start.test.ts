@@ -24,7 +24,7 @@ async function launch(port?: number, dataFolder = folder): Promise<FairweightPro
   return fairweight;
 }
 
-function readCluster(dataFolder = folder): { port: number; password: string } {
+function readCluster(dataFolder = folder): { port: number; password: string; cluster: string } {
   return JSON.parse(readFileSync(path.join(dataFolder, 'postgres.json'), 'utf8'));
 }
 
@@ -83,7 +83,11 @@ describe('npm start', () => {
   });
 
   afterAll(() => {
-    for (const used of [folder, untouchedFolder]) rmSync(used, { recursive: true, force: true });
+    for (const used of [folder, untouchedFolder]) {
+      // The same folder, except where the postgres account may not enter it.
+      rmSync(path.dirname(readCluster(used).cluster), { recursive: true, force: true });
+      rmSync(used, { recursive: true, force: true });
+    }
   });
 
   it('is ready within some five seconds once everything is in place', async () => {
@@ -127,7 +131,7 @@ describe('npm start', () => {
     const killed = await launch();
     await killed.ready;
     const records = await countRecords();
-    const pidFile = readFileSync(path.join(folder, 'postgres', 'postmaster.pid'), 'utf8');
+    const pidFile = readFileSync(path.join(readCluster().cluster, 'postmaster.pid'), 'utf8');
     process.kill(Number(pidFile.split('\n')[0]), 'SIGKILL');
     process.kill(-killed.npm.pid!, 'SIGKILL');
     await killed.ended;
