@@ -18,7 +18,6 @@ export default defineConfig({
   },
   server: {
     host: '127.0.0.1',
-    port: Number(process.env.PORT ?? 3000),
     strictPort: true,
     proxy: { '/api': { target: process.env.API_ORIGIN ?? 'http://127.0.0.1:3001' } },
   },
