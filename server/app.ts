@@ -2,6 +2,11 @@ import compression from 'compression';
 import express, { Router, type Express, type Request, type Response } from 'express';
 import type { Deps } from './deps.ts';
 import { notFound } from './errors.ts';
+import { registerBeamRoutes } from './features/beams/routes.ts';
+import { registerPeopleRoutes } from './features/people/routes.ts';
+import { registerProjectRoutes } from './features/projects/routes.ts';
+import { registerSessionRoutes } from './features/session/routes.ts';
+import { registerSweepRoutes } from './features/sweeps/routes.ts';
 import { errorHandler } from './http/error-handler.ts';
 import { health } from './http/health.ts';
 import { createOpenApiDocument } from './http/openapi.ts';
@@ -30,6 +35,11 @@ function buildApi(deps: Deps): Router {
   api.get('/openapi.json', (_req, res) => void res.json(openApi));
   api.use(sessionMiddleware(deps.config, deps.sessionStore));
   api.use(express.json({ limit: LARGEST_BODY }));
+  registerSessionRoutes(api, deps);
+  registerPeopleRoutes(api, deps);
+  registerProjectRoutes(api, deps);
+  registerBeamRoutes(api, deps);
+  registerSweepRoutes(api, deps);
   api.use(() => {
     throw notFound('This address');
   });

@@ -24,7 +24,10 @@ export interface BoundRequest<N extends EndpointName> {
   readonly req: Request;
 }
 
-export type Handler<N extends EndpointName> = (request: BoundRequest<N>) => Promise<ResponseOf<N>>;
+/** Answers are often frozen records of the engine, whose lists are read-only. */
+type Immutable<T> = T extends object ? { readonly [K in keyof T]: Immutable<T[K]> } : T;
+
+export type Handler<N extends EndpointName> = (request: BoundRequest<N>) => Promise<Immutable<ResponseOf<N>>>;
 
 /**
  * Puts a handler on the path its endpoint has in the contract. Each goes through the same steps in the same order:

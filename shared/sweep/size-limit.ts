@@ -1,0 +1,58 @@
+import type { AxisDefinition, SpaceDefinition } from './problem.ts';
+import { axisLengths, spaceSize } from './space.ts';
+
+/** Largest run accepted: about a minute on two threads. Larger spaces are refused with the axis to coarsen. */
+export const MAX_SECTIONS_PER_RUN = 200_000_000;
+
+const NUMERIC_AXES = ['width', 'depth', 'fc', 'fy', 'cover'] as const;
+const AXIS_NAMES = {
+  width: 'width b',
+  depth: 'depth h',
+  fc: 'concrete strength f′c',
+  fy: 'yield strength fy',
+  cover: 'clear cover',
+  tension: 'tension bars',
+  compression: 'compression bars',
+} as const;
+type NamedAxis = keyof typeof AXIS_NAMES;
+
+export interface SizeRefusal {
+  readonly message: string;
+  /** Paths begin at the sweep's definition: `['space', 'depth', 'step']`. */
+  readonly issues: readonly { readonly path: (string | number)[]; readonly message: string }[];
+}
+
+const print = (count: number) => count.toLocaleString('en-US');
+
+function longest(axes: readonly NamedAxis[], lengths: Readonly<Record<NamedAxis, number>>): NamedAxis {
+  return axes.reduce((best, axis) => (lengths[axis] > lengths[best] ? axis : best));
+}
+
+function fieldOf(space: SpaceDefinition, axis: NamedAxis): string {
+  if (axis === 'tension' || axis === 'compression') {
+    return space[axis].kind === 'bars' ? 'counts' : 'areasMm2';
+  }
+  const definition: AxisDefinition = space[axis];
+  return definition.kind === 'range' ? 'step' : 'values';
+}
+
+/** Why a space is too large to run and which of its axes to coarsen; null where it is not. */
+export function sizeRefusal({ space }: { readonly space: SpaceDefinition }): SizeRefusal | null {
+  const count = spaceSize(space);
+  if (!(count > MAX_SECTIONS_PER_RUN)) return null;
+  const lengths = axisLengths(space);
+  const numeric = longest(NUMERIC_AXES, lengths);
+  // With a single value on every numeric axis there is nothing to coarsen but the steel.
+  const axis = lengths[numeric] > 1 ? numeric : longest(['tension', 'compression'], lengths);
+  const field = fieldOf(space, axis);
+  const remedy = field === 'step' ? 'Use a larger step' : 'Leave some out';
+  return {
+    message: `${print(count)} sections are more than the ${print(MAX_SECTIONS_PER_RUN)} that one run takes`,
+    issues: [
+      {
+        path: ['space', axis, field],
+        message: `${print(count)} sections: the ${AXIS_NAMES[axis]} has ${print(lengths[axis])} values. ${remedy}.`,
+      },
+    ],
+  };
+}
