@@ -46,7 +46,7 @@ async function send<N extends EndpointName>(name: N, input: Input<N>): Promise<R
   const isWrite = method !== 'get';
   if (isWrite && csrfToken === null) await refreshToken();
   try {
-    return await fetch(apiUrl(path, input.params as Record<string, string>), {
+    return await fetch(apiUrl(path, input.params), {
       method: method.toUpperCase(),
       credentials: 'same-origin',
       signal: input.signal ?? null,

@@ -20,7 +20,7 @@ export function FormNumberField<F extends FieldValues>({ control, name, ...field
           {...field}
           name={bound.name}
           inputRef={bound.ref}
-          value={(bound.value as number | null | undefined) ?? null}
+          value={bound.value ?? null}
           onChange={bound.onChange}
           onBlur={bound.onBlur}
           error={field.error ?? fieldState.error?.message}

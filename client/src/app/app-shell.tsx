@@ -1,0 +1,44 @@
+import { useState } from 'react';
+import { Link, Outlet, ScrollRestoration, useNavigation } from 'react-router-dom';
+import { AccountMenu } from '#client/src/features/session/account-menu.tsx';
+import { CrumbsContext } from '#client/src/lib/crumbs-context.ts';
+import { paths } from '#client/src/lib/paths.ts';
+import { Wordmark } from '#client/src/ui/wordmark.tsx';
+import { ShortcutsDialog } from './shortcuts-dialog.tsx';
+import { useShortcuts } from './use-shortcuts.ts';
+
+/** The top bar on every page of the office: name, trail, person. The page fills what is below. */
+export function AppShell() {
+  const [crumbsSlot, setCrumbsSlot] = useState<HTMLElement | null>(null);
+  const [isHelpOpen, setHelpOpen] = useState(false);
+  const isArriving = useNavigation().state === 'loading';
+  useShortcuts(() => setHelpOpen(true));
+  return (
+    <CrumbsContext value={crumbsSlot}>
+      <div className="flex min-h-dvh flex-col">
+        <a
+          href="#main"
+          className="sr-only z-50 bg-ink px-4 py-2 text-paper focus:not-sr-only focus:absolute focus:top-1 focus:left-1"
+        >
+          Skip to the page
+        </a>
+        <header className="relative flex min-h-[46px] items-center gap-4 border-b border-ink px-4 sm:px-5 print:hidden">
+          <Link to={paths.projects()} aria-label="Fairweight, to the projects" className="no-underline">
+            <Wordmark />
+          </Link>
+          <nav aria-label="Trail" className="hidden min-w-0 flex-1 md:block">
+            <ol ref={setCrumbsSlot} className="flex min-w-0 items-baseline gap-2" />
+          </nav>
+          <span className="flex-1 md:hidden" />
+          <AccountMenu onShortcuts={() => setHelpOpen(true)} />
+          {isArriving && <span className="arriving" aria-hidden="true" />}
+        </header>
+        <main id="main" tabIndex={-1} className="flex min-w-0 flex-1 flex-col outline-none">
+          <Outlet />
+        </main>
+      </div>
+      <ShortcutsDialog isOpen={isHelpOpen} onClose={() => setHelpOpen(false)} />
+      <ScrollRestoration />
+    </CrumbsContext>
+  );
+}

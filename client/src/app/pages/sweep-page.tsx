@@ -1,0 +1,167 @@
+import { useQuery } from '@tanstack/react-query';
+import { useState } from 'react';
+import { useNavigate, useParams, useSearchParams } from 'react-router-dom';
+import type { Beam, Sweep } from '#shared/contract/records.ts';
+import { beamsQuery } from '#client/src/features/beams/api.ts';
+import type { SweepInput } from '#client/src/features/sweep-form/read-sweep-form.ts';
+import { sweepDraft } from '#client/src/features/sweep-form/sweep-draft.ts';
+import { firstSweepForm, sweepForm } from '#client/src/features/sweep-form/sweep-form-defaults.ts';
+import { SweepForm } from '#client/src/features/sweep-form/sweep-form.tsx';
+import { sweepQuery, useSaveSweep, useStartRun } from '#client/src/features/sweep-form/sweep-api.ts';
+import { SweepRuns } from '#client/src/features/sweep-form/sweep-runs.tsx';
+import { paths } from '#client/src/lib/paths.ts';
+import { useProject } from '#client/src/lib/project-context.ts';
+import { useMay } from '#client/src/lib/reader-context.ts';
+import { Button, ButtonLink } from '#client/src/ui/button.tsx';
+import { ErrorState } from '#client/src/ui/error-state.tsx';
+import { PageBody } from '#client/src/ui/page-body.tsx';
+import { PageCrumbs } from '#client/src/ui/page-crumbs.tsx';
+import { PageHeader } from '#client/src/ui/page-header.tsx';
+import { Skeleton } from '#client/src/ui/skeleton.tsx';
+import { notify } from '#client/src/ui/toast.tsx';
+
+interface EditorProps {
+  readonly beam: Beam;
+  /** The sweep being changed; null for a new one. */
+  readonly sweep: Sweep | null;
+  /** The sweep a new one is copied from. */
+  readonly copyOf: Sweep | null;
+}
+
+/** The form with its draft: what was typed and not saved is there again after a reload or a way back. */
+function SweepEditor({ beam, sweep, copyOf }: EditorProps) {
+  const project = useProject();
+  const mayRun = useMay('run-sweeps');
+  const navigate = useNavigate();
+  const { units } = project.designBasis;
+  const draftId = sweep?.id ?? `${beam.id} ${copyOf?.id ?? ''}`;
+  const stored = () => {
+    const source = sweep ?? copyOf;
+    if (source === null) return firstSweepForm(project, beam);
+    const form = sweepForm(source, units);
+    return sweep === null ? { ...form, name: `${form.name}, copy` } : form;
+  };
+  const [start, setStart] = useState(() => {
+    const draft = sweepDraft.read(draftId);
+    return { form: draft ?? stored(), isDraft: draft !== null, edition: 0 };
+  });
+  const save = useSaveSweep(project.id);
+  const run = useStartRun(project.id);
+
+  const saved = async (input: SweepInput) => {
+    const goal =
+      sweep === null
+        ? ({ kind: 'new', beamId: beam.id } as const)
+        : ({ kind: 'change', sweepId: sweep.id } as const);
+    const answer = await save.mutateAsync({ goal, input });
+    sweepDraft.drop(draftId);
+    return answer;
+  };
+  const onSave = (input: SweepInput) =>
+    void saved(input).then((answer) => {
+      notify.done(`${answer.name} is saved`);
+      setStart((now) => ({ ...now, isDraft: false }));
+      if (sweep === null) void navigate(paths.sweep(project.id, answer.id), { replace: true });
+    }, ignoreHere);
+  const onRun = (input: SweepInput) =>
+    void saved(input)
+      .then((answer) => run.mutateAsync(answer.id))
+      .then((started) => navigate(paths.run(project.id, started.id)))
+      .catch(ignoreHere);
+
+  return (
+    <>
+      {start.isDraft && (
+        <p className="mb-5 flex flex-wrap items-baseline gap-3 border-l-2 border-near-mark py-1 pl-3 text-sm">
+          Your unsaved changes of earlier are shown.
+          <Button
+            look="text"
+            onClick={() => {
+              sweepDraft.drop(draftId);
+              setStart((now) => ({ form: stored(), isDraft: false, edition: now.edition + 1 }));
+            }}
+          >
+            Discard them
+          </Button>
+        </p>
+      )}
+      <SweepForm
+        key={start.edition}
+        project={project}
+        initial={start.form}
+        runs={sweep?.runs ?? []}
+        isBusy={save.isPending || run.isPending}
+        refusal={save.error ?? run.error}
+        mayRun={mayRun}
+        onEdit={(form) => sweepDraft.write(draftId, form)}
+        onSave={onSave}
+        onRun={onRun}
+      />
+      {sweep !== null && sweep.runs.length > 0 && <SweepRuns projectId={project.id} runs={sweep.runs} />}
+    </>
+  );
+}
+
+/** A refusal is shown by the form itself, from the mutation's state. */
+const ignoreHere = (): void => undefined;
+
+/** A new sweep on a beam, or a saved one. */
+export function SweepPage() {
+  const project = useProject();
+  const mayRun = useMay('run-sweeps');
+  const { beamId, sweepId } = useParams();
+  const copyId = useSearchParams()[0].get('from');
+  const beams = useQuery(beamsQuery(project.id));
+  const wantedSweep = sweepId ?? copyId;
+  const sweep = useQuery({ ...sweepQuery(wantedSweep ?? ''), enabled: wantedSweep !== null });
+
+  const beam = beams.data?.find((one) => one.id === (beamId ?? sweep.data?.beamId));
+  const isWaiting = beams.isPending || (wantedSweep !== null && sweep.isPending);
+  const name = sweepId === undefined ? 'New sweep' : (sweep.data?.name ?? 'Sweep');
+  const failure = beams.error ?? (wantedSweep === null ? null : sweep.error);
+  return (
+    <PageBody>
+      <PageCrumbs
+        crumbs={[
+          { label: project.name, to: paths.project(project.id) },
+          { label: beam?.mark ?? 'Beam', to: paths.project(project.id, 'beams') },
+          { label: name },
+        ]}
+      />
+      <PageHeader
+        title={name}
+        lead={
+          beam === undefined ? ' ' : `Beam ${beam.mark}${beam.location === '' ? '' : `, ${beam.location}`}`
+        }
+        actions={
+          sweepId !== undefined && beam !== undefined && mayRun ? (
+            <ButtonLink to={`${paths.newSweep(project.id, beam.id)}?from=${sweepId}`}>
+              Copy to a new sweep
+            </ButtonLink>
+          ) : undefined
+        }
+      />
+      {failure !== null ? (
+        <ErrorState
+          error={failure}
+          title="The sweep could not be loaded"
+          onRetry={() => void Promise.all([beams.refetch(), wantedSweep === null ? null : sweep.refetch()])}
+        />
+      ) : isWaiting ? (
+        <Skeleton lines={12} />
+      ) : beam === undefined ? (
+        <ErrorState
+          error={new Error('This beam is not in the project, or no longer.')}
+          title="No such beam"
+        />
+      ) : (
+        <SweepEditor
+          key={`${beam.id} ${sweepId ?? copyId ?? ''}`}
+          beam={beam}
+          sweep={sweepId === undefined ? null : (sweep.data ?? null)}
+          copyOf={sweepId === undefined && copyId !== null ? (sweep.data ?? null) : null}
+        />
+      )}
+    </PageBody>
+  );
+}
