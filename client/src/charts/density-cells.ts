@@ -2,6 +2,8 @@ import type { DensityCell } from '#shared/sweep/result.ts';
 
 /** Pixels a cell should measure at least: finer ones read as noise and cost drawing time. */
 const LEAST_CELL_PX = 9;
+/** Neighbouring cells share their bound up to rounding. */
+const TOUCHING = 1e-9;
 
 export interface PlotScale {
   /** Pixels per unit of the measure (SI), along x and y. */
@@ -9,44 +11,59 @@ export interface PlotScale {
   readonly yPxPerUnit: number;
 }
 
-interface Pitch {
-  readonly origin: number;
-  readonly size: number;
+interface Stretch {
+  readonly low: number;
+  readonly high: number;
 }
 
-/** A whole number of source cells, so that no source cell is ever split between two on screen. */
-function pitch(lows: readonly number[], spans: readonly number[], pxPerUnit: number): Pitch {
-  const unit = Math.min(...spans.filter((span) => span > 0));
-  const origin = Math.min(...lows);
-  if (!Number.isFinite(unit) || !(pxPerUnit > 0)) return { origin, size: 1 };
-  return { origin, size: unit * Math.max(1, Math.ceil(LEAST_CELL_PX / (unit * pxPerUnit))) };
+/**
+ * Joins touching stretches, in order, until each is wide enough on screen. The grid of a result has cells of unequal
+ * width, so whole cells are joined rather than laid on a new grid: no cell is ever split and none leaves a gap.
+ */
+function joinStretches(stretches: readonly Stretch[], pxPerUnit: number): ReadonlyMap<number, Stretch> {
+  const byLow = new Map(stretches.map((stretch) => [stretch.low, stretch]));
+  const ordered = [...byLow.values()].sort((a, b) => a.low - b.low);
+  const joined = new Map<number, Stretch>();
+  let group: Stretch[] = [];
+  const close = () => {
+    const first = group[0];
+    const last = group.at(-1);
+    if (first === undefined || last === undefined) return;
+    const whole = { low: first.low, high: last.high };
+    for (const member of group) joined.set(member.low, whole);
+    group = [];
+  };
+  for (const stretch of ordered) {
+    const last = group.at(-1);
+    const isApart = last !== undefined && stretch.low - last.high > TOUCHING * Math.abs(last.high);
+    if (isApart) close();
+    group.push(stretch);
+    if ((stretch.high - group[0]!.low) * pxPerUnit >= LEAST_CELL_PX) close();
+  }
+  close();
+  return joined;
 }
 
 /**
  * Joins neighbouring cells of the result's density grid until each measures a few pixels. Every section counted in the
- * source is counted once here: cells are joined whole, by their centres.
+ * source is counted once here.
  */
 export function displayCells(cells: readonly DensityCell[], scale: PlotScale): DensityCell[] {
-  if (cells.length === 0) return [];
-  const x = pitch(
-    cells.map((cell) => cell.x0),
-    cells.map((cell) => cell.x1 - cell.x0),
+  const columns = joinStretches(
+    cells.map((cell) => ({ low: cell.x0, high: cell.x1 })),
     Math.abs(scale.xPxPerUnit),
   );
-  const y = pitch(
-    cells.map((cell) => cell.y0),
-    cells.map((cell) => cell.y1 - cell.y0),
+  const rows = joinStretches(
+    cells.map((cell) => ({ low: cell.y0, high: cell.y1 })),
     Math.abs(scale.yPxPerUnit),
   );
   const joined = new Map<string, DensityCell>();
   for (const cell of cells) {
-    const column = Math.floor(((cell.x0 + cell.x1) / 2 - x.origin) / x.size);
-    const row = Math.floor(((cell.y0 + cell.y1) / 2 - y.origin) / y.size);
-    const key = `${column} ${row}`;
-    const x0 = x.origin + column * x.size;
-    const y0 = y.origin + row * y.size;
+    const column = columns.get(cell.x0)!;
+    const row = rows.get(cell.y0)!;
+    const key = `${column.low} ${row.low}`;
     const count = (joined.get(key)?.count ?? 0) + cell.count;
-    joined.set(key, { x0, x1: x0 + x.size, y0, y1: y0 + y.size, count });
+    joined.set(key, { x0: column.low, x1: column.high, y0: row.low, y1: row.high, count });
   }
   return [...joined.values()];
 }

@@ -23,9 +23,14 @@ function boxBetween(api: RenderApi, from: readonly number[], to: readonly number
 const FAINT = 0.13;
 const STRONG = 0.62;
 
+/** Sections per unit of area: cells differ in size, so their counts alone would not compare. */
+const thickness = (cell: DensityCell): number => cell.count / ((cell.x1 - cell.x0) * (cell.y1 - cell.y0));
+
 /** Joined density cells as rectangles; the value is [x0, y0, x1, y1, count]. */
 export function densityRects(cells: readonly DensityCell[], input: FrontChartInput): CustomSeriesOption {
-  const most = Math.max(1, ...cells.map((cell) => cell.count));
+  const thick = cells.map(thickness);
+  const least = Math.min(...thick);
+  const range = Math.log(Math.max(...thick) / least) || 1;
   const { x, y, colours } = input;
   return {
     type: 'custom',
@@ -39,19 +44,19 @@ export function densityRects(cells: readonly DensityCell[], input: FrontChartInp
       cell.y1 * y.perSi,
       cell.count,
     ]),
-    renderItem: (_params, api) => {
+    renderItem: (params, api) => {
       const box = boxBetween(
         api,
         [Number(api.value(0)), Number(api.value(1))],
         [Number(api.value(2)), Number(api.value(3))],
       );
-      const strength = Math.log1p(Number(api.value(4))) / Math.log1p(most);
+      const strength = Math.log((thick[params.dataIndex] ?? least) / least) / range;
       return {
         type: 'rect',
         shape: {
           ...box,
-          width: Math.max(1, box.width - 0.6),
-          height: Math.max(1, box.height - 0.6),
+          width: Math.max(2, box.width - 0.6),
+          height: Math.max(2, box.height - 0.6),
         },
         style: { fill: colours.meets, opacity: FAINT + (STRONG - FAINT) * strength },
       };

@@ -1,0 +1,128 @@
+import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import type { BarStandard } from '#shared/engine/section.ts';
+import { CheckboxField } from '#client/src/ui/checkbox-field.tsx';
+import { NumberField } from '#client/src/ui/number-field.tsx';
+import { BarRack } from './bar-rack.tsx';
+import { errorUnder, type FieldErrors } from './read-sweep-form.ts';
+import type { SweepFormValues } from './sweep-form-values.ts';
+
+interface PartProps<Part> {
+  readonly units: UnitSystem;
+  readonly values: Part;
+  readonly errors: FieldErrors;
+  readonly onChange: (values: Part) => void;
+}
+
+/** What the section must do; taken from the beam, to be changed for this sweep only. */
+export function DemandFields({ units, values, errors, onChange }: PartProps<SweepFormValues['demand']>) {
+  return (
+    <div className="grid grid-cols-2 gap-x-8 gap-y-4 md:grid-cols-3">
+      <NumberField
+        label="Moment Mu"
+        hint="factored, sagging"
+        kind="moment"
+        units={units}
+        value={values.muNmm}
+        error={errors.get('demand.muNmm')}
+        onChange={(muNmm) => onChange({ ...values, muNmm })}
+      />
+      <NumberField
+        label="Ductility μφ at least"
+        hint="empty: not asked for"
+        kind="ratio"
+        units={units}
+        value={values.ductilityTarget}
+        error={errors.get('demand.ductilityTarget')}
+        onChange={(ductilityTarget) => onChange({ ...values, ductilityTarget })}
+      />
+      <NumberField
+        label="Depth h at most"
+        hint="empty: no cap"
+        kind="length"
+        units={units}
+        value={values.depthCapMm}
+        error={errors.get('demand.depthCapMm')}
+        onChange={(depthCapMm) => onChange({ ...values, depthCapMm })}
+      />
+    </div>
+  );
+}
+
+interface RulesProps extends PartProps<SweepFormValues['rules']> {
+  readonly standard: BarStandard;
+}
+
+/** The office's own rules: what may be built, whatever the code allows. */
+export function RulesFields({ units, standard, values, errors, onChange }: RulesProps) {
+  const number = (key: keyof SweepFormValues['rules']) => errors.get(`rules.${key}`);
+  return (
+    <div className="grid gap-5">
+      <div className="grid grid-cols-2 gap-x-8 gap-y-4 md:grid-cols-3">
+        <NumberField
+          label="Layers at most"
+          hint="on each face"
+          kind="count"
+          units={units}
+          value={values.maxLayers}
+          error={number('maxLayers')}
+          onChange={(maxLayers) => onChange({ ...values, maxLayers })}
+        />
+        <NumberField
+          label="h/b at least"
+          hint="empty: any"
+          kind="ratio"
+          units={units}
+          value={values.minDepthToWidth}
+          error={number('minDepthToWidth')}
+          onChange={(minDepthToWidth) => onChange({ ...values, minDepthToWidth })}
+        />
+        <NumberField
+          label="h/b at most"
+          hint="empty: any"
+          kind="ratio"
+          units={units}
+          value={values.maxDepthToWidth}
+          error={number('maxDepthToWidth')}
+          onChange={(maxDepthToWidth) => onChange({ ...values, maxDepthToWidth })}
+        />
+        <NumberField
+          label="As wide as a column of"
+          hint="empty: any width"
+          kind="length"
+          units={units}
+          value={values.columnWidthMm}
+          error={number('columnWidthMm')}
+          onChange={(columnWidthMm) => onChange({ ...values, columnWidthMm })}
+        />
+        <NumberField
+          label="Top steel A′s/As at least"
+          hint="empty: any"
+          kind="percent"
+          units={units}
+          value={values.minCompressionShare}
+          error={number('minCompressionShare')}
+          onChange={(minCompressionShare) => onChange({ ...values, minCompressionShare })}
+        />
+      </div>
+      <div className="flex flex-wrap gap-x-8 gap-y-2">
+        <CheckboxField
+          label="One bar size on each face"
+          checked={values.oneSizePerFace}
+          onChange={(event) => onChange({ ...values, oneSizePerFace: event.target.checked })}
+        />
+        <CheckboxField
+          label="Two bars at least on each face, to hang the stirrups on"
+          checked={values.requireHangers}
+          onChange={(event) => onChange({ ...values, requireHangers: event.target.checked })}
+        />
+      </div>
+      <BarRack
+        legend="Sizes never used"
+        standard={standard}
+        chosen={values.excludedBars}
+        error={errorUnder(errors, 'rules.excludedBars')}
+        onChange={(excludedBars) => onChange({ ...values, excludedBars })}
+      />
+    </div>
+  );
+}

@@ -1,0 +1,115 @@
+import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import type { Issue } from '#shared/contract/errors.ts';
+import { sweepInputSchema } from '#shared/contract/records.ts';
+import type { z } from 'zod';
+import type { DisplayKind } from '#client/src/lib/units.ts';
+import {
+  AXIS_NAMES,
+  type AxisName,
+  type AxisValues,
+  type SteelValues,
+  type SweepFormValues,
+} from './sweep-form-values.ts';
+import { parseCounts, parseGroups, parseValueList } from './value-list.ts';
+
+export type SweepInput = z.infer<typeof sweepInputSchema>;
+
+/** Messages by the path of the contract below the definition, e.g. `space.width.to`. */
+export type FieldErrors = ReadonlyMap<string, string>;
+
+/** The message of a field, or of the first of the values it holds. */
+export function errorUnder(errors: FieldErrors, path: string): string | undefined {
+  const own = errors.get(path);
+  if (own !== undefined) return own;
+  for (const [key, message] of errors) if (key.startsWith(`${path}.`)) return message;
+  return undefined;
+}
+
+export type SweepFormReading =
+  | { readonly kind: 'complete'; readonly input: SweepInput }
+  | { readonly kind: 'incomplete'; readonly errors: FieldErrors };
+
+export const AXIS_KIND: Readonly<Record<AxisName, DisplayKind>> = {
+  width: 'length',
+  depth: 'length',
+  fc: 'stress',
+  fy: 'stress',
+  cover: 'length',
+};
+
+const withoutDefinition = (path: readonly (string | number)[]): string =>
+  (path[0] === 'definition' ? path.slice(1) : path).join('.');
+
+/** The first message of each field, by its path: what the service answers and what is found here alike. */
+export function errorsByField(issues: readonly Issue[]): FieldErrors {
+  const errors = new Map<string, string>();
+  for (const issue of issues) {
+    const path = withoutDefinition(issue.path);
+    if (!errors.has(path)) errors.set(path, issue.message);
+  }
+  return errors;
+}
+
+function readAxis(axis: AxisValues, name: AxisName, units: UnitSystem, problems: Issue[]) {
+  if (axis.kind === 'range') return { kind: 'range', from: axis.from, to: axis.to, step: axis.step };
+  const list = parseValueList(axis.listText, AXIS_KIND[name], units);
+  if (list.kind === 'values') return { kind: 'list', values: list.values };
+  problems.push({ path: ['definition', 'space', name, 'values'], message: list.problem });
+  return { kind: 'list', values: [] };
+}
+
+function readSteel(steel: SteelValues, face: string, units: UnitSystem, problems: Issue[]) {
+  const path = ['definition', 'space', face];
+  if (steel.kind === 'areas') {
+    const areas = parseValueList(steel.areasText, 'area', units);
+    if (areas.kind === 'unreadable') problems.push({ path: [...path, 'areasMm2'], message: areas.problem });
+    const place = steel.placedBy === 'offset' ? steel.offsetMm : steel.shareOfDepth;
+    if (place === null || Number.isNaN(place))
+      problems.push({ path: [...path, 'at'], message: 'Enter where the layer lies' });
+    const at =
+      steel.placedBy === 'offset' ? { offsetMm: steel.offsetMm } : { shareOfDepth: steel.shareOfDepth };
+    return { kind: 'areas', areasMm2: areas.kind === 'values' ? areas.values : [], at };
+  }
+  const counts = parseCounts(steel.countsText);
+  if (counts.kind === 'unreadable') problems.push({ path: [...path, 'counts'], message: counts.problem });
+  const mixed = parseGroups(steel.mixedText);
+  if (mixed.kind === 'unreadable') problems.push({ path: [...path, 'mixed'], message: mixed.problem });
+  return {
+    kind: 'bars',
+    sizes: steel.sizes,
+    counts: counts.kind === 'values' ? counts.values : [],
+    none: steel.none,
+    ...(mixed.kind === 'groups' && mixed.groups.length > 0 ? { mixed: mixed.groups } : {}),
+  };
+}
+
+/**
+ * Turns what is typed into the input of the contract, or into messages beside the fields. Text that cannot be read is
+ * reported before the contract is asked: its message says more.
+ */
+export function readSweepForm(form: SweepFormValues, units: UnitSystem): SweepFormReading {
+  const problems: Issue[] = [];
+  const axes = Object.fromEntries(
+    AXIS_NAMES.map((name) => [name, readAxis(form.axes[name], name, units, problems)]),
+  );
+  const input = sweepInputSchema.safeParse({
+    name: form.name,
+    definition: {
+      space: {
+        ...axes,
+        stirrups: form.stirrups.map((stirrup) => (stirrup.bar === '' ? null : stirrup)),
+        tension: readSteel(form.steel.tension, 'tension', units, problems),
+        compression: readSteel(form.steel.compression, 'compression', units, problems),
+      },
+      demand: form.demand,
+      rules: form.rules,
+      view: form.view,
+    },
+  });
+  if (input.success && problems.length === 0) return { kind: 'complete', input: input.data };
+  const issues = (input.error?.issues ?? []).map((issue) => ({
+    path: issue.path.map((key) => (typeof key === 'symbol' ? String(key) : key)),
+    message: issue.message,
+  }));
+  return { kind: 'incomplete', errors: errorsByField([...problems, ...issues]) };
+}

@@ -1,0 +1,69 @@
+import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import type { BarStandard } from '#shared/engine/section.ts';
+import { AxisField } from './axis-field.tsx';
+import type { FieldErrors } from './read-sweep-form.ts';
+import { axisCount, steelCount } from './space-estimate.ts';
+import { SteelField } from './steel-field.tsx';
+import { StirrupsField } from './stirrups-field.tsx';
+import {
+  AXIS_NAMES,
+  STEEL_FACES,
+  type SteelFace,
+  type SteelValues,
+  type SweepFormValues,
+} from './sweep-form-values.ts';
+
+interface SpaceFieldsProps {
+  readonly units: UnitSystem;
+  readonly standard: BarStandard;
+  readonly form: SweepFormValues;
+  readonly errors: FieldErrors;
+  readonly onChange: (form: SweepFormValues) => void;
+}
+
+/** Areas and bars do not mix in one section: when the bottom steel changes its way, the top steel follows. */
+function withSteel(form: SweepFormValues, face: SteelFace, next: SteelValues): SweepFormValues {
+  const steel = { ...form.steel, [face]: next };
+  if (face === 'compression' || next.kind === form.steel.tension.kind) return { ...form, steel };
+  const top = form.steel.compression;
+  const areasText = next.kind === 'areas' && top.areasText === '' ? '0' : top.areasText;
+  return { ...form, steel: { ...steel, compression: { ...top, kind: next.kind, areasText } } };
+}
+
+/** Every axis of the space with the number of values it makes. */
+export function SpaceFields({ units, standard, form, errors, onChange }: SpaceFieldsProps) {
+  return (
+    <div>
+      {AXIS_NAMES.map((name) => (
+        <AxisField
+          key={name}
+          name={name}
+          units={units}
+          values={form.axes[name]}
+          errors={errors}
+          valueCount={axisCount(form.axes[name], name, units)}
+          onChange={(values) => onChange({ ...form, axes: { ...form.axes, [name]: values } })}
+        />
+      ))}
+      {STEEL_FACES.map((face) => (
+        <SteelField
+          key={face}
+          face={face}
+          units={units}
+          standard={standard}
+          values={form.steel[face]}
+          errors={errors}
+          setCount={steelCount(form.steel[face], units)}
+          onChange={(values) => onChange(withSteel(form, face, values))}
+        />
+      ))}
+      <StirrupsField
+        units={units}
+        standard={standard}
+        values={form.stirrups}
+        errors={errors}
+        onChange={(stirrups) => onChange({ ...form, stirrups })}
+      />
+    </div>
+  );
+}

@@ -1,0 +1,81 @@
+import type { BarGroup } from '#shared/engine/section.ts';
+import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import { fieldText } from '#client/src/lib/format-quantity.ts';
+import { barsText } from '#client/src/lib/section-text.ts';
+import { parseNumber } from '#client/src/lib/parse-number.ts';
+import { toStored, type DisplayKind } from '#client/src/lib/units.ts';
+
+/** Values read from a line of text, or what is wrong with it. */
+export type ListReading =
+  | { readonly kind: 'values'; readonly values: readonly number[] }
+  | { readonly kind: 'unreadable'; readonly problem: string };
+
+/** A comma always parts two values here: `300,350,400` is three widths, not one number with thousands. */
+const SEPARATOR = /[\s,;]+/;
+const COUNT_RANGE = /^(\d{1,3})\s*[-–—]\s*(\d{1,3})$/;
+const MOST_COUNTS = 60;
+
+const pieces = (text: string): string[] => text.split(SEPARATOR).filter((piece) => piece !== '');
+
+/** Reads `12, 14, 16`; the values are returned in SI, ascending, each once. */
+export function parseValueList(text: string, kind: DisplayKind, units: UnitSystem): ListReading {
+  const values = new Set<number>();
+  for (const piece of pieces(text)) {
+    const parsed = parseNumber(piece);
+    if (parsed.kind === 'unreadable') return { kind: 'unreadable', problem: parsed.problem };
+    if (parsed.kind === 'number') values.add(toStored(parsed.value, kind, units));
+  }
+  return { kind: 'values', values: [...values].sort((a, b) => a - b) };
+}
+
+/** Reads numbers of bars: `2–8`, `2, 4, 6`, or both. */
+export function parseCounts(text: string): ListReading {
+  const counts = new Set<number>();
+  for (const piece of pieces(text.replaceAll(/\s*[-–—]\s*/g, '–'))) {
+    const range = COUNT_RANGE.exec(piece);
+    const [from, to] = range ? [Number(range[1]), Number(range[2])] : [Number(piece), Number(piece)];
+    if (!Number.isInteger(from) || !Number.isInteger(to))
+      return { kind: 'unreadable', problem: `“${piece}” is not a number of bars: write 2–8 or 2, 4, 6` };
+    if (from > to) return { kind: 'unreadable', problem: `${piece}: the end is below the start` };
+    if (to - from > MOST_COUNTS)
+      return { kind: 'unreadable', problem: `${piece}: at most ${MOST_COUNTS} counts` };
+    for (let count = from; count <= to; count += 1) counts.add(count);
+  }
+  return { kind: 'values', values: [...counts].sort((a, b) => a - b) };
+}
+
+export const valueListText = (values: readonly number[], kind: DisplayKind, units: UnitSystem): string =>
+  values.map((value) => fieldText(value, kind, units)).join(', ');
+
+/** Counts with runs of three and more written as ranges: `2–8, 10`. */
+export function countsText(counts: readonly number[]): string {
+  const ordered = [...new Set(counts)].sort((a, b) => a - b);
+  const runs: number[][] = [];
+  for (const count of ordered) {
+    const run = runs.at(-1);
+    if (run !== undefined && run.at(-1) === count - 1) run.push(count);
+    else runs.push([count]);
+  }
+  return runs.map((run) => (run.length > 2 ? `${run[0]}–${run.at(-1)}` : run.join(', '))).join(', ');
+}
+
+/** Groups read from a line of text, or what is wrong with it. */
+export type GroupsReading =
+  | { readonly kind: 'groups'; readonly groups: readonly BarGroup[] }
+  | { readonly kind: 'unreadable'; readonly problem: string };
+
+const BARS_OF_ONE_SIZE = /^(\d{1,2})\s*[-–×x]\s*(\S+)$/;
+
+/** Reads groups of one or two sizes as the trade writes them: `2-#8 + 2-#6, 3-#8 + 2-#6`. */
+export function parseGroups(text: string): GroupsReading {
+  const groups: BarGroup[] = [];
+  for (const written of text.split(/[,;\n]/).filter((piece) => piece.trim() !== '')) {
+    const parts = written.split('+').map((part) => BARS_OF_ONE_SIZE.exec(part.trim()));
+    if (parts.some((part) => part === null))
+      return { kind: 'unreadable', problem: `“${written.trim()}” is not a bar group: write 2-#8 + 2-#6` };
+    groups.push(parts.map((part) => ({ count: Number(part![1]), bar: part![2]! })));
+  }
+  return { kind: 'groups', groups };
+}
+
+export const groupsText = (groups: readonly BarGroup[]): string => groups.map(barsText).join(', ');
