@@ -3,9 +3,14 @@ import express, { Router, type Express, type Request, type Response } from 'expr
 import type { Deps } from './deps.ts';
 import { notFound } from './errors.ts';
 import { registerBeamRoutes } from './features/beams/routes.ts';
+import { registerCandidateRoutes } from './features/candidates/routes.ts';
+import { listSharedCandidates } from './features/candidates/shared-candidates.ts';
+import { registerEvaluationRoutes } from './features/evaluations/routes.ts';
 import { registerPeopleRoutes } from './features/people/routes.ts';
 import { registerProjectRoutes } from './features/projects/routes.ts';
+import { registerRunRoutes } from './features/runs/routes.ts';
 import { registerSessionRoutes } from './features/session/routes.ts';
+import { registerShareLinkRoutes } from './features/share-links/routes.ts';
 import { registerSweepRoutes } from './features/sweeps/routes.ts';
 import { errorHandler } from './http/error-handler.ts';
 import { health } from './http/health.ts';
@@ -40,6 +45,10 @@ function buildApi(deps: Deps): Router {
   registerProjectRoutes(api, deps);
   registerBeamRoutes(api, deps);
   registerSweepRoutes(api, deps);
+  registerRunRoutes(api, deps);
+  registerEvaluationRoutes(api, deps);
+  registerCandidateRoutes(api, deps);
+  registerShareLinkRoutes(api, deps, listSharedCandidates);
   api.use(() => {
     throw notFound('This address');
   });

@@ -4,6 +4,7 @@ import type { Passwords } from './compute/passwords.ts';
 import type { ComputePool } from './compute/pool.ts';
 import type { Config } from './config.ts';
 import type { Database } from './db/client.ts';
+import type { RunEvents } from './jobs/run-events.ts';
 import type { Log } from './log.ts';
 
 /** What routes and jobs are handed; made and ended by services.ts. */
@@ -15,4 +16,5 @@ export interface Deps {
   readonly sessionStore: Store;
   readonly passwords: Passwords;
   readonly compute: ComputePool;
+  readonly runEvents: RunEvents;
 }
