@@ -21,7 +21,7 @@ const wholeCount = (label: string, low: number, high: number) =>
 export const barDesignationSchema = nonEmptyText('Bar size', 8);
 export const barCountNumberSchema = wholeCount('Number of bars', 1, 60);
 
-const barGroupSchema = z
+export const barGroupSchema = z
   .array(z.object({ bar: barDesignationSchema, count: barCountNumberSchema }))
   .max(2, 'A face takes at most two bar sizes');
 

@@ -5,6 +5,7 @@ import { bounded, coverMmSchema, depthMmSchema, fcMPaSchema, fyMPaSchema, widthM
 import {
   barCountNumberSchema,
   barDesignationSchema,
+  barGroupSchema,
   demandSchema,
   stirrupSchema,
   userRulesSchema,
@@ -12,8 +13,6 @@ import {
 
 /** Longest axis accepted: finer than any bar or form is cut, and it keeps a typing slip from filling memory. */
 export const MAX_AXIS_VALUES = 2000;
-/** Largest run accepted: about a minute on two threads. Larger spaces are refused with the axis to coarsen. */
-export const MAX_SECTIONS_PER_RUN = 200_000_000;
 
 const axisSchema = (label: string, value: z.ZodType<number>) =>
   z.discriminatedUnion('kind', [
@@ -54,6 +53,10 @@ const steelSetsSchema = (label: string, isEmptyAllowed: boolean) =>
         sizes: z.array(barDesignationSchema).max(20, `${label}: at most 20 sizes`),
         counts: z.array(barCountNumberSchema).max(60, `${label}: at most 60 counts`),
         none: z.boolean(),
+        mixed: z
+          .array(barGroupSchema.min(1, `${label}: an empty group`))
+          .max(200, `${label}: at most 200 groups`)
+          .optional(),
       }),
       z.object({
         kind: z.literal('areas'),
@@ -68,26 +71,50 @@ const steelSetsSchema = (label: string, isEmptyAllowed: boolean) =>
       }),
     ])
     .superRefine((sets, ctx) => {
-      if (sets.kind !== 'bars' || (isEmptyAllowed && sets.none)) return;
+      if (sets.kind !== 'bars' || (isEmptyAllowed && sets.none) || sets.mixed?.length) return;
       if (sets.sizes.length === 0)
         ctx.addIssue({ code: 'custom', path: ['sizes'], message: `${label}: choose at least one size` });
       if (sets.counts.length === 0)
         ctx.addIssue({ code: 'custom', path: ['counts'], message: `${label}: enter at least one count` });
     }) satisfies z.ZodType<SteelSetsDefinition>;
 
-export const spaceSchema = z.object({
-  width: axisSchema('Width b', widthMmSchema),
-  depth: axisSchema('Depth h', depthMmSchema),
-  fc: axisSchema('Concrete strength f′c', fcMPaSchema),
-  fy: axisSchema('Yield strength fy', fyMPaSchema),
-  cover: axisSchema('Clear cover', coverMmSchema),
-  stirrups: z
-    .array(stirrupSchema.nullable())
-    .min(1, 'Choose a stirrup, or none')
-    .max(20, 'At most 20 stirrup choices'),
-  tension: steelSetsSchema('Tension bars', false),
-  compression: steelSetsSchema('Compression bars', true),
-}) satisfies z.ZodType<SpaceDefinition>;
+export const spaceSchema = z
+  .object({
+    width: axisSchema('Width b', widthMmSchema),
+    depth: axisSchema('Depth h', depthMmSchema),
+    fc: axisSchema('Concrete strength f′c', fcMPaSchema),
+    fy: axisSchema('Yield strength fy', fyMPaSchema),
+    cover: axisSchema('Clear cover', coverMmSchema),
+    stirrups: z
+      .array(stirrupSchema.nullable())
+      .min(1, 'Choose a stirrup, or none')
+      .max(20, 'At most 20 stirrup choices'),
+    tension: steelSetsSchema('Tension bars', false),
+    compression: steelSetsSchema('Compression bars', true),
+  })
+  .superRefine((space, ctx) => {
+    const { tension, compression } = space;
+    const hasBars =
+      compression.kind === 'bars' && (compression.counts.length > 0 || compression.mixed?.length);
+    if (tension.kind === 'areas' && hasBars)
+      ctx.addIssue({
+        code: 'custom',
+        path: ['compression'],
+        message: 'Tension steel given as areas needs compression steel as areas, or none',
+      });
+    if (tension.kind === 'bars' && compression.kind === 'areas')
+      ctx.addIssue({
+        code: 'custom',
+        path: ['compression'],
+        message: 'Tension bars need compression bars, or none',
+      });
+    if (tension.kind === 'areas' && tension.areasMm2.some((area) => area <= 0))
+      ctx.addIssue({
+        code: 'custom',
+        path: ['tension', 'areasMm2'],
+        message: 'Tension steel needs an area above zero',
+      });
+  }) satisfies z.ZodType<SpaceDefinition>;
 
 export const viewSchema = z
   .object({ x: z.enum(MEASURE_IDS), y: z.enum(MEASURE_IDS) })

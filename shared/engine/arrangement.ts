@@ -1,6 +1,7 @@
 import { getBar, type Bar } from './bars.ts';
 import type { Arrangement, FaceArrangement, PlacedBar } from './evaluation.ts';
 import { splitIntoLayers, type LayerBars, type SizedCount } from './layer-split.ts';
+import { isWithinLength } from './limits.ts';
 import type { RuleSet } from './rules/rule-set.ts';
 import type { BarGroup, BarStandard, BendAllowance, Face } from './section.ts';
 
@@ -32,9 +33,6 @@ export interface FaceLayers {
   readonly reachMm: number;
 }
 
-/** A slack that forgives rounding in unit conversion only, mm. */
-const ROUNDING_MM = 1e-6;
-
 /**
  * Places one group: in layers from its face inwards, corner bars against the stirrup's legs or in its bends.
  * Clear gaps by the rule set (ACI 318 25.2.1, 25.2.2); the corner-bar convention is that of the classic minimum-width
@@ -53,10 +51,8 @@ export function arrangeFace(face: Face, group: BarGroup, context: ArrangementCon
   const largest = sized[0]!.bar.diameterMm;
   const gapMm = context.rules.barGapMm(largest, context.maxAggregateMm);
   const needed = (layer: LayerBars) => widthNeeded(layer, gapMm, context);
-  const layers = splitIntoLayers(
-    sized,
-    context.maxLayers,
-    (layer) => needed(layer) <= context.widthMm + ROUNDING_MM,
+  const layers = splitIntoLayers(sized, context.maxLayers, (layer) =>
+    isWithinLength(needed(layer), context.widthMm),
   );
   if (!layers) return rejectedFace(face, { sized, total, gapMm, needed, maxLayers: context.maxLayers });
   return placedFace(face, layers, gapMm, context);
@@ -202,7 +198,11 @@ function centroidOf(bars: readonly { readonly bar: Bar; readonly offsetMm: numbe
 }
 
 /** Least overall depth at which two groups keep a layer's clear gap between them, mm. */
-export function depthNeededMm(tension: FaceLayers, compression: FaceLayers, rules: RuleSet): number {
+export function depthNeededMm(
+  tension: Pick<FaceLayers, 'reachMm'>,
+  compression: Pick<FaceLayers, 'reachMm'>,
+  rules: RuleSet,
+): number {
   if (tension.reachMm === 0 || compression.reachMm === 0) return tension.reachMm + compression.reachMm;
   return tension.reachMm + rules.layerGapMm + compression.reachMm;
 }
@@ -215,7 +215,7 @@ export function arrangementReport(
   context: ArrangementContext,
 ): Arrangement {
   const needed = depthNeededMm(tension, compression, context.rules);
-  const isDeepEnough = depthMm + ROUNDING_MM >= needed;
+  const isDeepEnough = isWithinLength(needed, depthMm);
   const fits = tension.report.fits && compression.report.fits && isDeepEnough;
   const bars: PlacedBar[] = [tension, compression].flatMap((group) =>
     group.layers.flatMap((layer, index) =>
@@ -242,14 +242,4 @@ export function arrangementReport(
     bendRadiusMm: context.stirrupBar ? context.rules.bendRadiusMm(context.stirrupBar.diameterMm) : 0,
     reason: fits ? 'every bar has its place' : reasons.join('; '),
   };
-}
-
-/** Whether both faces are placed and the section is deep enough for them; what `arrangementReport` calls `fits`. */
-export function doesFit(
-  depthMm: number,
-  tension: FaceLayers,
-  compression: FaceLayers,
-  depthNeeded: number,
-): boolean {
-  return tension.report.fits && compression.report.fits && depthMm + ROUNDING_MM >= depthNeeded;
 }

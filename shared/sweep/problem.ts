@@ -21,6 +21,8 @@ export interface BarSetsDefinition {
   readonly sizes: readonly string[];
   readonly counts: readonly number[];
   readonly none: boolean;
+  /** Further groups as listed, for two sizes at one face. */
+  readonly mixed?: readonly BarGroup[] | undefined;
 }
 /** Steel given as plain areas in one layer, as published problems state it. */
 export interface AreaSetsDefinition {

@@ -1,0 +1,82 @@
+import { arrangeFace, type ArrangementContext } from '../engine/arrangement.ts';
+import { getBar } from '../engine/bars.ts';
+import { barRuleBreach, barTotal } from '../engine/checks.ts';
+import { STEEL_KG_PER_M_PER_MM2 } from '../engine/quantities.ts';
+import type { Face, UserRules } from '../engine/section.ts';
+import type { SteelSet } from './problem.ts';
+
+/** One steel set of one face in one width, cover and stirrup: what the hot loop needs of it, flat. mm, mm², kg/m. */
+export interface FaceEntry {
+  readonly fits: boolean;
+  readonly layerCount: number;
+  /** Offset of each layer's centroid from its own face, nearest first; unused where `shareOfDepth` is not zero. */
+  readonly offsets: Float64Array;
+  readonly areas: Float64Array;
+  readonly centroidOffsetMm: number;
+  /** Area of the placed layers. */
+  readonly areaMm2: number;
+  /** Area of the bars, placed or not. */
+  readonly givenAreaMm2: number;
+  readonly reachMm: number;
+  /** Offset as a share of h, for plain areas stated so; else 0. */
+  readonly shareOfDepth: number;
+  readonly kgPerM: number;
+  /** Bars; NaN for plain areas. */
+  readonly barCount: number;
+  readonly breaksBarRules: boolean;
+}
+
+/** The entry of every set of one face. */
+export function faceTable(
+  face: Face,
+  sets: readonly SteelSet[],
+  context: ArrangementContext,
+  rules: UserRules,
+): readonly FaceEntry[] {
+  return sets.map((set) => (set.kind === 'area' ? areaEntry(set) : barEntry(face, set.bars, context, rules)));
+}
+
+function barEntry(
+  face: Face,
+  bars: Extract<SteelSet, { kind: 'bars' }>['bars'],
+  context: ArrangementContext,
+  rules: UserRules,
+): FaceEntry {
+  const placed = arrangeFace(face, bars, context);
+  const sum = (of: (designation: string, count: number) => number) =>
+    bars.reduce((total, { bar, count }) => total + of(bar, count), 0);
+  return {
+    fits: placed.report.fits,
+    layerCount: placed.layers.length,
+    offsets: Float64Array.from(placed.layers, (layer) => layer.offsetMm),
+    areas: Float64Array.from(placed.layers, (layer) => layer.areaMm2),
+    centroidOffsetMm: placed.centroidOffsetMm,
+    areaMm2: placed.areaMm2,
+    givenAreaMm2: sum((bar, count) => count * getBar(context.barStandard, bar).areaMm2),
+    reachMm: placed.reachMm,
+    shareOfDepth: 0,
+    kgPerM: sum((bar, count) => count * getBar(context.barStandard, bar).massKgPerM),
+    barCount: barTotal(bars),
+    breaksBarRules: barRuleBreach(bars, rules) !== null,
+  };
+}
+
+function areaEntry({ areaMm2, at }: Extract<SteelSet, { kind: 'area' }>): FaceEntry {
+  const isShare = 'shareOfDepth' in at;
+  const hasSteel = areaMm2 > 0;
+  const offsetMm = isShare ? 0 : at.offsetMm;
+  return {
+    fits: true,
+    layerCount: hasSteel ? 1 : 0,
+    offsets: Float64Array.of(offsetMm),
+    areas: Float64Array.of(areaMm2),
+    centroidOffsetMm: offsetMm,
+    areaMm2,
+    givenAreaMm2: areaMm2,
+    reachMm: 0,
+    shareOfDepth: isShare ? at.shareOfDepth : 0,
+    kgPerM: hasSteel ? areaMm2 * STEEL_KG_PER_M_PER_MM2 : 0,
+    barCount: NaN,
+    breaksBarRules: false,
+  };
+}

@@ -1,0 +1,92 @@
+import type { ArrangementContext } from '../engine/arrangement.ts';
+import { getBar } from '../engine/bars.ts';
+import { pricingFor, type Pricing } from '../engine/pricing.ts';
+import type { RuleSet } from '../engine/rules/rule-set.ts';
+import { RULE_SETS } from '../engine/rules/rule-sets.ts';
+import { stirrupShape, type StirrupShape } from '../engine/stirrup-length.ts';
+import { faceTable, type FaceEntry } from './face-table.ts';
+import type { Space, SweepProblem, View } from './problem.ts';
+import { expandSpace } from './space.ts';
+
+/** Constants of one concrete strength, MPa. */
+export interface ConcreteConstants {
+  readonly fcMPa: number;
+  readonly blockStressMPa: number;
+  readonly blockDepthFactor: number;
+  readonly modularRatio: number;
+  readonly ratioAbove: number;
+  readonly pricing: Pricing;
+}
+
+/** Bars placed for one width, cover and stirrup. */
+export interface Placement {
+  readonly widthMm: number;
+  readonly stirrup: StirrupShape | null;
+  readonly tension: readonly FaceEntry[];
+  readonly compression: readonly FaceEntry[];
+}
+
+/** A problem with everything that does not change from section to section worked out once. */
+export interface PreparedSweep {
+  readonly problem: SweepProblem;
+  readonly view: View;
+  readonly space: Space;
+  readonly ruleSet: RuleSet;
+  readonly concretes: readonly ConcreteConstants[];
+  /** Placements by width × cover × stirrup, made on first use and dropped when many. */
+  readonly placements: Map<number, Placement>;
+}
+
+/** Placements held at once: a chunk crosses few widths, and a table of 1,000 sets is about 0.3 MB. */
+const MAX_PLACEMENTS = 64;
+
+/** @throws InvalidSectionError for an empty axis, an unknown bar or steel outside the section. */
+export function prepareSweep(problem: SweepProblem, view: View): PreparedSweep {
+  const { basis } = problem;
+  const space = expandSpace(problem.space, basis.barStandard);
+  const ruleSet = RULE_SETS[basis.ruleSet];
+  const concretes = space.fcMPa.map((fcMPa) => {
+    const modularRatio = basis.esMPa / ruleSet.concreteModulusMPa(fcMPa);
+    return {
+      fcMPa,
+      blockStressMPa: ruleSet.blockStressMPa(fcMPa),
+      blockDepthFactor: ruleSet.blockDepthFactor(fcMPa),
+      modularRatio,
+      ratioAbove: basis.displacedConcrete === 'ignore' ? modularRatio : modularRatio - 1,
+      pricing: pricingFor(basis.rates, fcMPa),
+    };
+  });
+  return { problem, view, space, ruleSet, concretes, placements: new Map() };
+}
+
+/** The placement of the n-th combination of width, cover and stirrup (stirrup innermost). */
+export function placementAt(prepared: PreparedSweep, combination: number): Placement {
+  const known = prepared.placements.get(combination);
+  if (known) return known;
+  if (prepared.placements.size >= MAX_PLACEMENTS) prepared.placements.clear();
+  const { space, problem, ruleSet } = prepared;
+  const { basis, rules } = problem;
+  const stirrup = space.stirrups[combination % space.stirrups.length]!;
+  const rest = Math.floor(combination / space.stirrups.length);
+  const coverMm = space.coversMm[rest % space.coversMm.length]!;
+  const widthMm = space.widthsMm[Math.floor(rest / space.coversMm.length)]!;
+  const stirrupBar = stirrup && getBar(basis.barStandard, stirrup.bar);
+  const context: ArrangementContext = {
+    rules: ruleSet,
+    barStandard: basis.barStandard,
+    widthMm,
+    coverMm,
+    stirrupBar,
+    maxAggregateMm: basis.maxAggregateMm,
+    bendAllowance: basis.bendAllowance,
+    maxLayers: rules.maxLayers,
+  };
+  const placement = {
+    widthMm,
+    stirrup: stirrup && stirrupBar && stirrupShape(stirrupBar, stirrup, coverMm, ruleSet),
+    tension: faceTable('tension', space.tension, context, rules),
+    compression: faceTable('compression', space.compression, context, rules),
+  };
+  prepared.placements.set(combination, placement);
+  return placement;
+}

@@ -1,0 +1,117 @@
+import { CHECK_IDS } from '../engine/evaluation.ts';
+import { DIRECTIONS, MEASURE_DIRECTION, MEASURE_IDS, type MeasureId } from '../engine/measures.ts';
+import { BandBuilder } from './band.ts';
+import type { ChunkResult } from './chunk.ts';
+import { DensityBuilder } from './density.ts';
+import { FrontBuilder } from './front.ts';
+import type { Space, View } from './problem.ts';
+
+const CHECK_COUNT = CHECK_IDS.length;
+const MEASURE_COUNT = MEASURE_IDS.length;
+
+/** +1 where less is better, −1 where more is. */
+export const signOf = (measure: MeasureId): 1 | -1 => (MEASURE_DIRECTION[measure] === DIRECTIONS[0] ? 1 : -1);
+const SIGNS = Float64Array.from(MEASURE_IDS, signOf);
+
+/** Everything the hot loop adds up for one range of indices. Only this file knows how a section's outcome is counted. */
+export class Tally {
+  /** Sections by failure mask; index 0 counts those that meet every check. */
+  readonly maskCounts = new Float64Array(1 << CHECK_COUNT);
+  readonly widthFeasible: Float64Array;
+  readonly widthEvaluated: Float64Array;
+  readonly depthFeasible: Float64Array;
+  readonly depthEvaluated: Float64Array;
+  readonly fcFeasible: Float64Array;
+  readonly fcEvaluated: Float64Array;
+  private readonly xMeasure: number;
+  private readonly yMeasure: number;
+  private readonly withoutX = new Float64Array(CHECK_COUNT).fill(NaN);
+  private readonly withoutY = new Float64Array(CHECK_COUNT).fill(NaN);
+  private readonly withoutIndex = new Float64Array(CHECK_COUNT).fill(-1);
+  private readonly bestValue = new Float64Array(MEASURE_COUNT).fill(NaN);
+  private readonly bestIndex = new Float64Array(MEASURE_COUNT).fill(-1);
+  private readonly front = new FrontBuilder();
+  private readonly band = new BandBuilder();
+  private readonly density = new DensityBuilder();
+
+  constructor(space: Space, view: View) {
+    this.xMeasure = MEASURE_IDS.indexOf(view.x);
+    this.yMeasure = MEASURE_IDS.indexOf(view.y);
+    this.widthFeasible = new Float64Array(space.widthsMm.length);
+    this.widthEvaluated = new Float64Array(space.widthsMm.length);
+    this.depthFeasible = new Float64Array(space.depthsMm.length);
+    this.depthEvaluated = new Float64Array(space.depthsMm.length);
+    this.fcFeasible = new Float64Array(space.fcMPa.length);
+    this.fcEvaluated = new Float64Array(space.fcMPa.length);
+  }
+
+  /** A section that meets every check. Indices arrive ascending, so the first of equal values has the lowest index. */
+  addFeasible(index: number, measures: Float64Array): void {
+    const { bestValue, bestIndex } = this;
+    for (let i = 0; i < MEASURE_COUNT; i++) {
+      const value = SIGNS[i]! * measures[i]!;
+      if (value < bestValue[i]! || (bestIndex[i] === -1 && value === value)) {
+        bestValue[i] = value;
+        bestIndex[i] = index;
+      }
+    }
+    const x = measures[this.xMeasure]!;
+    const y = measures[this.yMeasure]!;
+    const orientedX = SIGNS[this.xMeasure]! * x;
+    const orientedY = SIGNS[this.yMeasure]! * y;
+    this.front.add(orientedX, orientedY, index);
+    this.band.add(index, orientedX, orientedY);
+    if (x >= 0 && y >= 0) this.density.add(x, y);
+  }
+
+  /** A section that fails exactly the check of this bit and has numbers. */
+  addFailingOnly(bit: number, index: number, measures: Float64Array): void {
+    const x = SIGNS[this.xMeasure]! * measures[this.xMeasure]!;
+    if (x < this.withoutX[bit]! || (this.withoutIndex[bit] === -1 && x === x)) {
+      this.withoutX[bit] = x;
+      this.withoutY[bit] = SIGNS[this.yMeasure]! * measures[this.yMeasure]!;
+      this.withoutIndex[bit] = index;
+    }
+  }
+
+  finish(): ChunkResult {
+    const failed = new Float64Array(CHECK_COUNT);
+    const failedOnly = new Float64Array(CHECK_COUNT);
+    let evaluated = 0;
+    this.maskCounts.forEach((count, mask) => {
+      if (count === 0) return;
+      evaluated += count;
+      for (let bit = 0; bit < CHECK_COUNT; bit++) {
+        if (mask & (1 << bit)) failed[bit]! += count;
+        if (mask === 1 << bit) failedOnly[bit]! += count;
+      }
+    });
+    const { widthFeasible, widthEvaluated, depthFeasible, depthEvaluated, fcFeasible, fcEvaluated } = this;
+    const { withoutX, withoutY, withoutIndex, bestValue, bestIndex } = this;
+    return {
+      evaluated,
+      feasible: this.maskCounts[0]!,
+      failed,
+      failedOnly,
+      withoutX,
+      withoutY,
+      withoutIndex,
+      bestValue,
+      bestIndex,
+      front: this.front.xs.map((x, i) => ({
+        x,
+        y: this.front.ys[i]!,
+        ties: this.front.ties[i]!,
+        tieCount: this.front.tieCounts[i]!,
+      })),
+      band: this.band.finish(),
+      density: this.density.finish(),
+      widthFeasible,
+      widthEvaluated,
+      depthFeasible,
+      depthEvaluated,
+      fcFeasible,
+      fcEvaluated,
+    };
+  }
+}
