@@ -1,5 +1,6 @@
 import type { ChunkResult } from '#shared/sweep/chunk.ts';
-import { emptyChunk, mergeChunks } from '#shared/sweep/merge.ts';
+import { emptyChunk } from '#shared/sweep/chunk.ts';
+import { mergeChunks } from '#shared/sweep/merge.ts';
 import type { SweepProblem, View } from '#shared/sweep/problem.ts';
 import type { ComputePool } from './pool.ts';
 
@@ -50,7 +51,7 @@ export async function sweepInChunks(sweep: ChunkedSweep): Promise<ChunkedSweepRe
       const to = Math.min(from + chunkSections, sectionCount);
       next = to;
       const reply = await pool.sweep({ key, problem, view, from, to, cancelFlag });
-      merged = mergeChunks(view, merged, reply.chunk);
+      merged = mergeChunks(merged, reply.chunk);
       evaluated += reply.doneTo - from;
       onProgress?.(merged, evaluated);
     }

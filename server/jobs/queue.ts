@@ -100,8 +100,6 @@ export class Queue {
 
 /** The queue reports each job it takes; of interest here is only what goes wrong. */
 function adaptLog(log: Log): Logger {
-  return new Logger(() => (level, message, meta) => {
-    const write = level === 'error' ? 'error' : level === 'warning' ? 'warn' : 'debug';
-    log[write]({ err: meta?.error }, message);
-  });
+  const writers = { error: log.error, warning: log.warn, info: log.debug, debug: log.debug };
+  return new Logger(() => (level, message, meta) => writers[level].call(log, { err: meta?.error }, message));
 }

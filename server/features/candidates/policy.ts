@@ -1,0 +1,46 @@
+import type { CandidateState, Person, Role } from '#shared/contract/records.ts';
+
+export const PIN: readonly Role[] = ['admin', 'engineer'];
+export const COMMENT: readonly Role[] = ['admin', 'engineer', 'checker', 'estimator'];
+
+/** What the policy looks at. */
+interface Moved {
+  readonly state: CandidateState;
+  readonly authorId: string;
+}
+type Mover = Pick<Person, 'id' | 'role'>;
+
+const PREDECESSORS: Readonly<Record<CandidateState, readonly CandidateState[]>> = {
+  proposed: ['returned'],
+  checked: ['proposed'],
+  approved: ['checked'],
+  returned: ['proposed', 'checked'],
+  superseded: ['proposed', 'checked', 'approved', 'returned'],
+};
+
+export const canFollow = (from: CandidateState, to: CandidateState): boolean =>
+  PREDECESSORS[to].includes(from);
+
+/** Why the person may never move this candidate to that state, whatever state it is in now. */
+export function findRefusal({ authorId }: Moved, to: CandidateState, mover: Mover): string | undefined {
+  const isAuthor = authorId === mover.id;
+  const isAdmin = mover.role === 'admin';
+  if (to === 'proposed')
+    return isAuthor && PIN.includes(mover.role)
+      ? undefined
+      : 'Only the engineer who pinned it may propose it again';
+  if (to === 'superseded')
+    return isAdmin || (isAuthor && PIN.includes(mover.role))
+      ? undefined
+      : 'Only the engineer who pinned it, or an admin, may withdraw it';
+  if (isAuthor) return 'You pinned this candidate: someone else has to check and approve it';
+  return isAdmin || mover.role === 'checker'
+    ? undefined
+    : `Your role (${mover.role}) may not check, approve or return candidates`;
+}
+
+export function allowedTransitions(candidate: Moved, mover: Mover): CandidateState[] {
+  return (Object.keys(PREDECESSORS) as CandidateState[]).filter(
+    (to) => canFollow(candidate.state, to) && findRefusal(candidate, to, mover) === undefined,
+  );
+}

@@ -1,0 +1,69 @@
+import { eq } from 'drizzle-orm';
+import type { Router } from 'express';
+import { RUN_EVENTS_PATH } from '#shared/contract/endpoints.ts';
+import { idSchema } from '#shared/contract/numbers.ts';
+import type { Person, Run } from '#shared/contract/records.ts';
+import type { Database } from '../../db/client.ts';
+import { listRunSummaries } from '../../db/run-summaries.ts';
+import { runs } from '../../db/schema/runs.ts';
+import type { Deps } from '../../deps.ts';
+import { notFound } from '../../errors.ts';
+import { bind } from '../../http/bind.ts';
+import { requireSignedInPerson } from '../../http/signed-in-person.ts';
+import { cancelRun, openView, startRun } from './commands.ts';
+import { streamRun } from './event-stream.ts';
+import { presentRun, presentViewProgress } from './present.ts';
+import { getSection, listViews, requireRun, requireView } from './queries.ts';
+
+export function registerRunRoutes(router: Router, deps: Deps): void {
+  bind(router, deps, 'startRun', async ({ person, params, deps: { db } }) =>
+    readRun(db, person, await startRun(db, person, params.id)),
+  );
+
+  bind(router, deps, 'getRun', ({ person, params, deps: { db } }) => readRun(db, person, params.id));
+
+  bind(router, deps, 'cancelRun', async ({ person, params, deps: { db } }) => {
+    await cancelRun(db, person, await requireRun(db, person, params.id));
+    return readRun(db, person, params.id);
+  });
+
+  bind(router, deps, 'openView', async ({ person, params, body, deps: { db } }) => {
+    const record = await requireRun(db, person, params.id);
+    const view = await openView(db, person, { record, view: body });
+    return presentViewProgress(view, record.run.sectionCount, person);
+  });
+
+  bind(router, deps, 'getView', async ({ person, params, deps: { db } }) => {
+    const { run } = await requireRun(db, person, params.id);
+    const view = await requireView(db, person, { runId: run.id, viewId: params.viewId });
+    return presentViewProgress(view, run.sectionCount, person);
+  });
+
+  bind(router, deps, 'getSection', async ({ person, params, deps: { db } }) =>
+    getSection(await requireRun(db, person, params.id), params.index, person),
+  );
+
+  registerRunEvents(router, deps);
+}
+
+function registerRunEvents(router: Router, { db, log, runEvents }: Deps): void {
+  router.get(RUN_EVENTS_PATH, async (req, res) => {
+    const person = await requireSignedInPerson(db, req);
+    const id = idSchema.safeParse(req.params.id);
+    if (!id.success) throw notFound('Run');
+    const record = await requireRun(db, person, id.data);
+    const header = req.get('last-event-id') ?? '';
+    const lastEventId = /^\d{1,15}$/.test(header) ? Number(header) : undefined;
+    streamRun({ db, log, runEvents, res, person, record, lastEventId });
+  });
+}
+
+async function readRun(db: Database, person: Person, runId: string): Promise<Run> {
+  const record = await requireRun(db, person, runId);
+  const [views, [summary]] = await Promise.all([
+    listViews(db, runId),
+    listRunSummaries(db, eq(runs.id, runId)),
+  ]);
+  if (summary === undefined) throw notFound('Run');
+  return presentRun({ ...record, summary, views }, person);
+}
