@@ -1,0 +1,122 @@
+import { useState, type ReactNode } from 'react';
+import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import type { Evaluation } from '#shared/engine/evaluation.ts';
+import type { BarStandard, SectionInput } from '#shared/engine/section.ts';
+import { SectionDrawing } from '#client/src/drawing/section-drawing.tsx';
+import { formatQuantity } from '#client/src/lib/format-quantity.ts';
+import { quantitiesInText } from '#client/src/lib/quantities-in-text.ts';
+import { sizeText, steelText, stirrupText } from '#client/src/lib/section-text.ts';
+import { SegmentedControl } from '#client/src/ui/segmented-control.tsx';
+import { CheckList } from './check-list.tsx';
+import { DuctilityNote } from './ductility-note.tsx';
+import { NotChecked } from './not-checked.tsx';
+import { QuantitiesList } from './quantities-list.tsx';
+import { WorkingLines } from './working-lines.tsx';
+
+export interface InspectorProps {
+  readonly section: SectionInput;
+  readonly evaluation: Evaluation;
+  readonly standard: BarStandard;
+  readonly units: UnitSystem;
+  /** Pinning, links: whatever the page offers on a section. */
+  readonly actions?: ReactNode;
+  readonly areWorkingLinesOpen?: boolean;
+}
+
+const FIGURES = [
+  { value: '3', label: '3' },
+  { value: '4', label: '4' },
+  { value: '5', label: '5' },
+] as const;
+type Figures = (typeof FIGURES)[number]['value'];
+
+function Fold(props: { readonly title: string; readonly isOpen?: boolean; readonly children: ReactNode }) {
+  return (
+    <details className="border-t border-ink" open={props.isOpen}>
+      <summary className="py-2 text-sm font-semibold">{props.title}</summary>
+      <div className="pb-4">{props.children}</div>
+    </details>
+  );
+}
+
+function VerdictLine({ evaluation, units }: { readonly evaluation: Evaluation; readonly units: UnitSystem }) {
+  const failing = evaluation.checks.filter((check) => !check.passes).length;
+  if (evaluation.meetsListedChecks)
+    return <p className="font-medium text-meets">✓ Meets the listed checks</p>;
+  const reason = evaluation.arrangement?.fits === false ? evaluation.arrangement.reason : '';
+  return (
+    <div className="text-fails">
+      <p className="font-medium">
+        ✕ Fails {failing} of {evaluation.checks.length} listed{' '}
+        {evaluation.checks.length === 1 ? 'check' : 'checks'}
+      </p>
+      {reason !== '' && <p className="text-sm">{quantitiesInText(reason, units)}</p>}
+    </div>
+  );
+}
+
+/** One section, completely: drawn, checked, measured, worked out, with what nobody has checked. */
+export function Inspector(props: InspectorProps) {
+  const { section, evaluation, standard, units, actions } = props;
+  const [figures, setFigures] = useState<Figures>('3');
+  const digits = Number(figures);
+  const stress = (mpa: number) => formatQuantity(mpa, 'stress', units);
+  return (
+    <article className="grid gap-4" aria-label={`Section ${sizeText(section, units)}`}>
+      <header>
+        <h2 className="flex flex-wrap items-baseline gap-x-3">
+          <span className="text-xl font-semibold">{sizeText(section, units)}</span>
+          <span className="num text-base text-steel">{steelText(section, units)}</span>
+        </h2>
+        <p className="text-sm text-muted">
+          f′c {stress(section.fcMPa)}, fy {stress(section.fyMPa)}, stirrups{' '}
+          {stirrupText(section.stirrup, units)}
+        </p>
+      </header>
+      <div className="flex justify-center">
+        <SectionDrawing
+          variant="large"
+          section={section}
+          evaluation={evaluation}
+          standard={standard}
+          units={units}
+        />
+      </div>
+      <VerdictLine evaluation={evaluation} units={units} />
+      {actions}
+      <section>
+        <div className="flex flex-wrap items-center justify-between gap-2 pb-2">
+          <h3 className="text-sm font-semibold">
+            Checks <span className="font-normal text-muted">{evaluation.ruleSet.title}</span>
+          </h3>
+          <div className="flex items-center gap-2 text-xs text-muted">
+            <span aria-hidden="true">figures</span>
+            <SegmentedControl
+              legend="Significant figures"
+              options={FIGURES}
+              value={figures}
+              onChange={setFigures}
+            />
+          </div>
+        </div>
+        <CheckList checks={evaluation.checks} units={units} digits={Math.max(digits, 3)} />
+      </section>
+      <div>
+        <Fold title="Ductility and its convention" isOpen>
+          <DuctilityNote evaluation={evaluation} units={units} digits={digits} />
+        </Fold>
+        <Fold title={units === 'us' ? 'Quantities per foot' : 'Quantities per metre'}>
+          <QuantitiesList quantities={evaluation.quantities} units={units} digits={digits} />
+        </Fold>
+        {evaluation.working.length > 0 && (
+          <Fold title="Working, line by line" isOpen={props.areWorkingLinesOpen === true}>
+            <WorkingLines steps={evaluation.working} units={units} digits={digits} />
+          </Fold>
+        )}
+        <Fold title="Not checked">
+          <NotChecked items={evaluation.notChecked} engineVersion={evaluation.engineVersion} />
+        </Fold>
+      </div>
+    </article>
+  );
+}
