@@ -1,6 +1,7 @@
 import { eq } from 'drizzle-orm';
 import type { Router } from 'express';
 import type { SharedShortlist } from '#shared/contract/records.ts';
+import type { Database } from '../../db/client.ts';
 import { shareLinks } from '../../db/schema/share-links.ts';
 import type { Deps } from '../../deps.ts';
 import { notFound } from '../../errors.ts';
@@ -12,7 +13,10 @@ import { findProjectOfOpenLink, listShareLinks } from './queries.ts';
 import { findShareLinkId } from './token.ts';
 
 /** Handed in by app.ts from the candidates' feature: a project's candidates as an outsider may see them, no rates. */
-export type ListSharedCandidates = (projectId: string) => Promise<SharedShortlist['candidates']>;
+export type ListSharedCandidates = (
+  db: Database,
+  projectId: string,
+) => Promise<SharedShortlist['candidates']>;
 
 export function registerShareLinkRoutes(
   router: Router,
@@ -51,7 +55,7 @@ export function registerShareLinkRoutes(
     const linkId = findShareLinkId(token, secret);
     const project = linkId === undefined ? undefined : await findProjectOfOpenLink(db, linkId);
     if (project === undefined) throw notFound('A shortlist behind this link');
-    const candidates = await listSharedCandidates(project.id);
+    const candidates = await listSharedCandidates(db, project.id);
     return {
       projectName: project.name,
       projectNumber: project.number,
