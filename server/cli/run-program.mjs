@@ -1,5 +1,14 @@
 import { spawn } from 'node:child_process';
 
+/** @type {import('node:child_process').SpawnOptions} */
+const LOUD = { stdio: 'inherit' };
+
+/** @type {import('node:child_process').SpawnOptions} */
+const QUIET = {
+  stdio: ['ignore', 'pipe', 'pipe'],
+  env: { ...process.env, NO_COLOR: '1', FORCE_COLOR: undefined },
+};
+
 /** @type {Set<import('node:child_process').ChildProcess>} */
 const interruptible = new Set();
 
