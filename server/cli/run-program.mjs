@@ -24,10 +24,7 @@ const interruptible = new Set();
  */
 export function runProgram(command, args, { isQuiet = false, ...options } = {}) {
   return new Promise((resolve, reject) => {
-    const child = spawn(command, args, {
-      stdio: isQuiet ? ['ignore', 'pipe', 'pipe'] : 'inherit',
-      ...options,
-    });
+    const child = spawn(command, args, { ...(isQuiet ? QUIET : LOUD), ...options });
     if (options.detached !== true) interruptible.add(child);
     let output = '';
     const collect = (/** @type {Buffer} */ chunk) => (output += chunk.toString());
