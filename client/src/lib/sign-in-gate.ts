@@ -2,37 +2,37 @@
  * Where a call meets an expired session: it waits here while a person signs in over the page, then goes on. All calls
  * that fail meanwhile wait for the same sign-in.
  */
-type Listener = (isWaiting: boolean) => void;
+type Listener = () => void;
 
 let waiting: { promise: Promise<boolean>; settle: (isSignedIn: boolean) => void } | null = null;
 const listeners = new Set<Listener>();
 
-const tell = () => listeners.forEach((listener) => listener(waiting !== null));
+const tell = () => listeners.forEach((listener) => listener());
 
-export const signInGate = {
-  isWaiting: (): boolean => waiting !== null,
-
-  /** Resolves to true after a sign-in, to false when it is given up or no page can ask for it. */
-  wait(): Promise<boolean> {
-    if (listeners.size === 0) return Promise.resolve(false);
-    if (waiting === null) {
-      let settle: (isSignedIn: boolean) => void = () => undefined;
-      const promise = new Promise<boolean>((resolve) => (settle = resolve));
-      waiting = { promise, settle };
-      tell();
-    }
-    return waiting.promise;
-  },
-
-  settle(isSignedIn: boolean): void {
-    const settled = waiting;
-    waiting = null;
-    settled?.settle(isSignedIn);
+/** Resolves to true after a sign-in, to false when it is given up or no page can ask for it. */
+function wait(): Promise<boolean> {
+  if (listeners.size === 0) return Promise.resolve(false);
+  if (waiting === null) {
+    let settle: (isSignedIn: boolean) => void = () => undefined;
+    const promise = new Promise<boolean>((resolve) => (settle = resolve));
+    waiting = { promise, settle };
     tell();
-  },
+  }
+  return waiting.promise;
+}
 
-  subscribe(listener: Listener): () => void {
-    listeners.add(listener);
-    return () => listeners.delete(listener);
-  },
-};
+function settle(isSignedIn: boolean): void {
+  const settled = waiting;
+  waiting = null;
+  settled?.settle(isSignedIn);
+  tell();
+}
+
+function subscribe(listener: Listener): () => void {
+  listeners.add(listener);
+  return () => listeners.delete(listener);
+}
+
+const isWaiting = (): boolean => waiting !== null;
+
+export const signInGate = { wait, settle, subscribe, isWaiting } as const;

@@ -1,6 +1,6 @@
 import { zodResolver } from '@hookform/resolvers/zod';
 import { useState } from 'react';
-import { useForm } from 'react-hook-form';
+import { useForm, useWatch } from 'react-hook-form';
 import { designBasisSchema, UNIT_SYSTEMS, type ProjectDesignBasis } from '#shared/contract/design-basis.ts';
 import {
   BAR_STANDARDS,
@@ -40,8 +40,8 @@ export function DesignBasisForm({ projectId, basis, isReadOnly }: DesignBasisFor
   const form = useForm({ resolver: zodResolver(designBasisSchema), defaultValues: basis });
   const { errors, isDirty } = form.formState;
   const guard = useUnsavedGuard(isDirty);
-  const units = form.watch('units');
   const { control, register } = form;
+  const units = useWatch({ control, name: 'units' });
 
   const submit = form.handleSubmit(async (values) => {
     setFailure(null);

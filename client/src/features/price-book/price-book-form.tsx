@@ -1,6 +1,6 @@
 import { zodResolver } from '@hookform/resolvers/zod';
 import { useState } from 'react';
-import { useForm } from 'react-hook-form';
+import { useForm, useWatch } from 'react-hook-form';
 import { priceBookSchema, type PriceBook, type UnitSystem } from '#shared/contract/design-basis.ts';
 import { placeIssues } from '#client/src/lib/form-issues.ts';
 import { unitLabel } from '#client/src/lib/units.ts';
@@ -28,7 +28,7 @@ export function PriceBookForm({ projectId, priceBook, units, isReadOnly }: Price
   const { control, register } = form;
   const { errors, isDirty } = form.formState;
   const guard = useUnsavedGuard(isDirty);
-  const currency = form.watch('currency');
+  const currency = useWatch({ control, name: 'currency' });
   const money = (kind: 'money-per-mass' | 'money-per-surface') => `${currency}${unitLabel(kind, units)}`;
 
   const submit = form.handleSubmit(async (values) => {

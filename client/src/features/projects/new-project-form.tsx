@@ -1,6 +1,6 @@
 import { zodResolver } from '@hookform/resolvers/zod';
 import { useState } from 'react';
-import { useForm } from 'react-hook-form';
+import { useForm, useWatch } from 'react-hook-form';
 import { UNIT_SYSTEMS } from '#shared/contract/design-basis.ts';
 import { projectInputSchema, type Project } from '#shared/contract/records.ts';
 import { ruleSetLabel, barStandardLabel } from '#client/src/lib/basis-labels.ts';
@@ -26,7 +26,7 @@ export function NewProjectForm({ onCreated }: { readonly onCreated: (project: Pr
   });
   const { errors, isDirty } = form.formState;
   const guard = useUnsavedGuard(isDirty);
-  const basis = form.watch('designBasis');
+  const basis = useWatch({ control: form.control, name: 'designBasis' });
 
   const submit = form.handleSubmit(async (values) => {
     setFailure(null);

@@ -1,0 +1,74 @@
+import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import { SectionDrawing } from '#client/src/drawing/section-drawing.tsx';
+import { sizeText, steelText } from '#client/src/lib/section-text.ts';
+import { CheckTable } from '#client/src/sheet/check-table.tsx';
+import { LimitsNote } from '#client/src/sheet/limits-note.tsx';
+import { QuantitiesTable } from '#client/src/sheet/quantities-table.tsx';
+import { TakeoffTable } from '#client/src/sheet/takeoff-table.tsx';
+import { WorkingTable } from '#client/src/sheet/working-table.tsx';
+import type { ShownCandidate } from './comparison.ts';
+import { FrozenInputs } from './frozen-inputs.tsx';
+
+interface CandidateSheetProps {
+  readonly candidate: ShownCandidate;
+  readonly units: UnitSystem;
+  readonly hasMoney: boolean;
+}
+
+/** The body of a candidate: drawing and checks, then inputs, quantities and working. */
+export function CandidateSheet({ candidate, units, hasMoney }: CandidateSheetProps) {
+  const { section, evaluation, basis } = candidate.snapshot;
+  return (
+    <div className="grid gap-8">
+      <div className="grid items-start gap-8 xl:grid-cols-[22rem_1fr]">
+        <figure className="keep-together">
+          <SectionDrawing
+            variant="large"
+            section={section}
+            evaluation={evaluation}
+            standard={basis.barStandard}
+            units={units}
+          />
+          <figcaption className="mt-2">
+            <span className="text-lg font-semibold">{sizeText(section, units)}</span>{' '}
+            <span className="num text-steel">{steelText(section, units)}</span>
+          </figcaption>
+        </figure>
+        <div className="grid min-w-0 gap-5">
+          <CheckTable checks={evaluation.checks} units={units} />
+          {evaluation.ductility !== null && (
+            <p className="text-sm text-muted">μφ: {evaluation.ductility.definition}</p>
+          )}
+          <LimitsNote evaluation={evaluation} />
+        </div>
+      </div>
+      <Part title="What it was computed from">
+        <FrozenInputs snapshot={candidate.snapshot} units={units} />
+      </Part>
+      <div className="grid gap-8 xl:grid-cols-2">
+        <Part title="Quantities per length">
+          <QuantitiesTable quantities={evaluation.quantities} units={units} isMoneyHidden={!hasMoney} />
+        </Part>
+        <Part title="Takeoff">
+          <TakeoffTable takeoff={candidate.takeoff} units={units} hasMoney={hasMoney} />
+        </Part>
+      </div>
+      <Part title="Working">
+        <WorkingTable working={evaluation.working} units={units} />
+      </Part>
+      <p className="num flex flex-wrap gap-x-6 gap-y-1 border-t border-ink pt-2 text-xs">
+        <span>engine {candidate.snapshot.engineVersion}</span>
+        <span className="break-all">SHA-256 {candidate.hash}</span>
+      </p>
+    </div>
+  );
+}
+
+function Part({ title, children }: { readonly title: string; readonly children: React.ReactNode }) {
+  return (
+    <section aria-label={title} className="min-w-0">
+      <h2 className="mb-2 border-t border-ink pt-2 font-semibold">{title}</h2>
+      {children}
+    </section>
+  );
+}

@@ -1,0 +1,60 @@
+import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import type { Snapshot } from '#shared/contract/records.ts';
+import {
+  barStandardLabel,
+  bendAllowanceLabel,
+  displacedConcreteLabel,
+  yieldCurvatureLabel,
+} from '#client/src/lib/basis-labels.ts';
+import { formatQuantity } from '#client/src/lib/format-quantity.ts';
+import { sizeText, steelText, stirrupText } from '#client/src/lib/section-text.ts';
+import type { DisplayKind } from '#client/src/lib/units.ts';
+import { KeyValue } from '#client/src/ui/key-value.tsx';
+
+/** Everything that went into the numbers, as it was when the candidate was pinned. */
+export function FrozenInputs({
+  snapshot,
+  units,
+}: {
+  readonly snapshot: Snapshot;
+  readonly units: UnitSystem;
+}) {
+  const { section, demand, basis, rules, evaluation } = snapshot;
+  const print = (value: number | null, kind: DisplayKind) => formatQuantity(value, kind, units);
+  const asked = (value: number | null, kind: DisplayKind) =>
+    value === null ? 'not asked' : print(value, kind);
+  return (
+    <div className="grid gap-x-10 md:grid-cols-2">
+      <KeyValue
+        items={[
+          { label: 'b × h', value: sizeText(section, units) },
+          { label: 'Steel', value: steelText(section, units) },
+          { label: 'Stirrups', value: stirrupText(section.stirrup, units) },
+          { label: 'f′c', value: print(section.fcMPa, 'stress') },
+          { label: 'fy', value: print(section.fyMPa, 'stress') },
+          { label: 'Clear cover', value: print(section.coverMm, 'length') },
+          { label: 'Mu', value: asked(demand.muNmm, 'moment') },
+          { label: 'μφ at least', value: asked(demand.ductilityTarget, 'count') },
+          { label: 'h at most', value: asked(demand.depthCapMm, 'length') },
+        ]}
+      />
+      <KeyValue
+        items={[
+          { label: 'Code', value: evaluation.ruleSet.title, isNumber: false },
+          { label: 'Bars', value: barStandardLabel(basis.barStandard), isNumber: false },
+          { label: 'Es', value: print(basis.esMPa, 'stress') },
+          { label: 'Largest aggregate', value: print(basis.maxAggregateMm, 'length') },
+          { label: 'Slab thickness', value: print(basis.slabMm, 'length') },
+          { label: 'Layers at most', value: rules.maxLayers },
+          {
+            label: 'Displaced concrete',
+            value: displacedConcreteLabel(basis.displacedConcrete),
+            isNumber: false,
+          },
+          { label: 'Yield curvature', value: yieldCurvatureLabel(basis.yieldCurvatureAt), isNumber: false },
+          { label: 'Bend', value: bendAllowanceLabel(basis.bendAllowance), isNumber: false },
+        ]}
+      />
+    </div>
+  );
+}

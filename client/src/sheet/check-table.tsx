@@ -1,0 +1,67 @@
+import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import type { CheckResult } from '#shared/engine/evaluation.ts';
+import { checkLabel } from '#client/src/lib/check-labels.ts';
+import { formatQuantity } from '#client/src/lib/format-quantity.ts';
+import { quantitiesInText } from '#client/src/lib/quantities-in-text.ts';
+import { unitLabel } from '#client/src/lib/units.ts';
+import { RatioBar } from '#client/src/ui/ratio-bar.tsx';
+import { TableFrame } from '#client/src/ui/table-frame.tsx';
+
+interface CheckTableProps {
+  readonly checks: readonly CheckResult[];
+  readonly units: UnitSystem;
+}
+
+/** Every check with its clause, what is asked, what is there, and the ratio against its limit. */
+export function CheckTable({ checks, units }: CheckTableProps) {
+  return (
+    <TableFrame label="Checks">
+      <thead>
+        <tr>
+          <th scope="col">Check</th>
+          <th scope="col" className="figure">
+            Asked
+          </th>
+          <th scope="col" className="figure">
+            There
+          </th>
+          <th scope="col">Ratio to the limit</th>
+        </tr>
+      </thead>
+      <tbody>
+        {checks.map((check) => (
+          <CheckRow key={check.id} check={check} units={units} />
+        ))}
+      </tbody>
+    </TableFrame>
+  );
+}
+
+function CheckRow({ check, units }: { readonly check: CheckResult; readonly units: UnitSystem }) {
+  const { name, symbol } = checkLabel(check.id);
+  const unit = unitLabel(check.kind, units);
+  const print = (value: number | null) => formatQuantity(value, check.kind, units, { hideUnit: true });
+  return (
+    <tr>
+      <th scope="row" className="min-w-40">
+        <span className="font-medium">
+          {name} {symbol !== '' && <span className="text-muted">{symbol}</span>}
+        </span>
+        <span className="block text-2xs font-normal text-muted">
+          {check.clause}
+          {unit !== '' && `, ${unit}`}
+        </span>
+        {check.reason !== '' && (
+          <span className={`block text-2xs font-normal ${check.passes ? 'text-muted' : 'text-fails'}`}>
+            {quantitiesInText(check.reason, units)}
+          </span>
+        )}
+      </th>
+      <td className="figure">{print(check.demand)}</td>
+      <td className="figure">{print(check.capacity)}</td>
+      <td className="w-[38%] min-w-52">
+        <RatioBar ratio={check.ratio} passes={check.passes} />
+      </td>
+    </tr>
+  );
+}
