@@ -29,7 +29,7 @@ const axisSchema = (label: string, value: z.ZodType<number>) =>
       .superRefine((range, ctx) => {
         if (range.from > range.to)
           ctx.addIssue({ code: 'custom', path: ['to'], message: `${label}: the end is below the start` });
-        else if ((range.to - range.from) / range.step > MAX_AXIS_VALUES)
+        else if (range.step > 0 && (range.to - range.from) / range.step > MAX_AXIS_VALUES)
           ctx.addIssue({
             code: 'custom',
             path: ['step'],

@@ -1,6 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import type { PriceBook, ProjectDesignBasis } from '#shared/contract/design-basis.ts';
-import type { BeamInput, Person, Role } from '#shared/contract/records.ts';
+import type { BeamInput, EvaluateInput, Person, Role } from '#shared/contract/records.ts';
 import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
 import { beams } from '#server/db/schema/beams.ts';
 import { people } from '#server/db/schema/people.ts';
@@ -93,7 +93,7 @@ export const beamInput: BeamInput = {
 export async function createBeam(
   { db }: Deps,
   projectId: string,
-  mark = randomUUID(),
+  mark: string = randomUUID(),
 ): Promise<{ id: string }> {
   const [created] = await db
     .insert(beams)
@@ -138,3 +138,19 @@ export async function createSweep(
     .returning({ id: sweeps.id });
   return created!;
 }
+
+/** 350 × 600, 4 bars of 25 in one layer. */
+export const evaluateInput: EvaluateInput = {
+  section: {
+    widthMm: 350,
+    depthMm: 600,
+    fcMPa: 30,
+    fyMPa: 420,
+    coverMm: 40,
+    stirrup: { bar: '10', legs: 2, spacingMm: 200 },
+    reinforcement: { kind: 'bars', tension: [{ bar: '25', count: 4 }], compression: [] },
+  },
+  demand: sweepDefinition.demand,
+  rules: sweepDefinition.rules,
+  basis: {},
+};

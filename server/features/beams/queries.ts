@@ -1,4 +1,4 @@
-import { eq, sql, type SQL } from 'drizzle-orm';
+import { eq, type SQL } from 'drizzle-orm';
 import type { Beam } from '#shared/contract/records.ts';
 import type { Database } from '../../db/client.ts';
 import { beams } from '../../db/schema/beams.ts';
@@ -13,8 +13,8 @@ async function findBeams(db: Database, condition: SQL): Promise<Beam[]> {
   const rows = await db
     .select({
       beam: beams,
-      sweepCount: sql<number>`(select count(*)::int from ${sweeps} where ${sweeps.beamId} = ${beams.id})`,
-      candidateCount: sql<number>`(select count(*)::int from ${candidates} where ${candidates.beamId} = ${beams.id})`,
+      sweepCount: db.$count(sweeps, eq(sweeps.beamId, beams.id)),
+      candidateCount: db.$count(candidates, eq(candidates.beamId, beams.id)),
     })
     .from(beams)
     .where(condition);

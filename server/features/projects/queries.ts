@@ -1,4 +1,4 @@
-import { and, asc, desc, eq, inArray, isNull, sql } from 'drizzle-orm';
+import { and, asc, desc, eq, inArray, isNull } from 'drizzle-orm';
 import type { Person, Project } from '#shared/contract/records.ts';
 import type { Database } from '../../db/client.ts';
 import { beams } from '../../db/schema/beams.ts';
@@ -26,14 +26,13 @@ async function listMembers(db: Database, projectIds: string[]): Promise<Map<stri
 
 /** The projects the person may read, newest first; with `id`, that one if it is among them. */
 export async function listProjects(db: Database, person: Person, id?: string): Promise<Project[]> {
-  const inProject = (table: typeof beams | typeof candidates) =>
-    sql`(select count(*)::int from ${table} where ${table.projectId} = ${projects.id}`;
+  const isHere = eq(candidates.projectId, projects.id);
   const rows = await db
     .select({
       project: projects,
-      beamCount: sql<number>`${inProject(beams)})`,
-      candidateCount: sql<number>`${inProject(candidates)})`,
-      approvedCount: sql<number>`${inProject(candidates)} and ${candidates.state} = 'approved')`,
+      beamCount: db.$count(beams, eq(beams.projectId, projects.id)),
+      candidateCount: db.$count(candidates, isHere),
+      approvedCount: db.$count(candidates, and(isHere, eq(candidates.state, 'approved'))),
     })
     .from(projects)
     .where(and(id === undefined ? undefined : eq(projects.id, id), isWithinReach(db, person)))
