@@ -26,6 +26,7 @@ export class DatabaseListener {
   readonly #options: ListenerOptions;
   readonly #workerIds = new Set<string>();
   #connection: pg.Client | undefined;
+  #lastQuery: Promise<unknown> = Promise.resolve();
   #isStopped = false;
 
   constructor(options: ListenerOptions) {
@@ -47,18 +48,19 @@ export class DatabaseListener {
 
   async holdWorkerLock(workerId: string): Promise<void> {
     this.#workerIds.add(workerId);
-    await this.#connection?.query('select pg_advisory_lock_shared($1, hashtext($2))', [
-      WORKER_LOCK_CLASS,
-      workerId,
-    ]);
+    await this.#query('select pg_advisory_lock_shared($1, hashtext($2))', workerId);
   }
 
   async releaseWorkerLock(workerId: string): Promise<void> {
     this.#workerIds.delete(workerId);
-    await this.#connection?.query('select pg_advisory_unlock_shared($1, hashtext($2))', [
-      WORKER_LOCK_CLASS,
-      workerId,
-    ]);
+    await this.#query('select pg_advisory_unlock_shared($1, hashtext($2))', workerId);
+  }
+
+  /** One after the other, as the connection wants them. Without a connection, reconnecting takes the locks. */
+  #query(text: string, workerId: string): Promise<unknown> {
+    const done = this.#lastQuery.then(() => this.#connection?.query(text, [WORKER_LOCK_CLASS, workerId]));
+    this.#lastQuery = done.catch(() => undefined);
+    return done;
   }
 
   async #connect(): Promise<void> {
