@@ -138,7 +138,7 @@ function placedFace(
   let inner = legInnerMm(context);
   const placed = layers.map((layer, i) => {
     if (i > 0) inner += context.rules.layerGapMm;
-    const deepest = layer[0]!.diameterMm;
+    const deepest = Math.max(...layer.map((bar) => bar.diameterMm));
     const xs = inLine(columns, layer.length);
     for (let j = 1; j < layer.length; j++)
       clearGapMm = Math.min(
