@@ -1,4 +1,4 @@
-import { useQuery } from '@tanstack/react-query';
+import { useQuery, useQueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
 import { useNavigate, useParams, useSearchParams } from 'react-router-dom';
 import type { Beam, Sweep } from '#shared/contract/records.ts';
@@ -7,9 +7,11 @@ import type { SweepInput } from '#client/src/features/sweep-form/read-sweep-form
 import { sweepDraft } from '#client/src/features/sweep-form/sweep-draft.ts';
 import { firstSweepForm, sweepForm } from '#client/src/features/sweep-form/sweep-form-defaults.ts';
 import { SweepForm } from '#client/src/features/sweep-form/sweep-form.tsx';
-import { sweepQuery, useSaveSweep, useStartRun } from '#client/src/features/sweep-form/sweep-api.ts';
-import { SweepRuns } from '#client/src/features/sweep-form/sweep-runs.tsx';
+import { sweepQuery, useSaveSweep } from '#client/src/features/sweep-form/sweep-api.ts';
+import { useStartRun } from '#client/src/features/sweeps/api.ts';
+import { RunTable } from '#client/src/features/sweeps/run-table.tsx';
 import { paths } from '#client/src/lib/paths.ts';
+import { queryKeys } from '#client/src/lib/query-keys.ts';
 import { useProject } from '#client/src/lib/project-context.ts';
 import { useMay } from '#client/src/lib/reader-context.ts';
 import { Button, ButtonLink } from '#client/src/ui/button.tsx';
@@ -33,6 +35,7 @@ function SweepEditor({ beam, sweep, copyOf }: EditorProps) {
   const project = useProject();
   const mayRun = useMay('run-sweeps');
   const navigate = useNavigate();
+  const client = useQueryClient();
   const { units } = project.designBasis;
   const draftId = sweep?.id ?? `${beam.id} ${copyOf?.id ?? ''}`;
   const stored = () => {
@@ -66,7 +69,11 @@ function SweepEditor({ beam, sweep, copyOf }: EditorProps) {
   const onRun = (input: SweepInput) =>
     void saved(input)
       .then((answer) => run.mutateAsync(answer.id))
-      .then((started) => navigate(paths.run(project.id, started.id)))
+      .then((started) => {
+        client.setQueryData(queryKeys.run(started.id), started);
+        void client.invalidateQueries({ queryKey: queryKeys.sweep(started.sweepId) });
+        return navigate(paths.run(project.id, started.id));
+      })
       .catch(ignoreHere);
 
   return (
@@ -97,7 +104,12 @@ function SweepEditor({ beam, sweep, copyOf }: EditorProps) {
         onSave={onSave}
         onRun={onRun}
       />
-      {sweep !== null && sweep.runs.length > 0 && <SweepRuns projectId={project.id} runs={sweep.runs} />}
+      {sweep !== null && sweep.runs.length > 0 && (
+        <section className="mt-4 border-t border-ink pt-2">
+          <h2 className="pb-2 text-sm font-semibold">Runs of this sweep</h2>
+          <RunTable projectId={project.id} sweepName={sweep.name} runs={sweep.runs} />
+        </section>
+      )}
     </>
   );
 }

@@ -7,9 +7,9 @@ import { formatQuantity } from '#client/src/lib/format-quantity.ts';
 import { quantitiesInText } from '#client/src/lib/quantities-in-text.ts';
 import { sizeText, steelText, stirrupText } from '#client/src/lib/section-text.ts';
 import { SegmentedControl } from '#client/src/ui/segmented-control.tsx';
+import { LimitsNote } from '#client/src/sheet/limits-note.tsx';
 import { CheckList } from './check-list.tsx';
 import { DuctilityNote } from './ductility-note.tsx';
-import { NotChecked } from './not-checked.tsx';
 import { QuantitiesList } from './quantities-list.tsx';
 import { WorkingLines } from './working-lines.tsx';
 
@@ -113,10 +113,8 @@ export function Inspector(props: InspectorProps) {
             <WorkingLines steps={evaluation.working} units={units} digits={digits} />
           </Fold>
         )}
-        <Fold title="Not checked">
-          <NotChecked items={evaluation.notChecked} engineVersion={evaluation.engineVersion} />
-        </Fold>
       </div>
+      <LimitsNote evaluation={evaluation} />
     </article>
   );
 }

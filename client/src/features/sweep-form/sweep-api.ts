@@ -27,15 +27,3 @@ export function useSaveSweep(projectId: string) {
     },
   });
 }
-
-export function useStartRun(projectId: string) {
-  const client = useQueryClient();
-  return useMutation({
-    mutationFn: (sweepId: string) => call('startRun', { params: { id: sweepId }, body: {} }),
-    onSuccess: (run) => {
-      client.setQueryData(queryKeys.run(run.id), run);
-      void client.invalidateQueries({ queryKey: queryKeys.sweep(run.sweepId) });
-      void client.invalidateQueries({ queryKey: queryKeys.sweeps(projectId) });
-    },
-  });
-}

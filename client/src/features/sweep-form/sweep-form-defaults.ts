@@ -3,6 +3,7 @@ import type { Beam, Project, Sweep } from '#shared/contract/records.ts';
 import type { BarStandard } from '#shared/engine/section.ts';
 import { MPA_PER_PSI, MM_PER_IN } from '#shared/engine/units.ts';
 import type { AxisDefinition, SteelSetsDefinition } from '#shared/sweep/problem.ts';
+import { countsText } from '#client/src/lib/counts-text.ts';
 import type { DisplayKind } from '#client/src/lib/units.ts';
 import { AXIS_KIND } from './read-sweep-form.ts';
 import {
@@ -12,7 +13,7 @@ import {
   type SteelValues,
   type SweepFormValues,
 } from './sweep-form-values.ts';
-import { countsText, groupsText, valueListText } from './value-list.ts';
+import { groupsText, valueListText } from './value-list.ts';
 
 /** Ranges a first sweep starts from: common practice for beams of buildings, no source. */
 const FIRST_RANGES: Readonly<Record<UnitSystem, Readonly<Record<'width' | 'depth' | 'fc', AxisValues>>>> = {

@@ -47,18 +47,6 @@ export function parseCounts(text: string): ListReading {
 export const valueListText = (values: readonly number[], kind: DisplayKind, units: UnitSystem): string =>
   values.map((value) => fieldText(value, kind, units)).join(', ');
 
-/** Counts with runs of three and more written as ranges: `2–8, 10`. */
-export function countsText(counts: readonly number[]): string {
-  const ordered = [...new Set(counts)].sort((a, b) => a - b);
-  const runs: number[][] = [];
-  for (const count of ordered) {
-    const run = runs.at(-1);
-    if (run !== undefined && run.at(-1) === count - 1) run.push(count);
-    else runs.push([count]);
-  }
-  return runs.map((run) => (run.length > 2 ? `${run[0]}–${run.at(-1)}` : run.join(', '))).join(', ');
-}
-
 /** Groups read from a line of text, or what is wrong with it. */
 export type GroupsReading =
   | { readonly kind: 'groups'; readonly groups: readonly BarGroup[] }

@@ -1,0 +1,106 @@
+import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import type { AxisCount, EdgeShare } from '#shared/sweep/result.ts';
+import { formatNumber, formatQuantity, formatWhole } from '#client/src/lib/format-quantity.ts';
+import { unitLabel } from '#client/src/lib/units.ts';
+import { rulerMarks } from './axis-ruler-model.ts';
+
+const FRAME = { widthPx: 236, insetPx: 12, barPx: 24, labelPitchPx: 30 } as const;
+const BASE_Y = 30;
+const HEIGHT = 52;
+/** Below this share of the front an end of the range is no matter of concern. */
+const WORTH_TELLING = 0.05;
+
+interface AxisRulerProps {
+  readonly name: string;
+  readonly symbol: string;
+  readonly kind: 'length' | 'stress';
+  readonly units: UnitSystem;
+  readonly counts: readonly AxisCount[];
+  readonly selected: number | null;
+  readonly edges: readonly EdgeShare[];
+}
+
+function edgeWords(edges: readonly EdgeShare[]): string | null {
+  const worst = edges.toSorted((a, b) => b.share - a.share)[0];
+  if (worst === undefined || worst.share < WORTH_TELLING) return null;
+  const end = worst.end === 'low' ? 'lower' : 'upper';
+  return `${formatNumber(worst.share * 100, 2, true)} % of the front at the ${end} end`;
+}
+
+/** One axis drawn as a scale ruler: what share of each value meets every check, and where the chosen section lies. */
+export function AxisRuler({ name, symbol, kind, units, counts, selected, edges }: AxisRulerProps) {
+  const marks = rulerMarks(counts, FRAME);
+  const words = edgeWords(edges);
+  const print = (value: number) => formatQuantity(value, kind, units, { hideUnit: true });
+  const chosen = marks.find((mark) => selected !== null && Math.abs(mark.value - selected) < 1e-6 * selected);
+  const spoken = marks
+    .filter((mark) => mark.isLabelled || mark === chosen)
+    .map((mark) => `${print(mark.value)}: ${formatNumber(mark.share * 100, 2, true)} %`)
+    .join('; ');
+  return (
+    <div>
+      <p className="flex flex-wrap items-baseline gap-x-2">
+        <span className="font-semibold">
+          {name} {symbol}
+        </span>
+        <span className="text-xs text-muted">{unitLabel(kind, units)}</span>
+        {words !== null && <span className="ml-auto text-xs text-near">{words}</span>}
+      </p>
+      <svg
+        viewBox={`0 0 ${FRAME.widthPx} ${HEIGHT}`}
+        className="mt-1 block h-auto w-full max-w-[22rem]"
+        role="img"
+        aria-label={`Share that meets every check by ${name} ${symbol}: ${spoken}`}
+      >
+        {marks.map((mark) => (
+          <g key={mark.value}>
+            <title>
+              {`${print(mark.value)}: ${formatWhole(mark.feasible)} of ${formatWhole(mark.evaluated)} meet every check`}
+            </title>
+            <rect x={mark.xPx - 6} y={0} width={12} height={BASE_Y} fill="transparent" />
+            <rect
+              x={mark.xPx - 2.75}
+              y={BASE_Y - mark.heightPx}
+              width={5.5}
+              height={mark.heightPx}
+              className="fill-meets"
+              opacity={0.6}
+            />
+            <line
+              x1={mark.xPx}
+              x2={mark.xPx}
+              y1={BASE_Y}
+              y2={BASE_Y + (mark.isLabelled ? 7 : 4)}
+              className="stroke-ink"
+            />
+            {mark.isLabelled && (
+              <text
+                x={mark.xPx}
+                y={BASE_Y + 19}
+                textAnchor="middle"
+                className={`font-mono text-[11px] ${mark === chosen ? 'fill-ink font-semibold' : 'fill-muted'}`}
+              >
+                {print(mark.value)}
+              </text>
+            )}
+          </g>
+        ))}
+        <line
+          x1={2}
+          x2={FRAME.widthPx - 2}
+          y1={BASE_Y}
+          y2={BASE_Y}
+          className="stroke-ink"
+          strokeWidth={1.3}
+        />
+        {chosen !== undefined && (
+          <path
+            d={`M ${chosen.xPx - 5} ${BASE_Y - 9} h 10 l -5 8.5 z`}
+            className="fill-steel stroke-paper"
+            strokeWidth={1}
+          />
+        )}
+      </svg>
+    </div>
+  );
+}

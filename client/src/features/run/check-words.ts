@@ -1,0 +1,23 @@
+import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
+import type { CheckId } from '#shared/engine/evaluation.ts';
+import { checkLabel } from '#client/src/lib/check-labels.ts';
+import { formatQuantity } from '#client/src/lib/format-quantity.ts';
+
+/** What a check asks for in this run, short enough for a sentence: `μφ ≥ 6`, `h ≤ 28 in`, `the bar fit`. */
+export function checkWords(
+  check: CheckId,
+  { demand, rules }: Pick<SweepDefinition, 'demand' | 'rules'>,
+  units: UnitSystem,
+): string {
+  const length = (mm: number) => formatQuantity(mm, 'length', units);
+  if (check === 'strength' && demand.muNmm !== null)
+    return `φMn ≥ ${formatQuantity(demand.muNmm, 'moment', units)}`;
+  if (check === 'curvature-ductility' && demand.ductilityTarget !== null)
+    return `μφ ≥ ${formatQuantity(demand.ductilityTarget, 'count', units)}`;
+  if (check === 'depth-cap' && demand.depthCapMm !== null) return `h ≤ ${length(demand.depthCapMm)}`;
+  if (check === 'column-width' && rules.columnWidthMm !== null) return `b = ${length(rules.columnWidthMm)}`;
+  if (check === 'compression-share' && rules.minCompressionShare !== null)
+    return `A′s ≥ ${formatQuantity(rules.minCompressionShare, 'percent', units)} of As`;
+  return `the ${checkLabel(check).name.toLowerCase()}`;
+}

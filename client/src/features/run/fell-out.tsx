@@ -1,0 +1,96 @@
+import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
+import type { ViewResult } from '#shared/sweep/result.ts';
+import { checkLabel } from '#client/src/lib/check-labels.ts';
+import { formatNumber, formatWhole } from '#client/src/lib/format-quantity.ts';
+import { checkWords } from './check-words.ts';
+import { measureDifferenceText, measureText, type MeasureReader } from './measure-text.ts';
+import { pricesOfChecks } from './price-of-checks.ts';
+
+interface FellOutProps {
+  readonly result: ViewResult;
+  readonly definition: SweepDefinition;
+  readonly reader: MeasureReader;
+  readonly onSelect: (index: number) => void;
+}
+
+/** Why the rest fell out: one section may fail several checks, so the shares overlap. */
+function Shares({ result }: { readonly result: ViewResult }) {
+  const rows = result.failures.filter(({ failed }) => failed > 0).toSorted((a, b) => b.failed - a.failed);
+  const most = rows[0]?.failed ?? 1;
+  if (rows.length === 0)
+    return <p className="text-sm text-muted">Nothing: every section meets every check.</p>;
+  return (
+    <table className="w-full text-sm" aria-label="Checks by the share of sections that fail them">
+      <thead className="sr-only">
+        <tr>
+          <th scope="col">Check</th>
+          <th scope="col">Share that fails it</th>
+          <th scope="col">Fail nothing else</th>
+        </tr>
+      </thead>
+      <tbody>
+        {rows.map(({ check, failed, failedOnlyThis }) => (
+          <tr key={check} className="align-baseline">
+            <th scope="row" className="py-0.5 text-left font-normal">
+              {checkLabel(check).name}
+              {failedOnlyThis > 0 && (
+                <span className="block text-xs text-muted">
+                  alone <span className="num">{formatWhole(failedOnlyThis)}</span>
+                </span>
+              )}
+            </th>
+            <td className="w-[38%] py-0.5 pl-2">
+              <span className="flex items-center gap-2">
+                <span className="min-w-0 flex-1" aria-hidden="true">
+                  <span
+                    className="hatched block h-2.5 border border-concrete-edge"
+                    style={{ width: `${(failed / most) * 100}%` }}
+                  />
+                </span>
+                <span className="num w-14 text-right">
+                  {formatNumber((failed / result.evaluated) * 100, 3, true)} %
+                </span>
+              </span>
+            </td>
+          </tr>
+        ))}
+      </tbody>
+    </table>
+  );
+}
+
+/** What was asked in vain or at a price, check by check. */
+export function FellOut({ result, definition, reader, onSelect }: FellOutProps) {
+  const prices = pricesOfChecks(result);
+  const { x } = result.view;
+  return (
+    <section className="border-t border-rule pt-3">
+      <h2 className="pb-1.5 text-xs font-semibold text-muted">Why the rest fell out</h2>
+      <Shares result={result} />
+      {prices.length > 0 && (
+        <ul className="mt-3 grid gap-1.5 text-sm text-muted">
+          {prices.map(({ check, index, without, difference }) => (
+            <li key={check}>
+              Without {checkWords(check, definition, reader.units)} the best would be{' '}
+              <button
+                type="button"
+                className="num text-ink underline decoration-concrete-edge hover:decoration-current"
+                onClick={() => onSelect(index)}
+                title="Look at that section"
+              >
+                {measureText(x, without, reader)}
+              </button>
+              {difference !== null && (
+                <>
+                  {' '}
+                  (<span className="num">{measureDifferenceText(x, difference, reader.units)}</span>)
+                </>
+              )}
+              .
+            </li>
+          ))}
+        </ul>
+      )}
+    </section>
+  );
+}

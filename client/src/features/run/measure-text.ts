@@ -1,0 +1,52 @@
+import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import type { MeasureId } from '#shared/engine/measures.ts';
+import {
+  formatDifference,
+  formatMoney,
+  formatNumber,
+  formatQuantity,
+} from '#client/src/lib/format-quantity.ts';
+import { measureLabel } from '#client/src/lib/measure-labels.ts';
+import { displayUnit } from '#client/src/lib/units.ts';
+import type { ChartAxis } from '#client/src/charts/front-chart-input.ts';
+
+export interface MeasureReader {
+  readonly units: UnitSystem;
+  readonly currency: string | null;
+}
+
+/** One measure's value as a reader meets it: `18.9 lb/ft`, `USD 99.2/ft`, `6.02`. */
+export function measureText(
+  measure: MeasureId,
+  value: number | null,
+  reader: MeasureReader,
+  hideUnit = false,
+): string {
+  const { kind } = measureLabel(measure, reader.units);
+  if (kind === 'money-per-length' && !hideUnit)
+    return formatMoney(value, reader.currency, kind, reader.units);
+  return formatQuantity(value, kind, reader.units, { hideUnit });
+}
+
+/** A difference in the measure's own unit, signed. */
+export function measureDifferenceText(measure: MeasureId, difference: number, units: UnitSystem): string {
+  return formatDifference(difference, measureLabel(measure, units).kind, units, { hideUnit: true });
+}
+
+const unitText = (measure: MeasureId, { units, currency }: MeasureReader): string => {
+  const label = measureLabel(measure, units);
+  return label.kind === 'money-per-length' ? `${currency ?? ''}${label.unit}` : label.unit;
+};
+
+/** The measure as an axis of the chart. */
+export function chartAxis(measure: MeasureId, reader: MeasureReader): ChartAxis {
+  const label = measureLabel(measure, reader.units);
+  const isNamed = label.symbol === label.name || label.kind === 'co2e-per-length';
+  return {
+    title: isNamed ? label.name : `${label.name} ${label.symbol}`,
+    unit: unitText(measure, reader),
+    direction: label.better,
+    perSi: 1 / displayUnit(label.kind, reader.units).perUnit,
+    formatTick: (shown) => formatNumber(shown, 6, true),
+  };
+}

@@ -1,0 +1,76 @@
+import type { ReactNode } from 'react';
+import type { Run, ViewProgress } from '#shared/contract/records.ts';
+import { formatDuration, formatNumber, formatWhole } from '#client/src/lib/format-quantity.ts';
+import { runStateLabel } from '#client/src/lib/state-labels.ts';
+import { Button } from '#client/src/ui/button.tsx';
+import { StateTag } from '#client/src/ui/state-tag.tsx';
+import { isUnderWay, paceOf } from './view-progress.ts';
+
+interface RunHeadProps {
+  readonly run: Run;
+  readonly progress: ViewProgress | null;
+  readonly mayStop: boolean;
+  readonly isStopping: boolean;
+  readonly onStop: () => void;
+  readonly actions: ReactNode;
+}
+
+function progressWords(progress: ViewProgress): string {
+  const { perSecond, leftMs } = paceOf(progress);
+  const done = `${formatWhole(progress.evaluated)} of ${formatWhole(progress.sectionCount)}`;
+  if (progress.state === 'queued') return 'Waiting for a free thread';
+  if (perSecond === null || leftMs === null) return `${done} evaluated`;
+  return `${done} evaluated, ${formatNumber(perSecond / 1e6, 2)} million a second, ${formatDuration(leftMs)} left`;
+}
+
+function stateWords(progress: ViewProgress): string | null {
+  if (progress.state === 'cancelled')
+    return `cancelled: ${formatWhole(progress.evaluated)} of ${formatWhole(progress.sectionCount)} evaluated`;
+  if (progress.state === 'failed') return progress.message ?? 'The run broke off.';
+  return null;
+}
+
+/** What is run, how far it is, and the way to stop it. The rule below fills with the share that is done. */
+export function RunHead({ run, progress, mayStop, isStopping, onStop, actions }: RunHeadProps) {
+  const state = progress?.state ?? run.state;
+  const isLive = isUnderWay(state);
+  const share = progress === null || !isLive ? 0 : paceOf(progress).share;
+  const words = progress === null ? null : isLive ? progressWords(progress) : stateWords(progress);
+  return (
+    <header className="relative border-b border-rule">
+      <div className="flex min-h-13 flex-wrap items-center gap-x-5 gap-y-1 px-4 py-2 sm:px-5">
+        <h1 className="text-lg font-semibold">
+          {run.beam.mark}
+          {run.beam.location !== '' && <span className="font-normal text-muted"> {run.beam.location}</span>}
+        </h1>
+        <p className="min-w-0 truncate text-muted">
+          {run.sweepName}, run {run.number}
+        </p>
+        <StateTag {...runStateLabel(state)} />
+        <p className="num min-w-0 text-sm text-muted" role="status">
+          {words}
+        </p>
+        <div className="ml-auto flex items-center gap-3">
+          {isLive && mayStop && (
+            <Button onClick={onStop} isBusy={isStopping}>
+              Cancel
+            </Button>
+          )}
+          {actions}
+        </div>
+      </div>
+      {isLive && (
+        <div
+          role="progressbar"
+          aria-label="Sections evaluated"
+          aria-valuemin={0}
+          aria-valuemax={100}
+          aria-valuenow={Math.round(share * 100)}
+          className="absolute inset-x-0 -bottom-px h-[3px]"
+        >
+          <div className="h-full bg-steel-solid" style={{ width: `${share * 100}%` }} />
+        </div>
+      )}
+    </header>
+  );
+}

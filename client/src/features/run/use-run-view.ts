@@ -1,0 +1,44 @@
+import { useMemo } from 'react';
+import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import type { Run } from '#shared/contract/records.ts';
+import { useCancelRun, useRunEvents, useView } from './run-api.ts';
+import { createSectionSource, type SectionSource } from './section-source.ts';
+import { useRunAddress } from './use-run-address.ts';
+import { isUnderWay } from './view-progress.ts';
+
+/** A section someone asked for by its number, or the best one; a number outside the space is as if not given. */
+function chosenIndex(source: SectionSource, asked: number | null, best: number | undefined): number | null {
+  if (asked !== null && asked < source.size) return asked;
+  return best ?? null;
+}
+
+/** Everything a run's page shows, from the address, the service and the engine. */
+export function useRunView(run: Run, units: UnitSystem) {
+  const address = useRunAddress(run.definition.view);
+  const view = useMemo(() => ({ x: address.view.x, y: address.view.y }), [address.view.x, address.view.y]);
+  const { definition, basis } = run;
+  const source = useMemo(() => createSectionSource({ definition, basis }), [definition, basis]);
+  const query = useView(run, view);
+  const progress = query.data ?? null;
+  const isLive = isUnderWay(progress?.state ?? run.state);
+  useRunEvents(run.id, isLive);
+  const cancel = useCancelRun(run.id);
+  const reader = useMemo(() => ({ units, currency: basis.rates?.currency ?? null }), [units, basis.rates]);
+
+  const result = progress?.result ?? null;
+  const index = chosenIndex(source, address.index, result?.front[0]?.index);
+  const selected = useMemo(() => (index === null ? null : source.evaluatedAt(index)), [source, index]);
+  return {
+    address,
+    view,
+    source,
+    reader,
+    progress,
+    result,
+    selected,
+    isLive,
+    cancel,
+    error: query.error,
+    retry: () => void query.refetch(),
+  };
+}
