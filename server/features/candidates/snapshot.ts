@@ -26,13 +26,14 @@ export function hashSnapshot(snapshot: Snapshot): string {
   return createHash('sha256').update(canonicalJson(snapshot)).digest('hex');
 }
 
-export function canonicalJson(value: unknown): string {
-  return JSON.stringify(value, (_key, entry: unknown) =>
-    typeof entry === 'object' && entry !== null && !Array.isArray(entry)
-      ? Object.fromEntries(Object.entries(entry).sort(([a], [b]) => (a < b ? -1 : 1)))
-      : entry,
-  );
+function canonicalJson(value: unknown): string {
+  return JSON.stringify(value, (_key, entry: unknown) => sortKeys(entry));
 }
+
+const sortKeys = (entry: unknown): unknown =>
+  typeof entry === 'object' && entry !== null && !Array.isArray(entry)
+    ? Object.fromEntries(Object.entries(entry).sort(([a], [b]) => (a < b ? -1 : 1)))
+    : entry;
 
 /** Whether today's engine gives the frozen numbers, to the last digit. Wording and version may differ. */
 export function isReproduced(snapshot: Snapshot): boolean {
@@ -44,4 +45,4 @@ export function isReproduced(snapshot: Snapshot): boolean {
 }
 
 const numbersOf = (value: unknown): string =>
-  canonicalJson(value).replaceAll(/(?<=[:[,])"(?:[^"\\]|\\.)*"(?!:)/g, '""');
+  JSON.stringify(value, (_key, entry: unknown) => (typeof entry === 'string' ? '' : sortKeys(entry)));

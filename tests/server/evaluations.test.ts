@@ -1,0 +1,92 @@
+import { afterAll, beforeAll, expect, test } from 'vitest';
+import { evaluateSection } from '#shared/engine/evaluate.ts';
+import type { DesignBasis, SectionInput } from '#shared/engine/section.ts';
+import {
+  addProject,
+  DESIGN_BASIS,
+  PRICE_BOOK,
+  SMALL_SWEEP,
+  type OfficeProject,
+} from '../support/office-project.ts';
+import { openTestOffice, type TestOffice } from '../support/test-office.ts';
+
+let office: TestOffice;
+let project: OfficeProject;
+
+beforeAll(async () => {
+  office = await openTestOffice();
+  project = await addProject(office);
+});
+afterAll(() => office.close());
+
+const { demand, rules } = SMALL_SWEEP;
+const SECTION: SectionInput = {
+  widthMm: 300,
+  depthMm: 600,
+  fcMPa: 28,
+  fyMPa: 420,
+  coverMm: 40,
+  stirrup: null,
+  reinforcement: {
+    kind: 'layers',
+    layers: [
+      { depthMm: 60, areaMm2: 600, face: 'compression' },
+      { depthMm: 540, areaMm2: 2000, face: 'tension' },
+    ],
+  },
+};
+
+async function evaluate(body: object) {
+  const engineer = await office.as('engineer');
+  return engineer.post(`/projects/${project.projectId}/evaluations`, {
+    section: SECTION,
+    demand,
+    rules,
+    basis: {},
+    ...body,
+  });
+}
+
+test('a typed section is judged on the project’s basis and rates', async () => {
+  const { source: _source, ...rates } = PRICE_BOOK;
+  const { units: _units, fyMPa: _fy, fytMPa: _fyt, coverMm: _cover, ...engineBasis } = DESIGN_BASIS;
+  const basis: DesignBasis = { ...engineBasis, rates };
+  const answer = await evaluate({});
+  expect(answer.status).toBe(200);
+  const expected = evaluateSection(SECTION, { basis, demand, rules });
+  expect(answer.body).toEqual(JSON.parse(JSON.stringify({ section: SECTION, evaluation: expected })));
+  expect(expected.quantities.cost!.total).toBeGreaterThan(0);
+});
+
+test('one evaluation may use other conventions than the project', async () => {
+  const answer = await evaluate({ basis: { ruleSet: 'aci318-14', displacedConcrete: 'ignore' } });
+  expect(answer.body.evaluation).toMatchObject({
+    ruleSet: { id: 'aci318-14' },
+    conventions: { displacedConcrete: 'ignore', yieldCurvatureAt: DESIGN_BASIS.yieldCurvatureAt },
+  });
+});
+
+test('what is no section is refused at its field', async () => {
+  const layer = { depthMm: 700, areaMm2: 500, face: 'tension' };
+  const outside = await evaluate({
+    section: { ...SECTION, reinforcement: { kind: 'layers', layers: [layer] } },
+  });
+  expect(outside.status).toBe(400);
+  expect(outside.body.error.issues[0].path).toEqual(['section', 'reinforcement', 'layers', 0, 'depthMm']);
+  const bars = { kind: 'bars', tension: [{ bar: '25M', count: 3 }], compression: [] };
+  const unknown = await evaluate({ section: { ...SECTION, reinforcement: bars } });
+  expect(unknown.status).toBe(400);
+  expect(unknown.body.error.issues[0].path.slice(0, 3)).toEqual(['section', 'reinforcement', 'tension']);
+  expect(unknown.body.error.issues[0].message).toContain('25M');
+  for (const widthMm of [-300, null, '300', 1e9])
+    expect((await evaluate({ section: { ...SECTION, widthMm } })).body.error.issues[0].path).toEqual([
+      'section',
+      'widthMm',
+    ]);
+});
+
+test('nobody evaluates on a project that is not theirs', async () => {
+  const outsider = await office.as('outsider');
+  const body = { section: SECTION, demand, rules, basis: {} };
+  await outsider.post(`/projects/${project.projectId}/evaluations`, body).expect(404);
+});
