@@ -1,0 +1,195 @@
+import fc from 'fast-check';
+import { describe, expect, it } from 'vitest';
+import { CHECK_IDS } from '#shared/engine/evaluation.ts';
+import { evaluateSection } from '#shared/engine/evaluate.ts';
+import { MEASURE_DIRECTION } from '#shared/engine/measures.ts';
+import { BAND_SHARE } from '#shared/sweep/band.ts';
+import { countCannotFit } from '#shared/sweep/cannot-fit.ts';
+import { finishResult } from '#shared/sweep/finish.ts';
+import { nonDominated } from '#shared/sweep/front.ts';
+import { prepareSweep } from '#shared/sweep/prepared-sweep.ts';
+import type { SweepProblem, View } from '#shared/sweep/problem.ts';
+import { sectionAt, spaceSize } from '#shared/sweep/space.ts';
+import { sweepRange } from '#shared/sweep/sweep-range.ts';
+import { remeasure } from '../engine/remeasure.ts';
+import { OFFICE_PROBLEM, OFFICE_SIZE } from './office-problem.ts';
+import { randomProblem } from './random-problems.ts';
+
+const VIEW: View = { x: 'steelKgPerM', y: 'curvatureDuctility' };
+
+function run(problem: SweepProblem, view: View = VIEW) {
+  const prepared = prepareSweep(problem, view);
+  return {
+    space: prepared.space,
+    result: finishResult(problem, view, sweepRange(prepared, 0, prepared.space.size)),
+  };
+}
+
+const sum = (counts: readonly { readonly count: number }[]) =>
+  counts.reduce((total, { count }) => total + count, 0);
+
+describe('the result of a sweep', () => {
+  it('counts, front, band, best values, density and misses are those of evaluating every section by itself', () => {
+    fc.assert(
+      fc.property(randomProblem, (problem) => {
+        const { space, result } = run(problem);
+        const all = Array.from({ length: space.size }, (_, index) => {
+          const { checks, flexure, measures } = evaluateSection(sectionAt(space, index), problem);
+          const failed = checks.filter((check) => !check.passes).map((check) => check.id);
+          return {
+            index,
+            failed,
+            hasNumbers: flexure !== null,
+            measures,
+            x: measures.steelKgPerM!,
+            y: measures.curvatureDuctility!,
+          };
+        });
+        const feasible = all.filter((s) => s.failed.length === 0 && s.hasNumbers);
+        expect(result.evaluated).toBe(space.size);
+        expect(result.feasible).toBe(feasible.length);
+        expect(result.front).toEqual(nonDominated(feasible, { x: 1, y: -1 }));
+        expect(sum(result.density)).toBe(feasible.length);
+        for (const axis of ['width', 'depth', 'fc'] as const)
+          expect(result.axisCounts[axis].reduce((n, c) => n + c.feasible, 0)).toBe(feasible.length);
+        for (const failure of result.failures) {
+          const failing = all.filter((s) => s.failed.includes(failure.check));
+          const only = failing.filter((s) => s.failed.length === 1);
+          expect([failure.failed, failure.failedOnlyThis]).toEqual([failing.length, only.length]);
+          const best = only.filter((s) => s.hasNumbers).sort((a, b) => a.x - b.x || a.index - b.index)[0];
+          expect(failure.bestWithout).toEqual(best ? { index: best.index, x: best.x, y: best.y } : null);
+        }
+        const lightest = Math.min(...feasible.map((s) => s.x));
+        const near = feasible
+          .filter((s) => s.x <= lightest + BAND_SHARE * lightest)
+          .sort((a, b) => a.x - b.x || a.index - b.index);
+        expect(result.band).toEqual(near.map(({ index, x, y }) => ({ index, x, y })));
+        for (const { measure, index, value } of result.best) {
+          const sign = MEASURE_DIRECTION[measure] === 'less' ? 1 : -1;
+          const values = feasible.map((s) => s.measures[measure]!);
+          expect(value).toBe(sign * Math.min(...values.map((v) => sign * v)));
+          expect(index).toBe(feasible[values.indexOf(value)]!.index);
+        }
+      }),
+      { numRuns: 100, seed: 31 },
+    );
+  }, 60_000);
+
+  it('counts the sections that cannot fit without evaluating them', () => {
+    fc.assert(
+      fc.property(randomProblem, (problem) => {
+        fc.pre(problem.space.tension.kind === 'bars');
+        expect(countCannotFit(problem)).toBe(run(problem).result.cannotFit);
+      }),
+      { numRuns: 100, seed: 32 },
+    );
+  });
+});
+
+describe('a sweep an office would run', () => {
+  const { space, result } = run(OFFICE_PROBLEM);
+
+  it('has at least 200,000 sections and a front', () => {
+    expect(OFFICE_SIZE).toBeGreaterThanOrEqual(200_000);
+    expect(result.feasible).toBeGreaterThan(1000);
+    expect(result.front.length).toBeGreaterThan(5);
+  });
+
+  it('has a front whose every section re-evaluates to the same numbers, meets every check, and fits by re-measuring', () => {
+    for (const { index, x, y } of result.front) {
+      const section = sectionAt(space, index);
+      const evaluation = evaluateSection(section, OFFICE_PROBLEM);
+      expect(evaluation.measures.steelKgPerM).toBe(x);
+      expect(evaluation.measures.curvatureDuctility).toBe(y);
+      expect(evaluation.meetsListedChecks).toBe(true);
+      expect(y).toBeGreaterThanOrEqual(6);
+      expect(evaluation.flexure!.designMomentNmm).toBeGreaterThanOrEqual(300e6);
+      expect(remeasure(section, OFFICE_PROBLEM.basis, evaluation.arrangement!)).toEqual([]);
+    }
+  });
+
+  it('says what each check costs: the best section failing only that check, or none better', () => {
+    const capped = { ...OFFICE_PROBLEM, demand: { ...OFFICE_PROBLEM.demand, depthCapMm: 550 } };
+    const { failures, front } = run(capped).result;
+    const without = (check: string) => failures.find((f) => f.check === check)!.bestWithout!.x;
+    const best = front[0]!.x;
+    const uncapped = result.front[0]!.x;
+    expect(without('depth-cap')).toBe(uncapped);
+    expect(uncapped).toBeLessThan(best);
+    const untargeted = run({ ...capped, demand: { ...capped.demand, ductilityTarget: null } }).result
+      .front[0]!.x;
+    expect(Math.min(without('curvature-ductility'), best)).toBe(untargeted);
+  });
+});
+
+describe('degenerate sweeps', () => {
+  const changed = (change: Partial<SweepProblem>): SweepProblem => ({ ...OFFICE_PROBLEM, ...change });
+  const narrow = { ...OFFICE_PROBLEM.space, width: { kind: 'list' as const, values: [120] } };
+
+  it('nothing fits: every section counts as bar fit and the front is empty', () => {
+    const { result } = run(changed({ space: narrow }));
+    expect([result.feasible, result.front.length, result.band.length, result.density.length]).toEqual([
+      0, 0, 0, 0,
+    ]);
+    expect(result.cannotFit).toBe(spaceSize(narrow));
+  });
+
+  it('nothing is feasible: the failures say why', () => {
+    const { result } = run(changed({ demand: { ...OFFICE_PROBLEM.demand, muNmm: 9e10 } }));
+    expect(result.feasible).toBe(0);
+    expect(result.failures.find((f) => f.check === 'strength')!.failed).toBe(
+      result.evaluated - result.cannotFit,
+    );
+    expect(result.best).toEqual([]);
+  });
+
+  it('everything is feasible: no check fails', () => {
+    const space = {
+      ...OFFICE_PROBLEM.space,
+      width: { kind: 'list' as const, values: [400] },
+      tension: { kind: 'bars' as const, sizes: ['20'], counts: [4, 6], none: false },
+      compression: { kind: 'bars' as const, sizes: ['16'], counts: [2], none: false },
+    };
+    const { result } = run(changed({ space, demand: { muNmm: 0, ductilityTarget: null, depthCapMm: null } }));
+    expect(result.feasible).toBe(result.evaluated);
+    expect(result.failures.every((f) => f.failed === 0 && f.bestWithout === null)).toBe(true);
+  });
+
+  it('Mu = 0 asks for nothing and utilisation is zero', () => {
+    const view: View = { x: 'utilisation', y: 'steelKgPerM' };
+    const { result } = run(changed({ demand: { muNmm: 0, ductilityTarget: 6, depthCapMm: null } }), view);
+    expect(result.front).toHaveLength(1);
+    expect(result.front[0]!.x).toBe(0);
+    expect(sum(result.density)).toBe(result.feasible);
+  });
+
+  it('a missing rate leaves cost without a front, never at zero', () => {
+    const rates = { ...OFFICE_PROBLEM.basis.rates!, formworkPerM2: null };
+    const { result } = run(changed({ basis: { ...OFFICE_PROBLEM.basis, rates } }), {
+      x: 'costPerM',
+      y: 'steelKgPerM',
+    });
+    expect(result.feasible).toBeGreaterThan(0);
+    expect(result.front).toEqual([]);
+    expect(result.best.some((b) => b.measure === 'costPerM')).toBe(false);
+  });
+
+  it.each([
+    ['from above to', { width: { kind: 'range', from: 500, to: 300, step: 50 } }, ['width', 'to']],
+    ['a zero step', { depth: { kind: 'range', from: 300, to: 500, step: 0 } }, ['depth', 'step']],
+    ['an empty list', { fc: { kind: 'list', values: [] } }, ['fc', 'values']],
+    ['no bars', { tension: { kind: 'bars', sizes: [], counts: [2], none: false } }, ['tension', 'sizes']],
+    [
+      'an unknown bar',
+      { compression: { kind: 'bars', sizes: ['#8'], counts: [2], none: false } },
+      ['compression', 'sizes', 0],
+    ],
+  ] as const)('%s is refused at its place', (_, change, path) => {
+    const problem = changed({ space: { ...OFFICE_PROBLEM.space, ...(change as object) } });
+    expect(() => prepareSweep(problem, VIEW)).toThrow(expect.objectContaining({ path }) as Error);
+  });
+
+  it('every failed check of the result is one of the listed checks', () => {
+    expect(run(OFFICE_PROBLEM).result.failures.map((f) => f.check)).toEqual([...CHECK_IDS]);
+  });
+});
