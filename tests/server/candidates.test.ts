@@ -6,7 +6,8 @@ import type { Candidate, CandidateState, Run } from '#shared/contract/records.ts
 import type { SectionInput } from '#shared/engine/section.ts';
 import { addProject, DESIGN_BASIS, SMALL_SWEEP, type OfficeProject } from '../support/office-project.ts';
 import { followRun, hasEnded } from '../support/run-stream.ts';
-import { openTestOffice, type Account, type TestOffice } from '../support/test-office.ts';
+import type { Account, TestOffice } from '../support/office.ts';
+import { openTestOffice } from '../support/test-office.ts';
 
 let office: TestOffice;
 let project: OfficeProject;

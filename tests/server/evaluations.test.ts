@@ -8,7 +8,8 @@ import {
   SMALL_SWEEP,
   type OfficeProject,
 } from '../support/office-project.ts';
-import { openTestOffice, type TestOffice } from '../support/test-office.ts';
+import type { TestOffice } from '../support/office.ts';
+import { openTestOffice } from '../support/test-office.ts';
 
 let office: TestOffice;
 let project: OfficeProject;

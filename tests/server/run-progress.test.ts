@@ -3,7 +3,8 @@ import type { Run, ViewProgress } from '#shared/contract/records.ts';
 import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
 import { addProject, scaledSweep, SMALL_SWEEP, type OfficeProject } from '../support/office-project.ts';
 import { followRun, hasEnded } from '../support/run-stream.ts';
-import { openTestOffice, type SignedIn, type TestOffice } from '../support/test-office.ts';
+import type { SignedIn, TestOffice } from '../support/office.ts';
+import { openTestOffice } from '../support/test-office.ts';
 
 /** Some 7 s of work on two threads: long enough to be cancelled in the middle on any machine. */
 const LONG_SWEEP = scaledSweep(400, 1801);

@@ -8,7 +8,8 @@ import { prepareSweep } from '#shared/sweep/prepared-sweep.ts';
 import { sweepRange } from '#shared/sweep/sweep-range.ts';
 import { addProject, SMALL_SWEEP, type OfficeProject } from '../support/office-project.ts';
 import { followRun, hasEnded } from '../support/run-stream.ts';
-import { openTestOffice, type SignedIn, type TestOffice } from '../support/test-office.ts';
+import type { SignedIn, TestOffice } from '../support/office.ts';
+import { openTestOffice } from '../support/test-office.ts';
 
 let office: TestOffice;
 let project: OfficeProject;

@@ -6,7 +6,7 @@ import type { Deps } from '#server/deps.ts';
 import type { PriceBook, ProjectDesignBasis } from '#shared/contract/design-basis.ts';
 import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
 import { NMM_PER_KNM } from '#shared/engine/units.ts';
-import type { Account, TestOffice } from './test-office.ts';
+import type { Account, TestOffice } from './office.ts';
 
 /** Rates with digits that stand out in any text. */
 export const PRICE_BOOK: PriceBook = {

@@ -1,6 +1,6 @@
 import { get, type IncomingMessage } from 'node:http';
 import type { ViewProgress } from '#shared/contract/records.ts';
-import type { SignedIn, TestOffice } from './test-office.ts';
+import type { SignedIn, TestOffice } from './office.ts';
 
 export interface RunEvent {
   readonly id: number;

@@ -1,0 +1,111 @@
+import { once } from 'node:events';
+import type { AddressInfo } from 'node:net';
+import supertest from 'supertest';
+import { buildApp } from '#server/app.ts';
+import { readConfig } from '#server/config.ts';
+import type { Database } from '#server/db/client.ts';
+import { people } from '#server/db/schema/people.ts';
+import { startServices } from '#server/services.ts';
+import type { Deps } from '#server/deps.ts';
+import { ROLES, type Role } from '#shared/contract/records.ts';
+import type { TestDatabase } from './test-database.ts';
+
+const PASSWORD = 'correct horse battery';
+
+/** One person per role, and an engineer who is on nobody's project. */
+const ACCOUNTS = [...ROLES, 'outsider'] as const;
+export type Account = (typeof ACCOUNTS)[number];
+const roleOf = (account: Account): Role => (account === 'outsider' ? 'engineer' : account);
+
+/** The whole service on a database of its own: real queue, real threads, a real port. */
+export interface TestOffice {
+  readonly deps: Deps;
+  readonly databaseUrl: string;
+  readonly origin: string;
+  readonly idOf: (account: Account) => string;
+  /** A browser's worth of session: cookies and CSRF token. Signed in once per account, then shared. */
+  readonly as: (account: Account) => Promise<SignedIn>;
+  close(): Promise<void>;
+}
+
+export interface SignedIn {
+  readonly cookie: string;
+  get(path: string): supertest.Test;
+  post(path: string, body?: object): supertest.Test;
+  put(path: string, body: object): supertest.Test;
+}
+
+export const testEnvironment = (databaseUrl: string): NodeJS.ProcessEnv => ({
+  NODE_ENV: 'test',
+  DATABASE_URL: databaseUrl,
+  SESSION_SECRET: 'a secret of the tests, long enough to be one',
+  COMPUTE_THREADS: '2',
+  API_REQUESTS_PER_MINUTE: '1000000',
+});
+
+/** Takes the database over: closing the office drops it. */
+export async function openOffice(
+  database: TestDatabase,
+  environment: NodeJS.ProcessEnv = {},
+): Promise<TestOffice> {
+  const services = await startServices(readConfig({ ...testEnvironment(database.url), ...environment }));
+  const server = buildApp(services.deps).listen(0, '127.0.0.1');
+  await once(server, 'listening');
+  const origin = `http://127.0.0.1:${(server.address() as AddressInfo).port}`;
+  const ids = await insertPeople(services.deps.db, await services.deps.passwords.hash(PASSWORD));
+  const sessions = new Map<Account, Promise<SignedIn>>();
+  return {
+    deps: services.deps,
+    databaseUrl: database.url,
+    origin,
+    idOf: (account) => ids.get(account)!,
+    as: (account) => {
+      const session = sessions.get(account) ?? signIn(origin, account);
+      sessions.set(account, session);
+      return session;
+    },
+    close: async () => {
+      services.endStreams();
+      server.closeAllConnections();
+      await new Promise((resolve) => server.close(resolve));
+      await services.stop();
+      await database.drop();
+    },
+  };
+}
+
+export async function insertPeople(db: Database, passwordHash: string): Promise<Map<Account, string>> {
+  const rows = await db
+    .insert(people)
+    .values(
+      ACCOUNTS.map((account) => ({
+        name: `The ${account}`,
+        email: `${account}@office.example`,
+        role: roleOf(account),
+        passwordHash,
+      })),
+    )
+    .returning({ id: people.id });
+  return new Map(ACCOUNTS.map((account, i) => [account, rows[i]!.id]));
+}
+
+async function signIn(origin: string, account: Account): Promise<SignedIn> {
+  const agent = supertest.agent(origin);
+  const before = await agent.get('/api/session').expect(200);
+  const answer = await agent
+    .post('/api/session')
+    .set('x-csrf-token', before.body.csrfToken)
+    .send({ email: `${account}@office.example`, password: PASSWORD })
+    .expect(200);
+  const token: string = answer.body.csrfToken;
+  const cookie = [answer.get('set-cookie') ?? []]
+    .flat()
+    .map((line) => line.split(';')[0])
+    .join('; ');
+  return {
+    cookie,
+    get: (path) => agent.get(`/api${path}`),
+    post: (path, body = {}) => agent.post(`/api${path}`).set('x-csrf-token', token).send(body),
+    put: (path, body) => agent.put(`/api${path}`).set('x-csrf-token', token).send(body),
+  };
+}
