@@ -159,7 +159,7 @@ describe('broken preconditions throw and name the value', () => {
   ] as const)('%s', (_, section, path, value) => {
     let thrown: unknown;
     try {
-      evaluateSection(section as SectionInput, context);
+      evaluateSection(section, context);
     } catch (error) {
       thrown = error;
     }

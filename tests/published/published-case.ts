@@ -62,9 +62,7 @@ export interface Comparison {
 
 /** Printed values a case leaves out on purpose are null. */
 function compareOne(
-  published: PublishedCase,
-  name: string,
-  key: string,
+  { published, name, key }: { published: PublishedCase; name: string; key: string },
   printed: number,
   computed: number,
 ): Comparison {
@@ -83,7 +81,7 @@ export function compare(
   const walk = (name: string, key: string, printed: CaseValue, ours: CaseValue | undefined): Comparison[] => {
     if (printed === null) return [];
     if (typeof printed === 'number')
-      return [compareOne(published, name, key, printed, typeof ours === 'number' ? ours : NaN)];
+      return [compareOne({ published, name, key }, printed, typeof ours === 'number' ? ours : NaN)];
     if (Array.isArray(printed))
       return printed.flatMap((item: CaseValue, i) =>
         walk(`${name}[${i}]`, key, item, (ours as readonly CaseValue[] | undefined)?.[i]),
