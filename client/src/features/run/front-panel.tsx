@@ -9,7 +9,7 @@ import { measureLabel } from '#client/src/lib/measure-labels.ts';
 import { unavailableReason } from '#client/src/lib/measure-availability.ts';
 import { sizeText, steelText } from '#client/src/lib/section-text.ts';
 import { bandWithin } from './band-within.ts';
-import { MeasureChoice } from './measure-choice.tsx';
+import { MeasureChoice } from '#client/src/charts/measure-choice.tsx';
 import { chartAxis, measureText, type MeasureReader } from './measure-text.ts';
 import { WIDEST_BAND_SHARE, withMeasure } from './run-address.ts';
 import type { SectionSource } from './section-source.ts';

@@ -4,7 +4,8 @@ import { ListField } from '#client/src/ui/list-field.tsx';
 import { SegmentedControl } from '#client/src/ui/segmented-control.tsx';
 import { quantitiesInText } from '#client/src/lib/quantities-in-text.ts';
 import { unitLabel } from '#client/src/lib/units.ts';
-import { AXIS_KIND, errorUnder, type FieldErrors } from './read-sweep-form.ts';
+import { AXIS_KIND } from './read-sweep-form.ts';
+import { errorUnder, type FieldErrors } from '#client/src/lib/field-errors.ts';
 import type { AxisName, AxisValues } from './sweep-form-values.ts';
 
 const AXIS_LABEL: Readonly<Record<AxisName, { readonly name: string; readonly symbol: string }>> = {

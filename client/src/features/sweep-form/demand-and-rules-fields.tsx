@@ -3,7 +3,7 @@ import type { BarStandard } from '#shared/engine/section.ts';
 import { CheckboxField } from '#client/src/ui/checkbox-field.tsx';
 import { NumberField } from '#client/src/ui/number-field.tsx';
 import { BarRack } from './bar-rack.tsx';
-import { errorUnder, type FieldErrors } from './read-sweep-form.ts';
+import { errorUnder, type FieldErrors } from '#client/src/lib/field-errors.ts';
 import type { SweepFormValues } from './sweep-form-values.ts';
 
 interface PartProps<Part> {

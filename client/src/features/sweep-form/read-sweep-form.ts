@@ -2,7 +2,9 @@ import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Issue } from '#shared/contract/errors.ts';
 import { sweepInputSchema } from '#shared/contract/records.ts';
 import type { z } from 'zod';
+import { errorsByField, type FieldErrors } from '#client/src/lib/field-errors.ts';
 import type { DisplayKind } from '#client/src/lib/units.ts';
+import { parseGroups } from '#client/src/lib/parse-bar-groups.ts';
 import {
   AXIS_NAMES,
   type AxisName,
@@ -10,24 +12,16 @@ import {
   type SteelValues,
   type SweepFormValues,
 } from './sweep-form-values.ts';
-import { parseCounts, parseGroups, parseValueList } from './value-list.ts';
+import { parseCounts, parseValueList } from './value-list.ts';
 
 export type SweepInput = z.infer<typeof sweepInputSchema>;
-
-/** Messages by the path of the contract below the definition, e.g. `space.width.to`. */
-export type FieldErrors = ReadonlyMap<string, string>;
-
-/** The message of a field, or of the first of the values it holds. */
-export function errorUnder(errors: FieldErrors, path: string): string | undefined {
-  const own = errors.get(path);
-  if (own !== undefined) return own;
-  for (const [key, message] of errors) if (key.startsWith(`${path}.`)) return message;
-  return undefined;
-}
 
 export type SweepFormReading =
   | { readonly kind: 'complete'; readonly input: SweepInput }
   | { readonly kind: 'incomplete'; readonly errors: FieldErrors };
+
+/** Fields are named by their path below it. */
+export const FORM_ROOT = 'definition';
 
 export const AXIS_KIND: Readonly<Record<AxisName, DisplayKind>> = {
   width: 'length',
@@ -36,19 +30,6 @@ export const AXIS_KIND: Readonly<Record<AxisName, DisplayKind>> = {
   fy: 'stress',
   cover: 'length',
 };
-
-const withoutDefinition = (path: readonly (string | number)[]): string =>
-  (path[0] === 'definition' ? path.slice(1) : path).join('.');
-
-/** The first message of each field, by its path: what the service answers and what is found here alike. */
-export function errorsByField(issues: readonly Issue[]): FieldErrors {
-  const errors = new Map<string, string>();
-  for (const issue of issues) {
-    const path = withoutDefinition(issue.path);
-    if (!errors.has(path)) errors.set(path, issue.message);
-  }
-  return errors;
-}
 
 function readAxis(axis: AxisValues, name: AxisName, units: UnitSystem, problems: Issue[]) {
   if (axis.kind === 'range') return { kind: 'range', from: axis.from, to: axis.to, step: axis.step };
@@ -107,9 +88,6 @@ export function readSweepForm(form: SweepFormValues, units: UnitSystem): SweepFo
     },
   });
   if (input.success && problems.length === 0) return { kind: 'complete', input: input.data };
-  const issues = (input.error?.issues ?? []).map((issue) => ({
-    path: issue.path.map((key) => (typeof key === 'symbol' ? String(key) : key)),
-    message: issue.message,
-  }));
-  return { kind: 'incomplete', errors: errorsByField([...problems, ...issues]) };
+  const issues = [...problems, ...(input.error?.issues ?? [])];
+  return { kind: 'incomplete', errors: errorsByField(issues, FORM_ROOT) };
 }

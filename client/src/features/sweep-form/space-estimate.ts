@@ -2,9 +2,10 @@ import { MAX_AXIS_VALUES, type SweepDefinition } from '#shared/contract/sweep-de
 import type { Project, RunSummary } from '#shared/contract/records.ts';
 import type { SweepProblem } from '#shared/sweep/problem.ts';
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import { parseGroups } from '#client/src/lib/parse-bar-groups.ts';
 import { AXIS_KIND } from './read-sweep-form.ts';
 import type { AxisName, AxisValues, SteelValues } from './sweep-form-values.ts';
-import { parseCounts, parseGroups, parseValueList } from './value-list.ts';
+import { parseCounts, parseValueList } from './value-list.ts';
 
 /** Two threads of an ordinary machine; corrected by this sweep's own last run where there is one. */
 const USUAL_SECTIONS_PER_SECOND = 8_000_000;

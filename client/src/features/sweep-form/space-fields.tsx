@@ -1,7 +1,7 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { BarStandard } from '#shared/engine/section.ts';
 import { AxisField } from './axis-field.tsx';
-import type { FieldErrors } from './read-sweep-form.ts';
+import { type FieldErrors } from '#client/src/lib/field-errors.ts';
 import { axisCount, steelCount } from './space-estimate.ts';
 import { SteelField } from './steel-field.tsx';
 import { StirrupsField } from './stirrups-field.tsx';

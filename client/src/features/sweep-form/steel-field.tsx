@@ -7,7 +7,7 @@ import { ListField } from '#client/src/ui/list-field.tsx';
 import { NumberField } from '#client/src/ui/number-field.tsx';
 import { SegmentedControl } from '#client/src/ui/segmented-control.tsx';
 import { BarRack } from './bar-rack.tsx';
-import { errorUnder, type FieldErrors } from './read-sweep-form.ts';
+import { errorUnder, type FieldErrors } from '#client/src/lib/field-errors.ts';
 import type { SteelFace, SteelValues } from './sweep-form-values.ts';
 
 const FACE_LABEL: Readonly<Record<SteelFace, { readonly name: string; readonly where: string }>> = {

@@ -4,7 +4,7 @@ import type { BarStandard } from '#shared/engine/section.ts';
 import { Button } from '#client/src/ui/button.tsx';
 import { NumberField } from '#client/src/ui/number-field.tsx';
 import { SelectField } from '#client/src/ui/select-field.tsx';
-import type { FieldErrors } from './read-sweep-form.ts';
+import { type FieldErrors } from '#client/src/lib/field-errors.ts';
 import type { StirrupValues } from './sweep-form-values.ts';
 
 interface StirrupsFieldProps {

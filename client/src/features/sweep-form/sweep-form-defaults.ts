@@ -5,6 +5,7 @@ import { MPA_PER_PSI, MM_PER_IN } from '#shared/engine/units.ts';
 import type { AxisDefinition, SteelSetsDefinition } from '#shared/sweep/problem.ts';
 import { countsText } from '#client/src/lib/counts-text.ts';
 import type { DisplayKind } from '#client/src/lib/units.ts';
+import { groupsText } from '#client/src/lib/parse-bar-groups.ts';
 import { AXIS_KIND } from './read-sweep-form.ts';
 import {
   AXIS_NAMES,
@@ -13,7 +14,7 @@ import {
   type SteelValues,
   type SweepFormValues,
 } from './sweep-form-values.ts';
-import { groupsText, valueListText } from './value-list.ts';
+import { valueListText } from './value-list.ts';
 
 /** Ranges a first sweep starts from: common practice for beams of buildings, no source. */
 const FIRST_RANGES: Readonly<Record<UnitSystem, Readonly<Record<'width' | 'depth' | 'fc', AxisValues>>>> = {
@@ -74,7 +75,6 @@ export function firstSweepForm(project: Project, beam: Beam): SweepFormValues {
   const basis = project.designBasis;
   const { units } = basis;
   const first = FIRST_BARS[basis.barStandard];
-  const hasRates = project.priceBook !== null;
   return {
     name: `${beam.mark} sweep`,
     axes: {
@@ -102,7 +102,7 @@ export function firstSweepForm(project: Project, beam: Beam): SweepFormValues {
       minCompressionShare: null,
       requireHangers: true,
     },
-    view: { x: hasRates ? 'costPerM' : 'steelKgPerM', y: 'curvatureDuctility' },
+    view: { x: 'steelKgPerM', y: 'curvatureDuctility' },
   };
 }
 

@@ -1,13 +1,15 @@
 import { useEffect, useMemo, useRef, useState, type ReactNode } from 'react';
 import type { Project, RunSummary } from '#shared/contract/records.ts';
 import { sizeRefusal } from '#shared/sweep/size-limit.ts';
-import { ApiError, messageOf } from '#client/src/lib/api-error.ts';
+import { messageOf } from '#client/src/lib/api-error.ts';
 import { preloadChart } from '#client/src/charts/chart.tsx';
 import { Button } from '#client/src/ui/button.tsx';
 import { FormError } from '#client/src/ui/form-error.tsx';
 import { TextField } from '#client/src/ui/text-field.tsx';
 import { DemandFields, RulesFields } from './demand-and-rules-fields.tsx';
-import { errorsByField, readSweepForm, type FieldErrors, type SweepInput } from './read-sweep-form.ts';
+import { FORM_ROOT, readSweepForm, type SweepInput } from './read-sweep-form.ts';
+import { errorsByField, issuesOf } from '#client/src/lib/field-errors.ts';
+import { FirstView } from './first-view.tsx';
 import { SpaceFields } from './space-fields.tsx';
 import { SpaceTally } from './space-tally.tsx';
 import type { SweepFormValues } from './sweep-form-values.ts';
@@ -36,11 +38,6 @@ function Part({ title, children }: { readonly title: string; readonly children: 
   );
 }
 
-/** Issues of a refusal by their field; what belongs to no field is told at the buttons. */
-function refusalErrors(refusal: unknown): FieldErrors {
-  return refusal instanceof ApiError ? errorsByField(refusal.issues) : new Map<string, string>();
-}
-
 /** The design space of a sweep, its targets and rules. Everything typed is kept whatever happens. */
 export function SweepForm(props: SweepFormProps) {
   const { project, initial, runs, isBusy, refusal, mayRun, onEdit, onSave, onRun } = props;
@@ -53,9 +50,8 @@ export function SweepForm(props: SweepFormProps) {
 
   const size = reading.kind === 'complete' ? sizeRefusal(reading.input.definition) : null;
   const errors = useMemo(() => {
-    const own =
-      reading.kind === 'incomplete' ? reading.errors : errorsByField(size?.issues.map(copied) ?? []);
-    const theirs = answered === form ? refusalErrors(refusal) : new Map<string, string>();
+    const own = reading.kind === 'incomplete' ? reading.errors : errorsByField(size?.issues ?? []);
+    const theirs = errorsByField(answered === form ? issuesOf(refusal) : [], FORM_ROOT);
     return new Map([...theirs, ...own]);
   }, [reading, size, refusal, answered, form]);
 
@@ -102,6 +98,15 @@ export function SweepForm(props: SweepFormProps) {
         <Part title="What may vary">
           <SpaceFields units={units} standard={barStandard} form={form} errors={errors} onChange={change} />
         </Part>
+        <Part title="What to compare first">
+          <FirstView
+            project={project}
+            reading={reading}
+            view={form.view}
+            errors={errors}
+            onChange={(view) => change({ ...form, view })}
+          />
+        </Part>
         <Part title="What the office builds">
           <RulesFields
             units={units}
@@ -140,8 +145,3 @@ export function SweepForm(props: SweepFormProps) {
     </form>
   );
 }
-
-const copied = (issue: { readonly path: readonly (string | number)[]; readonly message: string }) => ({
-  path: [...issue.path],
-  message: issue.message,
-});

@@ -1,7 +1,7 @@
 import { useId } from 'react';
 import { MEASURE_DIRECTION, MEASURE_IDS, type MeasureId } from '#shared/engine/measures.ts';
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
-import { betterWords } from '#client/src/charts/front-chart-input.ts';
+import { betterWords } from './front-chart-input.ts';
 import { measureLabel } from '#client/src/lib/measure-labels.ts';
 
 interface MeasureChoiceProps {

@@ -1,0 +1,103 @@
+import type { ProjectDesignBasis } from '#shared/contract/design-basis.ts';
+import type {
+  BendAllowance,
+  DisplacedConcrete,
+  Face,
+  SectionInput,
+  YieldCurvatureAt,
+} from '#shared/engine/section.ts';
+import { barsText } from '#client/src/lib/section-text.ts';
+
+export interface LayerValues {
+  readonly depthMm: number | null;
+  readonly areaMm2: number | null;
+  readonly face: Face;
+}
+
+/** One section as typed. Numbers are SI; null is an empty field, NaN text that is not a number. */
+export interface SectionFormValues {
+  readonly widthMm: number | null;
+  readonly depthMm: number | null;
+  readonly fcMPa: number | null;
+  readonly fyMPa: number | null;
+  readonly coverMm: number | null;
+  /** Designation; empty for none. */
+  readonly stirrupBar: string;
+  readonly legs: number | null;
+  readonly spacingMm: number | null;
+  /** Both ways of giving the steel are kept, so that switching loses nothing. */
+  readonly steel: 'bars' | 'layers';
+  readonly tensionText: string;
+  readonly compressionText: string;
+  readonly layers: readonly LayerValues[];
+  readonly maxLayers: number | null;
+  readonly muNmm: number | null;
+  readonly ductilityTarget: number | null;
+  readonly depthCapMm: number | null;
+  readonly displacedConcrete: DisplacedConcrete;
+  readonly yieldCurvatureAt: YieldCurvatureAt;
+  readonly bendAllowance: BendAllowance;
+}
+
+const EMPTY_LAYERS: readonly LayerValues[] = [
+  { depthMm: null, areaMm2: null, face: 'tension' },
+  { depthMm: null, areaMm2: null, face: 'compression' },
+];
+
+/** An empty section on the project's basis: only what the office has settled is filled in. */
+export function firstSectionForm(basis: ProjectDesignBasis): SectionFormValues {
+  return {
+    widthMm: null,
+    depthMm: null,
+    fcMPa: null,
+    fyMPa: basis.fyMPa,
+    coverMm: basis.coverMm,
+    stirrupBar: '',
+    legs: 2,
+    spacingMm: null,
+    steel: 'bars',
+    tensionText: '',
+    compressionText: '',
+    layers: EMPTY_LAYERS,
+    maxLayers: 2,
+    muNmm: null,
+    ductilityTarget: null,
+    depthCapMm: null,
+    displacedConcrete: basis.displacedConcrete,
+    yieldCurvatureAt: basis.yieldCurvatureAt,
+    bendAllowance: basis.bendAllowance,
+  };
+}
+
+interface GivenSection {
+  readonly section: SectionInput;
+  readonly demand: Pick<SectionFormValues, 'muNmm' | 'ductilityTarget' | 'depthCapMm'>;
+  readonly maxLayers: number;
+}
+
+/** A section found elsewhere, to be changed by hand. */
+export function sectionForm(
+  { section, demand, maxLayers }: GivenSection,
+  basis: ProjectDesignBasis,
+): SectionFormValues {
+  const { reinforcement, stirrup } = section;
+  const isBars = reinforcement.kind === 'bars';
+  return {
+    ...firstSectionForm(basis),
+    ...demand,
+    maxLayers,
+    widthMm: section.widthMm,
+    depthMm: section.depthMm,
+    fcMPa: section.fcMPa,
+    fyMPa: section.fyMPa,
+    coverMm: section.coverMm,
+    stirrupBar: stirrup?.bar ?? '',
+    legs: stirrup?.legs ?? 2,
+    spacingMm: stirrup?.spacingMm ?? null,
+    steel: reinforcement.kind,
+    tensionText: isBars ? barsText(reinforcement.tension) : '',
+    compressionText:
+      isBars && reinforcement.compression.length > 0 ? barsText(reinforcement.compression) : '',
+    layers: isBars ? EMPTY_LAYERS : reinforcement.layers,
+  };
+}
