@@ -1,7 +1,5 @@
-import { emptyChunk } from '#shared/sweep/chunk.ts';
-import { mergeChunks } from '#shared/sweep/merge.ts';
 import { prepareSweep, type PreparedSweep } from '#shared/sweep/prepared-sweep.ts';
-import { sweepRange } from '#shared/sweep/sweep-range.ts';
+import { openSweep } from '#shared/sweep/sweep-range.ts';
 import type { SweepReply, SweepTask } from './protocol.ts';
 
 /** Sections between two looks at the cancel flag: some 7 ms at 5 million sections a second. */
@@ -14,14 +12,14 @@ const prepared = new Map<string, PreparedSweep>();
 /** Entry point of a thread of the pool. */
 export default function sweepTask(task: SweepTask): SweepReply {
   const sweep = getPrepared(task);
-  let chunk = emptyChunk();
+  const steps = openSweep(sweep);
   let doneTo = task.from;
   while (doneTo < task.to && Atomics.load(task.cancelFlag, 0) === 0) {
     const batchTo = Math.min(doneTo + BATCH_SECTIONS, task.to);
-    chunk = mergeChunks(chunk, sweepRange(sweep, doneTo, batchTo));
+    steps.advance(doneTo, batchTo);
     doneTo = batchTo;
   }
-  return { chunk, doneTo };
+  return { chunk: steps.finish(), doneTo };
 }
 
 function getPrepared({ key, problem, view }: SweepTask): PreparedSweep {

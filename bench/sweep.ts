@@ -1,0 +1,110 @@
+import { availableParallelism } from 'node:os';
+import { emptyChunk } from '#shared/sweep/chunk.ts';
+import { nonDominated } from '#shared/sweep/front.ts';
+import { mergeChunks } from '#shared/sweep/merge.ts';
+import { prepareSweep } from '#shared/sweep/prepared-sweep.ts';
+import type { SweepProblem, View } from '#shared/sweep/problem.ts';
+import { spaceSize } from '#shared/sweep/space.ts';
+import { sweepRange } from '#shared/sweep/sweep-range.ts';
+import { startComputePool } from '#server/compute/pool.ts';
+import { createCancelFlag, sweepInChunks } from '#server/compute/sweep-in-chunks.ts';
+import { OFFICE_PROBLEM } from '../tests/sweep/office-problem.ts';
+import { median, report } from './report.ts';
+
+const VIEW: View = { x: 'steelKgPerM', y: 'curvatureDuctility' };
+
+/** The office sweep with finer depths: about 1.6 million sections, a third of which cannot fit. */
+const OFFICE: SweepProblem = {
+  ...OFFICE_PROBLEM,
+  space: { ...OFFICE_PROBLEM.space, depth: { kind: 'range', from: 400, to: 800, step: 3.25 } },
+};
+/** Wide sections whose bars all fit, so that every section runs every check. */
+const ALL_FIT: SweepProblem = {
+  ...OFFICE,
+  space: { ...OFFICE.space, width: { kind: 'range', from: 700, to: 900, step: 50 } },
+  rules: { ...OFFICE.rules, minDepthToWidth: null },
+};
+
+function hotLoop(name: string, problem: SweepProblem): void {
+  const prepared = prepareSweep(problem, VIEW);
+  const { size } = prepared.space;
+  let feasible = 0;
+  let cannotFit = 0;
+  const { nsEach } = median(7, () => {
+    const chunk = sweepRange(prepared, 0, size);
+    feasible = chunk.feasible;
+    cannotFit = chunk.failed[0]!;
+    return size;
+  });
+  report(name, {
+    sections: size,
+    'ns a section': nsEach,
+    'million a second and core': 1000 / nsEach,
+    'cannot fit, %': (100 * cannotFit) / size,
+    'feasible, %': (100 * feasible) / size,
+  });
+}
+
+hotLoop('hot loop, office sweep', OFFICE);
+hotLoop('hot loop, every bar set fits', ALL_FIT);
+
+const prepared = prepareSweep(OFFICE, VIEW);
+const { size } = prepared.space;
+const chunkSize = 1 << 17;
+const chunks = Array.from({ length: Math.ceil(size / chunkSize) }, (_, i) =>
+  sweepRange(prepared, i * chunkSize, Math.min(size, (i + 1) * chunkSize)),
+);
+const merge = median(7, () => {
+  chunks.reduce(mergeChunks, emptyChunk());
+  return chunks.length;
+});
+report('merge', {
+  'µs a chunk': merge.nsEach / 1000,
+  'share of its sweep, %': (100 * merge.nsEach) / (chunkSize * 200),
+});
+
+/** A fixed sequence of pseudo-random points (linear congruential, Numerical Recipes' constants). */
+function points(count: number) {
+  let state = 20261201;
+  const next = () => (state = (Math.imul(state, 1664525) + 1013904223) >>> 0) / 2 ** 32;
+  return Array.from({ length: count }, (_, index) => ({ index, x: next(), y: next() }));
+}
+for (const count of [1e4, 1e5, 1e6]) {
+  const cloud = points(count);
+  const { nsEach } = median(3, () => {
+    nonDominated(cloud, { x: 1, y: 1 });
+    return count;
+  });
+  report(`front of ${count.toLocaleString('en')} points`, { 'ns a point': nsEach });
+}
+
+async function threads(): Promise<void> {
+  const elapsed: number[] = [];
+  for (const count of [1, 2]) {
+    const pool = await startComputePool(count);
+    const sectionCount = spaceSize(ALL_FIT.space);
+    const once = () =>
+      sweepInChunks({
+        pool,
+        key: 'bench',
+        problem: ALL_FIT,
+        view: VIEW,
+        sectionCount,
+        cancelFlag: createCancelFlag(),
+      });
+    await once();
+    const times: number[] = [];
+    for (let i = 0; i < 5; i++) {
+      const start = performance.now();
+      await once();
+      times.push(performance.now() - start);
+    }
+    elapsed.push(times.sort((a, b) => a - b)[2]!);
+    await pool.close();
+  }
+  report('threads', {
+    'times as fast with 2 as with 1': elapsed[0]! / elapsed[1]!,
+    cores: availableParallelism(),
+  });
+}
+await threads();
