@@ -22,14 +22,17 @@ export function AppShell() {
         >
           Skip to the page
         </a>
-        <header className="relative flex min-h-[46px] items-center gap-4 border-b border-ink px-4 sm:px-5 print:hidden">
+        <header className="relative flex min-h-[46px] flex-wrap items-center gap-x-5 border-b border-ink px-4 sm:px-5 print:hidden">
           <Link to={paths.projects()} aria-label="Fairweight, to the projects" className="no-underline">
             <Wordmark />
           </Link>
-          <nav aria-label="Trail" className="hidden min-w-0 flex-1 md:block">
+          <nav
+            aria-label="Trail"
+            className="order-last -mx-4 min-h-8 min-w-0 basis-[calc(100%+2rem)] border-t border-rule px-4 py-1.5 md:order-none md:mx-0 md:min-h-0 md:flex-1 md:basis-0 md:border-0 md:p-0"
+          >
             <ol ref={setCrumbsSlot} className="flex min-w-0 items-baseline gap-2" />
           </nav>
-          <span className="flex-1 md:hidden" />
+          <span className="ml-auto" />
           <AccountMenu onShortcuts={() => setHelpOpen(true)} />
           {isArriving && <span className="arriving" aria-hidden="true" />}
         </header>

@@ -35,21 +35,35 @@ export interface FormatOptions {
   readonly hideUnit?: boolean;
 }
 
+/** Smaller than this is the rounding of the arithmetic itself, e.g. a residual of equilibrium. */
+const NOISE = 1e-12;
+/** Smaller than this is read more easily as a power of ten. */
+const POWER_BELOW = 1e-5;
+
 /** A number for reading: figures beyond `digits` are rounded away, thousands are grouped, minus is a true minus. */
 export function formatNumber(value: number, digits = 3, isTrimmed = false): string {
   if (!Number.isFinite(value)) return '';
-  const magnitude = value === 0 ? 0 : Math.floor(Math.log10(Math.abs(value)));
+  if (Math.abs(value) < NOISE) return '0';
+  if (Math.abs(value) < POWER_BELOW) return asPowerOfTen(value, digits);
   const rounded = Number(value.toPrecision(digits));
-  const decimals = Math.max(0, digits - 1 - (rounded === 0 ? 0 : Math.max(magnitude, exponent(rounded))));
-  return rounded
-    .toLocaleString('en-US', {
-      minimumFractionDigits: isTrimmed || value === 0 ? 0 : Math.min(decimals, 12),
-      maximumFractionDigits: Math.min(decimals, 12),
-    })
-    .replace('-', '−');
+  const decimals = Math.max(0, digits - 1 - exponentOf(rounded));
+  return withDecimals(rounded, isTrimmed ? 0 : decimals, decimals);
 }
 
-const exponent = (value: number): number => Math.floor(Math.log10(Math.abs(value)));
+const exponentOf = (value: number): number => Math.floor(Math.log10(Math.abs(value)));
+
+const withDecimals = (value: number, least: number, most: number): string =>
+  value
+    .toLocaleString('en-US', { minimumFractionDigits: least, maximumFractionDigits: most })
+    .replace('-', '−');
+
+function asPowerOfTen(value: number, digits: number): string {
+  const [mantissa = '', exponent = ''] = value.toExponential(digits - 1).split('e');
+  const raised = [...exponent.replace('+', '')]
+    .map((sign) => '⁻⁰¹²³⁴⁵⁶⁷⁸⁹'['-0123456789'.indexOf(sign)])
+    .join('');
+  return `${mantissa.replace('-', '−')} × 10${raised}`;
+}
 
 /** Prints a stored value in the project's units. What is not known prints as nothing, never as zero. */
 export function formatQuantity(
@@ -66,7 +80,9 @@ export function formatQuantity(
   return label === '%' || label.startsWith('/') ? `${text}${label}` : `${text} ${label}`;
 }
 
-/** A difference with its sign in front, `+1.20` or `−1.20`; `0` when the two print alike. */
+const decimalsOf = (text: string): number => text.split('.')[1]?.length ?? 0;
+
+/** A difference with its sign in front, `+1.20` or `−1.20`; `0` where there is none. */
 export function formatDifference(
   stored: number | null | undefined,
   kind: DisplayKind,
@@ -74,9 +90,23 @@ export function formatDifference(
   options: FormatOptions = {},
 ): string {
   if (stored === null || stored === undefined || !Number.isFinite(stored)) return '';
-  if (Math.abs(stored) < 1e-9) return '0';
+  if (Math.abs(stored) < NOISE) return '0';
   const text = formatQuantity(stored, kind, units, options);
   return stored > 0 ? `+${text}` : text;
+}
+
+/** A value's difference to a baseline, `+1.2` or `−1.2`, to no more decimals than the two are printed with. */
+export function formatDifferenceTo(
+  value: number,
+  baseline: number,
+  kind: DisplayKind,
+  units: UnitSystem,
+): string {
+  const print = (stored: number) => formatQuantity(stored, kind, units, { hideUnit: true });
+  const decimals = Math.max(decimalsOf(print(value)), decimalsOf(print(baseline)));
+  const text = withDecimals(toDisplay(value - baseline, kind, units), decimals, decimals);
+  if (Number(text.replaceAll(',', '').replace('−', '-')) === 0) return '±0';
+  return value > baseline ? `+${text}` : text;
 }
 
 /** Money with its currency in front, `USD 99.20/ft`; nothing where a rate is missing. */
@@ -90,10 +120,10 @@ export function formatMoney(
   return text === '' ? '' : `${currency ?? ''} ${text}`.trim();
 }
 
-/** What a field shows for a stored value: every figure that was typed, no grouping, no noise of conversion. */
+/** What a field shows for a stored value: every figure a person types, no grouping, no noise of conversion. */
 export function fieldText(stored: number | null, kind: DisplayKind, units: UnitSystem): string {
   if (stored === null || !Number.isFinite(stored)) return '';
-  const displayed = Number(toDisplay(stored, kind, units).toPrecision(9));
+  const displayed = Number(toDisplay(stored, kind, units).toPrecision(7));
   return Math.abs(displayed) >= 1e-6 && Math.abs(displayed) < 1e15
     ? displayed.toLocaleString('en-US', { useGrouping: false, maximumFractionDigits: 9 })
     : String(displayed);

@@ -43,7 +43,7 @@ function CheckRow({ check, units }: { readonly check: CheckResult; readonly unit
   const print = (value: number | null) => formatQuantity(value, check.kind, units, { hideUnit: true });
   return (
     <tr>
-      <th scope="row" className="min-w-40">
+      <th scope="row" className="min-w-32">
         <span className="font-medium">
           {name} {symbol !== '' && <span className="text-muted">{symbol}</span>}
         </span>
@@ -59,8 +59,8 @@ function CheckRow({ check, units }: { readonly check: CheckResult; readonly unit
       </th>
       <td className="figure">{print(check.demand)}</td>
       <td className="figure">{print(check.capacity)}</td>
-      <td className="w-[38%] min-w-52">
-        <RatioBar ratio={check.ratio} passes={check.passes} />
+      <td className="w-[38%] min-w-34">
+        <RatioBar ratio={check.ratio} passes={check.passes} isExact={check.kind === 'count'} />
       </td>
     </tr>
   );

@@ -59,8 +59,8 @@ function WorkingRow({ step, units }: { readonly step: WorkingStep; readonly unit
       <th scope="row" className="font-mono font-normal whitespace-nowrap">
         {step.symbol}
       </th>
-      <td className="min-w-44">{step.formula}</td>
-      <td className="num min-w-44 text-muted">
+      <td className="min-w-36">{step.formula}</td>
+      <td className="num min-w-40 text-muted">
         {step.inputs.map((input, i) => (
           <Fragment key={`${i}-${input.symbol}`}>
             {i > 0 && ', '}
@@ -71,7 +71,7 @@ function WorkingRow({ step, units }: { readonly step: WorkingStep; readonly unit
         ))}
       </td>
       <td className="figure font-medium">{formatQuantity(step.value, step.kind, units, { digits: 4 })}</td>
-      <td className="text-muted">{step.clause}</td>
+      <td className="min-w-28 text-muted">{step.clause}</td>
     </tr>
   );
 }

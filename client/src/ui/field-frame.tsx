@@ -25,7 +25,7 @@ export function FieldFrame(props: FieldFrameProps & { readonly children: (ids: F
   const describedBy = classNames(hasHint && `${id}-hint`, hasError && `${id}-error`);
   return (
     <div className={classNames('min-w-0', className)}>
-      <label htmlFor={id} className={isLabelHidden ? 'sr-only' : 'block text-sm font-medium'}>
+      <label htmlFor={id} className={isLabelHidden ? 'sr-only' : 'mb-0.5 block text-sm font-medium'}>
         {label}
       </label>
       {children({

@@ -23,9 +23,11 @@ export function PageCrumbs({ crumbs }: { readonly crumbs: readonly Crumb[] }) {
   return createPortal(
     crumbs.map((crumb, i) => (
       <Fragment key={`${i}-${crumb.label}`}>
-        <li aria-hidden="true" className="text-muted">
-          /
-        </li>
+        {i > 0 && (
+          <li aria-hidden="true" className="text-muted">
+            /
+          </li>
+        )}
         <li className="min-w-0 truncate">
           {crumb.to === undefined ? (
             <span aria-current="page" className="font-semibold">

@@ -16,28 +16,34 @@ interface RatioBarProps {
   /** Demand over capacity; null where the check has no number. */
   readonly ratio: number | null;
   readonly passes: boolean;
-  readonly isNumberHidden?: boolean;
+  /** For counts, where meeting the limit exactly is the rule and nothing to look at twice. */
+  readonly isExact?: boolean;
 }
 
 /** A check as a bar against its limit, with the number, and the verdict as a mark and a word. */
-export function RatioBar({ ratio, passes, isNumberHidden = false }: RatioBarProps) {
-  const verdict = judge(ratio, passes);
+export function RatioBar({ ratio, passes, isExact = false }: RatioBarProps) {
+  const verdict = judge(isExact ? null : ratio, passes);
   const share = ratio === null ? 0 : Math.min(Math.max(ratio, 0), FULL_SCALE) / FULL_SCALE;
   return (
-    <span className="grid grid-cols-[minmax(3rem,1fr)_3.2rem_4.6rem] items-center gap-2">
-      <span className="relative block h-4" aria-hidden="true">
-        {ratio !== null && (
-          <>
-            <span
-              className={`absolute top-1 left-0 h-2 ${FILL[verdict]}`}
-              style={{ width: `${share * 100}%` }}
-            />
-            <span className="absolute inset-y-0 border-l border-ink" style={{ left: `${LIMIT_AT * 100}%` }} />
-          </>
-        )}
+    <span className="@container block">
+      <span className="grid grid-cols-[3rem_4.6rem] items-center gap-x-2 @[11rem]:grid-cols-[minmax(3rem,1fr)_3.2rem_4.6rem]">
+        <span className="relative col-span-2 block h-4 @[11rem]:col-span-1" aria-hidden="true">
+          {ratio !== null && (
+            <>
+              <span
+                className={`absolute top-1 left-0 h-2 ${FILL[verdict]}`}
+                style={{ width: `${share * 100}%` }}
+              />
+              <span
+                className="absolute inset-y-0 border-l border-ink"
+                style={{ left: `${LIMIT_AT * 100}%` }}
+              />
+            </>
+          )}
+        </span>
+        <span className="num text-right">{ratio === null ? '' : formatRatio(ratio)}</span>
+        <VerdictMark verdict={verdict} />
       </span>
-      <span className="num text-right">{ratio === null || isNumberHidden ? '' : formatRatio(ratio)}</span>
-      <VerdictMark verdict={verdict} />
     </span>
   );
 }

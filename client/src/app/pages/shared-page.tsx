@@ -70,9 +70,13 @@ function SharedBody({ shared }: { readonly shared: SharedShortlist }) {
           The office has not pinned a section so far.
         </EmptyState>
       )}
-      <div className="grid gap-12">
+      <div className="grid grid-cols-[minmax(0,1fr)] gap-12">
         {beams.map((group) => (
-          <section key={group[0]!.beam.id} aria-label={`Beam ${group[0]!.beam.mark}`} className="grid gap-6">
+          <section
+            key={group[0]!.beam.id}
+            aria-label={`Beam ${group[0]!.beam.mark}`}
+            className="grid grid-cols-[minmax(0,1fr)] gap-6"
+          >
             <h2 className="border-b border-ink pb-1 text-xl font-semibold">
               {group[0]!.beam.mark}{' '}
               <span className="text-base font-normal text-muted">{group[0]!.beam.location}</span>

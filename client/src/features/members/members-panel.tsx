@@ -96,7 +96,7 @@ function PeopleTable({ people, chosen, onToggle }: PeopleTableProps) {
       </thead>
       <tbody>
         {people.map((person) => (
-          <tr key={person.id}>
+          <tr key={person.id} className="middle">
             {chosen !== undefined && (
               <td className="w-20">
                 <CheckboxField

@@ -26,7 +26,7 @@ export function AccountMenu({ onShortcuts }: { readonly onShortcuts: () => void 
   };
   return (
     <DropdownMenu.Root modal={false}>
-      <DropdownMenu.Trigger className="flex min-h-8 items-baseline gap-2 px-1 hover:underline">
+      <DropdownMenu.Trigger className="flex min-h-8 items-center gap-2 px-1 whitespace-nowrap hover:underline">
         <span className="max-w-40 truncate">{reader.name}</span>
         <span className="hidden text-muted sm:inline">{roleLabel(reader.role)}</span>
         <span aria-hidden="true" className="text-2xs text-muted">

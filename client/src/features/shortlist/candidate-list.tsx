@@ -16,6 +16,10 @@ import { COMPARE_MAX } from './selection.ts';
 /** Height of the tallest drawing in the list, px; all stand to one scale. */
 const DRAWING_PX = 56;
 
+/** Compare, candidate, section, state, steel, in all, (cost), μφ, Mu/φMn, author. */
+const SHARES = [7, 8, 29, 12, 9, 9, 7, 8, 11];
+const SHARES_WITH_MONEY = [7, 8, 25, 11, 8, 8, 11, 6, 7, 9];
+
 interface CandidateListProps {
   readonly candidates: readonly Candidate[];
   readonly units: UnitSystem;
@@ -31,7 +35,11 @@ export function CandidateList(props: CandidateListProps) {
   const { candidates, units, selected, onToggle, tallestMm, hasMoney } = props;
   const { beam } = candidates[0]!;
   return (
-    <TableFrame label={`Candidates for ${beam.mark}`}>
+    <TableFrame
+      label={`Candidates for ${beam.mark}`}
+      columnShares={hasMoney ? SHARES_WITH_MONEY : SHARES}
+      minWidth="60rem"
+    >
       <thead>
         <tr>
           <th scope="col">Compare</th>
@@ -91,8 +99,8 @@ function CandidateRow(props: CandidateRowProps) {
   const { section, evaluation, basis } = candidate.snapshot;
   const { measures, quantities } = evaluation;
   return (
-    <tr className="hover:bg-sheet">
-      <td className="w-16">
+    <tr className="middle hover:bg-sheet">
+      <td>
         <CheckboxField
           label={`Compare ${candidate.label}`}
           isLabelHidden
@@ -101,7 +109,7 @@ function CandidateRow(props: CandidateRowProps) {
           onChange={onToggle}
         />
       </td>
-      <th scope="row" className="w-20">
+      <th scope="row">
         <Link
           to={paths.candidate(candidate.projectId, candidate.id)}
           aria-label={`Candidate ${candidate.label}`}
@@ -110,7 +118,7 @@ function CandidateRow(props: CandidateRowProps) {
           <CandidateFlag label={candidate.label} />
         </Link>
       </th>
-      <td className="min-w-56">
+      <td>
         <span className="flex items-end gap-3">
           <span className="flex w-12 shrink-0 justify-center border-b border-ink">
             <SectionDrawing

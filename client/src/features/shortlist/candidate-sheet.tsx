@@ -18,9 +18,10 @@ interface CandidateSheetProps {
 /** The body of a candidate: drawing and checks, then inputs, quantities and working. */
 export function CandidateSheet({ candidate, units, hasMoney }: CandidateSheetProps) {
   const { section, evaluation, basis } = candidate.snapshot;
+  const isDuctilityChecked = evaluation.checks.some((check) => check.id === 'curvature-ductility');
   return (
-    <div className="grid gap-8">
-      <div className="grid items-start gap-8 xl:grid-cols-[22rem_1fr]">
+    <div className="grid min-w-0 grid-cols-[minmax(0,1fr)] gap-8">
+      <div className="grid items-start gap-8 grid-cols-[minmax(0,1fr)] xl:grid-cols-[22rem_minmax(0,1fr)]">
         <figure className="keep-together">
           <SectionDrawing
             variant="large"
@@ -29,14 +30,14 @@ export function CandidateSheet({ candidate, units, hasMoney }: CandidateSheetPro
             standard={basis.barStandard}
             units={units}
           />
-          <figcaption className="mt-2">
-            <span className="text-lg font-semibold">{sizeText(section, units)}</span>{' '}
+          <figcaption className="mt-2 flex flex-wrap items-baseline gap-x-3">
+            <span className="text-lg font-semibold">{sizeText(section, units)}</span>
             <span className="num text-steel">{steelText(section, units)}</span>
           </figcaption>
         </figure>
         <div className="grid min-w-0 gap-5">
           <CheckTable checks={evaluation.checks} units={units} />
-          {evaluation.ductility !== null && (
+          {evaluation.ductility !== null && !isDuctilityChecked && (
             <p className="text-sm text-muted">μφ: {evaluation.ductility.definition}</p>
           )}
           <LimitsNote evaluation={evaluation} />
@@ -45,7 +46,7 @@ export function CandidateSheet({ candidate, units, hasMoney }: CandidateSheetPro
       <Part title="What it was computed from">
         <FrozenInputs snapshot={candidate.snapshot} units={units} />
       </Part>
-      <div className="grid gap-8 xl:grid-cols-2">
+      <div className="grid grid-cols-[minmax(0,1fr)] gap-8 xl:grid-cols-2">
         <Part title="Quantities per length">
           <QuantitiesTable quantities={evaluation.quantities} units={units} isMoneyHidden={!hasMoney} />
         </Part>
@@ -66,7 +67,7 @@ export function CandidateSheet({ candidate, units, hasMoney }: CandidateSheetPro
 
 function Part({ title, children }: { readonly title: string; readonly children: React.ReactNode }) {
   return (
-    <section aria-label={title} className="min-w-0">
+    <section className="min-w-0">
       <h2 className="mb-2 border-t border-ink pt-2 font-semibold">{title}</h2>
       {children}
     </section>

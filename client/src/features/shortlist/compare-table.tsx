@@ -1,10 +1,11 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import type { Rates } from '#shared/engine/section.ts';
 import { SectionDrawing } from '#client/src/drawing/section-drawing.tsx';
-import { formatDifference, formatQuantity } from '#client/src/lib/format-quantity.ts';
+import { formatDifferenceTo, formatQuantity } from '#client/src/lib/format-quantity.ts';
 import { barsText, sizeText, steelText, stirrupText } from '#client/src/lib/section-text.ts';
 import { candidateStateLabel } from '#client/src/lib/state-labels.ts';
 import { unitLabel } from '#client/src/lib/units.ts';
-import { missingRates } from '#client/src/sheet/missing-rates.ts';
+import { missingFactors, missingRates } from '#client/src/sheet/missing-rates.ts';
 import { StateTag } from '#client/src/ui/state-tag.tsx';
 import { TableFrame } from '#client/src/ui/table-frame.tsx';
 import { CandidateFlag } from './candidate-flag.tsx';
@@ -81,6 +82,7 @@ export function CompareTable({ candidates, units, baselineId, hasMoney }: Compar
         candidates={candidates}
         units={units}
         baselineId={baselineId}
+        hasMoney={hasMoney}
       />
       <FigureRows
         title={
@@ -92,6 +94,7 @@ export function CompareTable({ candidates, units, baselineId, hasMoney }: Compar
         candidates={candidates}
         units={units}
         baselineId={baselineId}
+        hasMoney={hasMoney}
       />
     </TableFrame>
   );
@@ -102,7 +105,12 @@ function Bars({ candidate, units }: { readonly candidate: ShownCandidate; readon
   const { reinforcement } = section;
   const lines =
     reinforcement.kind === 'bars'
-      ? [`${barsText(reinforcement.tension)} bottom`, `${barsText(reinforcement.compression)} top`]
+      ? [
+          `${barsText(reinforcement.tension)} bottom`,
+          reinforcement.compression.length === 0
+            ? 'no top bars'
+            : `${barsText(reinforcement.compression)} top`,
+        ]
       : [steelText(section, units)];
   return (
     <span className="num text-steel">
@@ -144,9 +152,10 @@ interface FigureRowsProps {
   readonly candidates: readonly ShownCandidate[];
   readonly units: UnitSystem;
   readonly baselineId: string | null;
+  readonly hasMoney: boolean;
 }
 
-function FigureRows({ title, rows, candidates, units, baselineId }: FigureRowsProps) {
+function FigureRows({ title, rows, candidates, units, baselineId, hasMoney }: FigureRowsProps) {
   return (
     <tbody>
       <tr>
@@ -166,7 +175,8 @@ function FigureRows({ title, rows, candidates, units, baselineId }: FigureRowsPr
                 index={i}
                 units={units}
                 candidate={candidate}
-                hasBaseline={baselineId !== null}
+                baselineId={baselineId}
+                hasMoney={hasMoney}
               />
             </td>
           ))}
@@ -181,16 +191,17 @@ interface FigureProps {
   readonly index: number;
   readonly units: UnitSystem;
   readonly candidate: ShownCandidate;
-  readonly hasBaseline: boolean;
+  readonly baselineId: string | null;
+  readonly hasMoney: boolean;
 }
 
-function Figure({ row, index, units, candidate, hasBaseline }: FigureProps) {
+function Figure({ row, index, units, candidate, baselineId, hasMoney }: FigureProps) {
   const value = row.values[index]!;
   if (value === null) {
     const { basis, section } = candidate.snapshot;
-    const missing = row.id === 'costPerM' ? missingRates(basis.rates, section.fcMPa) : [];
+    const missing = hasMoney ? missingFor(row.id, basis.rates, section.fcMPa) : [];
     return missing.length === 0 ? null : (
-      <span className="font-sans text-xs text-muted">no rate: {missing.join(', ')}</span>
+      <span className="font-sans text-xs text-muted">not known: {missing.join(', ')}</span>
     );
   }
   const currency = row.id === 'costPerM' ? candidate.snapshot.evaluation.quantities.cost?.currency : null;
@@ -201,11 +212,20 @@ function Figure({ row, index, units, candidate, hasBaseline }: FigureProps) {
         {currency ?? total ?? ''} {formatQuantity(value, row.kind, units, { hideUnit: true })}
       </span>
       <span className="text-2xs font-semibold text-meets">{row.isBest[index] ? '◆ best' : ''}</span>
-      {hasBaseline && (
-        <span className="text-right text-xs text-muted">
-          {formatDifference(row.differences[index], row.kind, units, { hideUnit: true })}
-        </span>
+      {baselineId !== null && candidate.id !== baselineId && (
+        <span className="text-right text-xs text-muted">{differenceText(row, index, units)}</span>
       )}
     </span>
   );
+}
+
+function differenceText(row: ComparisonRow, index: number, units: UnitSystem): string {
+  const value = row.values[index] ?? null;
+  const baseline = row.baseline;
+  return value === null || baseline === null ? '' : formatDifferenceTo(value, baseline, row.kind, units);
+}
+
+function missingFor(rowId: string, rates: Rates | null, fcMPa: number): readonly string[] {
+  if (rowId === 'costPerM') return missingRates(rates, fcMPa);
+  return rowId === 'co2eKgPerM' ? missingFactors(rates, fcMPa) : [];
 }

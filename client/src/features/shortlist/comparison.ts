@@ -15,8 +15,8 @@ export interface ComparisonRow {
   readonly values: readonly (number | null)[];
   /** Whether the candidate is the best of the row; several when they tie, none when all are alike or one is missing. */
   readonly isBest: readonly boolean[];
-  /** Difference to the baseline; null for the baseline itself and for what is not known. */
-  readonly differences: readonly (number | null)[];
+  /** The value the others are compared with; null without a baseline, or where its value is not known. */
+  readonly baseline: number | null;
 }
 
 interface RowSource {
@@ -98,7 +98,6 @@ function rowOf(
 ): ComparisonRow {
   const values = candidates.map(source.of);
   const base = candidates.findIndex((candidate) => candidate.id === baselineId);
-  const baseValue = base === -1 ? null : values[base]!;
   return {
     id: source.id,
     label: source.label,
@@ -106,9 +105,7 @@ function rowOf(
     better: source.better,
     values,
     isBest: areComparable(candidates) ? bestOf(values, source.better) : values.map(() => false),
-    differences: values.map((value, i) =>
-      i === base || value === null || baseValue === null ? null : value - baseValue,
-    ),
+    baseline: base === -1 ? null : values[base]!,
   };
 }
 

@@ -52,7 +52,7 @@ function Shortlist({ candidates }: { readonly candidates: readonly Candidate[] }
   const beams = groupByBeam(candidates);
   const chosen = selected.map((id) => candidates.find((candidate) => candidate.id === id)!);
   return (
-    <div className="grid gap-8">
+    <div className="grid grid-cols-[minmax(0,1fr)] gap-8">
       <div className="flex flex-wrap items-baseline justify-between gap-3">
         <p className="text-muted">
           {selected.length === 0

@@ -6,6 +6,9 @@ import { runStateLabel } from '#client/src/lib/state-labels.ts';
 import { StateTag } from '#client/src/ui/state-tag.tsx';
 import { TableFrame } from '#client/src/ui/table-frame.tsx';
 
+/** Run, state, sections, meet all checks, on the front, took, hash, started. */
+const SHARES = [8, 11, 12, 12, 10, 9, 18, 20];
+
 interface RunTableProps {
   readonly projectId: string;
   readonly sweepName: string;
@@ -14,7 +17,7 @@ interface RunTableProps {
 
 export function RunTable({ projectId, sweepName, runs }: RunTableProps) {
   return (
-    <TableFrame label={`Runs of ${sweepName}`}>
+    <TableFrame label={`Runs of ${sweepName}`} columnShares={SHARES} minWidth="60rem">
       <thead>
         <tr>
           <th scope="col">Run</th>

@@ -39,7 +39,7 @@ export function SweepsPanel() {
       </EmptyState>
     );
   return (
-    <div className="grid gap-8">
+    <div className="grid grid-cols-[minmax(0,1fr)] gap-8">
       {sweeps.data.map((sweep) => (
         <SweepEntry key={sweep.id} sweep={sweep} onDelete={() => setDoomed(sweep)} />
       ))}
@@ -55,7 +55,7 @@ function SweepEntry({ sweep, onDelete }: { readonly sweep: Sweep; readonly onDel
   const run = () =>
     start.mutate(sweep.id, { onSuccess: (started) => void navigate(paths.run(sweep.projectId, started.id)) });
   return (
-    <section aria-label={sweep.name} className="border-t border-ink pt-3">
+    <section aria-label={sweep.name} className="border-t border-ink pt-3 first:border-t-0 first:pt-0">
       <div className="mb-2 flex flex-wrap items-baseline gap-x-4 gap-y-1">
         <h2 className="text-lg font-semibold">
           <Link to={paths.sweep(sweep.projectId, sweep.id)} className="hover:underline">
