@@ -8,23 +8,27 @@ import { csrfTokenOf } from '../../http/csrf.ts';
 import { limitSignIn } from '../../http/rate-limit.ts';
 import { findPersonByPassword } from './queries.ts';
 
-const present = (req: Request, person: Person | undefined): Session => ({
-  person: person ?? null,
-  csrfToken: csrfTokenOf(req),
-});
-
-/** A new id whenever somebody comes or goes: an id planted before is worth nothing after. */
-const renewSession = (req: Request): Promise<void> =>
+/** `regenerate` and `save` call back with an error or with nothing. */
+const settled = (start: (done: (error?: unknown) => void) => void): Promise<void> =>
   new Promise((resolve, reject) => {
-    req.session.regenerate((error: unknown) =>
-      error === undefined || error === null
-        ? resolve()
-        : reject(error instanceof Error ? error : new Error('The session could not be renewed')),
-    );
+    start((error) => {
+      if (error === undefined || error === null) resolve();
+      else reject(error instanceof Error ? error : new Error('The session could not be written'));
+    });
   });
 
+/** A new id whenever somebody comes or goes: an id planted before is worth nothing after. */
+const renewSession = (req: Request) => settled((done) => req.session.regenerate(done));
+
+/** Saved before it is answered: left to the end of the response, a failure to write would go unsaid. */
+async function answer(req: Request, person: Person | undefined): Promise<Session> {
+  const csrfToken = csrfTokenOf(req);
+  await settled((done) => req.session.save(done));
+  return { person: person ?? null, csrfToken };
+}
+
 export function registerSessionRoutes(router: Router, deps: Deps): void {
-  bind(router, deps, 'getSession', ({ req, person }) => Promise.resolve(present(req, person)));
+  bind(router, deps, 'getSession', ({ req, person }) => answer(req, person));
 
   router.post(endpoints.signIn.path, ...limitSignIn());
   bind(router, deps, 'signIn', async ({ req, body }) => {
@@ -32,11 +36,11 @@ export function registerSessionRoutes(router: Router, deps: Deps): void {
     if (person === undefined) throw wrongCredentials();
     await renewSession(req);
     req.session.personId = person.id;
-    return present(req, person);
+    return answer(req, person);
   });
 
   bind(router, deps, 'signOut', async ({ req }) => {
     await renewSession(req);
-    return present(req, undefined);
+    return answer(req, undefined);
   });
 }
