@@ -29,7 +29,13 @@ export async function ensureBuilt() {
 async function buildClient() {
   const vite = path.join(PROJECT_ROOT, 'node_modules', 'vite', 'bin', 'vite.js');
   const options = ['--outDir', path.join(UNFINISHED, 'client'), '--logLevel', 'warn'];
-  await requireProgram(process.execPath, [vite, 'build', ...options], { cwd: PROJECT_ROOT, isQuiet: true });
+  // Whoever asks for the build, also a test: with any other NODE_ENV Vite would bundle React's development version.
+  const environment = { NODE_ENV: 'production' };
+  await requireProgram(process.execPath, [vite, 'build', ...options], {
+    cwd: PROJECT_ROOT,
+    isQuiet: true,
+    environment,
+  });
 }
 
 /** One file per entry, packages left in node_modules. Threads load plain JavaScript and need no TypeScript loader. */

@@ -17,7 +17,7 @@ async function prepareDatabase(environment) {
   for (const script of ['migrate', 'seed']) {
     await requireProgram(process.execPath, ['--import', 'tsx', `server/cli/${script}.ts`], {
       cwd: PROJECT_ROOT,
-      env: { ...process.env, ...environment },
+      environment,
     });
   }
 }
@@ -40,11 +40,11 @@ try {
   await Promise.all([
     runProgram(process.execPath, [tsx, 'watch', '--clear-screen=false', 'server/main.ts'], {
       cwd: PROJECT_ROOT,
-      env: { ...process.env, ...environment },
+      environment,
     }),
     runProgram(process.execPath, [vite, '--port', String(port)], {
       cwd: PROJECT_ROOT,
-      env: { ...process.env, API_ORIGIN: `http://127.0.0.1:${port + 1}` },
+      environment: { API_ORIGIN: `http://127.0.0.1:${port + 1}` },
     }),
   ]);
 } catch (error) {

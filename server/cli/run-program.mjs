@@ -1,30 +1,29 @@
 import { spawn } from 'node:child_process';
 
-/** @type {import('node:child_process').SpawnOptions} */
-const LOUD = { stdio: 'inherit' };
-
-/** @type {import('node:child_process').SpawnOptions} */
-const QUIET = {
-  stdio: ['ignore', 'pipe', 'pipe'],
-  env: { ...process.env, NO_COLOR: '1', FORCE_COLOR: undefined },
-};
+/** Output that is collected, to be shown later or not at all, is plain text. */
+const WITHOUT_COLOURS = { NO_COLOR: '1', FORCE_COLOR: undefined };
 
 /** @type {Set<import('node:child_process').ChildProcess>} */
 const interruptible = new Set();
 
 /**
  * Runs a program to its end. With `isQuiet` what it writes is collected in `output`, otherwise it goes to this
- * terminal. A detached program is left alone by `interruptPrograms`.
+ * terminal. `environment` is added to this process's own, `env` replaces it. A detached program is left alone by
+ * `interruptPrograms`.
  *
  * @param {string} command
  * @param {readonly string[]} args
- * @param {Omit<import('node:child_process').SpawnOptions, 'stdio'> & {
- *   isQuiet?: boolean, stdio?: import('node:child_process').StdioOptions }} [options]
+ * @param {import('node:child_process').SpawnOptions & {
+ *   isQuiet?: boolean, environment?: Record<string, string> }} [options]
  * @returns {Promise<{ code: number, output: string }>}
  */
-export function runProgram(command, args, { isQuiet = false, ...options } = {}) {
+export function runProgram(command, args, { isQuiet = false, environment = {}, ...options } = {}) {
   return new Promise((resolve, reject) => {
-    const child = spawn(command, args, { ...(isQuiet ? QUIET : LOUD), ...options });
+    const child = spawn(command, args, {
+      stdio: isQuiet ? ['ignore', 'pipe', 'pipe'] : 'inherit',
+      env: { ...process.env, ...(isQuiet ? WITHOUT_COLOURS : {}), ...environment },
+      ...options,
+    });
     if (options.detached !== true) interruptible.add(child);
     let output = '';
     const collect = (/** @type {Buffer} */ chunk) => (output += chunk.toString());

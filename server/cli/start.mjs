@@ -48,7 +48,7 @@ async function prepareDatabase(environment) {
       ['--enable-source-maps', path.join(PROJECT_ROOT, `dist/server/${script}.js`)],
       {
         cwd: PROJECT_ROOT,
-        env: { ...process.env, ...environment },
+        environment,
       },
     );
   }

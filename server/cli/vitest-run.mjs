@@ -17,6 +17,7 @@ export async function runTests(filters) {
   const reporters = ['--reporter=default', '--reporter=json', `--outputFile.json=${report}`];
   const { code } = await runProgram(process.execPath, [vitest, 'run', ...reporters, ...filters], {
     cwd: PROJECT_ROOT,
+    environment: { NODE_ENV: 'test' },
   });
   const counts = fs.existsSync(report) ? countResults(report) : { passed: 0, failed: 0, skipped: 0 };
   if (code !== 0 && counts.failed === 0) counts.failed = 1;
