@@ -33,6 +33,7 @@ describe('the result of a sweep', () => {
     'by $x and $y is the same for one thread, two threads and any size of chunk',
     async (view) => {
       const expected = finishResult(problem, view, sweepRange(prepareSweep(problem, view), 0, sectionCount));
+      expect(expected.feasible).toBeGreaterThan(1000);
       const sizes = [undefined, 977, 4096, sectionCount];
       for (const [threads, pool] of [one, two].entries())
         for (const chunkSections of sizes) {

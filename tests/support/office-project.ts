@@ -65,15 +65,15 @@ export const SMALL_SWEEP: SweepDefinition = {
   view: { x: 'steelKgPerM', y: 'depthMm' },
 };
 
-/** `SMALL_SWEEP` with finer steps: widths × depths × 96 sections. */
+/** `SMALL_SWEEP` over the same ranges with finer steps: widths × depths × 96 sections. */
 export function scaledSweep(widths: number, depths: number): SweepDefinition {
   const { space } = SMALL_SWEEP;
   return {
     ...SMALL_SWEEP,
     space: {
       ...space,
-      width: { kind: 'range', from: 300, to: 300 + (widths - 1), step: 1 },
-      depth: { kind: 'range', from: 400, to: 400 + (depths - 1) / 4, step: 0.25 },
+      width: { kind: 'range', from: 300, to: 400, step: 100 / (widths - 1) },
+      depth: { kind: 'range', from: 400, to: 850, step: 450 / (depths - 1) },
     },
   };
 }

@@ -17,6 +17,8 @@ const ACCOUNTS = [...ROLES, 'outsider'] as const;
 export type Account = (typeof ACCOUNTS)[number];
 const roleOf = (account: Account): Role => (account === 'outsider' ? 'engineer' : account);
 
+const emailOf = (account: Account) => `${account}@office.example`;
+
 /** The whole service on a database of its own: real queue, real threads, a real port. */
 export interface TestOffice {
   readonly deps: Deps;
@@ -25,6 +27,7 @@ export interface TestOffice {
   readonly idOf: (account: Account) => string;
   /** A browser's worth of session: cookies and CSRF token. Signed in once per account, then shared. */
   readonly as: (account: Account) => Promise<SignedIn>;
+  readonly signIn: (email: string, password: string) => Promise<SignedIn>;
   close(): Promise<void>;
 }
 
@@ -59,8 +62,9 @@ export async function openOffice(
     databaseUrl: database.url,
     origin,
     idOf: (account) => ids.get(account)!,
+    signIn: (email, password) => signIn(origin, email, password),
     as: (account) => {
-      const session = sessions.get(account) ?? signIn(origin, account);
+      const session = sessions.get(account) ?? signIn(origin, emailOf(account), PASSWORD);
       sessions.set(account, session);
       return session;
     },
@@ -80,7 +84,7 @@ export async function insertPeople(db: Database, passwordHash: string): Promise<
     .values(
       ACCOUNTS.map((account) => ({
         name: `The ${account}`,
-        email: `${account}@office.example`,
+        email: emailOf(account),
         role: roleOf(account),
         passwordHash,
       })),
@@ -89,13 +93,13 @@ export async function insertPeople(db: Database, passwordHash: string): Promise<
   return new Map(ACCOUNTS.map((account, i) => [account, rows[i]!.id]));
 }
 
-async function signIn(origin: string, account: Account): Promise<SignedIn> {
+async function signIn(origin: string, email: string, password: string): Promise<SignedIn> {
   const agent = supertest.agent(origin);
   const before = await agent.get('/api/session').expect(200);
   const answer = await agent
     .post('/api/session')
     .set('x-csrf-token', before.body.csrfToken)
-    .send({ email: `${account}@office.example`, password: PASSWORD })
+    .send({ email, password })
     .expect(200);
   const token: string = answer.body.csrfToken;
   const cookie = [answer.get('set-cookie') ?? []]
