@@ -5,6 +5,7 @@ import { readConfig, type Config } from '#server/config.ts';
 import type { Deps } from '#server/deps.ts';
 import { startServices } from '#server/services.ts';
 import { createTestDatabase } from './test-database.ts';
+import { testEnvironment } from './office.ts';
 
 export interface TestService {
   app: Express;
@@ -20,16 +21,7 @@ export function useTestService(changes: Partial<Config> = {}): TestService {
   beforeAll(async () => {
     const database = await createTestDatabase();
     endings.push(database.drop);
-    const config: Config = {
-      ...readConfig({
-        NODE_ENV: 'test',
-        DATABASE_URL: database.url,
-        SESSION_SECRET: 'a secret of the tests and nothing else',
-        COMPUTE_THREADS: '2',
-        API_REQUESTS_PER_MINUTE: '1000000',
-      }),
-      ...changes,
-    };
+    const config: Config = { ...readConfig(testEnvironment(database.url)), ...changes };
     const services = await startServices(config);
     endings.push(async () => {
       services.endStreams();
