@@ -131,7 +131,7 @@ export function RunWorkspace({ run, project }: RunWorkspaceProps) {
               onRetry={state.retry}
             />
           ) : (
-            <div className="grid min-w-0 gap-4">
+            <div className="grid min-w-0 grid-cols-[minmax(0,1fr)] gap-4">
               <FrontPanel
                 run={run}
                 view={view}
@@ -214,7 +214,7 @@ export function RunWorkspace({ run, project }: RunWorkspaceProps) {
                     source={{ kind: 'run', runId: run.id, index: selected.index }}
                     pinned={pinned}
                   />
-                  <p>
+                  <p className="text-sm">
                     <ButtonLink
                       look="text"
                       className="text-sm"

@@ -1,7 +1,7 @@
 import type { DensityCell } from '#shared/sweep/result.ts';
 
 /** Pixels a cell should measure at least: finer ones read as noise and cost drawing time. */
-const LEAST_CELL_PX = 9;
+const LEAST_CELL_PX = 11;
 /** Neighbouring cells share their bound up to rounding. */
 const TOUCHING = 1e-9;
 

@@ -1,7 +1,6 @@
 import { useId } from 'react';
-import { MEASURE_DIRECTION, MEASURE_IDS, type MeasureId } from '#shared/engine/measures.ts';
+import { MEASURE_IDS, type MeasureId } from '#shared/engine/measures.ts';
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
-import { betterWords } from './front-chart-input.ts';
 import { measureLabel } from '#client/src/lib/measure-labels.ts';
 
 interface MeasureChoiceProps {
@@ -17,7 +16,7 @@ interface MeasureChoiceProps {
 export function MeasureChoice({ side, value, units, reasonAgainst, onChange }: MeasureChoiceProps) {
   const id = useId();
   return (
-    <span className="inline-flex flex-wrap items-baseline gap-x-2">
+    <span className="inline-flex min-w-0">
       <label htmlFor={id} className="sr-only">
         {side === 'x' ? 'Measure across (leading)' : 'Measure up'}
       </label>
@@ -43,7 +42,6 @@ export function MeasureChoice({ side, value, units, reasonAgainst, onChange }: M
           );
         })}
       </select>
-      <span className="text-xs text-muted">{betterWords(side, MEASURE_DIRECTION[value])}</span>
     </span>
   );
 }

@@ -26,6 +26,21 @@ export function WidthDimension({ fromPx, toPx, atPx, label }: DimensionProps) {
   );
 }
 
+/** A short measure at an edge, too short to write over: its number stands behind it. */
+export function EdgeDimension({ fromPx, toPx, atPx, label }: DimensionProps) {
+  return (
+    <g>
+      <path
+        d={`M ${fromPx} ${atPx} H ${toPx} ${tick(fromPx, atPx)} ${tick(toPx, atPx)}`}
+        className="fill-none stroke-muted"
+      />
+      <text x={toPx + 7} y={atPx} dominantBaseline="central" className="fill-ink">
+        {label}
+      </text>
+    </g>
+  );
+}
+
 /** A measure along y, its number turned to be read from the right, as on a drawing. */
 export function HeightDimension({ fromPx, toPx, atPx, label }: DimensionProps) {
   const middle = (fromPx + toPx) / 2;

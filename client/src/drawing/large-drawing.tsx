@@ -2,13 +2,13 @@ import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { SectionInput } from '#shared/engine/section.ts';
 import { formatQuantity } from '#client/src/lib/format-quantity.ts';
 import { calloutsOf } from './callouts.ts';
-import { GapChain, HeightDimension, WidthDimension } from './dimension-line.tsx';
+import { EdgeDimension, GapChain, HeightDimension, WidthDimension } from './dimension-line.tsx';
 import { SectionBody, type Placement } from './section-body.tsx';
 import type { SectionGeometry } from './section-geometry.ts';
 import { spreadLabels } from './spread-labels.ts';
 
 /** The sheet the drawing is laid out on, in its own pixels; the page scales the whole of it. */
-const SHEET = { width: 340, height: 372, left: 66, right: 104, top: 14, bottom: 66 } as const;
+const SHEET = { width: 340, height: 384, left: 66, right: 104, top: 26, bottom: 66 } as const;
 const LABEL_PITCH_PX = 15;
 /** Dash-dot, as the trade draws an axis. */
 const AXIS_DASH = '9 3 1.5 3';
@@ -105,7 +105,15 @@ function Dimensions({
         <GapChain
           stopsPx={gaps.flatMap((gap) => [at.xPx + gap.fromMm * s, at.xPx + gap.toMm * s])}
           atPx={bottom + 12}
-          label={`${gaps.length === 1 ? 'clear' : `${gaps.length} × clear`} ${length(least, 3)}`}
+          label={`clear ${length(least, 3)}${gaps.length > 1 ? ' each' : ''}`}
+        />
+      )}
+      {geometry.coverMm > 0 && (
+        <EdgeDimension
+          fromPx={at.xPx}
+          toPx={at.xPx + geometry.coverMm * s}
+          atPx={at.yPx - 8}
+          label={`cover ${length(geometry.coverMm)}`}
         />
       )}
       <WidthDimension

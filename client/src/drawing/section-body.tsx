@@ -28,11 +28,12 @@ function Hook({ stirrup, at }: { readonly stirrup: StirrupOutline; readonly at: 
   const bend = stirrup.cornerRadiusMm * at.pxPerMm;
   const x = at.xPx + stirrup.xMm * at.pxPerMm;
   const y = at.yPx + stirrup.yMm * at.pxPerMm;
-  /** Ends of the bend on the top leg and on the left leg, as seen along the diagonal. */
+  /** The two ends leave the bend where it has turned by 135°, on either side of the diagonal. */
   const near = bend * (1 - Math.SQRT1_2);
+  const far = bend * (1 + Math.SQRT1_2);
   return (
     <path
-      d={`M ${x + near} ${y + near + bend} l ${reach} ${reach} M ${x + near + bend} ${y + near} l ${reach} ${reach}`}
+      d={`M ${x + near} ${y + far} l ${reach} ${reach} M ${x + far} ${y + near} l ${reach} ${reach}`}
       className="fill-none stroke-steel"
       strokeWidth={Math.max(stirrup.legThicknessMm * at.pxPerMm, LEAST_LEG_PX)}
       strokeLinecap="butt"

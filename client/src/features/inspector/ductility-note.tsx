@@ -3,12 +3,6 @@ import type { Evaluation } from '#shared/engine/evaluation.ts';
 import { formatQuantity } from '#client/src/lib/format-quantity.ts';
 import { KeyValue } from '#client/src/ui/key-value.tsx';
 
-const DISPLACED = {
-  deduct: 'concrete displaced by bars inside the block deducted',
-  'deduct-above-axis': 'concrete displaced by bars above the neutral axis deducted',
-  ignore: 'displaced concrete not deducted',
-} as const;
-
 const BEND = {
   'corner-in-bend': 'corner bars set in the stirrup’s bend',
   none: 'no allowance for the stirrup’s bend',
@@ -47,7 +41,7 @@ export function DuctilityNote({
         ]}
       />
       <p className="text-sm text-muted">
-        {ductility.definition}; {DISPLACED[conventions.displacedConcrete]}; {BEND[conventions.bendAllowance]}.
+        {ductility.definition}; {BEND[conventions.bendAllowance]}.
       </p>
       {elastic?.isElasticPictureDoubtful === true && (
         <p className="border-l-2 border-near-mark pl-3 text-sm text-near">

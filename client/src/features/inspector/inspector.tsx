@@ -62,59 +62,65 @@ export function Inspector(props: InspectorProps) {
   const digits = Number(figures);
   const stress = (mpa: number) => formatQuantity(mpa, 'stress', units);
   return (
-    <article className="grid gap-4" aria-label={`Section ${sizeText(section, units)}`}>
-      <header>
-        <h2 className="flex flex-wrap items-baseline gap-x-3">
-          <span className="text-xl font-semibold">{sizeText(section, units)}</span>
-          <span className="num text-base text-steel">{steelText(section, units)}</span>
-        </h2>
-        <p className="text-sm text-muted">
-          f′c {stress(section.fcMPa)}, fy {stress(section.fyMPa)}, stirrups{' '}
-          {stirrupText(section.stirrup, units)}
-        </p>
-      </header>
-      <div className="flex justify-center">
-        <SectionDrawing
-          variant="large"
-          section={section}
-          evaluation={evaluation}
-          standard={standard}
-          units={units}
-        />
-      </div>
-      <VerdictLine evaluation={evaluation} units={units} />
-      {actions}
-      <section>
-        <div className="flex flex-wrap items-center justify-between gap-2 pb-2">
-          <h3 className="text-sm font-semibold">
-            Checks <span className="font-normal text-muted">{evaluation.ruleSet.title}</span>
-          </h3>
-          <div className="flex items-center gap-2 text-xs text-muted">
-            <span aria-hidden="true">figures</span>
-            <SegmentedControl
-              legend="Significant figures"
-              options={FIGURES}
-              value={figures}
-              onChange={setFigures}
+    <article className="@container" aria-label={`Section ${sizeText(section, units)}`}>
+      <div className="grid items-start gap-x-10 gap-y-4 @3xl:grid-cols-2">
+        <div className="grid min-w-0 gap-4">
+          <header>
+            <h2 className="flex flex-wrap items-baseline gap-x-3">
+              <span className="text-xl font-semibold">{sizeText(section, units)}</span>
+              <span className="num text-base text-steel">{steelText(section, units)}</span>
+            </h2>
+            <p className="text-sm text-muted">
+              f′c {stress(section.fcMPa)}, fy {stress(section.fyMPa)}, stirrups{' '}
+              {stirrupText(section.stirrup, units)}
+            </p>
+          </header>
+          <div className="flex justify-center">
+            <SectionDrawing
+              variant="large"
+              section={section}
+              evaluation={evaluation}
+              standard={standard}
+              units={units}
             />
           </div>
+          <VerdictLine evaluation={evaluation} units={units} />
+          {actions}
         </div>
-        <CheckList checks={evaluation.checks} units={units} digits={Math.max(digits, 3)} />
-      </section>
-      <div>
-        <Fold title="Ductility and its convention" isOpen>
-          <DuctilityNote evaluation={evaluation} units={units} digits={digits} />
-        </Fold>
-        <Fold title={units === 'us' ? 'Quantities per foot' : 'Quantities per metre'}>
-          <QuantitiesList quantities={evaluation.quantities} units={units} digits={digits} />
-        </Fold>
-        {evaluation.working.length > 0 && (
-          <Fold title="Working, line by line" isOpen={props.areWorkingLinesOpen === true}>
-            <WorkingLines steps={evaluation.working} units={units} digits={digits} />
-          </Fold>
-        )}
+        <div className="grid min-w-0 gap-4">
+          <section>
+            <div className="flex flex-wrap items-center justify-between gap-2 pb-2">
+              <h3 className="text-sm font-semibold">
+                Checks <span className="font-normal text-muted">{evaluation.ruleSet.title}</span>
+              </h3>
+              <div className="flex items-center gap-2 text-xs text-muted">
+                <span aria-hidden="true">figures</span>
+                <SegmentedControl
+                  legend="Significant figures"
+                  options={FIGURES}
+                  value={figures}
+                  onChange={setFigures}
+                />
+              </div>
+            </div>
+            <CheckList checks={evaluation.checks} units={units} digits={Math.max(digits, 3)} />
+          </section>
+          <div>
+            <Fold title="Ductility and its convention" isOpen>
+              <DuctilityNote evaluation={evaluation} units={units} digits={digits} />
+            </Fold>
+            <Fold title={units === 'us' ? 'Quantities per foot' : 'Quantities per metre'}>
+              <QuantitiesList quantities={evaluation.quantities} units={units} digits={digits} />
+            </Fold>
+            {evaluation.working.length > 0 && (
+              <Fold title="Working, line by line" isOpen={props.areWorkingLinesOpen === true}>
+                <WorkingLines steps={evaluation.working} units={units} digits={digits} />
+              </Fold>
+            )}
+          </div>
+          <LimitsNote evaluation={evaluation} />
+        </div>
       </div>
-      <LimitsNote evaluation={evaluation} />
     </article>
   );
 }

@@ -20,18 +20,18 @@ interface AxisRulerProps {
   readonly edges: readonly EdgeShare[];
 }
 
-function edgeWords(edges: readonly EdgeShare[]): string | null {
+function edgeWords(edges: readonly EdgeShare[], ends: readonly [string, string]): string | null {
   const worst = edges.toSorted((a, b) => b.share - a.share)[0];
   if (worst === undefined || worst.share < WORTH_TELLING) return null;
-  const end = worst.end === 'low' ? 'lower' : 'upper';
-  return `${formatNumber(worst.share * 100, 2, true)} % of the front at the ${end} end`;
+  const end = worst.end === 'low' ? ends[0] : ends[1];
+  return `${formatNumber(worst.share * 100, 2, true)} % of front at ${end}`;
 }
 
 /** One axis drawn as a scale ruler: what share of each value meets every check, and where the chosen section lies. */
 export function AxisRuler({ name, symbol, kind, units, counts, selected, edges }: AxisRulerProps) {
   const marks = rulerMarks(counts, FRAME);
-  const words = edgeWords(edges);
-  const print = (value: number) => formatQuantity(value, kind, units, { hideUnit: true });
+  const print = (value: number | undefined) => formatQuantity(value, kind, units, { hideUnit: true });
+  const words = edgeWords(edges, [print(marks[0]?.value), print(marks.at(-1)?.value)]);
   const chosen = marks.find((mark) => selected !== null && Math.abs(mark.value - selected) < 1e-6 * selected);
   const spoken = marks
     .filter((mark) => mark.isLabelled || mark === chosen)
@@ -44,7 +44,11 @@ export function AxisRuler({ name, symbol, kind, units, counts, selected, edges }
           {name} {symbol}
         </span>
         <span className="text-xs text-muted">{unitLabel(kind, units)}</span>
-        {words !== null && <span className="ml-auto text-xs text-near">{words}</span>}
+        {words !== null && (
+          <span className="ml-auto text-xs text-near" title="The best may lie outside this range">
+            {words}
+          </span>
+        )}
       </p>
       <svg
         viewBox={`0 0 ${FRAME.widthPx} ${HEIGHT}`}

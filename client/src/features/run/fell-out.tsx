@@ -39,7 +39,7 @@ function Shares({ result }: { readonly result: ViewResult }) {
                 </span>
               )}
             </th>
-            <td className="w-[38%] py-0.5 pl-2">
+            <td className="w-[54%] py-0.5 pl-2">
               <span className="flex items-center gap-2">
                 <span className="min-w-0 flex-1" aria-hidden="true">
                   <span
@@ -47,7 +47,7 @@ function Shares({ result }: { readonly result: ViewResult }) {
                     style={{ width: `${(failed / most) * 100}%` }}
                   />
                 </span>
-                <span className="num w-14 text-right">
+                <span className="num w-14 shrink-0 text-right">
                   {formatNumber((failed / result.evaluated) * 100, 3, true)} %
                 </span>
               </span>

@@ -1,12 +1,14 @@
 import { useMemo, useState } from 'react';
+import type { MeasureId } from '#shared/engine/measures.ts';
 import type { Point, FrontPoint } from '#shared/sweep/result.ts';
 import { formatQuantity } from '#client/src/lib/format-quantity.ts';
 import { measureLabel } from '#client/src/lib/measure-labels.ts';
 import { barsText, sizeText } from '#client/src/lib/section-text.ts';
-import { unitLabel } from '#client/src/lib/units.ts';
+import { toDisplay, unitLabel } from '#client/src/lib/units.ts';
 import { Button } from '#client/src/ui/button.tsx';
 import { SegmentedControl } from '#client/src/ui/segmented-control.tsx';
 import { TableFrame } from '#client/src/ui/table-frame.tsx';
+import { columnDecimals } from './column-decimals.ts';
 import type { MeasureReader } from './measure-text.ts';
 import { sortRows, type RowKey, type RowOrder, type SectionRow } from './section-rows.ts';
 import type { SectionSource } from './section-source.ts';
@@ -22,7 +24,7 @@ interface SectionTableProps {
 }
 
 /** More rows than a screen or two are laid out only when asked for. */
-const ROWS_AT_FIRST = 40;
+const ROWS_AT_FIRST = 16;
 
 interface Column {
   readonly key: RowKey;
@@ -39,35 +41,52 @@ function steelCell(row: SectionRow, face: 'tension' | 'compression', reader: Mea
   return formatQuantity(face === 'tension' ? geometry?.asMm2 : geometry?.asPrimeMm2, 'area', reader.units);
 }
 
-function columnsFor(reader: MeasureReader): Column[] {
+const MEASURES = [
+  'steelKgPerM',
+  'costPerM',
+  'curvatureDuctility',
+  'designStrengthNmm',
+  'utilisation',
+] as const;
+
+function measureColumn(measure: MeasureId, reader: MeasureReader, rows: readonly SectionRow[]): Column {
   const { units, currency } = reader;
-  const bare = { hideUnit: true } as const;
-  const measures = [
-    'steelKgPerM',
-    'costPerM',
-    'curvatureDuctility',
-    'designStrengthNmm',
-    'utilisation',
-  ] as const;
+  const label = measureLabel(measure, units);
+  const shown = ({ evaluation }: SectionRow) => {
+    const value = evaluation.measures[measure];
+    return value === null ? null : toDisplay(value, label.kind, units);
+  };
+  const decimals = columnDecimals(rows.map(shown));
+  return {
+    key: measure,
+    head: label.symbol,
+    unit: label.kind === 'money-per-length' ? `${currency ?? ''}${label.unit}` : label.unit,
+    cell: (row) =>
+      shown(row)?.toLocaleString('en-US', {
+        minimumFractionDigits: decimals,
+        maximumFractionDigits: decimals,
+      }) ?? '',
+  };
+}
+
+function columnsFor(reader: MeasureReader, rows: readonly SectionRow[]): Column[] {
+  const { units } = reader;
+  const input = (key: 'width' | 'depth' | 'fc', head: string, kind: 'length' | 'stress'): Column => ({
+    key,
+    head,
+    unit: unitLabel(kind, units),
+    cell: ({ section }) =>
+      formatQuantity(
+        key === 'width' ? section.widthMm : key === 'depth' ? section.depthMm : section.fcMPa,
+        kind,
+        units,
+        { hideUnit: true },
+      ),
+  });
   return [
-    {
-      key: 'width',
-      head: 'b',
-      unit: unitLabel('length', units),
-      cell: (row) => formatQuantity(row.section.widthMm, 'length', units, bare),
-    },
-    {
-      key: 'depth',
-      head: 'h',
-      unit: unitLabel('length', units),
-      cell: (row) => formatQuantity(row.section.depthMm, 'length', units, bare),
-    },
-    {
-      key: 'fc',
-      head: 'f′c',
-      unit: unitLabel('stress', units),
-      cell: (row) => formatQuantity(row.section.fcMPa, 'stress', units, bare),
-    },
+    input('width', 'b', 'length'),
+    input('depth', 'h', 'length'),
+    input('fc', 'f′c', 'stress'),
     {
       key: 'tension',
       head: 'Bottom',
@@ -82,16 +101,7 @@ function columnsFor(reader: MeasureReader): Column[] {
       isText: true,
       cell: (row) => steelCell(row, 'compression', reader),
     },
-    ...measures.map((measure): Column => {
-      const label = measureLabel(measure, units);
-      const unit = label.kind === 'money-per-length' ? `${currency ?? ''}${label.unit}` : label.unit;
-      return {
-        key: measure,
-        head: label.symbol,
-        unit,
-        cell: (row) => formatQuantity(row.evaluation.measures[measure], label.kind, units, bare),
-      };
-    }),
+    ...MEASURES.map((measure) => measureColumn(measure, reader, rows)),
     { key: 'ties', head: 'Ties', unit: '', cell: (row) => (row.tieCount > 1 ? String(row.tieCount) : '') },
   ];
 }
@@ -120,7 +130,7 @@ export function SectionTable(props: SectionTableProps) {
   const [order, setOrder] = useState<RowOrder | null>(null);
   const [isLong, setLong] = useState(false);
   const rows = useRows(props, list, order);
-  const columns = useMemo(() => columnsFor(reader), [reader]);
+  const columns = useMemo(() => columnsFor(reader, rows), [reader, rows]);
   const shown = isLong ? rows : rows.slice(0, ROWS_AT_FIRST);
 
   const orderBy = (key: RowKey) =>

@@ -62,7 +62,7 @@ export function SpaceRail({ definition, result, units, selected }: SpaceRailProp
   ] as const;
   return (
     <section className="grid gap-4">
-      <h2 className="text-xs font-semibold text-muted">The space, and where it meets every check</h2>
+      <h2 className="text-xs font-semibold text-muted">Space, and where it meets every check</h2>
       {RULERS.map(({ axis, name, symbol, kind }) => {
         const fallback = expandAxis(space[axis]).map((value) => ({ value, feasible: 0, evaluated: 0 }));
         return (

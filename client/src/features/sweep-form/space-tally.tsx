@@ -13,6 +13,9 @@ interface SpaceTallyProps {
   readonly runs: readonly RunSummary[];
 }
 
+/** Nobody plans by fractions of a second. */
+const timeText = (ms: number): string => (ms < 1000 ? 'less than 1 s' : formatDuration(ms));
+
 /** How large the space is as it stands, what of it cannot be built anyway, and how long a run will take. */
 export function SpaceTally({ project, reading, runs }: SpaceTallyProps) {
   const definition = reading.kind === 'complete' ? reading.input.definition : null;
@@ -45,7 +48,7 @@ export function SpaceTally({ project, reading, runs }: SpaceTallyProps) {
         <div className="flex justify-between gap-4">
           <dt className="text-muted">A run takes about</dt>
           <dd className="num">
-            {size === null || refusal !== null ? '…' : formatDuration(estimatedMs(size, runs))}
+            {size === null || refusal !== null ? '…' : timeText(estimatedMs(size, runs))}
           </dd>
         </div>
       </dl>

@@ -17,7 +17,7 @@ const FACE_LABEL: Readonly<Record<SteelFace, { readonly name: string; readonly w
 
 const WAYS = [
   { value: 'bars', label: 'Bars' },
-  { value: 'areas', label: 'Plain areas' },
+  { value: 'areas', label: 'Areas' },
 ] as const;
 
 const PLACES = [
