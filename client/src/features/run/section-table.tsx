@@ -1,5 +1,4 @@
 import { useMemo, useState } from 'react';
-import type { MeasureId } from '#shared/engine/measures.ts';
 import type { Point, FrontPoint } from '#shared/sweep/result.ts';
 import { formatQuantity } from '#client/src/lib/format-quantity.ts';
 import { measureLabel } from '#client/src/lib/measure-labels.ts';
@@ -49,7 +48,11 @@ const MEASURES = [
   'utilisation',
 ] as const;
 
-function measureColumn(measure: MeasureId, reader: MeasureReader, rows: readonly SectionRow[]): Column {
+function measureColumn(
+  measure: (typeof MEASURES)[number],
+  reader: MeasureReader,
+  rows: readonly SectionRow[],
+): Column {
   const { units, currency } = reader;
   const label = measureLabel(measure, units);
   const shown = ({ evaluation }: SectionRow) => {
