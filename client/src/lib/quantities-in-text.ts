@@ -13,17 +13,19 @@ const KIND_OF_SI_UNIT: Readonly<Record<string, readonly [kind: DisplayKind, fact
   'kg/m': ['mass-per-length', 1],
 };
 
-const SI_QUANTITY = /(-?\d[\d,]*(?:\.\d+)?(?:e[+-]?\d+)?) (N·mm|kN·m|mm²|mm|MPa|kN|N|kg\/m)(?![\w·²/])/g;
+/** Units of storage that nobody reads, in either system. */
+const STORED_ONLY = ['N·mm', 'N'];
+
+const SI_QUANTITY = /(-?\d[\d,]*(?:\.\d+)?(?:e[+-]?\d+)?) (N·mm|kN·m|mm²|mm|MPa|kN|N|kg\/m)(?![\w·²³⁴/])/g;
 
 /**
  * Messages of the contract and reasons of the engine speak SI. Their quantities are printed again in the reader's units,
  * so that someone typing inches is not told a limit in millimetres.
  */
 export function quantitiesInText(text: string, units: UnitSystem): string {
-  if (units === 'si') return text.replace(/\b1000000000000 N·mm/, '1,000,000 kN·m');
   return text.replace(SI_QUANTITY, (whole, digits: string, unit: string) => {
     const known = KIND_OF_SI_UNIT[unit];
-    if (known === undefined) return whole;
+    if (known === undefined || (units === 'si' && !STORED_ONLY.includes(unit))) return whole;
     const [kind, factor] = known;
     return formatQuantity(Number(digits.replaceAll(',', '')) * factor, kind, units);
   });

@@ -12,13 +12,12 @@ const tell = () => listeners.forEach((listener) => listener());
 /** Resolves to true after a sign-in, to false when it is given up or no page can ask for it. */
 function wait(): Promise<boolean> {
   if (listeners.size === 0) return Promise.resolve(false);
-  if (waiting === null) {
-    let settle: (isSignedIn: boolean) => void = () => undefined;
-    const promise = new Promise<boolean>((resolve) => (settle = resolve));
-    waiting = { promise, settle };
-    tell();
-  }
-  return waiting.promise;
+  if (waiting !== null) return waiting.promise;
+  let settleNow: (isSignedIn: boolean) => void = () => undefined;
+  const promise = new Promise<boolean>((resolve) => (settleNow = resolve));
+  waiting = { promise, settle: settleNow };
+  tell();
+  return promise;
 }
 
 function settle(isSignedIn: boolean): void {
