@@ -4,7 +4,7 @@ import type { PasswordTask } from './password-worker.ts';
 import { resolveWorkerFile } from './worker-file.ts';
 
 /** bcrypt looks at no more than this many bytes; what is longer must be refused when it is set. */
-export const MAX_PASSWORD_BYTES = 72;
+const MAX_PASSWORD_BYTES = 72;
 
 export interface Passwords {
   hash(password: string): Promise<string>;

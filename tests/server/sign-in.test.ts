@@ -1,5 +1,6 @@
 import { eq } from 'drizzle-orm';
 import { describe, expect, it } from 'vitest';
+import { startPasswords } from '#server/compute/passwords.ts';
 import { people } from '#server/db/schema/people.ts';
 import { session } from '#server/db/schema/session.ts';
 import { createPerson, PASSWORD } from '../support/factories.ts';
@@ -52,7 +53,6 @@ describe('signing in', () => {
 
   it('spends as much work on an unknown e-mail as on a wrong password', async () => {
     // At the cost of production a guess takes hundreds of milliseconds; skipping it would show plainly.
-    const { startPasswords } = await import('#server/compute/passwords.ts');
     const passwords = await startPasswords(10);
     try {
       const known = await passwords.hash(PASSWORD);
@@ -61,9 +61,15 @@ describe('signing in', () => {
         expect(await passwords.verify('not it', hash)).toBe(false);
         return performance.now() - startedAt;
       };
-      await time(known);
-      const [wrong, unknown] = [await time(known), await time(undefined)];
-      expect(unknown).toBeGreaterThan(wrong / 3);
+      // The least of five each: whatever else the machine does only ever adds.
+      const wrongs: number[] = [];
+      const unknowns: number[] = [];
+      for (let i = 0; i < 5; i++) {
+        wrongs.push(await time(known));
+        unknowns.push(await time(undefined));
+      }
+      const [wrong, unknown] = [Math.min(...wrongs), Math.min(...unknowns)];
+      expect(unknown).toBeGreaterThan(wrong / 2);
     } finally {
       await passwords.close();
     }
