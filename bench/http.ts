@@ -6,6 +6,7 @@ import { randomUUID } from 'node:crypto';
 import pg from 'pg';
 import { joinPostgres, leavePostgres } from '#server/cli/postgres.mjs';
 import { TEST_FOLDER } from '#server/cli/project-paths.mjs';
+import { runSchema } from '#shared/contract/records.ts';
 import { migrateDatabase } from '#server/db/migrate.ts';
 import { openOffice } from '../tests/support/office.ts';
 import { addProject, scaledSweep } from '../tests/support/office-project.ts';
@@ -47,7 +48,7 @@ async function measure(): Promise<void> {
     const sweepId = await project.addSweep(MILLION);
     const startedAt = performance.now();
     const answer = await engineer.post(`/sweeps/${sweepId}/runs`).expect(200);
-    runId = answer.body.id;
+    runId = runSchema.shape.id.parse((answer.body as { id: unknown }).id);
     const stream = await followRun(office, engineer, { runId });
     await stream.until(hasEnded);
     times.push(performance.now() - startedAt);

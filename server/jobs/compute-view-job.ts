@@ -7,6 +7,9 @@ export const COMPUTE_VIEW_TASK = 'compute-view';
 
 export const computeViewPayloadSchema = z.object({ viewId: idSchema });
 
+/** With the view's id behind it, the key of its one job. */
+export const VIEW_JOB_KEY_PREFIX = 'view:';
+
 /** A job that ends its process (out of memory, say) is not tried for ever. */
 const MAX_ATTEMPTS = 4;
 
@@ -26,6 +29,4 @@ export async function dequeueComputeView(tx: Database, viewId: string): Promise<
   await tx.execute(sql`select graphile_worker.remove_job(${computeViewJobKey(viewId)})`);
 }
 
-export function computeViewJobKey(viewId: string): string {
-  return `view:${viewId}`;
-}
+const computeViewJobKey = (viewId: string) => VIEW_JOB_KEY_PREFIX + viewId;

@@ -3,6 +3,7 @@ import type { Database } from '../db/client.ts';
 import { runViews } from '../db/schema/run-views.ts';
 import type { Log } from '../log.ts';
 import { changeView } from './change-view.ts';
+import { VIEW_JOB_KEY_PREFIX } from './compute-view-job.ts';
 import { WORKER_LOCK_CLASS } from './database-listener.ts';
 
 const UNFINISHED = ['queued', 'running'] as const;
@@ -43,7 +44,7 @@ async function failViewsWithoutJob(db: Database, log: Log): Promise<void> {
     .where(
       sql`${inArray(runViews.state, [...UNFINISHED])} and not exists (
         select from graphile_worker.jobs job
-        where job.key = 'view:' || ${runViews.id}
+        where job.key = ${VIEW_JOB_KEY_PREFIX} || ${runViews.id}
           and (job.locked_at is not null or job.attempts < job.max_attempts)
       )`,
     );

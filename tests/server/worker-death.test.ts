@@ -1,12 +1,13 @@
 import { spawn, type ChildProcess } from 'node:child_process';
 import { once } from 'node:events';
 import { eq } from 'drizzle-orm';
-import { afterAll, beforeAll, expect, test } from 'vitest';
+import { afterEach, beforeEach, expect, test } from 'vitest';
 import { readConfig } from '#server/config.ts';
 import { createDatabase, createPool } from '#server/db/client.ts';
 import { runViews } from '#server/db/schema/run-views.ts';
 import { runs } from '#server/db/schema/runs.ts';
-import { startRun } from '#server/features/runs/commands.ts';
+import { cancelRun, startRun } from '#server/features/runs/commands.ts';
+import { requireRun } from '#server/features/runs/queries.ts';
 import { RunEvents } from '#server/jobs/run-events.ts';
 import { createLog } from '#server/log.ts';
 import { startServices, type Services } from '#server/services.ts';
@@ -26,15 +27,16 @@ let runEvents: RunEvents;
 let child: ChildProcess | undefined;
 let services: Services | undefined;
 
-beforeAll(async () => {
+beforeEach(async () => {
   database = await createTestDatabase();
   pool = createPool(database.url, log);
   runEvents = new RunEvents({ databaseUrl: database.url, log });
   await runEvents.start();
 });
-afterAll(async () => {
+afterEach(async () => {
   child?.kill('SIGKILL');
   await services?.stop();
+  services = undefined;
   await runEvents.stop();
   await pool.end();
   await database.drop();
@@ -46,16 +48,17 @@ const startService = () =>
     stdio: ['ignore', 'ignore', 'inherit'],
   });
 
-test('a run whose process is killed in the middle is taken up by the next one and finishes the same', async () => {
+async function startOfficeRun() {
   const db = createDatabase(pool);
   const ids = await insertPeople(db, 'nobody signs in');
   const project = await addProject({ deps: { db }, idOf: (account) => ids.get(account)! });
   const engineer = { id: ids.get('engineer')!, name: '', email: '', role: 'engineer' } as const;
   const runId = await startRun(db, engineer, await project.addSweep(SWEEP));
-
+  const readRun = async () => (await db.select().from(runs).where(eq(runs.id, runId)))[0]!;
   const readView = async () => (await db.select().from(runViews).where(eq(runViews.runId, runId)))[0]!;
-  const until = (holds: (view: Awaited<ReturnType<typeof readView>>) => boolean) =>
-    new Promise<Awaited<ReturnType<typeof readView>>>((resolve, reject) => {
+  type View = Awaited<ReturnType<typeof readView>>;
+  const until = (holds: (view: View) => boolean) =>
+    new Promise<View>((resolve, reject) => {
       const check = () => {
         readView().then((view) => {
           if (!holds(view)) return;
@@ -66,20 +69,70 @@ test('a run whose process is killed in the middle is taken up by the next one an
       const unfollow = runEvents.follow(runId, { onViewChanged: check, onGap: check, onClosed: reject });
       check();
     });
+  return {
+    readRun,
+    readView,
+    until,
+    cancel: async () => cancelRun(db, engineer, await requireRun(db, engineer, runId)),
+  };
+}
 
+function sweepAtOnce({ definition, basis, sectionCount }: typeof runs.$inferSelect) {
+  const problem = { ...definition, basis };
+  const prepared = prepareSweep(problem, definition.view);
+  return finishResult(problem, definition.view, sweepRange(prepared, 0, sectionCount));
+}
+
+/** Killed, the process leaves its job locked; asked to stop, it puts the job back. */
+const ENDINGS = [
+  { signal: 'SIGKILL', leaves: 'running' },
+  { signal: 'SIGTERM', leaves: 'queued' },
+] as const;
+
+test.each(ENDINGS)(
+  'a run whose process gets $signal in the middle is left $leaves, and the next process finishes it the same',
+  async ({ signal, leaves }) => {
+    const { readRun, readView, until } = await startOfficeRun();
+    child = startService();
+    await until((view) => view.evaluated > 0);
+    child.kill(signal);
+    await once(child, 'exit');
+    expect((await readView()).state).toBe(leaves);
+
+    services = await startServices(readConfig(testEnvironment(database.url)));
+    const finished = await until((view) => view.state === 'finished');
+    const run = await readRun();
+    const expected = sweepAtOnce(run);
+    expect(expected.feasible).toBeGreaterThan(1000);
+    expect(finished).toMatchObject({
+      hash: expected.hash,
+      evaluated: run.sectionCount,
+      feasible: expected.feasible,
+      workerId: null,
+    });
+    expect(run.state).toBe('finished');
+  },
+  60_000,
+);
+
+test('a run cancelled while nobody computes it keeps what the killed process had done', async () => {
+  const { readView, until, cancel } = await startOfficeRun();
   child = startService();
-  const halfDone = await until((view) => view.evaluated > 0);
-  expect(halfDone.state).toBe('running');
+  await until((view) => view.evaluated > 0);
   child.kill('SIGKILL');
   await once(child, 'exit');
-  expect(await readView()).toMatchObject({ state: 'running', workerId: halfDone.workerId });
-
+  const left = await readView();
+  await cancel();
   services = await startServices(readConfig(testEnvironment(database.url)));
-  const finished = await until((view) => view.state === 'finished');
-  const [run] = await db.select().from(runs).where(eq(runs.id, runId));
-  const problem = { ...run!.definition, basis: run!.basis };
-  const { view } = run!.definition;
-  const expected = finishResult(problem, view, sweepRange(prepareSweep(problem, view), 0, run!.sectionCount));
-  expect(finished).toMatchObject({ hash: expected.hash, evaluated: run!.sectionCount, workerId: null });
-  expect(run!.state).toBe('finished');
+  const { evaluated, result } = await until((view) => view.state === 'cancelled');
+  expect(evaluated).toBe(left.evaluated);
+  expect(result).toEqual(left.result);
 }, 60_000);
+
+test('a run whose job ends its process each time is given up, and says so', async () => {
+  const { until } = await startOfficeRun();
+  await pool.query('update graphile_worker._private_jobs set attempts = max_attempts');
+  services = await startServices(readConfig(testEnvironment(database.url)));
+  const { message } = await until((view) => view.state === 'failed');
+  expect(message).toContain('stopped unexpectedly');
+});

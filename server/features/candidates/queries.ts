@@ -25,7 +25,7 @@ export interface CandidateRecord {
 export const listCandidates = (db: Database, projectId: string): Promise<CandidateRecord[]> =>
   findCandidates(db, eq(candidates.projectId, projectId));
 
-export async function getCandidate(db: Database, id: string): Promise<CandidateRecord> {
+async function getCandidate(db: Database, id: string): Promise<CandidateRecord> {
   const [record] = await findCandidates(db, eq(candidates.id, id));
   if (record === undefined) throw notFound('Candidate');
   return record;

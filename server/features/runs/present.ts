@@ -8,7 +8,7 @@ const COSTS_HIDDEN = 'Your role may not see costs, and this view ranks by them';
 
 type ViewState = Omit<ViewRow, 'result'>;
 
-export function presentViewState(view: ViewState, sectionCount: number): Omit<ViewProgress, 'result'> {
+function presentViewState(view: ViewState, sectionCount: number): Omit<ViewProgress, 'result'> {
   return {
     viewId: view.id,
     view: { x: view.x, y: view.y },

@@ -10,6 +10,8 @@ export interface ClaimedView {
   readonly problem: SweepProblem;
   readonly view: View;
   readonly sectionCount: number;
+  /** What an earlier worker had done and written; it is begun anew all the same. */
+  readonly evaluated: number;
   readonly isCancelRequested: boolean;
 }
 
@@ -41,6 +43,7 @@ export async function claimView(
     problem: { space, demand, rules, basis: run.basis },
     view: { x: view.x, y: view.y },
     sectionCount: run.sectionCount,
+    evaluated: view.evaluated,
     isCancelRequested: view.cancelRequestedAt !== null,
   };
 }

@@ -1,16 +1,17 @@
 import { setTimeout as delay } from 'node:timers/promises';
 import { finishResult } from '#shared/sweep/finish.ts';
 import type { ComputePool } from '../../compute/pool.ts';
-import { createCancelFlag, sweepInChunks, type ChunkedSweepResult } from '../../compute/sweep-in-chunks.ts';
+import { sweepInChunks, type ChunkedSweepResult } from '../../compute/sweep-in-chunks.ts';
 import type { Database } from '../../db/client.ts';
 import { isDatabaseAway } from '../../db/database-error.ts';
 import type { Log } from '../../log.ts';
-import { describePart, describeResult } from '../describe-result.ts';
 import { changeView, type ViewChange, type ViewTarget } from '../change-view.ts';
 import { enqueueComputeView } from '../compute-view-job.ts';
+import { describePart, describeResult } from '../describe-result.ts';
 import type { RunEvents } from '../run-events.ts';
 import { claimView, type ClaimedView } from './claim-view.ts';
 import { ProgressWriter } from './progress-writer.ts';
+import { StopSwitch } from './stop-switch.ts';
 
 export interface ComputeViewContext {
   readonly db: Database;
@@ -37,49 +38,57 @@ export async function computeView(
 ): Promise<void> {
   const claimed = await claimView(context.db, { viewId, workerId });
   if (claimed === undefined) return;
-  const startedAt = performance.now();
   const target: ViewTarget = { runId: claimed.runId, viewId, from: ['running'], heldBy: workerId };
-  const cancelFlag = createCancelFlag();
-  const stop = () => Atomics.store(cancelFlag, 0, 1);
-  let isCancelled = claimed.isCancelRequested;
-  const cancel = () => {
-    isCancelled = true;
-    stop();
-  };
-  if (isCancelled) stop();
-  const stopListening = context.runEvents.onCancelled(viewId, cancel);
-  context.stopSignal.addEventListener('abort', stop);
-  const progress = new ProgressWriter(context, target, {
-    claimed,
-    startedAt,
-    onCancelled: cancel,
-    onLost: stop,
-  });
+  if (claimed.isCancelRequested) {
+    // Its worker died before it could obey; what that one had written is kept.
+    const message = describePart(claimed.evaluated, claimed.sectionCount);
+    await writeEnd(context, target, { state: 'cancelled', message });
+    return;
+  }
+  const stopSwitch = new StopSwitch(viewId, context);
   try {
-    const swept = await sweepInChunks({
-      pool: context.compute,
-      key: viewId,
-      problem: claimed.problem,
-      view: claimed.view,
-      sectionCount: claimed.sectionCount,
-      cancelFlag,
-      onProgress: (merged) => progress.offer(merged),
-    });
-    await progress.settle();
-    if (swept.evaluated < claimed.sectionCount && context.stopSignal.aborted && !isCancelled) {
+    await computeClaimed({ claimed, target, stopSwitch }, context);
+  } catch (error) {
+    if (isDatabaseAway(error)) throw error;
+    if (context.stopSignal.aborted) {
       await putBack(context.db, target);
       return;
     }
-    await writeEnd(context, target, describeEnd(claimed, swept, performance.now() - startedAt));
-  } catch (error) {
-    if (isDatabaseAway(error)) throw error;
-    if (context.stopSignal.aborted) return putBack(context.db, target);
     context.log.error({ err: error, viewId }, 'A view could not be computed');
     await writeEnd(context, target, { state: 'failed', message: FAILURE_MESSAGE });
   } finally {
-    stopListening();
-    context.stopSignal.removeEventListener('abort', stop);
+    stopSwitch.release();
   }
+}
+
+interface Claim {
+  readonly claimed: ClaimedView;
+  readonly target: ViewTarget;
+  readonly stopSwitch: StopSwitch;
+}
+
+async function computeClaimed(
+  { claimed, target, stopSwitch }: Claim,
+  context: ComputeViewContext,
+): Promise<void> {
+  const startedAt = performance.now();
+  const progress = new ProgressWriter(context, target, { claimed, startedAt, stopSwitch });
+  const swept = await sweepInChunks({
+    pool: context.compute,
+    key: target.viewId,
+    problem: claimed.problem,
+    view: claimed.view,
+    sectionCount: claimed.sectionCount,
+    cancelFlag: stopSwitch.flag,
+    onProgress: (merged) => progress.offer(merged),
+  });
+  await progress.settle();
+  const isCutShort = swept.evaluated < claimed.sectionCount;
+  if (isCutShort && !stopSwitch.isCancelled && context.stopSignal.aborted) {
+    await putBack(context.db, target);
+    return;
+  }
+  await writeEnd(context, target, describeEnd(claimed, swept, performance.now() - startedAt));
 }
 
 /** A cancel that came when everything was done leaves a finished run. */

@@ -5,6 +5,7 @@ import type { Log } from '../../log.ts';
 import { changeView, type ViewTarget } from '../change-view.ts';
 import { describeResult } from '../describe-result.ts';
 import type { ClaimedView } from './claim-view.ts';
+import type { StopSwitch } from './stop-switch.ts';
 
 /** Often enough for a front that seems to grow by itself, seldom enough to cost nothing. */
 const INTERVAL_MS = 150;
@@ -13,10 +14,7 @@ interface ProgressOptions {
   readonly claimed: ClaimedView;
   /** By performance.now(). */
   readonly startedAt: number;
-  /** A cancel was asked for, and its notification may have been missed. */
-  readonly onCancelled: () => void;
-  /** Another worker holds the view now. */
-  readonly onLost: () => void;
+  readonly stopSwitch: StopSwitch;
 }
 
 /** Writes what is done so far, at most every INTERVAL_MS and one write at a time; what comes in between is skipped. */
@@ -47,13 +45,14 @@ export class ProgressWriter {
   }
 
   async #write(merged: ChunkResult): Promise<void> {
-    const { claimed, startedAt, onCancelled, onLost } = this.#options;
+    const { claimed, startedAt, stopSwitch } = this.#options;
     try {
       const result = finishResult(claimed.problem, claimed.view, merged);
       const elapsedMs = performance.now() - startedAt;
       const view = await changeView(this.#context.db, this.#target, { ...describeResult(result), elapsedMs });
-      if (view === undefined) onLost();
-      else if (view.cancelRequestedAt !== null) onCancelled();
+      // Undefined: another worker holds the view now. A cancel's notification may have been missed.
+      if (view === undefined) stopSwitch.stop();
+      else if (view.cancelRequestedAt !== null) stopSwitch.cancel();
     } catch (error) {
       // Progress is worth nothing later: the next write, or the final one, tells more.
       this.#context.log.warn({ err: error }, 'Progress could not be written');
