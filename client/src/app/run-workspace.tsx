@@ -141,18 +141,20 @@ export function RunWorkspace({ run, project }: RunWorkspaceProps) {
                 pins={pins.flags}
                 bandShare={address.bandShare}
                 selectedIndex={selected?.index ?? null}
+                whenEmpty={
+                  result !== null && (
+                    <NothingFeasible
+                      result={result}
+                      definition={run.definition}
+                      reader={reader}
+                      onSelect={address.select}
+                    />
+                  )
+                }
                 onView={address.setView}
                 onBandShare={address.setBandShare}
                 onSelect={address.select}
               />
-              {result !== null && result.front.length === 0 && !state.isLive && (
-                <NothingFeasible
-                  result={result}
-                  definition={run.definition}
-                  reader={reader}
-                  onSelect={address.select}
-                />
-              )}
               {result !== null && (
                 <SteelAloneNote
                   result={result}

@@ -12,10 +12,13 @@ export function placeIssues<F extends FieldValues>(
 ): string | null {
   if (!(error instanceof ApiError) || error.issues.length === 0) return messageOf(error);
   const homeless: string[] = [];
+  let isFirst = true;
   for (const issue of error.issues) {
     const path = issue.path.join('.');
-    if (hasField(path)) setError(path as FieldPath<F>, { type: 'server', message: issue.message });
-    else homeless.push(issue.message);
+    if (hasField(path)) {
+      setError(path as FieldPath<F>, { type: 'server', message: issue.message }, { shouldFocus: isFirst });
+      isFirst = false;
+    } else homeless.push(issue.message);
   }
   return homeless.length === 0 ? null : homeless.join(' ');
 }

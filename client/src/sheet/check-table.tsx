@@ -20,10 +20,10 @@ export function CheckTable({ checks, units }: CheckTableProps) {
         <tr>
           <th scope="col">Check</th>
           <th scope="col" className="figure">
-            Asked
+            Demand
           </th>
           <th scope="col" className="figure">
-            There
+            Capacity
           </th>
           <th scope="col">Ratio to the limit</th>
         </tr>

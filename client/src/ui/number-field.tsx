@@ -62,7 +62,7 @@ export function NumberField(props: NumberFieldProps) {
             type="text"
             inputMode="decimal"
             autoComplete="off"
-            className="ruled num w-full min-w-12 text-right"
+            className="ruled num w-full max-w-44 min-w-12 text-right"
             disabled={props.isDisabled}
             readOnly={props.isReadOnly}
             placeholder={props.placeholder}

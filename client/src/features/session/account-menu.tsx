@@ -33,46 +33,44 @@ export function AccountMenu({ onShortcuts }: { readonly onShortcuts: () => void 
           ▾
         </span>
       </DropdownMenu.Trigger>
-      <DropdownMenu.Portal>
-        <DropdownMenu.Content
-          align="end"
-          sideOffset={6}
-          className="z-50 min-w-56 border border-ink bg-sheet py-1 text-base"
+      <DropdownMenu.Content
+        align="end"
+        sideOffset={6}
+        className="z-50 min-w-56 border border-ink bg-sheet py-1 text-base"
+      >
+        <DropdownMenu.Label className="px-3 py-1 text-xs text-muted">{reader.email}</DropdownMenu.Label>
+        <DropdownMenu.Separator className="my-1 border-t border-rule" />
+        <DropdownMenu.RadioGroup value={theme} onValueChange={(value) => choose(value as Theme)}>
+          {THEMES.map((name) => (
+            <DropdownMenu.RadioItem
+              key={name}
+              value={name}
+              className={item}
+              onSelect={(e) => e.preventDefault()}
+            >
+              <span className="inline-block w-3">
+                <DropdownMenu.ItemIndicator>●</DropdownMenu.ItemIndicator>
+              </span>
+              {THEME_NAME[name]}
+            </DropdownMenu.RadioItem>
+          ))}
+        </DropdownMenu.RadioGroup>
+        <DropdownMenu.Separator className="my-1 border-t border-rule" />
+        <DropdownMenu.Item className={item} onSelect={onShortcuts}>
+          Keyboard shortcuts
+          <kbd className="num ml-auto text-muted">?</kbd>
+        </DropdownMenu.Item>
+        <DropdownMenu.Item
+          className={item}
+          onSelect={() =>
+            signOut.mutate(undefined, {
+              onError: () => notify.failed('You could not be signed out. Try again.'),
+            })
+          }
         >
-          <DropdownMenu.Label className="px-3 py-1 text-xs text-muted">{reader.email}</DropdownMenu.Label>
-          <DropdownMenu.Separator className="my-1 border-t border-rule" />
-          <DropdownMenu.RadioGroup value={theme} onValueChange={(value) => choose(value as Theme)}>
-            {THEMES.map((name) => (
-              <DropdownMenu.RadioItem
-                key={name}
-                value={name}
-                className={item}
-                onSelect={(e) => e.preventDefault()}
-              >
-                <span className="inline-block w-3">
-                  <DropdownMenu.ItemIndicator>●</DropdownMenu.ItemIndicator>
-                </span>
-                {THEME_NAME[name]}
-              </DropdownMenu.RadioItem>
-            ))}
-          </DropdownMenu.RadioGroup>
-          <DropdownMenu.Separator className="my-1 border-t border-rule" />
-          <DropdownMenu.Item className={item} onSelect={onShortcuts}>
-            Keyboard shortcuts
-            <kbd className="num ml-auto text-muted">?</kbd>
-          </DropdownMenu.Item>
-          <DropdownMenu.Item
-            className={item}
-            onSelect={() =>
-              signOut.mutate(undefined, {
-                onError: () => notify.failed('You could not be signed out. Try again.'),
-              })
-            }
-          >
-            Sign out
-          </DropdownMenu.Item>
-        </DropdownMenu.Content>
-      </DropdownMenu.Portal>
+          Sign out
+        </DropdownMenu.Item>
+      </DropdownMenu.Content>
     </DropdownMenu.Root>
   );
 }
