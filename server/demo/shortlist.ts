@@ -50,7 +50,7 @@ export const DEMO_CANDIDATES: readonly DemoCandidate[] = [
     sweep: 'reading-room',
     alongFront: 0.5,
     day: 4,
-    note: 'Two inches shallower for little steel',
+    note: 'Three inches shallower for little steel',
     steps: [
       { ...CHECKED, after: 2 },
       { to: 'approved', by: 'checker', note: 'Approved for the tender issue', after: 4 },
