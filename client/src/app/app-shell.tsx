@@ -1,15 +1,21 @@
-import { useState } from 'react';
+import { lazy, Suspense, useState } from 'react';
 import { Link, Outlet, ScrollRestoration, useNavigation } from 'react-router-dom';
-import { AccountMenu } from '#client/src/features/session/account-menu.tsx';
 import { CrumbsContext } from '#client/src/lib/crumbs-context.ts';
 import { paths } from '#client/src/lib/paths.ts';
+import { useReader } from '#client/src/lib/reader-context.ts';
 import { Wordmark } from '#client/src/ui/wordmark.tsx';
 import { ShortcutsDialog } from './shortcuts-dialog.tsx';
 import { useShortcuts } from './use-shortcuts.ts';
 
+/** Its floating part weighs as much as the rest of the shell; until it is there the bar shows the name alone. */
+const AccountMenu = lazy(async () => ({
+  default: (await import('#client/src/features/session/account-menu.tsx')).AccountMenu,
+}));
+
 /** The top bar on every page of the office: name, trail, person. The page fills what is below. */
 export function AppShell() {
   const [crumbsSlot, setCrumbsSlot] = useState<HTMLElement | null>(null);
+  const reader = useReader();
   const [isHelpOpen, setHelpOpen] = useState(false);
   const isArriving = useNavigation().state === 'loading';
   useShortcuts(() => setHelpOpen(true));
@@ -33,7 +39,9 @@ export function AppShell() {
             <ol ref={setCrumbsSlot} className="flex min-w-0 items-baseline gap-2" />
           </nav>
           <span className="ml-auto" />
-          <AccountMenu onShortcuts={() => setHelpOpen(true)} />
+          <Suspense fallback={<span className="px-1">{reader.name}</span>}>
+            <AccountMenu onShortcuts={() => setHelpOpen(true)} />
+          </Suspense>
           {isArriving && <span className="arriving" aria-hidden="true" />}
         </header>
         <main id="main" tabIndex={-1} className="flex min-w-0 flex-1 flex-col outline-none">

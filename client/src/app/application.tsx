@@ -1,9 +1,11 @@
 import { QueryClientProvider } from '@tanstack/react-query';
-import { useState } from 'react';
+import { lazy, Suspense, useState } from 'react';
 import { RouterProvider } from 'react-router-dom';
-import { ToastRegion } from '#client/src/ui/toast.tsx';
 import { createQueryClient } from './query-client.ts';
 import { createRouter } from './router.tsx';
+
+/** Nothing to announce before a page stands. */
+const ToastRegion = lazy(async () => ({ default: (await import('#client/src/ui/toast.tsx')).ToastRegion }));
 
 export function Application() {
   const [client] = useState(createQueryClient);
@@ -11,7 +13,9 @@ export function Application() {
   return (
     <QueryClientProvider client={client}>
       <RouterProvider router={router} />
-      <ToastRegion />
+      <Suspense>
+        <ToastRegion />
+      </Suspense>
     </QueryClientProvider>
   );
 }

@@ -75,7 +75,7 @@ export function CandidatePage() {
       {candidate.note !== '' && <p className="mb-6 max-w-prose whitespace-pre-wrap">{candidate.note}</p>}
       <div className="grid items-start grid-cols-[minmax(0,1fr)] gap-x-10 gap-y-8 lg:grid-cols-[minmax(0,1fr)_18rem]">
         <CandidateSheet candidate={candidate} units={project.designBasis.units} hasMoney={hasMoney} />
-        <aside className="order-first grid gap-8 lg:order-none lg:sticky lg:top-6">
+        <aside className="order-first grid gap-8 lg:order-none print:order-last lg:sticky lg:top-6">
           <StatePanel candidate={candidate} />
           <CommentsPanel candidate={candidate} />
         </aside>

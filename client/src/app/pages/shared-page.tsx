@@ -90,7 +90,11 @@ function SharedBody({ shared }: { readonly shared: SharedShortlist }) {
               />
             )}
             {group.map((candidate) => (
-              <details key={candidate.id} open={group.length === 1} className="border-t border-rule pt-3">
+              <details
+                key={candidate.id}
+                open={group.length === 1}
+                className="border-t border-rule pt-3 print:break-before-page"
+              >
                 <summary className="flex flex-wrap items-center gap-3 py-1">
                   <CandidateFlag label={candidate.label} />
                   <span className="font-semibold">Calculation of candidate {candidate.label}</span>

@@ -1,9 +1,12 @@
-import { useSyncExternalStore } from 'react';
+import { lazy, Suspense, useSyncExternalStore } from 'react';
 import { useReader } from '#client/src/lib/reader-context.ts';
 import { signInGate } from '#client/src/lib/sign-in-gate.ts';
 import { Button } from '#client/src/ui/button.tsx';
 import { Dialog } from '#client/src/ui/dialog.tsx';
-import { SignInForm } from './sign-in-form.tsx';
+import { Skeleton } from '#client/src/ui/skeleton.tsx';
+
+/** Fetched when a session ends, which most visits never see. */
+const SignInForm = lazy(async () => ({ default: (await import('./sign-in-form.tsx')).SignInForm }));
 
 /** Lies over whatever page a call found its session expired on; the page below keeps everything typed into it. */
 export function SessionExpiredDialog() {
@@ -17,7 +20,9 @@ export function SessionExpiredDialog() {
       description="Sign in to go on where you were. What you typed on this page is kept."
       isSticky
     >
-      <SignInForm initialEmail={reader.email} onSignedIn={() => signInGate.settle(true)} />
+      <Suspense fallback={<Skeleton lines={4} />}>
+        <SignInForm initialEmail={reader.email} onSignedIn={() => signInGate.settle(true)} />
+      </Suspense>
       <p className="mt-3 text-sm">
         <Button look="text" onClick={() => signInGate.settle(false)}>
           Not now

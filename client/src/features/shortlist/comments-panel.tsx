@@ -15,7 +15,7 @@ import { useComment } from './api.ts';
 export function CommentsPanel({ candidate }: { readonly candidate: Candidate }) {
   const mayComment = useMay('comment');
   return (
-    <section aria-label="Comments">
+    <section aria-label="Comments" className="print:hidden">
       <h2 className="mb-2 font-semibold">Comments</h2>
       {candidate.comments.length === 0 && <p className="text-sm text-muted">None yet.</p>}
       <ol className="grid gap-2">
