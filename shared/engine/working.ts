@@ -62,8 +62,20 @@ function materials({ section, basis, ruleSet, flexure, elastic }: WorkingSource)
   const fc: Input = ['f′c', section.fcMPa, 'stress'];
   const { clauses } = ruleSet;
   return [
-    step('beta1', 'materials', ['β1', 'from f′c', flexure.beta1, 'ratio'], [fc], clauses.block),
-    step('ec', 'materials', ['Ec', 'from f′c', elastic.ecMPa, 'stress'], [fc], clauses.concreteModulus),
+    step(
+      'beta1',
+      'materials',
+      ['β1', ruleSet.formulas.blockDepthFactor, flexure.beta1, 'ratio'],
+      [fc],
+      clauses.block,
+    ),
+    step(
+      'ec',
+      'materials',
+      ['Ec', ruleSet.formulas.concreteModulus, elastic.ecMPa, 'stress'],
+      [fc],
+      clauses.concreteModulus,
+    ),
     step(
       'n',
       'materials',
@@ -186,7 +198,7 @@ function strength({ flexure, section, basis, ruleSet }: WorkingSource): WorkingS
     step(
       'phi',
       'strength',
-      ['φ', 'from εt between εty and the tension-controlled limit', flexure.strengthReduction, 'ratio'],
+      ['φ', ruleSet.formulas.strengthReduction, flexure.strengthReduction, 'ratio'],
       [
         ['εt', flexure.tensionStrain, 'strain'],
         ['εty', section.fyMPa / basis.esMPa, 'strain'],
@@ -216,7 +228,13 @@ function limits(source: WorkingSource): WorkingStep[] {
     ['b', section.widthMm, 'length'],
     ['d', layout.dMm, 'length'],
   ];
-  const least = step('as-min', 'limits', ['As,min', 'from f′c, fy, b d', leastMm2, 'area'], inputs, clause);
+  const least = step(
+    'as-min',
+    'limits',
+    ['As,min', ruleSet.formulas.leastSteel, leastMm2, 'area'],
+    inputs,
+    clause,
+  );
   if (waivedAtMm2 === null || demand.muNmm === null) return [least];
   const waiver: readonly [string, string, number, QuantityKind] = [
     'As,waive',
@@ -234,7 +252,7 @@ function elasticSteps({ section, layout, elastic, ruleSet }: WorkingSource): Wor
     step(
       'fr',
       'elastic',
-      ['fr', 'from f′c', elastic.ruptureModulusMPa, 'stress'],
+      ['fr', ruleSet.formulas.ruptureModulus, elastic.ruptureModulusMPa, 'stress'],
       [['f′c', section.fcMPa, 'stress']],
       ruleSet.clauses.ruptureModulus,
     ),

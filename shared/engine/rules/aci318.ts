@@ -1,6 +1,6 @@
 import type { RuleSetId } from '../section.ts';
 import { MM_PER_IN, MPA_PER_PSI } from '../units.ts';
-import type { Clauses, RuleSet } from './rule-set.ts';
+import type { Clauses, Formulas, RuleSet } from './rule-set.ts';
 
 /**
  * ACI 318, editions 2014 and 2019, US customary and metric. The editions differ in the strain limits; the metric books
@@ -25,6 +25,7 @@ interface Coefficients {
   readonly gapMm: number;
   readonly hookTailLeastMm: number;
   readonly largestTightBendMm: number;
+  readonly formulas: Omit<Formulas, 'strengthReduction'>;
 }
 
 const beta1 = (strengthAboveKnee: number) => Math.max(0.65, Math.min(0.85, 0.85 - 0.05 * strengthAboveKnee));
@@ -39,6 +40,12 @@ const US: Coefficients = {
   gapMm: MM_PER_IN,
   hookTailLeastMm: 3 * MM_PER_IN,
   largestTightBendMm: 0.625 * MM_PER_IN,
+  formulas: {
+    blockDepthFactor: '0.85 − 0.05 (f′c − 4000)/1000, within 0.65 and 0.85; f′c in psi',
+    concreteModulus: '57000 √f′c; psi',
+    ruptureModulus: '7.5 √f′c; psi',
+    leastSteel: 'max(3 √f′c, 200) b d/fy; psi, fy at most 80,000 psi',
+  },
 };
 
 const METRIC: Coefficients = {
@@ -52,6 +59,12 @@ const METRIC: Coefficients = {
   gapMm: 25,
   hookTailLeastMm: 75,
   largestTightBendMm: 16,
+  formulas: {
+    blockDepthFactor: '0.85 − 0.05 (f′c − 28)/7, within 0.65 and 0.85; f′c in MPa',
+    concreteModulus: '4700 √f′c; MPa',
+    ruptureModulus: '0.62 √f′c; MPa',
+    leastSteel: 'max(0.25 √f′c, 1.4) b d/fy; MPa, fy at most 550 MPa',
+  },
 };
 
 const clausesOf = (book: string): Clauses => ({
@@ -105,5 +118,12 @@ export function aci318({ id, year, isMetric }: Edition): RuleSet {
     bendRadiusMm: (ds) => (ds <= c.largestTightBendMm + 0.01 ? 2 * ds : 3 * ds),
     hookTailMm: (ds) => Math.max(6 * ds, c.hookTailLeastMm),
     clauses: clausesOf(book),
+    formulas: {
+      ...c.formulas,
+      strengthReduction:
+        year === '19'
+          ? '0.65 + 0.25 (εt − εty)/0.003, within 0.65 and 0.90'
+          : '0.65 + 0.25 (εt − εty)/(0.005 − εty), within 0.65 and 0.90',
+    },
   };
 }

@@ -13,6 +13,15 @@ export interface Clauses {
   readonly hangers: string;
 }
 
+/** The rule as its book prints it, in the book's units, for the working shown beside a result. */
+export interface Formulas {
+  readonly blockDepthFactor: string;
+  readonly concreteModulus: string;
+  readonly ruptureModulus: string;
+  readonly leastSteel: string;
+  readonly strengthReduction: string;
+}
+
 /**
  * A design code as data plus small functions. Stresses MPa, lengths mm, areas mm². Adding a code is adding one file
  * that makes one of these, and its id in section.ts.
@@ -33,7 +42,10 @@ export interface RuleSet {
   strengthReduction(epsilonT: number, epsilonTy: number): number;
   /** Least εt of a beam. */
   leastTensionStrain(epsilonTy: number): number;
-  /** Least tension steel of a beam of web width and effective depth, without the waiver. */
+  /**
+   * Least tension steel of a beam of web width and effective depth, without the waiver. Proportional to d: the hot loop
+   * calls it with d = 1.
+   */
   leastSteelMm2(section: { fcMPa: number; fyMPa: number; widthMm: number; dMm: number }): number;
   /** Provided over required steel at which the least steel is waived. */
   readonly leastSteelWaiver: number;
@@ -48,4 +60,5 @@ export interface RuleSet {
   /** Straight end of a 135° stirrup hook. */
   hookTailMm(stirrupDiameterMm: number): number;
   readonly clauses: Clauses;
+  readonly formulas: Formulas;
 }
