@@ -1,4 +1,4 @@
-import { createHash } from 'node:crypto';
+import { createHash, randomUUID } from 'node:crypto';
 import { mkdir, rename, writeFile } from 'node:fs/promises';
 import path from 'node:path';
 import { fileURLToPath, pathToFileURL } from 'node:url';
@@ -28,7 +28,8 @@ export async function resolveWorkerFile(name: string): Promise<string> {
   const file = path.join(folder, `${name}.${digest}.mjs`);
   await mkdir(folder, { recursive: true });
   // Renamed when complete: parallel test files bundle the same worker.
-  await writeFile(`${file}.${process.pid}`, code);
-  await rename(`${file}.${process.pid}`, file);
+  const unfinished = `${file}.${randomUUID()}`;
+  await writeFile(unfinished, code);
+  await rename(unfinished, file);
   return pathToFileURL(file).href;
 }
