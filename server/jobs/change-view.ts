@@ -32,17 +32,27 @@ export type ViewChange = Partial<
   >
 >;
 
+/** All but the result, which can be large. */
+const CHANGED_COLUMNS = {
+  id: runViews.id,
+  x: runViews.x,
+  y: runViews.y,
+  evaluated: runViews.evaluated,
+  cancelRequestedAt: runViews.cancelRequestedAt,
+};
+export type ChangedView = Pick<typeof runViews.$inferSelect, keyof typeof CHANGED_COLUMNS>;
+
 const ENDED: readonly RunState[] = ['finished', 'cancelled', 'failed'];
 
 /**
  * The one way to change a view: writes it, keeps the run's own state in step, and tells whoever follows the run.
- * Answers the view's row as it is now, or undefined where the target did not allow it.
+ * Answers the view as it is now, or undefined where the target did not allow it.
  */
 export async function changeView(
   db: Database,
   target: ViewTarget,
   change: ViewChange,
-): Promise<typeof runViews.$inferSelect | undefined> {
+): Promise<ChangedView | undefined> {
   return db.transaction(async (tx) => {
     // The run's row first, always: its lock puts the events of all its views in order of commit, without deadlocks.
     const [run] = await tx
@@ -61,7 +71,7 @@ export async function changeView(
           target.heldBy === undefined ? undefined : eq(runViews.workerId, target.heldBy),
         ),
       )
-      .returning();
+      .returning(CHANGED_COLUMNS);
     if (view === undefined) return undefined;
     const isOwnView = run.view.x === view.x && run.view.y === view.y;
     if (isOwnView && change.state !== undefined) await setRunState(tx, target.runId, change.state);

@@ -1,8 +1,9 @@
+import pg from 'pg';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import type { Run, ViewProgress } from '#shared/contract/records.ts';
 import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
 import { addProject, scaledSweep, SMALL_SWEEP, type OfficeProject } from '../support/office-project.ts';
-import { followRun, hasEnded } from '../support/run-stream.ts';
+import { followRun, hasEnded, type RunStream } from '../support/run-stream.ts';
 import type { SignedIn, TestOffice } from '../support/office.ts';
 import { openTestOffice } from '../support/test-office.ts';
 
@@ -152,16 +153,43 @@ describe('the stream of a run', () => {
     expect(progress.state).toBe('finished');
   });
 
-  test('survives that the database cuts its connections, and misses nothing', async () => {
+  test('survives that the database cuts its listening connection, and misses nothing', async () => {
     const run = await start(LONG_SWEEP);
     const stream = await follow(run);
     await stream.until(isUnderWay);
-    await office.deps.pool.query(
-      `select pg_terminate_backend(pid) from pg_stat_activity
-       where datname = current_database() and application_name = 'fairweight-listener'`,
-    );
+    await cutConnections(`application_name = 'fairweight-listener'`);
     await engineer.post(`/runs/${run.id}/cancel`).expect(200);
     expect((await stream.until(hasEnded)).progress.state).toBe('cancelled');
     stream.close();
   });
+
+  test('breaks off at worst when all connections are cut, and the run finishes all the same', async () => {
+    const run = await start(scaledSweep(60, 901));
+    const stream = await follow(run);
+    await stream.until(isUnderWay);
+    await cutConnections('pid <> pg_backend_pid()');
+    const { progress } = await stream
+      .until(hasEnded)
+      .catch(async () => (await reconnect(run)).until(hasEnded));
+    stream.close();
+    expect(progress).toMatchObject({ state: 'finished', evaluated: 60 * 901 * 96 });
+    const next = await follow(await start(SMALL_SWEEP));
+    expect((await next.until(hasEnded)).progress.state).toBe('finished');
+    next.close();
+  });
 });
+
+async function cutConnections(which: string): Promise<void> {
+  const admin = new pg.Client({ connectionString: office.databaseUrl });
+  await admin.connect();
+  await admin.query(
+    `select pg_terminate_backend(pid) from pg_stat_activity where datname = current_database() and ${which}`,
+  );
+  await admin.end();
+}
+
+/** As a browser does: again until the server answers with a stream. */
+async function reconnect(run: Run): Promise<RunStream> {
+  const stream = await follow(run);
+  return String(stream.headers['content-type']).startsWith('text/event-stream') ? stream : reconnect(run);
+}

@@ -65,13 +65,18 @@ async function insertRun(tx: Database, { sweepId, definition, basis, startedBy }
   return run!.id;
 }
 
-/** Undefined where the run has such a view already. */
-async function insertView(tx: Database, runId: string, { x, y }: View): Promise<ViewRow | undefined> {
-  const [inserted] = await tx.insert(runViews).values({ runId, x, y }).onConflictDoNothing().returning();
+/** Answers its id; undefined where the run has such a view already. */
+async function insertView(tx: Database, runId: string, { x, y }: View): Promise<string | undefined> {
+  const [inserted] = await tx
+    .insert(runViews)
+    .values({ runId, x, y })
+    .onConflictDoNothing()
+    .returning({ id: runViews.id });
   if (inserted === undefined) return undefined;
   await enqueueComputeView(tx, inserted.id);
   // No change but the event: whoever follows the run learns of the new view.
-  return changeView(tx, { runId, viewId: inserted.id, from: ['queued'] }, {});
+  await changeView(tx, { runId, viewId: inserted.id, from: ['queued'] }, {});
+  return inserted.id;
 }
 
 /** Stops what is in work, keeping what is done, and takes out what still waits. Nothing to stop is no error. */
@@ -126,8 +131,7 @@ export async function openView(
   if (missing.length > 0) throw invalidInput(missing);
   const viewId = await db.transaction(async (tx) => {
     const inserted = await insertView(tx, run.id, view);
-    if (inserted !== undefined) return inserted.id;
-    return retryView(tx, record, view);
+    return inserted ?? retryView(tx, record, view);
   });
   return requireView(db, person, { runId: run.id, viewId });
 }
