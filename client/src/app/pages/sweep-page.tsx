@@ -1,5 +1,5 @@
 import { useQuery, useQueryClient } from '@tanstack/react-query';
-import { useState } from 'react';
+import { useEffect, useState } from 'react';
 import { useNavigate, useParams, useSearchParams } from 'react-router-dom';
 import type { Beam, Sweep } from '#shared/contract/records.ts';
 import { beamsQuery } from '#client/src/features/beams/api.ts';
@@ -114,6 +114,9 @@ function SweepEditor({ beam, sweep, copyOf }: EditorProps) {
   );
 }
 
+/** The page a run opens on, fetched while its sweep is being typed. */
+const preloadRunPage = (): void => void import('./run-page.tsx');
+
 /** A refusal is shown by the form itself, from the mutation's state. */
 const ignoreHere = (): void => undefined;
 
@@ -121,6 +124,7 @@ const ignoreHere = (): void => undefined;
 export function SweepPage() {
   const project = useProject();
   const mayRun = useMay('run-sweeps');
+  useEffect(preloadRunPage, []);
   const { beamId, sweepId } = useParams();
   const copyId = useSearchParams()[0].get('from');
   const beams = useQuery(beamsQuery(project.id));

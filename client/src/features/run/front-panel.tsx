@@ -1,4 +1,4 @@
-import { useCallback, useId, useMemo } from 'react';
+import { useCallback, useId, useMemo, type ReactNode } from 'react';
 import type { Run, ViewProgress } from '#shared/contract/records.ts';
 import type { MeasureId } from '#shared/engine/measures.ts';
 import type { View } from '#shared/sweep/problem.ts';
@@ -24,6 +24,8 @@ interface FrontPanelProps {
   readonly pins: readonly ChartPin[];
   readonly bandShare: number;
   readonly selectedIndex: number | null;
+  /** Stands in the chart's place when a whole run found nothing. */
+  readonly whenEmpty: ReactNode;
   readonly onView: (view: View) => void;
   readonly onBandShare: (share: number) => void;
   readonly onSelect: (index: number) => void;
@@ -104,6 +106,7 @@ export function FrontPanel(props: FrontPanelProps) {
     },
     [source, reader, units, view, result],
   );
+  const isEmpty = result?.front.length === 0 && progress !== null && !isUnderWay(progress.state);
   const isCut = result?.isBandCut === true && band.length === result.band.length;
 
   return (
@@ -130,28 +133,32 @@ export function FrontPanel(props: FrontPanelProps) {
           onChange={props.onBandShare}
         />
       </div>
-      <div className="h-[clamp(19rem,46dvh,34rem)]">
-        {result === null ? (
-          <div className="h-full animate-pulse border-b border-l border-rule" role="status">
-            <span className="sr-only">The chart appears with the first results</span>
-          </div>
-        ) : (
-          <FrontChart
-            x={x}
-            y={y}
-            cells={result.density}
-            front={result.front}
-            band={band}
-            bandShare={bandShare}
-            pins={pins}
-            target={target}
-            describe={describe}
-            selectedIndex={selectedIndex}
-            onSelect={onSelect}
-            isGrowing={progress !== null && isUnderWay(progress.state)}
-          />
-        )}
-      </div>
+      {isEmpty ? (
+        props.whenEmpty
+      ) : (
+        <div className="h-[clamp(19rem,46dvh,34rem)]">
+          {result === null ? (
+            <div className="h-full animate-pulse border-b border-l border-rule" role="status">
+              <span className="sr-only">The chart appears with the first results</span>
+            </div>
+          ) : (
+            <FrontChart
+              x={x}
+              y={y}
+              cells={result.density}
+              front={result.front}
+              band={band}
+              bandShare={bandShare}
+              pins={pins}
+              target={target}
+              describe={describe}
+              selectedIndex={selectedIndex}
+              onSelect={onSelect}
+              isGrowing={progress !== null && isUnderWay(progress.state)}
+            />
+          )}
+        </div>
+      )}
     </section>
   );
 }

@@ -16,7 +16,9 @@ export function ProofLine({ run, progress }: { readonly run: Run; readonly progr
         : `${count} of ${formatWhole(result.sectionCount)} evaluated, none of these better than the front`;
   return (
     <footer className="num flex flex-wrap gap-x-6 gap-y-1 border-t border-ink px-4 py-1.5 text-sm sm:px-5">
-      <strong className="font-semibold text-meets">{claim}</strong>
+      <strong className={`font-semibold ${result.front.length === 0 ? 'text-fails' : 'text-meets'}`}>
+        {claim}
+      </strong>
       <span>{formatWhole(result.feasible)} meet every listed check</span>
       <span>front {formatWhole(result.front.length)}</span>
       <span title="Equal for equal results, whatever the machine">{result.hash}</span>

@@ -1,15 +1,21 @@
 import { useMemo } from 'react';
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Run } from '#shared/contract/records.ts';
+import type { ViewResult } from '#shared/sweep/result.ts';
+import { pricesOfChecks } from './price-of-checks.ts';
 import { useCancelRun, useRunEvents, useView } from './run-api.ts';
 import { createSectionSource, type SectionSource } from './section-source.ts';
 import { useRunAddress } from './use-run-address.ts';
 import { isUnderWay } from './view-progress.ts';
 
-/** A section someone asked for by its number, or the best one; a number outside the space is as if not given. */
-function chosenIndex(source: SectionSource, asked: number | null, best: number | undefined): number | null {
+/**
+ * A section someone asked for by its number; else the best one; else, where none meets every check, the nearest. A
+ * number outside the space is as if not given.
+ */
+function chosenIndex(source: SectionSource, asked: number | null, result: ViewResult | null): number | null {
   if (asked !== null && asked < source.size) return asked;
-  return best ?? null;
+  if (result === null) return null;
+  return result.front[0]?.index ?? pricesOfChecks(result)[0]?.index ?? null;
 }
 
 /** Everything a run's page shows, from the address, the service and the engine. */
@@ -26,7 +32,7 @@ export function useRunView(run: Run, units: UnitSystem) {
   const reader = useMemo(() => ({ units, currency: basis.rates?.currency ?? null }), [units, basis.rates]);
 
   const result = progress?.result ?? null;
-  const index = chosenIndex(source, address.index, result?.front[0]?.index);
+  const index = chosenIndex(source, address.index, result);
   const selected = useMemo(() => (index === null ? null : source.evaluatedAt(index)), [source, index]);
   return {
     address,
