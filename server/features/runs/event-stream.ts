@@ -23,60 +23,81 @@ interface RunStream {
   readonly lastEventId: number | undefined;
 }
 
-/**
- * Sends the state of each view of the run, then each change. An event's id is the run's sequence number. Commits of one
- * run follow its sequence, so "all views changed after the last id" never misses one, however slow the client or
- * whatever notifications were lost; states in between that nobody read in time are skipped.
- */
-export function streamRun({ db, log, runEvents, res, person, record, lastEventId }: RunStream): void {
-  const { run } = record;
-  // Sequence numbers begin at 0; an id from the future is not one of ours.
-  let sent = lastEventId !== undefined && lastEventId <= run.eventSequence ? lastEventId : -1;
-  let isDirty = true;
-  let isSending = false;
-  let isClosed = false;
-
-  async function sendChanges(): Promise<void> {
-    if (isSending) return;
-    isSending = true;
-    try {
-      while (isDirty && !isClosed) {
-        isDirty = false;
-        for (const view of await listViewsChangedAfter(db, run.id, sent)) {
-          sent = view.sequence;
-          const data = JSON.stringify(presentViewProgress(view, run.sectionCount, person));
-          if (!res.write(`event: progress\nid: ${sent}\ndata: ${data}\n\n`)) await once(res, 'drain');
-        }
-      }
-    } catch (error) {
-      // The client connects again and is told what it missed.
-      if (!isClosed) log.warn({ err: error }, 'A stream of run events broke off');
-      res.end();
-    } finally {
-      isSending = false;
-    }
-  }
-  const refresh = () => {
-    isDirty = true;
-    void sendChanges();
-  };
-
+/** Answers the stream: the state of each view of the run, then each change, until either side ends it. */
+export function streamRun(stream: RunStream): void {
+  const { runEvents, res, record } = stream;
   // `no-transform`: no proxy may hold events back to compress them.
   res.set({ 'content-type': 'text/event-stream', 'cache-control': 'no-store, no-transform' });
   res.flushHeaders();
   res.write(`retry: ${RETRY_MS}\n\n`);
+  const sender = new ChangeSender(stream);
   const heartbeat = setInterval(() => res.write(': still here\n\n'), HEARTBEAT_MS);
-  const unfollow = runEvents.follow(run.id, {
-    onViewChanged: refresh,
-    onGap: refresh,
+  const send = () => void sender.send();
+  const unfollow = runEvents.follow(record.run.id, {
+    onViewChanged: send,
+    onGap: send,
     onClosed: () => res.end(),
   });
   res.once('close', () => {
-    isClosed = true;
     clearInterval(heartbeat);
     unfollow();
-    // Whoever waits for it to drain is let go.
-    res.emit('drain');
+    sender.close();
   });
-  refresh();
+  send();
+}
+
+/**
+ * An event's id is the run's sequence number. Commits of one run follow its sequence, so "all views changed after the
+ * last id" never misses one, however slow the client or whatever notifications were lost; states in between that
+ * nobody read in time are skipped.
+ */
+class ChangeSender {
+  readonly #stream: RunStream;
+  #sent: number;
+  #isDirty = false;
+  #isSending = false;
+  #isClosed = false;
+
+  constructor(stream: RunStream) {
+    this.#stream = stream;
+    const { lastEventId, record } = stream;
+    // Sequence numbers begin at 0; an id from the future is not one of ours.
+    this.#sent = lastEventId !== undefined && lastEventId <= record.run.eventSequence ? lastEventId : -1;
+  }
+
+  async send(): Promise<void> {
+    this.#isDirty = true;
+    if (this.#isSending) return;
+    this.#isSending = true;
+    const { res, log } = this.#stream;
+    try {
+      while (this.#isDirty && !this.#isClosed) {
+        this.#isDirty = false;
+        await this.#sendChanges();
+      }
+    } catch (error) {
+      // The client connects again and is told what it missed.
+      if (!this.#isClosed) log.warn({ err: error }, 'A stream of run events broke off');
+      res.end();
+    } finally {
+      this.#isSending = false;
+    }
+  }
+
+  close(): void {
+    this.#isClosed = true;
+    // Whoever waits for it to drain is let go.
+    this.#stream.res.emit('drain');
+  }
+
+  async #sendChanges(): Promise<void> {
+    const { db, res, person, record } = this.#stream;
+    const { id, sectionCount } = record.run;
+    for (const view of await listViewsChangedAfter(db, id, this.#sent)) {
+      if (this.#isClosed) return;
+      this.#sent = view.sequence;
+      const data = JSON.stringify(presentViewProgress(view, sectionCount, person));
+      if (!res.write(`event: progress\nid: ${view.sequence}\ndata: ${data}\n\n`)) await once(res, 'drain');
+    }
+  }
 }
