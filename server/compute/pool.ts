@@ -10,6 +10,9 @@ export interface ComputePool {
   close(): Promise<void>;
 }
 
+/** Sweeps give way to whoever waits for an answer: the event loop and the database share the cores with them. */
+const NICE = 5;
+
 /** `threads` is explicit: the default, one and a half per core, only adds turns between threads. */
 export async function startComputePool(threads: number): Promise<ComputePool> {
   const piscina = new Piscina<SweepTask, SweepReply>({
@@ -18,6 +21,7 @@ export async function startComputePool(threads: number): Promise<ComputePool> {
     minThreads: threads,
     maxThreads: threads,
     concurrentTasksPerWorker: 1,
+    niceIncrement: NICE,
   });
   return {
     threads,
