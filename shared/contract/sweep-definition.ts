@@ -71,6 +71,12 @@ const steelSetsSchema = (label: string, isEmptyAllowed: boolean) =>
       }),
     ])
     .superRefine((sets, ctx) => {
+      if (sets.kind === 'bars' && sets.none && !isEmptyAllowed)
+        ctx.addIssue({
+          code: 'custom',
+          path: ['none'],
+          message: `${label}: a beam needs steel at this face`,
+        });
       if (sets.kind !== 'bars' || (isEmptyAllowed && sets.none) || sets.mixed?.length) return;
       if (sets.sizes.length === 0)
         ctx.addIssue({ code: 'custom', path: ['sizes'], message: `${label}: choose at least one size` });

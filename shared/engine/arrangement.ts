@@ -29,7 +29,7 @@ export interface FaceLayers {
   /** Centroid of the group from its face; 0 for an empty group. */
   readonly centroidOffsetMm: number;
   readonly areaMm2: number;
-  /** From the face to the inner edge of the innermost layer; 0 for an empty group. */
+  /** From the face to the inner edge of the innermost layer; to the inside of the stirrup for an empty group. */
   readonly reachMm: number;
 }
 
@@ -47,14 +47,22 @@ export function arrangeFace(face: Face, group: BarGroup, context: ArrangementCon
     }))
     .sort((a, b) => b.bar.diameterMm - a.bar.diameterMm);
   const total = sized.reduce((sum, { count }) => sum + count, 0);
-  if (total === 0) return emptyFace(face);
+  if (total === 0) return emptyFace(face, legInnerMm(context));
   const largest = sized[0]!.bar.diameterMm;
   const gapMm = context.rules.barGapMm(largest, context.maxAggregateMm);
   const needed = (layer: LayerBars) => widthNeeded(layer, gapMm, context);
   const layers = splitIntoLayers(sized, context.maxLayers, (layer) =>
     isWithinLength(needed(layer), context.widthMm),
   );
-  if (!layers) return rejectedFace(face, { sized, total, gapMm, needed, maxLayers: context.maxLayers });
+  if (!layers)
+    return rejectedFace(face, {
+      sized,
+      total,
+      gapMm,
+      needed,
+      maxLayers: context.maxLayers,
+      leastMm: leastForStirrupMm(context.coverMm, context.stirrupBar, context.rules),
+    });
   return placedFace(face, layers, gapMm, context);
 }
 
@@ -77,7 +85,7 @@ function widthNeeded(layer: LayerBars, gapMm: number, context: ArrangementContex
   return 2 * cornerMm(layer[0]!.diameterMm, context) + inside + (layer.length - 1) * gapMm;
 }
 
-function emptyFace(face: Face): FaceLayers {
+function emptyFace(face: Face, reachMm: number): FaceLayers {
   const report = {
     face,
     fits: true,
@@ -87,7 +95,7 @@ function emptyFace(face: Face): FaceLayers {
     widthNeededMm: 0,
     reason: 'no bars',
   };
-  return { report, layers: [], centroidOffsetMm: 0, areaMm2: 0, reachMm: 0 };
+  return { report, layers: [], centroidOffsetMm: 0, areaMm2: 0, reachMm };
 }
 
 interface Rejection {
@@ -96,9 +104,14 @@ interface Rejection {
   readonly gapMm: number;
   readonly needed: (layer: LayerBars) => number;
   readonly maxLayers: number;
+  /** Width the stirrup itself needs. */
+  readonly leastMm: number;
 }
 
-function rejectedFace(face: Face, { sized, total, gapMm, needed, maxLayers }: Rejection): FaceLayers {
+function rejectedFace(
+  face: Face,
+  { sized, total, gapMm, needed, maxLayers, leastMm }: Rejection,
+): FaceLayers {
   // The least width is that of the split whose longest layer is shortest.
   let widthNeededMm = Infinity;
   for (
@@ -111,7 +124,7 @@ function rejectedFace(face: Face, { sized, total, gapMm, needed, maxLayers }: Re
   }
   const isPlaceable = widthNeededMm < Infinity;
   const reason = isPlaceable
-    ? `${total} bars at the ${face} face need more width for at most ${layerWord(maxLayers)}`
+    ? `${total} bars at the ${face} face need more width for at most ${layerWord(maxLayers)}, symmetrical and in line`
     : `${total} ${total === 1 ? 'bar' : 'bars'} at the ${face} face cannot stand in symmetrical layers of two or more`;
   const report = {
     face,
@@ -119,7 +132,7 @@ function rejectedFace(face: Face, { sized, total, gapMm, needed, maxLayers }: Re
     layerCounts: [],
     clearGapMm: null,
     requiredGapMm: gapMm,
-    widthNeededMm: isPlaceable ? widthNeededMm : 0,
+    widthNeededMm: isPlaceable ? Math.max(widthNeededMm, leastMm) : 0,
     reason,
   };
   return { report, layers: [], centroidOffsetMm: 0, areaMm2: 0, reachMm: 0 };
@@ -197,14 +210,14 @@ function centroidOf(bars: readonly { readonly bar: Bar; readonly offsetMm: numbe
   return { offsetMm: isLevel ? first : moment / areaMm2, areaMm2 };
 }
 
-/** Least overall depth at which two groups keep a layer's clear gap between them, mm. */
+/** Least overall depth at which two groups keep a layer's clear gap between them, and a single one its far cover, mm. */
 export function depthNeededMm(
-  tension: Pick<FaceLayers, 'reachMm'>,
-  compression: Pick<FaceLayers, 'reachMm'>,
+  tension: Pick<FaceLayers, 'reachMm' | 'areaMm2'>,
+  compression: Pick<FaceLayers, 'reachMm' | 'areaMm2'>,
   rules: RuleSet,
 ): number {
-  if (tension.reachMm === 0 || compression.reachMm === 0) return tension.reachMm + compression.reachMm;
-  return tension.reachMm + rules.layerGapMm + compression.reachMm;
+  const hasBoth = tension.areaMm2 > 0 && compression.areaMm2 > 0;
+  return tension.reachMm + (hasBoth ? rules.layerGapMm : 0) + compression.reachMm;
 }
 
 /** Both faces with coordinates from the left side and the compression face. */
@@ -242,4 +255,10 @@ export function arrangementReport(
     bendRadiusMm: context.stirrupBar ? context.rules.bendRadiusMm(context.stirrupBar.diameterMm) : 0,
     reason: fits ? 'every bar has its place' : reasons.join('; '),
   };
+}
+
+/** Least width and depth in which a stirrup can be bent inside its cover, mm; 0 without stirrup. */
+export function leastForStirrupMm(coverMm: number, stirrupBar: Bar | null, rules: RuleSet): number {
+  if (!stirrupBar) return 0;
+  return 2 * (coverMm + stirrupBar.diameterMm + rules.bendRadiusMm(stirrupBar.diameterMm));
 }

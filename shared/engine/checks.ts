@@ -48,50 +48,39 @@ interface Comparison {
   readonly reason: string;
 }
 
-/** Ratios that are no number (0/0, x/0) are shown as none. */
-function check(comparison: Comparison): CheckResult {
-  const { ratio } = comparison;
-  return { ...comparison, ratio: ratio !== null && Number.isFinite(ratio) ? ratio : null };
+const finite = (value: number | null) => (value !== null && Number.isFinite(value) ? value : null);
+
+/** Numbers that are none (0/0, x/0) are shown as none; a pass within the slack of `limits.ts` is a ratio of 1. */
+function check({ passes, capacity, ratio, ...rest }: Comparison): CheckResult {
+  const shown = finite(ratio);
+  return {
+    ...rest,
+    passes,
+    capacity: finite(capacity),
+    ratio: passes && shown !== null ? Math.min(1, shown) : shown,
+  };
 }
 
 function barFit({ placed, ruleSet }: CheckContext): CheckResult {
   const clause = ruleSet.clauses.barSpacing;
-  const faces = placed.arrangement?.faces ?? [];
-  const rejected = faces.find((face) => !face.fits);
-  if (rejected)
+  const { shortfall } = placed;
+  const base = { id: 'bar-fit', passes: placed.fits, kind: 'length', clause, reason: placed.reason } as const;
+  if (shortfall)
     return check({
-      id: 'bar-fit',
-      passes: false,
-      demand: rejected.widthNeededMm > 0 ? rejected.widthNeededMm : null,
-      capacity: null,
-      ratio: null,
-      kind: 'length',
-      clause,
-      reason:
-        rejected.widthNeededMm > 0 ? `${rejected.reason}; the demand is the width needed` : rejected.reason,
+      ...base,
+      demand: shortfall.neededMm,
+      capacity: shortfall.availableMm,
+      ratio: shortfall.neededMm / shortfall.availableMm,
     });
-  const tightest = faces
+  const tightest = (placed.fits ? (placed.arrangement?.faces ?? []) : [])
     .filter((face) => face.clearGapMm !== null)
     .sort((a, b) => b.requiredGapMm / b.clearGapMm! - a.requiredGapMm / a.clearGapMm!)[0];
-  if (!tightest || !placed.fits)
-    return check({
-      id: 'bar-fit',
-      passes: placed.fits,
-      demand: placed.fits ? null : (placed.arrangement?.depthNeededMm ?? null),
-      capacity: null,
-      ratio: null,
-      kind: 'length',
-      clause,
-      reason: placed.fits ? placed.reason : `${placed.reason}; the demand is the depth needed`,
-    });
+  if (!tightest) return check({ ...base, demand: null, capacity: null, ratio: null });
   return check({
-    id: 'bar-fit',
-    passes: true,
+    ...base,
     demand: tightest.requiredGapMm,
     capacity: tightest.clearGapMm,
     ratio: tightest.requiredGapMm / tightest.clearGapMm!,
-    kind: 'length',
-    clause,
     reason: `least clear gap, ${tightest.face} face: ${tightest.reason}`,
   });
 }
@@ -104,13 +93,13 @@ function hangerBars({ section, rules, ruleSet }: CheckContext): CheckResult | nu
   const fewest = Math.min(barTotal(reinforcement.tension), barTotal(reinforcement.compression));
   return check({
     id: 'hanger-bars',
-    passes: fewest >= 2,
-    demand: 2,
+    passes: fewest >= section.stirrup.legs,
+    demand: section.stirrup.legs,
     capacity: fewest,
-    ratio: 2 / fewest,
+    ratio: section.stirrup.legs / fewest,
     kind: 'count',
     clause: ruleSet.clauses.hangers,
-    reason: 'two bars at least at each face for the stirrups to hang on',
+    reason: 'a bar at each face for every stirrup leg to enclose',
   });
 }
 
@@ -183,8 +172,8 @@ function leastSteel(context: CheckContext): CheckResult | null {
   const { layout } = context.placed;
   if (!layout) return null;
   const { leastMm2, waivedAtMm2 } = leastSteelOf(context, layout);
-  const isWaived = !(layout.asMm2 >= leastMm2) && waivedAtMm2 !== null && layout.asMm2 >= waivedAtMm2;
-  const demand = isWaived ? waivedAtMm2 : leastMm2;
+  const isWaiverLess = waivedAtMm2 !== null && waivedAtMm2 < leastMm2;
+  const demand = isWaiverLess ? waivedAtMm2 : leastMm2;
   return check({
     id: 'least-steel',
     passes: layout.asMm2 >= demand,
@@ -193,7 +182,9 @@ function leastSteel(context: CheckContext): CheckResult | null {
     ratio: demand / layout.asMm2,
     kind: 'area',
     clause: context.ruleSet.clauses.leastSteel,
-    reason: isWaived ? 'As at least 4/3 of the steel Mu requires, so As,min is waived' : 'As ≥ As,min',
+    reason: isWaiverLess
+      ? '4/3 of the steel Mu requires governs: As,min is waived from there'
+      : 'As,min governs',
   });
 }
 
@@ -264,7 +255,7 @@ function compressionShare({ section, basis, rules }: CheckContext): CheckResult 
   const { tension, compression } = faceAreas(section.reinforcement, basis);
   return check({
     id: 'compression-share',
-    passes: isAtLeastTimes(compression, rules.minCompressionShare, tension),
+    passes: tension > 0 && isAtLeastTimes(compression, rules.minCompressionShare, tension),
     demand: rules.minCompressionShare,
     capacity: compression / tension,
     ratio: (rules.minCompressionShare * tension) / compression,

@@ -105,7 +105,7 @@ export function ductilityOf(
       ? 'the centroid of the tension steel'
       : 'the outermost tension layer';
   const displaced = {
-    deduct: 'concrete displaced by bars inside the block deducted',
+    deduct: 'concrete displaced by bars inside the block deducted (of two equilibria the deeper axis)',
     'deduct-above-axis': 'concrete displaced by bars above the neutral axis deducted',
     ignore: 'displaced concrete ignored',
   }[basis.displacedConcrete];

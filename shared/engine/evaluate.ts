@@ -2,7 +2,7 @@ import { barTotal, checksOf } from './checks.ts';
 import { ductilityOf, elasticSection } from './elastic.ts';
 import type { Evaluation, FlexureResult, Quantities } from './evaluation.ts';
 import { flexureAtUltimate } from './flexure.ts';
-import type { Measures } from './measures.ts';
+import { onGrid, type Measures } from './measures.ts';
 import { NOT_CHECKED } from './not-checked.ts';
 import { assertNotNegative, assertPositive, InvalidSectionError } from './preconditions.ts';
 import { quantitiesOf } from './quantities.ts';
@@ -78,19 +78,22 @@ function measuresOf(
 ): Measures {
   const strength = results.flexure?.designMomentNmm ?? null;
   return {
-    steelKgPerM: quantities.netSteelKgPerM,
-    costPerM: quantities.cost?.total ?? null,
-    co2eKgPerM: quantities.co2eKgPerM,
+    steelKgPerM: onGrid(quantities.netSteelKgPerM),
+    costPerM: gridOrNull(quantities.cost?.total),
+    co2eKgPerM: gridOrNull(quantities.co2eKgPerM),
     depthMm: section.depthMm,
     widthMm: section.widthMm,
-    concreteM3PerM: quantities.concreteM3PerM,
-    formworkM2PerM: quantities.formworkM2PerM,
+    concreteM3PerM: onGrid(quantities.concreteM3PerM),
+    formworkM2PerM: onGrid(quantities.formworkM2PerM),
     curvatureDuctility: results.curvatureDuctility,
     designStrengthNmm: strength,
     utilisation: demand.muNmm === null || strength === null ? null : demand.muNmm / strength,
     barCount: barCountOf(section.reinforcement),
   };
 }
+
+const gridOrNull = (amount: number | null | undefined) =>
+  typeof amount === 'number' ? onGrid(amount) : null;
 
 function barCountOf(reinforcement: Reinforcement): number | null {
   if (reinforcement.kind === 'layers') return null;
@@ -105,13 +108,23 @@ function assertSection(section: SectionInput): void {
   assertNotNegative(section.coverMm, 'Clear cover', ['coverMm']);
   if (section.stirrup) {
     assertPositive(section.stirrup.spacingMm, 'Stirrup spacing', ['stirrup', 'spacingMm']);
-    assertPositive(section.stirrup.legs, 'Stirrup legs', ['stirrup', 'legs']);
+    if (!Number.isInteger(section.stirrup.legs) || section.stirrup.legs < 2)
+      throw new InvalidSectionError(
+        `Stirrup legs must be a whole number of two or more, not ${section.stirrup.legs}`,
+        ['stirrup', 'legs'],
+      );
   }
-  assertReinforcement(section.reinforcement, section.depthMm);
+  assertReinforcement(section);
 }
 
-function assertReinforcement(reinforcement: Reinforcement, depthMm: number): void {
+function assertReinforcement({ reinforcement, widthMm, depthMm }: SectionInput): void {
   if (reinforcement.kind === 'layers') {
+    const steelMm2 = reinforcement.layers.reduce((total, layer) => total + layer.areaMm2, 0);
+    if (steelMm2 >= widthMm * depthMm)
+      throw new InvalidSectionError(`Steel of ${steelMm2} mm² is more than the section itself`, [
+        'reinforcement',
+        'layers',
+      ]);
     reinforcement.layers.forEach((layer, i) => {
       const path = ['reinforcement', 'layers', i];
       assertPositive(layer.depthMm, 'Layer depth', [...path, 'depthMm']);

@@ -32,5 +32,11 @@ export const MEASURE_DIRECTION: Readonly<Record<MeasureId, Direction>> = {
   barCount: 'less',
 };
 
+/**
+ * Rounds an amount to 1e-9 of its unit. Equal amounts summed in another order differ in the last bit (3-25M and 5-20M both
+ * weigh 11.775 kg/m), and a front must see them as equal.
+ */
+export const onGrid = (amount: number) => Math.round(amount * 1e9) / 1e9;
+
 /** Value of every measure of one section; null where an input for it (a rate, a demand) is missing. */
 export type Measures = Readonly<Record<MeasureId, number | null>>;

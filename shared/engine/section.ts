@@ -124,6 +124,6 @@ export interface UserRules {
   readonly columnWidthMm: number | null;
   /** Least A′s / As. */
   readonly minCompressionShare: number | null;
-  /** At least two bars at each face for the stirrups to hang on. */
+  /** A bar at each face for every stirrup leg, so two at least, for the stirrups to hang on. */
   readonly requireHangers: boolean;
 }

@@ -1,8 +1,15 @@
-import { arrangeFace, arrangementReport, type ArrangementContext, type FaceLayers } from './arrangement.ts';
+import {
+  arrangeFace,
+  arrangementReport,
+  leastForStirrupMm,
+  type ArrangementContext,
+  type FaceLayers,
+} from './arrangement.ts';
 import { getBar } from './bars.ts';
 import type { Arrangement } from './evaluation.ts';
+import { isWithinLength } from './limits.ts';
 import { RULE_SETS } from './rules/rule-sets.ts';
-import type { DesignBasis, Face, Layer, SectionInput } from './section.ts';
+import type { DesignBasis, Face, Layer, Reinforcement, SectionInput } from './section.ts';
 
 /** All layers of a section sorted by depth from the compression face, with the depths the checks refer to (mm, mm²). */
 export interface SteelLayout {
@@ -19,43 +26,79 @@ export interface SteelLayout {
   readonly asPrimeMm2: number;
 }
 
+/** What a section lacks for its bars: the length needed and the length there is, mm. */
+export interface Shortfall {
+  readonly neededMm: number;
+  readonly availableMm: number;
+}
+
 /** The steel of a section where it can be placed, and how it was placed. */
 export interface PlacedSteel {
   /** Null for plain layers. */
   readonly arrangement: Arrangement | null;
-  /** Null when it cannot be placed or there is no tension steel. */
+  /** Null when it cannot be placed. */
   readonly layout: SteelLayout | null;
   readonly fits: boolean;
+  readonly shortfall: Shortfall | null;
   readonly reason: string;
 }
+
+const NO_TENSION_STEEL = 'no steel at the tension face';
 
 /**
  * Turns bars, or layers as given, into layers sorted by depth.
  * @throws InvalidSectionError for an unknown bar.
  */
 export function placeSteel(section: SectionInput, basis: DesignBasis, maxLayers: number): PlacedSteel {
-  const { reinforcement } = section;
-  if (reinforcement.kind === 'layers') return placePlainLayers(reinforcement.layers);
-  const context: ArrangementContext = {
-    rules: RULE_SETS[basis.ruleSet],
-    barStandard: basis.barStandard,
-    widthMm: section.widthMm,
-    coverMm: section.coverMm,
-    stirrupBar: section.stirrup && getBar(basis.barStandard, section.stirrup.bar, ['stirrup', 'bar']),
-    maxAggregateMm: basis.maxAggregateMm,
-    bendAllowance: basis.bendAllowance,
-    maxLayers,
-  };
-  const tension = arrangeFace('tension', reinforcement.tension, context);
-  const compression = arrangeFace('compression', reinforcement.compression, context);
-  const arrangement = arrangementReport(section.depthMm, tension, compression, context);
-  return {
-    arrangement,
-    layout:
-      arrangement.fits && tension.areaMm2 > 0 ? layoutOfBars(section.depthMm, tension, compression) : null,
-    fits: arrangement.fits,
-    reason: arrangement.reason,
-  };
+  const { reinforcement, stirrup, coverMm } = section;
+  const rules = RULE_SETS[basis.ruleSet];
+  const stirrupBar = stirrup && getBar(basis.barStandard, stirrup.bar, ['stirrup', 'bar']);
+  const placed =
+    reinforcement.kind === 'layers'
+      ? placePlainLayers(reinforcement.layers)
+      : placeBars(section, reinforcement, {
+          rules,
+          barStandard: basis.barStandard,
+          widthMm: section.widthMm,
+          coverMm,
+          stirrupBar,
+          maxAggregateMm: basis.maxAggregateMm,
+          bendAllowance: basis.bendAllowance,
+          maxLayers,
+        });
+  const neededMm = leastForStirrupMm(coverMm, stirrupBar, rules);
+  const availableMm = Math.min(section.widthMm, section.depthMm);
+  if (isWithinLength(neededMm, availableMm)) return placed;
+  const reason = 'the stirrup cannot be bent inside its cover';
+  const arrangement = placed.arrangement && { ...placed.arrangement, fits: false, bars: [], reason };
+  return { arrangement, layout: null, fits: false, shortfall: { neededMm, availableMm }, reason };
+}
+
+function placeBars(
+  { widthMm, depthMm }: SectionInput,
+  groups: Extract<Reinforcement, { kind: 'bars' }>,
+  context: ArrangementContext,
+): PlacedSteel {
+  const tension = arrangeFace('tension', groups.tension, context);
+  const compression = arrangeFace('compression', groups.compression, context);
+  const arrangement = arrangementReport(depthMm, tension, compression, context);
+  const { fits, reason, depthNeededMm } = arrangement;
+  if (fits && tension.areaMm2 === 0)
+    return { arrangement, layout: null, fits: false, shortfall: null, reason: NO_TENSION_STEEL };
+  if (fits)
+    return {
+      arrangement,
+      layout: layoutOfBars(depthMm, tension, compression),
+      fits,
+      shortfall: null,
+      reason,
+    };
+  const tooNarrow = [tension, compression].find((face) => !face.report.fits)?.report;
+  const shortfall = tooNarrow
+    ? { neededMm: tooNarrow.widthNeededMm, availableMm: widthMm }
+    : { neededMm: depthNeededMm, availableMm: depthMm };
+  // A group that no width would hold (one bar) has no length to ask for.
+  return { arrangement, layout: null, fits, shortfall: shortfall.neededMm > 0 ? shortfall : null, reason };
 }
 
 function layoutOfBars(depthMm: number, tension: FaceLayers, compression: FaceLayers): SteelLayout {
@@ -83,12 +126,12 @@ function placePlainLayers(given: readonly Layer[]): PlacedSteel {
   const layers = given.filter((layer) => layer.areaMm2 > 0).sort((a, b) => a.depthMm - b.depthMm);
   const tension = layers.filter((layer) => layer.face === 'tension');
   const compression = layers.filter((layer) => layer.face === 'compression');
-  const placed = { arrangement: null, layout: null };
-  if (tension.length === 0) return { ...placed, fits: true, reason: 'no steel at the tension face' };
+  const unplaced = { arrangement: null, layout: null, fits: false, shortfall: null };
+  if (tension.length === 0) return { ...unplaced, reason: NO_TENSION_STEEL };
   const t = centroid(tension);
   const c = compression.length > 0 ? centroid(compression) : null;
   if (c && c.depthMm >= t.depthMm)
-    return { ...placed, fits: false, reason: 'the compression steel lies below the tension steel' };
+    return { ...unplaced, reason: 'the compression steel lies below the tension steel' };
   const layout = {
     ...columns(layers),
     dMm: t.depthMm,
@@ -97,7 +140,7 @@ function placePlainLayers(given: readonly Layer[]): PlacedSteel {
     asMm2: t.areaMm2,
     asPrimeMm2: c ? c.areaMm2 : 0,
   };
-  return { arrangement: null, layout, fits: true, reason: 'layers as given' };
+  return { arrangement: null, layout, fits: true, shortfall: null, reason: 'layers as given' };
 }
 
 function columns(layers: readonly Layer[]): Pick<SteelLayout, 'faces' | 'depths' | 'areas'> {

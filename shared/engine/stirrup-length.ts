@@ -45,11 +45,12 @@ export function stirrupShape(
 export function stirrupSetLengthMm(shape: StirrupShape, widthMm: number, depthMm: number): number {
   const insideWidth = widthMm - 2 * shape.coverMm;
   const insideDepth = depthMm - 2 * shape.coverMm;
-  return (
+  const length =
     2 * (insideWidth + insideDepth) +
     shape.closedExtraMm +
-    (shape.legs - 2) * (insideDepth + shape.tieExtraMm)
-  );
+    (shape.legs - 2) * (insideDepth + shape.tieExtraMm);
+  // A stirrup that cannot be bent in the section fails bar fit; it is never of negative length.
+  return Math.max(0, length);
 }
 
 /** Stirrups per metre of beam, kg/m. */

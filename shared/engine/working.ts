@@ -101,6 +101,7 @@ function materials({ section, basis, ruleSet, flexure, elastic }: WorkingSource)
 
 function ultimate({ section, layout, flexure, ruleSet }: WorkingSource): WorkingStep[] {
   const c: Input = ['c', flexure.neutralAxisMm, 'length'];
+  const fc: Input = ['f′c', section.fcMPa, 'stress'];
   const block = ruleSet.clauses.block;
   const layers = flexure.layers.flatMap((layer, i) => {
     const name = `${i + 1}`;
@@ -129,7 +130,7 @@ function ultimate({ section, layout, flexure, ruleSet }: WorkingSource): Working
         `force-${name}`,
         'ultimate',
         [`T${name}`, forceFormula, layer.forceN, 'force'],
-        [[`A${name}`, layer.areaMm2, 'area'], stress],
+        [[`A${name}`, layer.areaMm2, 'area'], stress, ...(layer.displacedConcreteDeducted ? [fc] : [])],
         STATICS,
       ),
     ];
@@ -190,6 +191,10 @@ function strength({ flexure, section, basis, ruleSet }: WorkingSource): WorkingS
       'strength',
       ['Mn', 'Σ T d − C a/2', flexure.nominalMomentNmm, 'moment'],
       [
+        ...flexure.layers.flatMap(({ forceN, depthMm }, i): Input[] => [
+          [`T${i + 1}`, forceN, 'force'],
+          [`d${i + 1}`, depthMm, 'length'],
+        ]),
         ['C', flexure.concreteForceN, 'force'],
         ['a', flexure.blockDepthMm, 'length'],
       ],
@@ -245,7 +250,15 @@ function limits(source: WorkingSource): WorkingStep[] {
   return [least, step('as-waive', 'limits', waiver, [['Mu', demand.muNmm, 'moment'], ...inputs], clause)];
 }
 
-function elasticSteps({ section, layout, elastic, ruleSet }: WorkingSource): WorkingStep[] {
+/** Depth and area of every layer, for the sums over layers. */
+const layerInputs = (layout: SteelLayout): Input[] =>
+  [...layout.depths].flatMap((depth, i): Input[] => [
+    [`d${i + 1}`, depth, 'length'],
+    [`A${i + 1}`, layout.areas[i]!, 'area'],
+  ]);
+
+function elasticSteps({ section, basis, layout, elastic, ruleSet }: WorkingSource): WorkingStep[] {
+  const above = basis.displacedConcrete === 'ignore' ? 'n' : '(n − 1)';
   const n: Input = ['n', elastic.modularRatio, 'ratio'];
   const kd: Input = ['kd', elastic.crackedAxisMm, 'length'];
   return [
@@ -270,15 +283,15 @@ function elasticSteps({ section, layout, elastic, ruleSet }: WorkingSource): Wor
     step(
       'kd',
       'elastic',
-      ['kd', 'b kd²/2 + Σ(n − 1)A (kd − d) = Σ n A (d − kd)', elastic.crackedAxisMm, 'length'],
-      [n, ['b', section.widthMm, 'length'], ['As', layout.asMm2, 'area'], ['A′s', layout.asPrimeMm2, 'area']],
+      ['kd', `b kd²/2 + Σ ${above} A (kd − d) = Σ n A (d − kd)`, elastic.crackedAxisMm, 'length'],
+      [n, ['b', section.widthMm, 'length'], ...layerInputs(layout)],
       STATICS,
     ),
     step(
       'icr',
       'elastic',
-      ['Icr', 'b kd³/3 + Σ(n − 1)A (kd − d)² + Σ n A (d − kd)²', elastic.crackedInertiaMm4, 'inertia'],
-      [n, kd],
+      ['Icr', `b kd³/3 + Σ ${above} A (kd − d)² + Σ n A (d − kd)²`, elastic.crackedInertiaMm4, 'inertia'],
+      [n, ['b', section.widthMm, 'length'], kd, ...layerInputs(layout)],
       STATICS,
     ),
     step(

@@ -8,19 +8,19 @@ const VALUES_PER_UNIT = 1e9;
 
 /** Number of values of an axis, without making them. NaN for a broken range. */
 export function axisLength(axis: AxisDefinition): number {
-  if (axis.kind === 'list') return axis.values.length;
+  if (axis.kind === 'list') return new Set(axis.values).size;
   return Math.floor((axis.to - axis.from) / axis.step + STEP_SLACK) + 1;
 }
 
 /**
- * The values of an axis, in its own unit.
+ * The values of an axis, in its own unit, ascending, each once.
  * @throws InvalidSectionError for an empty list, a step that is not above zero, or an end below the start.
  */
 export function expandAxis(axis: AxisDefinition): number[] {
   if (axis.kind === 'list') {
     if (axis.values.length === 0)
       throw new InvalidSectionError('An axis needs at least one value', ['values']);
-    return [...axis.values];
+    return [...new Set(axis.values)].sort((a, b) => a - b);
   }
   if (!(axis.step > 0))
     throw new InvalidSectionError(`The step must be above zero, not ${axis.step}`, ['step']);

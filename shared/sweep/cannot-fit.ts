@@ -1,6 +1,5 @@
-import { depthNeededMm } from '../engine/arrangement.ts';
 import { isWithinLength } from '../engine/limits.ts';
-import { placementAt, prepareSweep } from './prepared-sweep.ts';
+import { isAboveTension, isPlain, leastDepthMm, placementAt, prepareSweep } from './prepared-sweep.ts';
 import type { SweepProblem } from './problem.ts';
 
 /**
@@ -11,23 +10,18 @@ import type { SweepProblem } from './problem.ts';
 export function countCannotFit(problem: SweepProblem): number {
   const prepared = prepareSweep(problem, { x: 'steelKgPerM', y: 'depthMm' });
   const { space, ruleSet } = prepared;
-  if (space.tension.some((set) => set.kind === 'area')) return 0;
   const combinations = space.widthsMm.length * space.coversMm.length * space.stirrups.length;
   const perPair = space.fyMPa.length * space.fcMPa.length;
-  const depths = space.depthsMm.toSorted((a, b) => a - b);
   let count = 0;
   for (let i = 0; i < combinations; i++) {
-    const { tension, compression } = placementAt(prepared, i);
-    for (const t of tension)
-      for (const c of compression) {
-        if (!t.fits || !c.fits) {
-          count += depths.length * perPair;
-          continue;
-        }
-        const needed = depthNeededMm(t, c, ruleSet);
-        let tooShallow = 0;
-        while (tooShallow < depths.length && !isWithinLength(needed, depths[tooShallow]!)) tooShallow++;
-        count += tooShallow * perPair;
+    const placement = placementAt(prepared, i);
+    for (const t of placement.tension)
+      for (const c of placement.compression) {
+        const least = leastDepthMm(placement, t, c, ruleSet);
+        const placed = space.depthsMm.filter(
+          (h) => isWithinLength(least, h) && (!isPlain(t) || isAboveTension(t, c, h)),
+        );
+        count += (space.depthsMm.length - placed.length) * perPair;
       }
   }
   return count;

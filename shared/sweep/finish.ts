@@ -59,6 +59,11 @@ function axisCounts(values: readonly number[], feasible: Float64Array, evaluated
   return values.map((value, i) => ({ value, feasible: feasible[i] ?? 0, evaluated: evaluated[i] ?? 0 }));
 }
 
+/** A vertex sits on an end only if all its ties do; with more ties than are kept by name nothing can be said. */
+function isAllAt(point: FrontPoint, placeOf: (index: number) => number, edge: number): boolean {
+  return point.tieCount === point.ties.length && point.ties.every((index) => placeOf(index) === edge);
+}
+
 /** Share of the front's vertices at each end of an axis with more than one value; ends with none are left out. */
 function edgeShares(space: Space, front: readonly FrontPoint[]): EdgeShare[] {
   if (front.length === 0) return [];
@@ -72,7 +77,7 @@ function edgeShares(space: Space, front: readonly FrontPoint[]): EdgeShare[] {
   return EDGE_AXES.filter((axis) => lengths[axis] > 1).flatMap((axis) =>
     (['low', 'high'] as const).flatMap((end) => {
       const edge = end === 'low' ? 0 : lengths[axis] - 1;
-      const share = front.filter(({ index }) => placeOf[axis](index) === edge).length / front.length;
+      const share = front.filter((point) => isAllAt(point, placeOf[axis], edge)).length / front.length;
       return share > 0 ? [{ axis, end, share }] : [];
     }),
   );

@@ -1,4 +1,3 @@
-import { depthNeededMm } from '../engine/arrangement.ts';
 import { crackedAxisDepth } from '../engine/cracked-section.ts';
 import { CHECK_IDS, type CheckId } from '../engine/evaluation.ts';
 import {
@@ -8,12 +7,20 @@ import {
   isWithinLength,
   requiredSteelMm2,
 } from '../engine/limits.ts';
-import { MEASURE_IDS, type MeasureId } from '../engine/measures.ts';
+import { MEASURE_IDS, onGrid, type MeasureId } from '../engine/measures.ts';
 import { neutralAxisDepth } from '../engine/neutral-axis.ts';
 import { concreteM3PerM, formworkM2PerM } from '../engine/pricing.ts';
 import { stirrupKgPerM } from '../engine/stirrup-length.ts';
 import type { FaceEntry } from './face-table.ts';
-import type { ConcreteConstants, Placement, PreparedSweep } from './prepared-sweep.ts';
+import {
+  isAboveTension,
+  isPlain,
+  leastDepthMm,
+  offsetOf,
+  type ConcreteConstants,
+  type Placement,
+  type PreparedSweep,
+} from './prepared-sweep.ts';
 import type { Tally } from './tally.ts';
 
 const bit = (check: CheckId) => 1 << CHECK_IDS.indexOf(check);
@@ -108,7 +115,7 @@ export class Kernel {
       rules.requireHangers &&
       placement.stirrup &&
       hasBars &&
-      !(Math.min(tension.barCount, compression.barCount) >= 2)
+      !(Math.min(tension.barCount, compression.barCount) >= placement.stirrup.legs)
     )
       mask |= HANGER_BARS;
     if (rules.columnWidthMm !== null && !isSameLength(placement.widthMm, rules.columnWidthMm))
@@ -140,8 +147,8 @@ export class Kernel {
     const capMm = demand.depthCapMm;
     const { minDepthToWidth, maxDepthToWidth } = rules;
     const fixedMask = this.fixedMask(combination);
-    const fitsWidth = tension.fits && compression.fits;
-    const depthNeeded = depthNeededMm(tension, compression, ruleSet);
+    const isPlainSteel = isPlain(tension);
+    const leastMm = leastDepthMm(placement, tension, compression, ruleSet);
 
     const { blockStressMPa, blockDepthFactor } = concrete;
     const esMPa = basis.esMPa;
@@ -194,13 +201,12 @@ export class Kernel {
       if (capMm !== null && !isWithinLength(h, capMm)) mask |= DEPTH_CAP;
       depthEvaluated[j]!++;
 
-      const tensionOffset = tension.shareOfDepth === 0 ? tension.centroidOffsetMm : tension.shareOfDepth * h;
-      const d = h - tensionOffset;
-      let isPlaced = fitsWidth && isWithinLength(depthNeeded, h);
+      const d = h - offsetOf(tension, h);
+      const isPlaced =
+        isWithinLength(leastMm, h) && (!isPlainSteel || isAboveTension(tension, compression, h));
       if (tension.shareOfDepth !== 0) depths[n - 1] = d;
       else for (let i = 0; i < tension.layerCount; i++) depths[n - 1 - i] = h - tension.offsets[i]!;
       if (nc > 0 && compression.shareOfDepth !== 0) depths[0] = compression.shareOfDepth * h;
-      if (nc > 0 && barCount !== barCount && !(depths[0]! < d)) isPlaced = false;
       if (!isPlaced) {
         mask |= BAR_FIT;
         maskCounts[mask]!++;
@@ -239,17 +245,18 @@ export class Kernel {
       const concreteM3 = concreteM3PerM(widthMm, h);
       const formworkM2 = formworkM2PerM(widthMm, h, basis.slabMm);
       const stirrupCost = stirrupKg === 0 ? 0 : stirrupKg * withWaste * pricing.stirrupPerKg;
-      measures[STEEL] = netSteel;
-      measures[COST] =
+      measures[STEEL] = onGrid(netSteel);
+      measures[COST] = onGrid(
         longitudinalCost +
-        stirrupCost +
-        concreteM3 * pricing.concretePerM3 +
-        formworkM2 * pricing.formworkPerM2;
-      measures[CO2E] = totalSteel * pricing.steelCo2ePerKg + concreteM3 * pricing.concreteCo2ePerM3;
+          stirrupCost +
+          concreteM3 * pricing.concretePerM3 +
+          formworkM2 * pricing.formworkPerM2,
+      );
+      measures[CO2E] = onGrid(totalSteel * pricing.steelCo2ePerKg + concreteM3 * pricing.concreteCo2ePerM3);
       measures[DEPTH] = h;
       measures[WIDTH] = widthMm;
-      measures[CONCRETE] = concreteM3;
-      measures[FORMWORK] = formworkM2;
+      measures[CONCRETE] = onGrid(concreteM3);
+      measures[FORMWORK] = onGrid(formworkM2);
       measures[MU_PHI] = muPhi;
       measures[DESIGN_STRENGTH] = design;
       measures[UTILISATION] = muNmm === null ? NaN : muNmm / design;

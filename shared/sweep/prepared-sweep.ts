@@ -1,5 +1,6 @@
-import type { ArrangementContext } from '../engine/arrangement.ts';
+import { depthNeededMm, leastForStirrupMm, type ArrangementContext } from '../engine/arrangement.ts';
 import { getBar } from '../engine/bars.ts';
+import { isWithinLength } from '../engine/limits.ts';
 import { pricingFor, type Pricing } from '../engine/pricing.ts';
 import type { RuleSet } from '../engine/rules/rule-set.ts';
 import { RULE_SETS } from '../engine/rules/rule-sets.ts';
@@ -22,6 +23,8 @@ export interface ConcreteConstants {
 export interface Placement {
   readonly widthMm: number;
   readonly stirrup: StirrupShape | null;
+  /** Least width and depth the stirrup can be bent in, mm. */
+  readonly leastForStirrupMm: number;
   readonly tension: readonly FaceEntry[];
   readonly compression: readonly FaceEntry[];
 }
@@ -84,9 +87,39 @@ export function placementAt(prepared: PreparedSweep, combination: number): Place
   const placement = {
     widthMm,
     stirrup: stirrup && stirrupBar && stirrupShape(stirrupBar, stirrup, coverMm, ruleSet),
+    leastForStirrupMm: leastForStirrupMm(coverMm, stirrupBar, ruleSet),
     tension: faceTable('tension', space.tension, context, rules),
     compression: faceTable('compression', space.compression, context, rules),
   };
   prepared.placements.set(combination, placement);
   return placement;
+}
+
+/**
+ * Least overall depth at which this pair of sets is placed, mm: Infinity where the width does not hold it. Plain areas need
+ * no more than their stirrup.
+ */
+export function leastDepthMm(
+  placement: Placement,
+  tension: FaceEntry,
+  compression: FaceEntry,
+  ruleSet: RuleSet,
+): number {
+  const { leastForStirrupMm: leastMm, widthMm } = placement;
+  if (!tension.fits || !compression.fits || !isWithinLength(leastMm, widthMm)) return Infinity;
+  return isPlain(tension) ? leastMm : Math.max(leastMm, depthNeededMm(tension, compression, ruleSet));
+}
+
+/** Plain areas have no bars to count. */
+export const isPlain = (entry: FaceEntry) => Number.isNaN(entry.barCount);
+
+/** Whether plain compression steel lies above the tension steel in a section of depth h, mm. */
+export function isAboveTension(tension: FaceEntry, compression: FaceEntry, depthMm: number): boolean {
+  if (compression.layerCount === 0) return true;
+  return offsetOf(compression, depthMm) < depthMm - offsetOf(tension, depthMm);
+}
+
+/** Distance of a face's centroid from that face in a section of depth h, mm. */
+export function offsetOf(entry: FaceEntry, depthMm: number): number {
+  return entry.shareOfDepth === 0 ? entry.centroidOffsetMm : entry.shareOfDepth * depthMm;
 }

@@ -37,9 +37,10 @@ export interface CheckFailures {
   readonly check: CheckId;
   /** Sections failing it, whatever else they fail. */
   readonly failed: number;
-  /** Sections failing nothing else. */
+  /** Sections failing nothing else; for bar fit, sections of which nothing that needs placed bars could be asked. */
   readonly failedOnlyThis: number;
-  /** Best section in the leading measure among those failing only this; null where there is none or it has no numbers. */
+  /** Best section in the leading measure among those failing only this; null where there is none or, as for bar fit, it
+   * has no numbers. */
   readonly bestWithout: Point | null;
 }
 

@@ -67,7 +67,7 @@ export function expandSpace(definition: SpaceDefinition, standard: BarStandard):
         'bar',
       ]);
   });
-  assertAreasInside(definition, Math.min(...space.depthsMm));
+  assertAreasInside(definition, Math.min(...space.widthsMm), Math.min(...space.depthsMm));
   if (
     space.tension.some((set) => set.kind === 'area') &&
     space.compression.some((set) => set.kind === 'bars' && set.bars.length > 0)
@@ -96,6 +96,8 @@ function expandSets(
       throw new InvalidSectionError('Tension steel needs an area above zero', [axis, 'areasMm2']);
     return sets.areasMm2.map((areaMm2) => ({ kind: 'area', areaMm2, at: sets.at }));
   }
+  if (axis === 'tension' && sets.none)
+    throw new InvalidSectionError('A beam needs steel at the tension face', [axis, 'none']);
   sets.sizes.forEach((size, i) => {
     if (!findBar(standard, size))
       throw new InvalidSectionError(`Bar ${size} is not in the bar list`, [axis, 'sizes', i]);
@@ -107,7 +109,19 @@ function expandSets(
   return groups.map((bars) => ({ kind: 'bars', bars }));
 }
 
-function assertAreasInside({ tension, compression }: SpaceDefinition, leastDepthMm: number): void {
+function assertAreasInside(
+  { tension, compression }: SpaceDefinition,
+  leastWidthMm: number,
+  leastDepthMm: number,
+): void {
+  const largest = [tension, compression].map((sets) =>
+    sets.kind === 'areas' ? Math.max(...sets.areasMm2) : 0,
+  );
+  if (largest[0]! + largest[1]! >= leastWidthMm * leastDepthMm)
+    throw new InvalidSectionError('The steel is more than the smallest section of the space', [
+      'tension',
+      'areasMm2',
+    ]);
   for (const [axis, sets] of [
     ['tension', tension],
     ['compression', compression],

@@ -60,16 +60,18 @@ export class Tally {
     const orientedX = SIGNS[this.xMeasure]! * x;
     const orientedY = SIGNS[this.yMeasure]! * y;
     this.front.add(orientedX, orientedY, index);
-    this.band.add(index, orientedX, orientedY);
+    if (y === y) this.band.add(index, orientedX, orientedY);
     if (x >= 0 && y >= 0) this.density.add(x, y);
   }
 
   /** A section that fails exactly the check of this bit and has numbers. */
   addFailingOnly(bit: number, index: number, measures: Float64Array): void {
     const x = SIGNS[this.xMeasure]! * measures[this.xMeasure]!;
+    const y = SIGNS[this.yMeasure]! * measures[this.yMeasure]!;
+    if (y !== y) return;
     if (x < this.withoutX[bit]! || (this.withoutIndex[bit] === -1 && x === x)) {
       this.withoutX[bit] = x;
-      this.withoutY[bit] = SIGNS[this.yMeasure]! * measures[this.yMeasure]!;
+      this.withoutY[bit] = y;
       this.withoutIndex[bit] = index;
     }
   }

@@ -87,6 +87,26 @@ describe('edge cases at ultimate', () => {
     expect(passes(waived * 1.0001)).toBe(true);
     expect(passes(waived * 0.9999)).toBe(false);
   });
+
+  it('least steel asks for the lesser of As,min and 4/3 of the required steel, also where it is not met', () => {
+    // 300 × 500, 2-12, f′c 30, fy 420, d 444, Mu 30 kN·m, by hand: As,req = 8087 (1 − √0.95579) = 180.8; × 4/3 = 241.0
+    const { checks } = evaluateSection(metricSection({ ...beam, d: 444, As: 226.2 }), {
+      ...context,
+      demand: { ...NO_DEMAND, muNmm: 30e6 },
+    });
+    const least = checks.find((c) => c.id === 'least-steel')!;
+    expect(least.passes).toBe(false);
+    expect(least.demand).toBeCloseTo(241.0, 1);
+    expect(least.ratio).toBeCloseTo(1.066, 3);
+  });
+
+  it('β1 of the metric books steps to 0.65 at 55 MPa, the US one follows the line to 8000 psi', () => {
+    const beta1 = (fcMPa: number, ruleSet: 'aci318-19' | 'aci318m-19') =>
+      evaluateMetric({ ...beam, fc: fcMPa }, { ruleSet }).flexure!.beta1;
+    expect(beta1(54.9, 'aci318m-19')).toBeCloseTo(0.85 - (0.05 * 26.9) / 7, 12);
+    expect(beta1(55, 'aci318m-19')).toBe(0.65);
+    expect(beta1(55, 'aci318-19')).toBeCloseTo(0.85 - 0.05 * (55 / MPA_PER_PSI / 1000 - 4), 12);
+  });
 });
 
 describe('sections that cannot be built', () => {
@@ -122,6 +142,34 @@ describe('sections that cannot be built', () => {
     expect(arrangement!.depthNeededMm).toBeCloseTo(2 * (40 + 25) + 25, 9);
   });
 
+  it('a single group keeps the cover and the stirrup at the far face: 2-25 in h = 76 needs 125', () => {
+    const section: SectionInput = {
+      ...withBars(2, 300),
+      depthMm: 76,
+      stirrup: { bar: '10', legs: 2, spacingMm: 150 },
+    };
+    const { checks, flexure } = evaluateSection(section, context);
+    expect(checks.find((check) => check.id === 'bar-fit')).toMatchObject({
+      passes: false,
+      demand: 140,
+      capacity: 76,
+    });
+    expect(flexure).toBeNull();
+    // 140 = 2 (40 + 10 + 20), the stirrup itself; the bars alone need 75 + 50 = 125
+    expect(evaluateSection(section, context).arrangement!.depthNeededMm).toBeCloseTo(125, 9);
+  });
+
+  it('a stirrup that cannot be bent inside its cover fails, with plain layers too, and weighs nothing less than zero', () => {
+    const section: SectionInput = {
+      ...metricSection({ b: 100, h: 100, d: 80, As: 200, fc: 30, fy: 420 }),
+      coverMm: 200,
+      stirrup: { bar: '10', legs: 4, spacingMm: 25 },
+    };
+    const { meetsListedChecks, quantities } = evaluateSection(section, context);
+    expect(meetsListedChecks).toBe(false);
+    expect(quantities.steel.every((line) => line.kgPerM >= 0)).toBe(true);
+  });
+
   it('no tension steel at all gives no strength and meets nothing', () => {
     const section: SectionInput = {
       ...withBars(4, 300),
@@ -130,6 +178,10 @@ describe('sections that cannot be built', () => {
     const evaluation = evaluateSection(section, context);
     expect(evaluation.flexure).toBeNull();
     expect(evaluation.meetsListedChecks).toBe(false);
+    expect(evaluation.checks.find((check) => check.id === 'bar-fit')).toMatchObject({
+      passes: false,
+      reason: 'no steel at the tension face',
+    });
   });
 });
 

@@ -174,10 +174,70 @@ describe('degenerate sweeps', () => {
     expect(result.best.some((b) => b.measure === 'costPerM')).toBe(false);
   });
 
+  it('a mix without a rate is left out of a cost front, its band and its misses alike', () => {
+    const rates = OFFICE_PROBLEM.basis.rates!;
+    const concrete = rates.concrete.map((mix) => (mix.fcMPa === 40 ? { ...mix, costPerM3: null } : mix));
+    const basis = { ...OFFICE_PROBLEM.basis, rates: { ...rates, concrete } };
+    const { result } = run(changed({ basis }), { x: 'steelKgPerM', y: 'costPerM' });
+    const points = [...result.band, ...result.front, ...result.failures.flatMap((f) => f.bestWithout ?? [])];
+    expect(points.length).toBeGreaterThan(10);
+    expect(points.every((p) => Number.isFinite(p.x) && Number.isFinite(p.y))).toBe(true);
+    expect(result.band[0]!.x).toBe(result.front[0]!.x);
+  });
+
+  it('equal amounts are equal whatever bars they are made of: 5-20M beats 3-25M of the same 11.775 kg/m', () => {
+    const problem = changed({
+      basis: {
+        ...OFFICE_PROBLEM.basis,
+        barStandard: 'csa',
+        rates: { ...OFFICE_PROBLEM.basis.rates!, steelPerKg: 1.37, stirrupPerKg: 1.61, formworkPerM2: 33 },
+      },
+      demand: { muNmm: 0, ductilityTarget: null, depthCapMm: null },
+      space: {
+        ...OFFICE_PROBLEM.space,
+        width: { kind: 'list', values: [400] },
+        depth: { kind: 'list', values: [600] },
+        fc: { kind: 'list', values: [25] },
+        stirrups: [{ bar: '10M', legs: 2, spacingMm: 175 }],
+        tension: { kind: 'bars', sizes: ['20M', '25M'], counts: [3, 5], none: false },
+        compression: { kind: 'bars', sizes: ['15M'], counts: [2], none: false },
+      },
+    });
+    const { space, result } = run(problem, { x: 'costPerM', y: 'curvatureDuctility' });
+    const same = Array.from(
+      { length: space.size },
+      (_, i) => evaluateSection(sectionAt(space, i), problem).measures,
+    );
+    expect(same.map((m) => m.steelKgPerM).filter((kg, i, all) => all.indexOf(kg) !== i)).toHaveLength(1);
+    expect(new Set(result.front.map((p) => p.x)).size).toBe(result.front.length);
+  });
+
+  it('typed lists are sorted and each value counts once, so that an edge is an edge', () => {
+    const values = (list: readonly number[]) => ({
+      ...OFFICE_PROBLEM.space,
+      fc: { kind: 'list' as const, values: list },
+    });
+    const typed = run(changed({ space: values([35, 25, 40, 35, 30]) }));
+    expect(typed.space.fcMPa).toEqual([25, 30, 35, 40]);
+    expect(typed.result.hash).toBe(run(OFFICE_PROBLEM).result.hash);
+    expect(spaceSize(values([35, 25, 40, 35, 30]))).toBe(OFFICE_SIZE);
+  });
+
+  it('an axis that moves neither measure is never said to sit on its edge', () => {
+    const { result } = run(OFFICE_PROBLEM, { x: 'barCount', y: 'depthMm' });
+    expect(result.front.length).toBeGreaterThan(0);
+    expect(result.edges.filter((edge) => edge.axis === 'fc' && edge.share === 1)).toEqual([]);
+  });
+
   it.each([
     ['from above to', { width: { kind: 'range', from: 500, to: 300, step: 50 } }, ['width', 'to']],
     ['a zero step', { depth: { kind: 'range', from: 300, to: 500, step: 0 } }, ['depth', 'step']],
     ['an empty list', { fc: { kind: 'list', values: [] } }, ['fc', 'values']],
+    [
+      'no tension steel',
+      { tension: { kind: 'bars', sizes: ['20'], counts: [2], none: true } },
+      ['tension', 'none'],
+    ],
     ['no bars', { tension: { kind: 'bars', sizes: [], counts: [2], none: false } }, ['tension', 'sizes']],
     [
       'an unknown bar',

@@ -50,8 +50,8 @@ const US: Coefficients = {
 
 const METRIC: Coefficients = {
   units: 'si',
-  // The straight line runs on to its floor at 56 MPa; the printed table jumps to 0.65 at 55 MPa, 1 % below it.
-  blockDepthFactor: (fcMPa) => beta1((fcMPa - 28) / 7),
+  // Table 22.2.2.4.3 of the metric book steps to 0.65 at 55 MPa, a little before the line gets there.
+  blockDepthFactor: (fcMPa) => (fcMPa >= 55 ? 0.65 : beta1((fcMPa - 28) / 7)),
   concreteModulusMPa: (fcMPa) => 4700 * Math.sqrt(fcMPa),
   ruptureModulusMPa: (fcMPa) => 0.62 * Math.sqrt(fcMPa),
   leastSteelStressMPa: (fcMPa) => Math.max(0.25 * Math.sqrt(fcMPa), 1.4),
@@ -60,7 +60,7 @@ const METRIC: Coefficients = {
   hookTailLeastMm: 75,
   largestTightBendMm: 16,
   formulas: {
-    blockDepthFactor: '0.85 − 0.05 (f′c − 28)/7, within 0.65 and 0.85; f′c in MPa',
+    blockDepthFactor: '0.85 − 0.05 (f′c − 28)/7 from 28 to 55 MPa, 0.85 below, 0.65 above',
     concreteModulus: '4700 √f′c; MPa',
     ruptureModulus: '0.62 √f′c; MPa',
     leastSteel: 'max(0.25 √f′c, 1.4) b d/fy; MPa, fy at most 550 MPa',
@@ -76,7 +76,7 @@ const clausesOf = (book: string): Clauses => ({
   ruptureModulus: `${book} 19.2.3.1`,
   leastSteel: `${book} 9.6.1.2, 9.6.1.3`,
   barSpacing: `${book} 25.2.1, 25.2.2`,
-  hangers: `${book} 25.7.1.1`,
+  hangers: `${book} 25.7.1.2`,
 });
 
 interface Edition {

@@ -111,7 +111,7 @@ export function RulesFields({ units, standard, values, errors, onChange }: Rules
           onChange={(event) => onChange({ ...values, oneSizePerFace: event.target.checked })}
         />
         <CheckboxField
-          label="Two bars at least on each face, to hang the stirrups on"
+          label="A bar on each face for every stirrup leg"
           checked={values.requireHangers}
           onChange={(event) => onChange({ ...values, requireHangers: event.target.checked })}
         />
