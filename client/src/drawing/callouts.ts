@@ -21,7 +21,7 @@ export function calloutsOf(section: SectionInput, geometry: SectionGeometry, uni
     yMm: row.yMm,
   }));
   const bands = geometry.bands.map((band): Callout => ({
-    text: formatQuantity(band.areaMm2, 'area', units),
+    text: formatQuantity(band.areaMm2, 'area', units, { digits: 4 }),
     tone: 'steel',
     xMm: band.xMm + band.widthMm,
     yMm: band.yMm + band.heightMm / 2,

@@ -72,7 +72,7 @@ function SectionEditor({
   const [start] = useState(() => sectionDraft.read(draftId) ?? initial);
   const answer = evaluate.data;
   return (
-    <div className="grid items-start gap-x-12 gap-y-8 xl:grid-cols-[minmax(0,1fr)_26rem]">
+    <div className="grid items-start gap-x-12 gap-y-8 xl:grid-cols-[27rem_minmax(0,1fr)]">
       <SectionForm
         project={project}
         initial={start}

@@ -26,7 +26,7 @@ const optionsOf = <V extends string>(values: readonly V[], labels: Readonly<Reco
 /** The conventions a printed example may have used; the project's own until changed here. */
 export function ConventionFields({ values, onChange }: ConventionFieldsProps) {
   return (
-    <div className="grid gap-x-8 gap-y-4 sm:grid-cols-3">
+    <div className="grid gap-x-8 gap-y-4 sm:grid-cols-3 xl:grid-cols-1">
       <SelectField
         label="Displaced concrete"
         options={optionsOf(DISPLACED_CONCRETE, DISPLACED_LABEL)}

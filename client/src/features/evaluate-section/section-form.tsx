@@ -98,7 +98,7 @@ export function SectionForm({ project, initial, isBusy, refusal, onEdit, onEvalu
       }}
     >
       <Part title="Concrete">
-        <div className="grid grid-cols-2 gap-x-8 gap-y-4 sm:grid-cols-3">
+        <div className="grid grid-cols-2 gap-x-6 gap-y-4 sm:grid-cols-3">
           {number('widthMm', 'Width b', 'length', 'section.widthMm')}
           {number('depthMm', 'Depth h', 'length', 'section.depthMm')}
           {number('fcMPa', 'Concrete f′c', 'stress', 'section.fcMPa')}
@@ -114,7 +114,7 @@ export function SectionForm({ project, initial, isBusy, refusal, onEdit, onEvalu
           onChange={(steel) => change({ steel })}
         />
         {form.steel === 'bars' ? (
-          <div className="grid gap-x-8 gap-y-4 sm:grid-cols-3">
+          <div className="grid gap-x-6 gap-y-4 sm:grid-cols-3">
             <ListField
               label="Bottom bars"
               hint={barStandard === 'astm' ? 'as 3-#8 or 2-#8 + 2-#6' : 'as 3-25 or 2-25 + 2-20'}
@@ -139,7 +139,7 @@ export function SectionForm({ project, initial, isBusy, refusal, onEdit, onEvalu
             onChange={(layers) => change({ layers })}
           />
         )}
-        <div className="grid grid-cols-2 gap-x-8 gap-y-4 sm:grid-cols-3">
+        <div className="grid grid-cols-2 gap-x-6 gap-y-4 sm:grid-cols-3">
           <SelectField
             label="Stirrups"
             options={sizes}
@@ -152,7 +152,7 @@ export function SectionForm({ project, initial, isBusy, refusal, onEdit, onEvalu
         </div>
       </Part>
       <Part title="What it must do">
-        <div className="grid grid-cols-2 gap-x-8 gap-y-4 sm:grid-cols-3">
+        <div className="grid grid-cols-2 gap-x-6 gap-y-4 sm:grid-cols-3">
           {number('muNmm', 'Moment Mu', 'moment', 'demand.muNmm')}
           {number('ductilityTarget', 'Ductility μφ at least', 'ratio', 'demand.ductilityTarget')}
           {number('depthCapMm', 'Depth h at most', 'length', 'demand.depthCapMm')}

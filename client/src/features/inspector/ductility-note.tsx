@@ -41,7 +41,8 @@ export function DuctilityNote({
         ]}
       />
       <p className="text-sm text-muted">
-        {ductility.definition}; {BEND[conventions.bendAllowance]}.
+        {ductility.definition}
+        {evaluation.arrangement !== null && `; ${BEND[conventions.bendAllowance]}`}.
       </p>
       {elastic?.isElasticPictureDoubtful === true && (
         <p className="border-l-2 border-near-mark pl-3 text-sm text-near">

@@ -112,14 +112,18 @@ export function Inspector(props: InspectorProps) {
             <Fold title={units === 'us' ? 'Quantities per foot' : 'Quantities per metre'}>
               <QuantitiesList quantities={evaluation.quantities} units={units} digits={digits} />
             </Fold>
-            {evaluation.working.length > 0 && (
-              <Fold title="Working, line by line" isOpen={props.areWorkingLinesOpen === true}>
-                <WorkingLines steps={evaluation.working} units={units} digits={digits} />
-              </Fold>
-            )}
           </div>
-          <LimitsNote evaluation={evaluation} />
         </div>
+      </div>
+      {evaluation.working.length > 0 && (
+        <Fold title="Working, line by line" isOpen={props.areWorkingLinesOpen === true}>
+          <div className="gap-x-10 @3xl:columns-2">
+            <WorkingLines steps={evaluation.working} units={units} digits={digits} />
+          </div>
+        </Fold>
+      )}
+      <div className="border-t border-ink pt-3">
+        <LimitsNote evaluation={evaluation} />
       </div>
     </article>
   );

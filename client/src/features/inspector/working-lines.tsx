@@ -20,7 +20,7 @@ interface WorkingLinesProps {
 
 function Line({ step, units, digits }: Omit<WorkingLinesProps, 'steps'> & { readonly step: WorkingStep }) {
   return (
-    <li className="border-t border-rule py-1.5">
+    <li className="break-inside-avoid border-t border-rule py-1.5">
       <div className="flex flex-wrap items-baseline justify-between gap-x-4">
         <p>
           <span className="font-medium">{step.symbol}</span>{' '}
@@ -47,7 +47,7 @@ export function WorkingLines({ steps, units, digits }: WorkingLinesProps) {
     if (own.length === 0) return null;
     return (
       <section key={topic} className="pb-3">
-        <h4 className="pb-1 text-xs font-semibold text-muted">{title}</h4>
+        <h4 className="break-after-avoid pb-1 text-xs font-semibold text-muted">{title}</h4>
         <ol>
           {own.map((step) => (
             <Line key={step.id} step={step} units={units} digits={digits} />

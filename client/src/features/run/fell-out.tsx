@@ -1,9 +1,10 @@
 import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
 import type { ViewResult } from '#shared/sweep/result.ts';
 import { checkLabel } from '#client/src/lib/check-labels.ts';
-import { formatNumber, formatWhole } from '#client/src/lib/format-quantity.ts';
+import { formatDifferenceTo, formatNumber, formatWhole } from '#client/src/lib/format-quantity.ts';
+import { measureLabel } from '#client/src/lib/measure-labels.ts';
 import { checkWords } from './check-words.ts';
-import { measureDifferenceText, measureText, type MeasureReader } from './measure-text.ts';
+import { measureText, type MeasureReader } from './measure-text.ts';
 import { pricesOfChecks } from './price-of-checks.ts';
 
 interface FellOutProps {
@@ -69,7 +70,7 @@ export function FellOut({ result, definition, reader, onSelect }: FellOutProps) 
       <Shares result={result} />
       {prices.length > 0 && (
         <ul className="mt-3 grid gap-1.5 text-sm text-muted">
-          {prices.map(({ check, index, without, difference }) => (
+          {prices.map(({ check, index, without, best }) => (
             <li key={check}>
               Without {checkWords(check, definition, reader.units)} the best would be{' '}
               <button
@@ -80,10 +81,14 @@ export function FellOut({ result, definition, reader, onSelect }: FellOutProps) 
               >
                 {measureText(x, without, reader)}
               </button>
-              {difference !== null && (
+              {best !== null && (
                 <>
                   {' '}
-                  (<span className="num">{measureDifferenceText(x, difference, reader.units)}</span>)
+                  (
+                  <span className="num">
+                    {formatDifferenceTo(without, best, measureLabel(x, reader.units).kind, reader.units)}
+                  </span>
+                  )
                 </>
               )}
               .

@@ -1,11 +1,6 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { MeasureId } from '#shared/engine/measures.ts';
-import {
-  formatDifference,
-  formatMoney,
-  formatNumber,
-  formatQuantity,
-} from '#client/src/lib/format-quantity.ts';
+import { formatMoney, formatNumber, formatQuantity } from '#client/src/lib/format-quantity.ts';
 import { measureLabel } from '#client/src/lib/measure-labels.ts';
 import { displayUnit } from '#client/src/lib/units.ts';
 import type { ChartAxis } from '#client/src/charts/front-chart-input.ts';
@@ -26,11 +21,6 @@ export function measureText(
   if (kind === 'money-per-length' && !hideUnit)
     return formatMoney(value, reader.currency, kind, reader.units);
   return formatQuantity(value, kind, reader.units, { hideUnit });
-}
-
-/** A difference in the measure's own unit, signed. */
-export function measureDifferenceText(measure: MeasureId, difference: number, units: UnitSystem): string {
-  return formatDifference(difference, measureLabel(measure, units).kind, units, { hideUnit: true });
 }
 
 const unitText = (measure: MeasureId, { units, currency }: MeasureReader): string => {

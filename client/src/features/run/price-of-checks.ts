@@ -7,8 +7,8 @@ export interface PriceOfCheck {
   readonly check: CheckId;
   readonly index: number;
   readonly without: number;
-  /** `without` less the best there is; null where nothing meets every check. */
-  readonly difference: number | null;
+  /** The best there is with it; null where nothing meets every check. */
+  readonly best: number | null;
 }
 
 /** The checks whose removal would improve the leading measure, the dearest first. */
@@ -19,8 +19,8 @@ export function pricesOfChecks(result: ViewResult): PriceOfCheck[] {
     .flatMap(({ check, bestWithout }): PriceOfCheck[] => {
       if (bestWithout === null) return [];
       const { index, x } = bestWithout;
-      if (best === null) return [{ check, index, without: x, difference: null }];
-      return sign * (best - x) > 0 ? [{ check, index, without: x, difference: x - best }] : [];
+      if (best === null) return [{ check, index, without: x, best }];
+      return sign * (best - x) > 0 ? [{ check, index, without: x, best }] : [];
     })
     .sort((a, b) => sign * (a.without - b.without));
 }

@@ -186,7 +186,7 @@ export function SectionTable(props: SectionTableProps) {
               <tr
                 key={row.index}
                 aria-current={isChosen || undefined}
-                className={`cursor-pointer hover:bg-concrete/40 ${isChosen ? 'bg-concrete' : ''}`}
+                className={`cursor-pointer hover:bg-concrete/40 ${isChosen ? 'bg-concrete shadow-[inset_3px_0_var(--steel)]' : ''}`}
                 onClick={() => onSelect(row.index)}
               >
                 {columns.map((column, k) => (
@@ -194,7 +194,7 @@ export function SectionTable(props: SectionTableProps) {
                     {k === 0 ? (
                       <button
                         type="button"
-                        className={isChosen ? 'font-semibold text-steel' : 'underline decoration-rule'}
+                        className={isChosen ? 'font-semibold' : 'underline decoration-rule'}
                         aria-label={`Look at ${sizeText(row.section, reader.units)}`}
                         onClick={() => onSelect(row.index)}
                       >
