@@ -80,8 +80,6 @@ export function formatQuantity(
   return label === '%' || label.startsWith('/') ? `${text}${label}` : `${text} ${label}`;
 }
 
-const decimalsOf = (text: string): number => text.split('.')[1]?.length ?? 0;
-
 /** A difference with its sign in front, `+1.20` or `−1.20`; `0` where there is none. */
 export function formatDifference(
   stored: number | null | undefined,
@@ -95,16 +93,28 @@ export function formatDifference(
   return stored > 0 ? `+${text}` : text;
 }
 
-/** A value's difference to a baseline, `+1.2` or `−1.2`, to no more decimals than the two are printed with. */
+/** Decimals a value is printed with; negative where even its tens or hundreds are rounded. */
+function decimalsShown(stored: number, kind: DisplayKind, units: UnitSystem): number {
+  const text = formatQuantity(stored, kind, units, { hideUnit: true });
+  const decimals = text.split('.')[1]?.length ?? 0;
+  if (decimals > 0 || stored === 0) return decimals;
+  const { digits } = STYLE[kind] ?? COMPUTED;
+  return Math.min(0, digits - 1 - exponentOf(toDisplay(stored, kind, units)));
+}
+
+/** A value's difference to a baseline, `+1.2` or `−1.2`, no finer than the two are printed. */
 export function formatDifferenceTo(
   value: number,
   baseline: number,
   kind: DisplayKind,
   units: UnitSystem,
 ): string {
-  const print = (stored: number) => formatQuantity(stored, kind, units, { hideUnit: true });
-  const decimals = Math.max(decimalsOf(print(value)), decimalsOf(print(baseline)));
-  const text = withDecimals(toDisplay(value - baseline, kind, units), decimals, decimals);
+  const shown = [value, baseline].map((stored) => decimalsShown(stored, kind, units));
+  const decimals = Math.min(...shown) < 0 ? Math.min(...shown) : Math.max(...shown);
+  const place = 10 ** Math.max(0, -decimals);
+  const difference = toDisplay(value - baseline, kind, units);
+  const rounded = decimals < 0 ? Math.round(difference / place) * place : difference;
+  const text = withDecimals(rounded, Math.max(0, decimals), Math.max(0, decimals));
   if (Number(text.replaceAll(',', '').replace('−', '-')) === 0) return '±0';
   return value > baseline ? `+${text}` : text;
 }

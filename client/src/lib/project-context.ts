@@ -1,5 +1,4 @@
 import { createContext, useContext } from 'react';
-import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Project } from '#shared/contract/records.ts';
 
 /** The project every page below /projects/:projectId belongs to. */
@@ -10,5 +9,3 @@ export function useProject(): Project {
   if (project === null) throw new Error('This part of the page needs a project around it');
   return project;
 }
-
-export const useUnits = (): UnitSystem => useProject().designBasis.units;

@@ -47,6 +47,8 @@ describe('printing a number', () => {
     expect(formatDifferenceTo(16.1, 15.1, 'ratio', 'si')).toBe('+1.0');
     expect(formatDifferenceTo(1.4603, 1.38, 'tonnes', 'si')).toBe('+0.08');
     expect(formatDifferenceTo(13.2, 13.6, 'ratio', 'si')).toBe('−0.4');
+    expect(formatDifferenceTo(4972, 3860, 'co2e', 'si')).toBe('+1,110');
+    expect(formatDifferenceTo(30, 30.5, 'length', 'si')).toBe('−0.5');
     expect(formatDifferenceTo(5, 5, 'ratio', 'si')).toBe('±0');
   });
 

@@ -21,6 +21,7 @@ import {
 import { placeIssues } from '#client/src/lib/form-issues.ts';
 import { Button } from '#client/src/ui/button.tsx';
 import { FieldGroup } from '#client/src/ui/field-group.tsx';
+import { FormActions } from '#client/src/ui/form-actions.tsx';
 import { FormError } from '#client/src/ui/form-error.tsx';
 import { FormNumberField } from '#client/src/ui/form-number-field.tsx';
 import { SelectField } from '#client/src/ui/select-field.tsx';
@@ -154,7 +155,7 @@ export function DesignBasisForm({ projectId, basis, isReadOnly }: DesignBasisFor
         </FieldGroup>
       </fieldset>
       {!isReadOnly && (
-        <div className="sticky bottom-0 z-10 flex flex-wrap items-center gap-4 border-t border-ink bg-paper py-3">
+        <FormActions isDirty={isDirty}>
           <Button look="solid" type="submit" isBusy={save.isPending} disabled={!isDirty}>
             Save design basis
           </Button>
@@ -164,7 +165,7 @@ export function DesignBasisForm({ projectId, basis, isReadOnly }: DesignBasisFor
             </Button>
           )}
           <FormError message={failure} />
-        </div>
+        </FormActions>
       )}
       {guard.element}
     </form>

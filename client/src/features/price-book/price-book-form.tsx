@@ -6,6 +6,7 @@ import { placeIssues } from '#client/src/lib/form-issues.ts';
 import { unitLabel } from '#client/src/lib/units.ts';
 import { Button } from '#client/src/ui/button.tsx';
 import { FieldGroup } from '#client/src/ui/field-group.tsx';
+import { FormActions } from '#client/src/ui/form-actions.tsx';
 import { FormError } from '#client/src/ui/form-error.tsx';
 import { FormNumberField } from '#client/src/ui/form-number-field.tsx';
 import { TextField } from '#client/src/ui/text-field.tsx';
@@ -117,7 +118,7 @@ export function PriceBookForm({ projectId, priceBook, units, isReadOnly }: Price
         </FieldGroup>
       </fieldset>
       {!isReadOnly && (
-        <div className="sticky bottom-0 z-10 flex flex-wrap items-center gap-4 border-t border-ink bg-paper py-3">
+        <FormActions isDirty={isDirty}>
           <Button look="solid" type="submit" isBusy={save.isPending} disabled={!isDirty}>
             Save price book
           </Button>
@@ -127,7 +128,7 @@ export function PriceBookForm({ projectId, priceBook, units, isReadOnly }: Price
             </Button>
           )}
           <FormError message={failure} />
-        </div>
+        </FormActions>
       )}
       {guard.element}
     </form>

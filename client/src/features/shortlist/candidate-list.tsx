@@ -63,7 +63,9 @@ export function CandidateList(props: CandidateListProps) {
           <th scope="col" className="figure">
             Mu/φMn
           </th>
-          <th scope="col">Author</th>
+          <th scope="col" className="pl-4!">
+            Author
+          </th>
         </tr>
       </thead>
       <tbody>
@@ -153,7 +155,7 @@ function CandidateRow(props: CandidateRowProps) {
       )}
       <td className="figure">{formatQuantity(measures.curvatureDuctility, 'ratio', units)}</td>
       <td className="figure">{formatQuantity(measures.utilisation, 'ratio', units)}</td>
-      <td className="text-muted">{candidate.author.name}</td>
+      <td className="pl-4! text-muted">{candidate.author.name}</td>
     </tr>
   );
 }
