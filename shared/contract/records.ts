@@ -7,8 +7,8 @@ import { demandSchema, sectionInputSchema, userRulesSchema } from './section-inp
 import { sweepDefinitionSchema, viewSchema } from './sweep-definition.ts';
 
 /** The engine's and the sweep's own outputs are trusted on the way out; the schema names them without re-checking. */
-export const evaluationSchema = z.custom<Evaluation>((v) => typeof v === 'object' && v !== null);
-export const viewResultSchema = z.custom<ViewResult>((v) => typeof v === 'object' && v !== null);
+const evaluationSchema = z.custom<Evaluation>((v) => typeof v === 'object' && v !== null);
+const viewResultSchema = z.custom<ViewResult>((v) => typeof v === 'object' && v !== null);
 
 export const ROLES = ['admin', 'engineer', 'checker', 'estimator', 'viewer'] as const;
 export type Role = (typeof ROLES)[number];
@@ -169,15 +169,14 @@ export const pinInputSchema = z.object({
 });
 export type PinInput = z.infer<typeof pinInputSchema>;
 
-export const commentSchema = z.object({
+const commentSchema = z.object({
   id: idSchema,
   author: personSchema.pick({ id: true, name: true, role: true }),
   text: z.string(),
   createdAt: timestamp,
 });
-export type Comment = z.infer<typeof commentSchema>;
 
-export const transitionSchema = z.object({
+const transitionSchema = z.object({
   id: idSchema,
   from: z.enum(CANDIDATE_STATES).nullable(),
   to: z.enum(CANDIDATE_STATES),

@@ -31,7 +31,7 @@ export const stirrupSchema = z.object({
   spacingMm: bounded('Stirrup spacing', 25, 2000, 'mm'),
 }) satisfies z.ZodType<Stirrup>;
 
-export const reinforcementSchema = z.discriminatedUnion('kind', [
+const reinforcementSchema = z.discriminatedUnion('kind', [
   z.object({ kind: z.literal('bars'), tension: barGroupSchema, compression: barGroupSchema }),
   z.object({
     kind: z.literal('layers'),

@@ -84,7 +84,7 @@ const steelSetsSchema = (label: string, isEmptyAllowed: boolean) =>
         ctx.addIssue({ code: 'custom', path: ['counts'], message: `${label}: enter at least one count` });
     }) satisfies z.ZodType<SteelSetsDefinition>;
 
-export const spaceSchema = z
+const spaceSchema = z
   .object({
     width: axisSchema('Width b', widthMmSchema),
     depth: axisSchema('Depth h', depthMmSchema),

@@ -1,5 +1,5 @@
 import { getBar } from './bars.ts';
-import type { CheckId, CheckResult, DuctilityResult, FlexureResult, QuantityKind } from './evaluation.ts';
+import type { CheckResult, DuctilityResult, FlexureResult } from './evaluation.ts';
 import { isAtLeastTimes, isAtMostTimes, isSameLength, isWithinLength, requiredSteelMm2 } from './limits.ts';
 import type { RuleSet } from './rules/rule-set.ts';
 import type { BarGroup, DesignBasis, Demand, Reinforcement, SectionInput, UserRules } from './section.ts';
@@ -37,21 +37,10 @@ export function checksOf(context: CheckContext): readonly CheckResult[] {
   ].filter((check) => check !== null);
 }
 
-interface Comparison {
-  readonly id: CheckId;
-  readonly passes: boolean;
-  readonly demand: number | null;
-  readonly capacity: number | null;
-  readonly ratio: number | null;
-  readonly kind: QuantityKind;
-  readonly clause: string;
-  readonly reason: string;
-}
-
 const finite = (value: number | null) => (value !== null && Number.isFinite(value) ? value : null);
 
 /** Numbers that are none (0/0, x/0) are shown as none; a pass within the slack of `limits.ts` is a ratio of 1. */
-function check({ passes, capacity, ratio, ...rest }: Comparison): CheckResult {
+function check({ passes, capacity, ratio, ...rest }: CheckResult): CheckResult {
   const shown = finite(ratio);
   return {
     ...rest,

@@ -7,7 +7,7 @@
 export const MM_PER_IN = 25.4;
 export const MM_PER_FT = 304.8;
 export const KG_PER_LB = 0.45359237;
-export const N_PER_LBF = 4.4482216152605;
+const N_PER_LBF = 4.4482216152605;
 export const N_PER_KIP = 1000 * N_PER_LBF;
 export const MPA_PER_PSI = N_PER_LBF / (MM_PER_IN * MM_PER_IN);
 export const MPA_PER_KSI = 1000 * MPA_PER_PSI;

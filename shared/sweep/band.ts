@@ -4,7 +4,7 @@ export const MAX_BAND_KEPT = 400;
 export const BAND_SHARE = 0.1;
 
 /** Largest oriented x (less is better) that is within the band of the best. */
-export function bandLimit(best: number): number {
+function bandLimit(best: number): number {
   return best + BAND_SHARE * Math.abs(best);
 }
 

@@ -104,7 +104,7 @@ export function nonDominated(
 }
 
 /** The points of a builder in the measures' own signs, from best x. */
-export function frontPoints(builder: FrontBuilder, signs: Signs): FrontPoint[] {
+function frontPoints(builder: FrontBuilder, signs: Signs): FrontPoint[] {
   return builder.xs.map((x, i) => ({
     index: builder.ties[i]![0]!,
     x: signs.x * x,

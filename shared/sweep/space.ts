@@ -137,7 +137,7 @@ function assertAreasInside(
 }
 
 /** Distance of a plain layer from its own face in a section of depth h, mm. */
-export function offsetAt(at: { offsetMm: number } | { shareOfDepth: number }, depthMm: number): number {
+function offsetAt(at: { offsetMm: number } | { shareOfDepth: number }, depthMm: number): number {
   return 'offsetMm' in at ? at.offsetMm : at.shareOfDepth * depthMm;
 }
 

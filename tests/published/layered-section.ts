@@ -81,7 +81,7 @@ function sectionOf(
 export const metricSection = (printed: LayeredSection) =>
   sectionOf(printed, { length: 1, area: 1, stress: 1 });
 /** in, in², psi. */
-export const usSection = (printed: LayeredSection) =>
+const usSection = (printed: LayeredSection) =>
   sectionOf(printed, { length: MM_PER_IN, area: MM2_PER_IN2, stress: MPA_PER_PSI });
 
 export function evaluateMetric(printed: LayeredSection, basis: Partial<DesignBasis> = {}): Evaluation {
