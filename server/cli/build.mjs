@@ -40,7 +40,7 @@ async function buildClient() {
 
 /** One file per entry, packages left in node_modules. Threads load plain JavaScript and need no TypeScript loader. */
 async function buildServer() {
-  const { build } = await import('esbuild');
+  const { build, stop } = await import('esbuild');
   const computeFolder = path.join(PROJECT_ROOT, 'server', 'compute');
   const workers = fs.readdirSync(computeFolder).filter((file) => file.endsWith('worker.ts'));
   await build({
@@ -62,6 +62,8 @@ async function buildServer() {
     sourcemap: true,
     logLevel: 'warning',
   });
+  // Its own process would otherwise stay beside the service for as long as that runs.
+  await stop();
 }
 
 function digestSources() {
