@@ -1,47 +1,8 @@
 import { leastSteelOf } from './checks.ts';
-import type {
-  DuctilityResult,
-  ElasticResult,
-  FlexureResult,
-  Quantities,
-  QuantityKind,
-  WorkingStep,
-} from './evaluation.ts';
-import type { RuleSet } from './rules/rule-set.ts';
-import type { DesignBasis, Demand, SectionInput } from './section.ts';
-import type { SteelLayout } from './steel-layout.ts';
-
-/** Results whose working is written out. */
-export interface WorkingSource {
-  readonly section: SectionInput;
-  readonly basis: DesignBasis;
-  readonly demand: Demand;
-  readonly ruleSet: RuleSet;
-  readonly layout: SteelLayout;
-  readonly flexure: FlexureResult;
-  readonly elastic: ElasticResult;
-  readonly ductility: DuctilityResult;
-  readonly quantities: Quantities;
-}
-
-type Input = readonly [symbol: string, value: number, kind: QuantityKind];
-
-const step = (
-  id: string,
-  topic: WorkingStep['topic'],
-  [symbol, formula, value, kind]: readonly [string, string, number, QuantityKind],
-  inputs: readonly Input[],
-  clause: string,
-): WorkingStep => ({
-  id,
-  topic,
-  symbol,
-  formula,
-  inputs: inputs.map(([s, v, k]) => ({ symbol: s, value: v, kind: k })),
-  value,
-  kind,
-  clause,
-});
+import type { QuantityKind, WorkingStep } from './evaluation.ts';
+import { ductilitySteps, elasticSteps } from './working-elastic.ts';
+import { quantitySteps } from './working-quantities.ts';
+import { layerInputs, STATICS, step, type Input, type WorkingSource } from './working-step.ts';
 
 /** Every step from materials to ductility in the order a checker works: formula, numbers put in, result, clause. */
 export function workingOf(source: WorkingSource): readonly WorkingStep[] {
@@ -55,8 +16,6 @@ export function workingOf(source: WorkingSource): readonly WorkingStep[] {
     ...quantitySteps(source),
   ];
 }
-
-const STATICS = 'statics';
 
 function materials({ section, basis, ruleSet, flexure, elastic }: WorkingSource): WorkingStep[] {
   const fc: Input = ['f′c', section.fcMPa, 'stress'];
@@ -139,8 +98,8 @@ function ultimate({ section, layout, flexure, ruleSet }: WorkingSource): Working
     step(
       'd',
       'ultimate',
-      ['d', 'centroid of the tension steel', layout.dMm, 'length'],
-      [['h', section.depthMm, 'length']],
+      ['d', 'Σ A d/Σ A of the tension steel', layout.dMm, 'length'],
+      [['h', section.depthMm, 'length'], ...layerInputs(layout, 'tension')],
       STATICS,
     ),
     step(
@@ -248,117 +207,4 @@ function limits(source: WorkingSource): WorkingStep[] {
     'area',
   ];
   return [least, step('as-waive', 'limits', waiver, [['Mu', demand.muNmm, 'moment'], ...inputs], clause)];
-}
-
-/** Depth and area of every layer, for the sums over layers. */
-const layerInputs = (layout: SteelLayout): Input[] =>
-  [...layout.depths].flatMap((depth, i): Input[] => [
-    [`d${i + 1}`, depth, 'length'],
-    [`A${i + 1}`, layout.areas[i]!, 'area'],
-  ]);
-
-function elasticSteps({ section, basis, layout, elastic, ruleSet }: WorkingSource): WorkingStep[] {
-  const above = basis.displacedConcrete === 'ignore' ? 'n' : '(n − 1)';
-  const n: Input = ['n', elastic.modularRatio, 'ratio'];
-  const kd: Input = ['kd', elastic.crackedAxisMm, 'length'];
-  return [
-    step(
-      'fr',
-      'elastic',
-      ['fr', ruleSet.formulas.ruptureModulus, elastic.ruptureModulusMPa, 'stress'],
-      [['f′c', section.fcMPa, 'stress']],
-      ruleSet.clauses.ruptureModulus,
-    ),
-    step(
-      'mcr',
-      'elastic',
-      ['Mcr', 'fr Iut/yt, transformed section', elastic.crackingMomentNmm, 'moment'],
-      [
-        ['fr', elastic.ruptureModulusMPa, 'stress'],
-        ['Iut', elastic.uncrackedInertiaMm4, 'inertia'],
-        ['yt', section.depthMm - elastic.uncrackedAxisMm, 'length'],
-      ],
-      STATICS,
-    ),
-    step(
-      'kd',
-      'elastic',
-      ['kd', `b kd²/2 + Σ ${above} A (kd − d) = Σ n A (d − kd)`, elastic.crackedAxisMm, 'length'],
-      [n, ['b', section.widthMm, 'length'], ...layerInputs(layout)],
-      STATICS,
-    ),
-    step(
-      'icr',
-      'elastic',
-      ['Icr', `b kd³/3 + Σ ${above} A (kd − d)² + Σ n A (d − kd)²`, elastic.crackedInertiaMm4, 'inertia'],
-      [n, ['b', section.widthMm, 'length'], kd, ...layerInputs(layout)],
-      STATICS,
-    ),
-    step(
-      'fc-yield',
-      'elastic',
-      ['fc/f′c at yield', 'Ec φy kd/f′c', elastic.concreteStressShareAtYield, 'ratio'],
-      [['Ec', elastic.ecMPa, 'stress'], kd],
-      STATICS,
-    ),
-  ];
-}
-
-function ductilitySteps({
-  section,
-  basis,
-  layout,
-  elastic,
-  flexure,
-  ductility,
-}: WorkingSource): WorkingStep[] {
-  const isCentroid = basis.yieldCurvatureAt === 'centroid';
-  const depth: Input = isCentroid ? ['d', layout.dMm, 'length'] : ['dt', layout.dtMm, 'length'];
-  const phiY: Input = ['φy', ductility.curvatureYieldPerMm, 'curvature'];
-  const phiU: Input = ['φu', ductility.curvatureUltimatePerMm, 'curvature'];
-  return [
-    step(
-      'phi-y',
-      'ductility',
-      ['φy', `εy/(${depth[0]} − kd)`, phiY[1], 'curvature'],
-      [['εy', section.fyMPa / basis.esMPa, 'strain'], depth, ['kd', elastic.crackedAxisMm, 'length']],
-      STATICS,
-    ),
-    step(
-      'my',
-      'ductility',
-      ['My', 'Ec Icr φy', elastic.yieldMomentNmm, 'moment'],
-      [['Ec', elastic.ecMPa, 'stress'], ['Icr', elastic.crackedInertiaMm4, 'inertia'], phiY],
-      STATICS,
-    ),
-    step(
-      'phi-u',
-      'ductility',
-      ['φu', 'εcu/c', phiU[1], 'curvature'],
-      [
-        ['εcu', flexure.epsilonCu, 'strain'],
-        ['c', flexure.neutralAxisMm, 'length'],
-      ],
-      STATICS,
-    ),
-    step(
-      'mu-phi',
-      'ductility',
-      ['μφ', 'φu/φy', ductility.curvatureDuctility, 'ratio'],
-      [phiU, phiY],
-      STATICS,
-    ),
-  ];
-}
-
-function quantitySteps({ quantities }: WorkingSource): WorkingStep[] {
-  const inputs = quantities.steel.map((line): Input => [
-    `${line.bar} ${line.position}`,
-    line.kgPerM,
-    'mass-per-length',
-  ]);
-  const total = quantities.netSteelKgPerM;
-  return [
-    step('steel', 'quantities', ['g', 'Σ bars, net', total, 'mass-per-length'], inputs, 'bar standard'),
-  ];
 }

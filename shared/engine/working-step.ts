@@ -1,0 +1,59 @@
+import type {
+  DuctilityResult,
+  ElasticResult,
+  FlexureResult,
+  Quantities,
+  QuantityKind,
+  WorkingStep,
+} from './evaluation.ts';
+import type { RuleSet } from './rules/rule-set.ts';
+import type { DesignBasis, Demand, Face, SectionInput } from './section.ts';
+import type { SteelLayout } from './steel-layout.ts';
+
+/** Results whose working is written out. */
+export interface WorkingSource {
+  readonly section: SectionInput;
+  readonly basis: DesignBasis;
+  readonly demand: Demand;
+  readonly ruleSet: RuleSet;
+  readonly layout: SteelLayout;
+  readonly flexure: FlexureResult;
+  readonly elastic: ElasticResult;
+  readonly ductility: DuctilityResult;
+  readonly quantities: Quantities;
+}
+
+/** A number put into a formula. */
+export type Input = readonly [symbol: string, value: number, kind: QuantityKind];
+
+/** One line of working. */
+export const step = (
+  id: string,
+  topic: WorkingStep['topic'],
+  [symbol, formula, value, kind]: readonly [string, string, number, QuantityKind],
+  inputs: readonly Input[],
+  clause: string,
+): WorkingStep => ({
+  id,
+  topic,
+  symbol,
+  formula,
+  inputs: inputs.map(([s, v, k]) => ({ symbol: s, value: v, kind: k })),
+  value,
+  kind,
+  clause,
+});
+
+/** The clause of what follows from equilibrium and compatibility alone. */
+export const STATICS = 'statics';
+
+/** Depth and area of every layer, or of one face's, for the sums over layers. */
+export const layerInputs = (layout: SteelLayout, face?: Face): Input[] =>
+  [...layout.depths].flatMap((depth, i): Input[] =>
+    face !== undefined && layout.faces[i] !== face
+      ? []
+      : [
+          [`d${i + 1}`, depth, 'length'],
+          [`A${i + 1}`, layout.areas[i]!, 'area'],
+        ],
+  );
