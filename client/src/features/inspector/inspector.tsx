@@ -39,18 +39,29 @@ function Fold(props: { readonly title: string; readonly isOpen?: boolean; readon
   );
 }
 
+/** Why the bars cannot be placed and the width at which they could; empty where they can. */
+function misfitWords({ arrangement }: Evaluation, units: UnitSystem): string {
+  if (arrangement === null || arrangement.fits) return '';
+  const needed = Math.max(
+    ...arrangement.faces.filter((face) => !face.fits).map((face) => face.widthNeededMm),
+    0,
+  );
+  const width = needed > 0 ? `; b of ${formatQuantity(needed, 'length', units)} would do` : '';
+  return `${quantitiesInText(arrangement.reason, units)}${width}`;
+}
+
 function VerdictLine({ evaluation, units }: { readonly evaluation: Evaluation; readonly units: UnitSystem }) {
   const failing = evaluation.checks.filter((check) => !check.passes).length;
   if (evaluation.meetsListedChecks)
     return <p className="font-medium text-meets">✓ Meets the listed checks</p>;
-  const reason = evaluation.arrangement?.fits === false ? evaluation.arrangement.reason : '';
+  const reason = misfitWords(evaluation, units);
   return (
     <div className="text-fails">
       <p className="font-medium">
         ✕ Fails {failing} of {evaluation.checks.length} listed{' '}
         {evaluation.checks.length === 1 ? 'check' : 'checks'}
       </p>
-      {reason !== '' && <p className="text-sm">{quantitiesInText(reason, units)}</p>}
+      {reason !== '' && <p className="text-sm">{reason}</p>}
     </div>
   );
 }

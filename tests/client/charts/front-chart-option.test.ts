@@ -1,0 +1,108 @@
+import { describe, expect, it } from 'vitest';
+import type { FrontChartInput } from '#client/src/charts/front-chart-input.ts';
+import { axisTitle, betterWords } from '#client/src/charts/front-chart-input.ts';
+import { frontChartOption } from '#client/src/charts/front-chart-option.ts';
+
+const COLOURS = {
+  paper: '#fff',
+  ink: '#000',
+  muted: '#666',
+  rule: '#ddd',
+  steel: '#a00',
+  meets: '#0a0',
+  near: '#aa0',
+};
+
+const input: FrontChartInput = {
+  x: { title: 'Steel', unit: 'lb/ft', direction: 'less', perSi: 0.5, formatTick: (v) => `${v}` },
+  y: { title: 'Curvature ductility μφ', unit: '', direction: 'more', perSi: 1, formatTick: (v) => `${v}` },
+  xExtent: { min: 5, max: 25, step: 5 },
+  yExtent: { min: 0, max: 15, step: 5 },
+  frame: { width: 700, height: 400, left: 50, right: 20, top: 30, bottom: 40 },
+  cells: [{ x0: 20, x1: 40, y0: 2, y1: 4, count: 12 }],
+  front: [
+    { index: 4, x: 20, y: 6, tieCount: 2, ties: [4, 9] },
+    { index: 5, x: 30, y: 9, tieCount: 1, ties: [5] },
+  ],
+  band: [
+    { index: 4, x: 20, y: 6 },
+    { index: 6, x: 20.5, y: 5 },
+  ],
+  bandShare: 0.05,
+  pins: [{ label: 'A', index: 5, x: 30, y: 9 }],
+  selected: { index: 4, x: 20, y: 6 },
+  target: { axis: 'y', value: 6, label: 'target μφ 6' },
+  colours: COLOURS,
+  describe: (index) => `section ${index}\nits values`,
+};
+
+interface DrawnSeries {
+  readonly id: string;
+  readonly data: readonly unknown[];
+}
+const seriesOf = (changed: Partial<FrontChartInput> = {}): ReadonlyMap<string, DrawnSeries> =>
+  new Map(
+    (frontChartOption({ ...input, ...changed }).series as DrawnSeries[]).map((series) => [series.id, series]),
+  );
+
+describe('the front chart', () => {
+  it('prints every mark in the unit of its axis, with the index to pick it by', () => {
+    expect(seriesOf().get('front')!.data).toEqual([{ value: [10, 6, 4] }, { value: [15, 9, 5] }]);
+  });
+
+  it('tints the band from the best to the band’s edge over the whole height', () => {
+    expect(seriesOf().get('band-tint')!.data).toEqual([[10, 0, 10.5, 15]]);
+  });
+
+  it('tints towards less where more is better', () => {
+    const x = { ...input.x, direction: 'more' } as const;
+    expect(seriesOf({ x }).get('band-tint')!.data).toEqual([[10, 0, 9.5, 15]]);
+  });
+
+  it('shows neither tint nor band marks for a band of no width', () => {
+    const series = seriesOf({ bandShare: 0 });
+    expect(series.get('band-tint')!.data).toEqual([]);
+    expect(series.get('band')!.data).toEqual([]);
+  });
+
+  it('draws the target across the axis it belongs to, and none where it is not asked', () => {
+    expect(seriesOf().get('target')!.data).toEqual([[5, 6, 25, 6]]);
+    const alongX = seriesOf({ target: { axis: 'x', value: 20, label: '' } });
+    expect(alongX.get('target')!.data).toEqual([[10, 0, 10, 15]]);
+    expect(seriesOf({ target: null }).get('target')!.data).toEqual([]);
+  });
+
+  it('keeps the number of sections in the cells it draws', () => {
+    expect(seriesOf().get('density')!.data).toEqual([[10, 2, 20, 4, 12]]);
+  });
+
+  it('runs the step line from the worst y up the best mark and out to the worst x', () => {
+    expect(seriesOf().get('front-steps')!.data).toEqual([
+      [10, 0],
+      [10, 6],
+      [15, 6],
+      [15, 9],
+      [25, 9],
+    ]);
+  });
+
+  it('draws an empty run without a mark', () => {
+    const series = seriesOf({ front: [], band: [], cells: [], pins: [], selected: null });
+    for (const id of ['front', 'front-steps', 'band', 'band-tint', 'density', 'pins', 'selected'])
+      expect(series.get(id)!.data).toEqual([]);
+  });
+
+  it('reads a section out in its own words, and a cell by its number of sections', () => {
+    const { formatter } = frontChartOption(input).tooltip as { formatter: (hovered: object) => string };
+    expect(formatter({ seriesId: 'front', value: [10, 6, 4] })).toBe('section 4<br>its values');
+    expect(formatter({ seriesId: 'density', value: [10, 2, 20, 4, 1] })).toContain('1 section meets');
+    expect(formatter({ seriesId: 'density', value: [10, 2, 20, 4, 1200] })).toContain('1,200 sections meet');
+  });
+
+  it('says on each axis which way is better', () => {
+    expect(axisTitle(input.x)).toBe('Steel, lb/ft');
+    expect(axisTitle(input.y)).toBe('Curvature ductility μφ');
+    expect(betterWords('x', 'less')).toBe('← less is better');
+    expect(betterWords('y', 'more')).toBe('↑ more is better');
+  });
+});
