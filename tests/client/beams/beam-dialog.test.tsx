@@ -112,7 +112,7 @@ describe('a new beam', () => {
     await fillIn();
     await userEvent.type(field('Mark'), '{Enter}');
     const dialog = await screen.findByRole('dialog', { name: 'Your session has ended' });
-    expect(within(dialog).getByLabelText<HTMLInputElement>('E-mail').value).toBe(READER.email);
+    expect((await within(dialog).findByLabelText<HTMLInputElement>('E-mail')).value).toBe(READER.email);
     await userEvent.type(within(dialog).getByLabelText('Password'), 'a password{Enter}');
     await waitFor(() => expect(sent).toHaveLength(1));
     expect(sent[0]).toMatchObject({ mark: 'B-204' });
