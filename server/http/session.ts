@@ -6,7 +6,6 @@ declare module 'express-session' {
   interface SessionData {
     /** Who is signed in; absent before that. */
     personId?: string;
-    csrfToken?: string;
   }
 }
 
