@@ -21,7 +21,8 @@ export function useRunAddress(first: View): RunAddressControls {
           for (const [key, value] of Object.entries(values)) next.set(key, value);
           return next;
         },
-        { replace: true, preventScrollReset: true },
+        // At once: of two keys pressed in quick succession the second must begin where the first one led.
+        { replace: true, preventScrollReset: true, flushSync: true },
       ),
     [setParams],
   );
