@@ -19,6 +19,7 @@ import { useRunView } from '#client/src/features/run/use-run-view.ts';
 import { candidatesQuery } from '#client/src/features/shortlist/api.ts';
 import { useStartRun } from '#client/src/features/sweeps/api.ts';
 import { unavailableReason } from '#client/src/lib/measure-availability.ts';
+import { unitLabel } from '#client/src/lib/units.ts';
 import { paths } from '#client/src/lib/paths.ts';
 import { useMay } from '#client/src/lib/reader-context.ts';
 import { Button, ButtonLink } from '#client/src/ui/button.tsx';
@@ -98,7 +99,7 @@ export function RunWorkspace({ run, project }: RunWorkspaceProps) {
         head={
           <RunHead
             run={run}
-            progress={progress}
+            progress={state.latest}
             mayStop={mayRun}
             isStopping={state.cancel.isPending}
             onStop={() => state.cancel.mutate()}
@@ -166,7 +167,9 @@ export function RunWorkspace({ run, project }: RunWorkspaceProps) {
               {result !== null && result.front.length > 0 && (
                 <>
                   <section aria-label="Along the front" className="min-w-0 border-t border-rule pt-2">
-                    <h2 className="pb-1 text-xs font-semibold text-muted">Along the front, to one scale</h2>
+                    <h2 className="pb-1 text-xs font-semibold text-muted">
+                      Along the front, to one scale, {unitLabel('length', units)}
+                    </h2>
                     <FrontStrip
                       front={result.front}
                       view={view}

@@ -23,7 +23,7 @@ export function MeasureChoice({ side, value, units, reasonAgainst, onChange }: M
       <select
         id={id}
         value={value}
-        className="ruled max-w-52 bg-paper font-semibold"
+        className="ruled max-w-46 bg-paper font-semibold"
         onChange={(event) => onChange(event.target.value as MeasureId)}
       >
         {MEASURE_IDS.map((measure) => {

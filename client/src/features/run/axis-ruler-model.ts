@@ -11,6 +11,8 @@ export interface RulerMark {
   readonly feasible: number;
   readonly evaluated: number;
   readonly isLabelled: boolean;
+  /** Ticks closer than a few pixels would fill the line black. */
+  readonly hasTick: boolean;
 }
 
 export interface RulerFrame {
@@ -24,9 +26,21 @@ export interface RulerFrame {
 /** A bar that stands for at least one section never vanishes. */
 const LEAST_BAR_PX = 1.5;
 
+/** Widest bar, and the share of the pitch a bar takes where values lie close. */
+const WIDEST_BAR_PX = 5.5;
+const BAR_OF_PITCH = 0.8;
+const LEAST_TICK_PITCH_PX = 3;
+
+const pitchOf = (count: number, frame: RulerFrame): number =>
+  count > 1 ? (frame.widthPx - 2 * frame.insetPx) / (count - 1) : frame.widthPx;
+
+/** Width of the bars standing on a ruler of so many values. */
+export const rulerBarPx = (count: number, frame: RulerFrame): number =>
+  Math.min(WIDEST_BAR_PX, pitchOf(count, frame) * BAR_OF_PITCH);
+
 /** Every how many values a label is written so that none touch; 1, 2, 5, 10 … as a ruler is divided. */
 function labelEvery(count: number, frame: RulerFrame): number {
-  const pitch = count > 1 ? (frame.widthPx - 2 * frame.insetPx) / (count - 1) : frame.widthPx;
+  const pitch = pitchOf(count, frame);
   for (const every of [1, 2, 4, 5, 10, 20, 25, 50, 100, 200, 500]) {
     if (every * pitch >= frame.labelPitchPx) return every;
   }
@@ -50,6 +64,7 @@ export function rulerMarks(counts: readonly AxisCount[], frame: RulerFrame): Rul
       xPx: frame.insetPx + along * (frame.widthPx - 2 * frame.insetPx),
       heightPx: share === 0 ? 0 : Math.max(LEAST_BAR_PX, (share / largest) * frame.barPx),
       isLabelled: k % every === 0,
+      hasTick: k % every === 0 || pitchOf(ordered.length, frame) >= LEAST_TICK_PITCH_PX,
     };
   });
 }

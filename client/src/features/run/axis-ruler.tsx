@@ -2,9 +2,9 @@ import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { AxisCount, EdgeShare } from '#shared/sweep/result.ts';
 import { formatNumber, formatQuantity, formatWhole } from '#client/src/lib/format-quantity.ts';
 import { unitLabel } from '#client/src/lib/units.ts';
-import { rulerMarks } from './axis-ruler-model.ts';
+import { rulerBarPx, rulerMarks } from './axis-ruler-model.ts';
 
-const FRAME = { widthPx: 236, insetPx: 12, barPx: 24, labelPitchPx: 30 } as const;
+const FRAME = { widthPx: 236, insetPx: 12, barPx: 24, labelPitchPx: 40 } as const;
 const BASE_Y = 30;
 const HEIGHT = 52;
 /** Below this share of the front an end of the range is no matter of concern. */
@@ -30,6 +30,7 @@ function edgeWords(edges: readonly EdgeShare[], ends: readonly [string, string])
 /** One axis drawn as a scale ruler: what share of each value meets every check, and where the chosen section lies. */
 export function AxisRuler({ name, symbol, kind, units, counts, selected, edges }: AxisRulerProps) {
   const marks = rulerMarks(counts, FRAME);
+  const barPx = rulerBarPx(counts.length, FRAME);
   const print = (value: number | undefined) => formatQuantity(value, kind, units, { hideUnit: true });
   const words = edgeWords(edges, [print(marks[0]?.value), print(marks.at(-1)?.value)]);
   const chosen = marks.find((mark) => selected !== null && Math.abs(mark.value - selected) < 1e-6 * selected);
@@ -61,22 +62,24 @@ export function AxisRuler({ name, symbol, kind, units, counts, selected, edges }
             <title>
               {`${print(mark.value)}: ${formatWhole(mark.feasible)} of ${formatWhole(mark.evaluated)} meet every check`}
             </title>
-            <rect x={mark.xPx - 6} y={0} width={12} height={BASE_Y} fill="transparent" />
+            <rect x={mark.xPx - barPx} y={0} width={2 * barPx} height={BASE_Y} fill="transparent" />
             <rect
-              x={mark.xPx - 2.75}
+              x={mark.xPx - barPx / 2}
               y={BASE_Y - mark.heightPx}
-              width={5.5}
+              width={barPx}
               height={mark.heightPx}
               className="fill-meets"
               opacity={0.6}
             />
-            <line
-              x1={mark.xPx}
-              x2={mark.xPx}
-              y1={BASE_Y}
-              y2={BASE_Y + (mark.isLabelled ? 7 : 4)}
-              className="stroke-ink"
-            />
+            {mark.hasTick && (
+              <line
+                x1={mark.xPx}
+                x2={mark.xPx}
+                y1={BASE_Y}
+                y2={BASE_Y + (mark.isLabelled ? 7 : 4)}
+                className="stroke-ink"
+              />
+            )}
             {mark.isLabelled && (
               <text
                 x={mark.xPx}

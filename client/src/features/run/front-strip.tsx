@@ -1,10 +1,11 @@
 import { useVirtualizer } from '@tanstack/react-virtual';
 import { useEffect, useMemo, useRef } from 'react';
-import type { BarStandard } from '#shared/engine/section.ts';
+import type { BarStandard, SectionInput } from '#shared/engine/section.ts';
 import type { View } from '#shared/sweep/problem.ts';
 import type { FrontPoint } from '#shared/sweep/result.ts';
 import { SectionDrawing } from '#client/src/drawing/section-drawing.tsx';
-import { barsText, sizeText } from '#client/src/lib/section-text.ts';
+import { formatQuantity } from '#client/src/lib/format-quantity.ts';
+import { barsText } from '#client/src/lib/section-text.ts';
 import { measureText, type MeasureReader } from './measure-text.ts';
 import type { SectionSource } from './section-source.ts';
 import { stripScale } from './strip-scale.ts';
@@ -43,6 +44,10 @@ export function FrontStrip(props: FrontStripProps) {
   });
   useEffect(() => strip.measure(), [strip, scale.cellPx]);
 
+  const bareSize = ({ widthMm, depthMm }: SectionInput) =>
+    [widthMm, depthMm]
+      .map((mm) => formatQuantity(mm, 'length', reader.units, { hideUnit: true }))
+      .join(' × ');
   const place = front.findIndex((point) => point.ties.includes(selectedIndex ?? -1));
   useEffect(() => {
     if (place >= 0) strip.scrollToIndex(place, { align: 'auto' });
@@ -82,9 +87,9 @@ export function FrontStrip(props: FrontStripProps) {
                 pxPerMm={scale.pxPerMm}
                 heightPx={DRAWING_PX}
               />
-              <span className="num mt-1.5 text-xs leading-4">{sizeText(section, reader.units)}</span>
-              <span className="num text-xs leading-4 text-steel">{steel}</span>
-              <span className="num text-xs leading-4 text-muted">
+              <span className="num mt-1.5 text-xs leading-4 whitespace-nowrap">{bareSize(section)}</span>
+              <span className="num text-xs leading-4 whitespace-nowrap text-steel">{steel}</span>
+              <span className="num text-xs leading-4 whitespace-nowrap text-muted">
                 {measureText(view.x, point.x, reader, true)} · {measureText(view.y, point.y, reader, true)}
               </span>
             </button>

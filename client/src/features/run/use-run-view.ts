@@ -1,4 +1,4 @@
-import { useMemo } from 'react';
+import { useDeferredValue, useMemo } from 'react';
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Run } from '#shared/contract/records.ts';
 import type { ViewResult } from '#shared/sweep/result.ts';
@@ -25,8 +25,10 @@ export function useRunView(run: Run, units: UnitSystem) {
   const { definition, basis } = run;
   const source = useMemo(() => createSectionSource({ definition, basis }), [definition, basis]);
   const query = useView(run, view);
-  const progress = query.data ?? null;
-  const isLive = isUnderWay(progress?.state ?? run.state);
+  const latest = query.data ?? null;
+  // The drawing of a part waits for the hand: a click on Cancel is never queued behind a chart.
+  const progress = useDeferredValue(latest);
+  const isLive = isUnderWay(latest?.state ?? run.state);
   useRunEvents(run.id, isLive);
   const cancel = useCancelRun(run.id);
   const reader = useMemo(() => ({ units, currency: basis.rates?.currency ?? null }), [units, basis.rates]);
@@ -39,6 +41,7 @@ export function useRunView(run: Run, units: UnitSystem) {
     view,
     source,
     reader,
+    latest,
     progress,
     result,
     selected,
