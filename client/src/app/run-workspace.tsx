@@ -168,7 +168,7 @@ export function RunWorkspace({ run, project }: RunWorkspaceProps) {
                 <>
                   <section aria-label="Along the front" className="min-w-0 border-t border-rule pt-2">
                     <h2 className="pb-1 text-xs font-semibold text-muted">
-                      Along the front, to one scale, {unitLabel('length', units)}
+                      Along the front, to one scale (b × h, {unitLabel('length', units)})
                     </h2>
                     <FrontStrip
                       front={result.front}

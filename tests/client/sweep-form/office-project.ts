@@ -29,7 +29,6 @@ export const PROJECT: Project = {
     coverMm: 1.5 * MM_PER_IN,
   },
 };
-export const READER = person;
 
 export const BEAM: Beam = {
   id: '22222222-2222-4222-8222-222222222222',

@@ -10,7 +10,7 @@ export interface RunAddress {
   readonly bandShare: number;
 }
 
-export const FIRST_BAND_SHARE = 0.05;
+const FIRST_BAND_SHARE = 0.05;
 export const WIDEST_BAND_SHARE = 0.1;
 
 const isMeasure = (text: string | null): text is MeasureId => MEASURE_IDS.some((id) => id === text);
