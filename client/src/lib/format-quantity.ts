@@ -80,19 +80,6 @@ export function formatQuantity(
   return label === '%' || label.startsWith('/') ? `${text}${label}` : `${text} ${label}`;
 }
 
-/** A difference with its sign in front, `+1.20` or `−1.20`; `0` where there is none. */
-export function formatDifference(
-  stored: number | null | undefined,
-  kind: DisplayKind,
-  units: UnitSystem,
-  options: FormatOptions = {},
-): string {
-  if (stored === null || stored === undefined || !Number.isFinite(stored)) return '';
-  if (Math.abs(stored) < NOISE) return '0';
-  const text = formatQuantity(stored, kind, units, options);
-  return stored > 0 ? `+${text}` : text;
-}
-
 /** Decimals a value is printed with; negative where even its tens or hundreds are rounded. */
 function decimalsShown(stored: number, kind: DisplayKind, units: UnitSystem): number {
   const text = formatQuantity(stored, kind, units, { hideUnit: true });
