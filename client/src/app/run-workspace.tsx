@@ -198,7 +198,7 @@ export function RunWorkspace({ run, project }: RunWorkspaceProps) {
         }
         section={
           selected === null ? (
-            isOver ? (
+            isOver || state.error !== null ? (
               <p className="text-muted">Choose a section to look at it.</p>
             ) : (
               <Skeleton lines={12} />

@@ -16,7 +16,8 @@ export function useSearchValue<T>(
           else next.set(key, text);
           return next;
         },
-        { replace: true, preventScrollReset: true },
+        // At once: a ticked box must not jump back until the address has followed, nor a second tick undo the first.
+        { replace: true, preventScrollReset: true, flushSync: true },
       ),
     [key, setParams],
   );

@@ -104,7 +104,10 @@ function columnsFor(reader: MeasureReader, rows: readonly SectionRow[]): Column[
       isText: true,
       cell: (row) => steelCell(row, 'compression', reader),
     },
-    ...MEASURES.map((measure) => measureColumn(measure, reader, rows)),
+    // Without rates, or for a reader who may not see them, a column of blanks would say nothing.
+    ...MEASURES.filter((measure) => measure !== 'costPerM' || reader.currency !== null).map((measure) =>
+      measureColumn(measure, reader, rows),
+    ),
     { key: 'ties', head: 'Ties', unit: '', cell: (row) => (row.tieCount > 1 ? String(row.tieCount) : '') },
   ];
 }

@@ -3,6 +3,7 @@ import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Run } from '#shared/contract/records.ts';
 import type { ViewResult } from '#shared/sweep/result.ts';
 import { pricesOfChecks } from './price-of-checks.ts';
+import { readableView } from './readable-view.ts';
 import { useCancelRun, useRunEvents, useView } from './run-api.ts';
 import { createSectionSource, type SectionSource } from './section-source.ts';
 import { useRunAddress } from './use-run-address.ts';
@@ -21,7 +22,8 @@ function chosenIndex(source: SectionSource, asked: number | null, result: ViewRe
 /** Everything a run's page shows, from the address, the service and the engine. */
 export function useRunView(run: Run, units: UnitSystem) {
   const address = useRunAddress(run.definition.view);
-  const view = useMemo(() => ({ x: address.view.x, y: address.view.y }), [address.view.x, address.view.y]);
+  const { x, y } = address.view;
+  const view = useMemo(() => readableView(run, { x, y }, units), [run, x, y, units]);
   const { definition, basis } = run;
   const source = useMemo(() => createSectionSource({ definition, basis }), [definition, basis]);
   const query = useView(run, view);
