@@ -13,6 +13,8 @@ const ALWAYS: View = { x: 'steelKgPerM', y: 'depthMm' };
 export function readableView(run: Run, asked: View, units: UnitSystem): View {
   const { space, demand } = run.definition;
   const isReadable = ({ x, y }: View) =>
-    [x, y].every((measure) => unavailableReason(measure, { space, demand, basis: run.basis, units }) === null);
+    [x, y].every(
+      (measure) => unavailableReason(measure, { space, demand, basis: run.basis, units }) === null,
+    );
   return [asked, ...run.views.map(({ view }) => view)].find(isReadable) ?? ALWAYS;
 }
