@@ -1,8 +1,8 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { CheckResult } from '#shared/engine/evaluation.ts';
-import { checkLabel } from '#client/src/lib/check-labels.ts';
-import { formatQuantity } from '#client/src/lib/format-quantity.ts';
-import { quantitiesInText } from '#client/src/lib/quantities-in-text.ts';
+import { checkLabel } from '#shared/print/check-labels.ts';
+import { formatQuantity } from '#shared/print/format-quantity.ts';
+import { quantitiesInText } from '#shared/print/quantities-in-text.ts';
 import { RatioBar } from '#client/src/ui/ratio-bar.tsx';
 
 interface CheckListProps {
@@ -12,8 +12,12 @@ interface CheckListProps {
   readonly digits: number;
 }
 
+/** A width of 11.25 in that is needed must not read 11.2. */
+const LENGTH_FIGURES = 4;
+
 /** What is asked and what is there, in that order; empty where the check has no numbers. */
-function numbersOf({ demand, capacity, kind }: CheckResult, units: UnitSystem, digits: number): string {
+function numbersOf({ demand, capacity, kind }: CheckResult, units: UnitSystem, figures: number): string {
+  const digits = kind === 'length' ? Math.max(figures, LENGTH_FIGURES) : figures;
   const asked = formatQuantity(demand, kind, units, { digits, hideUnit: capacity !== null });
   const there = formatQuantity(capacity, kind, units, { digits });
   if (asked === '') return there;
