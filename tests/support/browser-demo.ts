@@ -1,0 +1,20 @@
+import { stableId } from '#server/demo/stable-id.ts';
+
+/** Addresses of the demo office, whose ids are the same in every copy of it. */
+const projectPath = (key: string): string => `/projects/${stableId(`project/${key}`)}`;
+
+/** US units, rates, nine beams and the whole shortlist. */
+export const LIBRARY = projectPath('library');
+/** SI units, bars by ISO 6935, f′c in MPa. */
+export const CLINIC = projectPath('clinic');
+/** A project that only an admin is a member of. */
+export const DEPOT = projectPath('depot');
+
+export const beamId = (project: 'library' | 'clinic', mark: string): string =>
+  stableId(`beam/${project}/${mark}`);
+export const runPath = (sweep: string, project = LIBRARY): string =>
+  `${project}/runs/${stableId(`run/${sweep}`)}`;
+export const sweepPath = (sweep: string, project = LIBRARY): string =>
+  `${project}/sweeps/${stableId(`sweep/${sweep}`)}`;
+export const candidatePath = (label: string): string =>
+  `${LIBRARY}/candidates/${stableId(`candidate/library/${label}`)}`;
