@@ -32,6 +32,19 @@ const shared = [
     '^shared/(engine|sweep|contract)/',
     '^node_modules/(zod|zod-openapi)/',
   ]),
+  // What a reader sees, the same on a page and on paper: words and numbers, then the drawing, then the whole sheet.
+  only('print-imports-only-engine-and-contract', '^shared/print/', [
+    '^shared/(engine|sweep|contract|print)/',
+  ]),
+  only('drawing-imports-only-what-it-draws', '^shared/drawing/', [
+    '^shared/(engine|sweep|contract|print|drawing)/',
+  ]),
+  only('sheet-imports-only-shared', '^shared/sheet/', ['^shared/']),
+  never(
+    'contract-imports-nothing-for-reading',
+    '^shared/(engine|sweep|contract)/',
+    '^shared/(print|drawing|sheet)/',
+  ),
 ];
 
 const server = [

@@ -11,7 +11,7 @@ export default defineConfig({
       {
         test: {
           name: 'unit',
-          include: ['tests/{engine,sweep,contract,published}/**/*.test.ts'],
+          include: ['tests/{engine,sweep,contract,published,print,drawing,sheet}/**/*.test.ts'],
           // thousands of random sections; the limit is for a hang, not for speed
           testTimeout: 120_000,
           sequence: { groupOrder: 0 },

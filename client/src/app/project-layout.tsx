@@ -1,8 +1,8 @@
 import { useState } from 'react';
 import { Outlet, useLocation } from 'react-router-dom';
 import { RenameProjectDialog } from '#client/src/features/projects/rename-project-dialog.tsx';
-import { ruleSetLabel } from '#client/src/lib/basis-labels.ts';
-import { formatQuantity } from '#client/src/lib/format-quantity.ts';
+import { ruleSetLabel } from '#shared/print/basis-labels.ts';
+import { formatQuantity } from '#shared/print/format-quantity.ts';
 import { paths, PROJECT_TABS, type ProjectTab } from '#client/src/lib/paths.ts';
 import { useProject } from '#client/src/lib/project-context.ts';
 import { useMay } from '#client/src/lib/reader-context.ts';

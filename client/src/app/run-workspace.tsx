@@ -19,7 +19,7 @@ import { useRunView } from '#client/src/features/run/use-run-view.ts';
 import { candidatesQuery } from '#client/src/features/shortlist/api.ts';
 import { useStartRun } from '#client/src/features/sweeps/api.ts';
 import { unavailableReason } from '#client/src/lib/measure-availability.ts';
-import { unitLabel } from '#client/src/lib/units.ts';
+import { unitLabel } from '#shared/print/units.ts';
 import { paths } from '#client/src/lib/paths.ts';
 import { useMay } from '#client/src/lib/reader-context.ts';
 import { Button, ButtonLink } from '#client/src/ui/button.tsx';

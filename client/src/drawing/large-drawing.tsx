@@ -1,11 +1,11 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { SectionInput } from '#shared/engine/section.ts';
-import { formatQuantity } from '#client/src/lib/format-quantity.ts';
-import { calloutsOf } from './callouts.ts';
+import { formatQuantity } from '#shared/print/format-quantity.ts';
+import { calloutsOf } from '#shared/drawing/callouts.ts';
 import { EdgeDimension, GapChain, HeightDimension, WidthDimension } from './dimension-line.tsx';
 import { SectionBody, type Placement } from './section-body.tsx';
-import type { SectionGeometry } from './section-geometry.ts';
-import { spreadLabels } from './spread-labels.ts';
+import type { SectionGeometry } from '#shared/drawing/section-geometry.ts';
+import { spreadLabels } from '#shared/drawing/spread-labels.ts';
 
 /** The sheet the drawing is laid out on, in its own pixels; the page scales the whole of it. */
 const SHEET = { width: 340, height: 384, left: 66, right: 104, top: 26, bottom: 66 } as const;

@@ -1,4 +1,4 @@
-import type { SectionGeometry, StirrupOutline } from './section-geometry.ts';
+import type { SectionGeometry, StirrupOutline } from '#shared/drawing/section-geometry.ts';
 
 /** Where the section stands in the picture: its top left corner and pixels per mm. */
 export interface Placement {

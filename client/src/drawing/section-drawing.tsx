@@ -2,11 +2,11 @@ import { useId, useMemo } from 'react';
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Evaluation } from '#shared/engine/evaluation.ts';
 import type { BarStandard, SectionInput } from '#shared/engine/section.ts';
-import { formatQuantity } from '#client/src/lib/format-quantity.ts';
-import { sizeText, steelText, stirrupText } from '#client/src/lib/section-text.ts';
+import { formatQuantity } from '#shared/print/format-quantity.ts';
+import { sizeText, steelText, stirrupText } from '#shared/print/section-text.ts';
 import { LARGE_VIEW_BOX, LargeDrawing } from './large-drawing.tsx';
 import { SectionBody } from './section-body.tsx';
-import { sectionGeometry } from './section-geometry.ts';
+import { sectionGeometry } from '#shared/drawing/section-geometry.ts';
 
 interface DrawnSection {
   readonly section: SectionInput;

@@ -3,7 +3,7 @@ import type { MeasureId } from '#shared/engine/measures.ts';
 import type { ConcreteRate, DesignBasis, Demand, Rates } from '#shared/engine/section.ts';
 import { expandAxis } from '#shared/sweep/axis.ts';
 import type { SpaceDefinition } from '#shared/sweep/problem.ts';
-import { formatQuantity } from './format-quantity.ts';
+import { formatQuantity } from '#shared/print/format-quantity.ts';
 
 /** Two strengths within this are one mix, MPa; as the engine matches them. */
 const SAME_MIX_MPA = 0.01;

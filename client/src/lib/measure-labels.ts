@@ -1,6 +1,6 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import { MEASURE_DIRECTION, type Direction, type MeasureId } from '#shared/engine/measures.ts';
-import { unitLabel, type DisplayKind } from './units.ts';
+import { unitLabel, type DisplayKind } from '#shared/print/units.ts';
 
 interface MeasureName {
   readonly name: string;

@@ -1,5 +1,5 @@
 import type { BarGroup } from '#shared/engine/section.ts';
-import { barsText } from './section-text.ts';
+import { barsText } from '#shared/print/section-text.ts';
 
 /** Groups read from a line of text, or what is wrong with it. */
 export type GroupsReading =

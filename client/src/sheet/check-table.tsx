@@ -1,9 +1,9 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { CheckResult } from '#shared/engine/evaluation.ts';
-import { checkLabel } from '#client/src/lib/check-labels.ts';
-import { formatQuantity } from '#client/src/lib/format-quantity.ts';
-import { quantitiesInText } from '#client/src/lib/quantities-in-text.ts';
-import { unitLabel } from '#client/src/lib/units.ts';
+import { checkLabel } from '#shared/print/check-labels.ts';
+import { formatQuantity } from '#shared/print/format-quantity.ts';
+import { quantitiesInText } from '#shared/print/quantities-in-text.ts';
+import { unitLabel } from '#shared/print/units.ts';
 import { RatioBar } from '#client/src/ui/ratio-bar.tsx';
 import { TableFrame } from '#client/src/ui/table-frame.tsx';
 

@@ -1,7 +1,7 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Takeoff } from '#shared/contract/records.ts';
-import { formatMoney, formatQuantity } from '#client/src/lib/format-quantity.ts';
-import { unitLabel } from '#client/src/lib/units.ts';
+import { formatMoney, formatQuantity } from '#shared/print/format-quantity.ts';
+import { unitLabel } from '#shared/print/units.ts';
 import { TableFrame } from '#client/src/ui/table-frame.tsx';
 import { POSITION_NAME } from './quantities-table.tsx';
 

@@ -1,7 +1,7 @@
 import { Fragment } from 'react';
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { WorkingStep } from '#shared/engine/evaluation.ts';
-import { formatQuantity } from '#client/src/lib/format-quantity.ts';
+import { formatQuantity } from '#shared/print/format-quantity.ts';
 import { TableFrame } from '#client/src/ui/table-frame.tsx';
 
 const TOPIC_NAME: Readonly<Record<WorkingStep['topic'], string>> = {

@@ -1,9 +1,9 @@
 import { useState, type ReactNode, type Ref } from 'react';
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
-import { fieldText } from '#client/src/lib/format-quantity.ts';
+import { fieldText } from '#shared/print/format-quantity.ts';
 import { parseNumber } from '#client/src/lib/parse-number.ts';
-import { quantitiesInText } from '#client/src/lib/quantities-in-text.ts';
-import { toStored, unitLabel, type DisplayKind } from '#client/src/lib/units.ts';
+import { quantitiesInText } from '#shared/print/quantities-in-text.ts';
+import { toStored, unitLabel, type DisplayKind } from '#shared/print/units.ts';
 import { FieldFrame, type FieldFrameProps } from './field-frame.tsx';
 
 export interface NumberFieldProps extends FieldFrameProps {

@@ -1,4 +1,4 @@
-import { formatNumber } from '#client/src/lib/format-quantity.ts';
+import { formatNumber } from '#shared/print/format-quantity.ts';
 import { judge, type Verdict } from './verdict.ts';
 import { VerdictMark } from './verdict-mark.tsx';
 

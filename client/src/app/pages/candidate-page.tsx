@@ -5,7 +5,7 @@ import { CandidateFlag } from '#client/src/features/shortlist/candidate-flag.tsx
 import { CandidateSheet } from '#client/src/features/shortlist/candidate-sheet.tsx';
 import { CommentsPanel } from '#client/src/features/shortlist/comments-panel.tsx';
 import { StatePanel } from '#client/src/features/shortlist/state-panel.tsx';
-import { formatDate } from '#client/src/lib/format-quantity.ts';
+import { formatDate } from '#shared/print/format-quantity.ts';
 import { paths } from '#client/src/lib/paths.ts';
 import { useProject } from '#client/src/lib/project-context.ts';
 import { useMay } from '#client/src/lib/reader-context.ts';

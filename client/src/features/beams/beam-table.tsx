@@ -1,8 +1,8 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Beam } from '#shared/contract/records.ts';
-import { formatQuantity } from '#client/src/lib/format-quantity.ts';
+import { formatQuantity } from '#shared/print/format-quantity.ts';
 import { paths } from '#client/src/lib/paths.ts';
-import { unitLabel, type DisplayKind } from '#client/src/lib/units.ts';
+import { unitLabel, type DisplayKind } from '#shared/print/units.ts';
 import { Button, ButtonLink } from '#client/src/ui/button.tsx';
 import { TableFrame } from '#client/src/ui/table-frame.tsx';
 

@@ -17,7 +17,7 @@ import {
   ruleSetLabel,
   unitSystemLabel,
   yieldCurvatureLabel,
-} from '#client/src/lib/basis-labels.ts';
+} from '#shared/print/basis-labels.ts';
 import { placeIssues } from '#client/src/lib/form-issues.ts';
 import { Button } from '#client/src/ui/button.tsx';
 import { FieldGroup } from '#client/src/ui/field-group.tsx';

@@ -6,7 +6,7 @@ import type {
   SectionInput,
   YieldCurvatureAt,
 } from '#shared/engine/section.ts';
-import { barsText } from '#client/src/lib/section-text.ts';
+import { barsText } from '#shared/print/section-text.ts';
 
 export interface LayerValues {
   readonly depthMm: number | null;

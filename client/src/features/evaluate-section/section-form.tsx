@@ -9,7 +9,7 @@ import { ListField } from '#client/src/ui/list-field.tsx';
 import { NumberField } from '#client/src/ui/number-field.tsx';
 import { SegmentedControl } from '#client/src/ui/segmented-control.tsx';
 import { SelectField } from '#client/src/ui/select-field.tsx';
-import type { DisplayKind } from '#client/src/lib/units.ts';
+import type { DisplayKind } from '#shared/print/units.ts';
 import { ConventionFields } from './convention-fields.tsx';
 import { LayersField } from './layers-field.tsx';
 import { readSectionForm } from './read-section-form.ts';

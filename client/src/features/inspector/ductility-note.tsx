@@ -1,6 +1,6 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Evaluation } from '#shared/engine/evaluation.ts';
-import { formatQuantity } from '#client/src/lib/format-quantity.ts';
+import { formatQuantity } from '#shared/print/format-quantity.ts';
 import { KeyValue } from '#client/src/ui/key-value.tsx';
 
 const BEND = {

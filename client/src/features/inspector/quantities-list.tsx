@@ -1,6 +1,6 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Quantities, SteelLine } from '#shared/engine/evaluation.ts';
-import { formatMoney, formatQuantity } from '#client/src/lib/format-quantity.ts';
+import { formatMoney, formatQuantity } from '#shared/print/format-quantity.ts';
 import { KeyValue } from '#client/src/ui/key-value.tsx';
 
 const POSITION: Readonly<Record<SteelLine['position'], string>> = {

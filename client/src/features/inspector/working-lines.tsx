@@ -1,6 +1,6 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { WorkingStep } from '#shared/engine/evaluation.ts';
-import { formatQuantity } from '#client/src/lib/format-quantity.ts';
+import { formatQuantity } from '#shared/print/format-quantity.ts';
 
 const TOPICS: readonly { readonly topic: WorkingStep['topic']; readonly title: string }[] = [
   { topic: 'materials', title: 'Materials' },

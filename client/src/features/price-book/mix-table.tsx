@@ -1,6 +1,6 @@
 import { useFieldArray, type Control } from 'react-hook-form';
 import type { PriceBook, UnitSystem } from '#shared/contract/design-basis.ts';
-import { unitLabel } from '#client/src/lib/units.ts';
+import { unitLabel } from '#shared/print/units.ts';
 import { Button } from '#client/src/ui/button.tsx';
 import { FormNumberField } from '#client/src/ui/form-number-field.tsx';
 

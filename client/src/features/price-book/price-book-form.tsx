@@ -3,7 +3,7 @@ import { useState } from 'react';
 import { useForm, useWatch } from 'react-hook-form';
 import { priceBookSchema, type PriceBook, type UnitSystem } from '#shared/contract/design-basis.ts';
 import { placeIssues } from '#client/src/lib/form-issues.ts';
-import { unitLabel } from '#client/src/lib/units.ts';
+import { unitLabel } from '#shared/print/units.ts';
 import { Button } from '#client/src/ui/button.tsx';
 import { FieldGroup } from '#client/src/ui/field-group.tsx';
 import { FormActions } from '#client/src/ui/form-actions.tsx';

@@ -1,6 +1,6 @@
 import { Link } from 'react-router-dom';
 import type { Project } from '#shared/contract/records.ts';
-import { ruleSetLabel } from '#client/src/lib/basis-labels.ts';
+import { ruleSetLabel } from '#shared/print/basis-labels.ts';
 import { paths } from '#client/src/lib/paths.ts';
 import { TableFrame } from '#client/src/ui/table-frame.tsx';
 

@@ -1,7 +1,7 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { AxisCount, EdgeShare } from '#shared/sweep/result.ts';
-import { formatNumber, formatQuantity, formatWhole } from '#client/src/lib/format-quantity.ts';
-import { unitLabel } from '#client/src/lib/units.ts';
+import { formatNumber, formatQuantity, formatWhole } from '#shared/print/format-quantity.ts';
+import { unitLabel } from '#shared/print/units.ts';
 import { rulerBarPx, rulerMarks } from './axis-ruler-model.ts';
 
 const FRAME = { widthPx: 236, insetPx: 12, barPx: 24, labelPitchPx: 40 } as const;

@@ -1,8 +1,8 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
 import type { CheckId } from '#shared/engine/evaluation.ts';
-import { checkLabel } from '#client/src/lib/check-labels.ts';
-import { formatQuantity } from '#client/src/lib/format-quantity.ts';
+import { checkLabel } from '#shared/print/check-labels.ts';
+import { formatQuantity } from '#shared/print/format-quantity.ts';
 
 /** What a check asks for in this run, short enough for a sentence: `μφ ≥ 6`, `h ≤ 28 in`, `the bar fit`. */
 export function checkWords(

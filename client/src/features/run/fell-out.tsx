@@ -1,7 +1,7 @@
 import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
 import type { ViewResult } from '#shared/sweep/result.ts';
-import { checkLabel } from '#client/src/lib/check-labels.ts';
-import { formatDifferenceTo, formatNumber, formatWhole } from '#client/src/lib/format-quantity.ts';
+import { checkLabel } from '#shared/print/check-labels.ts';
+import { formatDifferenceTo, formatNumber, formatWhole } from '#shared/print/format-quantity.ts';
 import { measureLabel } from '#client/src/lib/measure-labels.ts';
 import { checkWords } from './check-words.ts';
 import { measureText, type MeasureReader } from './measure-text.ts';

@@ -1,8 +1,8 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { MeasureId } from '#shared/engine/measures.ts';
-import { formatMoney, formatNumber, formatQuantity } from '#client/src/lib/format-quantity.ts';
+import { formatMoney, formatNumber, formatQuantity } from '#shared/print/format-quantity.ts';
 import { measureLabel } from '#client/src/lib/measure-labels.ts';
-import { displayUnit } from '#client/src/lib/units.ts';
+import { displayUnit } from '#shared/print/units.ts';
 import type { ChartAxis } from '#client/src/charts/front-chart-input.ts';
 
 export interface MeasureReader {

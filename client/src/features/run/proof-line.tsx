@@ -1,5 +1,5 @@
 import type { Run, ViewProgress } from '#shared/contract/records.ts';
-import { formatDuration, formatWhole } from '#client/src/lib/format-quantity.ts';
+import { formatDuration, formatWhole } from '#shared/print/format-quantity.ts';
 
 /** What the result rests on: how many sections were judged, how many passed, and the mark that repeats with it. */
 export function ProofLine({ run, progress }: { readonly run: Run; readonly progress: ViewProgress | null }) {

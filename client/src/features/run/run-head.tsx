@@ -1,6 +1,6 @@
 import type { ReactNode } from 'react';
 import type { Run, ViewProgress } from '#shared/contract/records.ts';
-import { formatDuration, formatNumber, formatWhole } from '#client/src/lib/format-quantity.ts';
+import { formatDuration, formatNumber, formatWhole } from '#shared/print/format-quantity.ts';
 import { runStateLabel } from '#client/src/lib/state-labels.ts';
 import { Button } from '#client/src/ui/button.tsx';
 import { StateTag } from '#client/src/ui/state-tag.tsx';

@@ -1,9 +1,9 @@
 import { useMemo, useState } from 'react';
 import type { Point, FrontPoint } from '#shared/sweep/result.ts';
-import { formatQuantity } from '#client/src/lib/format-quantity.ts';
+import { formatQuantity } from '#shared/print/format-quantity.ts';
 import { measureLabel } from '#client/src/lib/measure-labels.ts';
-import { barsText, sizeText } from '#client/src/lib/section-text.ts';
-import { toDisplay, unitLabel } from '#client/src/lib/units.ts';
+import { barsText, sizeText } from '#shared/print/section-text.ts';
+import { toDisplay, unitLabel } from '#shared/print/units.ts';
 import { Button } from '#client/src/ui/button.tsx';
 import { SegmentedControl } from '#client/src/ui/segmented-control.tsx';
 import { TableFrame } from '#client/src/ui/table-frame.tsx';

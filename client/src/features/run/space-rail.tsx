@@ -4,8 +4,8 @@ import type { SectionInput } from '#shared/engine/section.ts';
 import { expandAxis } from '#shared/sweep/axis.ts';
 import type { AxisDefinition, SteelSetsDefinition } from '#shared/sweep/problem.ts';
 import type { EdgeAxis, ViewResult } from '#shared/sweep/result.ts';
-import { formatQuantity } from '#client/src/lib/format-quantity.ts';
-import { stirrupText } from '#client/src/lib/section-text.ts';
+import { formatQuantity } from '#shared/print/format-quantity.ts';
+import { stirrupText } from '#shared/print/section-text.ts';
 import { AxisRuler } from './axis-ruler.tsx';
 import { countsText } from '#client/src/lib/counts-text.ts';
 

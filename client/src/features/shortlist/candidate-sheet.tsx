@@ -1,6 +1,6 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import { SectionDrawing } from '#client/src/drawing/section-drawing.tsx';
-import { sizeText, steelText } from '#client/src/lib/section-text.ts';
+import { sizeText, steelText } from '#shared/print/section-text.ts';
 import { CheckTable } from '#client/src/sheet/check-table.tsx';
 import { LimitsNote } from '#client/src/sheet/limits-note.tsx';
 import { QuantitiesTable } from '#client/src/sheet/quantities-table.tsx';

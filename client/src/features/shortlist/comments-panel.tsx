@@ -2,7 +2,7 @@ import { zodResolver } from '@hookform/resolvers/zod';
 import { useState } from 'react';
 import { useForm } from 'react-hook-form';
 import { commentInputSchema, type Candidate } from '#shared/contract/records.ts';
-import { formatDate } from '#client/src/lib/format-quantity.ts';
+import { formatDate } from '#shared/print/format-quantity.ts';
 import { placeIssues } from '#client/src/lib/form-issues.ts';
 import { useMay } from '#client/src/lib/reader-context.ts';
 import { roleLabel } from '#client/src/lib/state-labels.ts';

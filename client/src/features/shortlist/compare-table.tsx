@@ -1,10 +1,10 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Rates } from '#shared/engine/section.ts';
 import { SectionDrawing } from '#client/src/drawing/section-drawing.tsx';
-import { formatDifferenceTo, formatQuantity } from '#client/src/lib/format-quantity.ts';
-import { barsText, sizeText, steelText, stirrupText } from '#client/src/lib/section-text.ts';
+import { formatDifferenceTo, formatQuantity } from '#shared/print/format-quantity.ts';
+import { barsText, sizeText, steelText, stirrupText } from '#shared/print/section-text.ts';
 import { candidateStateLabel } from '#client/src/lib/state-labels.ts';
-import { unitLabel } from '#client/src/lib/units.ts';
+import { unitLabel } from '#shared/print/units.ts';
 import { missingFactors, missingRates } from '#client/src/sheet/missing-rates.ts';
 import { StateTag } from '#client/src/ui/state-tag.tsx';
 import { TableFrame } from '#client/src/ui/table-frame.tsx';

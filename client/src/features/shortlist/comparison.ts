@@ -1,6 +1,6 @@
 import type { Candidate, SharedShortlist } from '#shared/contract/records.ts';
 import { MEASURE_DIRECTION, type Direction, type MeasureId } from '#shared/engine/measures.ts';
-import type { DisplayKind } from '#client/src/lib/units.ts';
+import type { DisplayKind } from '#shared/print/units.ts';
 
 /** A candidate as signed-in members and as readers of a link see it. */
 export type ShownCandidate = Candidate | SharedShortlist['candidates'][number];

@@ -5,10 +5,10 @@ import {
   bendAllowanceLabel,
   displacedConcreteLabel,
   yieldCurvatureLabel,
-} from '#client/src/lib/basis-labels.ts';
-import { formatQuantity } from '#client/src/lib/format-quantity.ts';
-import { sizeText, steelText, stirrupText } from '#client/src/lib/section-text.ts';
-import type { DisplayKind } from '#client/src/lib/units.ts';
+} from '#shared/print/basis-labels.ts';
+import { formatQuantity } from '#shared/print/format-quantity.ts';
+import { sizeText, steelText, stirrupText } from '#shared/print/section-text.ts';
+import type { DisplayKind } from '#shared/print/units.ts';
 import { KeyValue } from '#client/src/ui/key-value.tsx';
 
 /** Everything that went into the numbers, as it was when the candidate was pinned. */

@@ -1,7 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
 import type { ShareLink } from '#shared/contract/records.ts';
 import { messageOf } from '#client/src/lib/api-error.ts';
-import { formatDate } from '#client/src/lib/format-quantity.ts';
+import { formatDate } from '#shared/print/format-quantity.ts';
 import { paths } from '#client/src/lib/paths.ts';
 import { useProject } from '#client/src/lib/project-context.ts';
 import { Button } from '#client/src/ui/button.tsx';

@@ -1,7 +1,7 @@
 import { useState } from 'react';
 import type { Candidate, CandidateState } from '#shared/contract/records.ts';
 import { ApiError, messageOf } from '#client/src/lib/api-error.ts';
-import { formatDate } from '#client/src/lib/format-quantity.ts';
+import { formatDate } from '#shared/print/format-quantity.ts';
 import { candidateStateLabel, roleLabel } from '#client/src/lib/state-labels.ts';
 import { Button } from '#client/src/ui/button.tsx';
 import { Dialog } from '#client/src/ui/dialog.tsx';

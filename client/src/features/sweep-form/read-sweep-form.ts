@@ -3,7 +3,7 @@ import type { Issue } from '#shared/contract/errors.ts';
 import { sweepInputSchema } from '#shared/contract/records.ts';
 import type { z } from 'zod';
 import { errorsByField, type FieldErrors } from '#client/src/lib/field-errors.ts';
-import type { DisplayKind } from '#client/src/lib/units.ts';
+import type { DisplayKind } from '#shared/print/units.ts';
 import { parseGroups } from '#client/src/lib/parse-bar-groups.ts';
 import {
   AXIS_NAMES,

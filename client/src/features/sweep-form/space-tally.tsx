@@ -2,7 +2,7 @@ import { useMemo } from 'react';
 import type { Project, RunSummary } from '#shared/contract/records.ts';
 import { sizeRefusal } from '#shared/sweep/size-limit.ts';
 import { spaceSize } from '#shared/sweep/space.ts';
-import { formatDuration, formatNumber, formatWhole } from '#client/src/lib/format-quantity.ts';
+import { formatDuration, formatNumber, formatWhole } from '#shared/print/format-quantity.ts';
 import type { SweepFormReading } from './read-sweep-form.ts';
 import { estimatedMs, problemOf } from './space-estimate.ts';
 import { useCannotFit } from './use-cannot-fit.ts';

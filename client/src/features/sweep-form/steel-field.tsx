@@ -1,7 +1,7 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { BarStandard } from '#shared/engine/section.ts';
-import { quantitiesInText } from '#client/src/lib/quantities-in-text.ts';
-import { unitLabel } from '#client/src/lib/units.ts';
+import { quantitiesInText } from '#shared/print/quantities-in-text.ts';
+import { unitLabel } from '#shared/print/units.ts';
 import { CheckboxField } from '#client/src/ui/checkbox-field.tsx';
 import { ListField } from '#client/src/ui/list-field.tsx';
 import { NumberField } from '#client/src/ui/number-field.tsx';

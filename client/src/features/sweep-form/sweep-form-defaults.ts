@@ -4,7 +4,7 @@ import type { BarStandard } from '#shared/engine/section.ts';
 import { MPA_PER_PSI, MM_PER_IN } from '#shared/engine/units.ts';
 import type { AxisDefinition, SteelSetsDefinition } from '#shared/sweep/problem.ts';
 import { countsText } from '#client/src/lib/counts-text.ts';
-import type { DisplayKind } from '#client/src/lib/units.ts';
+import type { DisplayKind } from '#shared/print/units.ts';
 import { groupsText } from '#client/src/lib/parse-bar-groups.ts';
 import { AXIS_KIND } from './read-sweep-form.ts';
 import {

@@ -1,7 +1,7 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
-import { fieldText } from '#client/src/lib/format-quantity.ts';
+import { fieldText } from '#shared/print/format-quantity.ts';
 import { parseNumber } from '#client/src/lib/parse-number.ts';
-import { toStored, type DisplayKind } from '#client/src/lib/units.ts';
+import { toStored, type DisplayKind } from '#shared/print/units.ts';
 
 /** Values read from a line of text, or what is wrong with it. */
 export type ListReading =

@@ -1,6 +1,6 @@
 import { Link } from 'react-router-dom';
 import type { RunSummary } from '#shared/contract/records.ts';
-import { formatDate, formatDuration, formatWhole } from '#client/src/lib/format-quantity.ts';
+import { formatDate, formatDuration, formatWhole } from '#shared/print/format-quantity.ts';
 import { paths } from '#client/src/lib/paths.ts';
 import { runStateLabel } from '#client/src/lib/state-labels.ts';
 import { StateTag } from '#client/src/ui/state-tag.tsx';

@@ -3,7 +3,7 @@ import { useState } from 'react';
 import { Link, useNavigate } from 'react-router-dom';
 import type { Sweep } from '#shared/contract/records.ts';
 import { messageOf } from '#client/src/lib/api-error.ts';
-import { formatDate } from '#client/src/lib/format-quantity.ts';
+import { formatDate } from '#shared/print/format-quantity.ts';
 import { paths } from '#client/src/lib/paths.ts';
 import { useProject } from '#client/src/lib/project-context.ts';
 import { useMay } from '#client/src/lib/reader-context.ts';

@@ -1,5 +1,5 @@
-import type { UnitSystem } from '#shared/contract/design-basis.ts';
-import type { BarGroup, SectionInput } from '#shared/engine/section.ts';
+import type { UnitSystem } from '../contract/design-basis.ts';
+import type { BarGroup, SectionInput } from '../engine/section.ts';
 import { formatQuantity } from './format-quantity.ts';
 
 /** Bars as the trade writes them: `3-#8`, `2-25M + 2-20M`; `none` for an empty face. */

@@ -1,9 +1,9 @@
 import { describe, expect, it } from 'vitest';
 import { evaluateSection } from '#shared/engine/evaluate.ts';
 import type { Reinforcement, SectionInput } from '#shared/engine/section.ts';
-import { sectionGeometry } from '#client/src/drawing/section-geometry.ts';
-import { spreadLabels } from '#client/src/drawing/spread-labels.ts';
-import { BASIS, NO_DEMAND, NO_RULES } from '../run/problem.ts';
+import { sectionGeometry } from '#shared/drawing/section-geometry.ts';
+import { spreadLabels } from '#shared/drawing/spread-labels.ts';
+import { BASIS, NO_DEMAND, NO_RULES } from '../client/run/problem.ts';
 
 const section = (reinforcement: Reinforcement, widthMm = 300): SectionInput => ({
   widthMm,

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { beamInputSchema } from '#shared/contract/records.ts';
-import { quantitiesInText } from '#client/src/lib/quantities-in-text.ts';
+import { quantitiesInText } from '#shared/print/quantities-in-text.ts';
 
 describe('quantities inside messages', () => {
   it('are printed in the units of a US project', () => {

@@ -1,4 +1,4 @@
-import type { CheckId } from '#shared/engine/evaluation.ts';
+import type { CheckId } from '../engine/evaluation.ts';
 
 export interface CheckLabel {
   readonly name: string;

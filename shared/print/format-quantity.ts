@@ -1,4 +1,4 @@
-import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import type { UnitSystem } from '../contract/design-basis.ts';
 import { displayUnit, toDisplay, type DisplayKind } from './units.ts';
 
 interface NumberStyle {

@@ -6,8 +6,8 @@ import {
   formatMoney,
   formatNumber,
   formatQuantity,
-} from '#client/src/lib/format-quantity.ts';
-import { toStored } from '#client/src/lib/units.ts';
+} from '#shared/print/format-quantity.ts';
+import { toStored } from '#shared/print/units.ts';
 
 describe('printing a number', () => {
   it.each([

@@ -1,7 +1,7 @@
-import type { UnitSystem } from '#shared/contract/design-basis.ts';
-import type { SectionInput } from '#shared/engine/section.ts';
-import { formatQuantity } from '#client/src/lib/format-quantity.ts';
-import { barsText } from '#client/src/lib/section-text.ts';
+import type { UnitSystem } from '../contract/design-basis.ts';
+import type { SectionInput } from '../engine/section.ts';
+import { formatQuantity } from '../print/format-quantity.ts';
+import { barsText } from '../print/section-text.ts';
 import type { SectionGeometry } from './section-geometry.ts';
 
 /** A word beside the section with a line to what it names; mm in the section's own coordinates. */

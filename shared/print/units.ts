@@ -1,5 +1,5 @@
-import type { UnitSystem } from '#shared/contract/design-basis.ts';
-import type { QuantityKind } from '#shared/engine/evaluation.ts';
+import type { UnitSystem } from '../contract/design-basis.ts';
+import type { QuantityKind } from '../engine/evaluation.ts';
 import {
   KG_PER_LB,
   KG_PER_M_PER_LB_PER_FT,
@@ -10,7 +10,7 @@ import {
   NMM_PER_KIPFT,
   NMM_PER_KNM,
   N_PER_KIP,
-} from '#shared/engine/units.ts';
+} from '../engine/units.ts';
 
 /**
  * Everything a person reads or types: the engine's kinds, and those of estimating. Stored units: mm, mm², MPa, N, N·mm,

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { UNIT_SYSTEMS } from '#shared/contract/design-basis.ts';
-import { toDisplay, toStored, type DisplayKind } from '#client/src/lib/units.ts';
+import { toDisplay, toStored, type DisplayKind } from '#shared/print/units.ts';
 
 /**
  * Factors of NIST Special Publication 811 (2008), appendix B.8, from memory to the digits given here; the short ton, the

@@ -1,6 +1,6 @@
-import { findBar } from '#shared/engine/bars.ts';
-import type { Evaluation, PlacedBar } from '#shared/engine/evaluation.ts';
-import type { BarStandard, Face, SectionInput } from '#shared/engine/section.ts';
+import { findBar } from '../engine/bars.ts';
+import type { Evaluation, PlacedBar } from '../engine/evaluation.ts';
+import type { BarStandard, Face, SectionInput } from '../engine/section.ts';
 
 /** Everything in mm: x from the left side, y downwards from the compression face, as the engine places bars. */
 export interface SectionGeometry {

@@ -1,11 +1,11 @@
-import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import type { UnitSystem } from '../contract/design-basis.ts';
 import type {
   BarStandard,
   BendAllowance,
   DisplacedConcrete,
   RuleSetId,
   YieldCurvatureAt,
-} from '#shared/engine/section.ts';
+} from '../engine/section.ts';
 
 const RULE_SET: Readonly<Record<RuleSetId, string>> = {
   'aci318-19': 'ACI 318-19',
