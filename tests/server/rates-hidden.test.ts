@@ -2,7 +2,8 @@ import { afterAll, beforeAll, expect, test } from 'vitest';
 import type { Candidate, Run, ViewProgress } from '#shared/contract/records.ts';
 import { addProject, PRICE_BOOK, SMALL_SWEEP, type OfficeProject } from '../support/office-project.ts';
 import { followRun, hasEnded } from '../support/run-stream.ts';
-import type { SignedIn, TestOffice } from '../support/office.ts';
+import type { TestOffice } from '../support/office.ts';
+import type { SignedIn } from '../support/signed-in.ts';
 import { openTestOffice } from '../support/test-office.ts';
 
 let office: TestOffice;

@@ -1,6 +1,5 @@
 import { once } from 'node:events';
 import type { AddressInfo } from 'node:net';
-import supertest from 'supertest';
 import { buildApp } from '#server/app.ts';
 import { readConfig } from '#server/config.ts';
 import type { Database } from '#server/db/client.ts';
@@ -8,9 +7,9 @@ import { people } from '#server/db/schema/people.ts';
 import { startServices } from '#server/services.ts';
 import type { Deps } from '#server/deps.ts';
 import { ROLES, type Role } from '#shared/contract/records.ts';
+import { PASSWORD } from './factories.ts';
+import { signInAs, type SignedIn } from './signed-in.ts';
 import type { TestDatabase } from './test-database.ts';
-
-const PASSWORD = 'correct horse battery';
 
 /** One person per role, and an engineer who is on nobody's project. */
 const ACCOUNTS = [...ROLES, 'outsider'] as const;
@@ -25,17 +24,10 @@ export interface TestOffice {
   readonly databaseUrl: string;
   readonly origin: string;
   readonly idOf: (account: Account) => string;
-  /** A browser's worth of session: cookies and CSRF token. Signed in once per account, then shared. */
+  /** Signed in once per account, then shared. */
   readonly as: (account: Account) => Promise<SignedIn>;
   readonly signIn: (email: string, password: string) => Promise<SignedIn>;
   close(): Promise<void>;
-}
-
-export interface SignedIn {
-  readonly cookie: string;
-  get(path: string): supertest.Test;
-  post(path: string, body?: object): supertest.Test;
-  put(path: string, body: object): supertest.Test;
 }
 
 export const testEnvironment = (databaseUrl: string): NodeJS.ProcessEnv => ({
@@ -62,9 +54,9 @@ export async function openOffice(
     databaseUrl: database.url,
     origin,
     idOf: (account) => ids.get(account)!,
-    signIn: (email, password) => signIn(origin, email, password),
+    signIn: (email, password) => signInAs(origin, { email, password }),
     as: (account) => {
-      const session = sessions.get(account) ?? signIn(origin, emailOf(account), PASSWORD);
+      const session = sessions.get(account) ?? signInAs(origin, { email: emailOf(account) });
       sessions.set(account, session);
       return session;
     },
@@ -91,25 +83,4 @@ export async function insertPeople(db: Database, passwordHash: string): Promise<
     )
     .returning({ id: people.id });
   return new Map(ACCOUNTS.map((account, i) => [account, rows[i]!.id]));
-}
-
-async function signIn(origin: string, email: string, password: string): Promise<SignedIn> {
-  const agent = supertest.agent(origin);
-  const before = await agent.get('/api/session').expect(200);
-  const answer = await agent
-    .post('/api/session')
-    .set('x-csrf-token', before.body.csrfToken)
-    .send({ email, password })
-    .expect(200);
-  const token: string = answer.body.csrfToken;
-  const cookie = [answer.get('set-cookie') ?? []]
-    .flat()
-    .map((line) => line.split(';')[0])
-    .join('; ');
-  return {
-    cookie,
-    get: (path) => agent.get(`/api${path}`),
-    post: (path, body = {}) => agent.post(`/api${path}`).set('x-csrf-token', token).send(body),
-    put: (path, body) => agent.put(`/api${path}`).set('x-csrf-token', token).send(body),
-  };
 }

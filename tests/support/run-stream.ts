@@ -1,6 +1,7 @@
 import { get, type IncomingMessage } from 'node:http';
 import type { ViewProgress } from '#shared/contract/records.ts';
-import type { SignedIn, TestOffice } from './office.ts';
+import type { TestOffice } from './office.ts';
+import type { SignedIn } from './signed-in.ts';
 
 export interface RunEvent {
   readonly id: number;

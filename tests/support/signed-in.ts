@@ -12,11 +12,14 @@ export class SignedIn {
   readonly person: Person;
   readonly agent: Agent;
   readonly csrfToken: string;
+  /** For calls that do not go through the agent. */
+  readonly cookie: string;
 
-  constructor(init: { person: Person; agent: Agent; csrfToken: string }) {
+  constructor(init: Pick<SignedIn, 'person' | 'agent' | 'csrfToken' | 'cookie'>) {
     this.person = init.person;
     this.agent = init.agent;
     this.csrfToken = init.csrfToken;
+    this.cookie = init.cookie;
   }
 
   call(method: Method, path: string): Test {
@@ -30,21 +33,31 @@ export class SignedIn {
   delete = (path: string): Test => this.call('delete', path);
 }
 
+/** The service itself, or the address it listens on. */
+type Front = Express | string;
+
 /** A browser that has asked for its session, signed in or not. */
-export async function openBrowser(app: Express): Promise<{ agent: Agent; csrfToken: string }> {
+export async function openBrowser(app: Front): Promise<{ agent: Agent; csrfToken: string }> {
   const agent = request.agent(app);
   const { body } = await agent.get('/api/session').expect(200);
   return { agent, csrfToken: body.csrfToken };
 }
 
-export async function signInAs(app: Express, person: Person): Promise<SignedIn> {
+export async function signInAs(
+  app: Front,
+  { email, password = PASSWORD }: { email: string; password?: string },
+): Promise<SignedIn> {
   const { agent, csrfToken } = await openBrowser(app);
-  const { body } = await agent
+  const answer = await agent
     .post('/api/session')
     .set('x-csrf-token', csrfToken)
-    .send({ email: person.email, password: PASSWORD })
+    .send({ email, password })
     .expect(200);
-  return new SignedIn({ person, agent, csrfToken: body.csrfToken });
+  const cookie = [answer.get('set-cookie') ?? []]
+    .flat()
+    .map((line) => line.split(';')[0])
+    .join('; ');
+  return new SignedIn({ person: answer.body.person, agent, csrfToken: answer.body.csrfToken, cookie });
 }
 
 /** A new person of that role, signed in through the front door. */
