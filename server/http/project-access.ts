@@ -16,19 +16,26 @@ export function isWithinReach(db: Database, person: Person): SQL | undefined {
     .where(and(eq(projectMembers.projectId, projects.id), eq(projectMembers.personId, person.id)))})`;
 }
 
-/**
- * The project, where the person may read it: its members do, and an admin reads all. To everyone else it does not
- * exist, and neither does what is in it; `what` is the thing that was asked for.
- */
+/** The project, where the person may read it: its members do, and an admin reads all. */
+export async function findReadableProject(
+  db: Database,
+  person: Person,
+  projectId: string,
+): Promise<ProjectRow | undefined> {
+  const [project] = await db
+    .select()
+    .from(projects)
+    .where(and(eq(projects.id, projectId), isWithinReach(db, person)));
+  return project;
+}
+
+/** To everyone else it does not exist, and neither does what is in it; `what` is the thing that was asked for. */
 export async function requireReadableProject(
   db: Database,
   person: Person,
   { projectId, what }: { projectId: string; what: string },
 ): Promise<ProjectRow> {
-  const [project] = await db
-    .select()
-    .from(projects)
-    .where(and(eq(projects.id, projectId), isWithinReach(db, person)));
+  const project = await findReadableProject(db, person, projectId);
   if (project === undefined) throw notFound(what);
   return project;
 }

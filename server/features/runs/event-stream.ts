@@ -7,7 +7,7 @@ import type { Log } from '../../log.ts';
 import { presentViewProgress } from './present.ts';
 import { listViewsChangedAfter, type RunRecord } from './queries.ts';
 
-/** Under the idle limit of the proxies an office may have in between. */
+/** Under the idle limit of the proxies an office may have in between. Also how long a stream outlives the right to it. */
 const HEARTBEAT_MS = 15_000;
 /** What a client waits before it connects again. */
 const RETRY_MS = 1000;
@@ -17,7 +17,8 @@ interface RunStream {
   readonly log: Log;
   readonly runEvents: RunEvents;
   readonly res: Response;
-  readonly person: Person;
+  /** Who reads it by now; undefined where the session has ended or the project is theirs no more. */
+  readonly findReader: () => Promise<Person | undefined>;
   readonly record: RunRecord;
   /** The last event the client has, from its Last-Event-ID. */
   readonly lastEventId: number | undefined;
@@ -31,8 +32,11 @@ export function streamRun(stream: RunStream): void {
   res.flushHeaders();
   res.write(`retry: ${RETRY_MS}\n\n`);
   const sender = new ChangeSender(stream);
-  const heartbeat = setInterval(() => res.write(': still here\n\n'), HEARTBEAT_MS);
   const send = () => void sender.send();
+  const heartbeat = setInterval(() => {
+    res.write(': still here\n\n');
+    send();
+  }, HEARTBEAT_MS);
   const unfollow = runEvents.follow(record.run.id, {
     onViewChanged: send,
     onGap: send,
@@ -69,7 +73,7 @@ class ChangeSender {
     this.#isDirty = true;
     if (this.#isSending) return;
     this.#isSending = true;
-    const { res, log } = this.#stream;
+    const { log } = this.#stream;
     try {
       while (this.#isDirty && !this.#isClosed) {
         this.#isDirty = false;
@@ -78,7 +82,7 @@ class ChangeSender {
     } catch (error) {
       // The client connects again and is told what it missed.
       if (!this.#isClosed) log.warn({ err: error }, 'A stream of run events broke off');
-      res.end();
+      this.#end();
     } finally {
       this.#isSending = false;
     }
@@ -90,13 +94,24 @@ class ChangeSender {
     this.#stream.res.emit('drain');
   }
 
+  #end(): void {
+    this.close();
+    this.#stream.res.end();
+  }
+
   async #sendChanges(): Promise<void> {
-    const { db, res, person, record } = this.#stream;
+    const { db, res, findReader, record } = this.#stream;
     const { id, sectionCount } = record.run;
+    const reader = await findReader();
+    if (reader === undefined) {
+      // The client connects again and is told why not.
+      this.#end();
+      return;
+    }
     for (const view of await listViewsChangedAfter(db, id, this.#sent)) {
       if (this.#isClosed) return;
       this.#sent = view.sequence;
-      const data = JSON.stringify(presentViewProgress(view, sectionCount, person));
+      const data = JSON.stringify(presentViewProgress(view, sectionCount, reader));
       if (!res.write(`event: progress\nid: ${view.sequence}\ndata: ${data}\n\n`)) await once(res, 'drain');
     }
   }

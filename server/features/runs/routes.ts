@@ -9,9 +9,11 @@ import { runs } from '../../db/schema/runs.ts';
 import type { Deps } from '../../deps.ts';
 import { notFound } from '../../errors.ts';
 import { bind } from '../../http/bind.ts';
-import { requireSignedInPerson } from '../../http/signed-in-person.ts';
+import { findReadableProject } from '../../http/project-access.ts';
+import { findPersonStillSignedIn, requireSignedInPerson } from '../../http/signed-in-person.ts';
 import { cancelRun, openView, startRun } from './commands.ts';
 import { streamRun } from './event-stream.ts';
+import { OpenStreams } from './open-streams.ts';
 import { presentRun, presentViewProgress } from './present.ts';
 import { getSection, listViews, requireRun, requireView } from './queries.ts';
 
@@ -46,7 +48,9 @@ export function registerRunRoutes(router: Router, deps: Deps): void {
   registerRunEvents(router, deps);
 }
 
-function registerRunEvents(router: Router, { db, log, runEvents }: Deps): void {
+function registerRunEvents(router: Router, deps: Deps): void {
+  const { db, log, runEvents } = deps;
+  const openStreams = new OpenStreams();
   router.get(RUN_EVENTS_PATH, async (req, res) => {
     const person = await requireSignedInPerson(db, req);
     const id = idSchema.safeParse(req.params.id);
@@ -54,7 +58,15 @@ function registerRunEvents(router: Router, { db, log, runEvents }: Deps): void {
     const record = await requireRun(db, person, id.data);
     const header = req.get('last-event-id') ?? '';
     const lastEventId = /^\d{1,15}$/.test(header) ? Number(header) : undefined;
-    streamRun({ db, log, runEvents, res, person, record, lastEventId });
+    const findReader = async () => {
+      const reader = await findPersonStillSignedIn(deps, req);
+      if (reader === undefined) return undefined;
+      return (await findReadableProject(db, reader, record.project.id)) && reader;
+    };
+    // Whoever hung up meanwhile would never be heard to close.
+    if (res.destroyed) return;
+    res.once('close', openStreams.enter(person.id));
+    streamRun({ db, log, runEvents, res, findReader, record, lastEventId });
   });
 }
 
