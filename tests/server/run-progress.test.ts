@@ -1,10 +1,12 @@
 import pg from 'pg';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import type { Run, ViewProgress } from '#shared/contract/records.ts';
+import { MEASURE_IDS, type MeasureId } from '#shared/engine/measures.ts';
 import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
 import { addProject, scaledSweep, SMALL_SWEEP, type OfficeProject } from '../support/office-project.ts';
 import { followRun, hasEnded, type RunStream } from '../support/run-stream.ts';
-import type { SignedIn, TestOffice } from '../support/office.ts';
+import type { TestOffice } from '../support/office.ts';
+import type { SignedIn } from '../support/signed-in.ts';
 import { openTestOffice } from '../support/test-office.ts';
 
 /** Some 7 s of work on two threads: long enough to be cancelled in the middle on any machine. */
@@ -74,6 +76,27 @@ describe('a run in work', () => {
     await engineer.post(`/runs/${long.id}/cancel`).expect(200);
     await longStream.until(hasEnded);
     for (const stream of [small, longStream]) stream.close();
+  });
+
+  test('is looked at through eight pairs of measures at a time, no more', async () => {
+    const run = await start(LONG_SWEEP);
+    const open = async (x: MeasureId) =>
+      (await engineer.post(`/runs/${run.id}/views`, { x, y: 'widthMm' })).status;
+    const measures = MEASURE_IDS.filter((measure) => measure !== 'widthMm').slice(0, 8);
+    const statuses: number[] = [];
+    for (const measure of measures) statuses.push(await open(measure));
+    expect(statuses).toEqual([...measures.slice(1).map(() => 200), 409]);
+    expect(await open(measures[0]!)).toBe(200);
+    await engineer.post(`/runs/${run.id}/cancel`).expect(200);
+    const stream = await follow(run);
+    await expect
+      .poll(async () =>
+        (await engineer.get(`/runs/${run.id}`)).body.views.map(({ state }: ViewProgress) => state),
+      )
+      .toEqual(measures.map(() => 'cancelled'));
+    stream.close();
+    expect(await open(measures.at(-1)!)).toBe(200);
+    await engineer.post(`/runs/${run.id}/cancel`).expect(200);
   });
 
   test('that still waits is cancelled with nothing done', async () => {

@@ -1,3 +1,5 @@
+import { randomUUID } from 'node:crypto';
+import { eq, inArray } from 'drizzle-orm';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { MAX_SECTIONS_PER_RUN } from '#shared/sweep/size-limit.ts';
 import type { Run, ViewProgress } from '#shared/contract/records.ts';
@@ -6,9 +8,11 @@ import { evaluateSection } from '#shared/engine/evaluate.ts';
 import { finishResult } from '#shared/sweep/finish.ts';
 import { prepareSweep } from '#shared/sweep/prepared-sweep.ts';
 import { sweepRange } from '#shared/sweep/sweep-range.ts';
+import { runs } from '#server/db/schema/runs.ts';
 import { addProject, SMALL_SWEEP, type OfficeProject } from '../support/office-project.ts';
 import { followRun, hasEnded } from '../support/run-stream.ts';
-import type { SignedIn, TestOffice } from '../support/office.ts';
+import type { TestOffice } from '../support/office.ts';
+import type { SignedIn } from '../support/signed-in.ts';
 import { openTestOffice } from '../support/test-office.ts';
 
 let office: TestOffice;
@@ -225,6 +229,32 @@ describe('views of a run', () => {
     expect(unknown.body.error.issues[0].path).toEqual(['x']);
     const cost = await engineer.post(path, { x: 'depthMm', y: 'costPerM' }).expect(400);
     expect(cost.body.error.issues[0].path).toEqual(['y']);
+  });
+});
+
+describe('the runs of one person', () => {
+  test('are fifty at most under way, whatever is finished', async () => {
+    const { db } = office.deps;
+    const run = await start(SMALL_SWEEP);
+    await finish(run);
+    const [row] = await db.select().from(runs).where(eq(runs.id, run.id));
+    const waiting = Array.from({ length: 50 }, (_, i) => ({
+      ...row!,
+      id: randomUUID(),
+      number: 100 + i,
+      state: 'queued' as const,
+    }));
+    await db.insert(runs).values(waiting);
+    const again = () => engineer.post(`/sweeps/${run.sweepId}/runs`);
+    const refused = await again().expect(409);
+    expect(refused.body.error.message).toBe(
+      'You have 50 runs under way. Wait for some of them, or cancel them.',
+    );
+    await (await office.as('admin')).post(`/sweeps/${run.sweepId}/runs`).expect(200);
+    await db.update(runs).set({ state: 'cancelled' }).where(eq(runs.id, waiting[0]!.id));
+    await again().expect(200);
+    const ids = waiting.map(({ id }) => id);
+    await db.update(runs).set({ state: 'cancelled' }).where(inArray(runs.id, ids));
   });
 });
 

@@ -1,5 +1,5 @@
 import { and, eq, inArray, max } from 'drizzle-orm';
-import type { Person } from '#shared/contract/records.ts';
+import type { Person, RunState } from '#shared/contract/records.ts';
 import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
 import type { DesignBasis } from '#shared/engine/section.ts';
 import { ENGINE_VERSION } from '#shared/engine/version.ts';
@@ -10,7 +10,7 @@ import { beams } from '../../db/schema/beams.ts';
 import { runViews } from '../../db/schema/run-views.ts';
 import { runs } from '../../db/schema/runs.ts';
 import { sweeps } from '../../db/schema/sweeps.ts';
-import { forbidden, invalidInput, notFound } from '../../errors.ts';
+import { conflict, forbidden, invalidInput, notFound } from '../../errors.ts';
 import { frozenBasis } from '../../http/frozen-basis.ts';
 import { requireReadableProject, requireRole } from '../../http/project-access.ts';
 import { changeView, type ViewTarget } from '../../jobs/change-view.ts';
@@ -22,6 +22,12 @@ import { canSeeView, RUNNERS } from './policy.ts';
 import { requireView, type RunRecord, type ViewRow } from './queries.ts';
 import { requireRunnable } from './runnable.ts';
 
+const UNFINISHED: RunState[] = ['queued', 'running'];
+/** A run for each beam of a floor at once; more would keep everybody else's waiting. */
+const RUNS_PER_PERSON = 50;
+/** Anyone who reads a run may look at it through other measures, a few at a time. */
+const UNFINISHED_VIEWS_PER_RUN = 8;
+
 /** Freezes the sweep as it is now and puts its computation in the queue. Answers the run's id. */
 export async function startRun(db: Database, person: Person, sweepId: string): Promise<string> {
   return db.transaction(async (tx) => {
@@ -31,10 +37,17 @@ export async function startRun(db: Database, person: Person, sweepId: string): P
     if (sweep === undefined || beam === undefined) throw notFound('Sweep');
     const project = await requireReadableProject(tx, person, { projectId: beam.projectId, what: 'Sweep' });
     requireRole(person, RUNNERS, 'start runs');
+    await refuseTooManyRuns(tx, person);
     const basis = frozenBasis(project);
     requireRunnable(sweep.definition, basis, project.designBasis.units);
     return insertRun(tx, { sweepId, definition: sweep.definition, basis, startedBy: person.id });
   });
+}
+
+async function refuseTooManyRuns(tx: Database, { id }: Person): Promise<void> {
+  const underWay = await tx.$count(runs, and(eq(runs.startedBy, id), inArray(runs.state, UNFINISHED)));
+  if (underWay >= RUNS_PER_PERSON)
+    throw conflict(`You have ${underWay} runs under way. Wait for some of them, or cancel them.`);
 }
 
 interface NewRun {
@@ -86,7 +99,7 @@ export async function cancelRun(db: Database, person: Person, { run }: RunRecord
     const unfinished = await tx
       .select({ viewId: runViews.id })
       .from(runViews)
-      .where(and(eq(runViews.runId, run.id), inArray(runViews.state, ['queued', 'running'])));
+      .where(and(eq(runViews.runId, run.id), inArray(runViews.state, UNFINISHED)));
     for (const { viewId } of unfinished) await cancelView(tx, { runId: run.id, viewId, run });
   });
 }
@@ -130,10 +143,20 @@ export async function openView(
   });
   if (missing.length > 0) throw invalidInput(missing);
   const viewId = await db.transaction(async (tx) => {
-    const inserted = await insertView(tx, run.id, view);
-    return inserted ?? retryView(tx, record, view);
+    const id = (await insertView(tx, run.id, view)) ?? (await retryView(tx, record, view));
+    await refuseTooManyViews(tx, run.id);
+    return id;
   });
   return requireView(db, person, { runId: run.id, viewId });
+}
+
+/** Called with the new one among them: its run's row is locked, so the count holds. */
+async function refuseTooManyViews(tx: Database, runId: string): Promise<void> {
+  const isUnfinished = and(eq(runViews.runId, runId), inArray(runViews.state, UNFINISHED));
+  if ((await tx.$count(runViews, isUnfinished)) > UNFINISHED_VIEWS_PER_RUN)
+    throw conflict(
+      `${UNFINISHED_VIEWS_PER_RUN} views of this run are computed already. Wait for one of them.`,
+    );
 }
 
 async function retryView(tx: Database, { run }: RunRecord, { x, y }: View): Promise<string> {
