@@ -3,8 +3,10 @@ import { Piscina } from 'piscina';
 import type { PasswordTask } from './password-worker.ts';
 import { resolveWorkerFile } from './worker-file.ts';
 
-/** bcrypt looks at no more than this many bytes; what is longer must be refused when it is set. */
+/** bcrypt looks at no more than this many bytes: what is longer cannot be set, and matches nobody's. */
 const MAX_PASSWORD_BYTES = 72;
+
+const isTooLong = (password: string) => Buffer.byteLength(password) > MAX_PASSWORD_BYTES;
 
 export interface Passwords {
   hash(password: string): Promise<string>;
@@ -20,8 +22,7 @@ export async function startPasswords(cost: number): Promise<Passwords> {
     maxThreads: 1,
   });
   const hash = async (password: string) => {
-    if (Buffer.byteLength(password) > MAX_PASSWORD_BYTES)
-      throw new RangeError(`A password is at most ${MAX_PASSWORD_BYTES} bytes long`);
+    if (isTooLong(password)) throw new RangeError(`A password is at most ${MAX_PASSWORD_BYTES} bytes long`);
     return String(await piscina.run({ kind: 'hash', password, cost }));
   };
   const nobodysHash = await hash(randomBytes(18).toString('base64'));
@@ -33,7 +34,7 @@ export async function startPasswords(cost: number): Promise<Passwords> {
         password,
         passwordHash: passwordHash ?? nobodysHash,
       });
-      return matches === true && passwordHash !== undefined;
+      return matches === true && passwordHash !== undefined && !isTooLong(password);
     },
     close: () => piscina.destroy(),
   };

@@ -9,7 +9,12 @@ const SIGN_IN_FAILURES = 10;
 /** Wrong passwords from one address whatever the e-mail: an office shares one, a guesser tries many names. */
 const SIGN_IN_FAILURES_OF_ADDRESS = 100;
 
-const addressOf = (req: Request) => ipKeyGenerator(req.ip ?? '');
+const LOOPBACK = /^(::ffff:)?127[.]|^::1$/;
+
+/** This machine is one address: its programs may choose among the 16 million of 127.0.0.0/8. */
+function addressOf({ ip = '' }: Request): string {
+  return LOOPBACK.test(ip) ? 'loopback' : ipKeyGenerator(ip);
+}
 
 interface Limit {
   readonly windowMs: number;

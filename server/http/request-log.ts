@@ -4,7 +4,7 @@ import { pinoHttp } from 'pino-http';
 import type { Log } from '../log.ts';
 
 /** A share link's token is as good as a password: it never reaches the log. */
-const withoutToken = (url: string) => url.replace(/(\/shared\/)[^/?]+/, '$1…');
+const withoutToken = (url: string) => url.replace(/(\/shared\/)[^/?]+/i, '$1…');
 
 /** Gives each request its id, answers with it in `x-request-id`, and logs what is not routine. */
 export const requestLog = (log: Log): RequestHandler =>

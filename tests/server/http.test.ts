@@ -1,8 +1,10 @@
+import { randomBytes } from 'node:crypto';
 import { mkdir, mkdtemp, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
 import type { Express } from 'express';
 import pg from 'pg';
+import { pino } from 'pino';
 import request from 'supertest';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { endpoints, RUN_EVENTS_PATH } from '#shared/contract/endpoints.ts';
@@ -40,6 +42,19 @@ describe('the API', () => {
     const second = await request(service.app).get('/api/projects').expect(401);
     expect(first.body.error.requestId).toBe(first.headers['x-request-id']);
     expect(second.body.error.requestId).not.toBe(first.body.error.requestId);
+  });
+
+  it('keeps share links out of the log, however they are written', async () => {
+    const lines: string[] = [];
+    const log = pino({ level: 'debug' }, { write: (line) => void lines.push(line) });
+    const app = buildApp({ ...service.deps, log });
+    const token = randomBytes(32).toString('base64url');
+    for (const at of [`/api/shared/${token}`, `/api/SHARED/${token}/`, `/shared/${token}?a=1`]) {
+      await request(app).get(at);
+    }
+    await expect.poll(() => lines.length).toBe(3);
+    expect(lines.join('')).toMatch(/shared\/…/i);
+    expect(lines.join('')).not.toContain(token);
   });
 
   it('is never kept by a cache', async () => {

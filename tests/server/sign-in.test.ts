@@ -1,3 +1,6 @@
+import { once } from 'node:events';
+import { get, type IncomingMessage } from 'node:http';
+import type { AddressInfo } from 'node:net';
 import { eq } from 'drizzle-orm';
 import { describe, expect, it } from 'vitest';
 import { startPasswords } from '#server/compute/passwords.ts';
@@ -75,6 +78,19 @@ describe('signing in', () => {
     }
   });
 
+  it('takes nobody’s password with more behind it, though bcrypt looks no further', async () => {
+    const passwords = await startPasswords(4);
+    try {
+      const longest = 'é'.repeat(36);
+      const hash = await passwords.hash(longest);
+      expect(await passwords.verify(longest, hash)).toBe(true);
+      expect(await passwords.verify(`${longest}!`, hash)).toBe(false);
+      await expect(passwords.hash(`${longest}!`)).rejects.toThrow('at most 72 bytes');
+    } finally {
+      await passwords.close();
+    }
+  });
+
   it('names every field that is missing', async () => {
     const { status, body } = await attempt({});
     expect(status).toBe(400);
@@ -112,6 +128,24 @@ describe('signing in', () => {
     const { status, body } = await agent.get('/api/session');
     expect(status).toBe(429);
     expect(body.error.code).toBe('too-many-requests');
+  });
+});
+
+describe('this machine', () => {
+  it('counts as one address, from whichever of its own it calls', async () => {
+    const server = service.buildWith({ apiRequestsPerMinute: 3 }).listen(0, '127.0.0.1');
+    await once(server, 'listening');
+    const { port } = server.address() as AddressInfo;
+    const callFrom = async (localAddress: string) => {
+      const options = { host: '127.0.0.1', port, path: '/api/openapi.json', localAddress, agent: false };
+      const [answer] = (await once(get(options), 'response')) as [IncomingMessage];
+      answer.resume();
+      return answer.statusCode;
+    };
+    const statuses: unknown[] = [];
+    for (let i = 1; i <= 4; i++) statuses.push(await callFrom(`127.0.${i}.1`));
+    server.close();
+    expect(statuses).toEqual([200, 200, 200, 429]);
   });
 });
 

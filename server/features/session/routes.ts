@@ -20,10 +20,14 @@ const settled = (start: (done: (error?: unknown) => void) => void): Promise<void
 /** A new id whenever somebody comes or goes: an id planted before is worth nothing after. */
 const renewSession = (req: Request) => settled((done) => req.session.regenerate(done));
 
-/** Saved before it is answered: left to the end of the response, a failure to write would go unsaid. */
+/**
+ * A new session is saved before it is answered: left to the end of the response, a failure to write would go unsaid.
+ * One that is not new has its token, and is not written again: it may have been ended meanwhile, and would come back.
+ */
 async function answer(req: Request, person: Person | undefined): Promise<Session> {
+  const isNew = req.session.csrfToken === undefined;
   const csrfToken = csrfTokenOf(req);
-  await settled((done) => req.session.save(done));
+  if (isNew) await settled((done) => req.session.save(done));
   return { person: person ?? null, csrfToken };
 }
 
