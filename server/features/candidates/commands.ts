@@ -1,6 +1,7 @@
 import { and, eq, ne } from 'drizzle-orm';
 import type { CandidateState, Person, PinInput, Snapshot } from '#shared/contract/records.ts';
 import type { Database } from '../../db/client.ts';
+import { violatesReference } from '../../db/database-error.ts';
 import { candidateComments } from '../../db/schema/candidate-comments.ts';
 import { candidateTransitions } from '../../db/schema/candidate-transitions.ts';
 import { candidates } from '../../db/schema/candidates.ts';
@@ -25,7 +26,12 @@ export async function pinCandidate(
   const { beam } = await requireReadableBeam(db, person, input.beamId);
   if (beam.projectId !== project.id) throw notFound('Beam');
   const snapshot = await requirePinnable(db, { project, beam, source: input.source });
-  return db.transaction((tx) => insertCandidate(tx, { person, beam, input, snapshot }));
+  return db
+    .transaction((tx) => insertCandidate(tx, { person, beam, input, snapshot }))
+    .catch((error: unknown) => {
+      // The beam was deleted a moment ago; nothing else that a candidate refers to ever is.
+      throw violatesReference(error) ? notFound('Beam') : error;
+    });
 }
 
 interface NewCandidate {

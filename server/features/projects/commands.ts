@@ -89,6 +89,12 @@ export async function setMembers(
   }
   await requireKnownPeople(db, personIds);
   await db.transaction(async (tx) => {
+    // Of two who choose at once the later one's choice stands, whole.
+    await tx
+      .select({ id: projects.id })
+      .from(projects)
+      .where(eq(projects.id, projectId))
+      .for('no key update');
     const openAccounts = tx.select({ id: people.id }).from(people).where(isNull(people.disabledAt));
     await tx
       .delete(projectMembers)
