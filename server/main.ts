@@ -7,11 +7,15 @@ import { startServices, type Services } from './services.ts';
 /** Requests in hand get this long to end; with the jobs put back the whole stop stays under 8 s. */
 const FINISH_REQUESTS_MS = 3000;
 const STOP_LIMIT_MS = 8000;
+const CLOSE_IDLE_MS = 50;
 
 async function stop(server: Server, services: Services): Promise<void> {
   const closed = new Promise<void>((resolve) => server.close(() => resolve()));
   services.endStreams();
+  // Closing ends the connections that are idle at that moment only, not those whose answer ends a moment later.
+  const closeIdle = setInterval(() => server.closeIdleConnections(), CLOSE_IDLE_MS);
   await Promise.race([closed, delay(FINISH_REQUESTS_MS, undefined, { ref: false })]);
+  clearInterval(closeIdle);
   server.closeAllConnections();
   await services.stop();
 }

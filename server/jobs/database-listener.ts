@@ -37,8 +37,10 @@ export class DatabaseListener {
     await this.#connect();
   }
 
+  /** What waits to be asked is asked first: ended under it, the connection would call it an error. */
   async stop(): Promise<void> {
     this.#isStopped = true;
+    await this.#lastQuery;
     await this.#connection?.end().catch(() => undefined);
   }
 
@@ -56,8 +58,12 @@ export class DatabaseListener {
     await this.#query('select pg_advisory_unlock_shared($1, hashtext($2))', workerId);
   }
 
-  /** One after the other, as the connection wants them. Without a connection, reconnecting takes the locks. */
+  /**
+   * One after the other, as the connection wants them. Without a connection, reconnecting takes the locks; once
+   * stopped, its end frees them.
+   */
   #query(text: string, workerId: string): Promise<unknown> {
+    if (this.#isStopped) return this.#lastQuery;
     const done = this.#lastQuery.then(() => this.#connection?.query(text, [WORKER_LOCK_CLASS, workerId]));
     this.#lastQuery = done.catch(() => undefined);
     return done;

@@ -1,0 +1,25 @@
+import { pino } from 'pino';
+import { expect, it } from 'vitest';
+import { createDatabase, createPool } from '#server/db/client.ts';
+import { Queue } from '#server/jobs/queue.ts';
+import { RunEvents } from '#server/jobs/run-events.ts';
+import { createTestDatabase } from '../support/test-database.ts';
+
+it('stops in order without a complaint in the log', async () => {
+  const database = await createTestDatabase();
+  const complaints: string[] = [];
+  const log = pino({ level: 'warn' }, { write: (line) => void complaints.push(line) });
+  const pool = createPool(database.url, log);
+  const runEvents = new RunEvents({ databaseUrl: database.url, log });
+  const { listener } = runEvents;
+  const db = createDatabase(pool);
+  const queue = new Queue({ databaseUrl: database.url, db, log, listener, createTasks: () => ({}) });
+  await runEvents.start();
+  await queue.start();
+  expect(listener.workerIds.length).toBeGreaterThan(0);
+  await queue.stop();
+  await runEvents.stop();
+  await pool.end();
+  await database.drop();
+  expect(complaints).toEqual([]);
+});
