@@ -9,6 +9,8 @@ import type { StopSwitch } from './stop-switch.ts';
 
 /** Often enough for a front that seems to grow by itself, seldom enough to cost nothing. */
 const INTERVAL_MS = 150;
+/** A front of many points takes time to put together, on the thread that answers requests: no more than this share. */
+const LARGEST_SHARE = 0.2;
 
 interface ProgressOptions {
   readonly claimed: ClaimedView;
@@ -17,12 +19,12 @@ interface ProgressOptions {
   readonly stopSwitch: StopSwitch;
 }
 
-/** Writes what is done so far, at most every INTERVAL_MS and one write at a time; what comes in between is skipped. */
+/** Writes what is done so far, every INTERVAL_MS at most and one write at a time; what comes in between is skipped. */
 export class ProgressWriter {
   readonly #context: { db: Database; log: Log };
   readonly #target: ViewTarget;
   readonly #options: ProgressOptions;
-  #lastWriteAt = -Infinity;
+  #nextWriteAt = -Infinity;
   #writing: Promise<void> | undefined;
 
   constructor(context: { db: Database; log: Log }, target: ViewTarget, options: ProgressOptions) {
@@ -32,8 +34,8 @@ export class ProgressWriter {
   }
 
   offer(merged: ChunkResult): void {
-    if (this.#writing !== undefined || performance.now() - this.#lastWriteAt < INTERVAL_MS) return;
-    this.#lastWriteAt = performance.now();
+    if (this.#writing !== undefined || performance.now() < this.#nextWriteAt) return;
+    this.#nextWriteAt = performance.now() + INTERVAL_MS;
     this.#writing = this.#write(merged).finally(() => {
       this.#writing = undefined;
     });
@@ -47,7 +49,10 @@ export class ProgressWriter {
   async #write(merged: ChunkResult): Promise<void> {
     const { claimed, startedAt, stopSwitch } = this.#options;
     try {
+      const begunAt = performance.now();
       const result = finishResult(claimed.problem, claimed.view, merged);
+      const tookMs = performance.now() - begunAt;
+      this.#nextWriteAt = Math.max(this.#nextWriteAt, begunAt + tookMs / LARGEST_SHARE);
       const elapsedMs = performance.now() - startedAt;
       const view = await changeView(this.#context.db, this.#target, { ...describeResult(result), elapsedMs });
       // Undefined: another worker holds the view now. A cancel's notification may have been missed.
