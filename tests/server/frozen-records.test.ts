@@ -3,6 +3,7 @@ import { beforeAll, describe, expect, it } from 'vitest';
 import { candidateComments } from '#server/db/schema/candidate-comments.ts';
 import { candidateTransitions } from '#server/db/schema/candidate-transitions.ts';
 import { candidates } from '#server/db/schema/candidates.ts';
+import { runViews } from '#server/db/schema/run-views.ts';
 import { runs } from '#server/db/schema/runs.ts';
 import { beams } from '#server/db/schema/beams.ts';
 import { createBeam, createProject, beamInput, sweepDefinition } from '../support/factories.ts';
@@ -60,6 +61,12 @@ describe('the database itself refuses', () => {
     expect(await refusal(db.delete(candidateTransitions))).toBe(transitions);
     expect(await refusal(db.update(candidateComments).set({ text: 'x' }))).toBe(comments);
     expect(await refusal(db.delete(candidateComments))).toBe(comments);
+  });
+
+  it('to remove the views of a run, and so the run itself', async () => {
+    const { db } = service.deps;
+    expect(await refusal(db.delete(runViews))).toBe('Rows of run_views are kept for good');
+    expect(await refusal(db.delete(runs))).toContain('foreign key');
   });
 
   it('a candidate on a beam of another project', async () => {
