@@ -51,7 +51,7 @@ const everywhere = {
  * @type {import('eslint').Linter.Config}
  */
 const pure = {
-  files: ['shared/engine/**', 'shared/sweep/**'],
+  files: ['shared/engine/**', 'shared/sweep/**', 'shared/verification/**'],
   rules: {
     'no-restricted-globals': ['error', ...IMPURE_GLOBALS],
     'no-restricted-properties': ['error', { object: 'Math', property: 'random' }],

@@ -2,7 +2,8 @@ import type { Page } from 'playwright-core';
 import { describe, expect, it } from 'vitest';
 import { CLINIC, LIBRARY } from '../support/browser-demo.ts';
 import { useBrowserOffice } from '../support/browser-office.ts';
-import cases from '../published/cases/optimum-cases.json' with { type: 'json' };
+import handWorked from '#shared/verification/cases/hand-worked.json' with { type: 'json' };
+import optima from '#shared/verification/cases/optima.json' with { type: 'json' };
 
 const office = useBrowserOffice();
 
@@ -34,12 +35,12 @@ function expectPrinted(text: string | undefined, printed: string, name: string):
 }
 
 /**
- * HAND-01 of published/cases/optimum-cases.json: one section worked by hand and by an independent script for this project;
+ * HAND-01 of shared/verification/cases/hand-worked.json: one section worked by hand and by an independent script for this project;
  * no outside source. Figures as printed there, in the units of the screen.
  */
 describe('HAND-01 typed into the page for one section', () => {
   it('comes back with every printed digit', async () => {
-    const { expected } = cases.find(({ id }) => id === 'HAND-01')!;
+    const { expected } = handWorked.find(({ id }) => id === 'HAND-01')!;
     const { page } = await office.visit('engineer');
     await page.goto(`${CLINIC}/section`);
     await page.getByLabel('Stirrups', { exact: true }).selectOption('10');
@@ -59,30 +60,30 @@ describe('HAND-01 typed into the page for one section', () => {
     await page.getByRole('radio', { name: '5' }).check();
     const working = await readWorking(page);
     for (const [symbol, printed] of [
-      ['d', expected!.d.toFixed(1)],
-      ['β1', String(expected!.beta1)],
-      ['c', String(expected!.c)],
-      ['a', String(expected!.a)],
-      ['ε2', String(expected!.eps_t)],
-      ['Mn', String(expected!.Mn_kNm)],
-      ['φ', String(expected!.phi)],
-      ['φMn', String(expected!.phiMn_kNm)],
-      ['As,min', String(expected!.As_min)],
-      ['n', String(expected!.n)],
-      ['kd', String(expected!.kd)],
-      ['Icr', String(expected!.Icr / 1e6)],
+      ['d', expected.d.toFixed(1)],
+      ['β1', String(expected.beta1)],
+      ['c', String(expected.c)],
+      ['a', String(expected.a)],
+      ['ε2', String(expected.eps_t)],
+      ['Mn', String(expected.Mn_kNm)],
+      ['φ', String(expected.phi)],
+      ['φMn', String(expected.phiMn_kNm)],
+      ['As,min', String(expected.As_min)],
+      ['n', String(expected.n)],
+      ['kd', String(expected.kd)],
+      ['Icr', String(expected.Icr / 1e6)],
       ['φy', '7.161'],
-      ['μφ', String(expected!.mu_phi)],
-      ['fc/f′c at yield', String(expected!.fc_at_yield_share)],
+      ['μφ', String(expected.mu_phi)],
+      ['fc/f′c at yield', String(expected.fc_at_yield_share)],
     ] as const)
       expectPrinted(working.get(symbol), printed, symbol);
-    expect(expected!.phi_y).toBe(7.161e-6);
-    expectPrinted(working.get('fs1')!.replace('−', ''), String(expected!.fs2_MPa), 'stress of the top bars');
+    expect(expected.phi_y).toBe(7.161e-6);
+    expectPrinted(working.get('fs1')!.replace('−', ''), String(expected.fs2_MPa), 'stress of the top bars');
     // Printed 34.87 × 10⁻⁶, though 0.003/86.046 is 34.865: three figures are safe.
-    expect(numberIn(working.get('φu')!).toPrecision(3)).toBe((expected!.phi_u * 1e6).toPrecision(3));
+    expect(numberIn(working.get('φu')!).toPrecision(3)).toBe((expected.phi_u * 1e6).toPrecision(3));
 
     const fit = page.getByRole('listitem').filter({ hasText: 'Bar fit' }).first();
-    expect(await fit.innerText()).toContain(`${expected!.clear_gap} mm there`);
+    expect(await fit.innerText()).toContain(`${expected.clear_gap} mm there`);
     const least = page.getByRole('listitem').filter({ hasText: 'Least steel' }).first();
     expect(await least.innerText()).toContain('437.50 asked, 1,472.6 mm² there');
     await page.getByText('At first yield the concrete carries 89% of f′c.').waitFor();
@@ -113,13 +114,13 @@ describe('HAND-01 typed into the page for one section', () => {
  */
 describe('the bars of a published optimum', () => {
   it('are rejected with the width that two layers of them need', async () => {
-    const { optimum } = cases.find(({ id }) => id === 'OPT-01')!;
+    const { expected: optimum } = optima.find(({ id }) => id === 'OPT-01')!;
     const { page } = await office.visit('engineer');
     await page.goto(`${LIBRARY}/section`);
     await page.getByLabel('Stirrups', { exact: true }).selectOption('#3');
     await fill(page, {
-      'Width b': String(optimum!.b),
-      'Depth h': String(optimum!.h),
+      'Width b': String(optimum.b),
+      'Depth h': String(optimum.h),
       'Concrete f′c': '5',
       'Steel fy': '50',
       'Bottom bars': '8-#8',

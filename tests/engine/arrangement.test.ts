@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { BARS } from '#shared/engine/bars.ts';
 import { evaluateSection } from '#shared/engine/evaluate.ts';
 import { BAR_STANDARDS, BEND_ALLOWANCES } from '#shared/engine/section.ts';
-import { METRIC_BASIS, NO_DEMAND, NO_RULES } from '../published/layered-section.ts';
+import { METRIC_BASIS, NO_DEMAND, NO_RULES } from '#shared/verification/layered-section.ts';
 import { remeasure } from './remeasure.ts';
 
 const randomBars = fc

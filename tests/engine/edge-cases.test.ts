@@ -11,7 +11,7 @@ import {
   NO_DEMAND,
   NO_RULES,
   US_BASIS,
-} from '../published/layered-section.ts';
+} from '#shared/verification/layered-section.ts';
 import { nonNull } from './non-null.ts';
 
 const context: EvaluationContext = { basis: METRIC_BASIS, demand: NO_DEMAND, rules: NO_RULES };

@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { evaluateSection } from '#shared/engine/evaluate.ts';
 import { DISPLACED_CONCRETE, RULE_SET_IDS, type Layer, type SectionInput } from '#shared/engine/section.ts';
 import { RULE_SETS } from '#shared/engine/rules/rule-sets.ts';
-import { METRIC_BASIS, NO_DEMAND, NO_RULES } from '../published/layered-section.ts';
+import { METRIC_BASIS, NO_DEMAND, NO_RULES } from '#shared/verification/layered-section.ts';
 
 /** Random sections of one to six layers at any depth, light to over-reinforced. */
 const randomSection = fc

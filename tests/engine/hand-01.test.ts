@@ -1,26 +1,10 @@
 import { describe, expect, it } from 'vitest';
-import { evaluateSection } from '#shared/engine/evaluate.ts';
-import type { BarGroup, SectionInput } from '#shared/engine/section.ts';
-import { METRIC_BASIS, NO_DEMAND, NO_RULES } from '../published/layered-section.ts';
-
-/**
- * HAND-01 of published/cases/optimum-cases.json: one section worked by hand and by an independent script for this project;
- * no outside source.
- */
-const section = (compression: BarGroup): SectionInput => ({
-  widthMm: 300,
-  depthMm: 500,
-  fcMPa: 30,
-  fyMPa: 420,
-  coverMm: 40,
-  stirrup: { bar: '10', legs: 2, spacingMm: 150 },
-  reinforcement: { kind: 'bars', tension: [{ bar: '25', count: 3 }], compression },
-});
-const evaluate = (compression: BarGroup) =>
-  evaluateSection(section(compression), { basis: METRIC_BASIS, demand: NO_DEMAND, rules: NO_RULES });
+import { evaluateHandSection } from '#shared/verification/hand-worked-case.ts';
 
 describe('HAND-01, 300 × 500 with 3-25 and 2-16', () => {
-  const { geometry, flexure, elastic, ductility, checks, arrangement } = evaluate([{ bar: '16', count: 2 }]);
+  const { geometry, flexure, elastic, ductility, checks, arrangement } = evaluateHandSection([
+    { bar: '16', count: 2 },
+  ]);
 
   it('places the bars at the printed depths and gap', () => {
     expect(geometry!.dMm).toBeCloseTo(437.5, 9);
@@ -55,7 +39,7 @@ describe('HAND-01, 300 × 500 with 3-25 and 2-16', () => {
   });
 
   it('gives the printed variant without top steel', () => {
-    const bare = evaluate([]);
+    const bare = evaluateHandSection([]);
     expect(bare.flexure!.blockDepthMm).toBeCloseTo(80.85, 2);
     expect(bare.flexure!.neutralAxisMm).toBeCloseTo(96.74, 2);
     expect(bare.flexure!.nominalMomentNmm / 1e6).toBeCloseTo(245.59, 2);

@@ -2,7 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { evaluateSection } from '#shared/engine/evaluate.ts';
 import { nonNull } from './non-null.ts';
-import { METRIC_BASIS, metricSection, NO_DEMAND, NO_RULES } from '../published/layered-section.ts';
+import { METRIC_BASIS, metricSection, NO_DEMAND, NO_RULES } from '#shared/verification/layered-section.ts';
 
 /** Ordinary beams: tension steel of 0.4 to 2.5 %, compression steel to its half. */
 const beam = fc.record({

@@ -120,10 +120,21 @@ export const ELASTIC_CASES: Readonly<Record<string, ComputeCase>> = {
     const { dMm } = placeSteel(section, METRIC_BASIS, 2).layout!;
     return { ybar: h - dMm, d: dMm };
   },
+  'MC-10': (_, raw) => ({
+    mu_phi: listOf<readonly [fyKsi: number, shareOfRho: number, rho: number]>(raw, 'points').map((point) => {
+      const { muPhi, assumesRight } = parkPaulayPoint(...point);
+      return assumesRight
+        ? muPhi
+        : {
+            belowPrinted: muPhi,
+            because: 'the closed form assumes that the compression steel yields; it does not',
+          };
+    }),
+  }),
 };
 
 /** Curvature ductility of the doubly reinforced rectangle of MC-10 as the engine finds it, and whether A′s yields. */
-export function parkPaulayPoint(fyKsi: number, shareOfRho: number, rho: number) {
+function parkPaulayPoint(fyKsi: number, shareOfRho: number, rho: number) {
   // psi and in scaled to MPa and mm; ratios do not care. Displaced concrete ignored, as the closed form does.
   const psi = 0.006894757293168361;
   const { flexure, ductility } = evaluateMetric(

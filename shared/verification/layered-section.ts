@@ -29,6 +29,7 @@ export const METRIC_BASIS: DesignBasis = {
   ruleSet: 'aci318m-19',
   barStandard: 'iso',
   esMPa: 200000,
+  fytMPa: 420,
   maxAggregateMm: 19,
   bendAllowance: 'none',
   displacedConcrete: 'deduct',

@@ -1,0 +1,15 @@
+import { BAR_CASES } from './bar-cases.ts';
+import { ELASTIC_CASES } from './elastic-cases.ts';
+import { FLEXURE_CASES } from './flexure-cases.ts';
+import { HAND_WORKED_CASES } from './hand-worked-case.ts';
+import { OPTIMUM_CASES } from './optimum-cases.ts';
+import type { ComputeCase } from './published-case.ts';
+
+/** How each case is computed, by its id. */
+export const COMPUTATIONS: Readonly<Record<string, ComputeCase>> = {
+  ...FLEXURE_CASES,
+  ...ELASTIC_CASES,
+  ...BAR_CASES,
+  ...HAND_WORKED_CASES,
+  ...OPTIMUM_CASES,
+};
