@@ -22,5 +22,15 @@ export const depthMmSchema = bounded('Depth h', 50, 5000, 'mm');
 export const fcMPaSchema = bounded('Concrete strength f′c', 10, 120, 'MPa');
 export const fyMPaSchema = bounded('Yield strength fy', 200, 700, 'MPa');
 export const coverMmSchema = bounded('Clear cover', 0, 200, 'mm');
+/**
+ * Least area of steel, mm²: the thinnest bar there is has 28. Far below one there is no steel to speak of, and strains
+ * come out beyond every number.
+ */
+const LEAST_STEEL_MM2 = 1;
+export const steelAreaSchema = (label: string) =>
+  bounded(label, 0, 1e6, 'mm²').refine(
+    (v) => v === 0 || v >= LEAST_STEEL_MM2,
+    `${label} must be 0, or at least ${LEAST_STEEL_MM2} mm²`,
+  );
 export const momentNmmSchema = bounded('Moment Mu', 0, 1e12, 'N·mm');
 export const idSchema = z.uuid('This is not a known id');

@@ -48,6 +48,13 @@ export const projectSchema = projectInputSchema.extend({
 });
 export type Project = z.infer<typeof projectSchema>;
 
+export const membersInputSchema = z.object({
+  personIds: z
+    .array(idSchema)
+    .min(1, 'A project needs at least one member')
+    .max(500, 'A project takes at most 500 members'),
+});
+
 export const beamInputSchema = z.object({
   mark: nonEmptyText('Mark', 40),
   location: z.string().trim().max(200),

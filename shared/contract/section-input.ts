@@ -8,6 +8,7 @@ import {
   fyMPaSchema,
   momentNmmSchema,
   nonEmptyText,
+  steelAreaSchema,
   widthMmSchema,
 } from './numbers.ts';
 
@@ -39,7 +40,7 @@ const reinforcementSchema = z.discriminatedUnion('kind', [
       .array(
         z.object({
           depthMm: bounded('Layer depth', 0, 5000, 'mm'),
-          areaMm2: bounded('Layer area', 0, 1e6, 'mm²'),
+          areaMm2: steelAreaSchema('Layer area'),
           face: z.enum(FACES),
         }),
       )

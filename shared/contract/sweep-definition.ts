@@ -1,7 +1,15 @@
 import { z } from 'zod';
 import { MEASURE_IDS } from '../engine/measures.ts';
 import type { AxisDefinition, SpaceDefinition, SteelSetsDefinition, View } from '../sweep/problem.ts';
-import { bounded, coverMmSchema, depthMmSchema, fcMPaSchema, fyMPaSchema, widthMmSchema } from './numbers.ts';
+import {
+  bounded,
+  coverMmSchema,
+  depthMmSchema,
+  fcMPaSchema,
+  fyMPaSchema,
+  steelAreaSchema,
+  widthMmSchema,
+} from './numbers.ts';
 import {
   barCountNumberSchema,
   barDesignationSchema,
@@ -61,7 +69,7 @@ const steelSetsSchema = (label: string, isEmptyAllowed: boolean) =>
       z.object({
         kind: z.literal('areas'),
         areasMm2: z
-          .array(bounded(`${label}: area`, 0, 1e6, 'mm²'))
+          .array(steelAreaSchema(`${label}: area`))
           .min(1, `${label}: enter at least one area`)
           .max(5000, `${label}: at most 5000 areas`),
         at: z.union([

@@ -86,6 +86,24 @@ test('what is no section is refused at its field', async () => {
     ]);
 });
 
+test('a layer has steel to speak of or none, so that every number of the answer is one', async () => {
+  const withLayers = (...areasMm2: number[]) => {
+    const layers = areasMm2.map((areaMm2, i) => ({ depthMm: 300 + i, areaMm2, face: 'tension' }));
+    return evaluate({ section: { ...SECTION, reinforcement: { kind: 'layers', layers } } });
+  };
+  const trace = await withLayers(500, 5e-324);
+  expect(trace.body.error.issues).toEqual([
+    {
+      path: ['section', 'reinforcement', 'layers', 1, 'areaMm2'],
+      message: 'Layer area must be 0, or at least 1 mm²',
+    },
+  ]);
+  const least = await withLayers(1, 0);
+  expect(least.status).toBe(200);
+  const { curvatureDuctility } = least.body.evaluation.measures;
+  expect(curvatureDuctility).toBeGreaterThan(0);
+});
+
 test('nobody evaluates on a project that is not theirs', async () => {
   const outsider = await office.as('outsider');
   const body = { section: SECTION, demand, rules, basis: {} };
