@@ -6,7 +6,24 @@ export function elasticSteps({ section, basis, layout, elastic, ruleSet }: Worki
   const above = basis.displacedConcrete === 'ignore' ? 'n' : '(n − 1)';
   const n: Input = ['n', elastic.modularRatio, 'ratio'];
   const kd: Input = ['kd', elastic.crackedAxisMm, 'length'];
+  const b: Input = ['b', section.widthMm, 'length'];
+  const gross: readonly Input[] = [n, b, ['h', section.depthMm, 'length']];
+  const ybar: Input = ['y', elastic.uncrackedAxisMm, 'length'];
   return [
+    step(
+      'uncracked-axis',
+      'elastic',
+      ['y', '(b h²/2 + Σ (n − 1) A d)/(b h + Σ (n − 1) A), uncracked', ybar[1], 'length'],
+      [...gross, ...layerInputs(layout)],
+      STATICS,
+    ),
+    step(
+      'iut',
+      'elastic',
+      ['Iut', 'b h³/12 + b h (h/2 − y)² + Σ (n − 1) A (d − y)²', elastic.uncrackedInertiaMm4, 'inertia'],
+      [...gross, ybar, ...layerInputs(layout)],
+      STATICS,
+    ),
     step(
       'fr',
       'elastic',
@@ -17,7 +34,7 @@ export function elasticSteps({ section, basis, layout, elastic, ruleSet }: Worki
     step(
       'mcr',
       'elastic',
-      ['Mcr', 'fr Iut/yt, transformed section', elastic.crackingMomentNmm, 'moment'],
+      ['Mcr', 'fr Iut/yt, yt = h − y', elastic.crackingMomentNmm, 'moment'],
       [
         ['fr', elastic.ruptureModulusMPa, 'stress'],
         ['Iut', elastic.uncrackedInertiaMm4, 'inertia'],
@@ -29,21 +46,14 @@ export function elasticSteps({ section, basis, layout, elastic, ruleSet }: Worki
       'kd',
       'elastic',
       ['kd', `b kd²/2 + Σ ${above} A (kd − d) = Σ n A (d − kd)`, elastic.crackedAxisMm, 'length'],
-      [n, ['b', section.widthMm, 'length'], ...layerInputs(layout)],
+      [n, b, ...layerInputs(layout)],
       STATICS,
     ),
     step(
       'icr',
       'elastic',
       ['Icr', `b kd³/3 + Σ ${above} A (kd − d)² + Σ n A (d − kd)²`, elastic.crackedInertiaMm4, 'inertia'],
-      [n, ['b', section.widthMm, 'length'], kd, ...layerInputs(layout)],
-      STATICS,
-    ),
-    step(
-      'fc-yield',
-      'elastic',
-      ['fc/f′c at yield', 'Ec φy kd/f′c', elastic.concreteStressShareAtYield, 'ratio'],
-      [['Ec', elastic.ecMPa, 'stress'], kd],
+      [n, b, kd, ...layerInputs(layout)],
       STATICS,
     ),
   ];
@@ -75,6 +85,18 @@ export function ductilitySteps({
       'ductility',
       ['My', 'Ec Icr φy', elastic.yieldMomentNmm, 'moment'],
       [['Ec', elastic.ecMPa, 'stress'], ['Icr', elastic.crackedInertiaMm4, 'inertia'], phiY],
+      STATICS,
+    ),
+    step(
+      'fc-yield',
+      'ductility',
+      ['fc/f′c at yield', 'Ec φy kd/f′c', elastic.concreteStressShareAtYield, 'ratio'],
+      [
+        ['Ec', elastic.ecMPa, 'stress'],
+        phiY,
+        ['kd', elastic.crackedAxisMm, 'length'],
+        ['f′c', section.fcMPa, 'stress'],
+      ],
       STATICS,
     ),
     step(

@@ -1,5 +1,5 @@
 import { leastSteelOf } from './checks.ts';
-import type { QuantityKind, WorkingStep } from './evaluation.ts';
+import type { WorkingStep } from './evaluation.ts';
 import { ductilitySteps, elasticSteps } from './working-elastic.ts';
 import { quantitySteps } from './working-quantities.ts';
 import { layerInputs, STATICS, step, type Input, type WorkingSource } from './working-step.ts';
@@ -99,18 +99,14 @@ function ultimate({ section, layout, flexure, ruleSet }: WorkingSource): Working
       'd',
       'ultimate',
       ['d', 'Σ A d/Σ A of the tension steel', layout.dMm, 'length'],
-      [['h', section.depthMm, 'length'], ...layerInputs(layout, 'tension')],
+      layerInputs(layout, 'tension'),
       STATICS,
     ),
     step(
       'c',
       'ultimate',
-      ['c', 'depth at which C and all layer forces balance', flexure.neutralAxisMm, 'length'],
-      [
-        ['b', section.widthMm, 'length'],
-        ['As', layout.asMm2, 'area'],
-        ['A′s', layout.asPrimeMm2, 'area'],
-      ],
+      ['c', '0.85 f′c b β1 c = ΣT, each T from its own strain; solved for c', c[1], 'length'],
+      [fc, ['b', section.widthMm, 'length'], ['β1', flexure.beta1, 'ratio'], ...layerInputs(layout)],
       STATICS,
     ),
     step(
@@ -135,8 +131,11 @@ function ultimate({ section, layout, flexure, ruleSet }: WorkingSource): Working
     step(
       'residual',
       'ultimate',
-      ['ΣT − C over C', '(ΣT − C)/C', flexure.equilibriumResidual, 'ratio'],
-      [['C', flexure.concreteForceN, 'force']],
+      ['Residual', '(ΣT − C)/C', flexure.equilibriumResidual, 'ratio'],
+      [
+        ['ΣT', flexure.layers.reduce((sum, { forceN }) => sum + forceN, 0), 'force'],
+        ['C', flexure.concreteForceN, 'force'],
+      ],
       STATICS,
     ),
   ];
@@ -200,11 +199,24 @@ function limits(source: WorkingSource): WorkingStep[] {
     clause,
   );
   if (waivedAtMm2 === null || demand.muNmm === null) return [least];
-  const waiver: readonly [string, string, number, QuantityKind] = [
-    'As,waive',
-    '4/3 of the steel Mu requires',
-    waivedAtMm2,
-    'area',
-  ];
-  return [least, step('as-waive', 'limits', waiver, [['Mu', demand.muNmm, 'moment'], ...inputs], clause)];
+  const sigmaMPa = ruleSet.blockStressMPa(section.fcMPa);
+  const waiver = step(
+    'as-waive',
+    'limits',
+    [
+      'As,waive',
+      'k σ b d/fy (1 − √(1 − 2 Mu/(φ σ b d²))), k times the steel Mu requires; σ = 0.85 f′c',
+      waivedAtMm2,
+      'area',
+    ],
+    [
+      ['Mu', demand.muNmm, 'moment'],
+      ['k', ruleSet.leastSteelWaiver, 'ratio'],
+      ['σ', sigmaMPa, 'stress'],
+      ['φ', ruleSet.tensionControlledReduction, 'ratio'],
+      ...inputs.slice(1),
+    ],
+    clause,
+  );
+  return [least, waiver];
 }
