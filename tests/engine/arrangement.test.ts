@@ -4,6 +4,7 @@ import { BARS } from '#shared/engine/bars.ts';
 import { evaluateSection } from '#shared/engine/evaluate.ts';
 import { BAR_STANDARDS, BEND_ALLOWANCES } from '#shared/engine/section.ts';
 import { METRIC_BASIS, NO_DEMAND, NO_RULES } from '#shared/verification/layered-section.ts';
+import { PROPERTIES } from '#shared/verification/properties.ts';
 import { remeasure } from './remeasure.ts';
 
 const randomBars = fc
@@ -43,7 +44,7 @@ const randomBars = fc
   });
 
 describe('arranged bars', () => {
-  it('re-measured from their coordinates never violate a gap, a cover, symmetry or the line of the bars below', () => {
+  it(PROPERTIES['bars-remeasured'].statement, () => {
     let placed = 0;
     fc.assert(
       fc.property(randomBars, ({ basis, maxLayers, section }) => {
@@ -62,12 +63,12 @@ describe('arranged bars', () => {
         expect(arrangement!.bars).toHaveLength(total);
         for (const face of arrangement!.faces) expect(face.layerCounts.length).toBeLessThanOrEqual(maxLayers);
       }),
-      { numRuns: 4000, seed: 25 },
+      { numRuns: PROPERTIES['bars-remeasured'].runs, seed: PROPERTIES['bars-remeasured'].seed },
     );
-    expect(placed).toBeGreaterThan(800);
+    expect(placed).toBeGreaterThanOrEqual(PROPERTIES['bars-remeasured'].atLeast.count);
   });
 
-  it('fit in exactly the width they are said to need, and not in a tenth of a millimetre less', () => {
+  it(PROPERTIES['width-needed'].statement, () => {
     fc.assert(
       fc.property(randomBars, ({ basis, maxLayers, section }) => {
         const rules = { ...NO_RULES, maxLayers };
@@ -84,7 +85,7 @@ describe('arranged bars', () => {
         expect(fitsAt(tension.widthNeededMm)).toBe(true);
         expect(fitsAt(tension.widthNeededMm - 0.1)).toBe(false);
       }),
-      { numRuns: 1500, seed: 26 },
+      { numRuns: PROPERTIES['width-needed'].runs, seed: PROPERTIES['width-needed'].seed },
     );
   });
 });

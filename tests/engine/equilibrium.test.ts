@@ -4,6 +4,7 @@ import { evaluateSection } from '#shared/engine/evaluate.ts';
 import { DISPLACED_CONCRETE, RULE_SET_IDS, type Layer, type SectionInput } from '#shared/engine/section.ts';
 import { RULE_SETS } from '#shared/engine/rules/rule-sets.ts';
 import { METRIC_BASIS, NO_DEMAND, NO_RULES } from '#shared/verification/layered-section.ts';
+import { PROPERTIES } from '#shared/verification/properties.ts';
 
 /** Random sections of one to six layers at any depth, light to over-reinforced. */
 const randomSection = fc
@@ -56,7 +57,7 @@ function unbalanced(
 }
 
 describe('the neutral axis at ultimate', () => {
-  it('balances every section to 1e-9 of the concrete force, and is the deepest axis that does', () => {
+  it(PROPERTIES.equilibrium.statement, () => {
     fc.assert(
       fc.property(
         randomSection,
@@ -83,11 +84,11 @@ describe('the neutral axis at ultimate', () => {
           expect(least).toBeGreaterThan(0);
         },
       ),
-      { numRuns: 1500, seed: 318 },
+      { numRuns: PROPERTIES.equilibrium.runs, seed: PROPERTIES.equilibrium.seed },
     );
-  }, 30_000);
+  });
 
-  it('equals an independent bisection where displaced concrete is ignored', () => {
+  it(PROPERTIES.bisection.statement, () => {
     fc.assert(
       fc.property(randomSection, (section) => {
         const { flexure } = evaluateSection(section, {
@@ -105,7 +106,7 @@ describe('the neutral axis at ultimate', () => {
         }
         expect(flexure.neutralAxisMm / high).toBeCloseTo(1, 10);
       }),
-      { numRuns: 1500, seed: 20 },
+      { numRuns: PROPERTIES.bisection.runs, seed: PROPERTIES.bisection.seed },
     );
   });
 });

@@ -1,8 +1,9 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { evaluateSection } from '#shared/engine/evaluate.ts';
-import { nonNull } from './non-null.ts';
 import { METRIC_BASIS, metricSection, NO_DEMAND, NO_RULES } from '#shared/verification/layered-section.ts';
+import { PROPERTIES, type TestedProperty } from '#shared/verification/properties.ts';
+import { nonNull } from './non-null.ts';
 
 /** Ordinary beams: tension steel of 0.4 to 2.5 %, compression steel to its half. */
 const beam = fc.record({
@@ -43,19 +44,21 @@ function results(printed: Printed, displacedConcrete: 'deduct' | 'ignore' = 'ign
   };
 }
 
+const drawn = ({ runs, seed }: TestedProperty) => ({ numRuns: runs, seed });
+
 const holds = (
-  name: string,
+  property: TestedProperty,
   more: (p: Printed, by: number) => Printed,
   compare: (after: number, before: number) => void,
   of: 'mn' | 'muPhi',
 ) =>
-  it(name, () => {
+  it(property.statement, () => {
     fc.assert(
       fc.property(beam, fc.double({ min: 1.01, max: 1.5, noNaN: true }), (random, by) => {
         const printed = printedOf(random);
         compare(results(more(printed, by))[of], results(printed)[of]);
       }),
-      { numRuns: 500, seed: 7 },
+      drawn(property),
     );
   });
 
@@ -63,9 +66,9 @@ const rises = (after: number, before: number) => expect(after).toBeGreaterThan(b
 const falls = (after: number, before: number) => expect(after).toBeLessThan(before * (1 + 1e-12));
 
 describe('curvature ductility', () => {
-  holds('falls with more tension steel', (p, by) => ({ ...p, As: p.As * by }), falls, 'muPhi');
+  holds(PROPERTIES['ductility-tension-steel'], (p, by) => ({ ...p, As: p.As * by }), falls, 'muPhi');
 
-  it('rises with more compression steel while that steel is above the neutral axis', () => {
+  it(PROPERTIES['ductility-compression-steel'].statement, () => {
     fc.assert(
       fc.property(beam, fc.double({ min: 1.01, max: 1.5, noNaN: true }), (random, by) => {
         const printed = printedOf(random);
@@ -74,11 +77,11 @@ describe('curvature ductility', () => {
         fc.pre(more.c > printed.d2);
         rises(more.muPhi, results(printed).muPhi);
       }),
-      { numRuns: 500, seed: 7 },
+      drawn(PROPERTIES['ductility-compression-steel']),
     );
   });
 
-  it('rises with stronger concrete at the same steel, but for the step of the metric β1 at 55 MPa', () => {
+  it(PROPERTIES['ductility-concrete'].statement, () => {
     fc.assert(
       fc.property(beam, fc.double({ min: 1.01, max: 1.5, noNaN: true }), (random, by) => {
         const printed = printedOf(random);
@@ -86,20 +89,25 @@ describe('curvature ductility', () => {
         fc.pre(stronger < 55 || printed.fc >= 55);
         rises(results({ ...printed, fc: stronger }).muPhi, results(printed).muPhi);
       }),
-      { numRuns: 500, seed: 8 },
+      drawn(PROPERTIES['ductility-concrete']),
     );
   });
 });
 
 describe('nominal strength', () => {
-  holds('rises with width', (p, by) => ({ ...p, b: p.b * by }), rises, 'mn');
-  holds('rises with depth', (p, by) => ({ ...p, h: p.h * by, d: p.d + p.h * (by - 1) }), rises, 'mn');
-  holds('rises with concrete strength', (p, by) => ({ ...p, fc: p.fc * by }), rises, 'mn');
-  holds('rises with tension steel', (p, by) => ({ ...p, As: p.As * by }), rises, 'mn');
+  holds(PROPERTIES['strength-width'], (p, by) => ({ ...p, b: p.b * by }), rises, 'mn');
+  holds(
+    PROPERTIES['strength-depth'],
+    (p, by) => ({ ...p, h: p.h * by, d: p.d + p.h * (by - 1) }),
+    rises,
+    'mn',
+  );
+  holds(PROPERTIES['strength-concrete'], (p, by) => ({ ...p, fc: p.fc * by }), rises, 'mn');
+  holds(PROPERTIES['strength-tension-steel'], (p, by) => ({ ...p, As: p.As * by }), rises, 'mn');
 });
 
 describe('a section', () => {
-  it('does not change when a layer is split in two at the same depth', () => {
+  it(PROPERTIES['split-layer'].statement, () => {
     fc.assert(
       fc.property(beam, (random) => {
         const printed = printedOf(random);
@@ -123,11 +131,11 @@ describe('a section', () => {
           nonNull(split.ductility).curvatureDuctility / nonNull(whole.ductility).curvatureDuctility,
         ).toBeCloseTo(1, 12);
       }),
-      { numRuns: 300, seed: 5 },
+      drawn(PROPERTIES['split-layer']),
     );
   });
 
-  it('is the same beam scaled: twice every length gives eight times Mn and the same μφ', () => {
+  it(PROPERTIES['scaled-section'].statement, () => {
     fc.assert(
       fc.property(beam, (random) => {
         const p = printedOf(random);
@@ -144,7 +152,7 @@ describe('a section', () => {
         expect(two.mn / one.mn).toBeCloseTo(8, 9);
         expect(two.muPhi / one.muPhi).toBeCloseTo(1, 9);
       }),
-      { numRuns: 300, seed: 6 },
+      drawn(PROPERTIES['scaled-section']),
     );
   });
 });

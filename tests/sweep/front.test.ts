@@ -1,6 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { MAX_TIES_KEPT, nonDominated, type Signs } from '#shared/sweep/front.ts';
+import { PROPERTIES } from '#shared/verification/properties.ts';
 
 interface Measured {
   readonly index: number;
@@ -26,7 +27,7 @@ const signs = fc.record({
 });
 
 describe('the front of two measures', () => {
-  it('equals the O(n²) definition on tie-heavy integer grids, in every pair of directions', () => {
+  it(PROPERTIES['naive-front'].statement, () => {
     fc.assert(
       fc.property(tieHeavy, signs, (points, directions) => {
         const front = nonDominated(points, directions);
@@ -40,11 +41,11 @@ describe('the front of two measures', () => {
           expect(vertex.index).toBe(equal[0]);
         }
       }),
-      { numRuns: 3000, seed: 2 },
+      { numRuns: PROPERTIES['naive-front'].runs, seed: PROPERTIES['naive-front'].seed },
     );
   });
 
-  it('does not depend on the order of arrival', () => {
+  it(PROPERTIES['front-order'].statement, () => {
     fc.assert(
       fc.property(
         tieHeavy.chain((points) =>
@@ -55,7 +56,7 @@ describe('the front of two measures', () => {
           expect(nonDominated(shuffled, directions)).toEqual(nonDominated(points, directions));
         },
       ),
-      { numRuns: 1000, seed: 3 },
+      { numRuns: PROPERTIES['front-order'].runs, seed: PROPERTIES['front-order'].seed },
     );
   });
 

@@ -7,6 +7,7 @@ import { mergeChunks } from '#shared/sweep/merge.ts';
 import { prepareSweep } from '#shared/sweep/prepared-sweep.ts';
 import type { View } from '#shared/sweep/problem.ts';
 import { sweepRange } from '#shared/sweep/sweep-range.ts';
+import { PROPERTIES } from '#shared/verification/properties.ts';
 import { randomProblem } from './random-problems.ts';
 
 const view = fc
@@ -27,7 +28,7 @@ const withCuts = fc.tuple(
 );
 
 describe('merging chunks', () => {
-  it('gives the same result and hash however the space is cut and in whatever order the chunks arrive', () => {
+  it(PROPERTIES['merge-cuts'].statement, () => {
     fc.assert(
       fc.property(withCuts, ([problem, axes, shares, salt]) => {
         const prepared = prepareSweep(problem, axes);
@@ -41,11 +42,11 @@ describe('merging chunks', () => {
         expect(finishResult(problem, axes, merged)).toEqual(whole);
         expect(whole.hash).toMatch(/^([0-9a-f]{4}·){3}[0-9a-f]{4}$/);
       }),
-      { numRuns: 150, seed: 11 },
+      { numRuns: PROPERTIES['merge-cuts'].runs, seed: PROPERTIES['merge-cuts'].seed },
     );
-  }, 60_000);
+  });
 
-  it('is associative, commutative, and neutral with nothing', () => {
+  it(PROPERTIES['merge-algebra'].statement, () => {
     fc.assert(
       fc.property(withCuts, ([problem, axes]) => {
         const prepared = prepareSweep(problem, axes);
@@ -61,7 +62,7 @@ describe('merging chunks', () => {
         expect(mergeChunks(emptyChunk(), a)).toEqual(mergeChunks(a, emptyChunk()));
         expect(mergeChunks(a, emptyChunk()).front).toEqual(a.front);
       }),
-      { numRuns: 150, seed: 12 },
+      { numRuns: PROPERTIES['merge-algebra'].runs, seed: PROPERTIES['merge-algebra'].seed },
     );
-  }, 60_000);
+  });
 });

@@ -11,6 +11,7 @@ import { prepareSweep } from '#shared/sweep/prepared-sweep.ts';
 import type { SweepProblem, View } from '#shared/sweep/problem.ts';
 import { sectionAt, spaceSize } from '#shared/sweep/space.ts';
 import { sweepRange } from '#shared/sweep/sweep-range.ts';
+import { PROPERTIES } from '#shared/verification/properties.ts';
 import { remeasure } from '../engine/remeasure.ts';
 import { OFFICE_PROBLEM, OFFICE_SIZE } from './office-problem.ts';
 import { randomProblem } from './random-problems.ts';
@@ -29,7 +30,7 @@ const sum = (counts: readonly { readonly count: number }[]) =>
   counts.reduce((total, { count }) => total + count, 0);
 
 describe('the result of a sweep', () => {
-  it('counts, front, band, best values, density and misses are those of evaluating every section by itself', () => {
+  it(PROPERTIES.outcome.statement, () => {
     fc.assert(
       fc.property(randomProblem, (problem) => {
         const { space, result } = run(problem);
@@ -71,17 +72,17 @@ describe('the result of a sweep', () => {
           expect(index).toBe(feasible[values.indexOf(value)]!.index);
         }
       }),
-      { numRuns: 100, seed: 31 },
+      { numRuns: PROPERTIES.outcome.runs, seed: PROPERTIES.outcome.seed },
     );
-  }, 60_000);
+  });
 
-  it('counts the sections that cannot fit without evaluating them', () => {
+  it(PROPERTIES['cannot-fit'].statement, () => {
     fc.assert(
       fc.property(randomProblem, (problem) => {
         fc.pre(problem.space.tension.kind === 'bars');
         expect(countCannotFit(problem)).toBe(run(problem).result.cannotFit);
       }),
-      { numRuns: 100, seed: 32 },
+      { numRuns: PROPERTIES['cannot-fit'].runs, seed: PROPERTIES['cannot-fit'].seed },
     );
   });
 });
