@@ -1,3 +1,4 @@
+import { beamDemand } from '#shared/contract/beam-demand.ts';
 import { sweepDefinitionSchema, type SweepDefinition } from '#shared/contract/sweep-definition.ts';
 import type { DesignBasis } from '#shared/engine/section.ts';
 import type { ComputePool } from '../compute/pool.ts';
@@ -20,9 +21,8 @@ export async function computeDemoRuns(pool: ComputePool): Promise<DemoRun[]> {
   for (const sweep of DEMO_SWEEPS) {
     const project = DEMO_PROJECTS.find(({ key }) => key === sweep.project)!;
     const beam = project.beams.find(({ mark }) => mark === sweep.beam)!;
-    const { muNmm, ductilityTarget, depthCapMm } = beam;
     const { space, rules, view } = sweep;
-    const demand = { muNmm, ductilityTarget, depthCapMm };
+    const demand = beamDemand(beam);
     // Through the door that everybody's sweeps come in by.
     const definition = sweepDefinitionSchema.parse({ space, rules, view, demand });
     const basis = frozenBasis(project);

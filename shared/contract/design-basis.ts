@@ -50,6 +50,7 @@ export const engineBasisSchema = z.object({
   bendAllowance: z.enum(BEND_ALLOWANCES),
   displacedConcrete: z.enum(DISPLACED_CONCRETE),
   yieldCurvatureAt: z.enum(YIELD_CURVATURE_AT),
+  fytMPa: fyMPaSchema,
   slabMm: bounded('Slab thickness', 0, 2000, 'mm'),
 }) satisfies z.ZodType<Omit<DesignBasis, 'rates'>>;
 
@@ -57,7 +58,6 @@ export const engineBasisSchema = z.object({
 export const designBasisSchema = engineBasisSchema.extend({
   units: z.enum(UNIT_SYSTEMS, { error: 'Choose units' }),
   fyMPa: fyMPaSchema,
-  fytMPa: fyMPaSchema,
   coverMm: coverMmSchema,
 });
 export type ProjectDesignBasis = z.infer<typeof designBasisSchema>;

@@ -33,4 +33,6 @@ export const steelAreaSchema = (label: string) =>
     `${label} must be 0, or at least ${LEAST_STEEL_MM2} mm²`,
   );
 export const momentNmmSchema = bounded('Moment Mu', 0, 1e12, 'N·mm');
+export const shearNSchema = bounded('Shear Vu', 0, 1e9, 'N');
+export const spanMmSchema = bounded('Span', 100, 100_000, 'mm');
 export const idSchema = z.uuid('This is not a known id');

@@ -2,7 +2,15 @@ import { z } from 'zod';
 import type { Evaluation } from '../engine/evaluation.ts';
 import type { ViewResult } from '../sweep/result.ts';
 import { designBasisSchema, fullBasisSchema, priceBookSchema } from './design-basis.ts';
-import { bounded, depthMmSchema, idSchema, momentNmmSchema, nonEmptyText } from './numbers.ts';
+import {
+  bounded,
+  depthMmSchema,
+  idSchema,
+  momentNmmSchema,
+  nonEmptyText,
+  shearNSchema,
+  spanMmSchema,
+} from './numbers.ts';
 import { demandSchema, sectionInputSchema, userRulesSchema } from './section-input.ts';
 import { sweepDefinitionSchema, viewSchema } from './sweep-definition.ts';
 
@@ -58,7 +66,7 @@ export const membersInputSchema = z.object({
 export const beamInputSchema = z.object({
   mark: nonEmptyText('Mark', 40),
   location: z.string().trim().max(200),
-  spanMm: bounded('Span', 100, 100_000, 'mm'),
+  spanMm: spanMmSchema,
   count: z
     .number({ error: 'Count must be a whole number' })
     .int('Count must be a whole number')
@@ -66,7 +74,7 @@ export const beamInputSchema = z.object({
     .max(10_000, 'Count must be at most 10000'),
   muNmm: momentNmmSchema,
   /** Kept with the beam for the shear design; null where not known yet. */
-  vuN: bounded('Shear Vu', 0, 1e9, 'N').nullable(),
+  vuN: shearNSchema.nullable(),
   ductilityTarget: bounded('Ductility target μφ', 0, 100, '').nullable(),
   depthCapMm: depthMmSchema.nullable(),
 });
@@ -147,7 +155,7 @@ export const evaluateInputSchema = z.object({
   demand: demandSchema,
   rules: userRulesSchema,
   /** Override of the project's basis for this one evaluation, e.g. to reproduce a printed example. */
-  basis: designBasisSchema.omit({ units: true, fyMPa: true, fytMPa: true, coverMm: true }).partial(),
+  basis: designBasisSchema.omit({ units: true, fyMPa: true, coverMm: true }).partial(),
 });
 export type EvaluateInput = z.infer<typeof evaluateInputSchema>;
 export const evaluateOutputSchema = z.object({ section: sectionInputSchema, evaluation: evaluationSchema });

@@ -1,5 +1,12 @@
 import { z } from 'zod';
-import { FACES, type Demand, type SectionInput, type Stirrup, type UserRules } from '../engine/section.ts';
+import {
+  FACES,
+  SUPPORTS,
+  type Demand,
+  type SectionInput,
+  type Stirrup,
+  type UserRules,
+} from '../engine/section.ts';
 import {
   bounded,
   coverMmSchema,
@@ -8,6 +15,8 @@ import {
   fyMPaSchema,
   momentNmmSchema,
   nonEmptyText,
+  shearNSchema,
+  spanMmSchema,
   steelAreaSchema,
   widthMmSchema,
 } from './numbers.ts';
@@ -75,6 +84,9 @@ export const demandSchema = z.object({
   muNmm: momentNmmSchema.nullable(),
   ductilityTarget: bounded('Ductility target μφ', 0, 100, '').nullable(),
   depthCapMm: depthMmSchema.nullable(),
+  vuN: shearNSchema.nullable().optional(),
+  spanMm: spanMmSchema.nullable().optional(),
+  support: z.enum(SUPPORTS).nullable().optional(),
 }) satisfies z.ZodType<Demand>;
 
 export const userRulesSchema = z

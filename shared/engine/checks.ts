@@ -1,21 +1,10 @@
 import { getBar } from './bars.ts';
-import type { CheckResult, DuctilityResult, FlexureResult } from './evaluation.ts';
+import { check, type CheckContext } from './check-result.ts';
+import { detailingChecks } from './checks-detailing.ts';
+import type { CheckResult } from './evaluation.ts';
 import { isAtLeastTimes, isAtMostTimes, isSameLength, isWithinLength, requiredSteelMm2 } from './limits.ts';
-import type { RuleSet } from './rules/rule-set.ts';
-import type { BarGroup, DesignBasis, Demand, Reinforcement, SectionInput, UserRules } from './section.ts';
-import type { PlacedSteel, SteelLayout } from './steel-layout.ts';
-
-/** Everything a check may look at. */
-export interface CheckContext {
-  readonly section: SectionInput;
-  readonly basis: DesignBasis;
-  readonly demand: Demand;
-  readonly rules: UserRules;
-  readonly ruleSet: RuleSet;
-  readonly placed: PlacedSteel;
-  readonly flexure: FlexureResult | null;
-  readonly ductility: DuctilityResult | null;
-}
+import type { BarGroup, DesignBasis, Reinforcement, UserRules } from './section.ts';
+import type { SteelLayout } from './steel-layout.ts';
 
 const OFFICE_RULE = 'office rule';
 const PROJECT_TARGET = 'project target';
@@ -34,20 +23,8 @@ export function checksOf(context: CheckContext): readonly CheckResult[] {
     columnWidth(context),
     compressionShare(context),
     barRules(context),
+    ...detailingChecks(context),
   ].filter((check) => check !== null);
-}
-
-const finite = (value: number | null) => (value !== null && Number.isFinite(value) ? value : null);
-
-/** Numbers that are none (0/0, x/0) are shown as none; a pass within the slack of `limits.ts` is a ratio of 1. */
-function check({ passes, capacity, ratio, ...rest }: CheckResult): CheckResult {
-  const shown = finite(ratio);
-  return {
-    ...rest,
-    passes,
-    capacity: finite(capacity),
-    ratio: passes && shown !== null ? Math.min(1, shown) : shown,
-  };
 }
 
 function barFit({ placed, ruleSet }: CheckContext): CheckResult {

@@ -1,7 +1,7 @@
 import type { Measures } from './measures.ts';
 import type { BendAllowance, DisplacedConcrete, Face, RuleSetId, YieldCurvatureAt } from './section.ts';
 
-/** Closed list of checks, in the order they are shown. Bit i of a sweep's failure mask is CHECK_IDS[i]. */
+/** Closed list of checks, in the order they are shown; at most 31, since bit i of a failure mask is CHECK_IDS[i]. */
 export const CHECK_IDS = [
   'bar-fit',
   'hanger-bars',
@@ -14,6 +14,11 @@ export const CHECK_IDS = [
   'column-width',
   'compression-share',
   'bar-rules',
+  'crack-control',
+  'compression-ties',
+  'shear',
+  'stirrup-spacing',
+  'least-depth',
 ] as const;
 export type CheckId = (typeof CHECK_IDS)[number];
 
@@ -68,6 +73,8 @@ export interface FaceArrangement {
   readonly layerCounts: readonly number[];
   /** Least clear gap in any layer, mm; null with fewer than two bars in each. */
   readonly clearGapMm: number | null;
+  /** Largest centre spacing in the layer nearest the face, mm. */
+  readonly largestSpacingMm: number | null;
   readonly requiredGapMm: number;
   /** Least width at which this group would be placed within the allowed layers, mm (exact, not rounded). */
   readonly widthNeededMm: number;

@@ -94,6 +94,8 @@ export interface DesignBasis {
   readonly ruleSet: RuleSetId;
   readonly barStandard: BarStandard;
   readonly esMPa: number;
+  /** Yield strength of the stirrups. */
+  readonly fytMPa: number;
   readonly maxAggregateMm: number;
   readonly bendAllowance: BendAllowance;
   readonly displacedConcrete: DisplacedConcrete;
@@ -103,6 +105,10 @@ export interface DesignBasis {
   readonly rates: Rates | null;
 }
 
+export const SUPPORTS = ['simple', 'one-end-continuous', 'both-ends-continuous', 'cantilever'] as const;
+/** How the span is held, for the least depth. */
+export type Support = (typeof SUPPORTS)[number];
+
 /** What the section must do. Null: not asked, so the check is not listed. */
 export interface Demand {
   /** Factored moment Mu, N·mm, sagging positive. */
@@ -111,6 +117,11 @@ export interface Demand {
   readonly ductilityTarget: number | null;
   /** Largest overall depth h, mm. */
   readonly depthCapMm: number | null;
+  /** Factored shear Vu, N. */
+  readonly vuN?: number | null | undefined;
+  /** Span, mm, and its support: with both, the least depth for deflection is checked. */
+  readonly spanMm?: number | null | undefined;
+  readonly support?: Support | null | undefined;
 }
 
 /** The user's own rules (no code behind them). Null: not asked. */

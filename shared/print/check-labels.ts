@@ -17,6 +17,11 @@ const CHECKS: Readonly<Record<CheckId, CheckLabel>> = {
   'column-width': { name: 'Column width', symbol: 'b' },
   'compression-share': { name: 'Compression share', symbol: 'A′s/As' },
   'bar-rules': { name: 'Bar rules', symbol: '' },
+  'crack-control': { name: 'Crack control', symbol: 's' },
+  'compression-ties': { name: 'Compression ties', symbol: 's' },
+  shear: { name: 'Shear', symbol: 'φVn' },
+  'stirrup-spacing': { name: 'Stirrup spacing', symbol: 's' },
+  'least-depth': { name: 'Least depth', symbol: 'h' },
 };
 
 export const checkLabel = (id: CheckId): CheckLabel => CHECKS[id];

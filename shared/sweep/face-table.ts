@@ -24,6 +24,11 @@ export interface FaceEntry {
   /** Bars; NaN for plain areas. */
   readonly barCount: number;
   readonly breaksBarRules: boolean;
+  /** Largest centre spacing nearest the face; NaN for plain areas and unplaced bars. */
+  readonly largestSpacingMm: number;
+  /** Smallest and largest bar; NaN without bars. */
+  readonly leastBarMm: number;
+  readonly largestBarMm: number;
 }
 
 /** The entry of every set of one face. */
@@ -45,6 +50,7 @@ function barEntry(
   const placed = arrangeFace(face, bars, context);
   const sum = (of: (designation: string, count: number) => number) =>
     bars.reduce((total, { bar, count }) => total + of(bar, count), 0);
+  const diameters = bars.map(({ bar }) => getBar(context.barStandard, bar).diameterMm);
   return {
     fits: placed.report.fits,
     layerCount: placed.layers.length,
@@ -58,6 +64,9 @@ function barEntry(
     kgPerM: sum((bar, count) => count * getBar(context.barStandard, bar).massKgPerM),
     barCount: barTotal(bars),
     breaksBarRules: barRuleBreach(bars, rules) !== null,
+    largestSpacingMm: placed.report.largestSpacingMm ?? NaN,
+    leastBarMm: bars.length > 0 ? Math.min(...diameters) : NaN,
+    largestBarMm: bars.length > 0 ? Math.max(...diameters) : NaN,
   };
 }
 
@@ -78,5 +87,8 @@ function areaEntry({ areaMm2, at }: Extract<SteelSet, { kind: 'area' }>): FaceEn
     kgPerM: hasSteel ? areaMm2 * STEEL_KG_PER_M_PER_MM2 : 0,
     barCount: NaN,
     breaksBarRules: false,
+    largestSpacingMm: NaN,
+    leastBarMm: NaN,
+    largestBarMm: NaN,
   };
 }

@@ -1,5 +1,5 @@
 import { crackedAxisDepth } from '../engine/cracked-section.ts';
-import { CHECK_IDS, type CheckId } from '../engine/evaluation.ts';
+import { barCoverMm } from '../engine/checks-detailing.ts';
 import {
   isAtLeastTimes,
   isAtMostTimes,
@@ -7,11 +7,41 @@ import {
   isWithinLength,
   requiredSteelMm2,
 } from '../engine/limits.ts';
-import { MEASURE_IDS, onGrid, type MeasureId } from '../engine/measures.ts';
+import { MEASURE_IDS, onGrid } from '../engine/measures.ts';
 import { neutralAxisDepth } from '../engine/neutral-axis.ts';
 import { concreteM3PerM, formworkM2PerM } from '../engine/pricing.ts';
+import { designShearN, shearConstantsOf, stirrupSpacingLimitMm } from '../engine/shear.ts';
 import { stirrupKgPerM } from '../engine/stirrup-length.ts';
 import type { FaceEntry } from './face-table.ts';
+import {
+  BAR_FIT,
+  HANGER_BARS,
+  STRENGTH,
+  DUCTILITY,
+  TENSION_STRAIN,
+  LEAST_STEEL,
+  DEPTH_TO_WIDTH,
+  DEPTH_CAP,
+  COLUMN_WIDTH,
+  COMPRESSION_SHARE,
+  BAR_RULES,
+  CRACK_CONTROL,
+  COMPRESSION_TIES,
+  SHEAR,
+  STIRRUP_SPACING,
+  LEAST_DEPTH,
+  STEEL,
+  COST,
+  CO2E,
+  DEPTH,
+  WIDTH,
+  CONCRETE,
+  FORMWORK,
+  MU_PHI,
+  DESIGN_STRENGTH,
+  UTILISATION,
+  BAR_COUNT,
+} from './kernel-places.ts';
 import {
   isAboveTension,
   isPlain,
@@ -23,35 +53,9 @@ import {
 } from './prepared-sweep.ts';
 import type { Tally } from './tally.ts';
 
-const bit = (check: CheckId) => 1 << CHECK_IDS.indexOf(check);
-const BAR_FIT = bit('bar-fit');
-const HANGER_BARS = bit('hanger-bars');
-const STRENGTH = bit('strength');
-const DUCTILITY = bit('curvature-ductility');
-const TENSION_STRAIN = bit('tension-strain');
-const LEAST_STEEL = bit('least-steel');
-const DEPTH_TO_WIDTH = bit('depth-to-width');
-const DEPTH_CAP = bit('depth-cap');
-const COLUMN_WIDTH = bit('column-width');
-const COMPRESSION_SHARE = bit('compression-share');
-const BAR_RULES = bit('bar-rules');
-
-const at = (measure: MeasureId) => MEASURE_IDS.indexOf(measure);
-const STEEL = at('steelKgPerM');
-const COST = at('costPerM');
-const CO2E = at('co2eKgPerM');
-const DEPTH = at('depthMm');
-const WIDTH = at('widthMm');
-const CONCRETE = at('concreteM3PerM');
-const FORMWORK = at('formworkM2PerM');
-const MU_PHI = at('curvatureDuctility');
-const DESIGN_STRENGTH = at('designStrengthNmm');
-const UTILISATION = at('utilisation');
-const BAR_COUNT = at('barCount');
-
 /** Per-section columns, for comparing the hot loop with `evaluateSection`; measures are in rows of MEASURE_IDS. */
 export interface SweepColumns {
-  readonly masks: Uint16Array;
+  readonly masks: Uint32Array;
   readonly measures: Float64Array;
 }
 
@@ -138,7 +142,7 @@ export class Kernel {
     const { problem, ruleSet, space } = this.prepared;
     const { basis, demand, rules } = problem;
     const { tally, recorder, depths, areas, measures, ultimate, cracked } = this;
-    const { maskCounts, depthFeasible, depthEvaluated } = tally;
+    const { depthFeasible, depthEvaluated } = tally;
     const depthsMm = space.depthsMm;
     const widthMm = placement.widthMm;
 
@@ -172,6 +176,19 @@ export class Kernel {
     leastSteelSection.widthMm = widthMm;
     const leastSteelPerMm = ruleSet.leastSteelMm2(leastSteelSection);
     const asMm2 = tension.areaMm2;
+    const { placedMask, tieSpacingMm, leastDepthMm: leastForDeflection } = this.detailing(combination);
+    const vuN = demand.vuN ?? null;
+    const shear =
+      vuN === null
+        ? null
+        : shearConstantsOf(ruleSet.shear, {
+            fcMPa: concrete.fcMPa,
+            widthMm,
+            coverMm: placement.coverMm,
+            stirrup: placement.given,
+            stirrupBar: placement.stirrupBar,
+            fytMPa: basis.fytMPa,
+          });
 
     const nc = compression.layerCount;
     const n = nc + tension.layerCount;
@@ -199,6 +216,8 @@ export class Kernel {
       )
         mask |= DEPTH_TO_WIDTH;
       if (capMm !== null && !isWithinLength(h, capMm)) mask |= DEPTH_CAP;
+      if (!isWithinLength(tieSpacingMm, h)) mask |= COMPRESSION_TIES;
+      if (!isWithinLength(leastForDeflection, h)) mask |= LEAST_DEPTH;
       depthEvaluated[j]!++;
 
       const d = h - offsetOf(tension, h);
@@ -209,7 +228,7 @@ export class Kernel {
       if (nc > 0 && compression.shareOfDepth !== 0) depths[0] = compression.shareOfDepth * h;
       if (!isPlaced) {
         mask |= BAR_FIT;
-        maskCounts[mask]!++;
+        tally.countMask(mask);
         if (recorder) recorder.masks[row.firstIndex + j - recorder.first] = mask;
         continue;
       }
@@ -235,10 +254,15 @@ export class Kernel {
       if (!(epsilonT >= leastStrain)) mask |= TENSION_STRAIN;
       if (!(asMm2 >= leastSteelPerMm * d) && !this.isLeastSteelWaived(asMm2, d, concrete, fyMPa))
         mask |= LEAST_STEEL;
-      maskCounts[mask]!++;
+      mask |= placedMask;
+      if (shear !== null && vuN !== null) {
+        if (!(designShearN(shear, d, asMm2) >= vuN)) mask |= SHEAR;
+        const limitMm = stirrupSpacingLimitMm(shear, vuN, d, asMm2);
+        if (limitMm !== Infinity && !isWithinLength(shear.spacingMm, limitMm)) mask |= STIRRUP_SPACING;
+      }
+      tally.countMask(mask);
 
-      const isRecorded = recorder !== null;
-      if (mask !== 0 && (mask & (mask - 1)) !== 0 && !isRecorded) continue;
+      if (mask !== 0 && (mask & (mask - 1)) !== 0 && recorder === null) continue;
       const stirrupKg = stirrup ? stirrupKgPerM(stirrup, widthMm, h) : 0;
       const netSteel = longitudinalKg + stirrupKg;
       const totalSteel = netSteel + lapsKg + (netSteel + lapsKg) * pricing.wasteShare;
@@ -274,6 +298,33 @@ export class Kernel {
       }
     }
     return feasibleInRow;
+  }
+
+  /** What detailing asks of a combination: a mask for placed bars, and the least depth for ties (their spacing) and deflection. */
+  private detailing({ placement, tension, compression, fyMPa }: Combination) {
+    const { problem, ruleSet } = this.prepared;
+    const { coverMm, stirrupBar, given } = placement;
+    let placedMask = 0;
+    if (tension.largestSpacingMm === tension.largestSpacingMm) {
+      const limitMm = ruleSet.crackSpacingMm(fyMPa, barCoverMm(coverMm, stirrupBar));
+      if (!isWithinLength(tension.largestSpacingMm, limitMm)) placedMask |= CRACK_CONTROL;
+    }
+    // A spacing beyond any depth fails at every depth; none is asked without compression bars.
+    let tieSpacingMm = -Infinity;
+    if (compression.largestBarMm === compression.largestBarMm) {
+      const isTied =
+        given !== null &&
+        stirrupBar !== null &&
+        isWithinLength(ruleSet.leastTieDiameterMm(compression.largestBarMm), stirrupBar.diameterMm) &&
+        isWithinLength(
+          given.spacingMm,
+          Math.min(ruleSet.tieSpacingMm(compression.leastBarMm, stirrupBar.diameterMm), placement.widthMm),
+        );
+      tieSpacingMm = isTied ? given.spacingMm : Infinity;
+    }
+    const { spanMm, support } = problem.demand;
+    const leastDepthMm = spanMm && support ? ruleSet.leastDepthMm(spanMm, support, fyMPa) : -Infinity;
+    return { placedMask, tieSpacingMm, leastDepthMm };
   }
 
   /** As at least 4/3 of the steel Mu requires; asked only where As,min is not met, so it need not be fast. */

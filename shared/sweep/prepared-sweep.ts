@@ -1,9 +1,10 @@
 import { depthNeededMm, leastForStirrupMm, type ArrangementContext } from '../engine/arrangement.ts';
-import { getBar } from '../engine/bars.ts';
+import { getBar, type Bar } from '../engine/bars.ts';
 import { isWithinLength } from '../engine/limits.ts';
 import { pricingFor, type Pricing } from '../engine/pricing.ts';
 import type { RuleSet } from '../engine/rules/rule-set.ts';
 import { RULE_SETS } from '../engine/rules/rule-sets.ts';
+import type { Stirrup } from '../engine/section.ts';
 import { stirrupShape, type StirrupShape } from '../engine/stirrup-length.ts';
 import { faceTable, type FaceEntry } from './face-table.ts';
 import type { Space, SweepProblem, View } from './problem.ts';
@@ -22,6 +23,9 @@ export interface ConcreteConstants {
 /** Bars placed for one width, cover and stirrup. */
 export interface Placement {
   readonly widthMm: number;
+  readonly coverMm: number;
+  readonly given: Stirrup | null;
+  readonly stirrupBar: Bar | null;
   readonly stirrup: StirrupShape | null;
   /** Least width and depth the stirrup can be bent in, mm. */
   readonly leastForStirrupMm: number;
@@ -86,6 +90,9 @@ export function placementAt(prepared: PreparedSweep, combination: number): Place
   };
   const placement = {
     widthMm,
+    coverMm,
+    given: stirrup,
+    stirrupBar,
     stirrup: stirrup && stirrupBar && stirrupShape(stirrupBar, stirrup, coverMm, ruleSet),
     leastForStirrupMm: leastForStirrupMm(coverMm, stirrupBar, ruleSet),
     tension: faceTable('tension', space.tension, context, rules),

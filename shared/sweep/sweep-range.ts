@@ -33,7 +33,7 @@ export function openSweep(prepared: PreparedSweep): SweepSteps {
 /** The same loop with every section's outcome written out: failure mask and measures (NaN where there is no number). */
 export function sweepColumns(prepared: PreparedSweep, from: number, to: number): SweepColumns {
   const columns = {
-    masks: new Uint16Array(to - from),
+    masks: new Uint32Array(to - from),
     measures: new Float64Array((to - from) * MEASURE_IDS.length).fill(NaN),
   };
   forEachRow(prepared, from, to, new Tally(prepared.space, prepared.view), { ...columns, first: from });

@@ -15,8 +15,10 @@ const SIGNS = Float64Array.from(MEASURE_IDS, signOf);
 
 /** Everything the hot loop adds up for one range of indices. Only this file knows how a section's outcome is counted. */
 export class Tally {
-  /** Sections by failure mask; index 0 counts those that meet every check. */
-  readonly maskCounts = new Float64Array(1 << CHECK_COUNT);
+  private evaluated = 0;
+  private feasible = 0;
+  private readonly failed = new Float64Array(CHECK_COUNT);
+  private readonly failedOnly = new Float64Array(CHECK_COUNT);
   readonly widthFeasible: Float64Array;
   readonly widthEvaluated: Float64Array;
   readonly depthFeasible: Float64Array;
@@ -43,6 +45,14 @@ export class Tally {
     this.depthEvaluated = new Float64Array(space.depthsMm.length);
     this.fcFeasible = new Float64Array(space.fcMPa.length);
     this.fcEvaluated = new Float64Array(space.fcMPa.length);
+  }
+
+  /** Every section, by the checks it fails: bit i is CHECK_IDS[i], none is feasible. */
+  countMask(mask: number): void {
+    this.evaluated++;
+    if (mask === 0) this.feasible++;
+    else if ((mask & (mask - 1)) === 0) this.failedOnly[31 - Math.clz32(mask)]!++;
+    for (let rest = mask; rest !== 0; rest &= rest - 1) this.failed[31 - Math.clz32(rest & -rest)]!++;
   }
 
   /** A section that meets every check. Indices arrive ascending, so the first of equal values has the lowest index. */
@@ -77,22 +87,12 @@ export class Tally {
   }
 
   finish(): ChunkResult {
-    const failed = new Float64Array(CHECK_COUNT);
-    const failedOnly = new Float64Array(CHECK_COUNT);
-    let evaluated = 0;
-    this.maskCounts.forEach((count, mask) => {
-      if (count === 0) return;
-      evaluated += count;
-      for (let bit = 0; bit < CHECK_COUNT; bit++) {
-        if (mask & (1 << bit)) failed[bit]! += count;
-        if (mask === 1 << bit) failedOnly[bit]! += count;
-      }
-    });
+    const { evaluated, feasible, failed, failedOnly } = this;
     const { widthFeasible, widthEvaluated, depthFeasible, depthEvaluated, fcFeasible, fcEvaluated } = this;
     const { withoutX, withoutY, withoutIndex, bestValue, bestIndex } = this;
     return {
       evaluated,
-      feasible: this.maskCounts[0]!,
+      feasible,
       failed,
       failedOnly,
       withoutX,

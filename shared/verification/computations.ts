@@ -1,4 +1,5 @@
 import { BAR_CASES } from './bar-cases.ts';
+import { DETAILING_CASES } from './detailing-cases.ts';
 import { ELASTIC_CASES } from './elastic-cases.ts';
 import { FLEXURE_CASES } from './flexure-cases.ts';
 import { HAND_WORKED_CASES } from './hand-worked-case.ts';
@@ -10,6 +11,7 @@ export const COMPUTATIONS: Readonly<Record<string, ComputeCase>> = {
   ...FLEXURE_CASES,
   ...ELASTIC_CASES,
   ...BAR_CASES,
+  ...DETAILING_CASES,
   ...HAND_WORKED_CASES,
   ...OPTIMUM_CASES,
 };

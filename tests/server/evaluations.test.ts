@@ -50,7 +50,7 @@ async function evaluate(body: object) {
 
 test('a typed section is judged on the project’s basis and rates', async () => {
   const { source: _source, ...rates } = PRICE_BOOK;
-  const { units: _units, fyMPa: _fy, fytMPa: _fyt, coverMm: _cover, ...engineBasis } = DESIGN_BASIS;
+  const { units: _units, fyMPa: _fy, coverMm: _cover, ...engineBasis } = DESIGN_BASIS;
   const basis: DesignBasis = { ...engineBasis, rates };
   const answer = await evaluate({});
   expect(answer.status).toBe(200);

@@ -101,7 +101,7 @@ describe('a run', () => {
         ...space,
         width: { kind: 'list', values: [400] },
         depth: { kind: 'list', values: [400] },
-        tension: { kind: 'bars', sizes: ['25'], counts: [2, 3], none: false },
+        tension: { kind: 'bars', sizes: ['25'], counts: [3, 4], none: false },
       },
     });
     const { result } = await finish(run);

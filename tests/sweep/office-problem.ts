@@ -22,6 +22,7 @@ export const OFFICE_PROBLEM: SweepProblem = {
     ruleSet: 'aci318m-19',
     barStandard: 'iso',
     esMPa: 200000,
+    fytMPa: 420,
     maxAggregateMm: 19,
     bendAllowance: 'corner-in-bend',
     displacedConcrete: 'deduct',

@@ -5,6 +5,7 @@ import {
   BEND_ALLOWANCES,
   DISPLACED_CONCRETE,
   RULE_SET_IDS,
+  SUPPORTS,
   YIELD_CURVATURE_AT,
   type Rates,
 } from '#shared/engine/section.ts';
@@ -118,6 +119,7 @@ export const randomProblem: fc.Arbitrary<SweepProblem> = fc
       bendAllowance: fc.constantFrom(...BEND_ALLOWANCES),
       displacedConcrete: fc.constantFrom(...DISPLACED_CONCRETE),
       yieldCurvatureAt: fc.constantFrom(...YIELD_CURVATURE_AT),
+      fytMPa: fc.constantFrom(280, 420, 550),
       slabMm: fc.constantFrom(0, 150),
       rates: orNull(ratesOf(fcMPa)),
     });
@@ -125,6 +127,9 @@ export const randomProblem: fc.Arbitrary<SweepProblem> = fc
       muNmm: orNull(between(0, 9e8)),
       ductilityTarget: orNull(between(1, 12)),
       depthCapMm: orNull(between(300, 900)),
+      vuN: orNull(between(0, 6e5)),
+      spanMm: orNull(between(2000, 12000)),
+      support: orNull(fc.constantFrom(...SUPPORTS)),
     });
     return fc.record({ space, basis, demand, rules: rules(BARS[standard].map((b) => b.designation)) });
   });

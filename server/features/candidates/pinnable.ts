@@ -1,3 +1,4 @@
+import { beamDemand } from '#shared/contract/beam-demand.ts';
 import { eq } from 'drizzle-orm';
 import type { PinInput, Snapshot } from '#shared/contract/records.ts';
 import { InvalidSectionError } from '#shared/engine/preconditions.ts';
@@ -62,11 +63,10 @@ async function snapshotFromRun(
 
 /** On the project's basis of today, for the beam's demands. */
 function snapshotOfTyped(project: ProjectRow, beam: BeamRow, section: SectionInput): Snapshot {
-  const { muNmm, ductilityTarget, depthCapMm } = beam;
   try {
     return takeSnapshot({
       section,
-      demand: { muNmm, ductilityTarget, depthCapMm },
+      demand: beamDemand(beam),
       rules: rulesOfTyped(section),
       basis: frozenBasis(project),
     });

@@ -1,6 +1,8 @@
 import type { RuleSetId } from '../section.ts';
 import { MM_PER_IN, MPA_PER_PSI } from '../units.ts';
+import type { Support } from '../section.ts';
 import type { Clauses, Formulas, RuleSet } from './rule-set.ts';
+import type { ShearRules } from './shear-rules.ts';
 
 /**
  * ACI 318, editions 2014 and 2019, US customary and metric. The editions differ in the strain limits; the metric books
@@ -11,6 +13,9 @@ const EPSILON_CU = 0.003; // 22.2.2.1
 const BLOCK_STRESS_SHARE = 0.85; // 22.2.2.4.1
 const COMPRESSION_CONTROLLED = 0.65; // Table 21.2.2, ties
 const TENSION_CONTROLLED = 0.9; // Table 21.2.2
+const SHEAR_REDUCTION = 0.75; // Table 21.2.1
+/** Steel stress at service of the crack-control rule as a share of fy, 24.3.2.1. */
+const SERVICE_STRESS_SHARE = 2 / 3;
 
 /** The numbers that the US and the metric book round differently. */
 interface Coefficients {
@@ -26,7 +31,27 @@ interface Coefficients {
   readonly hookTailLeastMm: number;
   readonly largestTightBendMm: number;
   readonly formulas: Omit<Formulas, 'strengthReduction'>;
+  /** 24.3.2: s ≤ first/fs − 2.5 cc and second/fs; MPa·mm. */
+  readonly crackSpacing: readonly [number, number];
+  /** Table 9.3.1.1 is for Grade 60 (420): factor 0.4 + fy/base. */
+  readonly leastDepthFyBaseMPa: number;
+  /** Ties of #3 (10M, 10) to this bar, the next size above (25.7.2.2). */
+  readonly lightTie: { readonly upToBarMm: number; readonly lightMm: number; readonly heavyMm: number };
+  readonly shear: Omit<ShearRules, 'concreteWithoutStirrups' | 'stirrupsFromShare'> & {
+    readonly withoutStirrups19: number;
+    readonly stirrupsFromShare19: number;
+  };
 }
+
+const ROOT_PSI = Math.sqrt(MPA_PER_PSI);
+
+/** Span over least depth, Table 9.3.1.1. */
+const SPAN_TO_DEPTH: Readonly<Record<Support, number>> = {
+  simple: 16,
+  'one-end-continuous': 18.5,
+  'both-ends-continuous': 21,
+  cantilever: 8,
+};
 
 const beta1 = (strengthAboveKnee: number) => Math.max(0.65, Math.min(0.85, 0.85 - 0.05 * strengthAboveKnee));
 
@@ -45,6 +70,24 @@ const US: Coefficients = {
     concreteModulus: '57000 √f′c; psi',
     ruptureModulus: '7.5 √f′c; psi',
     leastSteel: 'max(3 √f′c, 200) b d/fy; psi, fy at most 80,000 psi',
+  },
+  crackSpacing: [15 * MM_PER_IN * 40000 * MPA_PER_PSI, 12 * MM_PER_IN * 40000 * MPA_PER_PSI],
+  leastDepthFyBaseMPa: 100000 * MPA_PER_PSI,
+  lightTie: { upToBarMm: 1.27 * MM_PER_IN, lightMm: 0.375 * MM_PER_IN, heavyMm: 0.5 * MM_PER_IN },
+  // √f′c in psi times a coefficient is psi: in MPa the coefficient is times √(MPa per psi)
+  shear: {
+    reduction: SHEAR_REDUCTION,
+    concrete: 2 * ROOT_PSI,
+    withoutStirrups19: 8 * ROOT_PSI,
+    sizeDepthMm: 10 * MM_PER_IN,
+    largestRootFc: 100 * ROOT_PSI,
+    largestStirrupShare: 8 * ROOT_PSI,
+    closeSpacingShare: 4 * ROOT_PSI,
+    stirrupsFromShare19: ROOT_PSI,
+    leastStirrupRoot: 0.75 * ROOT_PSI,
+    leastStirrupFloorMPa: 50 * MPA_PER_PSI,
+    fytCapMPa: 60000 * MPA_PER_PSI,
+    longestSpacingMm: 24 * MM_PER_IN,
   },
 };
 
@@ -65,6 +108,23 @@ const METRIC: Coefficients = {
     ruptureModulus: '0.62 √f′c; MPa',
     leastSteel: 'max(0.25 √f′c, 1.4) b d/fy; MPa, fy at most 550 MPa',
   },
+  crackSpacing: [380 * 280, 300 * 280],
+  leastDepthFyBaseMPa: 700,
+  lightTie: { upToBarMm: 32.3, lightMm: 9.5, heavyMm: 12.7 },
+  shear: {
+    reduction: SHEAR_REDUCTION,
+    concrete: 0.17,
+    withoutStirrups19: 0.66,
+    sizeDepthMm: 250,
+    largestRootFc: 8.3,
+    largestStirrupShare: 0.66,
+    closeSpacingShare: 0.33,
+    stirrupsFromShare19: 0.083,
+    leastStirrupRoot: 0.062,
+    leastStirrupFloorMPa: 0.35,
+    fytCapMPa: 420,
+    longestSpacingMm: 600,
+  },
 };
 
 const clausesOf = (book: string): Clauses => ({
@@ -77,6 +137,11 @@ const clausesOf = (book: string): Clauses => ({
   leastSteel: `${book} 9.6.1.2, 9.6.1.3`,
   barSpacing: `${book} 25.2.1, 25.2.2`,
   hangers: `${book} 25.7.1.2`,
+  crackControl: `${book} 24.3.2`,
+  compressionTies: `${book} 9.7.6.4, 25.7.2`,
+  shear: `${book} 22.5`,
+  stirrupSpacing: `${book} 9.6.3, 9.7.6.2.2`,
+  leastDepth: `${book} Table 9.3.1.1`,
 });
 
 interface Edition {
@@ -117,6 +182,23 @@ export function aci318({ id, year, isMetric }: Edition): RuleSet {
     // Table 25.3.2: inside bend diameter 4 db to #5 / 16 mm, 6 db above
     bendRadiusMm: (ds) => (ds <= c.largestTightBendMm + 0.01 ? 2 * ds : 3 * ds),
     hookTailMm: (ds) => Math.max(6 * ds, c.hookTailLeastMm),
+    crackSpacingMm(fyMPa, clearCoverMm) {
+      const serviceStress = SERVICE_STRESS_SHARE * fyMPa;
+      return Math.min(
+        c.crackSpacing[0] / serviceStress - 2.5 * clearCoverMm,
+        c.crackSpacing[1] / serviceStress,
+      );
+    },
+    tieSpacingMm: (barDiameterMm, stirrupDiameterMm) => Math.min(16 * barDiameterMm, 48 * stirrupDiameterMm),
+    leastTieDiameterMm: (barDiameterMm) =>
+      barDiameterMm <= c.lightTie.upToBarMm + 0.01 ? c.lightTie.lightMm : c.lightTie.heavyMm,
+    leastDepthMm: (spanMm, support, fyMPa) =>
+      (spanMm / SPAN_TO_DEPTH[support]) * (0.4 + fyMPa / c.leastDepthFyBaseMPa),
+    shear: {
+      ...c.shear,
+      concreteWithoutStirrups: year === '19' ? c.shear.withoutStirrups19 : null,
+      stirrupsFromShare: year === '19' ? c.shear.stirrupsFromShare19 : null,
+    },
     clauses: clausesOf(book),
     formulas: {
       ...c.formulas,

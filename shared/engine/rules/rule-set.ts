@@ -1,4 +1,5 @@
-import type { RuleSetId } from '../section.ts';
+import type { RuleSetId, Support } from '../section.ts';
+import type { ShearRules } from './shear-rules.ts';
 
 /** Clause and edition printed beside each result. */
 export interface Clauses {
@@ -11,6 +12,11 @@ export interface Clauses {
   readonly leastSteel: string;
   readonly barSpacing: string;
   readonly hangers: string;
+  readonly crackControl: string;
+  readonly compressionTies: string;
+  readonly shear: string;
+  readonly stirrupSpacing: string;
+  readonly leastDepth: string;
 }
 
 /** The rule as its book prints it, in the book's units, for the working shown beside a result. */
@@ -59,6 +65,15 @@ export interface RuleSet {
   bendRadiusMm(stirrupDiameterMm: number): number;
   /** Straight end of a 135° stirrup hook. */
   hookTailMm(stirrupDiameterMm: number): number;
+  /** Largest centre spacing of the tension bars nearest the face, for clear cover cc to them. */
+  crackSpacingMm(fyMPa: number, clearCoverMm: number): number;
+  /** Largest spacing of stirrups that tie compression bars: 16 bar and 48 stirrup diameters; the least side bounds it too. */
+  tieSpacingMm(barDiameterMm: number, stirrupDiameterMm: number): number;
+  /** Least stirrup diameter that ties a bar of that diameter. */
+  leastTieDiameterMm(barDiameterMm: number): number;
+  /** Least overall depth where deflections are not computed. */
+  leastDepthMm(spanMm: number, support: Support, fyMPa: number): number;
+  readonly shear: ShearRules;
   readonly clauses: Clauses;
   readonly formulas: Formulas;
 }

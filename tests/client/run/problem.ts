@@ -5,6 +5,7 @@ export const BASIS = {
   ruleSet: 'aci318m-19',
   barStandard: 'iso',
   esMPa: 200_000,
+  fytMPa: 420,
   maxAggregateMm: 20,
   bendAllowance: 'corner-in-bend',
   displacedConcrete: 'deduct',

@@ -1,3 +1,4 @@
+import { beamDemand } from '#shared/contract/beam-demand.ts';
 import { describe, expect, it } from 'vitest';
 import { MM_PER_IN } from '#shared/engine/units.ts';
 import { spaceSize } from '#shared/sweep/space.ts';
@@ -93,7 +94,8 @@ describe('a new sweep', () => {
   it('can be run as it opens, from the design basis and the beam’s demand', () => {
     const definition = definitionOf(FIRST);
     expect(spaceSize(definition.space)).toBe(5 * 19 * 3 * 28 * 13);
-    expect(definition.demand).toEqual({ muNmm: BEAM.muNmm, ductilityTarget: 6, depthCapMm: BEAM.depthCapMm });
+    expect(definition.demand).toEqual(beamDemand(BEAM));
+    expect(definition.demand.muNmm).toBe(BEAM.muNmm);
     expect(definition.space.fy).toEqual({
       kind: 'list',
       values: [expect.closeTo(PROJECT.designBasis.fyMPa, 6)],

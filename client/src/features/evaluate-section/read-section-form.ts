@@ -54,6 +54,9 @@ export function readSectionForm(form: SectionFormValues): SectionFormReading {
       muNmm: form.muNmm,
       ductilityTarget: form.ductilityTarget,
       depthCapMm: form.depthCapMm,
+      vuN: form.vuN,
+      spanMm: form.spanMm,
+      support: form.support,
     },
     rules: {
       minDepthToWidth: null,

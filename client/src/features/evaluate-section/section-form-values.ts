@@ -1,9 +1,11 @@
 import type { ProjectDesignBasis } from '#shared/contract/design-basis.ts';
 import type {
   BendAllowance,
+  Demand,
   DisplacedConcrete,
   Face,
   SectionInput,
+  Support,
   YieldCurvatureAt,
 } from '#shared/engine/section.ts';
 import { barsText } from '#shared/print/section-text.ts';
@@ -34,6 +36,9 @@ export interface SectionFormValues {
   readonly muNmm: number | null;
   readonly ductilityTarget: number | null;
   readonly depthCapMm: number | null;
+  readonly vuN: number | null;
+  readonly spanMm: number | null;
+  readonly support: Support | null;
   readonly displacedConcrete: DisplacedConcrete;
   readonly yieldCurvatureAt: YieldCurvatureAt;
   readonly bendAllowance: BendAllowance;
@@ -63,6 +68,9 @@ export function firstSectionForm(basis: ProjectDesignBasis): SectionFormValues {
     muNmm: null,
     ductilityTarget: null,
     depthCapMm: null,
+    vuN: null,
+    spanMm: null,
+    support: null,
     displacedConcrete: basis.displacedConcrete,
     yieldCurvatureAt: basis.yieldCurvatureAt,
     bendAllowance: basis.bendAllowance,
@@ -71,7 +79,7 @@ export function firstSectionForm(basis: ProjectDesignBasis): SectionFormValues {
 
 interface GivenSection {
   readonly section: SectionInput;
-  readonly demand: Pick<SectionFormValues, 'muNmm' | 'ductilityTarget' | 'depthCapMm'>;
+  readonly demand: Demand;
   readonly maxLayers: number;
 }
 
@@ -85,6 +93,9 @@ export function sectionForm(
   return {
     ...firstSectionForm(basis),
     ...demand,
+    vuN: demand.vuN ?? null,
+    spanMm: demand.spanMm ?? null,
+    support: demand.support ?? null,
     maxLayers,
     widthMm: section.widthMm,
     depthMm: section.depthMm,

@@ -1,6 +1,8 @@
 import { useMemo, useRef, useState, type ReactNode } from 'react';
 import type { Project, EvaluateInput } from '#shared/contract/records.ts';
 import { BARS } from '#shared/engine/bars.ts';
+import type { Support } from '#shared/engine/section.ts';
+import { SUPPORT_OPTIONS } from '#client/src/lib/support-options.ts';
 import { messageOf } from '#client/src/lib/api-error.ts';
 import { errorsByField, errorUnder, issuesOf } from '#client/src/lib/field-errors.ts';
 import { Button } from '#client/src/ui/button.tsx';
@@ -156,6 +158,15 @@ export function SectionForm({ project, initial, isBusy, refusal, onEdit, onEvalu
           {number('muNmm', 'Moment Mu', 'moment', 'demand.muNmm')}
           {number('ductilityTarget', 'Ductility μφ at least', 'ratio', 'demand.ductilityTarget')}
           {number('depthCapMm', 'Depth h at most', 'length', 'demand.depthCapMm')}
+          {number('vuN', 'Shear Vu', 'force', 'demand.vuN')}
+          {number('spanMm', 'Span', 'length', 'demand.spanMm')}
+          <SelectField
+            label="Span is held"
+            options={SUPPORT_OPTIONS}
+            value={form.support ?? ''}
+            error={errors.get('demand.support')}
+            onChange={(event) => change({ support: (event.target.value || null) as Support | null })}
+          />
         </div>
       </Part>
       <Part title="Conventions">

@@ -15,6 +15,8 @@ export function checkWords(
     return `φMn ≥ ${formatQuantity(demand.muNmm, 'moment', units)}`;
   if (check === 'curvature-ductility' && demand.ductilityTarget !== null)
     return `μφ ≥ ${formatQuantity(demand.ductilityTarget, 'count', units)}`;
+  if (check === 'shear' && typeof demand.vuN === 'number')
+    return `φVn ≥ ${formatQuantity(demand.vuN, 'force', units)}`;
   if (check === 'depth-cap' && demand.depthCapMm !== null) return `h ≤ ${length(demand.depthCapMm)}`;
   if (check === 'column-width' && rules.columnWidthMm !== null) return `b = ${length(rules.columnWidthMm)}`;
   if (check === 'compression-share' && rules.minCompressionShare !== null)

@@ -36,6 +36,7 @@ export function FrozenInputs({
           { label: 'Mu', value: asked(demand.muNmm, 'moment') },
           { label: 'μφ at least', value: asked(demand.ductilityTarget, 'count') },
           { label: 'h at most', value: asked(demand.depthCapMm, 'length') },
+          { label: 'Vu', value: asked(demand.vuN ?? null, 'force') },
         ]}
       />
       <KeyValue

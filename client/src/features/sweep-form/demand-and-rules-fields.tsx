@@ -1,6 +1,8 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
-import type { BarStandard } from '#shared/engine/section.ts';
+import type { BarStandard, Support } from '#shared/engine/section.ts';
+import { SUPPORT_OPTIONS } from '#client/src/lib/support-options.ts';
 import { CheckboxField } from '#client/src/ui/checkbox-field.tsx';
+import { SelectField } from '#client/src/ui/select-field.tsx';
 import { NumberField } from '#client/src/ui/number-field.tsx';
 import { BarRack } from './bar-rack.tsx';
 import { errorUnder, type FieldErrors } from '#client/src/lib/field-errors.ts';
@@ -43,6 +45,32 @@ export function DemandFields({ units, values, errors, onChange }: PartProps<Swee
         value={values.depthCapMm}
         error={errors.get('demand.depthCapMm')}
         onChange={(depthCapMm) => onChange({ ...values, depthCapMm })}
+      />
+      <NumberField
+        label="Shear Vu"
+        hint="empty: not asked for"
+        kind="force"
+        units={units}
+        value={values.vuN ?? null}
+        error={errors.get('demand.vuN')}
+        onChange={(vuN) => onChange({ ...values, vuN })}
+      />
+      <NumberField
+        label="Span"
+        hint="for the least depth"
+        kind="length"
+        units={units}
+        value={values.spanMm ?? null}
+        error={errors.get('demand.spanMm')}
+        onChange={(spanMm) => onChange({ ...values, spanMm })}
+      />
+      <SelectField
+        label="Span is held"
+        hint="for the least depth"
+        options={SUPPORT_OPTIONS}
+        value={values.support ?? ''}
+        error={errors.get('demand.support')}
+        onChange={(event) => onChange({ ...values, support: (event.target.value || null) as Support | null })}
       />
     </div>
   );

@@ -53,7 +53,7 @@ export function estimatedMs(sections: number, runs: readonly RunSummary[]): numb
 
 /** What the engine is asked while typing: the definition on the project's basis as it stands now. */
 export function problemOf(project: Project, definition: SweepDefinition): SweepProblem {
-  const { units: _units, fyMPa: _fy, fytMPa: _fyt, coverMm: _cover, ...basis } = project.designBasis;
+  const { units: _units, fyMPa: _fy, coverMm: _cover, ...basis } = project.designBasis;
   const { space, demand, rules } = definition;
   return { space, demand, rules, basis: { ...basis, rates: project.priceBook } };
 }

@@ -1,3 +1,4 @@
+import { beamDemand } from '#shared/contract/beam-demand.ts';
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Beam, Project, Sweep } from '#shared/contract/records.ts';
 import type { BarStandard } from '#shared/engine/section.ts';
@@ -87,11 +88,7 @@ export function firstSweepForm(project: Project, beam: Beam): SweepFormValues {
       tension: bars(first.tension, '2–8', false, units),
       compression: bars(first.compression, '2–4', true, units),
     },
-    demand: {
-      muNmm: beam.muNmm,
-      ductilityTarget: beam.ductilityTarget,
-      depthCapMm: beam.depthCapMm,
-    },
+    demand: beamDemand(beam),
     rules: {
       minDepthToWidth: null,
       maxDepthToWidth: null,

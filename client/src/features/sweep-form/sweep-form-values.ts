@@ -1,4 +1,5 @@
 import type { MeasureId } from '#shared/engine/measures.ts';
+import type { Support } from '#shared/engine/section.ts';
 
 /** One axis as typed. Numbers are SI; null is an empty field, NaN text that is not a number. */
 export interface AxisValues {
@@ -49,6 +50,9 @@ export interface SweepFormValues {
     readonly muNmm: number | null;
     readonly ductilityTarget: number | null;
     readonly depthCapMm: number | null;
+    readonly vuN?: number | null | undefined;
+    readonly spanMm?: number | null | undefined;
+    readonly support?: Support | null | undefined;
   };
   readonly rules: {
     readonly minDepthToWidth: number | null;

@@ -1,0 +1,154 @@
+import { getBar, type Bar } from './bars.ts';
+import { check, type CheckContext } from './check-result.ts';
+import type { CheckResult } from './evaluation.ts';
+import { isWithinLength } from './limits.ts';
+import { designShearN, shearConstantsOf, stirrupSpacingLimitMm } from './shear.ts';
+
+/** Crack control, ties, shear and least depth, in the order of CHECK_IDS; those that do not apply are null. */
+export function detailingChecks(context: CheckContext): readonly (CheckResult | null)[] {
+  return [
+    crackControl(context),
+    compressionTies(context),
+    shear(context),
+    stirrupSpacing(context),
+    leastDepth(context),
+  ];
+}
+
+function stirrupBarOf({ section, basis }: CheckContext): Bar | null {
+  return section.stirrup && getBar(basis.barStandard, section.stirrup.bar, ['stirrup', 'bar']);
+}
+
+/** Clear cover to the longitudinal bars, mm. */
+export const barCoverMm = (coverMm: number, stirrupBar: Bar | null) =>
+  coverMm + (stirrupBar?.diameterMm ?? 0);
+
+function crackControl(context: CheckContext): CheckResult | null {
+  const { placed, section, ruleSet } = context;
+  const spacingMm = placed.layout && placed.arrangement?.faces[0]?.largestSpacingMm;
+  if (spacingMm === null || spacingMm === undefined) return null;
+  const limitMm = ruleSet.crackSpacingMm(section.fyMPa, barCoverMm(section.coverMm, stirrupBarOf(context)));
+  return check({
+    id: 'crack-control',
+    passes: isWithinLength(spacingMm, limitMm),
+    demand: spacingMm,
+    capacity: limitMm,
+    ratio: limitMm > 0 ? spacingMm / limitMm : null,
+    kind: 'length',
+    clause: ruleSet.clauses.crackControl,
+    reason: 'centre spacing of the bars nearest the tension face, fs = 2/3 fy',
+  });
+}
+
+function compressionTies(context: CheckContext): CheckResult | null {
+  const { section, basis, ruleSet } = context;
+  const { reinforcement, stirrup } = section;
+  if (reinforcement.kind === 'layers' || reinforcement.compression.length === 0) return null;
+  const diameters = reinforcement.compression.map(({ bar }) => getBar(basis.barStandard, bar).diameterMm);
+  const tie = stirrupBarOf(context);
+  const base = { id: 'compression-ties', kind: 'length', clause: ruleSet.clauses.compressionTies } as const;
+  if (!stirrup || !tie)
+    return check({
+      ...base,
+      passes: false,
+      demand: null,
+      capacity: null,
+      ratio: null,
+      reason: 'no stirrups tie the compression bars',
+    });
+  const leastTieMm = ruleSet.leastTieDiameterMm(Math.max(...diameters));
+  if (!isWithinLength(leastTieMm, tie.diameterMm))
+    return check({
+      ...base,
+      passes: false,
+      demand: leastTieMm,
+      capacity: tie.diameterMm,
+      ratio: leastTieMm / tie.diameterMm,
+      reason: 'diameter of stirrup that ties bars of this size',
+    });
+  const limitMm = Math.min(
+    ruleSet.tieSpacingMm(Math.min(...diameters), tie.diameterMm),
+    section.widthMm,
+    section.depthMm,
+  );
+  return check({
+    ...base,
+    passes: isWithinLength(stirrup.spacingMm, limitMm),
+    demand: stirrup.spacingMm,
+    capacity: limitMm,
+    ratio: stirrup.spacingMm / limitMm,
+    reason: 'stirrup spacing within 16 bar and 48 stirrup diameters and the least side',
+  });
+}
+
+function shearOf(context: CheckContext) {
+  const { section, basis, demand, ruleSet, placed } = context;
+  const vuN = demand.vuN ?? null;
+  if (vuN === null || !placed.layout) return null;
+  const constants = shearConstantsOf(ruleSet.shear, {
+    fcMPa: section.fcMPa,
+    widthMm: section.widthMm,
+    coverMm: section.coverMm,
+    stirrup: section.stirrup,
+    stirrupBar: stirrupBarOf(context),
+    fytMPa: basis.fytMPa,
+  });
+  return { vuN, constants, dMm: placed.layout.dMm, asMm2: placed.layout.asMm2 };
+}
+
+function shear(context: CheckContext): CheckResult | null {
+  const state = shearOf(context);
+  if (!state) return null;
+  const capacity = designShearN(state.constants, state.dMm, state.asMm2);
+  return check({
+    id: 'shear',
+    passes: capacity >= state.vuN,
+    demand: state.vuN,
+    capacity,
+    ratio: state.vuN / capacity,
+    kind: 'force',
+    clause: context.ruleSet.clauses.shear,
+    reason: 'φVn ≥ Vu with the stirrups given, Vs counted to the section limit',
+  });
+}
+
+function stirrupSpacing(context: CheckContext): CheckResult | null {
+  const state = shearOf(context);
+  if (!state) return null;
+  const limitMm = stirrupSpacingLimitMm(state.constants, state.vuN, state.dMm, state.asMm2);
+  const { spacingMm } = state.constants;
+  const hasNumbers = spacingMm < Infinity && limitMm > 0 && limitMm < Infinity;
+  const reason = {
+    none: 'Vu asks for no stirrups',
+    missing: context.section.stirrup
+      ? 'stirrup legs stand too far apart across the width'
+      : 'Vu asks for stirrups',
+    numbers: 'stirrup spacing along the beam, and Av,min',
+  }[limitMm === Infinity ? 'none' : limitMm === 0 ? 'missing' : 'numbers'];
+  return check({
+    id: 'stirrup-spacing',
+    passes: limitMm === Infinity || isWithinLength(spacingMm, limitMm),
+    demand: hasNumbers ? spacingMm : null,
+    capacity: hasNumbers ? limitMm : null,
+    ratio: hasNumbers ? spacingMm / limitMm : null,
+    kind: 'length',
+    clause: context.ruleSet.clauses.stirrupSpacing,
+    reason,
+  });
+}
+
+function leastDepth({ section, demand, ruleSet }: CheckContext): CheckResult | null {
+  const { spanMm, support } = demand;
+  if (!spanMm || !support) return null;
+  const leastMm = ruleSet.leastDepthMm(spanMm, support, section.fyMPa);
+  return check({
+    id: 'least-depth',
+    passes: isWithinLength(leastMm, section.depthMm),
+    demand: leastMm,
+    capacity: section.depthMm,
+    ratio: leastMm / section.depthMm,
+    kind: 'length',
+    clause: ruleSet.clauses.leastDepth,
+    reason: 'least depth where deflections are not computed, nothing attached that they could damage',
+  });
+}
