@@ -15,7 +15,7 @@ export function detailingChecks(context: CheckContext): readonly (CheckResult | 
   ];
 }
 
-function stirrupBarOf({ section, basis }: CheckContext): Bar | null {
+export function stirrupBarOf({ section, basis }: Pick<CheckContext, 'section' | 'basis'>): Bar | null {
   return section.stirrup && getBar(basis.barStandard, section.stirrup.bar, ['stirrup', 'bar']);
 }
 
@@ -81,7 +81,8 @@ function compressionTies(context: CheckContext): CheckResult | null {
   });
 }
 
-function shearOf(context: CheckContext) {
+/** Vu with everything shear needs; null where Vu is not asked or the bars are not placed. */
+export function shearOf(context: Pick<CheckContext, 'section' | 'basis' | 'demand' | 'ruleSet' | 'placed'>) {
   const { section, basis, demand, ruleSet, placed } = context;
   const vuN = demand.vuN ?? null;
   if (vuN === null || !placed.layout) return null;

@@ -58,7 +58,18 @@ export function evaluateSection(section: SectionInput, context: EvaluationContex
     quantities,
     working:
       layout && flexure && elastic && ductility
-        ? workingOf({ section, basis, demand, ruleSet, layout, flexure, elastic, ductility, quantities })
+        ? workingOf({
+            section,
+            basis,
+            demand,
+            ruleSet,
+            layout,
+            flexure,
+            elastic,
+            ductility,
+            quantities,
+            placed,
+          })
         : [],
     notChecked: NOT_CHECKED,
   };

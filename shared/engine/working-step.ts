@@ -8,7 +8,7 @@ import type {
 } from './evaluation.ts';
 import type { RuleSet } from './rules/rule-set.ts';
 import type { DesignBasis, Demand, Face, SectionInput } from './section.ts';
-import type { SteelLayout } from './steel-layout.ts';
+import type { PlacedSteel, SteelLayout } from './steel-layout.ts';
 
 /** Results whose working is written out. */
 export interface WorkingSource {
@@ -21,6 +21,7 @@ export interface WorkingSource {
   readonly elastic: ElasticResult;
   readonly ductility: DuctilityResult;
   readonly quantities: Quantities;
+  readonly placed: PlacedSteel;
 }
 
 /** A number put into a formula. */

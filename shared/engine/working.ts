@@ -1,5 +1,6 @@
 import { leastSteelOf } from './checks.ts';
 import type { WorkingStep } from './evaluation.ts';
+import { detailingSteps } from './working-detailing.ts';
 import { ductilitySteps, elasticSteps } from './working-elastic.ts';
 import { quantitySteps } from './working-quantities.ts';
 import { layerInputs, STATICS, step, type Input, type WorkingSource } from './working-step.ts';
@@ -11,6 +12,7 @@ export function workingOf(source: WorkingSource): readonly WorkingStep[] {
     ...ultimate(source),
     ...strength(source),
     ...limits(source),
+    ...detailingSteps(source),
     ...elasticSteps(source),
     ...ductilitySteps(source),
     ...quantitySteps(source),

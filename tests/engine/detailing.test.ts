@@ -145,3 +145,34 @@ describe('least depth', () => {
     expect(checkOf('least-depth', { demand: { spanMm: 8000 } })).toBeUndefined();
   });
 });
+
+describe('the working', () => {
+  it('writes shear, crack control and least depth out where they are asked, with the values the checks use', () => {
+    const section: SectionInput = {
+      widthMm: 300,
+      depthMm: 500,
+      fcMPa: 30,
+      fyMPa: 420,
+      coverMm: 40,
+      stirrup: { bar: '10', legs: 2, spacingMm: 150 },
+      reinforcement: {
+        kind: 'bars',
+        tension: [{ bar: '25', count: 3 }],
+        compression: [{ bar: '16', count: 2 }],
+      },
+    };
+    const { working, checks } = evaluateSection(section, {
+      basis: METRIC_BASIS,
+      demand: { ...NO_DEMAND, vuN: 150e3, spanMm: 7000, support: 'simple' },
+      rules: NO_RULES,
+    });
+    const valueOf = (id: string) => working.find((line) => line.id === id)!.value;
+    const checkOf = (id: CheckId) => checks.find((check) => check.id === id)!;
+    expect(valueOf('phi-vn')).toBe(checkOf('shear').capacity);
+    expect(valueOf('vc') / 1000).toBeCloseTo(122.21, 1);
+    expect(valueOf('vs') / 1000).toBeCloseTo(192.42, 1);
+    expect(valueOf('stirrup-spacing')).toBe(checkOf('stirrup-spacing').capacity);
+    expect(valueOf('crack-spacing')).toBe(checkOf('crack-control').capacity);
+    expect(valueOf('least-depth')).toBe(checkOf('least-depth').demand);
+  });
+});

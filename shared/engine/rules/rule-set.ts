@@ -26,6 +26,10 @@ export interface Formulas {
   readonly ruptureModulus: string;
   readonly leastSteel: string;
   readonly strengthReduction: string;
+  readonly crackSpacing: string;
+  readonly concreteShear: string;
+  readonly concreteShearWithoutStirrups: string;
+  readonly leastDepth: string;
 }
 
 /**
