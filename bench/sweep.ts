@@ -25,6 +25,12 @@ const ALL_FIT: SweepProblem = {
   rules: { ...OFFICE.rules, minDepthToWidth: null },
 };
 
+/** Every check there is: shear, stirrup spacing and least depth too. */
+const EVERY_CHECK: SweepProblem = {
+  ...ALL_FIT,
+  demand: { ...ALL_FIT.demand, depthCapMm: 790, vuN: 250e3, spanMm: 7000, support: 'simple' },
+};
+
 function hotLoop(name: string, problem: SweepProblem): void {
   const prepared = prepareSweep(problem, VIEW);
   const { size } = prepared.space;
@@ -47,6 +53,7 @@ function hotLoop(name: string, problem: SweepProblem): void {
 
 hotLoop('hot loop, office sweep', OFFICE);
 hotLoop('hot loop, every bar set fits', ALL_FIT);
+hotLoop('the same with Vu, span and support', EVERY_CHECK);
 
 const prepared = prepareSweep(OFFICE, VIEW);
 const { size } = prepared.space;

@@ -2,7 +2,7 @@ import { getBar, type Bar } from './bars.ts';
 import { check, type CheckContext } from './check-result.ts';
 import type { CheckResult } from './evaluation.ts';
 import { isWithinLength } from './limits.ts';
-import { designShearN, shearConstantsOf, stirrupSpacingLimitMm } from './shear.ts';
+import { concreteShearN, designShearN, shearConstantsOf, stirrupSpacingLimitMm } from './shear.ts';
 
 /** Crack control, ties, shear and least depth, in the order of CHECK_IDS; those that do not apply are null. */
 export function detailingChecks(context: CheckContext): readonly (CheckResult | null)[] {
@@ -94,13 +94,14 @@ export function shearOf(context: Pick<CheckContext, 'section' | 'basis' | 'deman
     stirrupBar: stirrupBarOf(context),
     fytMPa: basis.fytMPa,
   });
-  return { vuN, constants, dMm: placed.layout.dMm, asMm2: placed.layout.asMm2 };
+  const { dMm, asMm2 } = placed.layout;
+  return { vuN, constants, dMm, asMm2, concreteN: concreteShearN(constants, dMm, asMm2) };
 }
 
 function shear(context: CheckContext): CheckResult | null {
   const state = shearOf(context);
   if (!state) return null;
-  const capacity = designShearN(state.constants, state.dMm, state.asMm2);
+  const capacity = designShearN(state.constants, state.dMm, state.concreteN);
   return check({
     id: 'shear',
     passes: capacity >= state.vuN,
@@ -116,7 +117,7 @@ function shear(context: CheckContext): CheckResult | null {
 function stirrupSpacing(context: CheckContext): CheckResult | null {
   const state = shearOf(context);
   if (!state) return null;
-  const limitMm = stirrupSpacingLimitMm(state.constants, state.vuN, state.dMm, state.asMm2);
+  const limitMm = stirrupSpacingLimitMm(state.constants, state.vuN, state.dMm, state.concreteN);
   const { spacingMm } = state.constants;
   const hasNumbers = spacingMm < Infinity && limitMm > 0 && limitMm < Infinity;
   const reason = {

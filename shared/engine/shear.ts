@@ -75,9 +75,9 @@ export function stirrupShearN(k: ShearConstants, dMm: number): number {
   return Math.min(carried, k.rules.largestStirrupShare * k.rootFc * k.widthMm * dMm);
 }
 
-/** φVn, N. */
-export function designShearN(k: ShearConstants, dMm: number, asMm2: number): number {
-  return k.rules.reduction * (concreteShearN(k, dMm, asMm2) + stirrupShearN(k, dMm));
+/** φVn, N, with the concrete's share Vc. */
+export function designShearN(k: ShearConstants, dMm: number, concreteN: number): number {
+  return k.rules.reduction * (concreteN + stirrupShearN(k, dMm));
 }
 
 /**
@@ -85,14 +85,18 @@ export function designShearN(k: ShearConstants, dMm: number, asMm2: number): num
  * Av,min where Vu asks for it (9.6.3, 9.7.6.2.2). Infinity where Vu asks for no stirrups, 0 where the legs stand too far
  * apart or there are none though they are required.
  */
-export function stirrupSpacingLimitMm(k: ShearConstants, vuN: number, dMm: number, asMm2: number): number {
+export function stirrupSpacingLimitMm(
+  k: ShearConstants,
+  vuN: number,
+  dMm: number,
+  concreteN: number,
+): number {
   const { rules } = k;
-  const concrete = concreteShearN(k, dMm, asMm2);
   const rootArea = k.rootFc * k.widthMm * dMm;
-  const from = rules.stirrupsFromShare === null ? 0.5 * concrete : rules.stirrupsFromShare * rootArea;
+  const from = rules.stirrupsFromShare === null ? 0.5 * concreteN : rules.stirrupsFromShare * rootArea;
   if (!(vuN > rules.reduction * from)) return Infinity;
   if (k.avMm2 === 0) return 0;
-  const isClose = vuN / rules.reduction - concrete > rules.closeSpacingShare * rootArea;
+  const isClose = vuN / rules.reduction - concreteN > rules.closeSpacingShare * rootArea;
   const along = isClose
     ? Math.min(dMm / 4, rules.longestSpacingMm / 2)
     : Math.min(dMm / 2, rules.longestSpacingMm);

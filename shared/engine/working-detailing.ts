@@ -1,6 +1,6 @@
 import { barCoverMm, shearOf, stirrupBarOf } from './checks-detailing.ts';
 import type { WorkingStep } from './evaluation.ts';
-import { concreteShearN, designShearN, stirrupShearN, stirrupSpacingLimitMm } from './shear.ts';
+import { designShearN, stirrupShearN, stirrupSpacingLimitMm } from './shear.ts';
 import { step, type Input, type WorkingSource } from './working-step.ts';
 
 /** Limits of crack control and least depth, and shear, each where it is asked. */
@@ -49,11 +49,10 @@ function shearSteps(source: WorkingSource): WorkingStep[] {
   const state = shearOf(source);
   if (!state) return [];
   const { section, basis, ruleSet } = source;
-  const { constants: k, dMm, asMm2, vuN } = state;
+  const { constants: k, dMm, asMm2, vuN, concreteN: vc } = state;
   const clause = ruleSet.clauses.shear;
   const hasLeast = k.avMm2 >= k.leastAvPerMm * k.spacingMm;
   const isReduced = ruleSet.shear.concreteWithoutStirrups !== null && !hasLeast;
-  const vc = concreteShearN(k, dMm, asMm2);
   const vs = stirrupShearN(k, dMm);
   const shared: Input[] = [
     ['f′c', section.fcMPa, 'stress'],
@@ -89,7 +88,7 @@ function shearSteps(source: WorkingSource): WorkingStep[] {
     step(
       'phi-vn',
       'limits',
-      ['φVn', 'φ (Vc + Vs)', designShearN(k, dMm, asMm2), 'force'],
+      ['φVn', 'φ (Vc + Vs)', designShearN(k, dMm, vc), 'force'],
       [
         ['φ', ruleSet.shear.reduction, 'ratio'],
         ['Vc', vc, 'force'],
@@ -98,7 +97,7 @@ function shearSteps(source: WorkingSource): WorkingStep[] {
       clause,
     ),
   );
-  const limitMm = stirrupSpacingLimitMm(k, vuN, dMm, asMm2);
+  const limitMm = stirrupSpacingLimitMm(k, vuN, dMm, vc);
   if (limitMm > 0 && limitMm < Infinity)
     steps.push(
       step(

@@ -10,7 +10,7 @@ import {
 import { MEASURE_IDS, onGrid } from '../engine/measures.ts';
 import { neutralAxisDepth } from '../engine/neutral-axis.ts';
 import { concreteM3PerM, formworkM2PerM } from '../engine/pricing.ts';
-import { designShearN, shearConstantsOf, stirrupSpacingLimitMm } from '../engine/shear.ts';
+import { concreteShearN, designShearN, stirrupSpacingLimitMm, type ShearConstants } from '../engine/shear.ts';
 import { stirrupKgPerM } from '../engine/stirrup-length.ts';
 import type { FaceEntry } from './face-table.ts';
 import {
@@ -78,6 +78,7 @@ interface Combination {
   readonly tension: FaceEntry;
   readonly compression: FaceEntry;
   readonly concrete: ConcreteConstants;
+  readonly shear: ShearConstants;
   readonly fyMPa: number;
 }
 
@@ -178,17 +179,7 @@ export class Kernel {
     const asMm2 = tension.areaMm2;
     const { placedMask, tieSpacingMm, leastDepthMm: leastForDeflection } = this.detailing(combination);
     const vuN = demand.vuN ?? null;
-    const shear =
-      vuN === null
-        ? null
-        : shearConstantsOf(ruleSet.shear, {
-            fcMPa: concrete.fcMPa,
-            widthMm,
-            coverMm: placement.coverMm,
-            stirrup: placement.given,
-            stirrupBar: placement.stirrupBar,
-            fytMPa: basis.fytMPa,
-          });
+    const shear = vuN === null ? null : combination.shear;
 
     const nc = compression.layerCount;
     const n = nc + tension.layerCount;
@@ -256,8 +247,9 @@ export class Kernel {
         mask |= LEAST_STEEL;
       mask |= placedMask;
       if (shear !== null && vuN !== null) {
-        if (!(designShearN(shear, d, asMm2) >= vuN)) mask |= SHEAR;
-        const limitMm = stirrupSpacingLimitMm(shear, vuN, d, asMm2);
+        const concreteN = concreteShearN(shear, d, asMm2);
+        if (!(designShearN(shear, d, concreteN) >= vuN)) mask |= SHEAR;
+        const limitMm = stirrupSpacingLimitMm(shear, vuN, d, concreteN);
         if (limitMm !== Infinity && !isWithinLength(shear.spacingMm, limitMm)) mask |= STIRRUP_SPACING;
       }
       tally.countMask(mask);

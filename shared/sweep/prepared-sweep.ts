@@ -5,6 +5,7 @@ import { pricingFor, type Pricing } from '../engine/pricing.ts';
 import type { RuleSet } from '../engine/rules/rule-set.ts';
 import { RULE_SETS } from '../engine/rules/rule-sets.ts';
 import type { Stirrup } from '../engine/section.ts';
+import { shearConstantsOf, type ShearConstants } from '../engine/shear.ts';
 import { stirrupShape, type StirrupShape } from '../engine/stirrup-length.ts';
 import { faceTable, type FaceEntry } from './face-table.ts';
 import type { Space, SweepProblem, View } from './problem.ts';
@@ -29,6 +30,8 @@ export interface Placement {
   readonly stirrup: StirrupShape | null;
   /** Least width and depth the stirrup can be bent in, mm. */
   readonly leastForStirrupMm: number;
+  /** For each concrete strength. */
+  readonly shear: readonly ShearConstants[];
   readonly tension: readonly FaceEntry[];
   readonly compression: readonly FaceEntry[];
 }
@@ -95,6 +98,9 @@ export function placementAt(prepared: PreparedSweep, combination: number): Place
     stirrupBar,
     stirrup: stirrup && stirrupBar && stirrupShape(stirrupBar, stirrup, coverMm, ruleSet),
     leastForStirrupMm: leastForStirrupMm(coverMm, stirrupBar, ruleSet),
+    shear: space.fcMPa.map((fcMPa) =>
+      shearConstantsOf(ruleSet.shear, { fcMPa, widthMm, coverMm, stirrup, stirrupBar, fytMPa: basis.fytMPa }),
+    ),
     tension: faceTable('tension', space.tension, context, rules),
     compression: faceTable('compression', space.compression, context, rules),
   };

@@ -74,6 +74,7 @@ function forEachRow(
         tension: placement.tension[tensionAt]!,
         compression: placement.compression[compressionAt]!,
         concrete: prepared.concretes[fcAt]!,
+        shear: placement.shear[fcAt]!,
         fyMPa: space.fyMPa[fyAt]!,
       },
       { firstIndex, from: index - firstIndex, to: end - firstIndex },

@@ -77,7 +77,7 @@ export const DETAILING_CASES: Readonly<Record<string, ComputeCase>> = {
       half_phiVc: phiVc / 2,
       Vs,
       s1: perInch / Vs,
-      s_d2: stirrupSpacingLimitMm(k, number(raw.Vu) * N_PER_KIP, dMm, 1) / MM_PER_IN,
+      s_d2: stirrupSpacingLimitMm(k, number(raw.Vu) * N_PER_KIP, dMm, concreteShearN(k, dMm, 1)) / MM_PER_IN,
       s_50bw: k.avMm2 / k.leastAvPerMm / MM_PER_IN,
     };
   },
