@@ -6,9 +6,20 @@ export type Allowed =
   | { readonly kind: 'absolute'; readonly by: number }
   | { readonly kind: 'below'; readonly because: string };
 
+export interface Place {
+  /** The input whose value this is; null where no input has as many values, and the value counts from one. */
+  readonly input: string | null;
+  readonly value: CaseValue;
+}
+
 /** One printed number beside ours. */
 export interface Comparison {
+  /** Key and indices in `expected`, e.g. `b_min[0][2]`. */
   readonly name: string;
+  /** The key alone. */
+  readonly quantity: string;
+  /** For one of a list: the inputs it belongs to, e.g. n = 2 and bars = 6. */
+  readonly places: readonly Place[];
   readonly printed: number;
   readonly computed: number;
   /** Of the printed value; the plain difference where that is zero. */
@@ -24,7 +35,7 @@ function compareOne(
   printed: number,
   ours: ComputedValue | undefined,
   tolerance: { readonly relative: number; readonly absolute: number | undefined },
-): Omit<Comparison, 'name'> {
+): Omit<Comparison, 'name' | 'quantity' | 'places'> {
   const computed = isBelowPrinted(ours) ? ours.belowPrinted : typeof ours === 'number' ? ours : NaN;
   const difference = Math.abs(computed - printed);
   const relative = printed === 0 ? difference : difference / Math.abs(printed);
@@ -44,27 +55,44 @@ function compareOne(
   };
 }
 
+const isList = (value: CaseValue): value is readonly CaseValue[] => Array.isArray(value);
+
+/** The input that has as many values as a list of `length` and has not named an outer place. */
+function findInputOf(published: PublishedCase, length: number, outer: readonly Place[]) {
+  for (const [input, value] of Object.entries(published.inputs))
+    if (isList(value) && value.length === length && !outer.some((place) => place.input === input))
+      return { input, values: value };
+  return undefined;
+}
+
+interface Where {
+  readonly name: string;
+  readonly quantity: string;
+  readonly places: readonly Place[];
+}
+
 /** Every printed number of a case against the computed one of the same name and place; one not computed is NaN. */
 export function compare(published: PublishedCase, computed: ReturnType<ComputeCase>): Comparison[] {
-  const walk = (
-    name: string,
-    key: string,
-    printed: CaseValue,
-    ours: ComputedValue | undefined,
-  ): Comparison[] => {
+  const walk = (at: Where, printed: CaseValue, ours: ComputedValue | undefined): Comparison[] => {
     // Printed values a case leaves out on purpose are null.
     if (printed === null) return [];
+    const { name, quantity, places } = at;
     if (typeof printed === 'number') {
-      const tolerance = { relative: published.tolerance, absolute: published.abs_tolerance?.[key] };
-      return [{ name, ...compareOne(printed, ours, tolerance) }];
+      const tolerance = { relative: published.tolerance, absolute: published.abs_tolerance?.[quantity] };
+      return [{ ...at, ...compareOne(printed, ours, tolerance) }];
     }
-    if (Array.isArray(printed))
-      return printed.flatMap((item: CaseValue, i) =>
-        walk(`${name}[${i}]`, key, item, Array.isArray(ours) ? (ours as ComputedValue[])[i] : undefined),
+    if (!isList(printed)) throw new Error(`${published.id} ${name} is not a number`);
+    const named = findInputOf(published, printed.length, places);
+    return printed.flatMap((item, i) => {
+      const place = { input: named?.input ?? null, value: named?.values[i] ?? i + 1 };
+      return walk(
+        { name: `${name}[${i}]`, quantity, places: [...places, place] },
+        item,
+        Array.isArray(ours) ? (ours as ComputedValue[])[i] : undefined,
       );
-    throw new Error(`${published.id} ${name} is not a number`);
+    });
   };
   return Object.entries(published.expected).flatMap(([key, printed]) =>
-    walk(key, key, printed, computed[key]),
+    walk({ name: key, quantity: key, places: [] }, printed, computed[key]),
   );
 }
