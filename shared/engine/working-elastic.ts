@@ -45,14 +45,14 @@ export function elasticSteps({ section, basis, layout, elastic, ruleSet }: Worki
     step(
       'kd',
       'elastic',
-      ['kd', `b kd²/2 + Σ ${above} A (kd − d) = Σ n A (d − kd)`, elastic.crackedAxisMm, 'length'],
+      ['kd', `b (kd)²/2 + Σ ${above} A (kd − d) = Σ n A (d − kd)`, elastic.crackedAxisMm, 'length'],
       [n, b, ...layerInputs(layout)],
       STATICS,
     ),
     step(
       'icr',
       'elastic',
-      ['Icr', `b kd³/3 + Σ ${above} A (kd − d)² + Σ n A (d − kd)²`, elastic.crackedInertiaMm4, 'inertia'],
+      ['Icr', `b (kd)³/3 + Σ ${above} A (kd − d)² + Σ n A (d − kd)²`, elastic.crackedInertiaMm4, 'inertia'],
       [n, b, kd, ...layerInputs(layout)],
       STATICS,
     ),
