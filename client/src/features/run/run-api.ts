@@ -6,6 +6,7 @@ import type { View } from '#shared/sweep/problem.ts';
 import { call } from '#client/src/lib/api.ts';
 import { apiUrl } from '#client/src/lib/paths.ts';
 import { queryKeys } from '#client/src/lib/query-keys.ts';
+import { createPartQueue } from './part-queue.ts';
 import { isUnderWay, newerProgress } from './view-progress.ts';
 
 export const runQuery = (runId: string) =>
@@ -42,10 +43,7 @@ export function useView(run: Run | undefined, view: View | null) {
   });
 }
 
-function takeEvent(client: QueryClient, runId: string, text: string): void {
-  const parsed = viewProgressSchema.safeParse(JSON.parse(text));
-  if (!parsed.success) return;
-  const progress = parsed.data;
+function takeProgress(client: QueryClient, runId: string, progress: ViewProgress): void {
   const key = viewKey(runId, progress.view);
   client.setQueryData<ViewProgress>(key, (known) => newerProgress(known, progress));
   if (!isUnderWay(progress.state))
@@ -58,8 +56,15 @@ export function useRunEvents(runId: string, isLive: boolean): void {
   useEffect(() => {
     if (!isLive) return;
     const source = new EventSource(apiUrl(RUN_EVENTS_PATH, { id: runId }));
-    source.addEventListener('progress', (event) => takeEvent(client, runId, String(event.data)));
-    return () => source.close();
+    const parts = createPartQueue((progress) => takeProgress(client, runId, progress));
+    source.addEventListener('progress', (event) => {
+      const parsed = viewProgressSchema.safeParse(JSON.parse(String(event.data)));
+      if (parsed.success) parts.add(parsed.data);
+    });
+    return () => {
+      source.close();
+      parts.close();
+    };
   }, [client, runId, isLive]);
 }
 

@@ -1,18 +1,12 @@
 import { useEffect, useState } from 'react';
 import { countCannotFit } from '#shared/sweep/cannot-fit.ts';
 import type { SweepProblem } from '#shared/sweep/problem.ts';
+import { whenIdle } from '#client/src/lib/when-idle.ts';
 
 /** Long enough that a number being typed is not counted digit by digit. */
 const PAUSE_MS = 250;
-/** Safari has no idle callback; the next turn of the event loop does instead. */
-const whenIdle = (work: () => void): (() => void) => {
-  if (typeof requestIdleCallback === 'function') {
-    const handle = requestIdleCallback(work, { timeout: 500 });
-    return () => cancelIdleCallback(handle);
-  }
-  const handle = setTimeout(work);
-  return () => clearTimeout(handle);
-};
+/** Counting is not put off for longer, however busy the page is. */
+const LONGEST_WAIT_MS = 500;
 
 /** How many sections cannot be placed, counted in idle time after a pause in typing; null until then. */
 export function useCannotFit(problem: SweepProblem | null): number | null {
@@ -23,7 +17,7 @@ export function useCannotFit(problem: SweepProblem | null): number | null {
     if (problem === null) return;
     let stopIdle = () => {};
     const pause = setTimeout(() => {
-      stopIdle = whenIdle(() => setCounted({ problem, count: countCannotFit(problem) }));
+      stopIdle = whenIdle(() => setCounted({ problem, count: countCannotFit(problem) }), LONGEST_WAIT_MS);
     }, PAUSE_MS);
     return () => {
       clearTimeout(pause);
