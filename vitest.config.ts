@@ -45,6 +45,7 @@ export default defineConfig({
           fileParallelism: false,
           testTimeout: 120_000,
           hookTimeout: 180_000,
+          expect: { poll: { timeout: 15_000 } },
           sequence: { groupOrder: 1 },
         },
       },
