@@ -1,0 +1,87 @@
+import type { CurveModel } from './curve-model.ts';
+import type { CurvePoint, Trace, UltimateCause } from './curve-trace.ts';
+
+/** Two straight lines that stand for a curve. */
+export interface Bilinear {
+  readonly yieldCurvaturePerMm: number;
+  readonly momentNmm: number;
+  readonly rule: string;
+}
+
+/** A curvature ductility never goes without the sentence that says what it is. */
+export interface DefinedDuctility {
+  /** Null where no bar yields. */
+  readonly value: number | null;
+  readonly definition: string;
+}
+
+export interface CurveDuctility {
+  readonly byFirstYield: DefinedDuctility;
+  readonly byBilinearYield: DefinedDuctility;
+}
+
+const BILINEAR_RULE =
+  'two lines of the same area under them as the cracked section’s curve to ultimate: from the origin through first yield, then level to ultimate';
+
+/** Area under straight lines from the origin through the points, N (N·mm × 1/mm). */
+export function areaUnder(points: readonly CurvePoint[]): number {
+  let area = 0;
+  let curvature = 0;
+  let moment = 0;
+  for (const point of points) {
+    area += 0.5 * (moment + point.momentNmm) * (point.curvaturePerMm - curvature);
+    curvature = point.curvaturePerMm;
+    moment = point.momentNmm;
+  }
+  return area;
+}
+
+/**
+ * Equal-area idealisation (common practice). With slope K through first yield and plateau M, the area M φu − M²/2K equals
+ * that of the curve, A: M = K φu (1 − √(1 − 2A/(K φu²))).
+ * @returns null where no bar yields.
+ */
+export function bilinearOf({ points, firstYield, ultimate }: Trace): Bilinear | null {
+  if (!firstYield) return null;
+  const slope = firstYield.momentNmm / firstYield.curvaturePerMm;
+  const last = ultimate.curvaturePerMm;
+  const inner = Math.max(0, 1 - (2 * areaUnder(points)) / (slope * last * last));
+  const momentNmm = slope * last * (1 - Math.sqrt(inner));
+  return { yieldCurvaturePerMm: momentNmm / slope, momentNmm, rule: BILINEAR_RULE };
+}
+
+const END_OF: Readonly<Record<UltimateCause, (model: CurveModel) => string>> = {
+  'concrete-crushing': ({ crushingStrain }) => `the extreme fibre reaches ${shown(crushingStrain)}`,
+  'core-crushing': ({ crushingStrain }) => `the edge of the confined core reaches ${shown(crushingStrain)}`,
+  'bar-rupture': ({ steel }) => `the outermost bars break at ${shown(steel.ruptureStrain)}`,
+  'moment-drop': () => 'the moment has fallen 20 % below its peak',
+};
+
+const shown = (strain: number) => String(Number(strain.toPrecision(4)));
+
+/** μφ by both yields, each with its definition. */
+export function ductilitiesOf(model: CurveModel, trace: Trace, bilinear: Bilinear | null): CurveDuctility {
+  const { firstYield, ultimate, cause } = trace;
+  const where =
+    model.yieldDepthMm === model.deepestMm
+      ? 'the outermost tension layer'
+      : 'the centroid of the tension steel';
+  const laws = `${(model.core ?? model.cover).name} concrete, ${model.steel.name} steel`;
+  const ultimateIs = `φu where ${END_OF[cause](model)}; ${laws}`;
+  const never = `no bar reaches fy/Es at ${where} before ultimate, so there is no yield curvature; ${ultimateIs}`;
+  if (!firstYield || !bilinear) {
+    const none = { value: null, definition: never };
+    return { byFirstYield: none, byBilinearYield: none };
+  }
+  const last = ultimate.curvaturePerMm;
+  return {
+    byFirstYield: {
+      value: last / firstYield.curvaturePerMm,
+      definition: `μφ = φu/φy; φy where ${where} reaches fy/Es on the nonlinear curve; ${ultimateIs}`,
+    },
+    byBilinearYield: {
+      value: last / bilinear.yieldCurvaturePerMm,
+      definition: `μφ = φu/φy; φy the corner of ${BILINEAR_RULE}; ${ultimateIs}`,
+    },
+  };
+}

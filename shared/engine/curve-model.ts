@@ -1,0 +1,220 @@
+import { findConfinement, type HoopConfinement } from './concrete-laws/confinement.ts';
+import type { ConcreteLaw, LawSettings } from './concrete-laws/concrete-law.ts';
+import { hognestad } from './concrete-laws/hognestad.ts';
+import { kentPark, kentParkConfined } from './concrete-laws/kent-park.ts';
+import { manderConfined, manderUnconfined } from './concrete-laws/mander.ts';
+import { parabolaRectangle } from './concrete-laws/parabola-rectangle.ts';
+import { todeschini } from './concrete-laws/todeschini.ts';
+import type { Arrangement } from './evaluation.ts';
+import { assertPositive, InvalidSectionError } from './preconditions.ts';
+import { RULE_SETS } from './rules/rule-sets.ts';
+import type { DesignBasis, SectionInput } from './section.ts';
+import type { SteelLayout } from './steel-layout.ts';
+import { elasticPlastic, strainHardening, type SteelLaw } from './steel-laws.ts';
+
+export const CONCRETE_LAW_IDS = [
+  'hognestad',
+  'todeschini',
+  'kent-park',
+  'kent-park-confined',
+  'mander',
+  'mander-confined',
+  'parabola-rectangle',
+] as const;
+export type ConcreteLawId = (typeof CONCRETE_LAW_IDS)[number];
+
+export const STEEL_LAW_IDS = ['elastic-plastic', 'strain-hardening'] as const;
+export type SteelLawId = (typeof STEEL_LAW_IDS)[number];
+
+/** The laws a curve is drawn by. What is left out takes its law's own value. */
+export interface CurveChoices {
+  readonly concreteLaw: ConcreteLawId;
+  readonly steelLaw: SteelLawId;
+  /** Peak stress of unconfined concrete over f′c. */
+  readonly peakShare?: number;
+  readonly peakStrain?: number;
+  /** Crushing strain of the extreme fibre, or of the core's edge for a confined law. */
+  readonly crushingStrain?: number;
+  /** Strain at which a bar breaks. */
+  readonly ruptureStrain?: number;
+  /** fu over fy of the hardening branch. */
+  readonly strengthRatio?: number;
+  /** Strain at which hardening begins. */
+  readonly hardeningStrain?: number;
+  /** Yield strength of the hoops, MPa; that of the bars unless set. */
+  readonly hoopYieldMPa?: number;
+  /** Strain at which a hoop breaks; 0.12 unless set. */
+  readonly hoopRuptureStrain?: number;
+  /** Draw concrete's tension, linear to fr, up to the first crack. */
+  readonly hasTensionBeforeCracking?: boolean;
+}
+
+/** Concrete in tension before the first crack: σ = Ec ε to fr. */
+export interface TensionBeforeCracking {
+  readonly ecMPa: number;
+  readonly crackingStrain: number;
+}
+
+/** One section and its laws, ready to be integrated. Lengths mm. */
+export interface CurveModel {
+  readonly widthMm: number;
+  readonly depthMm: number;
+  /** Law of the whole section, or of the cover outside the core. */
+  readonly cover: ConcreteLaw;
+  /** Law inside the hoop centre lines; null where nothing is confined. */
+  readonly core: ConcreteLaw | null;
+  readonly coreTopMm: number;
+  readonly coreBottomMm: number;
+  readonly coreWidthMm: number;
+  readonly confinement: HoopConfinement | null;
+  /** Why the core is or is not confined. */
+  readonly confinementNote: string;
+  readonly steel: SteelLaw;
+  readonly depths: Float64Array;
+  readonly areas: Float64Array;
+  readonly isDisplacedDeducted: boolean;
+  /** Depth at which first yield is measured, by the basis: outermost tension layer or centroid. */
+  readonly yieldDepthMm: number;
+  /** Outermost tension layer. */
+  readonly deepestMm: number;
+  /** Depth at which crushing is measured: 0, or the core's edge. */
+  readonly crushingDepthMm: number;
+  readonly crushingStrain: number;
+  readonly tension: TensionBeforeCracking;
+}
+
+export interface CurveInput {
+  /** Checked by `evaluateSection` or of the same kind; its bars placed. */
+  readonly section: SectionInput;
+  readonly layout: SteelLayout;
+  /** Null for plain layers. */
+  readonly arrangement: Arrangement | null;
+  readonly basis: DesignBasis;
+  readonly choices: CurveChoices;
+}
+
+/**
+ * The section with its laws made for its materials and, for a confined law, for its own hoops.
+ * @throws InvalidSectionError for a choice that is not a number above zero.
+ */
+export function curveModel(input: CurveInput): CurveModel {
+  const { section, layout, basis, choices } = input;
+  assertChoices(choices);
+  const rules = RULE_SETS[basis.ruleSet];
+  const ecMPa = rules.concreteModulusMPa(section.fcMPa);
+  const { cover, core, confinement, confinementNote } = concreteOf(input, ecMPa);
+  const coreTopMm = core && confinement ? confinement.coreTopMm : 0;
+  return {
+    widthMm: section.widthMm,
+    depthMm: section.depthMm,
+    cover,
+    core,
+    coreTopMm,
+    coreBottomMm: section.depthMm - coreTopMm,
+    coreWidthMm: core && confinement ? confinement.coreWidthMm : 0,
+    confinement,
+    confinementNote,
+    steel: steelOf(section.fyMPa, basis.esMPa, choices),
+    depths: layout.depths,
+    areas: layout.areas,
+    isDisplacedDeducted: basis.displacedConcrete !== 'ignore',
+    yieldDepthMm: basis.yieldCurvatureAt === 'centroid' ? layout.dMm : layout.dtMm,
+    deepestMm: layout.dtMm,
+    crushingDepthMm: coreTopMm,
+    crushingStrain: (core ?? cover).crushingStrain,
+    tension: { ecMPa, crackingStrain: rules.ruptureModulusMPa(section.fcMPa) / ecMPa },
+  };
+}
+
+const NUMBERS = {
+  peakShare: 'Peak stress over f′c',
+  peakStrain: 'Strain at peak stress',
+  crushingStrain: 'Crushing strain',
+  ruptureStrain: 'Rupture strain',
+  strengthRatio: 'fu over fy',
+  hardeningStrain: 'Strain at the start of hardening',
+  hoopYieldMPa: 'Yield strength of the hoops',
+  hoopRuptureStrain: 'Rupture strain of the hoops',
+} as const;
+
+function assertChoices(choices: CurveChoices): void {
+  for (const key of Object.keys(NUMBERS) as (keyof typeof NUMBERS)[]) {
+    const value = choices[key];
+    if (value !== undefined) assertPositive(value, NUMBERS[key], ['choices', key]);
+  }
+  if (choices.strengthRatio !== undefined && choices.strengthRatio < 1)
+    throw new InvalidSectionError(`fu over fy must be 1 or more, not ${choices.strengthRatio}`, [
+      'choices',
+      'strengthRatio',
+    ]);
+}
+
+interface Concrete {
+  readonly cover: ConcreteLaw;
+  readonly core: ConcreteLaw | null;
+  readonly confinement: HoopConfinement | null;
+  readonly confinementNote: string;
+}
+
+function concreteOf(input: CurveInput, ecMPa: number): Concrete {
+  const { section, choices } = input;
+  const law = choices.concreteLaw;
+  const plain = (settings: LawSettings) => unconfinedLaw(law, section.fcMPa, ecMPa, settings);
+  const unconfined = (confinementNote: string): Concrete => ({
+    cover: plain(choices),
+    core: null,
+    confinement: null,
+    confinementNote,
+  });
+  if (law !== 'mander-confined' && law !== 'kent-park-confined')
+    return unconfined('unconfined by choice of law');
+  const hoops = findConfinement(input, {
+    yieldMPa: choices.hoopYieldMPa ?? section.fyMPa,
+    ruptureStrain: choices.hoopRuptureStrain ?? 0.12,
+  });
+  if (!hoops) return unconfined('no hoops round a core: taken as unconfined');
+  if (law === 'mander-confined' && hoops.effectiveness === 0)
+    return {
+      ...unconfined('hoops too far apart, or held points too few, to confine: ke = 0, taken as unconfined'),
+      confinement: hoops,
+    };
+  const core =
+    law === 'mander-confined'
+      ? manderConfined(section.fcMPa, hoops, choices)
+      : kentParkConfined(section.fcMPa, hoops, choices);
+  // a crushing strain set by the caller is the core's
+  const cover = plain({ peakShare: choices.peakShare, peakStrain: choices.peakStrain });
+  return { cover, core, confinement: hoops, confinementNote: 'core inside the hoop centre lines confined' };
+}
+
+function unconfinedLaw(law: ConcreteLawId, fcMPa: number, ecMPa: number, settings: LawSettings): ConcreteLaw {
+  switch (law) {
+    case 'hognestad':
+      return hognestad(fcMPa, settings);
+    case 'todeschini':
+      return todeschini(fcMPa, ecMPa, settings);
+    case 'kent-park':
+    case 'kent-park-confined':
+      return kentPark(fcMPa, settings);
+    case 'mander':
+    case 'mander-confined':
+      return manderUnconfined(fcMPa, settings);
+    case 'parabola-rectangle':
+      return parabolaRectangle(fcMPa, settings);
+  }
+}
+
+function steelOf(fyMPa: number, esMPa: number, choices: CurveChoices): SteelLaw {
+  const { steelLaw, ruptureStrain, strengthRatio, hardeningStrain } = choices;
+  const law =
+    steelLaw === 'elastic-plastic'
+      ? elasticPlastic({ fyMPa, esMPa, ruptureStrain })
+      : strainHardening({ fyMPa, esMPa, ruptureStrain, strengthRatio, hardeningStrain });
+  const last = law.kinkStrains[law.kinkStrains.length - 1]!;
+  if (!(law.ruptureStrain > last))
+    throw new InvalidSectionError(
+      `Rupture strain ${law.ruptureStrain} must be above ${last}, where the steel yields or hardens`,
+      ['choices', 'ruptureStrain'],
+    );
+  return law;
+}

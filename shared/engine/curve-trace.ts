@@ -1,0 +1,313 @@
+import { crackedAxisDepth } from './cracked-section.ts';
+import type { CurveModel } from './curve-model.ts';
+import {
+  balancedCurvature,
+  balancedTopStrain,
+  emptyBalance,
+  illinois,
+  momentNmm,
+  netForceN,
+  type Balance,
+  type HeldStrain,
+  type Stage,
+} from './section-balance.ts';
+
+/** One state of a curve: curvature 1/mm, moment N·mm, axis mm below the compression face. */
+export interface CurvePoint {
+  readonly curvaturePerMm: number;
+  readonly momentNmm: number;
+  readonly axisMm: number;
+  /** Strain of the compression face, shortening positive. */
+  readonly topStrain: number;
+  /** Strain of the outermost tension layer, tension positive. */
+  readonly tensionStrain: number;
+}
+
+export const ULTIMATE_CAUSES = ['concrete-crushing', 'core-crushing', 'bar-rupture', 'moment-drop'] as const;
+/** What ends a curve: crushing of the extreme fibre or of the core's edge, a bar that breaks, 20 % lost from the peak. */
+export type UltimateCause = (typeof ULTIMATE_CAUSES)[number];
+
+/** Share of the peak moment at which a falling curve ends. */
+const KEPT_SHARE = 0.8;
+/** Points of the curve to first yield, and from there to the end. */
+const ELASTIC_POINTS = 8;
+const PLASTIC_POINTS = 26;
+/** Points after yield crowd towards it, where the curve bends. */
+const CROWDING = 1.6;
+const PEAK_STEPS = 5;
+/** Difference from the expected top strain, over it, that counts as a leap; and the shortest step, over the last curvature. */
+const LEAP = 0.25;
+const LEAST_STEP = 1 / 2000;
+/** Least distance of a trial from the highest point, over the bracket: keeps both sides moving where the crown is a kink. */
+const LEAST_TRIAL = 0.03;
+
+/** The cracked section's curve from rest to its end, in order of curvature, its marks among the points. */
+export interface Trace {
+  readonly points: readonly CurvePoint[];
+  /** Null where no bar yields before the end. */
+  readonly firstYield: CurvePoint | null;
+  readonly peak: CurvePoint;
+  readonly ultimate: CurvePoint;
+  readonly cause: UltimateCause;
+}
+
+/** Top strain expected at a curvature from the last three states (Newton's divided differences); −1 from none. */
+function extrapolated(curvature: number, points: readonly CurvePoint[]): number {
+  const before = points[points.length - 1];
+  const earlier = points[points.length - 2];
+  const earliest = points[points.length - 3];
+  if (!before) return -1;
+  if (!earlier) return (before.topStrain * curvature) / before.curvaturePerMm;
+  const from = curvature - before.curvaturePerMm;
+  const slope = slopeBetween(earlier, before);
+  const linear = before.topStrain + slope * from;
+  if (!earliest) return linear;
+  const bend = (slope - slopeBetween(earliest, earlier)) / (before.curvaturePerMm - earliest.curvaturePerMm);
+  return linear + bend * from * (curvature - earlier.curvaturePerMm);
+}
+
+const isLeap = ({ topStrain }: CurvePoint, guess: number) => Math.abs(topStrain - guess) > LEAP * topStrain;
+
+/** Curvature of the crown of the parabola through three states, the middle one highest, held off the middle one. */
+function crownOf(left: CurvePoint, middle: CurvePoint, right: CurvePoint): number {
+  const x = middle.curvaturePerMm;
+  const down = x - left.curvaturePerMm;
+  const up = right.curvaturePerMm - x;
+  const fallDown = (middle.momentNmm - left.momentNmm) * up;
+  const fallUp = (middle.momentNmm - right.momentNmm) * down;
+  const shift = (fallDown * up - fallUp * down) / (2 * (fallDown + fallUp));
+  const least = LEAST_TRIAL * (down + up);
+  if (shift > least || shift < -least) return x + shift;
+  return up > down ? x + Math.min(least, up / 2) : x - Math.min(least, down / 2);
+}
+
+/** Strain of a state at a depth above a held one, compression positive. */
+const excess = (point: CurvePoint, { depthMm, strain }: HeldStrain) =>
+  point.topStrain - point.curvaturePerMm * depthMm - strain;
+
+const slopeBetween = (a: CurvePoint, b: CurvePoint) =>
+  (b.topStrain - a.topStrain) / (b.curvaturePerMm - a.curvaturePerMm);
+
+/** Walks a section's curve. Holds one balance to write into, so that a curve allocates little but its points. */
+export class Tracer {
+  private readonly model: CurveModel;
+  private readonly out: Balance = emptyBalance();
+
+  private readonly yielded: HeldStrain;
+  private readonly crushed: HeldStrain;
+  private readonly broken: HeldStrain;
+  private readonly crushingCause: UltimateCause;
+
+  constructor(model: CurveModel) {
+    const { steel } = model;
+    this.model = model;
+    this.yielded = { depthMm: model.yieldDepthMm, strain: -steel.yieldStrain };
+    this.crushed = { depthMm: model.crushingDepthMm, strain: model.crushingStrain };
+    this.broken = { depthMm: model.deepestMm, strain: -steel.ruptureStrain };
+    this.crushingCause = model.core ? 'core-crushing' : 'concrete-crushing';
+  }
+
+  trace(): Trace {
+    const end = this.expectedEnd();
+    const walked = this.walk(end);
+    const dropped = this.cutAtDrop(walked.points, walked.cause);
+    const points = [...dropped.points];
+    const ultimate = points[points.length - 1]!;
+    const firstYield =
+      walked.firstYield && walked.firstYield.curvaturePerMm <= ultimate.curvaturePerMm
+        ? walked.firstYield
+        : null;
+    return { points, firstYield, peak: dropped.peak, ultimate, cause: dropped.cause };
+  }
+
+  /** The cracked state at a curvature; a near state's top strain speeds it up. */
+  pointAt(curvature: number, guess = -1): CurvePoint {
+    const topStrain = balancedTopStrain(this.model, curvature, guess, this.out);
+    return this.pointOf(curvature, topStrain, 'cracked');
+  }
+
+  /** Net force over the concrete's compression. */
+  residualOf({ curvaturePerMm, topStrain }: CurvePoint): number {
+    const force = netForceN(this.model, 'cracked', { curvature: curvaturePerMm, topStrain }, this.out);
+    return Math.abs(force) / this.out.concreteN;
+  }
+
+  /** The uncracked state whose tension face reaches the modulus of rupture; undefined where the section has none. */
+  findCracking(): CurvePoint | undefined {
+    const { depthMm, tension } = this.model;
+    const least = tension.crackingStrain / depthMm;
+    const held = { depthMm, strain: -tension.crackingStrain };
+    const curvature = balancedCurvature(
+      this.model,
+      held,
+      { low: least, high: 10 * least },
+      this.out,
+      'uncracked',
+    );
+    if (Number.isNaN(curvature)) return undefined;
+    return this.pointOf(curvature, curvature * depthMm - tension.crackingStrain, 'uncracked');
+  }
+
+  /** The uncracked state at a curvature up to cracking. */
+  uncrackedAt(curvature: number): CurvePoint {
+    const topStrain = illinois(
+      (strain) => netForceN(this.model, 'uncracked', { curvature, topStrain: strain }, this.out),
+      0,
+      curvature * this.model.depthMm,
+    );
+    return this.pointOf(curvature, topStrain, 'uncracked');
+  }
+
+  private pointOf(curvature: number, topStrain: number, stage: Stage): CurvePoint {
+    return {
+      curvaturePerMm: curvature,
+      momentNmm: momentNmm(this.model, curvature, topStrain, stage),
+      axisMm: topStrain / curvature,
+      topStrain,
+      tensionStrain: curvature * this.model.deepestMm - topStrain,
+    };
+  }
+
+  /**
+   * Crushing or rupture, whichever comes first. In the state that has both at once, compression in excess means that the
+   * true axis lies higher, so that the bar breaks first.
+   */
+  private expectedEnd(): { curvature: number; cause: UltimateCause } {
+    const { model, out, crushed, broken } = this;
+    const lever = broken.depthMm - crushed.depthMm;
+    const high = (crushed.strain - broken.strain) / lever;
+    const topStrain = crushed.strain + high * crushed.depthMm;
+    if (netForceN(model, 'cracked', { curvature: high, topStrain }, out) > 0) {
+      const low = -broken.strain / broken.depthMm;
+      return { curvature: balancedCurvature(model, broken, { low, high }, out), cause: 'bar-rupture' };
+    }
+    const low = crushed.strain / lever;
+    return { curvature: balancedCurvature(model, crushed, { low, high }, out), cause: this.crushingCause };
+  }
+
+  private curvatures(last: number): Float64Array {
+    const { model } = this;
+    const modularRatio = model.steel.esMPa / model.tension.ecMPa;
+    const kd = crackedAxisDepth(model.depths, model.areas, model.depths.length, {
+      widthMm: model.widthMm,
+      modularRatio,
+      ratioAbove: model.isDisplacedDeducted ? modularRatio - 1 : modularRatio,
+    });
+    const elasticYield = model.steel.yieldStrain / (model.yieldDepthMm - kd);
+    const bend = elasticYield > 0 && elasticYield < 0.6 * last ? elasticYield : 0.3 * last;
+    const grid = new Float64Array(ELASTIC_POINTS + PLASTIC_POINTS);
+    for (let i = 0; i < ELASTIC_POINTS; i++) grid[i] = (bend * (i + 1)) / ELASTIC_POINTS;
+    for (let i = 1; i <= PLASTIC_POINTS; i++)
+      grid[ELASTIC_POINTS + i - 1] = bend + (last - bend) * (i / PLASTIC_POINTS) ** CROWDING;
+    grid[grid.length - 1] = last;
+    return grid;
+  }
+
+  /** Points from rest to the end; a step in which the axis leaps, as where the cover spalls, is halved and halved again. */
+  private walk(end: { curvature: number; cause: UltimateCause }) {
+    const grid = this.curvatures(end.curvature);
+    const points: CurvePoint[] = [];
+    const pending: number[] = [];
+    let firstYield: CurvePoint | null = null;
+    let { cause } = end;
+    for (let next = 0; next < grid.length || pending.length > 0;) {
+      const curvature = pending.pop() ?? grid[next++]!;
+      const before = points[points.length - 1];
+      const guess = extrapolated(curvature, points);
+      let point = this.pointAt(curvature, guess);
+      if (before && isLeap(point, guess) && curvature - before.curvaturePerMm > LEAST_STEP * end.curvature) {
+        pending.push(curvature, 0.5 * (before.curvaturePerMm + curvature));
+        continue;
+      }
+      const early = before && curvature < end.curvature ? this.endWithin(before, point) : undefined;
+      if (early) ({ point, cause } = early);
+      if (!firstYield && before && excess(point, this.yielded) <= 0) {
+        firstYield = this.reaching(this.yielded, before, point);
+        if (firstYield.curvaturePerMm < point.curvaturePerMm) points.push(firstYield);
+      }
+      points.push(point);
+      if (early) break;
+    }
+    return { points, firstYield, cause };
+  }
+
+  /** An end before the expected one, where a softening law has more than one state at the held strain. */
+  private endWithin(
+    before: CurvePoint,
+    point: CurvePoint,
+  ): { point: CurvePoint; cause: UltimateCause } | undefined {
+    if (excess(point, this.crushed) > 0)
+      return { point: this.reaching(this.crushed, before, point), cause: this.crushingCause };
+    if (excess(point, this.broken) < 0)
+      return { point: this.reaching(this.broken, before, point), cause: 'bar-rupture' };
+    return undefined;
+  }
+
+  /** The state between two others at which a strain is reached. */
+  private reaching(held: HeldStrain, from: CurvePoint, to: CurvePoint): CurvePoint {
+    const bounds = { low: from.curvaturePerMm, high: to.curvaturePerMm };
+    const curvature = balancedCurvature(this.model, held, bounds, this.out);
+    if (Number.isNaN(curvature)) return this.crossing(from, to, (point) => excess(point, held));
+    return this.pointOf(curvature, held.strain + curvature * held.depthMm, 'cracked');
+  }
+
+  /** The state between two others at which a measure of it changes sign. */
+  private crossing(from: CurvePoint, to: CurvePoint, measure: (point: CurvePoint) => number): CurvePoint {
+    const slope = slopeBetween(from, to);
+    const guess = (curvature: number) => from.topStrain + slope * (curvature - from.curvaturePerMm);
+    const root = illinois(
+      (curvature) => measure(this.pointAt(curvature, guess(curvature))),
+      from.curvaturePerMm,
+      to.curvaturePerMm,
+    );
+    return Number.isNaN(root) ? to : this.pointAt(root, guess(root));
+  }
+
+  /** Ends the walk at the first loss of 20 % from the highest moment so far, and finds the peak between the points. */
+  private cutAtDrop(walked: readonly CurvePoint[], cause: UltimateCause) {
+    let top = 0;
+    let last = 1;
+    for (; last < walked.length; last++) {
+      if (walked[last]!.momentNmm > walked[top]!.momentNmm) top = last;
+      if (walked[last]!.momentNmm < KEPT_SHARE * walked[top]!.momentNmm) break;
+    }
+    const isDropped = last < walked.length;
+    const peak = this.peakNear(walked, top);
+    const kept = KEPT_SHARE * peak.momentNmm;
+    const points = walked.slice(0, last);
+    if (isDropped) {
+      while (points.length > top + 1 && points[points.length - 1]!.momentNmm < kept) points.pop();
+      const from = points[points.length - 1]!;
+      const drop = this.crossing(
+        from.curvaturePerMm < peak.curvaturePerMm ? peak : from,
+        walked[points.length]!,
+        (p) => p.momentNmm - kept,
+      );
+      points.push(drop);
+    }
+    if (peak !== walked[top]) {
+      const at = points.findIndex((point) => point.curvaturePerMm > peak.curvaturePerMm);
+      points.splice(at, 0, peak);
+    }
+    return { points, peak, cause: isDropped ? ('moment-drop' as const) : cause };
+  }
+
+  /** The highest state between the neighbours of the highest point, by parabolas through the three. */
+  private peakNear(points: readonly CurvePoint[], top: number): CurvePoint {
+    let best = points[top]!;
+    let left = points[top - 1];
+    let right = points[top + 1];
+    if (!left || !right) return best;
+    for (let step = 0; step < PEAK_STEPS; step++) {
+      const point = this.pointAt(crownOf(left, best, right), best.topStrain);
+      const isLeft = point.curvaturePerMm < best.curvaturePerMm;
+      if (point.momentNmm > best.momentNmm) {
+        if (isLeft) right = best;
+        else left = best;
+        best = point;
+      } else if (isLeft) left = point;
+      else right = point;
+    }
+    return best;
+  }
+}

@@ -1,0 +1,215 @@
+import type { CurveModel } from './curve-model.ts';
+
+/**
+ * Axial balance of a section at a curvature φ (1/mm) and a strain of the compression face, compression positive.
+ *
+ * Plane sections: ε(y) = εtop − φ y. A strip of width b between two strains carries b/φ (F(ε₁) − F(ε₂)) and has the moment
+ * b/φ² (G(ε₁) − G(ε₂)) about the neutral axis, F and G being the law's running integrals; the core counts as its own law
+ * less that of the cover over its width. Concrete displaced by bars in compression is taken off with the stress of its own
+ * law at the bar.
+ */
+
+/** Net force of a state and how it grows with the top strain, written by `balance`. */
+export interface Balance {
+  /** Compression less tension, N. */
+  forceN: number;
+  /** dN/dεtop, N. */
+  stiffnessN: number;
+  /** Concrete's compression alone, N. */
+  concreteN: number;
+}
+
+export const emptyBalance = (): Balance => ({ forceN: 0, stiffnessN: 0, concreteN: 0 });
+
+/** Fills `out` for one state of the cracked section. */
+export function balance(model: CurveModel, curvature: number, topStrain: number, out: Balance): void {
+  const { cover, core, steel, depths, areas, isDisplacedDeducted } = model;
+  let force = model.widthMm * cover.forceIntegral(topStrain);
+  let slope = model.widthMm * cover.nearStress(topStrain);
+  const atFarFace = topStrain - curvature * model.depthMm;
+  if (atFarFace > 0) {
+    force -= model.widthMm * cover.forceIntegral(atFarFace);
+    slope -= model.widthMm * cover.nearStress(atFarFace);
+  }
+  if (core) {
+    const atTop = topStrain - curvature * model.coreTopMm;
+    if (atTop > 0) {
+      force += model.coreWidthMm * (core.forceIntegral(atTop) - cover.forceIntegral(atTop));
+      slope += model.coreWidthMm * (core.nearStress(atTop) - cover.nearStress(atTop));
+      const atBottom = topStrain - curvature * model.coreBottomMm;
+      if (atBottom > 0) {
+        force -= model.coreWidthMm * (core.forceIntegral(atBottom) - cover.forceIntegral(atBottom));
+        slope -= model.coreWidthMm * (core.nearStress(atBottom) - cover.nearStress(atBottom));
+      }
+    }
+  }
+  force /= curvature;
+  slope /= curvature;
+  out.concreteN = force;
+  for (let i = 0; i < depths.length; i++) {
+    const area = areas[i]!;
+    const strain = topStrain - curvature * depths[i]!;
+    force += area * steel.stress(strain);
+    slope += area * steel.tangent(strain);
+    if (strain > 0 && isDisplacedDeducted) force -= area * concreteStressAt(model, depths[i]!, strain);
+  }
+  out.forceN = force;
+  out.stiffnessN = slope;
+}
+
+/** Stress of the concrete at a bar, MPa. */
+function concreteStressAt(model: CurveModel, depthMm: number, strain: number): number {
+  const { core, cover } = model;
+  if (core && depthMm >= model.coreTopMm && depthMm <= model.coreBottomMm) return core.nearStress(strain);
+  return cover.nearStress(strain);
+}
+
+/** Force of the uncracked concrete in tension below the axis, N, and its moment about the axis, N·mm. */
+function tensionForce(model: CurveModel, curvature: number, topStrain: number): number {
+  const stretch = curvature * model.depthMm - topStrain;
+  if (stretch <= 0) return 0;
+  return (
+    (model.widthMm * model.tension.ecMPa * stretch * stretch) / (2 * curvature) -
+    displacedTension(model, curvature, topStrain, 0)
+  );
+}
+
+/** Tension of concrete that bars displace: force for power 0, moment about the axis for power 1. */
+function displacedTension(model: CurveModel, curvature: number, topStrain: number, power: 0 | 1): number {
+  if (!model.isDisplacedDeducted) return 0;
+  const axis = topStrain / curvature;
+  let sum = 0;
+  for (let i = 0; i < model.depths.length; i++) {
+    const lever = model.depths[i]! - axis;
+    if (lever > 0) sum += model.areas[i]! * model.tension.ecMPa * curvature * lever * (power ? lever : 1);
+  }
+  return sum;
+}
+
+/** Whether the section is cracked; before that the concrete below the axis pulls. */
+export type Stage = 'uncracked' | 'cracked';
+
+/** Net force of a state, N, compression positive. */
+export function netForceN(
+  model: CurveModel,
+  stage: Stage,
+  state: { readonly curvature: number; readonly topStrain: number },
+  out: Balance,
+): number {
+  balance(model, state.curvature, state.topStrain, out);
+  return stage === 'cracked'
+    ? out.forceN
+    : out.forceN - tensionForce(model, state.curvature, state.topStrain);
+}
+
+/** Moment of a balanced state, N·mm, sagging positive (taken about its neutral axis). */
+export function momentNmm(
+  model: CurveModel,
+  curvature: number,
+  topStrain: number,
+  stage: Stage = 'cracked',
+): number {
+  const { cover, core, steel, depths, areas, isDisplacedDeducted } = model;
+  let moment =
+    model.widthMm *
+    (cover.momentIntegral(topStrain) - cover.momentIntegral(topStrain - curvature * model.depthMm));
+  if (core) {
+    const atTop = topStrain - curvature * model.coreTopMm;
+    const atBottom = topStrain - curvature * model.coreBottomMm;
+    moment +=
+      model.coreWidthMm *
+      (core.momentIntegral(atTop) -
+        cover.momentIntegral(atTop) -
+        core.momentIntegral(atBottom) +
+        cover.momentIntegral(atBottom));
+  }
+  moment /= curvature * curvature;
+  for (let i = 0; i < depths.length; i++) {
+    const strain = topStrain - curvature * depths[i]!;
+    let stress = steel.stress(strain);
+    if (strain > 0 && isDisplacedDeducted) stress -= concreteStressAt(model, depths[i]!, strain);
+    moment += (areas[i]! * stress * strain) / curvature;
+  }
+  if (stage === 'cracked') return moment;
+  const stretch = Math.max(0, curvature * model.depthMm - topStrain);
+  return (
+    moment +
+    (model.widthMm * model.tension.ecMPa * stretch ** 3) / (3 * curvature * curvature) -
+    displacedTension(model, curvature, topStrain, 1)
+  );
+}
+
+const MOST_STEPS = 80;
+/** Relative step after which Newton's iteration has settled: the next would be of the order of its square. */
+const SETTLED = 1e-7;
+
+/**
+ * Top strain that balances the cracked section at a curvature: Newton from a guess, kept inside a bracket that shrinks
+ * with every step, halving where a step leaves it. At zero strain every bar pulls; with the axis at the deepest bar none does.
+ */
+export function balancedTopStrain(model: CurveModel, curvature: number, guess: number, out: Balance): number {
+  let low = 0;
+  let high = curvature * model.deepestMm;
+  let strain = guess > low && guess < high ? guess : 0.5 * high;
+  for (let step = 0; step < MOST_STEPS; step++) {
+    balance(model, curvature, strain, out);
+    if (out.forceN > 0) high = strain;
+    else low = strain;
+    const before = strain;
+    const next = strain - out.forceN / out.stiffnessN;
+    strain = next > low && next < high ? next : 0.5 * (low + high);
+    if (Math.abs(strain - before) <= SETTLED * strain) break;
+  }
+  return strain;
+}
+
+/** A strain (compression positive) held at a depth while the curvature is sought. */
+export interface HeldStrain {
+  readonly depthMm: number;
+  readonly strain: number;
+}
+
+/**
+ * Curvature between two bounds at which the section balances with a strain held at a depth; NaN where the bounds do not
+ * bracket one. False position with the stale end's force halved (Illinois), to the last digits.
+ */
+export function balancedCurvature(
+  model: CurveModel,
+  held: HeldStrain,
+  { low, high }: { readonly low: number; readonly high: number },
+  out: Balance,
+  stage: Stage = 'cracked',
+): number {
+  const forceAt = (curvature: number) =>
+    netForceN(model, stage, { curvature, topStrain: held.strain + curvature * held.depthMm }, out);
+  return illinois(forceAt, low, high);
+}
+
+/** Root of a continuous function between two bounds by the Illinois rule; NaN unless they bracket one. */
+export function illinois(valueAt: (x: number) => number, low: number, high: number): number {
+  let a = low;
+  let b = high;
+  let fa = valueAt(a);
+  let fb = valueAt(b);
+  if (fa === 0) return a;
+  if (fb === 0) return b;
+  if (!(fa < 0 !== fb < 0) || Number.isNaN(fa + fb)) return NaN;
+  for (let step = 0; step < MOST_STEPS; step++) {
+    // every fourth step halves, so that a kink cannot hold the rule up
+    const x = step % 4 === 3 ? 0.5 * (a + b) : (a * fb - b * fa) / (fb - fa);
+    const fx = valueAt(x);
+    if (fx === 0 || Math.abs(x - b) <= 1e-13 * Math.abs(x)) return x;
+    if (fx < 0 === fb < 0) {
+      b = x;
+      fb = fx;
+      fa *= 0.5;
+    } else {
+      a = b;
+      fa = fb;
+      b = x;
+      fb = fx;
+    }
+    if (Math.abs(a - b) <= 1e-13 * Math.abs(b)) break;
+  }
+  return b;
+}
