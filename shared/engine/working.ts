@@ -100,7 +100,7 @@ function ultimate({ section, layout, flexure, ruleSet }: WorkingSource): Working
     step(
       'd',
       'ultimate',
-      ['d', 'Σ A d/Σ A of the tension steel', layout.dMm, 'length'],
+      ['d', 'Σ A d/Σ A, tension steel', layout.dMm, 'length'],
       layerInputs(layout, 'tension'),
       STATICS,
     ),

@@ -107,7 +107,7 @@ const METRIC: Coefficients = {
   hookTailLeastMm: 75,
   largestTightBendMm: 16,
   formulas: {
-    blockDepthFactor: '0.85 − 0.05 (f′c − 28)/7 from 28 to 55 MPa, 0.85 below, 0.65 above',
+    blockDepthFactor: '0.85 − 0.05 (f′c − 28)/7, from 28 to 55 MPa; 0.85 below, 0.65 above',
     concreteModulus: '4700 √f′c; MPa',
     ruptureModulus: '0.62 √f′c; MPa',
     leastSteel: 'max(0.25 √f′c, 1.4) b d/fy; MPa, fy at most 550 MPa',
