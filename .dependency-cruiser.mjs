@@ -1,5 +1,5 @@
 /**
- * Import directions of the house: engine ← sweep ← contract ← {server, client}. Everything not listed is forbidden.
+ * Import directions of the house: engine ← sweep ← {contract, verification} ← {server, client}. Everything not listed is forbidden.
  *
  * @param {string} name
  * @param {string} from
@@ -28,6 +28,10 @@ const never = (name, from, to, except) => ({
 const shared = [
   only('engine-imports-only-itself', '^shared/engine/', ['^shared/engine/']),
   only('sweep-imports-only-engine', '^shared/sweep/', ['^shared/(engine|sweep)/']),
+  // The published cases and their computations: the engine and the sweep know nothing of how they are checked.
+  only('verification-imports-only-engine-and-sweep', '^shared/verification/', [
+    '^shared/(engine|sweep|verification)/',
+  ]),
   only('contract-imports-only-shared-and-zod', '^shared/contract/', [
     '^shared/(engine|sweep|contract)/',
     '^node_modules/(zod|zod-openapi)/',

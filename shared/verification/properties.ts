@@ -178,3 +178,9 @@ const sweeps = {
 export const PROPERTIES = { ...ductility, ...strength, ...bars, ...sweeps };
 
 export const TESTED_PROPERTIES: readonly TestedProperty[] = Object.values(PROPERTIES);
+
+export const PROPERTIES_INTRODUCTION =
+  'Rules that hold for any section, tried by the tests on what is drawn at random from fixed seeds.';
+
+export const COMPARISONS_INTRODUCTION =
+  'The same answer found a second way by code written apart. The hot loop and the engine that explains share the solvers of the two neutral axes and the comparisons with limits; the bisection holds the solver at ultimate.';
