@@ -72,9 +72,10 @@ const steelSetsSchema = (label: string, isEmptyAllowed: boolean) =>
           .array(steelAreaSchema(`${label}: area`))
           .min(1, `${label}: enter at least one area`)
           .max(5000, `${label}: at most 5000 areas`),
+        // Steel at no distance from its face would lie in it.
         at: z.union([
-          z.object({ offsetMm: bounded('Distance from the face', 0, 2000, 'mm') }),
-          z.object({ shareOfDepth: bounded('Share of h', 0, 0.5, '') }),
+          z.object({ offsetMm: bounded('Distance from the face', 1, 2000, 'mm') }),
+          z.object({ shareOfDepth: bounded('Share of h', 0.001, 0.5, '') }),
         ]),
       }),
     ])

@@ -143,6 +143,29 @@ describe('a sweep', () => {
     ]);
   });
 
+  it('has steel areas inside the section, however near its face, and none that are but a trace', async () => {
+    const areas = (areasMm2: number[], at: object) => ({
+      tension: { kind: 'areas', areasMm2, at },
+      compression: { kind: 'areas', areasMm2: [0], at: { offsetMm: 50 } },
+    });
+    const path = ['definition', 'space', 'tension'];
+    for (const [changes, field, message] of [
+      [areas([500], { offsetMm: 1e-13 }), ['at', 'offsetMm'], 'Distance from the face must be at least 1 mm'],
+      [areas([500], { shareOfDepth: 1e-17 }), ['at', 'shareOfDepth'], 'Share of h must be at least 0.001'],
+      [
+        areas([500, 1e-9], { offsetMm: 1 }),
+        ['areasMm2', 1],
+        'Tension bars: area must be 0, or at least 1 mm²',
+      ],
+    ] as const) {
+      const { body } = await save(changes).expect(400);
+      expect(body.error.issues).toEqual([{ path: [...path, ...field], message }]);
+    }
+    const sweep = (await save(areas([500], { offsetMm: 1 })).expect(200)).body;
+    const run = (await engineer.post(`/sweeps/${sweep.id}/runs`).expect(200)).body;
+    await engineer.get(`/runs/${run.id}/sections/0`).expect(200);
+  });
+
   it('names every bar that the project’s standard does not list', async () => {
     const { body } = await save({
       tension: { kind: 'bars', sizes: ['20', '25', '#8'], counts: [3], none: false },
