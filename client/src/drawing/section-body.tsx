@@ -1,39 +1,21 @@
+import type { Placement } from '#shared/drawing/large-plan.ts';
+import { hookPath } from '#shared/drawing/hook-path.ts';
 import type { SectionGeometry, StirrupOutline } from '#shared/drawing/section-geometry.ts';
-
-/** Where the section stands in the picture: its top left corner and pixels per mm. */
-export interface Placement {
-  readonly xPx: number;
-  readonly yPx: number;
-  readonly pxPerMm: number;
-}
 
 /** Thinner than this a line would fade on screen, so a leg drawn at a small scale keeps it. */
 const LEAST_LEG_PX = 1;
 const LEAST_BAR_RADIUS_PX = 1.1;
 const LEAST_BAND_PX = 1.5;
-/** ACI 25.3.2: the straight end of a 135° hook is six diameters, and 3 in at least. */
-const HOOK_DIAMETERS = 6;
-const LEAST_HOOK_MM = 75;
-
 interface BodyProps {
   readonly geometry: SectionGeometry;
   readonly at: Placement;
   readonly hasHooks: boolean;
 }
 
-/** The 135° hook of a closed stirrup, turned into the core at the top left corner. */
 function Hook({ stirrup, at }: { readonly stirrup: StirrupOutline; readonly at: Placement }) {
-  const lengthMm = Math.max(HOOK_DIAMETERS * stirrup.legThicknessMm, LEAST_HOOK_MM);
-  const reach = (Math.min(lengthMm, stirrup.widthMm / 2, stirrup.heightMm / 2) * at.pxPerMm) / Math.SQRT2;
-  const bend = stirrup.cornerRadiusMm * at.pxPerMm;
-  const x = at.xPx + stirrup.xMm * at.pxPerMm;
-  const y = at.yPx + stirrup.yMm * at.pxPerMm;
-  /** The two ends leave the bend where it has turned by 135°, on either side of the diagonal. */
-  const near = bend * (1 - Math.SQRT1_2);
-  const far = bend * (1 + Math.SQRT1_2);
   return (
     <path
-      d={`M ${x + near} ${y + far} l ${reach} ${reach} M ${x + far} ${y + near} l ${reach} ${reach}`}
+      d={hookPath(stirrup, at)}
       className="fill-none stroke-steel"
       strokeWidth={Math.max(stirrup.legThicknessMm * at.pxPerMm, LEAST_LEG_PX)}
       strokeLinecap="butt"
