@@ -109,6 +109,19 @@ describe('a sweep an office would run', () => {
     }
   });
 
+  it('draws two wide measures in a few thousand density cells that still count every feasible section', () => {
+    const wide: SweepProblem = {
+      ...OFFICE_PROBLEM,
+      space: { ...OFFICE_PROBLEM.space, depth: { kind: 'range', from: 400, to: 1200, step: 2.5 } },
+      demand: { muNmm: 0, ductilityTarget: null, depthCapMm: null },
+    };
+    const { density, feasible } = run(wide, { x: 'curvatureDuctility', y: 'designStrengthNmm' }).result;
+    expect(density.length).toBeGreaterThan(500);
+    expect(density.length).toBeLessThanOrEqual(6000);
+    expect(sum(density)).toBe(feasible);
+    expect(density.every((cell) => cell.x0 < cell.x1 && cell.y0 < cell.y1)).toBe(true);
+  });
+
   it('says what each check costs: the best section failing only that check, or none better', () => {
     const capped = { ...OFFICE_PROBLEM, demand: { ...OFFICE_PROBLEM.demand, depthCapMm: 550 } };
     const { failures, front } = run(capped).result;
