@@ -25,6 +25,7 @@ const SYMBOLS: readonly (readonly [key: string, symbol: string])[] = [
   ['d2', 'd′'],
   ['fs2', 'f′s'],
   ['fc_top', 'fc top'],
+  ['fc_at_yield_share', 'fc/f′c at yield'],
   ['fc', 'f′c'],
   ['c_dt', 'c/dt'],
   ['z_over_d', 'z/d'],
@@ -40,6 +41,7 @@ export function symbolText(key: string): string {
     .replaceAll(/(\d)p(\d)/g, '$1.$2')
     .replaceAll('c_dt', 'c/dt')
     .replaceAll('_', ' ')
+    .replaceAll(/\b(mm|in)2\b/g, '$1²')
     .replaceAll(/\bphi/g, 'φ')
     .replaceAll(/\beps\b/g, 'ε')
     .replaceAll(/\brho\b/g, 'ρ');

@@ -39,6 +39,7 @@ const pages = () => {
     `${base}/prices`,
     `${base}/people`,
     `${base}/candidates/${candidates[0]!.id}`,
+    '/verification',
     '/no-such-page',
   ];
 };

@@ -71,6 +71,10 @@ const routes: RouteObject[] = [
                     ...page(async () => (await import('./pages/new-project-page.tsx')).NewProjectPage),
                   },
                   projectRoutes,
+                  {
+                    path: 'verification',
+                    ...page(async () => (await import('./pages/verification-page.tsx')).VerificationPage),
+                  },
                   { path: 'forbidden', Component: ForbiddenPage },
                   { path: '*', Component: NotFoundPage },
                 ],

@@ -14,6 +14,7 @@ export const paths = {
   run: (projectId: string, runId: string) => `/projects/${projectId}/runs/${runId}`,
   section: (projectId: string) => `/projects/${projectId}/section`,
   candidate: (projectId: string, candidateId: string) => `/projects/${projectId}/candidates/${candidateId}`,
+  verification: () => '/verification',
   shared: (token: string) => `/shared/${token}`,
 };
 

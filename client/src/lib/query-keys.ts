@@ -13,5 +13,6 @@ export const queryKeys = {
   candidates: (projectId: string) => ['project', projectId, 'candidates'] as const,
   candidate: (candidateId: string) => ['candidate', candidateId] as const,
   shareLinks: (projectId: string) => ['project', projectId, 'share-links'] as const,
+  verification: (engineVersion: string) => ['verification', engineVersion] as const,
   shared: (token: string) => ['shared', token] as const,
 };

@@ -14,13 +14,13 @@ const PATH: Readonly<Record<Verdict, string>> = {
 };
 
 /** The verdict as a shape and a word; colour only repeats it. */
-export function VerdictMark({ verdict }: { readonly verdict: Verdict }) {
+export function VerdictMark({ verdict, word }: { readonly verdict: Verdict; readonly word?: string }) {
   return (
     <span className={`inline-flex items-center gap-1.5 text-xs font-medium ${TEXT[verdict]}`}>
       <svg viewBox="0 0 12 12" className="size-3 shrink-0" aria-hidden="true">
         <path d={PATH[verdict]} fill="none" stroke="currentColor" strokeWidth="1.8" />
       </svg>
-      {WORD[verdict]}
+      {word ?? WORD[verdict]}
     </span>
   );
 }
