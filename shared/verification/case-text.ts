@@ -34,7 +34,7 @@ const SYMBOLS: readonly (readonly [key: string, symbol: string])[] = [
 ];
 
 /** `phi_14_at_c_dt_0p5` → `φ 14 at c/dt 0.5`. */
-export function symbolText(key: string): string {
+function symbolText(key: string): string {
   const start = SYMBOLS.find(([name]) => key === name || key.startsWith(`${name}_`));
   const rest = start ? key.slice(start[0].length) : key;
   const words = rest
