@@ -4,7 +4,8 @@ import pg from 'pg';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { DEMO_ACCOUNTS, DEMO_PASSWORD } from '#server/cli/demo-accounts.mjs';
 import { CANDIDATE_STATES, type Candidate, type Project, type Sweep } from '#shared/contract/records.ts';
-import { openOffice, testEnvironment, type TestOffice } from '../support/office.ts';
+import { openOffice, type TestOffice } from '../support/office.ts';
+import { testEnvironment } from '../support/test-environment.ts';
 import { createTestDatabase, type TestDatabase } from '../support/test-database.ts';
 
 const run = promisify(execFile);

@@ -16,7 +16,8 @@ import { prepareSweep } from '#shared/sweep/prepared-sweep.ts';
 import { sweepRange } from '#shared/sweep/sweep-range.ts';
 import { addProject, scaledSweep } from '../support/office-project.ts';
 import { createTestDatabase, type TestDatabase } from '../support/test-database.ts';
-import { insertPeople, testEnvironment } from '../support/office.ts';
+import { insertPeople } from '../support/office.ts';
+import { testEnvironment } from '../support/test-environment.ts';
 
 const log = createLog('silent');
 const SWEEP = scaledSweep(20, 1801);

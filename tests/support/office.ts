@@ -10,6 +10,7 @@ import { ROLES, type Role } from '#shared/contract/records.ts';
 import { PASSWORD } from './factories.ts';
 import { signInAs, type SignedIn } from './signed-in.ts';
 import type { TestDatabase } from './test-database.ts';
+import { testEnvironment } from './test-environment.ts';
 
 /** One person per role, and an engineer who is on nobody's project. */
 const ACCOUNTS = [...ROLES, 'outsider'] as const;
@@ -29,14 +30,6 @@ export interface TestOffice {
   readonly signIn: (email: string, password: string) => Promise<SignedIn>;
   close(): Promise<void>;
 }
-
-export const testEnvironment = (databaseUrl: string): NodeJS.ProcessEnv => ({
-  NODE_ENV: 'test',
-  DATABASE_URL: databaseUrl,
-  SESSION_SECRET: 'a secret of the tests, long enough to be one',
-  COMPUTE_THREADS: '2',
-  API_REQUESTS_PER_MINUTE: '1000000',
-});
 
 /** Takes the database over: closing the office drops it. */
 export async function openOffice(

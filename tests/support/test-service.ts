@@ -5,7 +5,7 @@ import { readConfig, type Config } from '#server/config.ts';
 import type { Deps } from '#server/deps.ts';
 import { startServices } from '#server/services.ts';
 import { createTestDatabase } from './test-database.ts';
-import { testEnvironment } from './office.ts';
+import { testEnvironment } from './test-environment.ts';
 
 export interface TestService {
   app: Express;
