@@ -47,9 +47,10 @@ export function SharedPage() {
 function SharedFailure({ error, onRetry }: { readonly error: unknown; readonly onRetry: () => void }) {
   const isGone = error instanceof ApiError && (error.code === 'not-found' || error.code === 'invalid-input');
   return isGone ? (
-    <EmptyState title="This link no longer works">
-      It has expired, was revoked, or was not copied whole. Ask whoever sent it for a new one.
-    </EmptyState>
+    <PageHeader
+      title="This link no longer works"
+      lead="It has expired, was revoked, or was not copied whole. Ask whoever sent it for a new one."
+    />
   ) : (
     <ErrorState error={error} title="The shortlist could not be loaded" onRetry={onRetry} />
   );
