@@ -56,7 +56,7 @@ describe('a run of a hundred and seventy million sections', () => {
     expect(await bar(page).count()).toBe(0);
     const [kept = 0, whole] = (await words.innerText()).match(/[\d,]+/g)!.map(countIn);
     expect(whole).toBe(HUGE_COUNT);
-    await expect.poll(() => evaluatedSoFar(page), 'the front is of what was done').toBe(kept);
+    await expect.poll(() => evaluatedSoFar(page)).toBe(kept);
     expect(kept).toBeGreaterThanOrEqual(reloaded);
     const section = page.getByRole('region', { name: 'Chosen section' });
     await section.getByText('✓ Meets the listed checks', { exact: true }).waitFor();

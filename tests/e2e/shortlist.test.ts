@@ -156,7 +156,8 @@ describe('a checker', () => {
 
 describe('a viewer', () => {
   it('is shown and sent no rates and no costs, wherever they look', async () => {
-    const { page } = await office.visit('viewer');
+    const visit = await office.visit('viewer');
+    const { page } = visit;
     const sent: Promise<string[]>[] = [];
     page.on('response', (response) => {
       if (!response.url().includes('/api/') || response.url().endsWith('/events')) return;
@@ -169,8 +170,7 @@ describe('a viewer', () => {
       runPath('reading-room'),
       runPath('reading-room-fine'),
     ]) {
-      await page.goto(address);
-      await page.waitForLoadState('networkidle');
+      await visit.open(address);
       const text = await page.getByRole('main').innerText();
       expect(text.length, address).toBeGreaterThan(60);
       expect(text, address).not.toMatch(/USD|\bcosts?\b(?!: no rates)/i);

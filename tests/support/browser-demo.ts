@@ -16,5 +16,5 @@ export const runPath = (sweep: string, project = LIBRARY): string =>
   `${project}/runs/${stableId(`run/${sweep}`)}`;
 export const sweepPath = (sweep: string, project = LIBRARY): string =>
   `${project}/sweeps/${stableId(`sweep/${sweep}`)}`;
-export const candidatePath = (label: string): string =>
-  `${LIBRARY}/candidates/${stableId(`candidate/library/${label}`)}`;
+export const candidateId = (label: string): string => stableId(`candidate/library/${label}`);
+export const candidatePath = (label: string): string => `${LIBRARY}/candidates/${candidateId(label)}`;

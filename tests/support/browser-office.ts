@@ -1,10 +1,11 @@
 import { mkdirSync } from 'node:fs';
 import path from 'node:path';
-import type { Browser, BrowserContextOptions } from 'playwright-core';
+import pg from 'pg';
+import type { Browser, BrowserContext } from 'playwright-core';
 import { afterAll, afterEach, beforeAll, expect, inject } from 'vitest';
 import type { Role } from '#shared/contract/records.ts';
 import { TEST_FOLDER } from '#server/cli/project-paths.mjs';
-import { launchChromium, Visit } from './browser.ts';
+import { launchChromium, openProfile, Visit } from './browser.ts';
 import { type DemoService, startDemoService } from './browser-service.ts';
 
 /** What a failed test's pages looked like. */
@@ -12,55 +13,58 @@ const FAILURES_FOLDER = path.join(TEST_FOLDER, 'failed-pages');
 
 export interface BrowserOffice {
   readonly origin: string;
-  readonly databaseUrl: string;
-  /** Somebody at a machine of their own: signed in as that role, or a stranger for null. */
-  visit: (role: Role | null, options?: BrowserContextOptions) => Promise<Visit>;
-  /** Ends the test's visits that are open so far; a complaint of the browser fails the test. */
-  leave: () => Promise<void>;
+  /** A new window: of whoever has that role, signed in, or for null of a stranger with nothing in their browser. */
+  visit: (role: Role | null) => Promise<Visit>;
+  /** Ends everybody's session at the service, behind the browsers' backs. */
+  endSessions: () => Promise<void>;
 }
 
 /**
- * One running service with the demo office and one browser for the tests of a file. After each test every page is
- * closed, and the test fails for what a browser has complained of unless the test said to expect it.
+ * One running service with the demo office and one browser for the tests of a file. A role's windows share a profile.
+ * After each test its windows are closed, and it fails for what a browser has complained of unless it said to expect it.
  */
 export function useBrowserOffice(): BrowserOffice {
   let service: DemoService | undefined;
   let browser: Browser | undefined;
+  const profiles = new Map<Role, BrowserContext>();
   const visits: Visit[] = [];
 
   beforeAll(async () => {
     [service, browser] = await Promise.all([startDemoService(inject('postgresUrl')), launchChromium()]);
   });
   afterEach(async ({ task }) => {
-    if (task.result?.state === 'fail') await keepPictures(visits, task.name);
-    await leave();
+    const ended = visits.splice(0);
+    if (task.result?.state === 'fail') await keepPictures(ended, task.name);
+    await Promise.all(ended.map(({ page }) => page.close()));
+    const complaints = ended.flatMap((visit) => visit.complaints);
+    expect(complaints, 'what the browser complained of').toEqual([]);
   });
   afterAll(async () => {
     await browser?.close();
     await service?.close();
   });
 
-  const leave = async () => {
-    const ended = visits.splice(0);
-    await Promise.all(ended.map(({ context }) => context.close()));
-    expect(
-      ended.flatMap(({ complaints }) => complaints),
-      'what the browser complained of',
-    ).toEqual([]);
+  const visit = async (role: Role | null): Promise<Visit> => {
+    const known = role === null ? undefined : profiles.get(role);
+    const visit = await Visit.begin(known ?? (await openProfile(browser!, service!.origin)), service!.origin);
+    visits.push(visit);
+    if (role !== null && known === undefined) {
+      await visit.signIn(role);
+      profiles.set(role, visit.context);
+    }
+    return visit;
   };
   return {
     get origin() {
       return service!.origin;
     },
-    get databaseUrl() {
-      return service!.databaseUrl;
-    },
-    leave,
-    visit: async (role, options) => {
-      const visit = await Visit.begin(browser!, service!.origin, options);
-      visits.push(visit);
-      if (role !== null) await visit.signIn(role);
-      return visit;
+    visit,
+    endSessions: async () => {
+      const database = new pg.Client({ connectionString: service!.databaseUrl });
+      await database.connect();
+      await database.query('delete from session');
+      await database.end();
+      profiles.clear();
     },
   };
 }

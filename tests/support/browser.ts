@@ -1,11 +1,4 @@
-import {
-  type APIResponse,
-  type Browser,
-  type BrowserContext,
-  type BrowserContextOptions,
-  chromium,
-  type Page,
-} from 'playwright-core';
+import { type APIResponse, type Browser, type BrowserContext, chromium, type Page } from 'playwright-core';
 import type { Role } from '#shared/contract/records.ts';
 import { findChromium } from '#server/cli/chromium.mjs';
 import { DEMO_ACCOUNTS, DEMO_PASSWORD } from '#server/cli/demo-accounts.mjs';
@@ -29,7 +22,18 @@ export async function launchChromium(): Promise<Browser> {
   return chromium.launch({ executablePath, args: FLAGS });
 }
 
-/** One person at one machine: a browser profile of their own with one page, and whatever the browser complained of. */
+/** A browser profile: one person's cookies and cache at one machine. */
+export async function openProfile(browser: Browser, origin: string): Promise<BrowserContext> {
+  const context = await browser.newContext({
+    baseURL: origin,
+    viewport: { width: 1440, height: 900 },
+    reducedMotion: 'reduce',
+  });
+  context.setDefaultTimeout(PATIENCE_MS);
+  return context;
+}
+
+/** One window of a profile, and whatever the browser complained of in it. */
 export class Visit {
   readonly origin: string;
   readonly page: Page;
@@ -48,14 +52,7 @@ export class Visit {
     });
   }
 
-  static async begin(browser: Browser, origin: string, options: BrowserContextOptions = {}): Promise<Visit> {
-    const context = await browser.newContext({
-      baseURL: origin,
-      viewport: { width: 1440, height: 900 },
-      reducedMotion: 'reduce',
-      ...options,
-    });
-    context.setDefaultTimeout(PATIENCE_MS);
+  static async begin(context: BrowserContext, origin: string): Promise<Visit> {
     return new Visit(origin, await context.newPage());
   }
 
@@ -67,6 +64,17 @@ export class Visit {
   /** Errors on the console and exceptions nobody caught, without the expected ones. */
   get complaints(): readonly string[] {
     return this.#complaints.filter((text) => !this.#expected.some((expected) => expected.test(text)));
+  }
+
+  /** Goes to an address and waits until everything on the page has arrived. */
+  async open(address: string): Promise<void> {
+    await this.page.goto(address);
+    await this.page.getByRole('heading', { level: 1 }).first().waitFor();
+    await this.page.waitForFunction(() =>
+      [...document.querySelectorAll('[role=status]')].every(
+        ({ textContent }) => !/^(Loading|The chart appears)/.test(textContent),
+      ),
+    );
   }
 
   /** Signs in without the screen; the page has the session from then on. */
