@@ -1,4 +1,4 @@
-import { Link, useLocation } from 'react-router-dom';
+import { Link } from 'react-router-dom';
 import type { TopicResult } from '#shared/verification/book.ts';
 import { quantityText } from '#shared/verification/case-text.ts';
 import { differenceSizeText } from '#shared/verification/number-text.ts';
@@ -46,9 +46,9 @@ export function BookSummary({ results }: { readonly results: readonly TopicResul
   );
 }
 
+/** Its link shows the topic whole, whatever the filter hides. */
 function TopicRow({ result }: { readonly result: TopicResult }) {
   const { topic, computed } = result;
-  const { search } = useLocation();
   const summary = summarise([result]);
   return (
     <tr className="middle">
@@ -57,7 +57,7 @@ function TopicRow({ result }: { readonly result: TopicResult }) {
           topic.title
         ) : (
           <Link
-            to={{ search, hash: topic.id }}
+            to={{ search: '', hash: topic.id }}
             className="underline decoration-concrete-edge hover:decoration-current"
           >
             {topic.title}

@@ -30,7 +30,7 @@ function useBookFilter() {
   );
   const [, setParams] = useSearchParams();
   // In one step: each of three would start from the address as it was and put the other two back.
-  const clear = () => setParams({}, { replace: true, preventScrollReset: true });
+  const clear = () => setParams({}, { replace: true, preventScrollReset: true, flushSync: true });
   return { filter: { find, topicId, provenance } satisfies BookFilter, change, clear };
 }
 
