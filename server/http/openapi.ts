@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { createDocument, type ZodOpenApiOperationObject, type ZodOpenApiPathsObject } from 'zod-openapi';
-import { endpoints, RUN_EVENTS_PATH, type EndpointName } from '#shared/contract/endpoints.ts';
+import { endpoints, PAPERS, RUN_EVENTS_PATH, SHEET_PDF_PATH, type EndpointName } from '#shared/contract/endpoints.ts';
 import { errorBodySchema } from '#shared/contract/errors.ts';
 import { idSchema } from '#shared/contract/numbers.ts';
 import { viewProgressSchema } from '#shared/contract/records.ts';
@@ -39,8 +39,28 @@ const runEvents: ZodOpenApiOperationObject = {
   },
 };
 
+const sheetPdf: ZodOpenApiOperationObject = {
+  operationId: 'sheetPdf',
+  description: 'The calculation sheet of a candidate as a PDF, with what the reader is shown of it.',
+  requestParams: {
+    path: z.object({ id: idSchema }),
+    query: z.object({ paper: z.enum(PAPERS).optional() }),
+  },
+  security: [{ session: [] }],
+  responses: {
+    '200': {
+      description: 'The file',
+      content: { 'application/pdf': { schema: { type: 'string', format: 'binary' } } },
+    },
+    default: errorAnswer,
+  },
+};
+
 function describePaths(): ZodOpenApiPathsObject {
-  const paths: ZodOpenApiPathsObject = { [openApiPath(RUN_EVENTS_PATH)]: { get: runEvents } };
+  const paths: ZodOpenApiPathsObject = {
+    [openApiPath(RUN_EVENTS_PATH)]: { get: runEvents },
+    [openApiPath(SHEET_PDF_PATH)]: { get: sheetPdf },
+  };
   for (const name of Object.keys(endpoints) as EndpointName[]) {
     const path = openApiPath(endpoints[name].path);
     paths[path] = { ...paths[path], [endpoints[name].method]: describe(name) };

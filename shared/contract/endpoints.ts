@@ -17,6 +17,8 @@ import {
   sessionSchema,
   shareLinkSchema,
   sharedShortlistSchema,
+  sheetValueInputSchema,
+  sheetValuesSchema,
   signInSchema,
   sweepInputSchema,
   sweepSchema,
@@ -298,6 +300,23 @@ export const endpoints = {
     isPublic: false,
   },
 
+  listSheetValues: {
+    method: 'get',
+    path: '/candidates/:id/sheet-values',
+    params: byId,
+    body: null,
+    response: sheetValuesSchema,
+    isPublic: false,
+  },
+  setSheetValue: {
+    method: 'put',
+    path: '/candidates/:id/sheet-values',
+    params: byId,
+    body: sheetValueInputSchema,
+    response: sheetValuesSchema,
+    isPublic: false,
+  },
+
   listShareLinks: {
     method: 'get',
     path: '/projects/:id/share-links',
@@ -342,3 +361,8 @@ export type ResponseOf<N extends EndpointName> = z.infer<Endpoint<N>['response']
 
 /** The stream of a run: server-sent events named `progress`, each one ViewProgress as JSON, with an increasing id. */
 export const RUN_EVENTS_PATH = '/runs/:id/events';
+
+/** A candidate's calculation sheet on paper; the query `paper` is one of PAPERS, A4 without it. */
+export const SHEET_PDF_PATH = '/candidates/:id/sheet.pdf';
+export const PAPERS = ['a4', 'letter'] as const;
+export type Paper = (typeof PAPERS)[number];

@@ -191,12 +191,37 @@ const commentSchema = z.object({
   createdAt: timestamp,
 });
 
+/** A checker's own value for one line of the calculation sheet, in stored units, beside the sheet's. */
+export const sheetValueSchema = z.object({
+  line: z.string(),
+  value: z.number(),
+  onSheet: z.number(),
+  by: personSchema.pick({ id: true, name: true }),
+  updatedAt: timestamp,
+});
+export type SheetValue = z.infer<typeof sheetValueSchema>;
+
+export const sheetValuesSchema = z.object({
+  values: z.array(sheetValueSchema),
+  /** Whether the reader may write own values now. */
+  mayWrite: z.boolean(),
+});
+
+export const sheetValueInputSchema = z.object({
+  line: nonEmptyText('Line', 80),
+  /** Null takes the own value away. */
+  value: bounded('Own value', -1e18, 1e18, '').nullable(),
+});
+export type SheetValueInput = z.infer<typeof sheetValueInputSchema>;
+
 const transitionSchema = z.object({
   id: idSchema,
   from: z.enum(CANDIDATE_STATES).nullable(),
   to: z.enum(CANDIDATE_STATES),
   by: personSchema.pick({ id: true, name: true, role: true }),
   note: z.string(),
+  /** Own values of the sheet as they stood when it was checked or approved; null for every other step. */
+  sheetValues: z.array(sheetValueSchema).nullable(),
   createdAt: timestamp,
 });
 

@@ -65,6 +65,12 @@ const RULES: Record<
     serves: ['admin', 'engineer', 'checker', 'estimator'],
     body: () => ({ text: 'Noted' }),
   },
+  listSheetValues: { id: (w) => w.candidate, serves: EVERYBODY },
+  setSheetValue: {
+    id: (w) => w.candidate,
+    serves: ['checker'],
+    body: () => ({ line: 'mn', value: 250e6 }),
+  },
   moveCandidate: {
     id: (w) => w.candidate,
     serves: ['admin', 'checker'],

@@ -7,7 +7,7 @@ import pg from 'pg';
 import { pino } from 'pino';
 import request from 'supertest';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { endpoints, RUN_EVENTS_PATH } from '#shared/contract/endpoints.ts';
+import { endpoints, RUN_EVENTS_PATH, SHEET_PDF_PATH } from '#shared/contract/endpoints.ts';
 import { buildApp } from '#server/app.ts';
 import { readConfig } from '#server/config.ts';
 import { createDatabase } from '#server/db/client.ts';
@@ -26,6 +26,7 @@ describe('the API', () => {
     const expected = Object.entries({
       ...endpoints,
       runEvents: { method: 'get', path: RUN_EVENTS_PATH },
+      sheetPdf: { method: 'get', path: SHEET_PDF_PATH },
     }).map(([name, { method, path: at }]) => `${name} ${method} ${at.replace(/:(\w+)/g, '{$1}')}`);
     expect(described.sort()).toEqual(expected.sort());
     const signIn = body.paths['/session'].post.requestBody.content['application/json'].schema;

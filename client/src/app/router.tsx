@@ -41,6 +41,10 @@ const projectRoutes: RouteObject = {
       path: 'candidates/:candidateId',
       ...page(async () => (await import('./pages/candidate-page.tsx')).CandidatePage),
     },
+    {
+      path: 'candidates/:candidateId/sheet',
+      ...page(async () => (await import('./pages/sheet-page.tsx')).SheetPage),
+    },
     { path: '*', Component: NotFoundPage },
   ],
 };

@@ -12,6 +12,7 @@ export const queryKeys = {
   runSection: (runId: string, index: number) => ['run', runId, 'section', index] as const,
   candidates: (projectId: string) => ['project', projectId, 'candidates'] as const,
   candidate: (candidateId: string) => ['candidate', candidateId] as const,
+  sheetValues: (candidateId: string) => ['candidate', candidateId, 'sheet-values'] as const,
   shareLinks: (projectId: string) => ['project', projectId, 'share-links'] as const,
   verification: (engineVersion: string) => ['verification', engineVersion] as const,
   shared: (token: string) => ['shared', token] as const,

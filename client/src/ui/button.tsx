@@ -47,3 +47,13 @@ export function ButtonLink({
   const hover = LOOK[look].replaceAll('hover:enabled:', 'hover:');
   return <Link {...rest} className={classNames(base, hover, className)} />;
 }
+
+/** A link that looks like a button, to a file that the service hands over. */
+export function FileLink({
+  look = 'line',
+  className,
+  ...rest
+}: ComponentProps<'a'> & { readonly look?: ButtonLook }) {
+  const hover = LOOK[look].replaceAll('hover:enabled:', 'hover:');
+  return <a {...rest} className={classNames(base, hover, 'print:hidden', className)} />;
+}

@@ -1,5 +1,6 @@
-import { bigint, check, index, pgTable, text, timestamp, uuid } from 'drizzle-orm/pg-core';
-import { CANDIDATE_STATES } from '#shared/contract/records.ts';
+import { sql } from 'drizzle-orm';
+import { bigint, check, index, jsonb, pgTable, text, timestamp, uuid } from 'drizzle-orm/pg-core';
+import { CANDIDATE_STATES, type SheetValue } from '#shared/contract/records.ts';
 import { candidates } from './candidates.ts';
 import { oneOf } from './one-of.ts';
 import { people } from './people.ts';
@@ -21,11 +22,17 @@ export const candidateTransitions = pgTable(
       .notNull()
       .references(() => people.id),
     note: text().notNull(),
+    /** Own values of the sheet as they were when it was checked or approved; null for every other step. */
+    sheetValues: jsonb('sheet_values').$type<SheetValue[]>(),
     createdAt: timestamp('created_at', { withTimezone: true }).notNull().defaultNow(),
   },
   (t) => [
     index('candidate_transitions_candidate_idx').on(t.candidateId, t.position),
     check('candidate_transitions_from_check', oneOf(t.from, CANDIDATE_STATES)),
     check('candidate_transitions_to_check', oneOf(t.to, CANDIDATE_STATES)),
+    check(
+      'candidate_transitions_sheet_values_check',
+      sql`${t.sheetValues} is null or (${t.to} in ('checked', 'approved') and jsonb_typeof(${t.sheetValues}) = 'array')`,
+    ),
   ],
 );

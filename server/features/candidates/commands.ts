@@ -13,6 +13,7 @@ import { labelOf } from './label.ts';
 import { canFollow, COMMENT, findRefusal, PIN } from './policy.ts';
 import { requirePinnable } from './pinnable.ts';
 import { requireCandidate } from './queries.ts';
+import { listSheetValues } from './sheet-values.ts';
 import { hashSnapshot } from './snapshot.ts';
 
 /** Freezes a section with everything that decided its numbers. Answers the candidate's id. */
@@ -84,7 +85,10 @@ async function refuseDuplicate(tx: Database, beam: BeamRow, hash: string): Promi
     throw conflict(`This section is already pinned on beam ${beam.mark}, as candidate ${twin.label}`);
 }
 
-/** Moves a candidate on. Its row is locked: of two who move it at once one wins, and the other is told. */
+/**
+ * Moves a candidate on. Its row is locked: of two who move it at once one wins, and the other is told. A check and an
+ * approval keep the own values of the sheet as they are at that moment.
+ */
 export async function moveCandidate(
   db: Database,
   person: Person,
@@ -101,7 +105,10 @@ export async function moveCandidate(
     if (to === 'returned' && note === '')
       throw invalidInput([{ path: ['note'], message: 'Say why it is returned' }]);
     await tx.update(candidates).set({ state: to }).where(eq(candidates.id, id));
-    await tx.insert(candidateTransitions).values({ candidateId: id, from: state, to, byId: person.id, note });
+    const recorded = to === 'checked' || to === 'approved' ? await listSheetValues(tx, candidate!) : null;
+    await tx
+      .insert(candidateTransitions)
+      .values({ candidateId: id, from: state, to, byId: person.id, note, sheetValues: recorded });
   });
 }
 

@@ -44,3 +44,16 @@ export function allowedTransitions(candidate: Moved, mover: Mover): CandidateSta
     (to) => canFollow(candidate.state, to) && findRefusal(candidate, to, mover) === undefined,
   );
 }
+
+/** While a sheet can still be checked its checker writes own values on it; what was approved stays as it was. */
+const OPEN_FOR_CHECKING: readonly CandidateState[] = ['proposed', 'checked'];
+
+export const isOpenForChecking = (state: CandidateState): boolean => OPEN_FOR_CHECKING.includes(state);
+
+/** Why the person may never write own values on this candidate's sheet, whatever state it is in. */
+export function findSheetRefusal({ authorId }: Pick<Moved, 'authorId'>, writer: Mover): string | undefined {
+  if (authorId === writer.id) return 'You pinned this candidate: someone else has to check it';
+  return writer.role === 'checker'
+    ? undefined
+    : `Your role (${writer.role}) may not write own values on a calculation sheet`;
+}

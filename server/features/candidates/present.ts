@@ -1,5 +1,6 @@
-import type { Candidate, Person, SharedShortlist, Snapshot } from '#shared/contract/records.ts';
+import type { Candidate, Person, SharedShortlist, SheetValue, Snapshot } from '#shared/contract/records.ts';
 import { takeoff } from '#shared/engine/takeoff.ts';
+import { isMoneyLine } from '#shared/sheet/quantity-table.ts';
 import { hideCosts } from '../../http/hide-costs.ts';
 import { canSeeRates } from '../../http/project-access.ts';
 import { allowedTransitions } from './policy.ts';
@@ -17,17 +18,22 @@ export function presentCandidate(record: CandidateRecord, reader: Person): Candi
       text,
       createdAt: createdAt.toISOString(),
     })),
-    transitions: record.transitions.map(({ id, from, to, by, note, createdAt }) => ({
+    transitions: record.transitions.map(({ id, from, to, by, note, sheetValues, createdAt }) => ({
       id,
       from,
       to,
       by,
       note,
+      sheetValues: sheetValues && presentSheetValues(sheetValues, reader),
       createdAt: createdAt.toISOString(),
     })),
     allowedTransitions: allowedTransitions(record.candidate, reader),
   };
 }
+
+/** Own values for lines in money say what the rates are, so they go where rates go. */
+export const presentSheetValues = (values: readonly SheetValue[], reader: Person): SheetValue[] =>
+  values.filter(({ line }) => canSeeRates(reader) || !isMoneyLine(line));
 
 /** For whoever has a link: no rates, nothing of who said what to whom. */
 export const presentSharedCandidate = (record: CandidateRecord): SharedCandidate =>

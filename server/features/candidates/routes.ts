@@ -1,12 +1,16 @@
 import type { Router } from 'express';
+import type { ResponseOf } from '#shared/contract/endpoints.ts';
 import type { Candidate, Person } from '#shared/contract/records.ts';
 import type { Database } from '../../db/client.ts';
 import type { Deps } from '../../deps.ts';
 import { bind } from '../../http/bind.ts';
 import { requireReadableProject } from '../../http/project-access.ts';
 import { commentOnCandidate, moveCandidate, pinCandidate } from './commands.ts';
-import { presentCandidate } from './present.ts';
+import { findSheetRefusal, isOpenForChecking } from './policy.ts';
+import { presentCandidate, presentSheetValues } from './present.ts';
 import { listCandidates, requireCandidate } from './queries.ts';
+import { registerSheetPdf } from './sheet-pdf.ts';
+import { listSheetValues, setSheetValue } from './sheet-values.ts';
 
 export function registerCandidateRoutes(router: Router, deps: Deps): void {
   bind(router, deps, 'listCandidates', async ({ person, params, deps: { db } }) => {
@@ -31,6 +35,29 @@ export function registerCandidateRoutes(router: Router, deps: Deps): void {
     await commentOnCandidate(db, person, { id: params.id, text: body.text });
     return readCandidate(db, person, params.id);
   });
+
+  bind(router, deps, 'listSheetValues', ({ person, params, deps: { db } }) =>
+    readSheetValues(db, person, params.id),
+  );
+
+  bind(router, deps, 'setSheetValue', async ({ person, params, body, deps: { db } }) => {
+    await setSheetValue(db, person, { id: params.id, ...body });
+    return readSheetValues(db, person, params.id);
+  });
+
+  registerSheetPdf(router, deps);
+}
+
+async function readSheetValues(
+  db: Database,
+  person: Person,
+  id: string,
+): Promise<ResponseOf<'listSheetValues'>> {
+  const { candidate } = await requireCandidate(db, person, id);
+  return {
+    values: presentSheetValues(await listSheetValues(db, candidate), person),
+    mayWrite: isOpenForChecking(candidate.state) && findSheetRefusal(candidate, person) === undefined,
+  };
 }
 
 async function readCandidate(db: Database, person: Person, id: string): Promise<Candidate> {

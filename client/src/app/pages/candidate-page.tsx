@@ -9,7 +9,7 @@ import { formatDate } from '#shared/print/format-quantity.ts';
 import { paths } from '#client/src/lib/paths.ts';
 import { useProject } from '#client/src/lib/project-context.ts';
 import { useMay } from '#client/src/lib/reader-context.ts';
-import { Button } from '#client/src/ui/button.tsx';
+import { Button, ButtonLink } from '#client/src/ui/button.tsx';
 import { PageBody } from '#client/src/ui/page-body.tsx';
 import { PageCrumbs } from '#client/src/ui/page-crumbs.tsx';
 import { PageHeader } from '#client/src/ui/page-header.tsx';
@@ -64,7 +64,12 @@ export function CandidatePage() {
             )}
           </>
         }
-        actions={<Button onClick={() => window.print()}>Print</Button>}
+        actions={
+          <>
+            <ButtonLink to={paths.sheet(project.id, candidate.id)}>Calculation sheet</ButtonLink>
+            <Button onClick={() => window.print()}>Print</Button>
+          </>
+        }
       />
       {!candidate.isReproducedByCurrentEngine && (
         <p role="status" className="mb-5 max-w-prose border-l-2 border-near-mark py-1 pl-3 text-near">

@@ -1,0 +1,47 @@
+import type { UnitSystem } from '../contract/design-basis.ts';
+import type { Snapshot } from '../contract/records.ts';
+import { formatNumber } from '../print/format-quantity.ts';
+
+const DISPLACED = {
+  deduct:
+    'Concrete displaced by bars inside the stress block is deducted from their force; where two equilibria lie side by side the deeper axis is taken.',
+  'deduct-above-axis':
+    'Concrete displaced by bars above the neutral axis is deducted from their force, inside the block or not.',
+  ignore: 'Concrete displaced by bars is not deducted.',
+} as const;
+
+const YIELD_AT = {
+  'outermost-layer':
+    'φy is the curvature at which the outermost tension layer first reaches εy = fy/Es on the cracked elastic section: φy = εy/(dt − kd).',
+  centroid:
+    'φy is the curvature at which the centroid of the tension steel reaches εy = fy/Es on the cracked elastic section: φy = εy/(d − kd).',
+} as const;
+
+const BEND = {
+  'corner-in-bend':
+    'Corner bars sit in the bend of the stirrup: their centre is at the greater of the bend’s inside radius and half the bar from the leg.',
+  none: 'Corner bars touch both legs of the stirrup; no allowance is made for its bend.',
+} as const;
+
+/** How the numbers are to be read: signs, units, and each choice on which they depend. */
+export function conventionsOf({ evaluation }: Snapshot, units: UnitSystem): string[] {
+  const { conventions, flexure, elastic } = evaluation;
+  const share = elastic === null ? '' : formatNumber(elastic.concreteStressShareAtYield, 2);
+  return [
+    'Sagging moments are positive; depths are measured from the compression face. In steel, tension is positive in strain, stress and force; C is the compression in the concrete. Moments are taken about the compression face.',
+    `Ultimate: plane sections, no tension in concrete, rectangular block, εcu = ${flexure?.epsilonCu ?? 0.003}, steel elastic and then perfectly plastic, each layer at its own strain; no layer is assumed to yield.`,
+    DISPLACED[conventions.displacedConcrete],
+    YIELD_AT[conventions.yieldCurvatureAt],
+    'φu = εcu/c at the ultimate state above; μφ = φu/φy. Other definitions give other numbers.',
+    ...(elastic?.isElasticPictureDoubtful
+      ? [
+          `At first yield the concrete carries ${share} f′c by the elastic section, more than 0.7 f′c: it has left its straight line there, and φy and My are approximate.`,
+        ]
+      : []),
+    ...(evaluation.arrangement === null ? [] : [BEND[conventions.bendAllowance]]),
+    units === 'us'
+      ? 'Lengths in inches, forces in kips: 12 kip·in = 1 kip·ft, 1 ksi = 1000 psi. Formulas with √f′c take f′c in psi and give psi.'
+      : 'Lengths in mm, forces in kN, stresses in MPa = N/mm²: 1 kN·m = 1000 kN·mm.',
+    'Worked in full precision from the unrounded numbers; printed to four figures, forces and moments to five.',
+  ];
+}

@@ -1,0 +1,124 @@
+import type { UnitSystem } from '../contract/design-basis.ts';
+import type { Candidate, Snapshot } from '../contract/records.ts';
+import { getBar } from '../engine/bars.ts';
+import type { FaceArrangement } from '../engine/evaluation.ts';
+import type { Support } from '../engine/section.ts';
+import { barStandardLabel } from '../print/basis-labels.ts';
+import { formatQuantity } from '../print/format-quantity.ts';
+import { barsText, sizeText, steelText, stirrupText } from '../print/section-text.ts';
+import type { DisplayKind } from '../print/units.ts';
+import type { InputGroup, KeyText } from './sheet.ts';
+
+const SUPPORT: Readonly<Record<Support, string>> = {
+  simple: 'simply supported',
+  'one-end-continuous': 'one end continuous',
+  'both-ends-continuous': 'both ends continuous',
+  cantilever: 'cantilever',
+};
+
+type Print = (value: number | null | undefined, kind: DisplayKind) => string;
+
+/** Everything that went into the numbers, with its unit. */
+export function inputGroups(snapshot: Snapshot, beam: Candidate['beam'], units: UnitSystem): InputGroup[] {
+  const print: Print = (value, kind) => formatQuantity(value, kind, units);
+  return [
+    { title: 'Section', items: sectionItems(snapshot, units, print) },
+    { title: 'Demand', items: demandItems(snapshot, beam, print) },
+    { title: 'Design basis', items: basisItems(snapshot, print) },
+    { title: 'Bars as placed', items: placedItems(snapshot, units, print) },
+  ].filter(({ items }) => items.length > 0);
+}
+
+function sectionItems({ section, basis }: Snapshot, units: UnitSystem, print: Print): KeyText[] {
+  return [
+    { label: 'b × h', value: sizeText(section, units) },
+    { label: 'Steel', value: steelText(section, units) },
+    { label: 'Stirrups', value: stirrupText(section.stirrup, units) },
+    { label: 'Clear cover to the stirrup', value: print(section.coverMm, 'length') },
+    { label: 'f′c', value: print(section.fcMPa, 'stress') },
+    { label: 'fy', value: print(section.fyMPa, 'stress') },
+    // Snapshots from before stirrups had a strength of their own lack it.
+    { label: 'fyt', value: print((basis as Partial<typeof basis>).fytMPa, 'stress') },
+  ].filter(({ value }) => value !== '');
+}
+
+function demandItems({ demand }: Snapshot, beam: Candidate['beam'], print: Print): KeyText[] {
+  const asked = (value: number | null | undefined, kind: DisplayKind) => print(value, kind) || 'not asked';
+  return [
+    { label: 'Mu', value: asked(demand.muNmm, 'moment') },
+    { label: 'Vu', value: asked(demand.vuN, 'force') },
+    { label: 'μφ at least', value: asked(demand.ductilityTarget, 'count') },
+    { label: 'h at most', value: asked(demand.depthCapMm, 'length') },
+    ...(demand.support && demand.spanMm
+      ? [{ label: 'Span checked', value: `${print(demand.spanMm, 'span')}, ${SUPPORT[demand.support]}` }]
+      : []),
+    { label: 'Beams', value: `${beam.count} of ${print(beam.spanMm, 'span')}` },
+  ];
+}
+
+function basisItems({ basis, rules, evaluation }: Snapshot, print: Print): KeyText[] {
+  return [
+    { label: 'Code', value: evaluation.ruleSet.title },
+    { label: 'Bars', value: barStandardLabel(basis.barStandard) },
+    { label: 'Es', value: print(basis.esMPa, 'stress') },
+    { label: 'Largest aggregate', value: print(basis.maxAggregateMm, 'length') },
+    { label: 'Slab, sides not formed', value: basis.slabMm === 0 ? 'none' : print(basis.slabMm, 'length') },
+    { label: 'Layers at a face, at most', value: `${rules.maxLayers}` },
+  ];
+}
+
+function placedItems(snapshot: Snapshot, units: UnitSystem, print: Print): KeyText[] {
+  const { geometry, arrangement } = snapshot.evaluation;
+  const area = (value: number) => formatQuantity(value, 'area', units, { digits: 4 });
+  const ratio = (value: number) => formatQuantity(value, 'ratio', 'si', { digits: 4 });
+  return [
+    ...(arrangement?.faces ?? []).flatMap((face) => faceItems(snapshot, face, print)),
+    ...(geometry === null
+      ? []
+      : [
+          { label: 'As, ρ = As/(b d)', value: `${area(geometry.asMm2)}, ${ratio(geometry.rho)}` },
+          ...(geometry.asPrimeMm2 === 0
+            ? []
+            : [
+                {
+                  label: 'A′s, ρ′ = A′s/(b d)',
+                  value: `${area(geometry.asPrimeMm2)}, ${ratio(geometry.rhoPrime)}`,
+                },
+              ]),
+          { label: 'dt, outermost layer', value: print(geometry.dtMm, 'length') },
+          ...(geometry.dPrimeMm === null ? [] : [{ label: 'd′', value: print(geometry.dPrimeMm, 'length') }]),
+        ]),
+  ];
+}
+
+const FACE_NAME = { tension: 'Bottom', compression: 'Top' } as const;
+
+function faceItems(snapshot: Snapshot, face: FaceArrangement, print: Print): KeyText[] {
+  const { section, basis, evaluation } = snapshot;
+  if (face.layerCounts.length === 0) return [];
+  const nearest = evaluation.arrangement!.bars.filter((bar) => bar.face === face.face && bar.layer === 0);
+  const offset = (yMm: number) => (face.face === 'tension' ? section.depthMm - yMm : yMm);
+  const stirrupMm = section.stirrup === null ? 0 : getBar(basis.barStandard, section.stirrup.bar).diameterMm;
+  const largest = nearest.reduce((a, b) => (b.diameterMm > a.diameterMm ? b : a));
+  const centreMm = offset(largest.yMm);
+  const isAgainstStirrup = Math.abs(section.coverMm + stirrupMm + largest.diameterMm / 2 - centreMm) < 1e-6;
+  const group = section.reinforcement.kind === 'bars' ? section.reinforcement[face.face] : [];
+  return [
+    {
+      label: `${FACE_NAME[face.face]} bars`,
+      value: `${barsText(group)}, layers of ${face.layerCounts.join(' + ')}`,
+    },
+    {
+      label: `${FACE_NAME[face.face]} bar centre`,
+      value: `${isAgainstStirrup ? `${print(section.coverMm, 'length')} + ${print(stirrupMm, 'length')} + ${print(largest.diameterMm, 'length')}/2 = ` : ''}${print(centreMm, 'length')} from its face`,
+    },
+    ...(face.clearGapMm === null
+      ? []
+      : [
+          {
+            label: `${FACE_NAME[face.face]} clear gap`,
+            value: `${print(face.clearGapMm, 'length')}, least allowed ${print(face.requiredGapMm, 'length')}`,
+          },
+        ]),
+  ];
+}

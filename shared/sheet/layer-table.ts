@@ -1,0 +1,63 @@
+import type { UnitSystem } from '../contract/design-basis.ts';
+import type { Snapshot } from '../contract/records.ts';
+import type { LayerState } from '../engine/evaluation.ts';
+import { formatQuantity } from '../print/format-quantity.ts';
+import { unitLabel, type DisplayKind } from '../print/units.ts';
+import { figuresOf } from './figures.ts';
+import type { Numbering } from './numbering.ts';
+import type { SheetPart } from './sheet.ts';
+
+const heading = (label: string, kind: DisplayKind, units: UnitSystem) => {
+  const unit = unitLabel(kind, units);
+  return { label: unit === '' ? label : `${label}, ${unit}`, isFigure: true };
+};
+
+/** Strain, stress and force of every layer at ultimate, with each force's moment about the compression face. */
+export function layerTable(snapshot: Snapshot, units: UnitSystem, numbering: Numbering): SheetPart | null {
+  const { flexure } = snapshot.evaluation;
+  if (flexure === null) return null;
+  const print = (value: number, kind: DisplayKind) =>
+    formatQuantity(value, kind, units, { hideUnit: true, digits: figuresOf(kind) });
+  const cellsOf = (layer: LayerState, i: number) => [
+    `${i + 1}`,
+    layer.face,
+    print(layer.depthMm, 'length'),
+    print(layer.areaMm2, 'area'),
+    print(layer.strain, 'strain'),
+    print(layer.stressMPa, 'stress'),
+    layer.yields ? 'yields' : 'elastic',
+    layer.displacedConcreteDeducted ? 'deducted' : '–',
+    print(layer.forceN, 'force'),
+    print(layer.forceN * layer.depthMm, 'moment'),
+  ];
+  return {
+    id: 'layers',
+    title: 'Layers at ultimate',
+    kind: 'table',
+    table: {
+      columns: [
+        { label: 'i', isFigure: true },
+        { label: 'Face', isFigure: false },
+        heading('d', 'length', units),
+        heading('A', 'area', units),
+        { label: 'ε', isFigure: true },
+        heading('fs', 'stress', units),
+        { label: 'Steel', isFigure: false },
+        { label: 'Displaced', isFigure: false },
+        heading('T', 'force', units),
+        heading('T d', 'moment', units),
+      ],
+      rows: flexure.layers.map((layer, i) => ({
+        id: `force-${i + 1}`,
+        number: numbering.next(),
+        value: layer.forceN,
+        kind: 'force',
+        cells: cellsOf(layer, i),
+      })),
+      remarks: [
+        'ε = εcu (d − c)/c; fs = Es ε, within ±fy; T = A fs, or A (fs + 0.85 f′c) where the concrete a bar displaces is deducted. Tension is positive.',
+      ],
+      comparedColumn: 'T',
+    },
+  };
+}
