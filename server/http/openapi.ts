@@ -1,6 +1,12 @@
 import { z } from 'zod';
 import { createDocument, type ZodOpenApiOperationObject, type ZodOpenApiPathsObject } from 'zod-openapi';
-import { endpoints, PAPERS, RUN_EVENTS_PATH, SHEET_PDF_PATH, type EndpointName } from '#shared/contract/endpoints.ts';
+import {
+  endpoints,
+  PAPERS,
+  RUN_EVENTS_PATH,
+  SHEET_PDF_PATH,
+  type EndpointName,
+} from '#shared/contract/endpoints.ts';
 import { errorBodySchema } from '#shared/contract/errors.ts';
 import { idSchema } from '#shared/contract/numbers.ts';
 import { viewProgressSchema } from '#shared/contract/records.ts';

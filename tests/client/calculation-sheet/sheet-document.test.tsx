@@ -18,7 +18,7 @@ beforeEach(() => {
   sent = [];
   vi.stubGlobal('fetch', (url: string, init: RequestInit) => {
     if (url === '/api/session') return Promise.resolve(Response.json({ person: null, csrfToken: 'token' }));
-    sent.push(JSON.parse(String(init.body)));
+    sent.push(JSON.parse(init.body as string) as SheetValueInput);
     return Promise.resolve(Response.json({ values: [], mayWrite: true }));
   });
 });
