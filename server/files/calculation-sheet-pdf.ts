@@ -146,7 +146,7 @@ function workingTable(part: Extract<SheetPart, { kind: 'working' }>, file: Sheet
       { label: 'No.', share: 3.5, isFigure: true },
       { label: 'Formula', share: 40, isFigure: false },
       { label: 'Numbers put in', share: 35, isFigure: false },
-      { label: 'Result', share: 14, isFigure: true },
+      { label: 'Result', share: 15, isFigure: true },
       OWN_COLUMN,
       { label: 'Clause', share: 14, isFigure: false },
     ],
@@ -157,12 +157,15 @@ function workingTable(part: Extract<SheetPart, { kind: 'working' }>, file: Sheet
         { text: line.remark, isSmall: true, colour: 'muted' },
       ],
       [{ text: inputRuns(line) }],
-      [{ text: line.result, isBold: true }],
+      [{ text: unbroken(line.result), isBold: true }],
       ownCell(file, line),
       [{ text: line.clause, isSmall: true }],
     ]),
   };
 }
+
+/** A number and its unit stay on one line. */
+const unbroken = (text: string) => text.replaceAll(' ', '\u00a0');
 
 const COMMA = { text: ', ', isSymbol: false, isSub: false } as const;
 
@@ -176,7 +179,9 @@ const SHARE: Readonly<Record<string, number>> = {
   Item: 22,
   From: 44,
   Amount: 14,
-  Check: 42,
+  Check: 38,
+  Demand: 11,
+  Capacity: 12,
   Result: 8,
   Clause: 20,
 };
@@ -198,20 +203,26 @@ function rowTable(table: SheetTable, file: SheetFile): PdfTable {
     ],
     rows: table.rows.map((row) => [
       [{ text: `${row.number}`, colour: 'muted' as const }],
-      ...row.cells.map((text, i) => cellOf(row, text, i)),
+      ...row.cells.map((text, i) =>
+        cellOf(row, text, { isFirst: i === 0, isFigure: table.columns[i]!.isFigure }),
+      ),
       ownCell(file, row),
     ]),
   };
 }
 
-function cellOf(row: SheetTable['rows'][number], text: string, column: number): PdfParagraph[] {
+function cellOf(
+  row: SheetTable['rows'][number],
+  text: string,
+  { isFirst, isFigure }: { readonly isFirst: boolean; readonly isFigure: boolean },
+): PdfParagraph[] {
   const isVerdict = row.passes !== undefined && (text === 'meets' || text === 'fails');
   if (isVerdict)
     return [
       { text: `${row.passes ? '✓' : '✕'} ${text}`, isBold: true, colour: row.passes ? 'meets' : 'fails' },
     ];
-  const note = column === 0 ? (row.note ?? '') : '';
-  return [{ text }, { text: note, isSmall: true, colour: 'muted' }];
+  const note = isFirst ? (row.note ?? '') : '';
+  return [{ text: isFigure ? unbroken(text) : text }, { text: note, isSmall: true, colour: 'muted' }];
 }
 
 function writeFrozen(flow: PdfFlow, { frozen }: Sheet): void {

@@ -1,5 +1,6 @@
 import type { UnitSystem } from '../contract/design-basis.ts';
 import type { Snapshot } from '../contract/records.ts';
+import type { Rates } from '../engine/section.ts';
 import { formatQuantity } from '../print/format-quantity.ts';
 import { unitLabel, type DisplayKind } from '../print/units.ts';
 import type { Numbering } from './numbering.ts';
@@ -12,6 +13,22 @@ const MONEY = 'cost-';
 
 export const isMoneyLine = (lineId: string): boolean => lineId.startsWith(MONEY);
 
+/** The factors are the office's as the rates are: without a price book only the rule is said. */
+function carbonText({ basis, section, evaluation }: Snapshot, units: UnitSystem): string {
+  const { rates } = basis;
+  const mix = rates && mixOf(rates, section.fcMPa);
+  if (rates?.steelCo2ePerKg == null || mix?.co2eKgPerM3 == null)
+    return 'steel in all and concrete, each times its factor';
+  const print = (value: number, kind: DisplayKind) => formatQuantity(value, kind, units, { digits: 4 });
+  const { totalSteelKgPerM, concreteM3PerM } = evaluation.quantities;
+  return `${print(totalSteelKgPerM, 'mass-per-length')} × ${print(rates.steelCo2ePerKg, 'co2e-per-mass')} + ${print(concreteM3PerM, 'volume-per-length')} × ${print(mix.co2eKgPerM3, 'co2e-per-volume')}`;
+}
+
+/** Two strengths within this are the same mix, MPa; as the engine matches them. */
+const SAME_MIX_MPA = 0.01;
+const mixOf = (rates: Rates, fcMPa: number) =>
+  rates.concrete.find((rate) => Math.abs(rate.fcMPa - fcMPa) <= SAME_MIX_MPA);
+
 /** Steel by size and position, laps and waste in the open, concrete, formwork, and cost where rates are shown. */
 export function quantityTable(snapshot: Snapshot, units: UnitSystem, numbering: Numbering): SheetPart {
   const items = [
@@ -21,7 +38,7 @@ export function quantityTable(snapshot: Snapshot, units: UnitSystem, numbering: 
     {
       id: 'co2e',
       item: 'Carbon, A1–A3',
-      how: 'total steel and concrete, each times its factor',
+      how: carbonText(snapshot, units),
       value: snapshot.evaluation.quantities.co2eKgPerM,
       kind: 'co2e-per-length',
     } satisfies QuantityItem,
@@ -88,7 +105,9 @@ function costItems({ evaluation, basis, section }: Snapshot, units: UnitSystem):
   const { cost } = evaluation.quantities;
   const { rates } = basis;
   if (cost === null || rates === null) return [];
-  const mix = rates.concrete.find((rate) => Math.abs(rate.fcMPa - section.fcMPa) <= 0.01);
+  const mix = mixOf(rates, section.fcMPa);
+  const share = (value: number) => `(1 + ${formatQuantity(value, 'percent', units)})`;
+  const [laps, waste] = [share(rates.lapShare), share(rates.wasteShare)];
   const at = (rate: number | null | undefined, kind: DisplayKind) =>
     rate === null || rate === undefined
       ? 'no rate'
@@ -104,13 +123,13 @@ function costItems({ evaluation, basis, section }: Snapshot, units: UnitSystem):
     line(
       'steel',
       'Cost of longitudinal bars',
-      `with laps and waste, ${at(rates.steelPerKg, 'money-per-mass')}`,
+      `bars × ${laps} × ${waste}, ${at(rates.steelPerKg, 'money-per-mass')}`,
       cost.steel,
     ),
     line(
       'stirrups',
       'Cost of stirrups',
-      `with waste, ${at(rates.stirrupPerKg, 'money-per-mass')}`,
+      `stirrups × ${waste}, ${at(rates.stirrupPerKg, 'money-per-mass')}`,
       cost.stirrups,
     ),
     line('concrete', 'Cost of concrete', at(mix?.costPerM3, 'money-per-volume'), cost.concrete),
