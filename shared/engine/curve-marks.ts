@@ -1,5 +1,6 @@
 import type { CurveModel } from './curve-model.ts';
-import type { CurvePoint, Trace, UltimateCause } from './curve-trace.ts';
+import type { CurvePoint, UltimateCause } from './curve-point.ts';
+import type { Trace } from './curve-trace.ts';
 
 /** Two straight lines that stand for a curve. */
 export interface Bilinear {

@@ -1,6 +1,15 @@
 import { crackedAxisDepth } from './cracked-section.ts';
 import type { CurveModel } from './curve-model.ts';
 import {
+  crownOf,
+  excess,
+  extrapolated,
+  slopeBetween,
+  withPeak,
+  type CurvePoint,
+  type UltimateCause,
+} from './curve-point.ts';
+import {
   balancedCurvature,
   balancedTopStrain,
   emptyBalance,
@@ -12,34 +21,24 @@ import {
   type Stage,
 } from './section-balance.ts';
 
-/** One state of a curve: curvature 1/mm, moment N·mm, axis mm below the compression face. */
-export interface CurvePoint {
-  readonly curvaturePerMm: number;
-  readonly momentNmm: number;
-  readonly axisMm: number;
-  /** Strain of the compression face, shortening positive. */
-  readonly topStrain: number;
-  /** Strain of the outermost tension layer, tension positive. */
-  readonly tensionStrain: number;
-}
-
-export const ULTIMATE_CAUSES = ['concrete-crushing', 'core-crushing', 'bar-rupture', 'moment-drop'] as const;
-/** What ends a curve: crushing of the extreme fibre or of the core's edge, a bar that breaks, 20 % lost from the peak. */
-export type UltimateCause = (typeof ULTIMATE_CAUSES)[number];
-
 /** Share of the peak moment at which a falling curve ends. */
 const KEPT_SHARE = 0.8;
+/** Share below which the peak, and a trough between the points, are found exactly before the curve is let go on. */
+const NEAR_DROP = 0.82;
+/** Share of a limiting strain by which a point is past it, and not at it but for rounding. */
+const PAST = 1e-7;
 /** Points of the curve to first yield, and from there to the end. */
 const ELASTIC_POINTS = 8;
 const PLASTIC_POINTS = 26;
 /** Points after yield crowd towards it, where the curve bends. */
 const CROWDING = 1.6;
 const PEAK_STEPS = 5;
-/** Difference from the expected top strain, over it, that counts as a leap; and the shortest step, over the last curvature. */
+/** Difference from the expected top strain, over it, that counts as a leap: elsewhere, and close to a bar's rupture. */
 const LEAP = 0.25;
+const LEAP_NEAR_RUPTURE = 0.02;
+const NEAR_RUPTURE = 0.95;
+/** Shortest step a leap is halved to, over the last curvature. */
 const LEAST_STEP = 1 / 2000;
-/** Least distance of a trial from the highest point, over the bracket: keeps both sides moving where the crown is a kink. */
-const LEAST_TRIAL = 0.03;
 
 /** The cracked section's curve from rest to its end, in order of curvature, its marks among the points. */
 export interface Trace {
@@ -50,43 +49,6 @@ export interface Trace {
   readonly ultimate: CurvePoint;
   readonly cause: UltimateCause;
 }
-
-/** Top strain expected at a curvature from the last three states (Newton's divided differences); −1 from none. */
-function extrapolated(curvature: number, points: readonly CurvePoint[]): number {
-  const before = points[points.length - 1];
-  const earlier = points[points.length - 2];
-  const earliest = points[points.length - 3];
-  if (!before) return -1;
-  if (!earlier) return (before.topStrain * curvature) / before.curvaturePerMm;
-  const from = curvature - before.curvaturePerMm;
-  const slope = slopeBetween(earlier, before);
-  const linear = before.topStrain + slope * from;
-  if (!earliest) return linear;
-  const bend = (slope - slopeBetween(earliest, earlier)) / (before.curvaturePerMm - earliest.curvaturePerMm);
-  return linear + bend * from * (curvature - earlier.curvaturePerMm);
-}
-
-const isLeap = ({ topStrain }: CurvePoint, guess: number) => Math.abs(topStrain - guess) > LEAP * topStrain;
-
-/** Curvature of the crown of the parabola through three states, the middle one highest, held off the middle one. */
-function crownOf(left: CurvePoint, middle: CurvePoint, right: CurvePoint): number {
-  const x = middle.curvaturePerMm;
-  const down = x - left.curvaturePerMm;
-  const up = right.curvaturePerMm - x;
-  const fallDown = (middle.momentNmm - left.momentNmm) * up;
-  const fallUp = (middle.momentNmm - right.momentNmm) * down;
-  const shift = (fallDown * up - fallUp * down) / (2 * (fallDown + fallUp));
-  const least = LEAST_TRIAL * (down + up);
-  if (shift > least || shift < -least) return x + shift;
-  return up > down ? x + Math.min(least, up / 2) : x - Math.min(least, down / 2);
-}
-
-/** Strain of a state at a depth above a held one, compression positive. */
-const excess = (point: CurvePoint, { depthMm, strain }: HeldStrain) =>
-  point.topStrain - point.curvaturePerMm * depthMm - strain;
-
-const slopeBetween = (a: CurvePoint, b: CurvePoint) =>
-  (b.topStrain - a.topStrain) / (b.curvaturePerMm - a.curvaturePerMm);
 
 /** Walks a section's curve. Holds one balance to write into, so that a curve allocates little but its points. */
 export class Tracer {
@@ -111,7 +73,7 @@ export class Tracer {
     const end = this.expectedEnd();
     const walked = this.walk(end);
     const dropped = this.cutAtDrop(walked.points, walked.cause);
-    const points = [...dropped.points];
+    const { points } = dropped;
     const ultimate = points[points.length - 1]!;
     const firstYield =
       walked.firstYield && walked.firstYield.curvaturePerMm <= ultimate.curvaturePerMm
@@ -215,11 +177,15 @@ export class Tracer {
       const before = points[points.length - 1];
       const guess = extrapolated(curvature, points);
       let point = this.pointAt(curvature, guess);
-      if (before && isLeap(point, guess) && curvature - before.curvaturePerMm > LEAST_STEP * end.curvature) {
+      if (
+        before &&
+        this.isLeap(point, guess) &&
+        curvature - before.curvaturePerMm > LEAST_STEP * end.curvature
+      ) {
         pending.push(curvature, 0.5 * (before.curvaturePerMm + curvature));
         continue;
       }
-      const early = before && curvature < end.curvature ? this.endWithin(before, point) : undefined;
+      const early = before && this.endWithin(before, point);
       if (early) ({ point, cause } = early);
       if (!firstYield && before && excess(point, this.yielded) <= 0) {
         firstYield = this.reaching(this.yielded, before, point);
@@ -231,14 +197,19 @@ export class Tracer {
     return { points, firstYield, cause };
   }
 
+  private isLeap({ topStrain, tensionStrain }: CurvePoint, guess: number): boolean {
+    const isNear = tensionStrain > NEAR_RUPTURE * this.model.steel.ruptureStrain;
+    return Math.abs(topStrain - guess) > (isNear ? LEAP_NEAR_RUPTURE : LEAP) * topStrain;
+  }
+
   /** An end before the expected one, where a softening law has more than one state at the held strain. */
   private endWithin(
     before: CurvePoint,
     point: CurvePoint,
   ): { point: CurvePoint; cause: UltimateCause } | undefined {
-    if (excess(point, this.crushed) > 0)
+    if (excess(point, this.crushed) > PAST * this.crushed.strain)
       return { point: this.reaching(this.crushed, before, point), cause: this.crushingCause };
-    if (excess(point, this.broken) < 0)
+    if (excess(point, this.broken) < PAST * this.broken.strain)
       return { point: this.reaching(this.broken, before, point), cause: 'bar-rupture' };
     return undefined;
   }
@@ -266,42 +237,46 @@ export class Tracer {
   /** Ends the walk at the first loss of 20 % from the highest moment so far, and finds the peak between the points. */
   private cutAtDrop(walked: readonly CurvePoint[], cause: UltimateCause) {
     let top = 0;
-    let last = 1;
-    for (; last < walked.length; last++) {
-      if (walked[last]!.momentNmm > walked[top]!.momentNmm) top = last;
-      if (walked[last]!.momentNmm < KEPT_SHARE * walked[top]!.momentNmm) break;
+    let peak: CurvePoint | undefined;
+    for (let i = 1; i < walked.length; i++) {
+      const point = walked[i]!;
+      if (point.momentNmm > walked[top]!.momentNmm) {
+        top = i;
+        peak = undefined;
+      }
+      if (point.momentNmm > NEAR_DROP * walked[top]!.momentNmm) continue;
+      peak ??= this.extremeNear(walked, top, 1);
+      const kept = KEPT_SHARE * peak.momentNmm;
+      const low = point.momentNmm < kept ? point : this.troughAt(walked, i);
+      if (low.momentNmm >= kept) continue;
+      const from = walked[i - 1]!.curvaturePerMm > peak.curvaturePerMm ? walked[i - 1]! : peak;
+      const drop = this.crossing(from, low, ({ momentNmm }) => momentNmm - kept);
+      const points = walked.filter((p) => p.curvaturePerMm < drop.curvaturePerMm);
+      return { points: withPeak([...points, drop], peak), peak, cause: 'moment-drop' as const };
     }
-    const isDropped = last < walked.length;
-    const peak = this.peakNear(walked, top);
-    const kept = KEPT_SHARE * peak.momentNmm;
-    const points = walked.slice(0, last);
-    if (isDropped) {
-      while (points.length > top + 1 && points[points.length - 1]!.momentNmm < kept) points.pop();
-      const from = points[points.length - 1]!;
-      const drop = this.crossing(
-        from.curvaturePerMm < peak.curvaturePerMm ? peak : from,
-        walked[points.length]!,
-        (p) => p.momentNmm - kept,
-      );
-      points.push(drop);
-    }
-    if (peak !== walked[top]) {
-      const at = points.findIndex((point) => point.curvaturePerMm > peak.curvaturePerMm);
-      points.splice(at, 0, peak);
-    }
-    return { points, peak, cause: isDropped ? ('moment-drop' as const) : cause };
+    peak ??= this.extremeNear(walked, top, 1);
+    return { points: withPeak(walked, peak), peak, cause };
   }
 
-  /** The highest state between the neighbours of the highest point, by parabolas through the three. */
-  private peakNear(points: readonly CurvePoint[], top: number): CurvePoint {
-    let best = points[top]!;
-    let left = points[top - 1];
-    let right = points[top + 1];
+  /** The lowest state near a point that lies below both its neighbours; the point itself elsewhere. */
+  private troughAt(points: readonly CurvePoint[], i: number): CurvePoint {
+    const { momentNmm } = points[i]!;
+    const before = points[i - 1];
+    const after = points[i + 1];
+    if (!before || !after || before.momentNmm < momentNmm || after.momentNmm < momentNmm) return points[i]!;
+    return this.extremeNear(points, i, -1);
+  }
+
+  /** The highest (1) or lowest (−1) state between the neighbours of a point, by parabolas through three states. */
+  private extremeNear(points: readonly CurvePoint[], at: number, sign: 1 | -1): CurvePoint {
+    let best = points[at]!;
+    let left = points[at - 1];
+    let right = points[at + 1];
     if (!left || !right) return best;
     for (let step = 0; step < PEAK_STEPS; step++) {
       const point = this.pointAt(crownOf(left, best, right), best.topStrain);
       const isLeft = point.curvaturePerMm < best.curvaturePerMm;
-      if (point.momentNmm > best.momentNmm) {
+      if (sign * (point.momentNmm - best.momentNmm) > 0) {
         if (isLeft) right = best;
         else left = best;
         best = point;

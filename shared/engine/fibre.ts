@@ -1,6 +1,6 @@
 import type { ConcreteLaw } from './concrete-laws/concrete-law.ts';
 import type { CurveModel } from './curve-model.ts';
-import type { UltimateCause } from './curve-trace.ts';
+import type { UltimateCause } from './curve-point.ts';
 import type { DisplacedConcrete, SectionInput } from './section.ts';
 import type { SteelLayout } from './steel-layout.ts';
 import { elasticPlastic, type SteelLaw } from './steel-laws.ts';
@@ -49,6 +49,7 @@ export const DEFAULT_STRIPS = 240;
 const HALVINGS = 34;
 const EVENT_HALVINGS = 22;
 const KEPT_SHARE = 0.8;
+const NEAR_DROP = 0.82;
 /** Step of the compression face's strain, and its growth where a confined section goes far. */
 const STRAIN_STEP = 0.0002;
 const STEP_GROWTH = 0.05;
@@ -176,14 +177,11 @@ export function fibreCurve(model: CurveModel, strips = DEFAULT_STRIPS): FibreCur
   const pastCrushing = (s: FibreState) => strainAt(s, model.crushingDepthMm) - model.crushingStrain;
   const pastRupture = (s: FibreState) => -strainAt(s, model.deepestMm) - model.steel.ruptureStrain;
   const states: FibreState[] = [];
-  let highest = 0;
   let firstYield: FibreState | null = null;
   for (let topStrain = STRAIN_STEP; topStrain < LARGEST_STRAIN; topStrain += stepFrom(topStrain)) {
-    const before = states[states.length - 1]?.topStrain ?? 0;
-    const within = [before, topStrain] as const;
+    const within = [states[states.length - 1]?.topStrain ?? 0, topStrain] as const;
     let state = fibreState(section, topStrain);
-    const yields: FibreState | null =
-      !firstYield && pastYield(state) > 0 ? turning(section, within, pastYield) : null;
+    if (!firstYield && pastYield(state) > 0) firstYield = turning(section, within, pastYield);
     let cause: UltimateCause | undefined;
     if (pastCrushing(state) >= 0) {
       state = turning(section, within, pastCrushing);
@@ -193,11 +191,8 @@ export function fibreCurve(model: CurveModel, strips = DEFAULT_STRIPS): FibreCur
       state = turning(section, within, pastRupture);
       cause = 'bar-rupture';
     }
-    if (state.momentNmm > highest) highest = state.momentNmm;
-    const hasDropped = state.momentNmm < KEPT_SHARE * highest;
     states.push(state);
-    if (yields && yields.topStrain <= state.topStrain) firstYield = yields;
-    if (cause || hasDropped) return ending(section, states, firstYield, hasDropped ? 'moment-drop' : cause!);
+    if (cause) return cutAtDrop(section, states, { firstYield, cause });
   }
   throw new Error('a curve without an end');
 }
@@ -205,22 +200,28 @@ export function fibreCurve(model: CurveModel, strips = DEFAULT_STRIPS): FibreCur
 /** Equal steps to the strain at which plain concrete is crushed, longer and longer ones beyond. */
 const stepFrom = (topStrain: number) => Math.max(STRAIN_STEP, STEP_GROWTH * topStrain);
 
-/** Peak and last state of a walk, found between its steps. */
-function ending(
+/** Ends a walk where it first loses 20 % of the highest moment before, if it does. */
+function cutAtDrop(
   section: FibreSection,
   states: readonly FibreState[],
-  firstYield: FibreState | null,
-  cause: UltimateCause,
+  { firstYield, cause }: { readonly firstYield: FibreState | null; readonly cause: UltimateCause },
 ): FibreCurve {
-  const best = states.reduce((top, state, i) => (state.momentNmm > states[top]!.momentNmm ? i : top), 0);
-  const peak = crown(section, states, best);
-  const last = states[states.length - 1]!;
-  if (cause !== 'moment-drop') return { firstYield, peak, ultimate: last, cause };
-  const kept = KEPT_SHARE * peak.momentNmm;
-  const from = states[states.length - 2]!.topStrain;
-  const ultimate = turning(section, [from, last.topStrain], (state) => kept - state.momentNmm);
-  const isYieldKept = firstYield && firstYield.topStrain <= ultimate.topStrain;
-  return { firstYield: isYieldKept ? firstYield : null, peak, ultimate, cause };
+  const upTo = (last: FibreState) =>
+    firstYield && firstYield.topStrain <= last.topStrain ? firstYield : null;
+  let best = 0;
+  for (let i = 1; i < states.length; i++) {
+    const state = states[i]!;
+    if (state.momentNmm > states[best]!.momentNmm) best = i;
+    if (state.momentNmm > NEAR_DROP * states[best]!.momentNmm) continue;
+    const peak = crown(section, states, best);
+    const kept = KEPT_SHARE * peak.momentNmm;
+    if (state.momentNmm >= kept) continue;
+    const from = Math.max(states[i - 1]!.topStrain, peak.topStrain);
+    const ultimate = turning(section, [from, state.topStrain], ({ momentNmm }) => kept - momentNmm);
+    return { firstYield: upTo(ultimate), peak, ultimate, cause: 'moment-drop' };
+  }
+  const ultimate = states[states.length - 1]!;
+  return { firstYield: upTo(ultimate), peak: crown(section, states, best), ultimate, cause };
 }
 
 /** The highest state between the neighbours of one, by cutting off the lower third. */

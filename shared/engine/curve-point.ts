@@ -1,0 +1,61 @@
+import type { HeldStrain } from './section-balance.ts';
+
+/** One state of a curve: curvature 1/mm, moment N·mm, axis mm below the compression face. */
+export interface CurvePoint {
+  readonly curvaturePerMm: number;
+  readonly momentNmm: number;
+  readonly axisMm: number;
+  /** Strain of the compression face, shortening positive. */
+  readonly topStrain: number;
+  /** Strain of the outermost tension layer, tension positive. */
+  readonly tensionStrain: number;
+}
+
+export const ULTIMATE_CAUSES = ['concrete-crushing', 'core-crushing', 'bar-rupture', 'moment-drop'] as const;
+/** What ends a curve: crushing of the extreme fibre or of the core's edge, a bar that breaks, 20 % lost from the peak. */
+export type UltimateCause = (typeof ULTIMATE_CAUSES)[number];
+
+/** Least distance of a trial from the highest point, over the bracket: keeps both sides moving where the crown is a kink. */
+const LEAST_TRIAL = 0.03;
+
+/** Top strain expected at a curvature from the last three states (Newton's divided differences); −1 from none. */
+export function extrapolated(curvature: number, points: readonly CurvePoint[]): number {
+  const before = points[points.length - 1];
+  const earlier = points[points.length - 2];
+  const earliest = points[points.length - 3];
+  if (!before) return -1;
+  if (!earlier) return (before.topStrain * curvature) / before.curvaturePerMm;
+  const from = curvature - before.curvaturePerMm;
+  const slope = slopeBetween(earlier, before);
+  const linear = before.topStrain + slope * from;
+  if (!earliest) return linear;
+  const bend = (slope - slopeBetween(earliest, earlier)) / (before.curvaturePerMm - earliest.curvaturePerMm);
+  return linear + bend * from * (curvature - earlier.curvaturePerMm);
+}
+
+/** Curvature of the crown of the parabola through three states, the middle one highest, held off the middle one. */
+export function crownOf(left: CurvePoint, middle: CurvePoint, right: CurvePoint): number {
+  const x = middle.curvaturePerMm;
+  const down = x - left.curvaturePerMm;
+  const up = right.curvaturePerMm - x;
+  const fallDown = (middle.momentNmm - left.momentNmm) * up;
+  const fallUp = (middle.momentNmm - right.momentNmm) * down;
+  const shift = (fallDown * up - fallUp * down) / (2 * (fallDown + fallUp));
+  const least = LEAST_TRIAL * (down + up);
+  if (shift > least || shift < -least) return x + shift;
+  return up > down ? x + Math.min(least, up / 2) : x - Math.min(least, down / 2);
+}
+
+/** Strain of a state at a depth above a held one, compression positive. */
+export const excess = (point: CurvePoint, { depthMm, strain }: HeldStrain) =>
+  point.topStrain - point.curvaturePerMm * depthMm - strain;
+
+export const slopeBetween = (a: CurvePoint, b: CurvePoint) =>
+  (b.topStrain - a.topStrain) / (b.curvaturePerMm - a.curvaturePerMm);
+
+/** The points with the peak among them, in order of curvature. */
+export function withPeak(points: readonly CurvePoint[], peak: CurvePoint): readonly CurvePoint[] {
+  const after = points.findIndex((point) => point.curvaturePerMm >= peak.curvaturePerMm);
+  if (points[after] === peak) return points;
+  return [...points.slice(0, after), peak, ...points.slice(after)];
+}
