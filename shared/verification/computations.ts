@@ -1,4 +1,5 @@
 import { BAR_CASES } from './bar-cases.ts';
+import { CURVE_CASES } from './curve-cases.ts';
 import { DETAILING_CASES } from './detailing-cases.ts';
 import { ELASTIC_CASES } from './elastic-cases.ts';
 import { FLEXURE_CASES } from './flexure-cases.ts';
@@ -11,6 +12,7 @@ export const COMPUTATIONS: Readonly<Record<string, ComputeCase>> = {
   ...FLEXURE_CASES,
   ...ELASTIC_CASES,
   ...BAR_CASES,
+  ...CURVE_CASES,
   ...DETAILING_CASES,
   ...HAND_WORKED_CASES,
   ...OPTIMUM_CASES,

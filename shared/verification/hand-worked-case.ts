@@ -5,7 +5,7 @@ import { METRIC_BASIS, NO_DEMAND, NO_RULES } from './layered-section.ts';
 import type { ComputeCase } from './published-case.ts';
 
 /** HAND-01, 300 × 500 with 3-25: worked by hand and by an independent script for this project; no outside source. */
-const handSection = (compression: BarGroup): SectionInput => ({
+export const handSection = (compression: BarGroup): SectionInput => ({
   widthMm: 300,
   depthMm: 500,
   fcMPa: 30,

@@ -1,11 +1,6 @@
 /** Cases this version does not compute, and why. */
 export const OUT_OF_SCOPE: Readonly<Record<string, string>> = {
   'ACI-T04': 'T sections',
-  'MC-11': 'displacement ductility',
-  'MC-12': 'plastic hinge length',
-  'MN-02': 'confined concrete',
-  'HG-01': 'full moment–curvature',
-  'TD-01': 'full moment–curvature',
   'EC2-01': 'EN 1992',
   'EC2-02': 'EN 1992',
   'EC2-03': 'EN 1992',
