@@ -172,6 +172,21 @@ describe('a formula', () => {
           .map((run) => run.text)
           .join(''),
       ).toBe(text);
-    expect(textRuns('ACI 318M-19', { isProse: true }).some(({ isSymbol }) => isSymbol)).toBe(false);
+  });
+
+  it('takes no unit, book or word of a sentence for a symbol', () => {
+    for (const text of [
+      'ACI 318M-19',
+      '147.5 kip·ft, 19.69 ft',
+      '200 kN·m',
+      '30 in',
+      'In all',
+      'At a face',
+      'A1–A3',
+    ])
+      expect([text, textRuns(text, { isProse: true }).filter(({ isSymbol }) => isSymbol)]).toEqual([
+        text,
+        [],
+      ]);
   });
 });
