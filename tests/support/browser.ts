@@ -30,6 +30,8 @@ export async function openProfile(browser: Browser, origin: string): Promise<Bro
     reducedMotion: 'reduce',
   });
   context.setDefaultTimeout(PATIENCE_MS);
+  // Outside of the tests tsx names functions by a helper of its own, which code handed to a page does not find there.
+  await context.addInitScript('globalThis.__name = (named) => named;');
   return context;
 }
 
