@@ -72,12 +72,23 @@ export function concreteShearN(k: ShearConstants, dMm: number, asMm2: number): n
 export function stirrupShearN(k: ShearConstants, dMm: number): number {
   if (k.avMm2 === 0) return 0;
   const carried = (k.avMm2 * Math.min(k.fytMPa, k.rules.fytCapMPa) * dMm) / k.spacingMm;
-  return Math.min(carried, k.rules.largestStirrupShare * k.rootFc * k.widthMm * dMm);
+  return Math.min(carried, largestStirrupShearN(k, dMm));
 }
 
 /** φVn, N, with the concrete's share Vc. */
 export function designShearN(k: ShearConstants, dMm: number, concreteN: number): number {
   return k.rules.reduction * (concreteN + stirrupShearN(k, dMm));
+}
+
+/** Whether Vs = Vu/φ − Vc is so large that the spacing limits halve (9.7.6.2.2). */
+export function isCloselySpaced(k: ShearConstants, vuN: number, dMm: number, concreteN: number): boolean {
+  const { rules } = k;
+  return vuN / rules.reduction - concreteN > rules.closeSpacingShare * (k.rootFc * k.widthMm * dMm);
+}
+
+/** Vs counts up to this, N (22.5.1.2). */
+export function largestStirrupShearN(k: ShearConstants, dMm: number): number {
+  return k.rules.largestStirrupShare * k.rootFc * k.widthMm * dMm;
 }
 
 /**
@@ -96,7 +107,7 @@ export function stirrupSpacingLimitMm(
   const from = rules.stirrupsFromShare === null ? 0.5 * concreteN : rules.stirrupsFromShare * rootArea;
   if (!(vuN > rules.reduction * from)) return Infinity;
   if (k.avMm2 === 0) return 0;
-  const isClose = vuN / rules.reduction - concreteN > rules.closeSpacingShare * rootArea;
+  const isClose = isCloselySpaced(k, vuN, dMm, concreteN);
   const along = isClose
     ? Math.min(dMm / 4, rules.longestSpacingMm / 2)
     : Math.min(dMm / 2, rules.longestSpacingMm);

@@ -1,6 +1,12 @@
 import { barCoverMm, shearOf, stirrupBarOf } from './checks-detailing.ts';
 import type { WorkingStep } from './evaluation.ts';
-import { designShearN, stirrupShearN, stirrupSpacingLimitMm } from './shear.ts';
+import {
+  designShearN,
+  isCloselySpaced,
+  largestStirrupShearN,
+  stirrupShearN,
+  stirrupSpacingLimitMm,
+} from './shear.ts';
 import { step, type Input, type WorkingSource } from './working-step.ts';
 
 /** Limits of crack control and least depth, and shear, each where it is asked. */
@@ -35,7 +41,7 @@ function leastDepthStep({ section, demand, ruleSet }: WorkingSource): WorkingSte
     step(
       'least-depth',
       'limits',
-      ['h,min', ruleSet.formulas.leastDepth, value, 'length'],
+      ['h,min', ruleSet.formulas.leastDepth(support), value, 'length'],
       [
         ['span', spanMm, 'length'],
         ['fy', section.fyMPa, 'stress'],
@@ -49,7 +55,7 @@ function shearSteps(source: WorkingSource): WorkingStep[] {
   const state = shearOf(source);
   if (!state) return [];
   const { section, basis, ruleSet } = source;
-  const { constants: k, dMm, asMm2, vuN, concreteN: vc } = state;
+  const { constants: k, dMm, asMm2, concreteN: vc } = state;
   const clause = ruleSet.clauses.shear;
   const hasLeast = k.avMm2 >= k.leastAvPerMm * k.spacingMm;
   const isReduced = ruleSet.shear.concreteWithoutStirrups !== null && !hasLeast;
@@ -69,21 +75,25 @@ function shearSteps(source: WorkingSource): WorkingStep[] {
       clause,
     ),
   ];
-  if (k.avMm2 > 0)
+  if (k.avMm2 > 0) {
+    const most: Input = ['Vs,max', largestStirrupShearN(k, dMm), 'force'];
     steps.push(
+      step('vs-max', 'limits', [most[0], ruleSet.formulas.stirrupLimit, most[1], 'force'], shared, clause),
       step(
         'vs',
         'limits',
-        ['Vs', 'Av fyt d/s, within the section limit', vs, 'force'],
+        ['Vs', 'min(Av fyt d/s, Vs,max)', vs, 'force'],
         [
           ['Av', k.avMm2, 'area'],
           ['fyt', Math.min(basis.fytMPa, ruleSet.shear.fytCapMPa), 'stress'],
           ['d', dMm, 'length'],
           ['s', k.spacingMm, 'length'],
+          most,
         ],
         clause,
       ),
     );
+  }
   steps.push(
     step(
       'phi-vn',
@@ -97,20 +107,38 @@ function shearSteps(source: WorkingSource): WorkingStep[] {
       clause,
     ),
   );
-  const limitMm = stirrupSpacingLimitMm(k, vuN, dMm, vc);
-  if (limitMm > 0 && limitMm < Infinity)
-    steps.push(
-      step(
-        'stirrup-spacing',
-        'limits',
-        ['s,max', 'least of d/2 (d/4 where Vs is large) and Av over Av,min/s', limitMm, 'length'],
-        [
-          ['Vu', vuN, 'force'],
-          ['d', dMm, 'length'],
-          ['Av', k.avMm2, 'area'],
-        ],
-        ruleSet.clauses.stirrupSpacing,
-      ),
-    );
-  return steps;
+  return [...steps, ...spacingSteps(source, state)];
+}
+
+/** Spacing where Vu asks for stirrups: Av,min/s, then the least of the limits, written with the numbers that apply. */
+function spacingSteps(
+  { section, basis, ruleSet }: WorkingSource,
+  { constants: k, dMm, vuN, concreteN }: NonNullable<ReturnType<typeof shearOf>>,
+): WorkingStep[] {
+  const limitMm = stirrupSpacingLimitMm(k, vuN, dMm, concreteN);
+  if (!(limitMm > 0 && limitMm < Infinity)) return [];
+  const isClose = isCloselySpaced(k, vuN, dMm, concreteN);
+  const longest: Input = ['s,long', ruleSet.shear.longestSpacingMm / (isClose ? 2 : 1), 'length'];
+  const least: Input = ['Av,min/s', k.leastAvPerMm, 'length'];
+  const clause = ruleSet.clauses.stirrupSpacing;
+  return [
+    step(
+      'least-stirrups',
+      'limits',
+      [least[0], ruleSet.formulas.leastStirrups, least[1], 'length'],
+      [
+        ['f′c', section.fcMPa, 'stress'],
+        ['b', section.widthMm, 'length'],
+        ['fyt', Math.min(basis.fytMPa, ruleSet.shear.fytCapMPa), 'stress'],
+      ],
+      clause,
+    ),
+    step(
+      'stirrup-spacing',
+      'limits',
+      ['s,max', `min(d/${isClose ? 4 : 2}, s,long, Av/(Av,min/s))`, limitMm, 'length'],
+      [['d', dMm, 'length'], longest, ['Av', k.avMm2, 'area'], least],
+      clause,
+    ),
+  ];
 }

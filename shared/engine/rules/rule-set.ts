@@ -29,7 +29,11 @@ export interface Formulas {
   readonly crackSpacing: string;
   readonly concreteShear: string;
   readonly concreteShearWithoutStirrups: string;
-  readonly leastDepth: string;
+  /** Largest Vs that counts. */
+  readonly stirrupLimit: string;
+  /** Least Av/s. */
+  readonly leastStirrups: string;
+  leastDepth(support: Support): string;
 }
 
 /**
