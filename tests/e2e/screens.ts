@@ -236,4 +236,12 @@ const LONG_RUNS: readonly Screen[] = [
   },
 ];
 
-export const SCREENS: readonly Screen[] = [...OFFICE, ...PROJECT, ...SWEEP, ...RUN, ...SECTION, ...SHORTLIST];
+export const SCREENS: readonly Screen[] = [
+  ...OFFICE,
+  ...PROJECT,
+  ...SWEEP,
+  ...RUN,
+  ...SECTION,
+  ...SHORTLIST,
+  ...LONG_RUNS,
+];
