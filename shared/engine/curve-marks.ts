@@ -40,14 +40,16 @@ export function areaUnder(points: readonly CurvePoint[]): number {
 /**
  * Equal-area idealisation (common practice). With slope K through first yield and plateau M, the area M φu − M²/2K equals
  * that of the curve, A: M = K φu (1 − √(1 − 2A/(K φu²))).
- * @returns null where no bar yields.
+ * @returns null where no bar yields, or so late that the two lines would have to rise above the curve's peak.
  */
-export function bilinearOf({ points, firstYield, ultimate }: Trace): Bilinear | null {
+export function bilinearOf({ points, firstYield, peak, ultimate }: Trace): Bilinear | null {
   if (!firstYield) return null;
   const slope = firstYield.momentNmm / firstYield.curvaturePerMm;
   const last = ultimate.curvaturePerMm;
-  const inner = Math.max(0, 1 - (2 * areaUnder(points)) / (slope * last * last));
+  const inner = 1 - (2 * areaUnder(points)) / (slope * last * last);
+  if (!(inner >= 0)) return null;
   const momentNmm = slope * last * (1 - Math.sqrt(inner));
+  if (momentNmm > peak.momentNmm) return null;
   return { yieldCurvaturePerMm: momentNmm / slope, momentNmm, rule: BILINEAR_RULE };
 }
 
@@ -70,19 +72,19 @@ export function ductilitiesOf(model: CurveModel, trace: Trace, bilinear: Bilinea
   const laws = `${(model.core ?? model.cover).name} concrete, ${model.steel.name} steel`;
   const ultimateIs = `φu where ${END_OF[cause](model)}; ${laws}`;
   const never = `no bar reaches fy/Es at ${where} before ultimate, so there is no yield curvature; ${ultimateIs}`;
-  if (!firstYield || !bilinear) {
+  if (!firstYield) {
     const none = { value: null, definition: never };
     return { byFirstYield: none, byBilinearYield: none };
   }
   const last = ultimate.curvaturePerMm;
+  const corner = `μφ = φu/φy; φy the corner of ${BILINEAR_RULE}; ${ultimateIs}`;
   return {
     byFirstYield: {
       value: last / firstYield.curvaturePerMm,
       definition: `μφ = φu/φy; φy where ${where} reaches fy/Es on the nonlinear curve; ${ultimateIs}`,
     },
-    byBilinearYield: {
-      value: last / bilinear.yieldCurvaturePerMm,
-      definition: `μφ = φu/φy; φy the corner of ${BILINEAR_RULE}; ${ultimateIs}`,
-    },
+    byBilinearYield: bilinear
+      ? { value: last / bilinear.yieldCurvaturePerMm, definition: corner }
+      : { value: null, definition: `${corner}; here the steel yields too near the end for such lines` },
   };
 }

@@ -53,6 +53,12 @@ export const excess = (point: CurvePoint, { depthMm, strain }: HeldStrain) =>
 export const slopeBetween = (a: CurvePoint, b: CurvePoint) =>
   (b.topStrain - a.topStrain) / (b.curvaturePerMm - a.curvaturePerMm);
 
+/** A few states by curvature, each curvature once. */
+export function inOrder(states: CurvePoint[]): CurvePoint[] {
+  states.sort((a, b) => a.curvaturePerMm - b.curvaturePerMm);
+  return states.filter((state, i) => states[i - 1]?.curvaturePerMm !== state.curvaturePerMm);
+}
+
 /** The points with the peak among them, in order of curvature. */
 export function withPeak(points: readonly CurvePoint[], peak: CurvePoint): readonly CurvePoint[] {
   const after = points.findIndex((point) => point.curvaturePerMm >= peak.curvaturePerMm);

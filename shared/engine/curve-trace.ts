@@ -1,9 +1,10 @@
-import { crackedAxisDepth } from './cracked-section.ts';
+import { curvatureGrid } from './curve-grid.ts';
 import type { CurveModel } from './curve-model.ts';
 import {
   crownOf,
   excess,
   extrapolated,
+  inOrder,
   slopeBetween,
   withPeak,
   type CurvePoint,
@@ -25,13 +26,10 @@ import {
 const KEPT_SHARE = 0.8;
 /** Share below which the peak, and a trough between the points, are found exactly before the curve is let go on. */
 const NEAR_DROP = 0.82;
+/** Share of the highest point above which another one's neighbourhood may hold the peak. */
+const NEAR_PEAK = 0.98;
 /** Share of a limiting strain by which a point is past it, and not at it but for rounding. */
 const PAST = 1e-7;
-/** Points of the curve to first yield, and from there to the end. */
-const ELASTIC_POINTS = 8;
-const PLASTIC_POINTS = 26;
-/** Points after yield crowd towards it, where the curve bends. */
-const CROWDING = 1.6;
 const PEAK_STEPS = 5;
 /** Difference from the expected top strain, over it, that counts as a leap: elsewhere, and close to a bar's rupture. */
 const LEAP = 0.25;
@@ -58,6 +56,8 @@ export class Tracer {
   private readonly yielded: HeldStrain;
   private readonly crushed: HeldStrain;
   private readonly broken: HeldStrain;
+  /** The extreme fibre at its own peak: where concrete falls steeply, so does the moment beyond. */
+  private readonly crested: HeldStrain;
   private readonly crushingCause: UltimateCause;
 
   constructor(model: CurveModel) {
@@ -66,6 +66,7 @@ export class Tracer {
     this.yielded = { depthMm: model.yieldDepthMm, strain: -steel.yieldStrain };
     this.crushed = { depthMm: model.crushingDepthMm, strain: model.crushingStrain };
     this.broken = { depthMm: model.deepestMm, strain: -steel.ruptureStrain };
+    this.crested = { depthMm: 0, strain: model.cover.peakStrain };
     this.crushingCause = model.core ? 'core-crushing' : 'concrete-crushing';
   }
 
@@ -147,27 +148,9 @@ export class Tracer {
     return { curvature: balancedCurvature(model, crushed, { low, high }, out), cause: this.crushingCause };
   }
 
-  private curvatures(last: number): Float64Array {
-    const { model } = this;
-    const modularRatio = model.steel.esMPa / model.tension.ecMPa;
-    const kd = crackedAxisDepth(model.depths, model.areas, model.depths.length, {
-      widthMm: model.widthMm,
-      modularRatio,
-      ratioAbove: model.isDisplacedDeducted ? modularRatio - 1 : modularRatio,
-    });
-    const elasticYield = model.steel.yieldStrain / (model.yieldDepthMm - kd);
-    const bend = elasticYield > 0 && elasticYield < 0.6 * last ? elasticYield : 0.3 * last;
-    const grid = new Float64Array(ELASTIC_POINTS + PLASTIC_POINTS);
-    for (let i = 0; i < ELASTIC_POINTS; i++) grid[i] = (bend * (i + 1)) / ELASTIC_POINTS;
-    for (let i = 1; i <= PLASTIC_POINTS; i++)
-      grid[ELASTIC_POINTS + i - 1] = bend + (last - bend) * (i / PLASTIC_POINTS) ** CROWDING;
-    grid[grid.length - 1] = last;
-    return grid;
-  }
-
   /** Points from rest to the end; a step in which the axis leaps, as where the cover spalls, is halved and halved again. */
   private walk(end: { curvature: number; cause: UltimateCause }) {
-    const grid = this.curvatures(end.curvature);
+    const grid = curvatureGrid(this.model, end.curvature);
     const points: CurvePoint[] = [];
     const pending: number[] = [];
     let firstYield: CurvePoint | null = null;
@@ -187,11 +170,13 @@ export class Tracer {
       }
       const early = before && this.endWithin(before, point);
       if (early) ({ point, cause } = early);
-      if (!firstYield && before && excess(point, this.yielded) <= 0) {
-        firstYield = this.reaching(this.yielded, before, point);
-        if (firstYield.curvaturePerMm < point.curvaturePerMm) points.push(firstYield);
-      }
-      points.push(point);
+      const isYielding = before && !firstYield && excess(point, this.yielded) <= 0;
+      const isCresting = before && excess(before, this.crested) < 0 && excess(point, this.crested) > 0;
+      if (isYielding) firstYield = this.reaching(this.yielded, before, point);
+      if (isYielding || isCresting) {
+        const crest = isCresting ? this.reaching(this.crested, before, point) : point;
+        points.push(...inOrder([isYielding && firstYield ? firstYield : point, crest, point]));
+      } else points.push(point);
       if (early) break;
     }
     return { points, firstYield, cause };
@@ -245,7 +230,7 @@ export class Tracer {
         peak = undefined;
       }
       if (point.momentNmm > NEAR_DROP * walked[top]!.momentNmm) continue;
-      peak ??= this.extremeNear(walked, top, 1);
+      peak ??= this.peakOf(walked.slice(0, i + 1), walked[top]!.momentNmm);
       const kept = KEPT_SHARE * peak.momentNmm;
       const low = point.momentNmm < kept ? point : this.troughAt(walked, i);
       if (low.momentNmm >= kept) continue;
@@ -254,8 +239,22 @@ export class Tracer {
       const points = walked.filter((p) => p.curvaturePerMm < drop.curvaturePerMm);
       return { points: withPeak([...points, drop], peak), peak, cause: 'moment-drop' as const };
     }
-    peak ??= this.extremeNear(walked, top, 1);
+    peak ??= this.peakOf(walked, walked[top]!.momentNmm);
     return { points: withPeak(walked, peak), peak, cause };
+  }
+
+  /** The highest state near any point that stands out among its neighbours and comes close to the highest. */
+  private peakOf(points: readonly CurvePoint[], highest: number): CurvePoint {
+    let peak: CurvePoint | undefined;
+    for (let i = 0; i < points.length; i++) {
+      const { momentNmm } = points[i]!;
+      if (momentNmm < NEAR_PEAK * highest) continue;
+      if (momentNmm < (points[i - 1]?.momentNmm ?? 0) || momentNmm < (points[i + 1]?.momentNmm ?? 0))
+        continue;
+      const found = this.extremeNear(points, i, 1);
+      if (!peak || found.momentNmm > peak.momentNmm) peak = found;
+    }
+    return peak!;
   }
 
   /** The lowest state near a point that lies below both its neighbours; the point itself elsewhere. */

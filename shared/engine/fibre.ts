@@ -46,17 +46,18 @@ export interface FibreCurve {
 }
 
 export const DEFAULT_STRIPS = 240;
-const HALVINGS = 34;
-const EVENT_HALVINGS = 22;
+/** The axis is halved to this share of itself; the strain of an event, between two steps, so many times. */
+const AXIS_SHARE = 1e-7;
+const EVENT_HALVINGS = 15;
 const KEPT_SHARE = 0.8;
 const NEAR_DROP = 0.82;
 /** Step of the compression face's strain, and its growth where a confined section goes far. */
 const STRAIN_STEP = 0.0002;
 const STEP_GROWTH = 0.05;
 const LARGEST_STRAIN = 1;
-const CROWN_CUTS = 10;
+const CROWN_CUTS = 8;
 const BLOCK_STRIPS = 2000;
-const BLOCK_STEPS = 400;
+const BLOCK_STEPS = 100;
 
 /** Edges h (i/n)²: fine near the compression face, where a lightly reinforced section has its axis. */
 const stripEdges = (depthMm: number, strips: number) =>
@@ -96,17 +97,18 @@ export function fibreSection(model: CurveModel, strips = DEFAULT_STRIPS): FibreS
 
 /** Net force, N, compression positive, of a state. */
 function netForce(section: FibreSection, topStrain: number, axisMm: number): number {
+  const { stripDepths, coverAreas, coreAreas, barDepths, barAreas, cover, core, steel } = section;
   let force = 0;
-  for (let i = 0; i < section.stripDepths.length; i++) {
-    const strain = topStrain * (1 - section.stripDepths[i]! / axisMm);
+  for (let i = 0; i < stripDepths.length; i++) {
+    const strain = topStrain * (1 - stripDepths[i]! / axisMm);
     if (strain <= 0) break;
-    force += section.coverAreas[i]! * section.cover.stress(strain);
-    if (section.coreAreas[i]! > 0) force += section.coreAreas[i]! * section.core.stress(strain);
+    force += coverAreas[i]! * cover.stress(strain);
+    if (coreAreas[i]! > 0) force += coreAreas[i]! * core.stress(strain);
   }
-  for (let i = 0; i < section.barDepths.length; i++) {
-    const strain = topStrain * (1 - section.barDepths[i]! / axisMm);
-    const displaced = strain > 0 ? section.displacedMPa(section.barDepths[i]!, strain) : 0;
-    force += section.barAreas[i]! * (section.steel.stress(strain) - displaced);
+  for (let i = 0; i < barDepths.length; i++) {
+    const strain = topStrain * (1 - barDepths[i]! / axisMm);
+    const displaced = strain > 0 ? section.displacedMPa(barDepths[i]!, strain) : 0;
+    force += barAreas[i]! * (steel.stress(strain) - displaced);
   }
   return force;
 }
@@ -134,7 +136,7 @@ function momentOf(section: FibreSection, topStrain: number, axisMm: number): num
 function halvedAxis(section: FibreSection, topStrain: number, from: number, to: number): number {
   let low = from;
   let high = to;
-  for (let i = 0; i < HALVINGS; i++) {
+  while (high - low > AXIS_SHARE * high) {
     const middle = (low + high) / 2;
     if (netForce(section, topStrain, middle) > 0) high = middle;
     else low = middle;
@@ -251,10 +253,17 @@ export interface BlockSection {
   readonly displacedConcrete: DisplacedConcrete;
 }
 
+/** Axes from the deepest bar upwards in even steps, and either side of those at which the block reaches a bar, mm. */
+function trialAxes({ depths, dtMm }: SteelLayout, reach: number): number[] {
+  const even = Array.from({ length: BLOCK_STEPS + 1 }, (_, i) => (dtMm * i) / BLOCK_STEPS);
+  const atBars = Array.from(depths, (depth) => [0.9999, 1.0001].map((share) => (share * depth) / reach));
+  return [...even, ...atBars.flat().filter((axis) => axis < dtMm)].sort((a, b) => b - a);
+}
+
 /**
  * The closed path's ultimate state by strips: the block's stress wherever the strain is above (1 − β1) εcu, that is, to the
- * depth β1 c. Of two equilibria the deeper axis, as in `neutralAxisDepth`: the axis is lowered from the deepest bar in
- * small steps until tension wins, then halved.
+ * depth β1 c. Of two equilibria the deeper axis, as in `neutralAxisDepth`: axes are tried
+ * from the deepest bar upwards until tension wins, then halved.
  */
 export function fibreBlockState(of: BlockSection, strips = BLOCK_STRIPS): FibreState {
   const { section, layout, rules } = of;
@@ -278,10 +287,10 @@ export function fibreBlockState(of: BlockSection, strips = BLOCK_STRIPS): FibreS
     },
     deepestMm: layout.dtMm,
   };
-  const step = layout.dtMm / BLOCK_STEPS;
-  let high = layout.dtMm;
-  while (high > step && netForce(cut, epsilonCu, high - step) > 0) high -= step;
-  const axisMm = halvedAxis(cut, epsilonCu, Math.max(0, high - step), high);
+  const reach = of.displacedConcrete === 'deduct' ? rules.blockDepthFactor(section.fcMPa) : 1;
+  const trials = trialAxes(layout, reach);
+  const under = trials.findIndex((axis) => netForce(cut, epsilonCu, axis) <= 0);
+  const axisMm = halvedAxis(cut, epsilonCu, trials[under]!, trials[under - 1]!);
   return {
     topStrain: epsilonCu,
     axisMm,

@@ -9,52 +9,57 @@ import type { CurveModel } from './curve-model.ts';
  * law at the bar.
  */
 
-/** Net force of a state and how it grows with the top strain, written by `balance`. */
+/** Forces of a state, written by `balance`. */
 export interface Balance {
   /** Compression less tension, N. */
   forceN: number;
-  /** dN/dεtop, N. */
-  stiffnessN: number;
   /** Concrete's compression alone, N. */
   concreteN: number;
 }
 
-export const emptyBalance = (): Balance => ({ forceN: 0, stiffnessN: 0, concreteN: 0 });
+export const emptyBalance = (): Balance => ({ forceN: 0, concreteN: 0 });
 
 /** Fills `out` for one state of the cracked section. */
 export function balance(model: CurveModel, curvature: number, topStrain: number, out: Balance): void {
   const { cover, core, steel, depths, areas, isDisplacedDeducted } = model;
   let force = model.widthMm * cover.forceIntegral(topStrain);
-  let slope = model.widthMm * cover.nearStress(topStrain);
   const atFarFace = topStrain - curvature * model.depthMm;
-  if (atFarFace > 0) {
-    force -= model.widthMm * cover.forceIntegral(atFarFace);
-    slope -= model.widthMm * cover.nearStress(atFarFace);
-  }
+  if (atFarFace > 0) force -= model.widthMm * cover.forceIntegral(atFarFace);
   if (core) {
     const atTop = topStrain - curvature * model.coreTopMm;
     if (atTop > 0) {
       force += model.coreWidthMm * (core.forceIntegral(atTop) - cover.forceIntegral(atTop));
-      slope += model.coreWidthMm * (core.nearStress(atTop) - cover.nearStress(atTop));
       const atBottom = topStrain - curvature * model.coreBottomMm;
-      if (atBottom > 0) {
+      if (atBottom > 0)
         force -= model.coreWidthMm * (core.forceIntegral(atBottom) - cover.forceIntegral(atBottom));
-        slope -= model.coreWidthMm * (core.nearStress(atBottom) - cover.nearStress(atBottom));
-      }
     }
   }
   force /= curvature;
-  slope /= curvature;
   out.concreteN = force;
   for (let i = 0; i < depths.length; i++) {
-    const area = areas[i]!;
     const strain = topStrain - curvature * depths[i]!;
-    force += area * steel.stress(strain);
-    slope += area * steel.tangent(strain);
-    if (strain > 0 && isDisplacedDeducted) force -= area * concreteStressAt(model, depths[i]!, strain);
+    let stress = steel.stress(strain);
+    if (strain > 0 && isDisplacedDeducted) stress -= concreteStressAt(model, depths[i]!, strain);
+    force += areas[i]! * stress;
   }
   out.forceN = force;
-  out.stiffnessN = slope;
+}
+
+/**
+ * How the net force grows with the top strain, N, but for what displaced concrete adds and a core that reaches beyond the
+ * axis: good enough for a first step.
+ */
+function stiffnessN(model: CurveModel, curvature: number, topStrain: number): number {
+  const { cover, core, steel, depths, areas } = model;
+  let stiffness = model.widthMm * cover.nearStress(topStrain);
+  if (core) {
+    const atTop = topStrain - curvature * model.coreTopMm;
+    stiffness += model.coreWidthMm * (core.nearStress(atTop) - cover.nearStress(atTop));
+  }
+  stiffness /= curvature;
+  for (let i = 0; i < depths.length; i++)
+    stiffness += areas[i]! * steel.tangent(topStrain - curvature * depths[i]!);
+  return stiffness;
 }
 
 /** Stress of the concrete at a bar, MPa. */
@@ -140,25 +145,35 @@ export function momentNmm(
 }
 
 const MOST_STEPS = 80;
-/** Relative step after which Newton's iteration has settled: the next would be of the order of its square. */
-const SETTLED = 1e-7;
+/** Unbalanced force, over the concrete's compression, that counts as none. */
+const BALANCED = 2e-10;
 
 /**
- * Top strain that balances the cracked section at a curvature: Newton from a guess, kept inside a bracket that shrinks
- * with every step, halving where a step leaves it. At zero strain every bar pulls; with the axis at the deepest bar none does.
+ * Top strain that balances the cracked section at a curvature: one step of Newton from a guess, then secants, inside a
+ * bracket that shrinks with every step. At zero strain every bar pulls; with the axis at the deepest bar none does. A step
+ * that leaves the bracket, or is not half the last, halves it instead.
  */
 export function balancedTopStrain(model: CurveModel, curvature: number, guess: number, out: Balance): number {
   let low = 0;
   let high = curvature * model.deepestMm;
   let strain = guess > low && guess < high ? guess : 0.5 * high;
-  for (let step = 0; step < MOST_STEPS; step++) {
+  let slope = stiffnessN(model, curvature, strain);
+  let lastStrain = strain;
+  let lastForce = 0;
+  let lastStep = high;
+  for (let count = 0; count < MOST_STEPS; count++) {
     balance(model, curvature, strain, out);
     if (out.forceN > 0) high = strain;
     else low = strain;
-    const before = strain;
-    const next = strain - out.forceN / out.stiffnessN;
-    strain = next > low && next < high ? next : 0.5 * (low + high);
-    if (Math.abs(strain - before) <= SETTLED * strain) break;
+    if (Math.abs(out.forceN) <= BALANCED * out.concreteN) break;
+    if (count > 0) slope = (out.forceN - lastForce) / (strain - lastStrain);
+    lastStrain = strain;
+    lastForce = out.forceN;
+    const step = -out.forceN / slope;
+    const isGood = strain + step > low && strain + step < high && Math.abs(step) < 0.5 * lastStep;
+    strain = isGood ? strain + step : 0.5 * (low + high);
+    lastStep = Math.abs(strain - lastStrain);
+    if (high - low <= Number.EPSILON * high) break;
   }
   return strain;
 }
