@@ -29,7 +29,7 @@ export function NothingFeasible({ result, definition, reader, onSelect }: Nothin
           </p>
         )}
         {nearest.length === 0 ? (
-          <p>No section fails one check only. Widen the ranges, or ask for less.</p>
+          <p>No section that can be placed fails one check only. Widen the ranges, or ask for less.</p>
         ) : (
           <div>
             <p>The nearest sections fail one check only:</p>

@@ -94,7 +94,7 @@ export function SteelField(props: SteelFieldProps) {
   const label = FACE_LABEL[face];
   const ownError = errors.get(`space.${face}`);
   return (
-    <fieldset className="grid gap-x-5 gap-y-2 border-t border-rule py-3 sm:grid-cols-[9.5rem_7.5rem_1fr_5.5rem] sm:items-start">
+    <fieldset className="grid min-w-0 gap-x-5 gap-y-2 border-t border-rule py-3 sm:grid-cols-[9.5rem_7.5rem_minmax(0,1fr)_5.5rem] sm:items-start">
       <legend className="sr-only">{label.name}</legend>
       <div className="sm:pt-1" aria-hidden="true">
         <span className="font-medium">{label.name}</span>
@@ -128,7 +128,7 @@ export function SteelField(props: SteelFieldProps) {
               onChange={(countsText) => onChange({ ...values, countsText })}
             />
             <ListField
-              className="w-64"
+              className="w-64 max-w-full"
               label={
                 <span className="text-xs font-normal text-muted">two sizes together, as 2-#8 + 2-#6</span>
               }
