@@ -44,6 +44,8 @@ async function show(shown: Browser, { name, role, arrive }: Screen): Promise<voi
   try {
     if (role !== null) await visit.signIn(role);
     await arrive(visit);
+    // What is fetched last, as the menu; a page that is made to wait never comes to rest.
+    await visit.page.waitForLoadState('networkidle', { timeout: 3000 }).catch(() => undefined);
     for (const paper of PAPERS)
       for (const width of WIDTHS) await takePicture(visit.page, { name, paper, width });
     console.log(name);
@@ -63,8 +65,8 @@ async function takePicture(
   await page.setViewportSize({ width, height: width < 500 ? 844 : 900 });
   // A chart takes its new size and colours a moment later.
   await page.waitForFunction(() =>
-    [...document.querySelectorAll('canvas')].every(
-      (canvas) => canvas.clientWidth === canvas.closest('[role=slider]')?.clientWidth,
+    [...document.querySelectorAll('[role=slider][aria-label^="Section along"]')].every(
+      (chart) => chart.querySelector('canvas')?.clientWidth === chart.clientWidth,
     ),
   );
   await page.evaluate(
