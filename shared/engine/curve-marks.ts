@@ -24,8 +24,11 @@ export interface CurveDuctility {
 const BILINEAR_RULE =
   'two lines of the same area under them as the cracked section’s curve to ultimate: from the origin through first yield, then level to ultimate';
 
+/** Plateau over peak moment above which two lines no longer stand for the curve. */
+const HIGHEST_PLATEAU = 1.1;
+
 /** Area under straight lines from the origin through the points, N (N·mm × 1/mm). */
-export function areaUnder(points: readonly CurvePoint[]): number {
+function areaUnder(points: readonly CurvePoint[]): number {
   let area = 0;
   let curvature = 0;
   let moment = 0;
@@ -40,7 +43,8 @@ export function areaUnder(points: readonly CurvePoint[]): number {
 /**
  * Equal-area idealisation (common practice). With slope K through first yield and plateau M, the area M φu − M²/2K equals
  * that of the curve, A: M = K φu (1 − √(1 − 2A/(K φu²))).
- * @returns null where no bar yields, or so late that the two lines would have to rise above the curve's peak.
+ * The curve bulges above its line before yield, so that M may pass the peak a little.
+ * @returns null where no bar yields, or so late that M would have to pass the peak by more than 10 % (engine rule).
  */
 export function bilinearOf({ points, firstYield, peak, ultimate }: Trace): Bilinear | null {
   if (!firstYield) return null;
@@ -49,7 +53,7 @@ export function bilinearOf({ points, firstYield, peak, ultimate }: Trace): Bilin
   const inner = 1 - (2 * areaUnder(points)) / (slope * last * last);
   if (!(inner >= 0)) return null;
   const momentNmm = slope * last * (1 - Math.sqrt(inner));
-  if (momentNmm > peak.momentNmm) return null;
+  if (momentNmm > HIGHEST_PLATEAU * peak.momentNmm) return null;
   return { yieldCurvaturePerMm: momentNmm / slope, momentNmm, rule: BILINEAR_RULE };
 }
 

@@ -45,7 +45,7 @@ export interface FibreCurve {
   readonly cause: UltimateCause;
 }
 
-export const DEFAULT_STRIPS = 240;
+const DEFAULT_STRIPS = 240;
 /** The axis is halved to this share of itself; the strain of an event, between two steps, so many times. */
 const AXIS_SHARE = 1e-7;
 const EVENT_HALVINGS = 15;
@@ -64,7 +64,7 @@ const stripEdges = (depthMm: number, strips: number) =>
   Float64Array.from({ length: strips + 1 }, (_, i) => depthMm * (i / strips) ** 2);
 
 /** Cuts a model into strips; a strip that the core's edge crosses has a share of both. */
-export function fibreSection(model: CurveModel, strips = DEFAULT_STRIPS): FibreSection {
+function fibreSection(model: CurveModel, strips = DEFAULT_STRIPS): FibreSection {
   const edges = stripEdges(model.depthMm, strips);
   const stripDepths = new Float64Array(strips);
   const coverAreas = new Float64Array(strips);
@@ -145,7 +145,7 @@ function halvedAxis(section: FibreSection, topStrain: number, from: number, to: 
 }
 
 /** The balanced state at a strain of the compression face: no bar is above the face, none below the deepest. */
-export function fibreState(section: FibreSection, topStrain: number): FibreState {
+function fibreState(section: FibreSection, topStrain: number): FibreState {
   const axisMm = halvedAxis(section, topStrain, 0, section.deepestMm);
   return {
     topStrain,

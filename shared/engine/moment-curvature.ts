@@ -38,7 +38,7 @@ export function momentCurvature(input: CurveInput): MomentCurvature {
 }
 
 /** The curve of a section whose laws are made already. */
-export function curveOf(model: CurveModel, hasTensionBeforeCracking = false): MomentCurvature {
+function curveOf(model: CurveModel, hasTensionBeforeCracking = false): MomentCurvature {
   const tracer = new Tracer(model);
   const trace = tracer.trace();
   const cracking = tracer.findCracking() ?? null;

@@ -20,7 +20,7 @@ export interface Balance {
 export const emptyBalance = (): Balance => ({ forceN: 0, concreteN: 0 });
 
 /** Fills `out` for one state of the cracked section. */
-export function balance(model: CurveModel, curvature: number, topStrain: number, out: Balance): void {
+function balance(model: CurveModel, curvature: number, topStrain: number, out: Balance): void {
   const { cover, core, steel, depths, areas, isDisplacedDeducted } = model;
   let force = model.widthMm * cover.forceIntegral(topStrain);
   const atFarFace = topStrain - curvature * model.depthMm;

@@ -17,7 +17,7 @@ export interface SteelLaw {
 }
 
 /** Strain at which a bar of ordinary grade breaks, unless set (Priestley, Seible and Calvi, 1996, for Grade 60; memory). */
-export const RUPTURE_STRAIN = 0.12;
+const RUPTURE_STRAIN = 0.12;
 
 export interface SteelGrade {
   readonly fyMPa: number;

@@ -91,6 +91,7 @@ describe('moment–curvature curves', () => {
       expect(bilinear.momentNmm).toBeGreaterThan(0.8 * peak.momentNmm);
       expect(ductility.byBilinearYield.value).toBeGreaterThanOrEqual(1);
     }
+    expect(bilinears).toBeGreaterThan(1000);
   });
 
   const scaled = PROPERTIES['curve-scaled'];

@@ -19,7 +19,7 @@ export const HOOPED: SectionInput = {
   },
 };
 
-export const HOOP_STEEL = { yieldMPa: 420, ruptureStrain: 0.12 };
+const HOOP_STEEL = { yieldMPa: 420, ruptureStrain: 0.12 };
 
 export function confinementOf(section: SectionInput): HoopConfinement | undefined {
   const { layout, arrangement } = placeSteel(section, METRIC_BASIS, 2);
