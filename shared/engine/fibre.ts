@@ -47,12 +47,12 @@ export interface FibreCurve {
 
 const DEFAULT_STRIPS = 240;
 /** The axis is halved to this share of itself; the strain of an event, between two steps, so many times. */
-const AXIS_SHARE = 1e-7;
-const EVENT_HALVINGS = 15;
+const AXIS_SHARE = 1e-6;
+const EVENT_HALVINGS = 13;
 const KEPT_SHARE = 0.8;
 const NEAR_DROP = 0.82;
 /** Step of the compression face's strain, and its growth where a confined section goes far. */
-const STRAIN_STEP = 0.0002;
+const STRAIN_STEP = 0.00025;
 const STEP_GROWTH = 0.05;
 const LARGEST_STRAIN = 1;
 const CROWN_CUTS = 8;
