@@ -76,11 +76,18 @@ export interface Density {
   readonly counts: Float64Array;
 }
 
-/** Sum of two grids. */
+/** Sum of two grids, both sorted by key: a merge of two lists, since each chunk of a run passes here. */
 export function addDensities(a: Density, b: Density): Density {
-  const builder = new DensityBuilder();
-  for (const grid of [a, b]) grid.keys.forEach((key, i) => builder.addCount(key, grid.counts[i]!));
-  return builder.finish();
+  const keys = new Uint32Array(a.keys.length + b.keys.length);
+  const counts = new Float64Array(keys.length);
+  let length = 0;
+  for (let i = 0, j = 0; i < a.keys.length || j < b.keys.length; length++) {
+    const left = i < a.keys.length ? a.keys[i]! : Infinity;
+    const right = j < b.keys.length ? b.keys[j]! : Infinity;
+    keys[length] = Math.min(left, right);
+    counts[length] = (left <= right ? a.counts[i++]! : 0) + (right <= left ? b.counts[j++]! : 0);
+  }
+  return { keys: keys.slice(0, length), counts: counts.slice(0, length) };
 }
 
 /** A chart draws no more; two wide measures could fill forty thousand, three megabytes of JSON with each progress event. */
