@@ -9,11 +9,13 @@ import { createWorld, type World } from '../support/world.ts';
 
 const service = useTestService();
 let admin: SignedIn;
+let checker: SignedIn;
 let world: World;
 beforeAll(async () => {
   admin = await signedIn(service, 'admin');
   const author = await signedIn(service, 'engineer');
-  world = await createWorld(service, author, [admin.person]);
+  checker = await signedIn(service, 'checker');
+  world = await createWorld(service, author, [admin.person, checker.person]);
 });
 
 /** Stands for a number that JSON can write and a double cannot hold. */
@@ -163,6 +165,8 @@ const damaged = (valid: object): fc.Arbitrary<unknown> =>
 interface Target {
   id: () => string;
   valid: () => object;
+  /** Who may send it; the admin where not said. */
+  by?: () => SignedIn;
 }
 const project = () => world.project;
 const TARGETS: Partial<Record<EndpointName, Target>> = {
@@ -188,6 +192,7 @@ const TARGETS: Partial<Record<EndpointName, Target>> = {
   },
   moveCandidate: { id: () => world.candidate, valid: () => ({ to: 'checked', note: '' }) },
   commentOnCandidate: { id: () => world.candidate, valid: () => ({ text: 'Noted' }) },
+  setSheetValue: { id: () => world.candidate, valid: () => ({ line: 'mn', value: 1 }), by: () => checker },
 };
 
 describe('no input gives a 500', () => {
@@ -199,7 +204,7 @@ describe('no input gives a 500', () => {
   });
 
   it.each(Object.keys(TARGETS) as EndpointName[])('%s', async (name) => {
-    const { id, valid } = TARGETS[name]!;
+    const { id, valid, by = () => admin } = TARGETS[name]!;
     const { method, path } = endpoints[name];
     const statuses = new Set<number>();
     const body = fc.oneof(
@@ -209,7 +214,7 @@ describe('no input gives a 500', () => {
     );
     await fc.assert(
       fc.asyncProperty(body, async (sent) => {
-        const answer = await admin
+        const answer = await by()
           .call(method, path.replace(':id', id()))
           .set('content-type', 'application/json')
           .send(writeJson(sent));
