@@ -51,6 +51,8 @@ describe('a form', () => {
     const cover = page.getByLabel('Clear cover');
     const before = await cover.inputValue();
     await cover.fill('1.75');
+    // An answer still on its way would bring the rolling session's cookie back.
+    await page.waitForLoadState('networkidle');
     await page.context().clearCookies();
     await page.getByRole('button', { name: 'Save design basis' }).click();
     await page.getByRole('dialog', { name: 'Your session has ended' }).waitFor();
