@@ -20,8 +20,6 @@ it('stops in order without a complaint in the log', async () => {
   await queue.stop();
   await runEvents.stop();
   await pool.end();
-  // Dropping the database cuts sockets that are still closing, which is a complaint of the test's own making.
-  const heard = [...complaints];
-  await database.drop();
-  expect(heard).toEqual([]);
+  // The database is left to the next run's sweep-out: dropping it would cut sockets that are still closing.
+  expect(complaints).toEqual([]);
 });
