@@ -232,7 +232,7 @@ export const takeoffSchema = z.object({
   lines: z.array(
     z.object({
       bar: z.string(),
-      position: z.enum(['tension', 'compression', 'stirrups']),
+      position: z.enum(['tension', 'compression', 'skin', 'stirrups']),
       tonnes: z.number(),
     }),
   ),

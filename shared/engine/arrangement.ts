@@ -31,6 +31,8 @@ export interface FaceLayers {
   readonly areaMm2: number;
   /** From the face to the inner edge of the innermost layer; to the inside of the stirrup for an empty group. */
   readonly reachMm: number;
+  /** Clear gap this group asks of the layer next to it. */
+  readonly layerGapMm: number;
 }
 
 /**
@@ -96,7 +98,7 @@ function emptyFace(face: Face, reachMm: number): FaceLayers {
     widthNeededMm: 0,
     reason: 'no bars',
   };
-  return { report, layers: [], centroidOffsetMm: 0, areaMm2: 0, reachMm };
+  return { report, layers: [], centroidOffsetMm: 0, areaMm2: 0, reachMm, layerGapMm: 0 };
 }
 
 interface Rejection {
@@ -137,7 +139,7 @@ function rejectedFace(
     widthNeededMm: isPlaceable ? Math.max(widthNeededMm, leastMm) : 0,
     reason,
   };
-  return { report, layers: [], centroidOffsetMm: 0, areaMm2: 0, reachMm: 0 };
+  return { report, layers: [], centroidOffsetMm: 0, areaMm2: 0, reachMm: 0, layerGapMm: 0 };
 }
 
 const layerWord = (count: number) => (count === 1 ? 'one layer' : `${count} layers`);
@@ -150,9 +152,10 @@ function placedFace(
 ): FaceLayers {
   const columns = columnsOf(layers[0]!, context);
   let clearGapMm = Infinity;
+  const layerGapMm = context.rules.layerGapMm(layers[0]![0]!.diameterMm, context.maxAggregateMm);
   let inner = legInnerMm(context);
   const placed = layers.map((layer, i) => {
-    if (i > 0) inner += context.rules.layerGapMm;
+    if (i > 0) inner += layerGapMm;
     const deepest = Math.max(...layer.map((bar) => bar.diameterMm));
     const xs = inLine(columns, layer.length);
     for (let j = 1; j < layer.length; j++)
@@ -176,7 +179,7 @@ function placedFace(
     widthNeededMm: widthNeeded(layers[0]!, gapMm, context),
     reason: `${layers.map((layer) => layer.length).join(' + ')} in ${layerWord(layers.length)}`,
   };
-  return { report, layers: placed, centroidOffsetMm, areaMm2, reachMm: inner };
+  return { report, layers: placed, centroidOffsetMm, areaMm2, reachMm: inner, layerGapMm };
 }
 
 /** Centres of the layer nearest the face: corners first, equal clear gaps between. */
@@ -215,12 +218,15 @@ function centroidOf(bars: readonly { readonly bar: Bar; readonly offsetMm: numbe
 
 /** Least overall depth at which two groups keep a layer's clear gap between them, and a single one its far cover, mm. */
 export function depthNeededMm(
-  tension: Pick<FaceLayers, 'reachMm' | 'areaMm2'>,
-  compression: Pick<FaceLayers, 'reachMm' | 'areaMm2'>,
-  rules: RuleSet,
+  tension: Pick<FaceLayers, 'reachMm' | 'areaMm2' | 'layerGapMm'>,
+  compression: Pick<FaceLayers, 'reachMm' | 'areaMm2' | 'layerGapMm'>,
 ): number {
   const hasBoth = tension.areaMm2 > 0 && compression.areaMm2 > 0;
-  return tension.reachMm + (hasBoth ? rules.layerGapMm : 0) + compression.reachMm;
+  return (
+    tension.reachMm +
+    (hasBoth ? Math.max(tension.layerGapMm, compression.layerGapMm) : 0) +
+    compression.reachMm
+  );
 }
 
 /** Both faces with coordinates from the left side and the compression face. */
@@ -230,7 +236,7 @@ export function arrangementReport(
   compression: FaceLayers,
   context: ArrangementContext,
 ): Arrangement {
-  const needed = depthNeededMm(tension, compression, context.rules);
+  const needed = depthNeededMm(tension, compression);
   const isDeepEnough = isWithinLength(needed, depthMm);
   const fits = tension.report.fits && compression.report.fits && isDeepEnough;
   const bars: PlacedBar[] = [tension, compression].flatMap((group) =>

@@ -12,6 +12,8 @@ export function detailingChecks(context: CheckContext): readonly (CheckResult | 
     shear(context),
     stirrupSpacing(context),
     leastDepth(context),
+    axisDepth(context),
+    mostSteel(context),
   ];
 }
 
@@ -66,18 +68,17 @@ function compressionTies(context: CheckContext): CheckResult | null {
       ratio: leastTieMm / tie.diameterMm,
       reason: 'diameter of stirrup that ties bars of this size',
     });
-  const limitMm = Math.min(
-    ruleSet.tieSpacingMm(Math.min(...diameters), tie.diameterMm),
-    section.widthMm,
-    section.depthMm,
-  );
+  const byBarsMm = ruleSet.tieSpacingMm(Math.min(...diameters), tie.diameterMm);
+  const limitMm = ruleSet.isTieSpacingWithinLeastSide
+    ? Math.min(byBarsMm, section.widthMm, section.depthMm)
+    : byBarsMm;
   return check({
     ...base,
     passes: isWithinLength(stirrup.spacingMm, limitMm),
     demand: stirrup.spacingMm,
     capacity: limitMm,
     ratio: stirrup.spacingMm / limitMm,
-    reason: 'stirrup spacing within 16 bar and 48 stirrup diameters and the least side',
+    reason: ruleSet.formulas.tieSpacing,
   });
 }
 
@@ -152,5 +153,39 @@ function leastDepth({ section, demand, ruleSet }: CheckContext): CheckResult | n
     kind: 'length',
     clause: ruleSet.clauses.leastDepth,
     reason: 'least depth where deflections are not computed, nothing attached that they could damage',
+  });
+}
+
+function axisDepth({ flexure, placed, section, ruleSet }: CheckContext): CheckResult | null {
+  const limit = ruleSet.largestAxisShare(section.fcMPa);
+  if (limit === null || !flexure || !placed.layout) return null;
+  const { neutralAxisMm } = flexure;
+  const { dMm } = placed.layout;
+  return check({
+    id: 'axis-depth',
+    passes: neutralAxisMm <= limit * dMm,
+    demand: neutralAxisMm / dMm,
+    capacity: limit,
+    ratio: neutralAxisMm / (limit * dMm),
+    kind: 'ratio',
+    clause: ruleSet.clauses.axisDepth,
+    reason: 'depth of the neutral axis at ultimate over d',
+  });
+}
+
+function mostSteel({ placed, section, ruleSet }: CheckContext): CheckResult | null {
+  const share = ruleSet.largestFaceSteelShare;
+  if (share === null || !placed.layout) return null;
+  const demand = Math.max(placed.layout.asMm2, placed.layout.asPrimeMm2);
+  const capacity = share * section.widthMm * section.depthMm;
+  return check({
+    id: 'most-steel',
+    passes: demand <= capacity,
+    demand,
+    capacity,
+    ratio: demand / capacity,
+    kind: 'area',
+    clause: ruleSet.clauses.mostSteel,
+    reason: 'steel of either face, outside laps',
   });
 }

@@ -99,7 +99,8 @@ function curvatureDuctility({ ductility, demand }: CheckContext): CheckResult | 
 
 function tensionStrain({ flexure, section, basis, ruleSet }: CheckContext): CheckResult | null {
   if (!flexure) return null;
-  const least = ruleSet.leastTensionStrain(section.fyMPa / basis.esMPa);
+  const least = ruleSet.leastTensionStrain(ruleSet.designYieldMPa(section.fyMPa) / basis.esMPa);
+  if (least === null) return null;
   return check({
     id: 'tension-strain',
     passes: flexure.tensionStrain >= least,
@@ -119,8 +120,9 @@ export function leastSteelOf(
 ): { leastMm2: number; waivedAtMm2: number | null } {
   const { widthMm, fcMPa, fyMPa } = section;
   const { dMm } = layout;
+  const waiver = ruleSet.leastSteelWaiver;
   const required =
-    demand.muNmm === null
+    demand.muNmm === null || waiver === null
       ? null
       : requiredSteelMm2(demand.muNmm, ruleSet.tensionControlledReduction, {
           widthMm,
@@ -130,7 +132,7 @@ export function leastSteelOf(
         });
   return {
     leastMm2: ruleSet.leastSteelMm2({ fcMPa, fyMPa, widthMm, dMm }),
-    waivedAtMm2: required !== null && required < Infinity ? ruleSet.leastSteelWaiver * required : null,
+    waivedAtMm2: required !== null && required < Infinity ? waiver! * required : null,
   };
 }
 

@@ -7,7 +7,7 @@ import { parabolaRectangle } from './concrete-laws/parabola-rectangle.ts';
 import { todeschini } from './concrete-laws/todeschini.ts';
 import type { Arrangement } from './evaluation.ts';
 import { assertPositive, InvalidSectionError } from './preconditions.ts';
-import { RULE_SETS } from './rules/rule-sets.ts';
+import { ruleSetOf } from './rules/rule-set-of.ts';
 import type { DesignBasis, SectionInput } from './section.ts';
 import type { SteelLayout } from './steel-layout.ts';
 import { elasticPlastic, strainHardening, type SteelLaw } from './steel-laws.ts';
@@ -100,7 +100,7 @@ export interface CurveInput {
 export function curveModel(input: CurveInput): CurveModel {
   const { section, layout, basis, choices } = input;
   assertChoices(choices);
-  const rules = RULE_SETS[basis.ruleSet];
+  const rules = ruleSetOf(basis);
   const ecMPa = rules.concreteModulusMPa(section.fcMPa);
   const { cover, core, confinement, confinementNote } = concreteOf(input, ecMPa);
   const coreTopMm = core && confinement ? confinement.coreTopMm : 0;

@@ -33,7 +33,8 @@ export function elasticSection(
     ratioAbove: ratioAbove(modularRatio, basis),
   });
   const crackedInertiaMm4 = crackedInertia(section.widthMm, layout, kd, basis, modularRatio);
-  const curvature = yieldCurvature(section, layout, basis, kd);
+  const epsilonY = rules.designYieldMPa(section.fyMPa) / basis.esMPa;
+  const curvature = yieldCurvature(epsilonY, layout, basis, kd);
   const concreteStress = ecMPa * curvature * kd;
   const share = concreteStress / section.fcMPa;
   return {
@@ -54,9 +55,9 @@ export function elasticSection(
 }
 
 /** φy = εy / (depth of the measured steel − kd), 1/mm. */
-function yieldCurvature(section: SectionInput, layout: SteelLayout, basis: DesignBasis, kd: number): number {
+function yieldCurvature(epsilonY: number, layout: SteelLayout, basis: DesignBasis, kd: number): number {
   const measuredAt = basis.yieldCurvatureAt === 'centroid' ? layout.dMm : layout.dtMm;
-  return section.fyMPa / basis.esMPa / (measuredAt - kd);
+  return epsilonY / (measuredAt - kd);
 }
 
 function uncrackedSection(section: SectionInput, layout: SteelLayout, modularRatio: number) {
@@ -96,9 +97,14 @@ export function ductilityOf(
   section: SectionInput,
   layout: SteelLayout,
   basis: DesignBasis,
-  { flexure, elastic }: { readonly flexure: FlexureResult; readonly elastic: ElasticResult },
+  {
+    flexure,
+    elastic,
+    rules,
+  }: { readonly flexure: FlexureResult; readonly elastic: ElasticResult; readonly rules: RuleSet },
 ): DuctilityResult {
-  const curvatureYieldPerMm = yieldCurvature(section, layout, basis, elastic.crackedAxisMm);
+  const epsilonY = rules.designYieldMPa(section.fyMPa) / basis.esMPa;
+  const curvatureYieldPerMm = yieldCurvature(epsilonY, layout, basis, elastic.crackedAxisMm);
   const curvatureUltimatePerMm = flexure.epsilonCu / flexure.neutralAxisMm;
   const where =
     basis.yieldCurvatureAt === 'centroid'

@@ -6,7 +6,7 @@ import { onGrid, type Measures } from './measures.ts';
 import { NOT_CHECKED } from './not-checked.ts';
 import { assertNotNegative, assertPositive, InvalidSectionError } from './preconditions.ts';
 import { quantitiesOf } from './quantities.ts';
-import { RULE_SETS } from './rules/rule-sets.ts';
+import { ruleSetOf } from './rules/rule-set-of.ts';
 import type { DesignBasis, Demand, Reinforcement, SectionInput, UserRules } from './section.ts';
 import { placeSteel, type SteelLayout } from './steel-layout.ts';
 import { ENGINE_VERSION } from './version.ts';
@@ -27,13 +27,14 @@ export interface EvaluationContext {
 export function evaluateSection(section: SectionInput, context: EvaluationContext): Evaluation {
   assertSection(section);
   const { basis, demand, rules } = context;
-  const ruleSet = RULE_SETS[basis.ruleSet];
+  const ruleSet = ruleSetOf(basis);
   const placed = placeSteel(section, basis, rules.maxLayers);
   const { layout } = placed;
   const quantities = quantitiesOf(section, basis);
   const flexure = layout && flexureAtUltimate(section, layout, basis, ruleSet);
   const elastic = layout && elasticSection(section, layout, basis, ruleSet);
-  const ductility = layout && flexure && elastic && ductilityOf(section, layout, basis, { flexure, elastic });
+  const ductility =
+    layout && flexure && elastic && ductilityOf(section, layout, basis, { flexure, elastic, rules: ruleSet });
   const checks = checksOf({ section, basis, demand, rules, ruleSet, placed, flexure, ductility });
   const measures = measuresOf(section, demand, quantities, {
     flexure,

@@ -19,6 +19,15 @@ export const CHECK_IDS = [
   'shear',
   'stirrup-spacing',
   'least-depth',
+  'axis-depth',
+  'most-steel',
+  'skin-steel',
+  'seismic-width',
+  'seismic-span',
+  'seismic-steel',
+  'seismic-bars',
+  'seismic-reversal',
+  'hoop-spacing',
 ] as const;
 export type CheckId = (typeof CHECK_IDS)[number];
 
@@ -151,7 +160,7 @@ export interface DuctilityResult {
 
 export interface SteelLine {
   readonly bar: string;
-  readonly position: 'tension' | 'compression' | 'stirrups';
+  readonly position: 'tension' | 'compression' | 'skin' | 'stirrups';
   readonly count: number;
   /** Length of bar per metre of beam, m/m. */
   readonly lengthPerM: number;

@@ -267,7 +267,7 @@ function trialAxes({ depths, dtMm }: SteelLayout, reach: number): number[] {
  */
 export function fibreBlockState(of: BlockSection, strips = BLOCK_STRIPS): FibreState {
   const { section, layout, rules } = of;
-  const epsilonCu = rules.epsilonCu;
+  const epsilonCu = rules.crushingStrain(section.fcMPa);
   const blockMPa = rules.blockStressMPa(section.fcMPa);
   const edgeStrain = (1 - rules.blockDepthFactor(section.fcMPa)) * epsilonCu;
   const block: StressLaw = { stress: (strain) => (strain > edgeStrain ? blockMPa : 0) };

@@ -14,12 +14,13 @@ export function flexureAtUltimate(
   basis: DesignBasis,
   rules: RuleSet,
 ): FlexureResult {
-  const { widthMm, fcMPa, fyMPa } = section;
+  const { widthMm, fcMPa } = section;
+  const fyMPa = rules.designYieldMPa(section.fyMPa);
   const { depths, areas, faces } = layout;
   const n = depths.length;
   const blockStressMPa = rules.blockStressMPa(fcMPa);
   const beta1 = rules.blockDepthFactor(fcMPa);
-  const epsilonCu = rules.epsilonCu;
+  const epsilonCu = rules.crushingStrain(fcMPa);
   const blockForcePerMm = blockStressMPa * widthMm * beta1;
   const c = neutralAxisDepth(depths, areas, n, {
     blockForcePerMm,

@@ -1,7 +1,7 @@
 import { getBar } from './bars.ts';
 import type { Quantities, SteelLine } from './evaluation.ts';
 import { concreteM3PerM, formworkM2PerM, pricingFor, type Pricing } from './pricing.ts';
-import { RULE_SETS } from './rules/rule-sets.ts';
+import { ruleSetOf } from './rules/rule-set-of.ts';
 import type { BarGroup, DesignBasis, SectionInput } from './section.ts';
 import { stirrupKgPerM, stirrupSetLengthMm, stirrupShape } from './stirrup-length.ts';
 
@@ -93,7 +93,7 @@ function longitudinalLines({ reinforcement }: SectionInput, basis: DesignBasis):
 function stirrupLines(section: SectionInput, basis: DesignBasis): readonly SteelLine[] {
   if (!section.stirrup) return [];
   const bar = getBar(basis.barStandard, section.stirrup.bar, ['stirrup', 'bar']);
-  const shape = stirrupShape(bar, section.stirrup, section.coverMm, RULE_SETS[basis.ruleSet]);
+  const shape = stirrupShape(bar, section.stirrup, section.coverMm, ruleSetOf(basis));
   return [
     {
       bar: bar.designation,

@@ -43,11 +43,14 @@ export interface BarCount {
 /** Bars of one face: one or two sizes; empty for none. */
 export type BarGroup = readonly BarCount[];
 
-/** Closed stirrups at a given spacing along the beam. */
+/** Closed stirrups along the beam. */
 export interface Stirrup {
   readonly bar: string;
   readonly legs: number;
+  /** Spacing as given; where the spacing is designed, the widest that is used. */
   readonly spacingMm: number;
+  /** The spacing is found for each section, in practical steps, from shear and detailing. */
+  readonly isDesigned?: boolean | undefined;
 }
 
 /** Bars to be arranged in layers, or layers exactly as printed in a published section. */
@@ -55,8 +58,27 @@ export type Reinforcement =
   | { readonly kind: 'bars'; readonly tension: BarGroup; readonly compression: BarGroup }
   | { readonly kind: 'layers'; readonly layers: readonly Layer[] };
 
-/** One rectangular section. Lengths mm, stresses MPa. */
+export const FLANGE_SHAPES = ['t', 'l'] as const;
+/** Slab on both sides of the web, or on one. */
+export type FlangeShape = (typeof FLANGE_SHAPES)[number];
+
+/** What the effective width of a flange follows from, or the width as the engineer gives it. Lengths mm. */
+export type FlangeWidth =
+  | { readonly kind: 'given'; readonly widthMm: number }
+  | { readonly kind: 'effective'; readonly clearToNextWebMm: number; readonly spanMm: number };
+
+/** The slab that works with the web. */
+export interface Flange {
+  readonly shape: FlangeShape;
+  readonly thicknessMm: number;
+  /** At the compression face in sagging, at the tension face in hogging. */
+  readonly face: Face;
+  readonly width: FlangeWidth;
+}
+
+/** One section: a rectangle, or a web with a flange. Lengths mm, stresses MPa. */
 export interface SectionInput {
+  /** Width of the web. */
   readonly widthMm: number;
   readonly depthMm: number;
   readonly fcMPa: number;
@@ -65,6 +87,7 @@ export interface SectionInput {
   readonly coverMm: number;
   readonly stirrup: Stirrup | null;
   readonly reinforcement: Reinforcement;
+  readonly flange?: Flange | null | undefined;
 }
 
 /** Unit rate and carbon factor of one concrete mix, matched to f′c exactly (within 0.01 MPa). */
@@ -89,7 +112,15 @@ export interface Rates {
   readonly wasteShare: number;
 }
 
-/** The part of a project's design basis that decides numbers. */
+export const DUCTILITY_MEASURES = ['closed', 'curve-first-yield', 'curve-bilinear'] as const;
+/** What μφ is held against the target: the closed path, or the full curve by either of its yields. */
+export type DuctilityMeasure = (typeof DUCTILITY_MEASURES)[number];
+
+export const SEISMIC_SYSTEMS = ['none', 'ordinary', 'intermediate', 'special', 'dcm', 'dch'] as const;
+/** Moment frame the beam belongs to: ordinary, intermediate, special (ACI 318 18); ductility class M, H (EN 1998-1). */
+export type SeismicSystem = (typeof SEISMIC_SYSTEMS)[number];
+
+/** The part of a project's design basis that decides numbers. What is optional was added later; absent is as before. */
 export interface DesignBasis {
   readonly ruleSet: RuleSetId;
   readonly barStandard: BarStandard;
@@ -103,6 +134,16 @@ export interface DesignBasis {
   /** Slab thickness whose height is not formed on the two sides, mm; 0 for none. */
   readonly slabMm: number;
   readonly rates: Rates | null;
+  readonly seismicSystem?: SeismicSystem | undefined;
+  /** Side bars of deep beams; null for none, so that a deep beam fails the check. */
+  readonly skinBar?: string | null | undefined;
+  /** Stirrup spacings are multiples of this where designed; 1 in or 25 mm unless set. */
+  readonly stirrupStepMm?: number | undefined;
+  /** Closest stirrup spacing that is built; 3 in or 75 mm unless set. */
+  readonly leastStirrupSpacingMm?: number | undefined;
+  /** Outside of a bar over its nominal diameter where bars are fitted, 1.10 to 1.18 for deformed bars; 1 unless set. */
+  readonly barOversize?: number | undefined;
+  readonly ductilityMeasure?: DuctilityMeasure | undefined;
 }
 
 export const SUPPORTS = ['simple', 'one-end-continuous', 'both-ends-continuous', 'cantilever'] as const;

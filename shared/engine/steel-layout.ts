@@ -8,7 +8,7 @@ import {
 import { getBar } from './bars.ts';
 import type { Arrangement } from './evaluation.ts';
 import { isWithinLength } from './limits.ts';
-import { RULE_SETS } from './rules/rule-sets.ts';
+import { ruleSetOf } from './rules/rule-set-of.ts';
 import type { DesignBasis, Face, Layer, Reinforcement, SectionInput } from './section.ts';
 
 /** All layers of a section sorted by depth from the compression face, with the depths the checks refer to (mm, mm²). */
@@ -51,7 +51,7 @@ const NO_TENSION_STEEL = 'no steel at the tension face';
  */
 export function placeSteel(section: SectionInput, basis: DesignBasis, maxLayers: number): PlacedSteel {
   const { reinforcement, stirrup, coverMm } = section;
-  const rules = RULE_SETS[basis.ruleSet];
+  const rules = ruleSetOf(basis);
   const stirrupBar = stirrup && getBar(basis.barStandard, stirrup.bar, ['stirrup', 'bar']);
   const placed =
     reinforcement.kind === 'layers'

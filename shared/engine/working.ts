@@ -50,9 +50,9 @@ function materials({ section, basis, ruleSet, flexure, elastic }: WorkingSource)
     step(
       'epsilonTy',
       'materials',
-      ['εty', 'fy/Es', section.fyMPa / basis.esMPa, 'strain'],
+      ['εty', 'fy/Es', ruleSet.designYieldMPa(section.fyMPa) / basis.esMPa, 'strain'],
       [
-        ['fy', section.fyMPa, 'stress'],
+        ['fy', ruleSet.designYieldMPa(section.fyMPa), 'stress'],
         ['Es', basis.esMPa, 'stress'],
       ],
       clauses.strengthReduction,
@@ -166,7 +166,7 @@ function strength({ flexure, section, basis, ruleSet }: WorkingSource): WorkingS
       ['φ', ruleSet.formulas.strengthReduction, flexure.strengthReduction, 'ratio'],
       [
         ['εt', flexure.tensionStrain, 'strain'],
-        ['εty', section.fyMPa / basis.esMPa, 'strain'],
+        ['εty', ruleSet.designYieldMPa(section.fyMPa) / basis.esMPa, 'strain'],
       ],
       clauses.strengthReduction,
     ),
@@ -200,7 +200,8 @@ function limits(source: WorkingSource): WorkingStep[] {
     inputs,
     clause,
   );
-  if (waivedAtMm2 === null || demand.muNmm === null) return [least];
+  const { leastSteelWaiver } = ruleSet;
+  if (waivedAtMm2 === null || leastSteelWaiver === null || demand.muNmm === null) return [least];
   const sigmaMPa = ruleSet.blockStressMPa(section.fcMPa);
   const waiver = step(
     'as-waive',
@@ -213,7 +214,7 @@ function limits(source: WorkingSource): WorkingStep[] {
     ],
     [
       ['Mu', demand.muNmm, 'moment'],
-      ['k', ruleSet.leastSteelWaiver, 'ratio'],
+      ['k', leastSteelWaiver, 'ratio'],
       ['σ', sigmaMPa, 'stress'],
       ['φ', ruleSet.tensionControlledReduction, 'ratio'],
       ...inputs.slice(1),

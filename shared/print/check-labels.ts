@@ -22,6 +22,15 @@ const CHECKS: Readonly<Record<CheckId, CheckLabel>> = {
   shear: { name: 'Shear', symbol: 'φVn' },
   'stirrup-spacing': { name: 'Stirrup spacing', symbol: 's' },
   'least-depth': { name: 'Least depth', symbol: 'h' },
+  'axis-depth': { name: 'Neutral axis depth', symbol: 'x/d' },
+  'most-steel': { name: 'Most steel', symbol: 'As' },
+  'skin-steel': { name: 'Skin reinforcement', symbol: 's' },
+  'seismic-width': { name: 'Seismic: width', symbol: 'b' },
+  'seismic-span': { name: 'Seismic: clear span', symbol: 'ln/d' },
+  'seismic-steel': { name: 'Seismic: steel ratio', symbol: 'ρ' },
+  'seismic-bars': { name: 'Seismic: continuous bars', symbol: '' },
+  'seismic-reversal': { name: 'Seismic: reversed moment', symbol: 'Mn⁺/Mn⁻' },
+  'hoop-spacing': { name: 'Seismic: hoop spacing', symbol: 's' },
 };
 
 export const checkLabel = (id: CheckId): CheckLabel => CHECKS[id];

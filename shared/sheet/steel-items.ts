@@ -6,7 +6,12 @@ import { formatQuantity } from '../print/format-quantity.ts';
 import type { QuantityItem } from './quantity-item.ts';
 
 const MASS = 'mass-per-length';
-const POSITION = { tension: 'bottom', compression: 'top', stirrups: 'stirrups' } as const;
+const POSITION = {
+  tension: 'bottom',
+  compression: 'top',
+  skin: 'at the sides',
+  stirrups: 'stirrups',
+} as const;
 
 /** Steel of the section with the arithmetic of each line, then the sum, the allowances and the total. */
 export function steelItems(snapshot: Snapshot, units: UnitSystem): QuantityItem[] {

@@ -9,7 +9,7 @@ import type { SweepProblem } from './problem.ts';
  */
 export function countCannotFit(problem: SweepProblem): number {
   const prepared = prepareSweep(problem, { x: 'steelKgPerM', y: 'depthMm' });
-  const { space, ruleSet } = prepared;
+  const { space } = prepared;
   const combinations = space.widthsMm.length * space.coversMm.length * space.stirrups.length;
   const perPair = space.fyMPa.length * space.fcMPa.length;
   let count = 0;
@@ -17,7 +17,7 @@ export function countCannotFit(problem: SweepProblem): number {
     const placement = placementAt(prepared, i);
     for (const t of placement.tension)
       for (const c of placement.compression) {
-        const least = leastDepthMm(placement, t, c, ruleSet);
+        const least = leastDepthMm(placement, t, c);
         const placed = space.depthsMm.filter(
           (h) => isWithinLength(least, h) && (!isPlain(t) || isAboveTension(t, c, h)),
         );

@@ -18,6 +18,7 @@ export interface FaceEntry {
   /** Area of the bars, placed or not. */
   readonly givenAreaMm2: number;
   readonly reachMm: number;
+  readonly layerGapMm: number;
   /** Offset as a share of h, for plain areas stated so; else 0. */
   readonly shareOfDepth: number;
   readonly kgPerM: number;
@@ -60,6 +61,7 @@ function barEntry(
     areaMm2: placed.areaMm2,
     givenAreaMm2: sum((bar, count) => count * getBar(context.barStandard, bar).areaMm2),
     reachMm: placed.reachMm,
+    layerGapMm: placed.layerGapMm,
     shareOfDepth: 0,
     kgPerM: sum((bar, count) => count * getBar(context.barStandard, bar).massKgPerM),
     barCount: barTotal(bars),
@@ -83,6 +85,7 @@ function areaEntry({ areaMm2, at }: Extract<SteelSet, { kind: 'area' }>): FaceEn
     areaMm2,
     givenAreaMm2: areaMm2,
     reachMm: 0,
+    layerGapMm: 0,
     shareOfDepth: isShare ? at.shareOfDepth : 0,
     kgPerM: hasSteel ? areaMm2 * STEEL_KG_PER_M_PER_MM2 : 0,
     barCount: NaN,

@@ -19,6 +19,8 @@ export const COMPRESSION_TIES = bit('compression-ties');
 export const SHEAR = bit('shear');
 export const STIRRUP_SPACING = bit('stirrup-spacing');
 export const LEAST_DEPTH = bit('least-depth');
+export const AXIS_DEPTH = bit('axis-depth');
+export const MOST_STEEL = bit('most-steel');
 
 const at = (measure: MeasureId) => MEASURE_IDS.indexOf(measure);
 export const STEEL = at('steelKgPerM');

@@ -30,6 +30,8 @@ import {
   SHEAR,
   STIRRUP_SPACING,
   LEAST_DEPTH,
+  AXIS_DEPTH,
+  MOST_STEEL,
   STEEL,
   COST,
   CO2E,
@@ -106,7 +108,7 @@ export class Kernel {
       blockDepthFactor: 0,
       fyMPa: 0,
       esMPa: basis.esMPa,
-      epsilonCu: prepared.ruleSet.epsilonCu,
+      epsilonCu: 0,
       displacedConcrete: basis.displacedConcrete,
     };
   }
@@ -153,18 +155,24 @@ export class Kernel {
     const { minDepthToWidth, maxDepthToWidth } = rules;
     const fixedMask = this.fixedMask(combination);
     const isPlainSteel = isPlain(tension);
-    const leastMm = leastDepthMm(placement, tension, compression, ruleSet);
+    const leastMm = leastDepthMm(placement, tension, compression);
 
     const { blockStressMPa, blockDepthFactor } = concrete;
     const esMPa = basis.esMPa;
-    const epsilonCu = ruleSet.epsilonCu;
-    const epsilonTy = fyMPa / esMPa;
-    const leastStrain = ruleSet.leastTensionStrain(epsilonTy);
+    const epsilonCu = concrete.crushingStrain;
+    // yield stress that strength counts on; the least steel and the detailing rules take fy as it is named
+    const yieldMPa = ruleSet.designYieldMPa(fyMPa);
+    const epsilonTy = yieldMPa / esMPa;
+    const leastStrain = ruleSet.leastTensionStrain(epsilonTy) ?? -Infinity;
+    const largestAxisShare = ruleSet.largestAxisShare(concrete.fcMPa) ?? Infinity;
+    const faceSteelShare = ruleSet.largestFaceSteelShare;
+    const largestFaceSteelMm2 = Math.max(tension.areaMm2, compression.areaMm2);
     const blockForcePerMm = blockStressMPa * widthMm * blockDepthFactor;
     ultimate.blockForcePerMm = blockForcePerMm;
     ultimate.blockStressMPa = blockStressMPa;
     ultimate.blockDepthFactor = blockDepthFactor;
-    ultimate.fyMPa = fyMPa;
+    ultimate.fyMPa = yieldMPa;
+    ultimate.epsilonCu = epsilonCu;
     cracked.widthMm = widthMm;
     cracked.modularRatio = concrete.modularRatio;
     cracked.ratioAbove = concrete.ratioAbove;
@@ -231,7 +239,7 @@ export class Kernel {
       for (let i = 0; i < n; i++) {
         const depth = depths[i]!;
         const elastic = esMPa * ((epsilonCu * (depth - c)) / c);
-        const stress = elastic > fyMPa ? fyMPa : elastic < -fyMPa ? -fyMPa : elastic;
+        const stress = elastic > yieldMPa ? yieldMPa : elastic < -yieldMPa ? -yieldMPa : elastic;
         nominal += areas[i]! * (depth < deductionDepth ? stress + blockStressMPa : stress) * depth;
       }
       const dt = depths[n - 1]!;
@@ -243,6 +251,9 @@ export class Kernel {
       if (muNmm !== null && !(design >= muNmm)) mask |= STRENGTH;
       if (target !== null && !(muPhi >= target)) mask |= DUCTILITY;
       if (!(epsilonT >= leastStrain)) mask |= TENSION_STRAIN;
+      if (!(c <= largestAxisShare * d)) mask |= AXIS_DEPTH;
+      if (faceSteelShare !== null && !(largestFaceSteelMm2 <= faceSteelShare * widthMm * h))
+        mask |= MOST_STEEL;
       if (!(asMm2 >= leastSteelPerMm * d) && !this.isLeastSteelWaived(asMm2, d, concrete, fyMPa))
         mask |= LEAST_STEEL;
       mask |= placedMask;
@@ -310,9 +321,13 @@ export class Kernel {
         isWithinLength(ruleSet.leastTieDiameterMm(compression.largestBarMm), stirrupBar.diameterMm) &&
         isWithinLength(
           given.spacingMm,
-          Math.min(ruleSet.tieSpacingMm(compression.leastBarMm, stirrupBar.diameterMm), placement.widthMm),
+          Math.min(
+            ruleSet.tieSpacingMm(compression.leastBarMm, stirrupBar.diameterMm),
+            ruleSet.isTieSpacingWithinLeastSide ? placement.widthMm : Infinity,
+          ),
         );
-      tieSpacingMm = isTied ? given.spacingMm : Infinity;
+      if (!isTied) tieSpacingMm = Infinity;
+      else if (ruleSet.isTieSpacingWithinLeastSide) tieSpacingMm = given.spacingMm;
     }
     const { spanMm, support } = problem.demand;
     const leastDepthMm = spanMm && support ? ruleSet.leastDepthMm(spanMm, support, fyMPa) : -Infinity;
@@ -328,7 +343,8 @@ export class Kernel {
   ): boolean {
     const { problem, ruleSet } = this.prepared;
     const { muNmm } = problem.demand;
-    if (muNmm === null) return false;
+    const waiver = ruleSet.leastSteelWaiver;
+    if (muNmm === null || waiver === null) return false;
     const { widthMm } = this.cracked;
     const { blockStressMPa } = concrete;
     const required = requiredSteelMm2(muNmm, ruleSet.tensionControlledReduction, {
@@ -337,6 +353,6 @@ export class Kernel {
       blockStressMPa,
       fyMPa,
     });
-    return required < Infinity && asMm2 >= ruleSet.leastSteelWaiver * required;
+    return required < Infinity && asMm2 >= waiver * required;
   }
 }

@@ -3,7 +3,7 @@ import { getBar, type Bar } from '../engine/bars.ts';
 import { isWithinLength } from '../engine/limits.ts';
 import { pricingFor, type Pricing } from '../engine/pricing.ts';
 import type { RuleSet } from '../engine/rules/rule-set.ts';
-import { RULE_SETS } from '../engine/rules/rule-sets.ts';
+import { ruleSetOf } from '../engine/rules/rule-set-of.ts';
 import type { Stirrup } from '../engine/section.ts';
 import { shearConstantsOf, type ShearConstants } from '../engine/shear.ts';
 import { stirrupShape, type StirrupShape } from '../engine/stirrup-length.ts';
@@ -14,6 +14,7 @@ import { expandSpace } from './space.ts';
 /** Constants of one concrete strength, MPa. */
 export interface ConcreteConstants {
   readonly fcMPa: number;
+  readonly crushingStrain: number;
   readonly blockStressMPa: number;
   readonly blockDepthFactor: number;
   readonly modularRatio: number;
@@ -54,11 +55,12 @@ const MAX_PLACEMENTS = 64;
 export function prepareSweep(problem: SweepProblem, view: View): PreparedSweep {
   const { basis } = problem;
   const space = expandSpace(problem.space, basis.barStandard);
-  const ruleSet = RULE_SETS[basis.ruleSet];
+  const ruleSet = ruleSetOf(basis);
   const concretes = space.fcMPa.map((fcMPa) => {
     const modularRatio = basis.esMPa / ruleSet.concreteModulusMPa(fcMPa);
     return {
       fcMPa,
+      crushingStrain: ruleSet.crushingStrain(fcMPa),
       blockStressMPa: ruleSet.blockStressMPa(fcMPa),
       blockDepthFactor: ruleSet.blockDepthFactor(fcMPa),
       modularRatio,
@@ -112,15 +114,10 @@ export function placementAt(prepared: PreparedSweep, combination: number): Place
  * Least overall depth at which this pair of sets is placed, mm: Infinity where the width does not hold it. Plain areas need
  * no more than their stirrup.
  */
-export function leastDepthMm(
-  placement: Placement,
-  tension: FaceEntry,
-  compression: FaceEntry,
-  ruleSet: RuleSet,
-): number {
+export function leastDepthMm(placement: Placement, tension: FaceEntry, compression: FaceEntry): number {
   const { leastForStirrupMm: leastMm, widthMm } = placement;
   if (!tension.fits || !compression.fits || !isWithinLength(leastMm, widthMm)) return Infinity;
-  return isPlain(tension) ? leastMm : Math.max(leastMm, depthNeededMm(tension, compression, ruleSet));
+  return isPlain(tension) ? leastMm : Math.max(leastMm, depthNeededMm(tension, compression));
 }
 
 /** Plain areas have no bars to count. */

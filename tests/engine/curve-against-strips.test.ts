@@ -3,7 +3,7 @@ import { Tracer } from '#shared/engine/curve-trace.ts';
 import { fibreBlockState, fibreCurve, type FibreCurve } from '#shared/engine/fibre.ts';
 import { flexureAtUltimate } from '#shared/engine/flexure.ts';
 import { momentCurvature, type MomentCurvature } from '#shared/engine/moment-curvature.ts';
-import { RULE_SETS } from '#shared/engine/rules/rule-sets.ts';
+import { ruleSetOf } from '#shared/engine/rules/rule-set-of.ts';
 import { PROPERTIES } from '#shared/verification/properties.ts';
 import { randomCurves } from './random-curve.ts';
 
@@ -88,7 +88,7 @@ describe('the curve against the summation of strips', () => {
     let compared = 0;
     const worst = { strength: 0, curvature: 0 };
     for (const { section, layout, basis } of randomCurves(block)) {
-      const rules = RULE_SETS[basis.ruleSet];
+      const rules = ruleSetOf(basis);
       const closed = flexureAtUltimate(section, layout, basis, rules);
       const strips = fibreBlockState({ section, layout, rules, ...basis });
       const curvature = closed.epsilonCu / closed.neutralAxisMm;

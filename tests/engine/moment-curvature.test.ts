@@ -4,7 +4,7 @@ import { Tracer } from '#shared/engine/curve-trace.ts';
 import { elasticSection } from '#shared/engine/elastic.ts';
 import { momentCurvature } from '#shared/engine/moment-curvature.ts';
 import { InvalidSectionError } from '#shared/engine/preconditions.ts';
-import { RULE_SETS } from '#shared/engine/rules/rule-sets.ts';
+import { ruleSetOf } from '#shared/engine/rules/rule-set-of.ts';
 import type { DesignBasis, SectionInput } from '#shared/engine/section.ts';
 import { placeSteel } from '#shared/engine/steel-layout.ts';
 import { MM_PER_IN, MPA_PER_PSI } from '#shared/engine/units.ts';
@@ -35,7 +35,7 @@ describe('a curve against hand formulas', () => {
     const section = metricSection({ ...beam, As: 300, fc: 60 });
     const basis = METRIC_BASIS;
     const layout = nonNull(placeSteel(section, basis, 2).layout);
-    const elastic = elasticSection(section, layout, basis, RULE_SETS[basis.ruleSet]);
+    const elastic = elasticSection(section, layout, basis, ruleSetOf(basis));
     // a curve that starts with the code's Ec
     const peakStrain = (2 * 60) / elastic.ecMPa;
     const { firstYield } = curveOf(section, { ...PLAIN, concreteLaw: 'hognestad', peakStrain });
@@ -47,7 +47,7 @@ describe('a curve against hand formulas', () => {
 
   it('cracks where the uncracked transformed section does', () => {
     const layout = nonNull(placeSteel(HOOPED, METRIC_BASIS, 2).layout);
-    const elastic = elasticSection(HOOPED, layout, METRIC_BASIS, RULE_SETS['aci318m-19']);
+    const elastic = elasticSection(HOOPED, layout, METRIC_BASIS, ruleSetOf(METRIC_BASIS));
     const peakStrain = (2 * 30) / elastic.ecMPa;
     const { cracking } = curveOf(HOOPED, { ...PLAIN, concreteLaw: 'hognestad', peakStrain });
     expect(nonNull(cracking).momentNmm / elastic.crackingMomentNmm).toBeCloseTo(1, 1.7);

@@ -8,6 +8,7 @@ import { TableFrame } from '#client/src/ui/table-frame.tsx';
 export const POSITION_NAME: Readonly<Record<SteelLine['position'], string>> = {
   tension: 'Bottom',
   compression: 'Top',
+  skin: 'skin',
   stirrups: 'Stirrups',
 };
 

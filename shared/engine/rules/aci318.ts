@@ -30,7 +30,7 @@ interface Coefficients {
   readonly gapMm: number;
   readonly hookTailLeastMm: number;
   readonly largestTightBendMm: number;
-  readonly formulas: Omit<Formulas, 'strengthReduction'>;
+  readonly formulas: Omit<Formulas, 'strengthReduction' | 'tieSpacing'>;
   /** 24.3.2: s ≤ first/fs − 2.5 cc and second/fs; MPa·mm. */
   readonly crackSpacing: readonly [number, number];
   /** Table 9.3.1.1 is for Grade 60 (420): factor 0.4 + fy/base. */
@@ -154,6 +154,9 @@ const clausesOf = (book: string): Clauses => ({
   shear: `${book} 22.5`,
   stirrupSpacing: `${book} 9.6.3, 9.7.6.2.2`,
   leastDepth: `${book} Table 9.3.1.1`,
+  axisDepth: `${book} 9.3.3.1`,
+  mostSteel: `${book} 9.3.3.1`,
+  skinSteel: `${book} 9.7.2.3`,
 });
 
 interface Edition {
@@ -172,7 +175,8 @@ export function aci318({ id, year, isMetric }: Edition): RuleSet {
     id,
     title: book,
     units: c.units,
-    epsilonCu: EPSILON_CU,
+    crushingStrain: () => EPSILON_CU,
+    designYieldMPa: (fyMPa) => fyMPa,
     blockStressMPa: (fcMPa) => BLOCK_STRESS_SHARE * fcMPa,
     blockDepthFactor: c.blockDepthFactor,
     concreteModulusMPa: c.concreteModulusMPa,
@@ -185,12 +189,14 @@ export function aci318({ id, year, isMetric }: Edition): RuleSet {
       );
     },
     leastTensionStrain: (epsilonTy) => (year === '19' ? epsilonTy + 0.003 : 0.004),
+    largestAxisShare: () => null,
+    largestFaceSteelShare: null,
     leastSteelMm2: ({ fcMPa, fyMPa, widthMm, dMm }) =>
       (c.leastSteelStressMPa(fcMPa) / Math.min(fyMPa, c.leastSteelFyCapMPa)) * widthMm * dMm,
     leastSteelWaiver: 4 / 3,
     tensionControlledReduction: TENSION_CONTROLLED,
     barGapMm: (diameterMm, aggregateMm) => Math.max(c.gapMm, diameterMm, (4 / 3) * aggregateMm),
-    layerGapMm: c.gapMm,
+    layerGapMm: () => c.gapMm,
     // Table 25.3.2: inside bend diameter 4 db to #5 / 16 mm, 6 db above
     bendRadiusMm: (ds) => (ds <= c.largestTightBendMm + 0.01 ? 2 * ds : 3 * ds),
     hookTailMm: (ds) => Math.max(6 * ds, c.hookTailLeastMm),
@@ -202,6 +208,7 @@ export function aci318({ id, year, isMetric }: Edition): RuleSet {
       );
     },
     tieSpacingMm: (barDiameterMm, stirrupDiameterMm) => Math.min(16 * barDiameterMm, 48 * stirrupDiameterMm),
+    isTieSpacingWithinLeastSide: true,
     leastTieDiameterMm: (barDiameterMm) =>
       barDiameterMm <= c.lightTie.upToBarMm + 0.01 ? c.lightTie.lightMm : c.lightTie.heavyMm,
     leastDepthMm: (spanMm, support, fyMPa) =>
@@ -214,6 +221,7 @@ export function aci318({ id, year, isMetric }: Edition): RuleSet {
     clauses: clausesOf(book),
     formulas: {
       ...c.formulas,
+      tieSpacing: 'stirrup spacing within 16 bar and 48 stirrup diameters and the least side',
       strengthReduction:
         year === '19'
           ? '0.65 + 0.25 (εt − εty)/0.003, within 0.65 and 0.90'

@@ -17,6 +17,9 @@ export interface Clauses {
   readonly shear: string;
   readonly stirrupSpacing: string;
   readonly leastDepth: string;
+  readonly axisDepth: string;
+  readonly mostSteel: string;
+  readonly skinSteel: string;
 }
 
 /** The rule as its book prints it, in the book's units, for the working shown beside a result. */
@@ -33,6 +36,7 @@ export interface Formulas {
   readonly stirrupLimit: string;
   /** Least Av/s. */
   readonly leastStirrups: string;
+  readonly tieSpacing: string;
   leastDepth(support: Support): string;
 }
 
@@ -45,7 +49,9 @@ export interface RuleSet {
   readonly title: string;
   readonly units: 'us' | 'si';
   /** Crushing strain of the extreme compression fibre. */
-  readonly epsilonCu: number;
+  crushingStrain(fcMPa: number): number;
+  /** Yield stress that strength counts on: fy itself, or with a partial factor. */
+  designYieldMPa(fyMPa: number): number;
   /** Stress of the rectangular block. */
   blockStressMPa(fcMPa: number): number;
   /** Depth of the block over the depth of the neutral axis. */
@@ -54,29 +60,35 @@ export interface RuleSet {
   ruptureModulusMPa(fcMPa: number): number;
   /** Strength reduction factor φ for strain εt of the outermost tension layer and yield strain εty. */
   strengthReduction(epsilonT: number, epsilonTy: number): number;
-  /** Least εt of a beam. */
-  leastTensionStrain(epsilonTy: number): number;
+  /** Least εt of a beam; null where the code limits the axis depth instead. */
+  leastTensionStrain(epsilonTy: number): number | null;
+  /** Largest neutral-axis depth over d; null where the code limits the strain instead. */
+  largestAxisShare(fcMPa: number): number | null;
   /**
    * Least tension steel of a beam of web width and effective depth, without the waiver. Proportional to d: the hot loop
    * calls it with d = 1.
    */
   leastSteelMm2(section: { fcMPa: number; fyMPa: number; widthMm: number; dMm: number }): number;
-  /** Provided over required steel at which the least steel is waived. */
-  readonly leastSteelWaiver: number;
+  /** Provided over required steel at which the least steel is waived; null where it never is. */
+  readonly leastSteelWaiver: number | null;
+  /** Largest steel of one face over the gross section; null where strain limits it. */
+  readonly largestFaceSteelShare: number | null;
   /** Strength reduction of a tension-controlled section, used for the required steel of the waiver. */
   readonly tensionControlledReduction: number;
   /** Least clear gap between bars of one layer. */
   barGapMm(diameterMm: number, aggregateMm: number): number;
   /** Least clear gap between layers. */
-  readonly layerGapMm: number;
+  layerGapMm(diameterMm: number, aggregateMm: number): number;
   /** Inside bend radius of a stirrup. */
   bendRadiusMm(stirrupDiameterMm: number): number;
   /** Straight end of a 135° stirrup hook. */
   hookTailMm(stirrupDiameterMm: number): number;
   /** Largest centre spacing of the tension bars nearest the face, for clear cover cc to them. */
   crackSpacingMm(fyMPa: number, clearCoverMm: number): number;
-  /** Largest spacing of stirrups that tie compression bars: 16 bar and 48 stirrup diameters; the least side bounds it too. */
+  /** Largest spacing of stirrups that tie compression bars. */
   tieSpacingMm(barDiameterMm: number, stirrupDiameterMm: number): number;
+  /** The least side of the section bounds that spacing too. */
+  readonly isTieSpacingWithinLeastSide: boolean;
   /** Least stirrup diameter that ties a bar of that diameter. */
   leastTieDiameterMm(barDiameterMm: number): number;
   /** Least overall depth where deflections are not computed. */

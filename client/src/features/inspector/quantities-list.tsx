@@ -6,6 +6,7 @@ import { KeyValue } from '#client/src/ui/key-value.tsx';
 const POSITION: Readonly<Record<SteelLine['position'], string>> = {
   tension: 'bottom',
   compression: 'top',
+  skin: 'skin',
   stirrups: 'stirrups',
 };
 
