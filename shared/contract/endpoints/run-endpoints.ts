@@ -1,0 +1,58 @@
+import { z } from 'zod';
+import { idSchema } from '../numbers.ts';
+import { evaluateOutputSchema, runSchema, viewProgressSchema } from '../records.ts';
+import { viewSchema } from '../sweep-definition.ts';
+import { byId, nothing } from './endpoint-params.ts';
+
+/** Executions of a sweep and the views of their results. */
+export const runEndpoints = {
+  startRun: {
+    method: 'post',
+    path: '/sweeps/:id/runs',
+    params: byId,
+    body: nothing,
+    response: runSchema,
+    isPublic: false,
+  },
+  getRun: {
+    method: 'get',
+    path: '/runs/:id',
+    params: byId,
+    body: null,
+    response: runSchema,
+    isPublic: false,
+  },
+  cancelRun: {
+    method: 'post',
+    path: '/runs/:id/cancel',
+    params: byId,
+    body: nothing,
+    response: runSchema,
+    isPublic: false,
+  },
+  /** Finds the view, or queues its computation from the run's frozen inputs. */
+  openView: {
+    method: 'post',
+    path: '/runs/:id/views',
+    params: byId,
+    body: viewSchema,
+    response: viewProgressSchema,
+    isPublic: false,
+  },
+  getView: {
+    method: 'get',
+    path: '/runs/:id/views/:viewId',
+    params: byId.extend({ viewId: idSchema }),
+    body: null,
+    response: viewProgressSchema,
+    isPublic: false,
+  },
+  getSection: {
+    method: 'get',
+    path: '/runs/:id/sections/:index',
+    params: byId.extend({ index: z.coerce.number().int().min(0) }),
+    body: null,
+    response: evaluateOutputSchema,
+    isPublic: false,
+  },
+} as const;
