@@ -44,6 +44,21 @@ export class FrontBuilder {
     this.insert(at, { x, y, ties: [...ties], tieCount });
   }
 
+  /** Whether a point is at least as good as (x, y) in both measures and better in one. */
+  isBeaten(x: number, y: number): boolean {
+    const { xs, ys } = this;
+    let low = 0;
+    let high = xs.length;
+    while (low < high) {
+      const mid = (low + high) >>> 1;
+      if (xs[mid]! <= x) low = mid + 1;
+      else high = mid;
+    }
+    if (low === 0) return false;
+    const left = low - 1;
+    return ys[left]! < y || (ys[left] === y && xs[left]! < x);
+  }
+
   /** Insertion place ≥ 0, −(tie) − TIE_OFFSET for an exact tie, or DOMINATED. NaN is always dominated. */
   private placeOf(x: number, y: number): number {
     const { xs, ys } = this;

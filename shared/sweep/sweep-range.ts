@@ -1,6 +1,6 @@
 import { MEASURE_IDS } from '../engine/measures.ts';
 import type { ChunkResult } from './chunk.ts';
-import { Kernel, type Recorder, type SweepColumns } from './kernel.ts';
+import { Kernel, type SweepColumns } from './kernel.ts';
 import { placementAt, type PreparedSweep } from './prepared-sweep.ts';
 import { Tally } from './tally.ts';
 
@@ -18,14 +18,18 @@ export function sweepRange(prepared: PreparedSweep, from: number, to: number): C
 /** A range done in steps, for who looks up between them; each step starts where the last one ended or later. */
 export interface SweepSteps {
   advance(from: number, to: number): void;
+  /** Whether a section found so far is at least as good as (x, y), oriented, in both measures and better in one. */
+  isBeaten(x: number, y: number): boolean;
   finish(): ChunkResult;
 }
 
 /** Steps added up in one tally: merging a result after each step would cost some 5 % of the sweep. */
 export function openSweep(prepared: PreparedSweep): SweepSteps {
   const tally = new Tally(prepared.space, prepared.view);
+  const kernel = new Kernel(prepared, tally, null);
   return {
-    advance: (from, to) => forEachRow(prepared, from, to, tally, null),
+    advance: (from, to) => forEachRow(prepared, from, to, kernel, tally),
+    isBeaten: (x, y) => tally.isBeaten(x, y),
     finish: () => tally.finish(),
   };
 }
@@ -36,7 +40,8 @@ export function sweepColumns(prepared: PreparedSweep, from: number, to: number):
     masks: new Uint32Array(to - from),
     measures: new Float64Array((to - from) * MEASURE_IDS.length).fill(NaN),
   };
-  forEachRow(prepared, from, to, new Tally(prepared.space, prepared.view), { ...columns, first: from });
+  const tally = new Tally(prepared.space, prepared.view);
+  forEachRow(prepared, from, to, new Kernel(prepared, tally, { ...columns, first: from }), tally);
   return columns;
 }
 
@@ -45,14 +50,13 @@ function forEachRow(
   prepared: PreparedSweep,
   from: number,
   to: number,
+  kernel: Kernel,
   tally: Tally,
-  recorder: Recorder,
 ): void {
   const { space } = prepared;
   if (!(from >= 0 && from <= to && to <= space.size))
     throw new RangeError(`[${from}, ${to}) is not a range of this space of ${space.size} sections`);
   const depthCount = space.depthsMm.length;
-  const kernel = new Kernel(prepared, tally, recorder);
   for (let index = from; index < to;) {
     const rowNumber = Math.floor(index / depthCount);
     const firstIndex = rowNumber * depthCount;

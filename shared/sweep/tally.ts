@@ -86,6 +86,11 @@ export class Tally {
     }
   }
 
+  /** Whether a section found so far beats (x, y), oriented. */
+  isBeaten(x: number, y: number): boolean {
+    return this.front.isBeaten(x, y);
+  }
+
   finish(): ChunkResult {
     const { evaluated, feasible, failed, failedOnly } = this;
     const { widthFeasible, widthEvaluated, depthFeasible, depthEvaluated, fcFeasible, fcEvaluated } = this;
