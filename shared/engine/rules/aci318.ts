@@ -1,6 +1,7 @@
 import type { RuleSetId } from '../section.ts';
 import { MM_PER_IN, MPA_PER_PSI } from '../units.ts';
 import type { Support } from '../section.ts';
+import { aciSeismic } from './aci318-seismic.ts';
 import type { Clauses, Formulas, RuleSet } from './rule-set.ts';
 import type { ShearRules } from './shear-rules.ts';
 
@@ -171,6 +172,10 @@ export function aci318({ id, year, isMetric }: Edition): RuleSet {
   const c = isMetric ? METRIC : US;
   /** Strain from which a section is tension-controlled, Table 21.2.2. */
   const tensionControlledStrain = (epsilonTy: number) => (year === '19' ? epsilonTy + 0.003 : 0.005);
+  const leastTieDiameterMm = (barDiameterMm: number) =>
+    barDiameterMm <= c.lightTie.upToBarMm + 0.01 ? c.lightTie.lightMm : c.lightTie.heavyMm;
+  const leastSteelShare = (fcMPa: number, fyMPa: number) =>
+    c.leastSteelStressMPa(fcMPa) / Math.min(fyMPa, c.leastSteelFyCapMPa);
   return {
     id,
     title: book,
@@ -191,8 +196,7 @@ export function aci318({ id, year, isMetric }: Edition): RuleSet {
     leastTensionStrain: (epsilonTy) => (year === '19' ? epsilonTy + 0.003 : 0.004),
     largestAxisShare: () => null,
     largestFaceSteelShare: null,
-    leastSteelMm2: ({ fcMPa, fyMPa, widthMm, dMm }) =>
-      (c.leastSteelStressMPa(fcMPa) / Math.min(fyMPa, c.leastSteelFyCapMPa)) * widthMm * dMm,
+    leastSteelMm2: ({ fcMPa, fyMPa, widthMm, dMm }) => leastSteelShare(fcMPa, fyMPa) * widthMm * dMm,
     leastSteelWaiver: 4 / 3,
     tensionControlledReduction: TENSION_CONTROLLED,
     barGapMm: (diameterMm, aggregateMm) => Math.max(c.gapMm, diameterMm, (4 / 3) * aggregateMm),
@@ -209,8 +213,7 @@ export function aci318({ id, year, isMetric }: Edition): RuleSet {
     },
     tieSpacingMm: (barDiameterMm, stirrupDiameterMm) => Math.min(16 * barDiameterMm, 48 * stirrupDiameterMm),
     isTieSpacingWithinLeastSide: true,
-    leastTieDiameterMm: (barDiameterMm) =>
-      barDiameterMm <= c.lightTie.upToBarMm + 0.01 ? c.lightTie.lightMm : c.lightTie.heavyMm,
+    leastTieDiameterMm,
     leastDepthMm: (spanMm, support, fyMPa) =>
       (spanMm / SPAN_TO_DEPTH[support]) * (0.4 + fyMPa / c.leastDepthFyBaseMPa),
     shear: {
@@ -218,6 +221,7 @@ export function aci318({ id, year, isMetric }: Edition): RuleSet {
       concreteWithoutStirrups: year === '19' ? c.shear.withoutStirrups19 : null,
       stirrupsFromShare: year === '19' ? c.shear.stirrupsFromShare19 : null,
     },
+    seismic: aciSeismic({ title: book, year, isMetric, leastSteelShare, leastTieDiameterMm }),
     clauses: clausesOf(book),
     formulas: {
       ...c.formulas,

@@ -1,4 +1,5 @@
 import type { RuleSetId, Support } from '../section.ts';
+import type { SeismicSystems } from './seismic-rules.ts';
 import type { ShearRules } from './shear-rules.ts';
 
 /** Clause and edition printed beside each result. */
@@ -94,6 +95,8 @@ export interface RuleSet {
   /** Least overall depth where deflections are not computed. */
   leastDepthMm(spanMm: number, support: Support, fyMPa: number): number;
   readonly shear: ShearRules;
+  /** What each class of moment frame asks. */
+  readonly seismic: SeismicSystems;
   readonly clauses: Clauses;
   readonly formulas: Formulas;
 }
