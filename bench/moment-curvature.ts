@@ -1,4 +1,5 @@
-import { CONCRETE_LAW_IDS, curveModel, STEEL_LAW_IDS } from '#shared/engine/curve-model.ts';
+import { CONCRETE_LAW_IDS, STEEL_LAW_IDS } from '#shared/engine/curve-choices.ts';
+import { curveModel } from '#shared/engine/curve-model.ts';
 import { momentCurvature } from '#shared/engine/moment-curvature.ts';
 import { placeSteel } from '#shared/engine/steel-layout.ts';
 import { sectionAt } from '#shared/sweep/space.ts';

@@ -66,6 +66,9 @@ const END_OF: Readonly<Record<UltimateCause, (model: CurveModel) => string>> = {
 
 const shown = (strain: number) => String(Number(strain.toPrecision(4)));
 
+/** What ended a curve, as a clause after “where”. */
+export const endOf = (model: CurveModel, cause: UltimateCause) => END_OF[cause](model);
+
 /** μφ by both yields, each with its definition. */
 export function ductilitiesOf(model: CurveModel, trace: Trace, bilinear: Bilinear | null): CurveDuctility {
   const { firstYield, ultimate, cause } = trace;
@@ -74,7 +77,7 @@ export function ductilitiesOf(model: CurveModel, trace: Trace, bilinear: Bilinea
       ? 'the outermost tension layer'
       : 'the centroid of the tension steel';
   const laws = `${(model.core ?? model.cover).name} concrete, ${model.steel.name} steel`;
-  const ultimateIs = `φu where ${END_OF[cause](model)}; ${laws}`;
+  const ultimateIs = `φu where ${endOf(model, cause)}; ${laws}`;
   const never = `no bar reaches fy/Es at ${where} before ultimate, so there is no yield curvature; ${ultimateIs}`;
   if (!firstYield) {
     const none = { value: null, definition: never };

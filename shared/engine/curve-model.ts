@@ -1,3 +1,4 @@
+import type { ConcreteLawId, CurveChoices } from './curve-choices.ts';
 import { findConfinement, type HoopConfinement } from './concrete-laws/confinement.ts';
 import type { ConcreteLaw, LawSettings } from './concrete-laws/concrete-law.ts';
 import { hognestad } from './concrete-laws/hognestad.ts';
@@ -11,43 +12,6 @@ import { ruleSetOf } from './rules/rule-set-of.ts';
 import type { DesignBasis, SectionInput } from './section.ts';
 import type { SteelLayout } from './steel-layout.ts';
 import { elasticPlastic, strainHardening, type SteelLaw } from './steel-laws.ts';
-
-export const CONCRETE_LAW_IDS = [
-  'hognestad',
-  'todeschini',
-  'kent-park',
-  'kent-park-confined',
-  'mander',
-  'mander-confined',
-  'parabola-rectangle',
-] as const;
-export type ConcreteLawId = (typeof CONCRETE_LAW_IDS)[number];
-
-export const STEEL_LAW_IDS = ['elastic-plastic', 'strain-hardening'] as const;
-export type SteelLawId = (typeof STEEL_LAW_IDS)[number];
-
-/** The laws a curve is drawn by. What is left out takes its law's own value. */
-export interface CurveChoices {
-  readonly concreteLaw: ConcreteLawId;
-  readonly steelLaw: SteelLawId;
-  /** Peak stress of unconfined concrete over f′c. */
-  readonly peakShare?: number;
-  readonly peakStrain?: number;
-  /** Crushing strain of the extreme fibre, or of the core's edge for a confined law. */
-  readonly crushingStrain?: number;
-  /** Strain at which a bar breaks. */
-  readonly ruptureStrain?: number;
-  /** fu over fy of the hardening branch. */
-  readonly strengthRatio?: number;
-  /** Strain at which hardening begins. */
-  readonly hardeningStrain?: number;
-  /** Yield strength of the hoops, MPa; that of the bars unless set. */
-  readonly hoopYieldMPa?: number;
-  /** Strain at which a hoop breaks; 0.12 unless set. */
-  readonly hoopRuptureStrain?: number;
-  /** Draw concrete's tension, linear to fr, up to the first crack. */
-  readonly hasTensionBeforeCracking?: boolean;
-}
 
 /** Concrete in tension before the first crack: σ = Ec ε to fr. */
 export interface TensionBeforeCracking {

@@ -1,5 +1,7 @@
 /** What a caller hands to the engine: one section, the design basis it is judged by, the demand on it, the user's rules. */
 
+import type { CurveChoices } from './curve-choices.ts';
+
 export const FACES = ['tension', 'compression'] as const;
 /** The face a bar group belongs to. Sagging is positive, so the tension face is the soffit. */
 export type Face = (typeof FACES)[number];
@@ -144,6 +146,8 @@ export interface DesignBasis {
   /** Outside of a bar over its nominal diameter where bars are fitted, 1.10 to 1.18 for deformed bars; 1 unless set. */
   readonly barOversize?: number | undefined;
   readonly ductilityMeasure?: DuctilityMeasure | undefined;
+  /** Laws of the full curve; those of the design code unless set. */
+  readonly curve?: CurveChoices | undefined;
 }
 
 export const SUPPORTS = ['simple', 'one-end-continuous', 'both-ends-continuous', 'cantilever'] as const;

@@ -2,7 +2,7 @@ import type { ConcreteLaw } from '#shared/engine/concrete-laws/concrete-law.ts';
 import { hognestad } from '#shared/engine/concrete-laws/hognestad.ts';
 import { twoPressureGain } from '#shared/engine/concrete-laws/mander-strength.ts';
 import { todeschini } from '#shared/engine/concrete-laws/todeschini.ts';
-import type { ConcreteLawId } from '#shared/engine/curve-model.ts';
+import type { ConcreteLawId } from '#shared/engine/curve-choices.ts';
 import { momentCurvature } from '#shared/engine/moment-curvature.ts';
 import { curvatureDuctilityFor, plasticHingeLengthMm } from '#shared/engine/plastic-hinge.ts';
 import { placeSteel } from '#shared/engine/steel-layout.ts';

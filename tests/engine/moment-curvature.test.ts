@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { CONCRETE_LAW_IDS, type CurveChoices } from '#shared/engine/curve-model.ts';
+import { CONCRETE_LAW_IDS, type CurveChoices } from '#shared/engine/curve-choices.ts';
 import { Tracer } from '#shared/engine/curve-trace.ts';
 import { elasticSection } from '#shared/engine/elastic.ts';
 import { momentCurvature } from '#shared/engine/moment-curvature.ts';

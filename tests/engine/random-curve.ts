@@ -1,10 +1,6 @@
 import fc from 'fast-check';
-import {
-  CONCRETE_LAW_IDS,
-  STEEL_LAW_IDS,
-  type CurveChoices,
-  type CurveInput,
-} from '#shared/engine/curve-model.ts';
+import { CONCRETE_LAW_IDS, STEEL_LAW_IDS, type CurveChoices } from '#shared/engine/curve-choices.ts';
+import type { CurveInput } from '#shared/engine/curve-model.ts';
 import { YIELD_CURVATURE_AT, type Layer, type SectionInput } from '#shared/engine/section.ts';
 import { placeSteel } from '#shared/engine/steel-layout.ts';
 import { METRIC_BASIS } from '#shared/verification/layered-section.ts';

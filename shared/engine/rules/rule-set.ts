@@ -1,3 +1,4 @@
+import type { ConcreteLawId } from '../curve-choices.ts';
 import type { RuleSetId, Support } from '../section.ts';
 import type { SeismicSystems } from './seismic-rules.ts';
 import type { ShearRules } from './shear-rules.ts';
@@ -95,6 +96,8 @@ export interface RuleSet {
   /** Least overall depth where deflections are not computed. */
   leastDepthMm(spanMm: number, support: Support, fyMPa: number): number;
   readonly shear: ShearRules;
+  /** The code's own law for a section's full curve, and its peak over f′c for any law; Hognestad's, with each law's own peak, unless set. */
+  readonly curveConcrete?: { readonly law: ConcreteLawId; readonly peakShare: number } | undefined;
   /** What each class of moment frame asks. */
   readonly seismic: SeismicSystems;
   readonly clauses: Clauses;
