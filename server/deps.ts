@@ -2,6 +2,7 @@ import type { Store } from 'express-session';
 import type pg from 'pg';
 import type { Passwords } from './compute/passwords.ts';
 import type { ComputePool } from './compute/pool.ts';
+import type { SheetFiles } from './compute/sheet-files.ts';
 import type { Config } from './config.ts';
 import type { Database } from './db/client.ts';
 import type { RunEvents } from './jobs/run-events.ts';
@@ -16,5 +17,6 @@ export interface Deps {
   readonly sessionStore: Store;
   readonly passwords: Passwords;
   readonly compute: ComputePool;
+  readonly sheetFiles: SheetFiles;
   readonly runEvents: RunEvents;
 }

@@ -1,5 +1,6 @@
 import { startPasswords } from './compute/passwords.ts';
 import { startComputePool } from './compute/pool.ts';
+import { startSheetFiles } from './compute/sheet-files.ts';
 import type { Config } from './config.ts';
 import { createDatabase, createPool } from './db/client.ts';
 import type { Deps } from './deps.ts';
@@ -21,9 +22,10 @@ export interface Services {
 export async function startServices(config: Config): Promise<Services> {
   const { databaseUrl } = config;
   const log = createLog(config.logLevel);
-  const [passwords, compute] = await Promise.all([
+  const [passwords, compute, sheetFiles] = await Promise.all([
     startPasswords(config.passwordCost),
     startComputePool(config.computeThreads),
+    startSheetFiles(),
   ]);
   const pool = createPool(databaseUrl, log);
   const db = createDatabase(pool);
@@ -34,13 +36,13 @@ export async function startServices(config: Config): Promise<Services> {
   const queue = new Queue({ databaseUrl, db, log, listener: runEvents.listener, createTasks: tasks });
   await queue.start();
   return {
-    deps: { config, log, pool, db, sessionStore, passwords, compute, runEvents },
+    deps: { config, log, pool, db, sessionStore, passwords, compute, sheetFiles, runEvents },
     endStreams: () => runEvents.endStreams(),
     stop: async () => {
       sessionStore.close();
       await queue.stop();
       await runEvents.stop();
-      await Promise.all([compute.close(), passwords.close()]);
+      await Promise.all([compute.close(), passwords.close(), sheetFiles.close()]);
       await pool.end();
     },
   };

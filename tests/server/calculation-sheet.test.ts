@@ -206,6 +206,24 @@ describe('the sheet as a file', () => {
     }
   });
 
+  test('made on the thread is what it is without one', async () => {
+    const candidate = candidateOf();
+    const file = {
+      sheet: buildSheet({ project: { name: 'Footbridge', number: 'P-1' }, units: 'si', candidate }),
+      ownValues: [],
+      paper: 'letter',
+      writtenAt: new Date(candidate.createdAt),
+      footer: 'P-1',
+    } as const;
+    const [apart, again, here] = await Promise.all([
+      office.deps.sheetFiles.pdf(file),
+      office.deps.sheetFiles.pdf(file),
+      calculationSheetPdf(file),
+    ]);
+    expect(apart.equals(here)).toBe(true);
+    expect(again.equals(here)).toBe(true);
+  });
+
   test('prints every word and digit of the sheet, the hand-worked ones among them', async () => {
     const candidate = candidateOf();
     const by = { id: '9', name: 'C. Checker' };

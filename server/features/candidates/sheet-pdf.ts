@@ -4,7 +4,6 @@ import { PAPERS, SHEET_PDF_PATH } from '#shared/contract/endpoints.ts';
 import { idSchema } from '#shared/contract/numbers.ts';
 import { buildSheet } from '#shared/sheet/build-sheet.ts';
 import type { Deps } from '../../deps.ts';
-import { calculationSheetPdf } from '../../files/calculation-sheet-pdf.ts';
 import { requireReadableProject } from '../../http/project-access.ts';
 import { requireSignedInPerson } from '../../http/signed-in-person.ts';
 import { requireValidBody, requireValidParams } from '../../http/validate.ts';
@@ -18,7 +17,7 @@ const querySchema = z.object({
 });
 
 /** The sheet as a file, for whoever may read the candidate and with what that reader is shown of it. */
-export function registerSheetPdf(router: Router, { db }: Deps): void {
+export function registerSheetPdf(router: Router, { db, sheetFiles }: Deps): void {
   router.get(SHEET_PDF_PATH, async (req, res) => {
     const person = await requireSignedInPerson(db, req);
     const { id } = requireValidParams(paramsSchema, req.params);
@@ -27,7 +26,7 @@ export function registerSheetPdf(router: Router, { db }: Deps): void {
     const { projectId, label, createdAt, hash } = record.candidate;
     const project = await requireReadableProject(db, person, { projectId, what: 'Candidate' });
     const candidate = presentCandidate(record, person);
-    const file = await calculationSheetPdf({
+    const file = await sheetFiles.pdf({
       sheet: buildSheet({ project, units: project.designBasis.units, candidate }),
       ownValues: presentSheetValues(await listSheetValues(db, record.candidate), person),
       paper,
