@@ -2,23 +2,19 @@ import { ACI_318_14 } from '#shared/engine/rules/aci318-14.ts';
 import { ACI_318_19 } from '#shared/engine/rules/aci318-19.ts';
 import { ACI_318M_19 } from '#shared/engine/rules/aci318m-19.ts';
 import { SUPPORTS, type Support } from '#shared/engine/section.ts';
-import {
-  concreteShearN,
-  leastStirrupsPerMm,
-  stirrupShearN,
-  stirrupSpacingLimitMm,
-  type ShearConstants,
-} from '#shared/engine/shear.ts';
+import { leastStirrupsPerMm, stirrupShearN, type AdditiveShear } from '#shared/engine/shear-additive.ts';
+import { concreteShearN, stirrupSpacingLimitMm } from '#shared/engine/shear.ts';
 import { MM2_PER_IN2, MM_PER_IN, MPA_PER_PSI, N_PER_KIP } from '#shared/engine/units.ts';
 import { listOf, type ComputeCase } from './published-case.ts';
 
 /** Stirrups given by area, psi and in. */
-function usShear(given: { bw: number; fc: number; fyt: number; Av: number; s: number }): ShearConstants {
+function usShear(given: { bw: number; fc: number; fyt: number; Av: number; s: number }): AdditiveShear {
   const rules = ACI_318_14.shear;
   const rootFc = Math.sqrt(given.fc * MPA_PER_PSI);
   const widthMm = given.bw * MM_PER_IN;
   const fytMPa = given.fyt * MPA_PER_PSI;
   return {
+    form: 'additive',
     rules,
     rootFc,
     widthMm,

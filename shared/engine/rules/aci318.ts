@@ -3,7 +3,7 @@ import { MM_PER_IN, MPA_PER_PSI } from '../units.ts';
 import type { Support } from '../section.ts';
 import { aciSeismic } from './aci318-seismic.ts';
 import type { Clauses, Formulas, RuleSet } from './rule-set.ts';
-import type { ShearRules } from './shear-rules.ts';
+import type { AdditiveShearRules } from './shear-rules.ts';
 
 /**
  * ACI 318, editions 2014 and 2019, US customary and metric. The editions differ in the strain limits; the metric books
@@ -38,7 +38,7 @@ interface Coefficients {
   readonly leastDepthFyBaseMPa: number;
   /** Ties of #3 (10M, 10) to this bar, the next size above (25.7.2.2). */
   readonly lightTie: { readonly upToBarMm: number; readonly lightMm: number; readonly heavyMm: number };
-  readonly shear: Omit<ShearRules, 'concreteWithoutStirrups' | 'stirrupsFromShare'> & {
+  readonly shear: Omit<AdditiveShearRules, 'form' | 'concreteWithoutStirrups' | 'stirrupsFromShare'> & {
     readonly withoutStirrups19: number;
     readonly stirrupsFromShare19: number;
   };
@@ -72,10 +72,6 @@ const US: Coefficients = {
     ruptureModulus: '7.5 √f′c; psi',
     leastSteel: 'max(3 √f′c, 200) b d/fy; psi, fy at most 80,000 psi',
     crackSpacing: 'min(15 · 40000/fs − 2.5 cc, 12 · 40000/fs); fs = 2/3 fy, psi and in',
-    concreteShear: '2 √f′c b d; psi',
-    concreteShearWithoutStirrups: '8 λs ρ^⅓ √f′c b d; psi, λs = √(2/(1 + d/10 in))',
-    stirrupLimit: '8 √f′c b d; psi',
-    leastStirrups: 'max(0.75 √f′c, 50) b/fyt; psi',
     leastDepth: (support) => `span/${SPAN_TO_DEPTH[support]} (0.4 + fy/100000); psi`,
   },
   crackSpacing: [15 * MM_PER_IN * 40000 * MPA_PER_PSI, 12 * MM_PER_IN * 40000 * MPA_PER_PSI],
@@ -95,6 +91,12 @@ const US: Coefficients = {
     leastStirrupFloorMPa: 50 * MPA_PER_PSI,
     fytCapMPa: 60000 * MPA_PER_PSI,
     longestSpacingMm: 24 * MM_PER_IN,
+    formulas: {
+      concrete: '2 √f′c b d; psi',
+      concreteWithoutStirrups: '8 λs ρ^⅓ √f′c b d; psi, λs = √(2/(1 + d/10 in))',
+      stirrupLimit: '8 √f′c b d; psi',
+      leastStirrups: 'max(0.75 √f′c, 50) b/fyt; psi',
+    },
   },
 };
 
@@ -115,10 +117,6 @@ const METRIC: Coefficients = {
     ruptureModulus: '0.62 √f′c; MPa',
     leastSteel: 'max(0.25 √f′c, 1.4) b d/fy; MPa, fy at most 550 MPa',
     crackSpacing: 'min(380 · 280/fs − 2.5 cc, 300 · 280/fs); fs = 2/3 fy, MPa and mm',
-    concreteShear: '0.17 √f′c b d; MPa',
-    concreteShearWithoutStirrups: '0.66 λs ρ^⅓ √f′c b d; MPa, λs = √(2/(1 + 0.004 d))',
-    stirrupLimit: '0.66 √f′c b d; MPa',
-    leastStirrups: 'max(0.062 √f′c, 0.35) b/fyt; MPa',
     leastDepth: (support) => `span/${SPAN_TO_DEPTH[support]} (0.4 + fy/700); MPa`,
   },
   crackSpacing: [380 * 280, 300 * 280],
@@ -137,6 +135,12 @@ const METRIC: Coefficients = {
     leastStirrupFloorMPa: 0.35,
     fytCapMPa: 420,
     longestSpacingMm: 600,
+    formulas: {
+      concrete: '0.17 √f′c b d; MPa',
+      concreteWithoutStirrups: '0.66 λs ρ^⅓ √f′c b d; MPa, λs = √(2/(1 + 0.004 d))',
+      stirrupLimit: '0.66 √f′c b d; MPa',
+      leastStirrups: 'max(0.062 √f′c, 0.35) b/fyt; MPa',
+    },
   },
 };
 
@@ -167,7 +171,7 @@ interface Edition {
 }
 
 /** One ACI 318 rule set. */
-export function aci318({ id, year, isMetric }: Edition): RuleSet {
+export function aci318({ id, year, isMetric }: Edition): RuleSet & { readonly shear: AdditiveShearRules } {
   const book = `ACI 318${isMetric ? 'M' : ''}-${year}`;
   const c = isMetric ? METRIC : US;
   /** Strain from which a section is tension-controlled, Table 21.2.2. */
@@ -217,6 +221,7 @@ export function aci318({ id, year, isMetric }: Edition): RuleSet {
     leastDepthMm: (spanMm, support, fyMPa) =>
       (spanMm / SPAN_TO_DEPTH[support]) * (0.4 + fyMPa / c.leastDepthFyBaseMPa),
     shear: {
+      form: 'additive',
       ...c.shear,
       concreteWithoutStirrups: year === '19' ? c.shear.withoutStirrups19 : null,
       stirrupsFromShare: year === '19' ? c.shear.stirrupsFromShare19 : null,

@@ -32,12 +32,6 @@ export interface Formulas {
   readonly leastSteel: string;
   readonly strengthReduction: string;
   readonly crackSpacing: string;
-  readonly concreteShear: string;
-  readonly concreteShearWithoutStirrups: string;
-  /** Largest Vs that counts. */
-  readonly stirrupLimit: string;
-  /** Least Av/s. */
-  readonly leastStirrups: string;
   readonly tieSpacing: string;
   leastDepth(support: Support): string;
 }
