@@ -2,6 +2,7 @@ import { getBar } from './bars.ts';
 import { check, type CheckContext } from './check-result.ts';
 import { detailingChecks } from './checks-detailing.ts';
 import type { CheckResult } from './evaluation.ts';
+import { compressedOverhang, flangeOf } from './flange.ts';
 import { isAtLeastTimes, isAtMostTimes, isSameLength, isWithinLength, requiredSteelMm2 } from './limits.ts';
 import type { BarGroup, DesignBasis, Reinforcement, UserRules } from './section.ts';
 import type { SteelLayout } from './steel-layout.ts';
@@ -113,13 +114,20 @@ function tensionStrain({ flexure, section, basis, ruleSet }: CheckContext): Chec
   });
 }
 
-/** As,min and, where that is not met, the steel at which it is waived. */
+/** As,min, the width it counts on, and, where that is not met, the steel at which it is waived. */
 export function leastSteelOf(
   { section, demand, ruleSet }: Pick<CheckContext, 'section' | 'demand' | 'ruleSet'>,
   layout: SteelLayout,
-): { leastMm2: number; waivedAtMm2: number | null } {
-  const { widthMm, fcMPa, fyMPa } = section;
+): { leastMm2: number; waivedAtMm2: number | null; widthMm: number } {
+  const { widthMm, depthMm, fcMPa, fyMPa } = section;
   const { dMm } = layout;
+  const flange = flangeOf(section, ruleSet);
+  const leastWidthMm = ruleSet.leastSteelWidthMm({
+    widthMm,
+    depthMm,
+    flange,
+    support: demand.support ?? null,
+  });
   const waiver = ruleSet.leastSteelWaiver;
   const required =
     demand.muNmm === null || waiver === null
@@ -129,9 +137,11 @@ export function leastSteelOf(
           dMm,
           blockStressMPa: ruleSet.blockStressMPa(fcMPa),
           fyMPa,
+          ...compressedOverhang(widthMm, flange),
         });
   return {
-    leastMm2: ruleSet.leastSteelMm2({ fcMPa, fyMPa, widthMm, dMm }),
+    widthMm: leastWidthMm,
+    leastMm2: ruleSet.leastSteelMm2({ fcMPa, fyMPa, widthMm: leastWidthMm, dMm }),
     waivedAtMm2: required !== null && required < Infinity ? waiver! * required : null,
   };
 }

@@ -14,6 +14,8 @@ export function curvatureGrid(model: CurveModel, last: number): Float64Array {
     widthMm: model.widthMm,
     modularRatio,
     ratioAbove: model.isDisplacedDeducted ? modularRatio - 1 : modularRatio,
+    overhangMm: model.overhangTopMm === 0 ? model.overhangMm : 0,
+    overhangDepthMm: model.overhangBottomMm,
   });
   const elasticYield = model.steel.yieldStrain / (model.yieldDepthMm - kd);
   const bend = elasticYield > 0 && elasticYield < 0.6 * last ? elasticYield : 0.3 * last;

@@ -6,8 +6,10 @@ import { kentPark, kentParkConfined } from './concrete-laws/kent-park.ts';
 import { manderConfined, manderUnconfined } from './concrete-laws/mander.ts';
 import { parabolaRectangle } from './concrete-laws/parabola-rectangle.ts';
 import { todeschini } from './concrete-laws/todeschini.ts';
+import { flangeOf, grossOverhang } from './flange.ts';
 import type { Arrangement } from './evaluation.ts';
 import { assertPositive, InvalidSectionError } from './preconditions.ts';
+import type { RuleSet } from './rules/rule-set.ts';
 import { ruleSetOf } from './rules/rule-set-of.ts';
 import type { DesignBasis, SectionInput } from './section.ts';
 import type { SteelLayout } from './steel-layout.ts';
@@ -30,6 +32,10 @@ export interface CurveModel {
   readonly coreTopMm: number;
   readonly coreBottomMm: number;
   readonly coreWidthMm: number;
+  /** Slab beside the web, unconfined: overhang bf − bw in all between two depths; 0 for a rectangle. */
+  readonly overhangMm: number;
+  readonly overhangTopMm: number;
+  readonly overhangBottomMm: number;
   readonly confinement: HoopConfinement | null;
   /** Why the core is or is not confined. */
   readonly confinementNote: string;
@@ -76,6 +82,7 @@ export function curveModel(input: CurveInput): CurveModel {
     coreTopMm,
     coreBottomMm: section.depthMm - coreTopMm,
     coreWidthMm: core && confinement ? confinement.coreWidthMm : 0,
+    ...overhangOf(section, rules),
     confinement,
     confinementNote,
     steel: steelOf(section.fyMPa, basis.esMPa, choices),
@@ -87,6 +94,19 @@ export function curveModel(input: CurveInput): CurveModel {
     crushingDepthMm: coreTopMm,
     crushingStrain: (core ?? cover).crushingStrain,
     tension: { ecMPa, crackingStrain: rules.ruptureModulusMPa(section.fcMPa) / ecMPa },
+  };
+}
+
+/** A slab at either face counts on the curve; in tension only before cracking. */
+function overhangOf(
+  section: SectionInput,
+  rules: RuleSet,
+): Pick<CurveModel, 'overhangMm' | 'overhangTopMm' | 'overhangBottomMm'> {
+  const { overhangMm, overhangDepthMm, middleMm } = grossOverhang(section, flangeOf(section, rules));
+  return {
+    overhangMm,
+    overhangTopMm: middleMm - overhangDepthMm / 2,
+    overhangBottomMm: middleMm + overhangDepthMm / 2,
   };
 }
 

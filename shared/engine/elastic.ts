@@ -1,5 +1,6 @@
-import { crackedAxisDepth } from './cracked-section.ts';
+import { compressedInertiaMm4, crackedAxisDepth } from './cracked-section.ts';
 import type { DuctilityResult, ElasticResult, FlexureResult } from './evaluation.ts';
+import { compressedOverhang, flangeOf, grossOverhang, type Overhang, type ResolvedFlange } from './flange.ts';
 import type { RuleSet } from './rules/rule-set.ts';
 import type { DesignBasis, SectionInput } from './section.ts';
 import type { SteelLayout } from './steel-layout.ts';
@@ -24,15 +25,21 @@ export function elasticSection(
 ): ElasticResult {
   const ecMPa = rules.concreteModulusMPa(section.fcMPa);
   const modularRatio = basis.esMPa / ecMPa;
-  const uncracked = uncrackedSection(section, layout, modularRatio);
+  const flange = flangeOf(section, rules);
+  const overhang = compressedOverhang(section.widthMm, flange);
+  const uncracked = uncrackedSection(section, flange, layout, modularRatio);
   const ruptureModulusMPa = rules.ruptureModulusMPa(section.fcMPa);
   const crackingCurvaturePerMm = ruptureModulusMPa / ecMPa / (section.depthMm - uncracked.axisMm);
   const kd = crackedAxisDepth(layout.depths, layout.areas, layout.depths.length, {
     widthMm: section.widthMm,
     modularRatio,
     ratioAbove: ratioAbove(modularRatio, basis),
+    ...overhang,
   });
-  const crackedInertiaMm4 = crackedInertia(section.widthMm, layout, kd, basis, modularRatio);
+  const crackedInertiaMm4 = crackedInertia({ ...overhang, widthMm: section.widthMm }, layout, kd, {
+    below: modularRatio,
+    above: ratioAbove(modularRatio, basis),
+  });
   const epsilonY = rules.designYieldMPa(section.fyMPa) / basis.esMPa;
   const curvature = yieldCurvature(epsilonY, layout, basis, kd);
   const concreteStress = ecMPa * curvature * kd;
@@ -60,17 +67,24 @@ function yieldCurvature(epsilonY: number, layout: SteelLayout, basis: DesignBasi
   return epsilonY / (measuredAt - kd);
 }
 
-function uncrackedSection(section: SectionInput, layout: SteelLayout, modularRatio: number) {
+function uncrackedSection(
+  section: SectionInput,
+  flange: ResolvedFlange | null,
+  layout: SteelLayout,
+  modularRatio: number,
+) {
   const { widthMm: b, depthMm: h } = section;
+  const { overhangMm, overhangDepthMm: hf, middleMm } = grossOverhang(section, flange);
   const added = modularRatio - 1;
-  let area = b * h;
-  let moment = (b * h * h) / 2;
+  let area = b * h + overhangMm * hf;
+  let moment = (b * h * h) / 2 + overhangMm * hf * middleMm;
   layout.depths.forEach((depth, i) => {
     area += added * layout.areas[i]!;
     moment += added * layout.areas[i]! * depth;
   });
   const axisMm = moment / area;
   let inertiaMm4 = (b * h * h * h) / 12 + b * h * (h / 2 - axisMm) ** 2;
+  inertiaMm4 += (overhangMm * hf * hf * hf) / 12 + overhangMm * hf * (middleMm - axisMm) ** 2;
   layout.depths.forEach((depth, i) => {
     inertiaMm4 += added * layout.areas[i]! * (depth - axisMm) ** 2;
   });
@@ -78,16 +92,14 @@ function uncrackedSection(section: SectionInput, layout: SteelLayout, modularRat
 }
 
 function crackedInertia(
-  b: number,
+  concrete: Overhang & { readonly widthMm: number },
   layout: SteelLayout,
   kd: number,
-  basis: DesignBasis,
-  modularRatio: number,
+  ratios: { readonly above: number; readonly below: number },
 ): number {
-  const above = ratioAbove(modularRatio, basis);
-  let inertia = (b * kd * kd * kd) / 3;
+  let inertia = compressedInertiaMm4(kd, concrete);
   layout.depths.forEach((depth, i) => {
-    inertia += (depth < kd ? above : modularRatio) * layout.areas[i]! * (depth - kd) ** 2;
+    inertia += (depth < kd ? ratios.above : ratios.below) * layout.areas[i]! * (depth - kd) ** 2;
   });
   return inertia;
 }

@@ -1,6 +1,7 @@
 import { barTotal, checksOf } from './checks.ts';
 import { ductilityOf, elasticSection } from './elastic.ts';
 import type { Evaluation, FlexureResult, Quantities } from './evaluation.ts';
+import { assertFlange, flangeOf } from './flange.ts';
 import { flexureAtUltimate } from './flexure.ts';
 import { onGrid, type Measures } from './measures.ts';
 import { NOT_CHECKED } from './not-checked.ts';
@@ -8,7 +9,7 @@ import { assertNotNegative, assertPositive, InvalidSectionError } from './precon
 import { quantitiesOf } from './quantities.ts';
 import { ruleSetOf } from './rules/rule-set-of.ts';
 import type { DesignBasis, Demand, Reinforcement, SectionInput, UserRules } from './section.ts';
-import { placeSteel, type SteelLayout } from './steel-layout.ts';
+import { placeSteel, type PlacedSteel, type SteelLayout } from './steel-layout.ts';
 import { ENGINE_VERSION } from './version.ts';
 import { workingOf } from './working.ts';
 
@@ -26,9 +27,17 @@ export interface EvaluationContext {
  */
 export function evaluateSection(section: SectionInput, context: EvaluationContext): Evaluation {
   assertSection(section);
+  return evaluatePlaced(section, context, placeSteel(section, context.basis, context.rules.maxLayers));
+}
+
+/** The same for steel that is placed already, as where a cage was set higher or lower than drawn. */
+export function evaluatePlaced(
+  section: SectionInput,
+  context: EvaluationContext,
+  placed: PlacedSteel,
+): Evaluation {
   const { basis, demand, rules } = context;
   const ruleSet = ruleSetOf(basis);
-  const placed = placeSteel(section, basis, rules.maxLayers);
   const { layout } = placed;
   const quantities = quantitiesOf(section, basis);
   const flexure = layout && flexureAtUltimate(section, layout, basis, ruleSet);
@@ -49,6 +58,7 @@ export function evaluateSection(section: SectionInput, context: EvaluationContex
       bendAllowance: basis.bendAllowance,
     },
     geometry: layout && geometryOf(section, layout),
+    flange: flangeOf(section, ruleSet),
     arrangement: placed.arrangement,
     flexure,
     elastic,
@@ -126,6 +136,8 @@ function assertSection(section: SectionInput): void {
         ['stirrup', 'legs'],
       );
   }
+  if (section.flange)
+    assertFlange(section.flange, { widestWebMm: section.widthMm, leastDepthMm: section.depthMm });
   assertReinforcement(section);
 }
 

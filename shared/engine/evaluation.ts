@@ -1,3 +1,4 @@
+import type { ResolvedFlange } from './flange.ts';
 import type { Measures } from './measures.ts';
 import type { BendAllowance, DisplacedConcrete, Face, RuleSetId, YieldCurvatureAt } from './section.ts';
 
@@ -222,6 +223,8 @@ export interface Evaluation {
     readonly rho: number;
     readonly rhoPrime: number;
   } | null;
+  /** The slab as it was counted; null for a rectangle, absent in results from before slabs were. */
+  readonly flange?: ResolvedFlange | null | undefined;
   /** Null for plain layers. */
   readonly arrangement: Arrangement | null;
   /** Null when the bars cannot be placed or there is no tension steel. */

@@ -1,6 +1,7 @@
 import type { ConcreteLaw } from './concrete-laws/concrete-law.ts';
 import type { CurveModel } from './curve-model.ts';
 import type { UltimateCause } from './curve-point.ts';
+import { compressedOverhang, flangeOf } from './flange.ts';
 import type { DisplacedConcrete, SectionInput } from './section.ts';
 import type { SteelLayout } from './steel-layout.ts';
 import { elasticPlastic, type SteelLaw } from './steel-laws.ts';
@@ -63,7 +64,7 @@ const BLOCK_STEPS = 100;
 const stripEdges = (depthMm: number, strips: number) =>
   Float64Array.from({ length: strips + 1 }, (_, i) => depthMm * (i / strips) ** 2);
 
-/** Cuts a model into strips; a strip that the core's edge crosses has a share of both. */
+/** Cuts a model into strips; a strip that the core's edge or the slab's soffit crosses has a share of both. */
 function fibreSection(model: CurveModel, strips = DEFAULT_STRIPS): FibreSection {
   const edges = stripEdges(model.depthMm, strips);
   const stripDepths = new Float64Array(strips);
@@ -74,7 +75,8 @@ function fibreSection(model: CurveModel, strips = DEFAULT_STRIPS): FibreSection 
     const inCore = Math.max(0, Math.min(bottom, model.coreBottomMm) - Math.max(top, model.coreTopMm));
     stripDepths[i] = (top + bottom) / 2;
     coreAreas[i] = model.core ? inCore * model.coreWidthMm : 0;
-    coverAreas[i] = (bottom - top) * model.widthMm - coreAreas[i]!;
+    const inSlab = Math.min(bottom, model.overhangBottomMm) - Math.max(top, model.overhangTopMm);
+    coverAreas[i] = (bottom - top) * model.widthMm - coreAreas[i]! + Math.max(0, inSlab) * model.overhangMm;
   }
   const core = model.core ?? model.cover;
   return {
@@ -272,9 +274,14 @@ export function fibreBlockState(of: BlockSection, strips = BLOCK_STRIPS): FibreS
   const edgeStrain = (1 - rules.blockDepthFactor(section.fcMPa)) * epsilonCu;
   const block: StressLaw = { stress: (strain) => (strain > edgeStrain ? blockMPa : 0) };
   const edges = stripEdges(section.depthMm, strips);
+  const slab = compressedOverhang(section.widthMm, flangeOf(section, rules));
   const cut: FibreSection = {
     stripDepths: edges.slice(1).map((bottom, i) => (edges[i]! + bottom) / 2),
-    coverAreas: edges.slice(1).map((bottom, i) => (bottom - edges[i]!) * section.widthMm),
+    coverAreas: edges.slice(1).map((bottom, i) => {
+      const top = edges[i]!;
+      const inSlab = Math.max(0, Math.min(bottom, slab.overhangDepthMm) - top);
+      return (bottom - top) * section.widthMm + inSlab * slab.overhangMm;
+    }),
     coreAreas: new Float64Array(strips),
     cover: block,
     core: block,

@@ -1,11 +1,13 @@
 import type { FlexureResult, LayerState } from './evaluation.ts';
+import { compressedOverhang, flangeOf } from './flange.ts';
 import { neutralAxisDepth } from './neutral-axis.ts';
 import type { RuleSet } from './rules/rule-set.ts';
 import type { DesignBasis, SectionInput } from './section.ts';
 import type { SteelLayout } from './steel-layout.ts';
 
 /**
- * Strength at ultimate of a section with placed steel: plane sections, rectangular block, elastic–perfectly plastic
+ * Strength at ultimate of a section with placed steel: plane sections, rectangular block (over a flange in compression as
+ * wide as that, below it as wide as the web), elastic–perfectly plastic
  * steel with each layer's own strain (ACI 318 22.2). Moments are taken about the compression face.
  */
 export function flexureAtUltimate(
@@ -21,9 +23,14 @@ export function flexureAtUltimate(
   const blockStressMPa = rules.blockStressMPa(fcMPa);
   const beta1 = rules.blockDepthFactor(fcMPa);
   const epsilonCu = rules.crushingStrain(fcMPa);
+  const { overhangMm, overhangDepthMm } = compressedOverhang(widthMm, flangeOf(section, rules));
   const blockForcePerMm = blockStressMPa * widthMm * beta1;
+  const overhangPerMm = blockStressMPa * overhangMm;
   const c = neutralAxisDepth(depths, areas, n, {
     blockForcePerMm,
+    flangeForcePerMm: blockForcePerMm + overhangPerMm * beta1,
+    overhangForceN: overhangPerMm * overhangDepthMm,
+    flangeReachMm: overhangDepthMm / beta1,
     blockStressMPa,
     blockDepthFactor: beta1,
     fyMPa,
@@ -33,8 +40,11 @@ export function flexureAtUltimate(
   });
   const a = beta1 * c;
   const deductionDepth = { deduct: a, 'deduct-above-axis': c, ignore: -1 }[basis.displacedConcrete];
-  const concreteForceN = blockForcePerMm * c;
-  let nominalMomentNmm = -concreteForceN * (a / 2);
+  const webForceN = blockForcePerMm * c;
+  const inFlangeMm = Math.min(a, overhangDepthMm);
+  const overhangForceN = overhangPerMm * inFlangeMm;
+  const concreteForceN = webForceN + overhangForceN;
+  let nominalMomentNmm = -webForceN * (a / 2) - overhangForceN * (inFlangeMm / 2);
   let steelForceN = 0;
   const layers: LayerState[] = [];
   for (let i = 0; i < n; i++) {

@@ -15,15 +15,32 @@ export const isAtLeastTimes = (value: number, factor: number, base: number) =>
 
 /**
  * Tension steel of a tension-controlled, singly reinforced section for moment Mu: As = σ b d/fy (1 − √(1 − 2 Mu/(φ σ b d²))),
- * σ the block's stress. Infinity where the section cannot carry it without compression steel. N·mm, mm, MPa → mm².
+ * σ the block's stress, b the flange's width while the block lies in it. Below it the overhang's steel σ (bf − b) hf/fy is
+ * apart and the web takes the rest of Mu. Infinity where the section cannot carry it without compression steel.
+ * N·mm, mm, MPa → mm².
  */
 export function requiredSteelMm2(
   muNmm: number,
   reduction: number,
-  section: { widthMm: number; dMm: number; blockStressMPa: number; fyMPa: number },
+  section: {
+    widthMm: number;
+    dMm: number;
+    blockStressMPa: number;
+    fyMPa: number;
+    overhangMm?: number;
+    overhangDepthMm?: number;
+  },
 ): number {
-  const { widthMm, dMm, blockStressMPa, fyMPa } = section;
-  const inner = 1 - (2 * muNmm) / (reduction * blockStressMPa * widthMm * dMm * dMm);
-  if (!(inner >= 0)) return Infinity;
-  return ((blockStressMPa * widthMm * dMm) / fyMPa) * (1 - Math.sqrt(inner));
+  const { widthMm, dMm, blockStressMPa, fyMPa, overhangMm = 0, overhangDepthMm = 0 } = section;
+  const of = (widthMm: number, momentNmm: number) => {
+    const inner = 1 - (2 * momentNmm) / (reduction * blockStressMPa * widthMm * dMm * dMm);
+    if (!(inner >= 0)) return Infinity;
+    return ((blockStressMPa * widthMm * dMm) / fyMPa) * (1 - Math.sqrt(inner));
+  };
+  if (overhangMm === 0) return of(widthMm, muNmm);
+  const flangeMm = widthMm + overhangMm;
+  const inFlange = of(flangeMm, muNmm);
+  if (inFlange * fyMPa <= blockStressMPa * flangeMm * overhangDepthMm) return inFlange;
+  const overhangN = blockStressMPa * overhangMm * overhangDepthMm;
+  return overhangN / fyMPa + of(widthMm, muNmm - reduction * overhangN * (dMm - overhangDepthMm / 2));
 }

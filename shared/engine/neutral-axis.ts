@@ -2,8 +2,14 @@ import type { DisplacedConcrete } from './section.ts';
 
 /** Constants of one concrete, one steel and one width at ultimate. */
 export interface UltimateConstants {
-  /** Block force per mm of neutral-axis depth: block stress × block depth factor × width, N/mm. */
+  /** Block force of the web per mm of neutral-axis depth: block stress × block depth factor × web width, N/mm. */
   blockForcePerMm: number;
+  /** The same with the flange's width, while the block lies in the flange. */
+  flangeForcePerMm: number;
+  /** Block force of a flange's overhang over its whole thickness, N; 0 without one in compression. */
+  overhangForceN: number;
+  /** Axis depth at which the block leaves the flange: thickness over block depth factor, mm. */
+  flangeReachMm: number;
   blockStressMPa: number;
   blockDepthFactor: number;
   fyMPa: number;
@@ -22,6 +28,9 @@ const MAX_STATE_CHANGES = 12;
  * unbalanced force rises steadily with c, so there is one root. Deducting displaced concrete makes it drop by σ A where
  * the block reaches a layer, so that two roots can lie side by side; the deeper axis is taken: bars are deducted whenever
  * there is an equilibrium with them inside the block, which gives the lower ductility.
+ *
+ * With a flange in compression the block has the flange's width to its thickness and the web's below: two such quadratics,
+ * the lower one with the overhang's whole force as a constant, of which the one whose root lies in its own part holds.
  *
  * Shared by `evaluateSection` and the sweep's hot loop. Returns NaN where no equilibrium exists (no steel in tension).
  */
@@ -43,7 +52,11 @@ export function neutralAxisDepth(
       }
     }
   }
-  return rootWithDeducted(depths, areas, n, k, deducted);
+  if (k.overhangForceN !== 0) {
+    const inFlange = rootWithDeducted(depths, areas, n, k, deducted, true);
+    if (inFlange <= k.flangeReachMm) return inFlange;
+  }
+  return rootWithDeducted(depths, areas, n, k, deducted, false);
 }
 
 /** Compression minus tension, N, with the axis at c and the first `deducted` layers displacing concrete. */
@@ -57,6 +70,8 @@ function unbalancedForce(
 ): number {
   const strainScale = (k.esMPa * k.epsilonCu) / c;
   let force = k.blockForcePerMm * c;
+  // the lesser of the two lines: they cross where the block leaves the flange
+  if (k.overhangForceN !== 0) force = Math.min(k.flangeForcePerMm * c, force + k.overhangForceN);
   for (let i = 0; i < n; i++) {
     const elastic = strainScale * (c - depths[i]!);
     const stress = elastic > k.fyMPa ? k.fyMPa : elastic < -k.fyMPa ? -k.fyMPa : elastic;
@@ -65,14 +80,16 @@ function unbalancedForce(
   return force;
 }
 
-/** The one root with a fixed set of deducted layers. */
+/** The one root with a fixed set of deducted layers, the block taken to lie in the flange or to reach below it. */
 function rootWithDeducted(
   depths: Float64Array,
   areas: Float64Array,
   n: number,
   k: UltimateConstants,
   deducted: number,
+  isInFlange: boolean,
 ): number {
+  const forcePerMm = isInFlange ? k.flangeForcePerMm : k.blockForcePerMm;
   const yieldRatio = k.fyMPa / (k.esMPa * k.epsilonCu);
   const elasticStress = k.esMPa * k.epsilonCu;
   let displaced = 0;
@@ -84,7 +101,7 @@ function rootWithDeducted(
   for (let change = 0; change < MAX_STATE_CHANGES; change++) {
     const tensionYieldDepth = (1 + yieldRatio) * c;
     const compressionYieldDepth = (1 - yieldRatio) * c;
-    let p = -displaced;
+    let p = (isInFlange ? 0 : k.overhangForceN) - displaced;
     let q = 0;
     let state = 0;
     for (let i = 0; i < n; i++) {
@@ -104,7 +121,7 @@ function rootWithDeducted(
     }
     if (state === lastState) return c;
     lastState = state;
-    c = positiveRoot(k.blockForcePerMm, p, q);
+    c = positiveRoot(forcePerMm, p, q);
   }
   return bracketedRoot(depths, areas, n, k, deducted);
 }

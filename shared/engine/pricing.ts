@@ -1,3 +1,4 @@
+import type { ResolvedFlange } from './flange.ts';
 import type { Rates } from './section.ts';
 
 /** Rates of one run and one mix with missing ones as NaN, so that a missing rate spreads to the total by itself. */
@@ -32,12 +33,24 @@ export function pricingFor(rates: Rates | null, fcMPa: number): Pricing {
   };
 }
 
-/** Formed surface per metre: soffit and two sides, less the slab's height on each side, m²/m. */
-export function formworkM2PerM(widthMm: number, depthMm: number, slabMm: number): number {
-  return (widthMm + 2 * Math.max(0, depthMm - slabMm)) / 1000;
+/** What is not formed of the two sides, mm: the slab's height, and whether one side is the edge of the slab and formed whole. */
+export interface UnformedSides {
+  readonly slabMm: number;
+  readonly hasEdge: boolean;
 }
 
-/** Gross concrete per metre, m³/m; the steel's volume is not taken off (common practice). */
+/** The slab of a section's own flange, or of the design basis (mm) for a rectangle. */
+export function unformedSides(flange: ResolvedFlange | null, basisSlabMm: number): UnformedSides {
+  return { slabMm: flange?.thicknessMm ?? basisSlabMm, hasEdge: flange?.shape === 'l' };
+}
+
+/** Formed surface per metre: soffit and two sides, less the slab's height on each, but for an edge, m²/m. */
+export function formworkM2PerM(widthMm: number, depthMm: number, slabMm: number, hasEdge = false): number {
+  const sidesMm = 2 * Math.max(0, depthMm - slabMm);
+  return (widthMm + sidesMm + (hasEdge ? Math.min(depthMm, slabMm) : 0)) / 1000;
+}
+
+/** Gross concrete of the web through the slab per metre, m³/m; the steel's volume is not taken off (common practice). */
 export function concreteM3PerM(widthMm: number, depthMm: number): number {
   return (widthMm * depthMm) / 1e6;
 }

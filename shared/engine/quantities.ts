@@ -1,6 +1,7 @@
 import { getBar } from './bars.ts';
 import type { Quantities, SteelLine } from './evaluation.ts';
-import { concreteM3PerM, formworkM2PerM, pricingFor, type Pricing } from './pricing.ts';
+import { flangeOf } from './flange.ts';
+import { concreteM3PerM, formworkM2PerM, pricingFor, unformedSides, type Pricing } from './pricing.ts';
 import { ruleSetOf } from './rules/rule-set-of.ts';
 import type { BarGroup, DesignBasis, SectionInput } from './section.ts';
 import { stirrupKgPerM, stirrupSetLengthMm, stirrupShape } from './stirrup-length.ts';
@@ -26,7 +27,8 @@ export function quantitiesOf(section: SectionInput, basis: DesignBasis): Quantit
   const netSteelKgPerM = longitudinalKg + stirrupKg;
   const wasteKgPerM = (netSteelKgPerM + lapsKgPerM) * pricing.wasteShare;
   const concrete = concreteM3PerM(section.widthMm, section.depthMm);
-  const formwork = formworkM2PerM(section.widthMm, section.depthMm, basis.slabMm);
+  const { slabMm, hasEdge } = unformedSides(flangeOf(section, ruleSetOf(basis)), basis.slabMm);
+  const formwork = formworkM2PerM(section.widthMm, section.depthMm, slabMm, hasEdge);
   const totalSteelKgPerM = netSteelKgPerM + lapsKgPerM + wasteKgPerM;
   const co2e = totalSteelKgPerM * pricing.steelCo2ePerKg + concrete * pricing.concreteCo2ePerM3;
   return {

@@ -6,7 +6,7 @@ import type { CurveModel } from './curve-model.ts';
  * Plane sections: ε(y) = εtop − φ y. A strip of width b between two strains carries b/φ (F(ε₁) − F(ε₂)) and has the moment
  * b/φ² (G(ε₁) − G(ε₂)) about the neutral axis, F and G being the law's running integrals; the core counts as its own law
  * less that of the cover over its width. Concrete displaced by bars in compression is taken off with the stress of its own
- * law at the bar.
+ * law at the bar. A slab's overhang is one more strip of its own depth, of the cover's law.
  */
 
 /** Forces of a state, written by `balance`. */
@@ -34,6 +34,7 @@ function balance(model: CurveModel, curvature: number, topStrain: number, out: B
         force -= model.coreWidthMm * (core.forceIntegral(atBottom) - cover.forceIntegral(atBottom));
     }
   }
+  if (model.overhangMm !== 0) force += model.overhangMm * overhangForce(model, curvature, topStrain);
   force /= curvature;
   out.concreteN = force;
   for (let i = 0; i < depths.length; i++) {
@@ -43,6 +44,32 @@ function balance(model: CurveModel, curvature: number, topStrain: number, out: B
     force += areas[i]! * stress;
   }
   out.forceN = force;
+}
+
+/** Running force integral between the edges of a slab's overhang, MPa. */
+function overhangForce(model: CurveModel, curvature: number, topStrain: number): number {
+  const atTop = topStrain - curvature * model.overhangTopMm;
+  if (atTop <= 0) return 0;
+  const atBottom = topStrain - curvature * model.overhangBottomMm;
+  const force = model.cover.forceIntegral(atTop);
+  return atBottom > 0 ? force - model.cover.forceIntegral(atBottom) : force;
+}
+
+/** Running moment integral between the edges of a slab's overhang, MPa. */
+function overhangMoment(model: CurveModel, curvature: number, topStrain: number): number {
+  const atTop = topStrain - curvature * model.overhangTopMm;
+  if (atTop <= 0) return 0;
+  const atBottom = topStrain - curvature * model.overhangBottomMm;
+  const moment = model.cover.momentIntegral(atTop);
+  return atBottom > 0 ? moment - model.cover.momentIntegral(atBottom) : moment;
+}
+
+/** ∫ lever^power of a slab's overhang below the axis, mm^(power + 2), for its tension before cracking. */
+function stretchedOverhang(model: CurveModel, axisMm: number, power: 1 | 2): number {
+  if (model.overhangMm === 0) return 0;
+  const far = Math.max(0, model.overhangBottomMm - axisMm);
+  const near = Math.max(0, model.overhangTopMm - axisMm);
+  return (model.overhangMm * (far ** (power + 1) - near ** (power + 1))) / (power + 1);
 }
 
 /**
@@ -55,6 +82,11 @@ function stiffnessN(model: CurveModel, curvature: number, topStrain: number): nu
   if (core) {
     const atTop = topStrain - curvature * model.coreTopMm;
     stiffness += model.coreWidthMm * (core.nearStress(atTop) - cover.nearStress(atTop));
+  }
+  if (model.overhangMm !== 0 && model.overhangTopMm === 0) {
+    const atBottom = topStrain - curvature * model.overhangBottomMm;
+    stiffness +=
+      model.overhangMm * (cover.nearStress(topStrain) - (atBottom > 0 ? cover.nearStress(atBottom) : 0));
   }
   stiffness /= curvature;
   for (let i = 0; i < depths.length; i++)
@@ -74,7 +106,8 @@ function tensionForce(model: CurveModel, curvature: number, topStrain: number): 
   const stretch = curvature * model.depthMm - topStrain;
   if (stretch <= 0) return 0;
   return (
-    (model.widthMm * model.tension.ecMPa * stretch * stretch) / (2 * curvature) -
+    (model.widthMm * model.tension.ecMPa * stretch * stretch) / (2 * curvature) +
+    model.tension.ecMPa * curvature * stretchedOverhang(model, topStrain / curvature, 1) -
     displacedTension(model, curvature, topStrain, 0)
   );
 }
@@ -128,6 +161,7 @@ export function momentNmm(
         core.momentIntegral(atBottom) +
         cover.momentIntegral(atBottom));
   }
+  if (model.overhangMm !== 0) moment += model.overhangMm * overhangMoment(model, curvature, topStrain);
   moment /= curvature * curvature;
   for (let i = 0; i < depths.length; i++) {
     const strain = topStrain - curvature * depths[i]!;
@@ -139,7 +173,8 @@ export function momentNmm(
   const stretch = Math.max(0, curvature * model.depthMm - topStrain);
   return (
     moment +
-    (model.widthMm * model.tension.ecMPa * stretch ** 3) / (3 * curvature * curvature) -
+    (model.widthMm * model.tension.ecMPa * stretch ** 3) / (3 * curvature * curvature) +
+    model.tension.ecMPa * curvature * stretchedOverhang(model, topStrain / curvature, 2) -
     displacedTension(model, curvature, topStrain, 1)
   );
 }

@@ -67,7 +67,14 @@ export type FlangeShape = (typeof FLANGE_SHAPES)[number];
 /** What the effective width of a flange follows from, or the width as the engineer gives it. Lengths mm. */
 export type FlangeWidth =
   | { readonly kind: 'given'; readonly widthMm: number }
-  | { readonly kind: 'effective'; readonly clearToNextWebMm: number; readonly spanMm: number };
+  | {
+      readonly kind: 'effective';
+      readonly clearToNextWebMm: number;
+      /** Clear span ln, or the span l₀ is taken from. */
+      readonly spanMm: number;
+      /** Needed where the code takes the distance between points of no moment; simple unless set. */
+      readonly support?: Support | undefined;
+    };
 
 /** The slab that works with the web. */
 export interface Flange {

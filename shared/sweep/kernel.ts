@@ -1,48 +1,29 @@
 import { crackedAxisDepth } from '../engine/cracked-section.ts';
-import { barCoverMm } from '../engine/checks-detailing.ts';
-import {
-  isAtLeastTimes,
-  isAtMostTimes,
-  isSameLength,
-  isWithinLength,
-  requiredSteelMm2,
-} from '../engine/limits.ts';
-import { MEASURE_IDS, onGrid } from '../engine/measures.ts';
+import type { ResolvedFlange } from '../engine/flange.ts';
+import { isAtLeastTimes, isAtMostTimes, isWithinLength, requiredSteelMm2 } from '../engine/limits.ts';
+import { MEASURE_IDS } from '../engine/measures.ts';
 import { neutralAxisDepth } from '../engine/neutral-axis.ts';
-import { concreteM3PerM, formworkM2PerM } from '../engine/pricing.ts';
-import { concreteShearN, designShearN, stirrupSpacingLimitMm, type ShearConstants } from '../engine/shear.ts';
-import { stirrupKgPerM } from '../engine/stirrup-length.ts';
-import type { FaceEntry } from './face-table.ts';
+import { concreteShearN, designShearN, stirrupSpacingLimitMm } from '../engine/shear.ts';
+import type { Combination } from './combination.ts';
+import { rowAmounts, writeAmounts } from './kernel-amounts.ts';
+import { detailingOf, fixedMask } from './kernel-detailing.ts';
 import {
   BAR_FIT,
-  HANGER_BARS,
   STRENGTH,
   DUCTILITY,
   TENSION_STRAIN,
   LEAST_STEEL,
   DEPTH_TO_WIDTH,
   DEPTH_CAP,
-  COLUMN_WIDTH,
-  COMPRESSION_SHARE,
-  BAR_RULES,
-  CRACK_CONTROL,
   COMPRESSION_TIES,
   SHEAR,
   STIRRUP_SPACING,
   LEAST_DEPTH,
   AXIS_DEPTH,
   MOST_STEEL,
-  STEEL,
-  COST,
-  CO2E,
-  DEPTH,
-  WIDTH,
-  CONCRETE,
-  FORMWORK,
   MU_PHI,
   DESIGN_STRENGTH,
   UTILISATION,
-  BAR_COUNT,
 } from './kernel-places.ts';
 import {
   isAboveTension,
@@ -50,7 +31,6 @@ import {
   leastDepthMm,
   offsetOf,
   type ConcreteConstants,
-  type Placement,
   type PreparedSweep,
 } from './prepared-sweep.ts';
 import type { Tally } from './tally.ts';
@@ -74,23 +54,19 @@ interface Row {
   readonly to: number;
 }
 
-/** One combination of everything but the depth. */
-interface Combination {
-  readonly placement: Placement;
-  readonly tension: FaceEntry;
-  readonly compression: FaceEntry;
-  readonly concrete: ConcreteConstants;
-  readonly shear: ShearConstants;
-  readonly fyMPa: number;
-}
-
 /** The hot loop over one row of depths, with what it reuses from row to row. */
 export class Kernel {
   private readonly depths = new Float64Array(MAX_LAYERS);
   private readonly areas = new Float64Array(MAX_LAYERS);
   private readonly measures = new Float64Array(MEASURE_IDS.length);
   private readonly ultimate;
-  private readonly cracked = { widthMm: 0, modularRatio: 0, ratioAbove: 0 };
+  private readonly cracked = {
+    widthMm: 0,
+    modularRatio: 0,
+    ratioAbove: 0,
+    overhangMm: 0,
+    overhangDepthMm: 0,
+  };
   private readonly leastSteelSection = { fcMPa: 0, fyMPa: 0, widthMm: 0, dMm: 1 };
 
   private readonly prepared: PreparedSweep;
@@ -104,6 +80,9 @@ export class Kernel {
     const { basis } = prepared.problem;
     this.ultimate = {
       blockForcePerMm: 0,
+      flangeForcePerMm: 0,
+      overhangForceN: 0,
+      flangeReachMm: 0,
       blockStressMPa: 0,
       blockDepthFactor: 0,
       fyMPa: 0,
@@ -111,29 +90,6 @@ export class Kernel {
       epsilonCu: 0,
       displacedConcrete: basis.displacedConcrete,
     };
-  }
-
-  /** The checks that look neither at the depth nor at the numbers. */
-  private fixedMask({ placement, tension, compression }: Combination): number {
-    const { rules } = this.prepared.problem;
-    let mask = 0;
-    const hasBars = tension.barCount === tension.barCount;
-    if (
-      rules.requireHangers &&
-      placement.stirrup &&
-      hasBars &&
-      !(Math.min(tension.barCount, compression.barCount) >= placement.stirrup.legs)
-    )
-      mask |= HANGER_BARS;
-    if (rules.columnWidthMm !== null && !isSameLength(placement.widthMm, rules.columnWidthMm))
-      mask |= COLUMN_WIDTH;
-    if (
-      rules.minCompressionShare !== null &&
-      !isAtLeastTimes(compression.givenAreaMm2, rules.minCompressionShare, tension.givenAreaMm2)
-    )
-      mask |= COMPRESSION_SHARE;
-    if (tension.breaksBarRules || compression.breaksBarRules) mask |= BAR_RULES;
-    return mask;
   }
 
   /**
@@ -153,7 +109,7 @@ export class Kernel {
     const target = demand.ductilityTarget;
     const capMm = demand.depthCapMm;
     const { minDepthToWidth, maxDepthToWidth } = rules;
-    const fixedMask = this.fixedMask(combination);
+    const hoistedMask = fixedMask(combination, rules);
     const isPlainSteel = isPlain(tension);
     const leastMm = leastDepthMm(placement, tension, compression);
 
@@ -168,12 +124,19 @@ export class Kernel {
     const faceSteelShare = ruleSet.largestFaceSteelShare;
     const largestFaceSteelMm2 = Math.max(tension.areaMm2, compression.areaMm2);
     const blockForcePerMm = blockStressMPa * widthMm * blockDepthFactor;
+    const { overhangMm, overhangDepthMm } = placement.overhang;
+    const overhangPerMm = blockStressMPa * overhangMm;
     ultimate.blockForcePerMm = blockForcePerMm;
+    ultimate.flangeForcePerMm = blockForcePerMm + overhangPerMm * blockDepthFactor;
+    ultimate.overhangForceN = overhangPerMm * overhangDepthMm;
+    ultimate.flangeReachMm = overhangDepthMm / blockDepthFactor;
     ultimate.blockStressMPa = blockStressMPa;
     ultimate.blockDepthFactor = blockDepthFactor;
     ultimate.fyMPa = yieldMPa;
     ultimate.epsilonCu = epsilonCu;
     cracked.widthMm = widthMm;
+    cracked.overhangMm = overhangMm;
+    cracked.overhangDepthMm = overhangDepthMm;
     cracked.modularRatio = concrete.modularRatio;
     cracked.ratioAbove = concrete.ratioAbove;
     const deductionReach =
@@ -182,10 +145,15 @@ export class Kernel {
     const leastSteelSection = this.leastSteelSection;
     leastSteelSection.fcMPa = concrete.fcMPa;
     leastSteelSection.fyMPa = fyMPa;
+    const tensionFlange = placement.flange?.face === 'tension' ? placement.flange : null;
     leastSteelSection.widthMm = widthMm;
-    const leastSteelPerMm = ruleSet.leastSteelMm2(leastSteelSection);
+    let leastSteelPerMm = ruleSet.leastSteelMm2(leastSteelSection);
     const asMm2 = tension.areaMm2;
-    const { placedMask, tieSpacingMm, leastDepthMm: leastForDeflection } = this.detailing(combination);
+    const {
+      placedMask,
+      tieSpacingMm,
+      leastDepthMm: leastForDeflection,
+    } = detailingOf(combination, problem.demand, ruleSet);
     const vuN = demand.vuN ?? null;
     const shear = vuN === null ? null : combination.shear;
 
@@ -197,18 +165,12 @@ export class Kernel {
     }
     for (let i = 0; i < tension.layerCount; i++) areas[n - 1 - i] = tension.areas[i]!;
 
-    const { stirrup } = placement;
-    const { pricing } = concrete;
-    const longitudinalKg = tension.kgPerM + compression.kgPerM;
-    const lapsKg = longitudinalKg * pricing.lapShare;
-    const withWaste = 1 + pricing.wasteShare;
-    const longitudinalCost = longitudinalKg * (1 + pricing.lapShare) * withWaste * pricing.longitudinalPerKg;
-    const barCount = tension.barCount + compression.barCount;
+    const amounts = rowAmounts(combination);
 
     let feasibleInRow = 0;
     for (let j = row.from; j < row.to; j++) {
       const h = depthsMm[j]!;
-      let mask = fixedMask;
+      let mask = hoistedMask;
       if (
         (minDepthToWidth !== null && !isAtLeastTimes(h, minDepthToWidth, widthMm)) ||
         (maxDepthToWidth !== null && !isAtMostTimes(h, maxDepthToWidth, widthMm))
@@ -235,7 +197,8 @@ export class Kernel {
       const c = neutralAxisDepth(depths, areas, n, ultimate);
       const a = blockDepthFactor * c;
       const deductionDepth = deductionReach * c;
-      let nominal = -(blockForcePerMm * c) * (a / 2);
+      const inFlange = Math.min(a, overhangDepthMm);
+      let nominal = -(blockForcePerMm * c) * (a / 2) - overhangPerMm * inFlange * (inFlange / 2);
       for (let i = 0; i < n; i++) {
         const depth = depths[i]!;
         const elastic = esMPa * ((epsilonCu * (depth - c)) / c);
@@ -254,6 +217,7 @@ export class Kernel {
       if (!(c <= largestAxisShare * d)) mask |= AXIS_DEPTH;
       if (faceSteelShare !== null && !(largestFaceSteelMm2 <= faceSteelShare * widthMm * h))
         mask |= MOST_STEEL;
+      if (tensionFlange) leastSteelPerMm = this.leastSteelPerMm(tensionFlange, h);
       if (!(asMm2 >= leastSteelPerMm * d) && !this.isLeastSteelWaived(asMm2, d, concrete, fyMPa))
         mask |= LEAST_STEEL;
       mask |= placedMask;
@@ -266,28 +230,10 @@ export class Kernel {
       tally.countMask(mask);
 
       if (mask !== 0 && (mask & (mask - 1)) !== 0 && recorder === null) continue;
-      const stirrupKg = stirrup ? stirrupKgPerM(stirrup, widthMm, h) : 0;
-      const netSteel = longitudinalKg + stirrupKg;
-      const totalSteel = netSteel + lapsKg + (netSteel + lapsKg) * pricing.wasteShare;
-      const concreteM3 = concreteM3PerM(widthMm, h);
-      const formworkM2 = formworkM2PerM(widthMm, h, basis.slabMm);
-      const stirrupCost = stirrupKg === 0 ? 0 : stirrupKg * withWaste * pricing.stirrupPerKg;
-      measures[STEEL] = onGrid(netSteel);
-      measures[COST] = onGrid(
-        longitudinalCost +
-          stirrupCost +
-          concreteM3 * pricing.concretePerM3 +
-          formworkM2 * pricing.formworkPerM2,
-      );
-      measures[CO2E] = onGrid(totalSteel * pricing.steelCo2ePerKg + concreteM3 * pricing.concreteCo2ePerM3);
-      measures[DEPTH] = h;
-      measures[WIDTH] = widthMm;
-      measures[CONCRETE] = onGrid(concreteM3);
-      measures[FORMWORK] = onGrid(formworkM2);
+      writeAmounts(amounts, h, measures);
       measures[MU_PHI] = muPhi;
       measures[DESIGN_STRENGTH] = design;
       measures[UTILISATION] = muNmm === null ? NaN : muNmm / design;
-      measures[BAR_COUNT] = barCount;
       if (mask === 0) {
         feasibleInRow++;
         depthFeasible[j]!++;
@@ -303,35 +249,13 @@ export class Kernel {
     return feasibleInRow;
   }
 
-  /** What detailing asks of a combination: a mask for placed bars, and the least depth for ties (their spacing) and deflection. */
-  private detailing({ placement, tension, compression, fyMPa }: Combination) {
+  /** Least steel over d where a flange is in tension, by the width that counts at depth h, mm. */
+  private leastSteelPerMm(flange: ResolvedFlange, depthMm: number): number {
     const { problem, ruleSet } = this.prepared;
-    const { coverMm, stirrupBar, given } = placement;
-    let placedMask = 0;
-    if (tension.largestSpacingMm === tension.largestSpacingMm) {
-      const limitMm = ruleSet.crackSpacingMm(fyMPa, barCoverMm(coverMm, stirrupBar));
-      if (!isWithinLength(tension.largestSpacingMm, limitMm)) placedMask |= CRACK_CONTROL;
-    }
-    // A spacing beyond any depth fails at every depth; none is asked without compression bars.
-    let tieSpacingMm = -Infinity;
-    if (compression.largestBarMm === compression.largestBarMm) {
-      const isTied =
-        given !== null &&
-        stirrupBar !== null &&
-        isWithinLength(ruleSet.leastTieDiameterMm(compression.largestBarMm), stirrupBar.diameterMm) &&
-        isWithinLength(
-          given.spacingMm,
-          Math.min(
-            ruleSet.tieSpacingMm(compression.leastBarMm, stirrupBar.diameterMm),
-            ruleSet.isTieSpacingWithinLeastSide ? placement.widthMm : Infinity,
-          ),
-        );
-      if (!isTied) tieSpacingMm = Infinity;
-      else if (ruleSet.isTieSpacingWithinLeastSide) tieSpacingMm = given.spacingMm;
-    }
-    const { spanMm, support } = problem.demand;
-    const leastDepthMm = spanMm && support ? ruleSet.leastDepthMm(spanMm, support, fyMPa) : -Infinity;
-    return { placedMask, tieSpacingMm, leastDepthMm };
+    const { widthMm } = this.cracked;
+    const support = problem.demand.support ?? null;
+    this.leastSteelSection.widthMm = ruleSet.leastSteelWidthMm({ widthMm, depthMm, flange, support });
+    return ruleSet.leastSteelMm2(this.leastSteelSection);
   }
 
   /** As at least 4/3 of the steel Mu requires; asked only where As,min is not met, so it need not be fast. */
@@ -345,13 +269,15 @@ export class Kernel {
     const { muNmm } = problem.demand;
     const waiver = ruleSet.leastSteelWaiver;
     if (muNmm === null || waiver === null) return false;
-    const { widthMm } = this.cracked;
+    const { widthMm, overhangMm, overhangDepthMm } = this.cracked;
     const { blockStressMPa } = concrete;
     const required = requiredSteelMm2(muNmm, ruleSet.tensionControlledReduction, {
       widthMm,
       dMm,
       blockStressMPa,
       fyMPa,
+      overhangMm,
+      overhangDepthMm,
     });
     return required < Infinity && asMm2 >= waiver * required;
   }

@@ -1,7 +1,8 @@
 import { depthNeededMm, leastForStirrupMm, type ArrangementContext } from '../engine/arrangement.ts';
 import { getBar, type Bar } from '../engine/bars.ts';
+import { compressedOverhang, flangeOf, type Overhang, type ResolvedFlange } from '../engine/flange.ts';
 import { isWithinLength } from '../engine/limits.ts';
-import { pricingFor, type Pricing } from '../engine/pricing.ts';
+import { pricingFor, unformedSides, type Pricing, type UnformedSides } from '../engine/pricing.ts';
 import type { RuleSet } from '../engine/rules/rule-set.ts';
 import { ruleSetOf } from '../engine/rules/rule-set-of.ts';
 import type { Stirrup } from '../engine/section.ts';
@@ -27,6 +28,9 @@ export interface Placement {
   readonly widthMm: number;
   readonly coverMm: number;
   readonly given: Stirrup | null;
+  readonly flange: ResolvedFlange | null;
+  readonly overhang: Overhang;
+  readonly unformed: UnformedSides;
   readonly stirrupBar: Bar | null;
   readonly stirrup: StirrupShape | null;
   /** Least width and depth the stirrup can be bent in, mm. */
@@ -93,9 +97,13 @@ export function placementAt(prepared: PreparedSweep, combination: number): Place
     bendAllowance: basis.bendAllowance,
     maxLayers: rules.maxLayers,
   };
+  const flange = flangeOf({ widthMm, flange: space.flange }, ruleSet);
   const placement = {
     widthMm,
     coverMm,
+    flange,
+    overhang: compressedOverhang(widthMm, flange),
+    unformed: unformedSides(flange, basis.slabMm),
     given: stirrup,
     stirrupBar,
     stirrup: stirrup && stirrupBar && stirrupShape(stirrupBar, stirrup, coverMm, ruleSet),

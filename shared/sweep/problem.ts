@@ -1,5 +1,5 @@
 import type { MeasureId } from '../engine/measures.ts';
-import type { BarGroup, DesignBasis, Demand, Stirrup, UserRules } from '../engine/section.ts';
+import type { BarGroup, DesignBasis, Demand, Flange, Stirrup, UserRules } from '../engine/section.ts';
 
 /** A range typed by a person: from, from + step, … up to and including `to` (within 1e-6 of a step). */
 export interface StepRange {
@@ -43,6 +43,8 @@ export interface SpaceDefinition {
   readonly stirrups: readonly (Stirrup | null)[];
   readonly tension: SteelSetsDefinition;
   readonly compression: SteelSetsDefinition;
+  /** One slab for the whole space. */
+  readonly flange?: Flange | null | undefined;
 }
 
 /** One choice of steel on one face, expanded. */
@@ -67,6 +69,7 @@ export interface Space {
   readonly fyMPa: readonly number[];
   readonly fcMPa: readonly number[];
   readonly depthsMm: readonly number[];
+  readonly flange: Flange | null;
   /** Product of the axis lengths. */
   readonly size: number;
 }

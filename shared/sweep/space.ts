@@ -1,4 +1,5 @@
 import { findBar } from '../engine/bars.ts';
+import { assertFlange } from '../engine/flange.ts';
 import { InvalidSectionError } from '../engine/preconditions.ts';
 import type { BarStandard, Layer, Reinforcement, SectionInput } from '../engine/section.ts';
 import { axisLength, expandAxis } from './axis.ts';
@@ -57,6 +58,7 @@ export function expandSpace(definition: SpaceDefinition, standard: BarStandard):
     fyMPa: axis('fy'),
     fcMPa: axis('fc'),
     depthsMm: axis('depth'),
+    flange: definition.flange ?? null,
     size: spaceSize(definition),
   };
   definition.stirrups.forEach((stirrup, i) => {
@@ -67,6 +69,11 @@ export function expandSpace(definition: SpaceDefinition, standard: BarStandard):
         'bar',
       ]);
   });
+  if (space.flange)
+    assertFlange(space.flange, {
+      widestWebMm: Math.max(...space.widthsMm),
+      leastDepthMm: Math.min(...space.depthsMm),
+    });
   assertAreasInside(definition, Math.min(...space.widthsMm), Math.min(...space.depthsMm));
   if (
     space.tension.some((set) => set.kind === 'area') &&
@@ -170,6 +177,7 @@ export function sectionAt(space: Space, index: number): SectionInput {
     coverMm,
     stirrup,
     reinforcement: steelOf(tension, compression, depthMm),
+    ...(space.flange && { flange: space.flange }),
   };
 }
 

@@ -24,7 +24,7 @@ function elasticOf(printed: Parameters<typeof metricSection>[0], rules: RuleSet)
 function cracked(layers: readonly (readonly [depth: number, area: number])[], b: number, n: number) {
   const depths = Float64Array.from(layers, ([depth]) => depth);
   const areas = Float64Array.from(layers, ([, area]) => area);
-  const section = { widthMm: b, modularRatio: n, ratioAbove: n - 1 };
+  const section = { widthMm: b, modularRatio: n, ratioAbove: n - 1, overhangMm: 0, overhangDepthMm: 0 };
   const kd = crackedAxisDepth(depths, areas, layers.length, section);
   const inertia = layers.reduce(
     (sum, [depth, area]) => sum + (depth < kd ? n - 1 : n) * area * (depth - kd) ** 2,

@@ -31,7 +31,7 @@ interface Coefficients {
   readonly gapMm: number;
   readonly hookTailLeastMm: number;
   readonly largestTightBendMm: number;
-  readonly formulas: Omit<Formulas, 'strengthReduction' | 'tieSpacing'>;
+  readonly formulas: Omit<Formulas, 'strengthReduction' | 'tieSpacing' | 'effectiveFlange'>;
   /** 24.3.2: s ≤ first/fs − 2.5 cc and second/fs; MPa·mm. */
   readonly crackSpacing: readonly [number, number];
   /** Table 9.3.1.1 is for Grade 60 (420): factor 0.4 + fy/base. */
@@ -162,6 +162,7 @@ const clausesOf = (book: string): Clauses => ({
   axisDepth: `${book} 9.3.3.1`,
   mostSteel: `${book} 9.3.3.1`,
   skinSteel: `${book} 9.7.2.3`,
+  flangeWidth: `${book} Table 6.3.2.1`,
 });
 
 interface Edition {
@@ -201,6 +202,15 @@ export function aci318({ id, year, isMetric }: Edition): RuleSet & { readonly sh
     largestAxisShare: () => null,
     largestFaceSteelShare: null,
     leastSteelMm2: ({ fcMPa, fyMPa, widthMm, dMm }) => leastSteelShare(fcMPa, fyMPa) * widthMm * dMm,
+    leastSteelWidthMm: ({ widthMm, flange, support }) =>
+      // 9.6.1.2 (b): statically determinate, flange in tension
+      flange?.face === 'tension' && support === 'cantilever'
+        ? Math.min(flange.widthMm, 2 * widthMm)
+        : widthMm,
+    effectiveFlangeMm: ({ shape, webMm, thicknessMm, clearToNextWebMm, spanMm }) =>
+      shape === 't'
+        ? webMm + 2 * Math.min(8 * thicknessMm, clearToNextWebMm / 2, spanMm / 8)
+        : webMm + Math.min(6 * thicknessMm, clearToNextWebMm / 2, spanMm / 12),
     leastSteelWaiver: 4 / 3,
     tensionControlledReduction: TENSION_CONTROLLED,
     barGapMm: (diameterMm, aggregateMm) => Math.max(c.gapMm, diameterMm, (4 / 3) * aggregateMm),
@@ -230,6 +240,8 @@ export function aci318({ id, year, isMetric }: Edition): RuleSet & { readonly sh
     clauses: clausesOf(book),
     formulas: {
       ...c.formulas,
+      effectiveFlange: ({ shape }) =>
+        shape === 't' ? 'b + 2 min(8 hf, sw/2, ln/8)' : 'b + min(6 hf, sw/2, ln/12)',
       tieSpacing: 'stirrup spacing within 16 bar and 48 stirrup diameters and the least side',
       strengthReduction:
         year === '19'

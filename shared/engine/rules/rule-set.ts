@@ -1,4 +1,5 @@
 import type { ConcreteLawId } from '../curve-choices.ts';
+import type { FlangeSetting, ResolvedFlange } from '../flange.ts';
 import type { RuleSetId, Support } from '../section.ts';
 import type { SeismicSystems } from './seismic-rules.ts';
 import type { ShearRules } from './shear-rules.ts';
@@ -22,6 +23,7 @@ export interface Clauses {
   readonly axisDepth: string;
   readonly mostSteel: string;
   readonly skinSteel: string;
+  readonly flangeWidth: string;
 }
 
 /** The rule as its book prints it, in the book's units, for the working shown beside a result. */
@@ -34,6 +36,8 @@ export interface Formulas {
   readonly crackSpacing: string;
   readonly tieSpacing: string;
   leastDepth(support: Support): string;
+  /** Effective width bf from the web's b, hf, sw (clear to the next web) and ln (clear span). */
+  effectiveFlange(of: Pick<FlangeSetting, 'shape' | 'face' | 'support'>): string;
 }
 
 /**
@@ -65,6 +69,15 @@ export interface RuleSet {
    * calls it with d = 1.
    */
   leastSteelMm2(section: { fcMPa: number; fyMPa: number; widthMm: number; dMm: number }): number;
+  /** Width `leastSteelMm2` counts on, mm: that of the web, unless a flange at the tension face asks for more. */
+  leastSteelWidthMm(of: {
+    readonly widthMm: number;
+    readonly depthMm: number;
+    readonly flange: ResolvedFlange | null;
+    readonly support: Support | null;
+  }): number;
+  /** Effective width of a flange in all, the web in it, mm. */
+  effectiveFlangeMm(of: FlangeSetting): number;
   /** Provided over required steel at which the least steel is waived; null where it never is. */
   readonly leastSteelWaiver: number | null;
   /** Largest steel of one face over the gross section; null where strain limits it. */

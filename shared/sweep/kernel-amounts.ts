@@ -1,0 +1,57 @@
+import { onGrid } from '../engine/measures.ts';
+import { concreteM3PerM, formworkM2PerM, type Pricing } from '../engine/pricing.ts';
+import { stirrupKgPerM } from '../engine/stirrup-length.ts';
+import type { Combination } from './combination.ts';
+import { BAR_COUNT, CO2E, CONCRETE, COST, DEPTH, FORMWORK, STEEL, WIDTH } from './kernel-places.ts';
+import type { Placement } from './prepared-sweep.ts';
+
+/** What the amounts of one combination are at every depth. kg/m, money per m. */
+export interface RowAmounts {
+  readonly placement: Placement;
+  readonly pricing: Pricing;
+  readonly longitudinalKg: number;
+  readonly lapsKg: number;
+  readonly withWaste: number;
+  readonly longitudinalCost: number;
+  readonly barCount: number;
+}
+
+export function rowAmounts({ placement, tension, compression, concrete }: Combination): RowAmounts {
+  const { pricing } = concrete;
+  const longitudinalKg = tension.kgPerM + compression.kgPerM;
+  const withWaste = 1 + pricing.wasteShare;
+  return {
+    placement,
+    pricing,
+    longitudinalKg,
+    lapsKg: longitudinalKg * pricing.lapShare,
+    withWaste,
+    longitudinalCost: longitudinalKg * (1 + pricing.lapShare) * withWaste * pricing.longitudinalPerKg,
+    barCount: tension.barCount + compression.barCount,
+  };
+}
+
+/** Weight, cost, carbon, sizes and bars of the section at depth h (mm), in their places in a row of measures. */
+export function writeAmounts(row: RowAmounts, h: number, measures: Float64Array): void {
+  const { placement, pricing, longitudinalKg, lapsKg } = row;
+  const { stirrup, widthMm, unformed } = placement;
+  const stirrupKg = stirrup ? stirrupKgPerM(stirrup, widthMm, h) : 0;
+  const netSteel = longitudinalKg + stirrupKg;
+  const totalSteel = netSteel + lapsKg + (netSteel + lapsKg) * pricing.wasteShare;
+  const concreteM3 = concreteM3PerM(widthMm, h);
+  const formworkM2 = formworkM2PerM(widthMm, h, unformed.slabMm, unformed.hasEdge);
+  const stirrupCost = stirrupKg === 0 ? 0 : stirrupKg * row.withWaste * pricing.stirrupPerKg;
+  measures[STEEL] = onGrid(netSteel);
+  measures[COST] = onGrid(
+    row.longitudinalCost +
+      stirrupCost +
+      concreteM3 * pricing.concretePerM3 +
+      formworkM2 * pricing.formworkPerM2,
+  );
+  measures[CO2E] = onGrid(totalSteel * pricing.steelCo2ePerKg + concreteM3 * pricing.concreteCo2ePerM3);
+  measures[DEPTH] = h;
+  measures[WIDTH] = widthMm;
+  measures[CONCRETE] = onGrid(concreteM3);
+  measures[FORMWORK] = onGrid(formworkM2);
+  measures[BAR_COUNT] = row.barCount;
+}
