@@ -1,12 +1,9 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import { outlinePath } from '#shared/drawing/concrete-outline.ts';
 import { hookPath } from '#shared/drawing/hook-path.ts';
-import {
-  AXIS_DASH_PX,
-  LABEL_SIZE_PX,
-  largePlan,
-  type Label,
-  type Placement,
-} from '#shared/drawing/large-plan.ts';
+import { AXIS_DASH_PX, LABEL_SIZE_PX, largePlan } from '#shared/drawing/large-plan.ts';
+import type { Placement } from '#shared/drawing/placement.ts';
+import type { Label } from '#shared/drawing/plan-part.ts';
 import type { SectionGeometry, StirrupOutline } from '#shared/drawing/section-geometry.ts';
 import type { SectionInput } from '#shared/engine/section.ts';
 import { PDF_COLOURS, type PdfFlow } from './pdf-flow.ts';
@@ -39,12 +36,17 @@ export function drawSection(
 function drawBody(doc: PDFKit.PDFDocument, geometry: SectionGeometry, at: Placement): void {
   const s = at.pxPerMm;
   doc
-    .rect(at.xPx, at.yPx, geometry.widthMm * s, geometry.depthMm * s)
+    .path(outlinePath(geometry.outline, at))
     .lineWidth(1)
     .fillAndStroke(PDF_COLOURS.concrete, PDF_COLOURS.concreteEdge);
   if (geometry.stirrup !== null) drawStirrup(doc, geometry.stirrup, at);
   for (const bar of geometry.bars)
     doc.circle(at.xPx + bar.xMm * s, at.yPx + bar.yMm * s, bar.radiusMm * s).fill(PDF_COLOURS.steel);
+  for (const bar of geometry.skinBars)
+    doc
+      .circle(at.xPx + bar.xMm * s, at.yPx + bar.yMm * s, bar.radiusMm * s)
+      .lineWidth(Math.max(bar.radiusMm * s * 0.5, 0.8))
+      .fillAndStroke(PDF_COLOURS.concrete, PDF_COLOURS.steel);
   for (const band of geometry.bands)
     doc
       .rect(at.xPx + band.xMm * s, at.yPx + band.yMm * s, band.widthMm * s, Math.max(band.heightMm * s, 1))

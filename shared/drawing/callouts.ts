@@ -2,7 +2,7 @@ import type { UnitSystem } from '../contract/design-basis.ts';
 import type { SectionInput } from '../engine/section.ts';
 import { formatQuantity } from '../print/format-quantity.ts';
 import { barsText } from '../print/section-text.ts';
-import type { SectionGeometry } from './section-geometry.ts';
+import { drawnDepth, type SectionGeometry } from './section-geometry.ts';
 
 /** A word beside the section with a line to what it names; mm in the section's own coordinates. */
 export interface Callout {
@@ -32,7 +32,7 @@ export function calloutsOf(section: SectionInput, geometry: SectionGeometry, uni
       ? []
       : [
           {
-            text: `${section.stirrup.bar} @ ${formatQuantity(section.stirrup.spacingMm, 'length', units)}`,
+            text: `${section.stirrup.bar} @ ${formatQuantity(stirrup.spacingMm, 'length', units)}`,
             tone: 'steel',
             xMm: stirrup.xMm + stirrup.widthMm,
             yMm: geometry.depthMm * 0.56,
@@ -46,7 +46,7 @@ export function calloutsOf(section: SectionInput, geometry: SectionGeometry, uni
             text: `c ${formatQuantity(geometry.neutralAxisMm, 'length', units, { hideUnit: true, digits: 3 })}`,
             tone: 'ink',
             xMm: geometry.widthMm,
-            yMm: geometry.neutralAxisMm,
+            yMm: drawnDepth(geometry, geometry.neutralAxisMm),
           },
         ];
   return [...rows, ...bands, ...ties, ...axis].toSorted((a, b) => a.yMm - b.yMm);

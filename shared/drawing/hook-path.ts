@@ -1,4 +1,4 @@
-import type { Placement } from './large-plan.ts';
+import type { Placement } from './placement.ts';
 import type { StirrupOutline } from './section-geometry.ts';
 
 /** ACI 25.3.2: the straight end of a 135° hook is six diameters, and 3 in at least. */

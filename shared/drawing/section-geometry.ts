@@ -1,19 +1,37 @@
 import { findBar } from '../engine/bars.ts';
 import type { Evaluation, PlacedBar } from '../engine/evaluation.ts';
 import type { BarStandard, Face, SectionInput } from '../engine/section.ts';
+import { flangeOf } from '../engine/flange.ts';
+import { RULE_SETS } from '../engine/rules/rule-sets.ts';
+import { isHogging } from '../print/face-word.ts';
+import { concreteOutline, drawnFlange, type DrawnFlange, type OutlinePoint } from './concrete-outline.ts';
 
-/** Everything in mm: x from the left side, y downwards from the compression face, as the engine places bars. */
+/**
+ * Everything in mm: x from the left side of the web, y downwards from the top as the beam lies. The engine's depths run
+ * from the compression face, which is at the bottom in hogging.
+ */
 export interface SectionGeometry {
+  /** Width of the web. */
   readonly widthMm: number;
   readonly depthMm: number;
+  readonly isHogging: boolean;
+  readonly flange: DrawnFlange | null;
+  readonly outline: readonly OutlinePoint[];
+  /** Ends of what is drawn: the slab's, or the web's own. */
+  readonly leftMm: number;
+  readonly rightMm: number;
   readonly fits: boolean;
   /** Why the bars cannot be placed; empty when they can. */
   readonly reason: string;
   readonly stirrup: StirrupOutline | null;
   readonly bars: readonly BarCircle[];
+  /** Side bars of a deep beam; drawn, and not counted in strength. */
+  readonly skinBars: readonly BarCircle[];
   readonly bands: readonly LayerBand[];
   readonly rows: readonly BarRow[];
+  /** Depth c from the compression face. */
   readonly neutralAxisMm: number | null;
+  /** Depth d from the compression face. */
   readonly effectiveDepthMm: number | null;
   readonly coverMm: number;
 }
@@ -26,6 +44,8 @@ export interface StirrupOutline {
   readonly heightMm: number;
   readonly cornerRadiusMm: number;
   readonly legThicknessMm: number;
+  /** Along the beam: as given, or as it was designed for this section. */
+  readonly spacingMm: number;
   /** Centre lines of the legs between the outer two. */
   readonly innerLegsMm: readonly number[];
 }
@@ -80,11 +100,12 @@ function stirrupOutline(
     heightMm,
     cornerRadiusMm: Math.min(bendRadiusMm + ds / 2, widthMm / 2, heightMm / 2),
     legThicknessMm: ds,
+    spacingMm: section.stirrup.spacingMm,
     innerLegsMm: Array.from({ length: inner }, (_, k) => inset + (widthMm * (k + 1)) / (inner + 1)),
   };
 }
 
-function barRows(evaluation: Evaluation): BarRow[] {
+function barRows(evaluation: Evaluation, drawnY: DrawnY): BarRow[] {
   const byRow = new Map<string, PlacedBar[]>();
   for (const bar of evaluation.arrangement?.bars ?? []) {
     const key = `${bar.face} ${bar.layer}`;
@@ -99,7 +120,7 @@ function barRows(evaluation: Evaluation): BarRow[] {
     return {
       face: first.face,
       layer: first.layer,
-      yMm: bars.reduce((sum, bar) => sum + bar.yMm, 0) / bars.length,
+      yMm: drawnY(bars.reduce((sum, bar) => sum + bar.yMm, 0) / bars.length),
       leftMm: first.xMm - first.diameterMm / 2,
       rightMm: last.xMm + last.diameterMm / 2,
       clearGaps: bars.slice(1).map((bar, k) => ({
@@ -111,7 +132,7 @@ function barRows(evaluation: Evaluation): BarRow[] {
   });
 }
 
-function layerBands(section: SectionInput): LayerBand[] {
+function layerBands(section: SectionInput, drawnY: DrawnY): LayerBand[] {
   if (section.reinforcement.kind !== 'layers') return [];
   const xMm = Math.min(section.coverMm, section.widthMm / 4);
   const widthMm = section.widthMm - 2 * xMm;
@@ -121,7 +142,7 @@ function layerBands(section: SectionInput): LayerBand[] {
       const heightMm = layer.areaMm2 / widthMm;
       return {
         xMm,
-        yMm: layer.depthMm - heightMm / 2,
+        yMm: drawnY(layer.depthMm) - heightMm / 2,
         widthMm,
         heightMm,
         areaMm2: layer.areaMm2,
@@ -130,31 +151,49 @@ function layerBands(section: SectionInput): LayerBand[] {
     });
 }
 
+/** Place as drawn of a depth from the compression face. */
+type DrawnY = (depthMm: number) => number;
+
 /** What there is to draw of one evaluated section. */
 export function sectionGeometry(
   section: SectionInput,
   evaluation: Evaluation,
   standard: BarStandard,
 ): SectionGeometry {
+  const { widthMm, depthMm } = section;
   const arrangement = evaluation.arrangement;
   const fits = arrangement?.fits ?? true;
+  const hogs = isHogging(section);
+  const drawnY: DrawnY = (depth) => (hogs ? depthMm - depth : depth);
+  const resolved = flangeOf(section, RULE_SETS[evaluation.ruleSet.id]);
+  const flange = resolved === null ? null : drawnFlange(resolved, widthMm, resolved.widthMm);
   return {
-    widthMm: section.widthMm,
-    depthMm: section.depthMm,
+    widthMm,
+    depthMm,
+    isHogging: hogs,
+    flange,
+    outline: concreteOutline(widthMm, depthMm, flange),
+    leftMm: flange?.leftMm ?? 0,
+    rightMm: flange?.rightMm ?? widthMm,
     fits,
     reason: fits ? '' : (arrangement?.reason ?? ''),
     stirrup: arrangement === null ? null : stirrupOutline(section, arrangement.bendRadiusMm, standard),
     bars: fits
       ? (arrangement?.bars ?? []).map((bar) => ({
           xMm: bar.xMm,
-          yMm: bar.yMm,
+          yMm: drawnY(bar.yMm),
           radiusMm: bar.diameterMm / 2,
         }))
       : [],
-    bands: layerBands(section),
-    rows: fits ? barRows(evaluation) : [],
+    skinBars: [],
+    bands: layerBands(section, drawnY),
+    rows: fits ? barRows(evaluation, drawnY) : [],
     neutralAxisMm: evaluation.flexure?.neutralAxisMm ?? null,
     effectiveDepthMm: evaluation.geometry?.dMm ?? null,
     coverMm: section.coverMm,
   };
 }
+
+/** Place of a depth from the compression face in the drawing, which has the top of the beam on top. */
+export const drawnDepth = ({ isHogging, depthMm }: SectionGeometry, depth: number): number =>
+  isHogging ? depthMm - depth : depth;

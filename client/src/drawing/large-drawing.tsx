@@ -1,5 +1,6 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
-import { AXIS_DASH_PX, LARGE_SHEET, largePlan, type Label, type Stroke } from '#shared/drawing/large-plan.ts';
+import { AXIS_DASH_PX, LARGE_SHEET, largePlan } from '#shared/drawing/large-plan.ts';
+import type { Label, Stroke } from '#shared/drawing/plan-part.ts';
 import type { SectionGeometry } from '#shared/drawing/section-geometry.ts';
 import type { SectionInput } from '#shared/engine/section.ts';
 import { SectionBody } from './section-body.tsx';

@@ -1,11 +1,16 @@
-import type { Placement } from '#shared/drawing/large-plan.ts';
+import { outlinePath } from '#shared/drawing/concrete-outline.ts';
 import { hookPath } from '#shared/drawing/hook-path.ts';
+import type { Placement } from '#shared/drawing/placement.ts';
 import type { SectionGeometry, StirrupOutline } from '#shared/drawing/section-geometry.ts';
 
 /** Thinner than this a line would fade on screen, so a leg drawn at a small scale keeps it. */
 const LEAST_LEG_PX = 1;
 const LEAST_BAR_RADIUS_PX = 1.1;
 const LEAST_BAND_PX = 1.5;
+/** Skin bars are rings: they are there, and not counted in strength. */
+const SKIN_LINE_SHARE = 0.5;
+const LEAST_SKIN_LINE_PX = 0.8;
+
 interface BodyProps {
   readonly geometry: SectionGeometry;
   readonly at: Placement;
@@ -56,11 +61,8 @@ export function SectionBody({ geometry, at, hasHooks }: BodyProps) {
   const s = at.pxPerMm;
   return (
     <g>
-      <rect
-        x={at.xPx}
-        y={at.yPx}
-        width={geometry.widthMm * s}
-        height={geometry.depthMm * s}
+      <path
+        d={outlinePath(geometry.outline, at)}
         className={geometry.fits ? 'fill-concrete stroke-concrete-edge' : 'fill-none stroke-concrete-edge'}
         strokeWidth={1}
         strokeDasharray={geometry.fits ? undefined : '4 3'}
@@ -74,6 +76,16 @@ export function SectionBody({ geometry, at, hasHooks }: BodyProps) {
           cy={at.yPx + bar.yMm * s}
           r={Math.max(bar.radiusMm * s, LEAST_BAR_RADIUS_PX)}
           className="fill-steel"
+        />
+      ))}
+      {geometry.skinBars.map((bar) => (
+        <circle
+          key={`${bar.xMm} ${bar.yMm}`}
+          cx={at.xPx + bar.xMm * s}
+          cy={at.yPx + bar.yMm * s}
+          r={Math.max(bar.radiusMm * s, LEAST_BAR_RADIUS_PX)}
+          className="fill-concrete stroke-steel"
+          strokeWidth={Math.max(bar.radiusMm * s * SKIN_LINE_SHARE, LEAST_SKIN_LINE_PX)}
         />
       ))}
       {geometry.bands.map((band) => (

@@ -60,12 +60,16 @@ export function SectionDrawing(props: SectionDrawingProps) {
       </svg>
     );
 
-  const widthPx = section.widthMm * props.pxPerMm + 2 * EDGE_PX;
+  const widthPx = (geometry.rightMm - geometry.leftMm) * props.pxPerMm + 2 * EDGE_PX;
   const yPx = props.heightPx - section.depthMm * props.pxPerMm;
   return (
     <svg width={widthPx} height={props.heightPx} className="block overflow-visible" {...named}>
       {label}
-      <SectionBody geometry={geometry} at={{ xPx: EDGE_PX, yPx, pxPerMm: props.pxPerMm }} hasHooks={false} />
+      <SectionBody
+        geometry={geometry}
+        at={{ xPx: EDGE_PX - geometry.leftMm * props.pxPerMm, yPx, pxPerMm: props.pxPerMm }}
+        hasHooks={false}
+      />
       {!geometry.fits && (
         <text x={widthPx / 2} y={yPx - 4} textAnchor="middle" className="fill-fails font-sans text-[10px]">
           no fit
