@@ -1,8 +1,10 @@
 import { z } from 'zod';
 import {
   FACES,
+  FLANGE_SHAPES,
   SUPPORTS,
   type Demand,
+  type Flange,
   type SectionInput,
   type Stirrup,
   type UserRules,
@@ -58,6 +60,40 @@ const reinforcementSchema = z.discriminatedUnion('kind', [
   }),
 ]);
 
+/** A slab's width is that to the next beams at most; the limit catches slips of unit. */
+const flangeWidthMmSchema = bounded('Flange width', 50, 20_000, 'mm');
+
+export const flangeSchema = z.object({
+  shape: z.enum(FLANGE_SHAPES, { error: 'Choose a T or an L' }),
+  thicknessMm: bounded('Flange thickness', 20, 2000, 'mm'),
+  face: z.enum(FACES, { error: 'Choose the face the slab lies at' }),
+  width: z.discriminatedUnion('kind', [
+    z.object({ kind: z.literal('given'), widthMm: flangeWidthMmSchema }),
+    z.object({
+      kind: z.literal('effective'),
+      clearToNextWebMm: bounded('Clear distance to the next web', 50, 50_000, 'mm'),
+      spanMm: spanMmSchema,
+      support: z.enum(SUPPORTS).optional(),
+    }),
+  ]),
+}) satisfies z.ZodType<Flange>;
+
+/** What is wrong between a slab and the webs and depths it goes with; the messages name the field. */
+export function flangeIssues(
+  flange: Flange,
+  { widestWebMm, leastDepthMm }: { readonly widestWebMm: number; readonly leastDepthMm: number },
+): { path: string[]; message: string }[] {
+  const { thicknessMm, width } = flange;
+  return [
+    ...(thicknessMm >= leastDepthMm
+      ? [{ path: ['flange', 'thicknessMm'], message: 'The flange must be thinner than the depth h' }]
+      : []),
+    ...(width.kind === 'given' && width.widthMm < widestWebMm
+      ? [{ path: ['flange', 'width', 'widthMm'], message: 'The flange must be as wide as the web, or wider' }]
+      : []),
+  ];
+}
+
 export const sectionInputSchema = z
   .object({
     widthMm: widthMmSchema,
@@ -67,8 +103,13 @@ export const sectionInputSchema = z
     coverMm: coverMmSchema,
     stirrup: stirrupSchema.nullable(),
     reinforcement: reinforcementSchema,
+    flange: flangeSchema.nullable().optional(),
   })
   .superRefine((section, ctx) => {
+    if (section.flange) {
+      const beside = { widestWebMm: section.widthMm, leastDepthMm: section.depthMm };
+      for (const issue of flangeIssues(section.flange, beside)) ctx.addIssue({ code: 'custom', ...issue });
+    }
     if (section.reinforcement.kind !== 'layers') return;
     section.reinforcement.layers.forEach((layer, i) => {
       if (layer.depthMm >= section.depthMm)

@@ -15,6 +15,8 @@ import {
   barDesignationSchema,
   barGroupSchema,
   demandSchema,
+  flangeIssues,
+  flangeSchema,
   stirrupSchema,
   userRulesSchema,
 } from './section-input.ts';
@@ -93,6 +95,12 @@ const steelSetsSchema = (label: string, isEmptyAllowed: boolean) =>
         ctx.addIssue({ code: 'custom', path: ['counts'], message: `${label}: enter at least one count` });
     }) satisfies z.ZodType<SteelSetsDefinition>;
 
+/** The end of an axis; of a range the one that was typed, which no value of it passes. */
+function endOf(axis: AxisDefinition, end: 'least' | 'most'): number {
+  if (axis.kind === 'range') return end === 'least' ? axis.from : axis.to;
+  return end === 'least' ? Math.min(...axis.values) : Math.max(...axis.values);
+}
+
 const spaceSchema = z
   .object({
     width: axisSchema('Width b', widthMmSchema),
@@ -106,8 +114,13 @@ const spaceSchema = z
       .max(20, 'At most 20 stirrup choices'),
     tension: steelSetsSchema('Tension bars', false),
     compression: steelSetsSchema('Compression bars', true),
+    flange: flangeSchema.nullable().optional(),
   })
   .superRefine((space, ctx) => {
+    if (space.flange) {
+      const beside = { widestWebMm: endOf(space.width, 'most'), leastDepthMm: endOf(space.depth, 'least') };
+      for (const issue of flangeIssues(space.flange, beside)) ctx.addIssue({ code: 'custom', ...issue });
+    }
     const { tension, compression } = space;
     const hasBars =
       compression.kind === 'bars' && (compression.counts.length > 0 || compression.mixed?.length);

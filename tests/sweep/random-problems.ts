@@ -4,9 +4,12 @@ import {
   BAR_STANDARDS,
   BEND_ALLOWANCES,
   DISPLACED_CONCRETE,
+  FACES,
+  FLANGE_SHAPES,
   RULE_SET_IDS,
   SUPPORTS,
   YIELD_CURVATURE_AT,
+  type Flange,
   type Rates,
 } from '#shared/engine/section.ts';
 import type { SpaceDefinition, SteelSetsDefinition, SweepProblem } from '#shared/sweep/problem.ts';
@@ -67,6 +70,22 @@ const areaSets = (min: number): fc.Arbitrary<SteelSetsDefinition> =>
     at: fc.oneof(fc.record({ offsetMm: between(20, 140) }), fc.record({ shareOfDepth: between(0.05, 0.45) })),
   });
 
+/** Slabs on webs to 700 mm in sections from 150 mm on, at either face. */
+const flange: fc.Arbitrary<Flange> = fc.record({
+  shape: fc.constantFrom(...FLANGE_SHAPES),
+  thicknessMm: between(40, 145),
+  face: fc.constantFrom(...FACES),
+  width: fc.oneof(
+    fc.record({ kind: fc.constant('given' as const), widthMm: between(700, 3000) }),
+    fc.record({
+      kind: fc.constant('effective' as const),
+      clearToNextWebMm: between(200, 5000),
+      spanMm: between(2000, 12000),
+      support: fc.constantFrom(...SUPPORTS),
+    }),
+  ),
+});
+
 const rules = (sizes: readonly string[]) =>
   fc.record({
     minDepthToWidth: orNull(between(0.5, 1.5)),
@@ -110,6 +129,7 @@ export const randomProblem: fc.Arbitrary<SweepProblem> = fc
       ),
       tension: isArea ? areaSets(100) : barSets(standard, 1, false),
       compression: isArea ? areaSets(0) : barSets(standard, 1, true),
+      flange: orNull(flange),
     });
     const basis = fc.record({
       ruleSet: fc.constantFrom(...RULE_SET_IDS),
