@@ -1,5 +1,7 @@
-import type { CheckResult, DuctilityResult, FlexureResult } from './evaluation.ts';
+import type { CheckResult, DuctilityResult, FlexureResult, SkinSteel } from './evaluation.ts';
+import type { ResolvedStirrups } from './resolved-stirrups.ts';
 import type { RuleSet } from './rules/rule-set.ts';
+import type { SeismicRules } from './rules/seismic-rules.ts';
 import type { DesignBasis, Demand, SectionInput, UserRules } from './section.ts';
 import type { PlacedSteel } from './steel-layout.ts';
 
@@ -11,6 +13,9 @@ export interface CheckContext {
   readonly rules: UserRules;
   readonly ruleSet: RuleSet;
   readonly placed: PlacedSteel;
+  readonly seismic: SeismicRules | null;
+  readonly stirrups: ResolvedStirrups;
+  readonly skin: SkinSteel | null;
   readonly flexure: FlexureResult | null;
   readonly ductility: DuctilityResult | null;
 }

@@ -2,7 +2,17 @@ import { getBar, type Bar } from './bars.ts';
 import { check, type CheckContext } from './check-result.ts';
 import type { CheckResult } from './evaluation.ts';
 import { isWithinLength } from './limits.ts';
-import { concreteShearN, designShearN, shearConstantsOf, stirrupSpacingLimitMm } from './shear.ts';
+import { seismicChecks } from './checks-seismic.ts';
+import {
+  concreteShearN,
+  designShearN,
+  detailingSpacingMm,
+  isSpacingHalved,
+  shearConstantsOf,
+  stirrupSpacingLimitMm,
+} from './shear.ts';
+import { allowedSkinSpacingMm } from './skin-steel.ts';
+import { tieLimitMm, type SpacingLimit } from './stirrup-design.ts';
 
 /** Crack control, ties, shear and least depth, in the order of CHECK_IDS; those that do not apply are null. */
 export function detailingChecks(context: CheckContext): readonly (CheckResult | null)[] {
@@ -14,6 +24,8 @@ export function detailingChecks(context: CheckContext): readonly (CheckResult | 
     leastDepth(context),
     axisDepth(context),
     mostSteel(context),
+    skinSteel(context),
+    ...seismicChecks(context),
   ];
 }
 
@@ -68,19 +80,21 @@ function compressionTies(context: CheckContext): CheckResult | null {
       ratio: leastTieMm / tie.diameterMm,
       reason: 'diameter of stirrup that ties bars of this size',
     });
-  const byBarsMm = ruleSet.tieSpacingMm(Math.min(...diameters), tie.diameterMm);
-  const limitMm = ruleSet.isTieSpacingWithinLeastSide
-    ? Math.min(byBarsMm, section.widthMm, section.depthMm)
-    : byBarsMm;
+  if (isDesignOpen(context)) return null;
+  const limitMm = tieLimitMm(context.stirrups.rules!, section.depthMm);
   return check({
     ...base,
     passes: isWithinLength(stirrup.spacingMm, limitMm),
     demand: stirrup.spacingMm,
     capacity: limitMm,
     ratio: stirrup.spacingMm / limitMm,
-    reason: ruleSet.formulas.tieSpacing,
+    reason: withNeed(context, ['ties', 'least-side'], ruleSet.formulas.tieSpacing),
   });
 }
+
+/** Designed stirrups of bars that cannot be placed have no spacing to judge. */
+const isDesignOpen = ({ section, placed }: CheckContext) =>
+  section.stirrup?.isDesigned === true && !placed.layout;
 
 /** Vu with everything shear needs; null where Vu is not asked or the bars are not placed. */
 export function shearOf(context: Pick<CheckContext, 'section' | 'basis' | 'demand' | 'ruleSet' | 'placed'>) {
@@ -111,22 +125,42 @@ function shear(context: CheckContext): CheckResult | null {
     ratio: state.vuN / capacity,
     kind: 'force',
     clause: context.ruleSet.clauses.shear,
-    reason: 'φVn ≥ Vu with the stirrups given, Vs counted to the section limit',
+    reason: withNeed(
+      context,
+      ['shear-strength'],
+      'φVn ≥ Vu with the stirrups there are, Vs counted to the section limit',
+    ),
   });
+}
+
+/** What the design asked for is said where its spacing is closer than is built, beside the check that fails by it. */
+function withNeed({ stirrups }: CheckContext, limits: readonly SpacingLimit[], reason: string): string {
+  const { built, rules } = stirrups;
+  if (!built?.governs || !limits.includes(built.governs)) return reason;
+  return isWithinLength(rules!.leastMm, built.neededMm!) ? reason : built.reason;
+}
+
+/** Largest spacing by Vu; a designed stirrup keeps to the limits of stirrups whether Vu asks for them or not. */
+function spacingLimitMm({ stirrups, placed }: CheckContext, state: ReturnType<typeof shearOf>): number {
+  if (!stirrups.design && state)
+    return stirrupSpacingLimitMm(state.constants, state.vuN, state.dMm, state.concreteN);
+  const isHalved = state !== null && isSpacingHalved(state.constants, state.vuN, state.dMm, state.concreteN);
+  return detailingSpacingMm(stirrups.design!.constants, placed.layout!.dMm, isHalved);
 }
 
 function stirrupSpacing(context: CheckContext): CheckResult | null {
   const state = shearOf(context);
-  if (!state) return null;
-  const limitMm = stirrupSpacingLimitMm(state.constants, state.vuN, state.dMm, state.concreteN);
-  const { spacingMm } = state.constants;
+  const limits = state ?? context.stirrups.design;
+  if (!limits) return null;
+  const limitMm = spacingLimitMm(context, state);
+  const { spacingMm } = limits.constants;
   const hasNumbers = spacingMm < Infinity && limitMm > 0 && limitMm < Infinity;
   const reason = {
     none: 'Vu asks for no stirrups',
     missing: context.section.stirrup
       ? 'stirrup legs stand too far apart across the width'
       : 'Vu asks for stirrups',
-    numbers: 'stirrup spacing along the beam, and Av,min',
+    numbers: withNeed(context, ['along', 'least-area'], 'stirrup spacing along the beam, and Av,min'),
   }[limitMm === Infinity ? 'none' : limitMm === 0 ? 'missing' : 'numbers'];
   return check({
     id: 'stirrup-spacing',
@@ -187,5 +221,29 @@ function mostSteel({ placed, section, ruleSet }: CheckContext): CheckResult | nu
     kind: 'area',
     clause: ruleSet.clauses.mostSteel,
     reason: 'steel of either face, outside laps',
+  });
+}
+
+function skinSteel({ section, basis, placed, ruleSet, skin }: CheckContext): CheckResult | null {
+  if (basis.skinBar === undefined || !placed.layout || !ruleSet.isSkinSteelAsked(section.depthMm))
+    return null;
+  const base = { id: 'skin-steel', kind: 'length', clause: ruleSet.clauses.skinSteel } as const;
+  if (!skin)
+    return check({
+      ...base,
+      passes: false,
+      demand: null,
+      capacity: null,
+      ratio: null,
+      reason: basis.skinBar ? 'the side cover allows no spacing' : 'a section so deep asks for skin bars',
+    });
+  const capacity = allowedSkinSpacingMm(section, basis, ruleSet);
+  return check({
+    ...base,
+    passes: true,
+    demand: skin.spacingMm,
+    capacity,
+    ratio: skin.spacingMm === null ? null : skin.spacingMm / capacity,
+    reason: 'skin bars at each side from the tension bars to mid-depth, not counted in strength',
   });
 }

@@ -4,11 +4,14 @@ import type { Evaluation, FlexureResult, Quantities } from './evaluation.ts';
 import { assertFlange, flangeOf } from './flange.ts';
 import { flexureAtUltimate } from './flexure.ts';
 import { onGrid, type Measures } from './measures.ts';
-import { NOT_CHECKED } from './not-checked.ts';
+import { notCheckedFor } from './not-checked.ts';
 import { assertNotNegative, assertPositive, InvalidSectionError } from './preconditions.ts';
 import { quantitiesOf } from './quantities.ts';
+import { resolveStirrups } from './resolved-stirrups.ts';
 import { ruleSetOf } from './rules/rule-set-of.ts';
 import type { DesignBasis, Demand, Reinforcement, SectionInput, UserRules } from './section.ts';
+import { seismicRulesOf } from './seismic.ts';
+import { skinSteelOf } from './skin-steel.ts';
 import { placeSteel, type PlacedSteel, type SteelLayout } from './steel-layout.ts';
 import { ENGINE_VERSION } from './version.ts';
 import { workingOf } from './working.ts';
@@ -32,19 +35,34 @@ export function evaluateSection(section: SectionInput, context: EvaluationContex
 
 /** The same for steel that is placed already, as where a cage was set higher or lower than drawn. */
 export function evaluatePlaced(
-  section: SectionInput,
+  given: SectionInput,
   context: EvaluationContext,
   placed: PlacedSteel,
 ): Evaluation {
   const { basis, demand, rules } = context;
   const ruleSet = ruleSetOf(basis);
   const { layout } = placed;
-  const quantities = quantitiesOf(section, basis);
+  const seismic = seismicRulesOf(ruleSet, basis);
+  const skin = skinSteelOf(given, layout, basis, ruleSet);
+  const stirrups = resolveStirrups({ section: given, basis, demand, ruleSet, seismic, placed, skin });
+  const { section } = stirrups;
+  const quantities = quantitiesOf(section, basis, skin);
   const flexure = layout && flexureAtUltimate(section, layout, basis, ruleSet);
   const elastic = layout && elasticSection(section, layout, basis, ruleSet);
   const ductility =
     layout && flexure && elastic && ductilityOf(section, layout, basis, { flexure, elastic, rules: ruleSet });
-  const checks = checksOf({ section, basis, demand, rules, ruleSet, placed, flexure, ductility });
+  const detailing = { seismic, stirrups, skin };
+  const checks = checksOf({
+    section,
+    basis,
+    demand,
+    rules,
+    ruleSet,
+    placed,
+    flexure,
+    ductility,
+    ...detailing,
+  });
   const measures = measuresOf(section, demand, quantities, {
     flexure,
     curvatureDuctility: ductility?.curvatureDuctility ?? null,
@@ -60,6 +78,8 @@ export function evaluatePlaced(
     geometry: layout && geometryOf(section, layout),
     flange: flangeOf(section, ruleSet),
     arrangement: placed.arrangement,
+    stirrups: stirrups.built,
+    skin,
     flexure,
     elastic,
     ductility,
@@ -80,9 +100,10 @@ export function evaluatePlaced(
             ductility,
             quantities,
             placed,
+            ...detailing,
           })
         : [],
-    notChecked: NOT_CHECKED,
+    notChecked: notCheckedFor(basis, demand),
   };
 }
 

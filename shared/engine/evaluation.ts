@@ -1,5 +1,6 @@
 import type { ResolvedFlange } from './flange.ts';
 import type { Measures } from './measures.ts';
+import type { SpacingLimit } from './stirrup-design.ts';
 import type { BendAllowance, DisplacedConcrete, Face, RuleSetId, YieldCurvatureAt } from './section.ts';
 
 /** Closed list of checks, in the order they are shown; at most 31, since bit i of a failure mask is CHECK_IDS[i]. */
@@ -168,6 +169,35 @@ export interface SteelLine {
   readonly kgPerM: number;
 }
 
+/** Stirrups with the spacing they are built with. */
+export interface BuiltStirrups {
+  readonly bar: string;
+  readonly legs: number;
+  readonly spacingMm: number;
+  readonly isDesigned: boolean;
+  /** The least of the limits; null where the spacing is not designed, or the bars are not placed. */
+  readonly governs: SpacingLimit | null;
+  /** That limit, mm, before it is rounded down to the step; 0 where no spacing is close enough. */
+  readonly neededMm: number | null;
+  readonly reason: string;
+}
+
+/** Bars along the sides of a deep section, not counted in strength. */
+export interface SkinSteel {
+  readonly bar: string;
+  readonly perSide: number;
+  /** Spacing from the tension layer nearest mid-depth on; null where none is needed. */
+  readonly spacingMm: number | null;
+  readonly allowedMm: number;
+  /** x from the left side, y from the compression face, mm. */
+  readonly bars: readonly {
+    readonly bar: string;
+    readonly xMm: number;
+    readonly yMm: number;
+    readonly diameterMm: number;
+  }[];
+}
+
 /** Per metre of beam. */
 export interface Quantities {
   readonly steel: readonly SteelLine[];
@@ -227,6 +257,10 @@ export interface Evaluation {
   readonly flange?: ResolvedFlange | null | undefined;
   /** Null for plain layers. */
   readonly arrangement: Arrangement | null;
+  /** Null without stirrups. */
+  readonly stirrups: BuiltStirrups | null;
+  /** Null where none is asked or none can be placed. */
+  readonly skin: SkinSteel | null;
   /** Null when the bars cannot be placed or there is no tension steel. */
   readonly flexure: FlexureResult | null;
   readonly elastic: ElasticResult | null;

@@ -1,16 +1,33 @@
-/** What no check of this engine version covers; shown wherever results are shown. */
-export const NOT_CHECKED: readonly string[] = [
-  'whether Mu includes the self-weight of this section',
-  'sections elsewhere along the span',
-  'limits of the code on f′c, fy, cover and lightweight concrete (normalweight is assumed)',
-  'shear where no Vu is given, and stirrup spacing along the span',
-  'torsion',
-  'crack width (the spacing of the bars is checked)',
-  'deflection, short and long term (least depth only, where span and support are given)',
-  'anchorage, development and lap lengths',
-  'skin reinforcement of deep beams',
-  'seismic detailing',
-  'axial force and biaxial bending',
-  'lateral stability',
-  'fire resistance and durability',
-];
+import type { DesignBasis, Demand } from './section.ts';
+
+const SEISMIC_REST =
+  'of the seismic detailing: shear from the strengths at the joints, lateral support of the bars, laps and anchorage, the beam’s fit to its column, and where hoops may be wider apart';
+
+/** What no check covers for what is asked; shown wherever results are shown. */
+export function notCheckedFor(
+  basis: Pick<DesignBasis, 'seismicSystem' | 'skinBar'>,
+  { muNmm, vuN, spanMm, support }: Demand,
+): readonly string[] {
+  const isGiven = (value: number | null | undefined) => value !== null && value !== undefined;
+  const hasSystem = basis.seismicSystem !== undefined && basis.seismicSystem !== 'none';
+  return [
+    ...(isGiven(muNmm)
+      ? ['whether Mu includes the self-weight of this section']
+      : ['strength against a moment']),
+    'sections elsewhere along the span',
+    'limits of the code on f′c, fy, cover and lightweight concrete (normalweight is assumed)',
+    isGiven(vuN) ? 'shear and stirrup spacing elsewhere along the span' : 'shear',
+    'torsion',
+    'crack width (the spacing of the bars is checked)',
+    spanMm && support
+      ? 'deflection, short and long term (least depth is checked)'
+      : 'deflection and least depth',
+    'anchorage, development and lap lengths',
+    ...(basis.skinBar === undefined ? ['skin reinforcement of deep beams'] : []),
+    ...(hasSystem ? [SEISMIC_REST] : ['seismic detailing']),
+    ...(hasSystem && !spanMm ? ['clear span against depth'] : []),
+    'axial force and biaxial bending',
+    'lateral stability',
+    'fire resistance and durability',
+  ];
+}

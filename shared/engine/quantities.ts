@@ -1,9 +1,10 @@
 import { getBar } from './bars.ts';
-import type { Quantities, SteelLine } from './evaluation.ts';
+import type { Quantities, SkinSteel, SteelLine } from './evaluation.ts';
 import { flangeOf } from './flange.ts';
 import { concreteM3PerM, formworkM2PerM, pricingFor, unformedSides, type Pricing } from './pricing.ts';
 import { ruleSetOf } from './rules/rule-set-of.ts';
 import type { BarGroup, DesignBasis, SectionInput } from './section.ts';
+import { skinKgPerM } from './skin-steel.ts';
 import { stirrupKgPerM, stirrupSetLengthMm, stirrupShape } from './stirrup-length.ts';
 
 /** Density of reinforcing steel, kg/m per mm² (7850 kg/m³, EN 10080), for steel given as plain areas. */
@@ -14,14 +15,19 @@ export const STEEL_KG_PER_M_PER_MM2 = 0.00785;
  * leaves the amount null.
  * @throws InvalidSectionError for an unknown bar.
  */
-export function quantitiesOf(section: SectionInput, basis: DesignBasis): Quantities {
+export function quantitiesOf(
+  section: SectionInput,
+  basis: DesignBasis,
+  skin: SkinSteel | null = null,
+): Quantities {
   const longitudinal = longitudinalLines(section, basis);
   const [tensionKg, compressionKg] = (['tension', 'compression'] as const).map((position) =>
     sum(longitudinal.filter((line) => line.position === position)),
   ) as [number, number];
   const stirrups = stirrupLines(section, basis);
   const pricing = pricingFor(basis.rates, section.fcMPa);
-  const longitudinalKg = tensionKg + compressionKg;
+  const sides = skinLines(skin, basis);
+  const longitudinalKg = tensionKg + compressionKg + sum(sides);
   const stirrupKg = sum(stirrups);
   const lapsKgPerM = longitudinalKg * pricing.lapShare;
   const netSteelKgPerM = longitudinalKg + stirrupKg;
@@ -32,7 +38,7 @@ export function quantitiesOf(section: SectionInput, basis: DesignBasis): Quantit
   const totalSteelKgPerM = netSteelKgPerM + lapsKgPerM + wasteKgPerM;
   const co2e = totalSteelKgPerM * pricing.steelCo2ePerKg + concrete * pricing.concreteCo2ePerM3;
   return {
-    steel: [...longitudinal, ...stirrups],
+    steel: [...longitudinal, ...sides, ...stirrups],
     netSteelKgPerM,
     lapsKgPerM,
     wasteKgPerM,
@@ -90,6 +96,21 @@ function longitudinalLines({ reinforcement }: SectionInput, basis: DesignBasis):
       kgPerM: count * getBar(basis.barStandard, bar, ['reinforcement', position]).massKgPerM,
     }));
   return [...linesOf(reinforcement.tension, 'tension'), ...linesOf(reinforcement.compression, 'compression')];
+}
+
+function skinLines(skin: SkinSteel | null, basis: DesignBasis): readonly SteelLine[] {
+  if (!skin || skin.perSide === 0) return [];
+  const count = 2 * skin.perSide;
+  const { massKgPerM } = getBar(basis.barStandard, skin.bar, ['basis', 'skinBar']);
+  return [
+    {
+      bar: skin.bar,
+      position: 'skin',
+      count,
+      lengthPerM: count,
+      kgPerM: skinKgPerM(skin.perSide, massKgPerM),
+    },
+  ];
 }
 
 function stirrupLines(section: SectionInput, basis: DesignBasis): readonly SteelLine[] {

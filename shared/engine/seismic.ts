@@ -1,6 +1,6 @@
 import { InvalidSectionError } from './preconditions.ts';
 import type { RuleSet } from './rules/rule-set.ts';
-import type { SeismicRules } from './rules/seismic-rules.ts';
+import type { FaceSteelLimits, SeismicRules } from './rules/seismic-rules.ts';
 import { SEISMIC_SYSTEMS, type DesignBasis, type SeismicSystem } from './section.ts';
 
 /** Systems a code knows, none among them. */
@@ -25,3 +25,17 @@ export function seismicRulesOf(
     );
   return rules;
 }
+
+/** Least width of a web in depth h, mm. */
+export const leastWebMm = (
+  { shareOfDepth, mostMm }: NonNullable<SeismicRules['leastWidth']>,
+  depthMm: number,
+) => Math.min(shareOfDepth * depthMm, mostMm);
+
+/** Least steel of a face with effective depth d and so much at the other face, mm². */
+export const faceLeastMm2 = (limits: FaceSteelLimits, widthMm: number, dMm: number, otherMm2: number) =>
+  limits.leastShare * widthMm * dMm + limits.leastOfOther * otherMm2;
+
+/** Most steel of a face, mm². */
+export const faceMostMm2 = (limits: FaceSteelLimits, widthMm: number, dMm: number, otherMm2: number) =>
+  limits.mostShare * widthMm * dMm + limits.mostOfOther * otherMm2;

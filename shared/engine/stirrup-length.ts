@@ -54,6 +54,11 @@ export function stirrupSetLengthMm(shape: StirrupShape, widthMm: number, depthMm
 }
 
 /** Stirrups per metre of beam, kg/m. */
-export function stirrupKgPerM(shape: StirrupShape, widthMm: number, depthMm: number): number {
-  return (stirrupSetLengthMm(shape, widthMm, depthMm) / shape.spacingMm) * shape.massKgPerM;
+export function stirrupKgPerM(
+  shape: StirrupShape,
+  widthMm: number,
+  depthMm: number,
+  spacingMm = shape.spacingMm,
+): number {
+  return (stirrupSetLengthMm(shape, widthMm, depthMm) / spacingMm) * shape.massKgPerM;
 }

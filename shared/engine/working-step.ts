@@ -4,9 +4,12 @@ import type {
   FlexureResult,
   Quantities,
   QuantityKind,
+  SkinSteel,
   WorkingStep,
 } from './evaluation.ts';
+import type { ResolvedStirrups } from './resolved-stirrups.ts';
 import type { RuleSet } from './rules/rule-set.ts';
+import type { SeismicRules } from './rules/seismic-rules.ts';
 import type { DesignBasis, Demand, Face, SectionInput } from './section.ts';
 import type { PlacedSteel, SteelLayout } from './steel-layout.ts';
 
@@ -22,6 +25,9 @@ export interface WorkingSource {
   readonly ductility: DuctilityResult;
   readonly quantities: Quantities;
   readonly placed: PlacedSteel;
+  readonly seismic: SeismicRules | null;
+  readonly stirrups: ResolvedStirrups;
+  readonly skin: SkinSteel | null;
 }
 
 /** A number put into a formula. */

@@ -1,3 +1,4 @@
+import { isWithinLength } from '../limits.ts';
 import type { RuleSetId } from '../section.ts';
 import { MM_PER_IN, MPA_PER_PSI } from '../units.ts';
 import type { Support } from '../section.ts';
@@ -31,7 +32,7 @@ interface Coefficients {
   readonly gapMm: number;
   readonly hookTailLeastMm: number;
   readonly largestTightBendMm: number;
-  readonly formulas: Omit<Formulas, 'strengthReduction' | 'tieSpacing' | 'effectiveFlange'>;
+  readonly formulas: Omit<Formulas, 'strengthReduction' | 'tieSpacing' | 'skinSpacing' | 'effectiveFlange'>;
   /** 24.3.2: s ≤ first/fs − 2.5 cc and second/fs; MPa·mm. */
   readonly crackSpacing: readonly [number, number];
   /** Table 9.3.1.1 is for Grade 60 (420): factor 0.4 + fy/base. */
@@ -177,6 +178,13 @@ export function aci318({ id, year, isMetric }: Edition): RuleSet & { readonly sh
   const c = isMetric ? METRIC : US;
   /** Strain from which a section is tension-controlled, Table 21.2.2. */
   const tensionControlledStrain = (epsilonTy: number) => (year === '19' ? epsilonTy + 0.003 : 0.005);
+  const crackSpacingMm = (fyMPa: number, clearCoverMm: number) => {
+    const serviceStress = SERVICE_STRESS_SHARE * fyMPa;
+    return Math.min(
+      c.crackSpacing[0] / serviceStress - 2.5 * clearCoverMm,
+      c.crackSpacing[1] / serviceStress,
+    );
+  };
   const leastTieDiameterMm = (barDiameterMm: number) =>
     barDiameterMm <= c.lightTie.upToBarMm + 0.01 ? c.lightTie.lightMm : c.lightTie.heavyMm;
   const leastSteelShare = (fcMPa: number, fyMPa: number) =>
@@ -218,13 +226,7 @@ export function aci318({ id, year, isMetric }: Edition): RuleSet & { readonly sh
     // Table 25.3.2: inside bend diameter 4 db to #5 / 16 mm, 6 db above
     bendRadiusMm: (ds) => (ds <= c.largestTightBendMm + 0.01 ? 2 * ds : 3 * ds),
     hookTailMm: (ds) => Math.max(6 * ds, c.hookTailLeastMm),
-    crackSpacingMm(fyMPa, clearCoverMm) {
-      const serviceStress = SERVICE_STRESS_SHARE * fyMPa;
-      return Math.min(
-        c.crackSpacing[0] / serviceStress - 2.5 * clearCoverMm,
-        c.crackSpacing[1] / serviceStress,
-      );
-    },
+    crackSpacingMm,
     tieSpacingMm: (barDiameterMm, stirrupDiameterMm) => Math.min(16 * barDiameterMm, 48 * stirrupDiameterMm),
     isTieSpacingWithinLeastSide: true,
     leastTieDiameterMm,
@@ -236,12 +238,15 @@ export function aci318({ id, year, isMetric }: Edition): RuleSet & { readonly sh
       concreteWithoutStirrups: year === '19' ? c.shear.withoutStirrups19 : null,
       stirrupsFromShare: year === '19' ? c.shear.stirrupsFromShare19 : null,
     },
+    isSkinSteelAsked: (depthMm) => !isWithinLength(depthMm, isMetric ? 900 : 36 * MM_PER_IN),
+    skinSpacingMm: crackSpacingMm,
     seismic: aciSeismic({ title: book, year, isMetric, leastSteelShare, leastTieDiameterMm }),
     clauses: clausesOf(book),
     formulas: {
       ...c.formulas,
       effectiveFlange: ({ shape }) =>
         shape === 't' ? 'b + 2 min(8 hf, sw/2, ln/8)' : 'b + min(6 hf, sw/2, ln/12)',
+      skinSpacing: c.formulas.crackSpacing,
       tieSpacing: 'stirrup spacing within 16 bar and 48 stirrup diameters and the least side',
       strengthReduction:
         year === '19'

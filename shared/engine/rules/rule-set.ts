@@ -35,6 +35,7 @@ export interface Formulas {
   readonly strengthReduction: string;
   readonly crackSpacing: string;
   readonly tieSpacing: string;
+  readonly skinSpacing: string;
   leastDepth(support: Support): string;
   /** Effective width bf from the web's b, hf, sw (clear to the next web) and ln (clear span). */
   effectiveFlange(of: Pick<FlangeSetting, 'shape' | 'face' | 'support'>): string;
@@ -105,6 +106,10 @@ export interface RuleSet {
   readonly shear: ShearRules;
   /** The code's own law for a section's full curve, and its peak over f′c for any law; Hognestad's, with each law's own peak, unless set. */
   readonly curveConcrete?: { readonly law: ConcreteLawId; readonly peakShare: number } | undefined;
+  /** Whether a section so deep has bars along its sides. */
+  isSkinSteelAsked(depthMm: number): boolean;
+  /** Largest spacing of these, for the clear cover to them. */
+  skinSpacingMm(fyMPa: number, clearCoverMm: number): number;
   /** What each class of moment frame asks. */
   readonly seismic: SeismicSystems;
   readonly clauses: Clauses;
