@@ -93,11 +93,19 @@ const server = [
 
 const client = [
   never('client-never-imports-server', '^client/', '^(server|drizzle)/'),
-  never('client-lib-is-lowest', '^client/src/lib/', '^client/src/(ui|charts|drawing|sheet|features|app)/'),
-  never('client-ui-imports-only-lib', '^client/src/ui/', '^client/src/(charts|drawing|sheet|features|app)/'),
+  never(
+    'client-lib-is-lowest',
+    '^client/src/lib/',
+    '^client/src/(ui|charts|drawing|sheet|study|features|app)/',
+  ),
+  never(
+    'client-ui-imports-only-lib',
+    '^client/src/ui/',
+    '^client/src/(charts|drawing|sheet|study|features|app)/',
+  ),
   never(
     'client-charts-import-no-feature',
-    '^client/src/(charts|drawing|sheet)/',
+    '^client/src/(charts|drawing|sheet|study)/',
     '^client/src/(features|app)/',
   ),
   never('client-features-import-no-page', '^client/src/features/', '^client/src/app/'),

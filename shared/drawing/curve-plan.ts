@@ -66,9 +66,10 @@ const FRAME = {
 const MOST_TICKS = 6;
 /** Room above the highest moment, so that its number does not touch the frame. */
 const HEADROOM = 1.06;
-/** Marks nearer than this share one number line. */
-const SAME_PLACE_PX = 9;
-const NUMBER_ABOVE_PX = 9;
+/** Marks nearer than this are numbered together. */
+const SAME_PLACE_PX = 12;
+/** Numbers stand off the highest of their marks, clear of the axis and of the curve that rises to the left of it. */
+const NUMBER_OFF_PX = { x: 4, y: -7 } as const;
 
 /** A step of 1, 2, 2.5 or 5 times a power of ten that takes `most` steps at most. */
 function niceStep(most: number, steps: number): number {
@@ -149,11 +150,14 @@ function numbersOf(dots: readonly { readonly xPx: number; readonly yPx: number }
   dots.forEach(({ xPx, yPx }, i) => {
     const near = groups.find((group) => Math.hypot(group.xPx - xPx, group.yPx - yPx) < SAME_PLACE_PX);
     if (near === undefined) groups.push({ xPx, yPx, numbers: [i + 1] });
-    else near.numbers.push(i + 1);
+    else {
+      near.numbers.push(i + 1);
+      near.yPx = Math.min(near.yPx, yPx);
+    }
   });
   return groups.map(({ xPx, yPx, numbers }) => ({
-    xPx,
-    yPx: round(yPx - NUMBER_ABOVE_PX),
+    xPx: round(xPx + NUMBER_OFF_PX.x),
+    yPx: round(yPx + NUMBER_OFF_PX.y),
     text: numbers.join(', '),
   }));
 }

@@ -1,7 +1,8 @@
 import { useQuery } from '@tanstack/react-query';
-import { useState } from 'react';
+import { useMemo, useState } from 'react';
 import { useSearchParams } from 'react-router-dom';
 import type { EvaluateInput, Run } from '#shared/contract/records.ts';
+import type { EvaluationContext } from '#shared/engine/evaluate.ts';
 import { expandSpace, sectionAt } from '#shared/sweep/space.ts';
 import { beamsQuery } from '#client/src/features/beams/api.ts';
 import { sectionDraft, useEvaluate } from '#client/src/features/evaluate-section/evaluate-api.ts';
@@ -59,6 +60,14 @@ function PinToBeam({
   );
 }
 
+/** What the service judged the section by: the project's basis and rates, with what the form overrides. */
+function contextOf(
+  { designBasis, priceBook }: ReturnType<typeof useProject>,
+  { basis, demand, rules }: EvaluateInput,
+): EvaluationContext {
+  return { basis: { ...designBasis, ...basis, rates: priceBook }, demand, rules };
+}
+
 function SectionEditor({
   initial,
   draftId,
@@ -71,6 +80,11 @@ function SectionEditor({
   const evaluate = useEvaluate(project.id);
   const [start] = useState(() => sectionDraft.read(draftId) ?? initial);
   const answer = evaluate.data;
+  const asked = evaluate.variables;
+  const context = useMemo(
+    () => (asked === undefined ? undefined : contextOf(project, asked)),
+    [project, asked],
+  );
   return (
     <div className="grid items-start gap-x-12 gap-y-8 xl:grid-cols-[27rem_minmax(0,1fr)]">
       <SectionForm
@@ -93,6 +107,7 @@ function SectionEditor({
             evaluation={answer.evaluation}
             standard={barStandard}
             units={units}
+            context={context}
             areWorkingLinesOpen
             actions={<PinToBeam projectId={project.id} section={answer.section} />}
           />

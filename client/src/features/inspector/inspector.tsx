@@ -1,11 +1,15 @@
 import { useState, type ReactNode } from 'react';
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import type { EvaluationContext } from '#shared/engine/evaluate.ts';
 import type { Evaluation } from '#shared/engine/evaluation.ts';
 import type { BarStandard, SectionInput } from '#shared/engine/section.ts';
 import { SectionDrawing } from '#client/src/drawing/section-drawing.tsx';
 import { formatQuantity } from '#shared/print/format-quantity.ts';
 import { quantitiesInText } from '#shared/print/quantities-in-text.ts';
 import { sizeText, steelText, stirrupText } from '#shared/print/section-text.ts';
+import type { Space } from '#shared/sweep/problem.ts';
+import { LazySectionStudy } from '#client/src/study/lazy-section-study.tsx';
+import { Fold } from '#client/src/ui/fold.tsx';
 import { SegmentedControl } from '#client/src/ui/segmented-control.tsx';
 import { LimitsNote } from '#client/src/sheet/limits-note.tsx';
 import { CheckList } from './check-list.tsx';
@@ -18,6 +22,11 @@ export interface InspectorProps {
   readonly evaluation: Evaluation;
   readonly standard: BarStandard;
   readonly units: UnitSystem;
+  /** What the section was judged by, the same object while it is the same: with it, what lies behind the checks is shown. */
+  readonly context?: EvaluationContext | undefined;
+  /** The space the section was swept in, and the way to another of its sections. */
+  readonly space?: Space | undefined;
+  readonly onSelect?: ((index: number) => void) | undefined;
   /** Pinning, links: whatever the page offers on a section. */
   readonly actions?: ReactNode;
   readonly areWorkingLinesOpen?: boolean;
@@ -29,15 +38,6 @@ const FIGURES = [
   { value: '5', label: '5' },
 ] as const;
 type Figures = (typeof FIGURES)[number]['value'];
-
-function Fold(props: { readonly title: string; readonly isOpen?: boolean; readonly children: ReactNode }) {
-  return (
-    <details className="border-t border-ink" open={props.isOpen}>
-      <summary className="py-2 text-sm font-semibold">{props.title}</summary>
-      <div className="pb-4">{props.children}</div>
-    </details>
-  );
-}
 
 /** Why the bars cannot be placed and the width at which they could; empty where they can. */
 function misfitWords({ arrangement }: Evaluation, units: UnitSystem): string {
@@ -126,6 +126,22 @@ export function Inspector(props: InspectorProps) {
           </div>
         </div>
       </div>
+      {props.context !== undefined && (
+        <LazySectionStudy
+          section={section}
+          evaluation={evaluation}
+          context={props.context}
+          units={units}
+          isMoneyHidden={props.context.basis.rates === null}
+          space={props.space ?? null}
+          onSelect={props.onSelect}
+          part={({ id, title, body }) => (
+            <Fold key={id} title={title}>
+              {body}
+            </Fold>
+          )}
+        />
+      )}
       {evaluation.working.length > 0 && (
         <Fold title="Working, line by line" isOpen={props.areWorkingLinesOpen === true}>
           <div className="gap-x-10 @3xl:columns-2">

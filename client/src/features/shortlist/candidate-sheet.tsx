@@ -1,3 +1,4 @@
+import { useMemo } from 'react';
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import { SectionDrawing } from '#client/src/drawing/section-drawing.tsx';
 import { sizeText, steelText } from '#shared/print/section-text.ts';
@@ -6,6 +7,8 @@ import { LimitsNote } from '#client/src/sheet/limits-note.tsx';
 import { QuantitiesTable } from '#client/src/sheet/quantities-table.tsx';
 import { TakeoffTable } from '#client/src/sheet/takeoff-table.tsx';
 import { WorkingTable } from '#client/src/sheet/working-table.tsx';
+import { LazySectionStudy } from '#client/src/study/lazy-section-study.tsx';
+import { Fold } from '#client/src/ui/fold.tsx';
 import type { ShownCandidate } from './comparison.ts';
 import { FrozenInputs } from './frozen-inputs.tsx';
 
@@ -17,7 +20,8 @@ interface CandidateSheetProps {
 
 /** The body of a candidate: drawing and checks, then inputs, quantities and working. */
 export function CandidateSheet({ candidate, units, hasMoney }: CandidateSheetProps) {
-  const { section, evaluation, basis } = candidate.snapshot;
+  const { section, evaluation, basis, demand, rules } = candidate.snapshot;
+  const context = useMemo(() => ({ basis, demand, rules }), [basis, demand, rules]);
   const isDuctilityChecked = evaluation.checks.some((check) => check.id === 'curvature-ductility');
   return (
     <div className="grid min-w-0 grid-cols-[minmax(0,1fr)] gap-8">
@@ -46,6 +50,32 @@ export function CandidateSheet({ candidate, units, hasMoney }: CandidateSheetPro
       <Part title="What it was computed from">
         <FrozenInputs snapshot={candidate.snapshot} units={units} />
       </Part>
+      <div className="@container grid min-w-0">
+        <LazySectionStudy
+          section={section}
+          evaluation={evaluation}
+          context={context}
+          units={units}
+          isMoneyHidden={!hasMoney}
+          space={null}
+          part={({ id, title, body }) =>
+            id === 'curve' ? (
+              <Part key={id} title={title}>
+                <div className="pb-5">{body}</div>
+              </Part>
+            ) : (
+              <Fold key={id} title={title}>
+                {body}
+              </Fold>
+            )
+          }
+        />
+        {!candidate.isReproducedByCurrentEngine && (
+          <p className="pb-3 text-xs text-near">
+            △ Computed now, by today’s engine, from the inputs frozen here.
+          </p>
+        )}
+      </div>
       <div className="grid grid-cols-[minmax(0,1fr)] gap-8 xl:grid-cols-2">
         <Part title="Quantities per length">
           <QuantitiesTable quantities={evaluation.quantities} units={units} isMoneyHidden={!hasMoney} />
