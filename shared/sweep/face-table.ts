@@ -1,6 +1,7 @@
 import { arrangeFace, type ArrangementContext } from '../engine/arrangement.ts';
 import { getBar } from '../engine/bars.ts';
 import { barRuleBreach, barTotal } from '../engine/checks.ts';
+import { throughBars } from '../engine/checks-seismic.ts';
 import { STEEL_KG_PER_M_PER_MM2 } from '../engine/quantities.ts';
 import type { Face, UserRules } from '../engine/section.ts';
 import type { SteelSet } from './problem.ts';
@@ -30,6 +31,15 @@ export interface FaceEntry {
   /** Smallest and largest bar; NaN without bars. */
   readonly leastBarMm: number;
   readonly largestBarMm: number;
+  /** Bars of the diameter that has to run through the beam; NaN for plain areas. */
+  readonly throughBars: number;
+}
+
+/** What the bars of a set are judged by besides their place. */
+export interface FaceRules {
+  readonly rules: UserRules;
+  /** Least diameter of bars that run through, mm. */
+  readonly throughMm: number;
 }
 
 /** The entry of every set of one face. */
@@ -37,16 +47,18 @@ export function faceTable(
   face: Face,
   sets: readonly SteelSet[],
   context: ArrangementContext,
-  rules: UserRules,
+  judged: FaceRules,
 ): readonly FaceEntry[] {
-  return sets.map((set) => (set.kind === 'area' ? areaEntry(set) : barEntry(face, set.bars, context, rules)));
+  return sets.map((set) =>
+    set.kind === 'area' ? areaEntry(set) : barEntry(face, set.bars, context, judged),
+  );
 }
 
 function barEntry(
   face: Face,
   bars: Extract<SteelSet, { kind: 'bars' }>['bars'],
   context: ArrangementContext,
-  rules: UserRules,
+  { rules, throughMm }: FaceRules,
 ): FaceEntry {
   const placed = arrangeFace(face, bars, context);
   const sum = (of: (designation: string, count: number) => number) =>
@@ -69,6 +81,7 @@ function barEntry(
     largestSpacingMm: placed.report.largestSpacingMm ?? NaN,
     leastBarMm: bars.length > 0 ? Math.min(...diameters) : NaN,
     largestBarMm: bars.length > 0 ? Math.max(...diameters) : NaN,
+    throughBars: throughBars(bars, context.barStandard, throughMm),
   };
 }
 
@@ -93,5 +106,6 @@ function areaEntry({ areaMm2, at }: Extract<SteelSet, { kind: 'area' }>): FaceEn
     largestSpacingMm: NaN,
     leastBarMm: NaN,
     largestBarMm: NaN,
+    throughBars: NaN,
   };
 }

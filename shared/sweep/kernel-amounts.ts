@@ -9,44 +9,47 @@ import type { Placement } from './prepared-sweep.ts';
 export interface RowAmounts {
   readonly placement: Placement;
   readonly pricing: Pricing;
+  /** Bars of the two faces. */
   readonly longitudinalKg: number;
-  readonly lapsKg: number;
   readonly withWaste: number;
-  readonly longitudinalCost: number;
   readonly barCount: number;
 }
 
 export function rowAmounts({ placement, tension, compression, concrete }: Combination): RowAmounts {
   const { pricing } = concrete;
-  const longitudinalKg = tension.kgPerM + compression.kgPerM;
-  const withWaste = 1 + pricing.wasteShare;
   return {
     placement,
     pricing,
-    longitudinalKg,
-    lapsKg: longitudinalKg * pricing.lapShare,
-    withWaste,
-    longitudinalCost: longitudinalKg * (1 + pricing.lapShare) * withWaste * pricing.longitudinalPerKg,
+    longitudinalKg: tension.kgPerM + compression.kgPerM,
+    withWaste: 1 + pricing.wasteShare,
     barCount: tension.barCount + compression.barCount,
   };
 }
 
-/** Weight, cost, carbon, sizes and bars of the section at depth h (mm), in their places in a row of measures. */
-export function writeAmounts(row: RowAmounts, h: number, measures: Float64Array): void {
-  const { placement, pricing, longitudinalKg, lapsKg } = row;
+/**
+ * Weight, cost, carbon, sizes and bars of the section at depth h (mm), with its stirrups' spacing and its skin steel, in
+ * their places in a row of measures.
+ */
+export function writeAmounts(
+  row: RowAmounts,
+  h: number,
+  { spacingMm, skinKg }: { readonly spacingMm: number; readonly skinKg: number },
+  measures: Float64Array,
+): void {
+  const { placement, pricing, withWaste } = row;
   const { stirrup, widthMm, unformed } = placement;
-  const stirrupKg = stirrup ? stirrupKgPerM(stirrup, widthMm, h) : 0;
+  const longitudinalKg = row.longitudinalKg + skinKg;
+  const lapsKg = longitudinalKg * pricing.lapShare;
+  const longitudinalCost = longitudinalKg * (1 + pricing.lapShare) * withWaste * pricing.longitudinalPerKg;
+  const stirrupKg = stirrup ? stirrupKgPerM(stirrup, widthMm, h, spacingMm) : 0;
   const netSteel = longitudinalKg + stirrupKg;
   const totalSteel = netSteel + lapsKg + (netSteel + lapsKg) * pricing.wasteShare;
   const concreteM3 = concreteM3PerM(widthMm, h);
   const formworkM2 = formworkM2PerM(widthMm, h, unformed.slabMm, unformed.hasEdge);
-  const stirrupCost = stirrupKg === 0 ? 0 : stirrupKg * row.withWaste * pricing.stirrupPerKg;
+  const stirrupCost = stirrupKg === 0 ? 0 : stirrupKg * withWaste * pricing.stirrupPerKg;
   measures[STEEL] = onGrid(netSteel);
   measures[COST] = onGrid(
-    row.longitudinalCost +
-      stirrupCost +
-      concreteM3 * pricing.concretePerM3 +
-      formworkM2 * pricing.formworkPerM2,
+    longitudinalCost + stirrupCost + concreteM3 * pricing.concretePerM3 + formworkM2 * pricing.formworkPerM2,
   );
   measures[CO2E] = onGrid(totalSteel * pricing.steelCo2ePerKg + concreteM3 * pricing.concreteCo2ePerM3);
   measures[DEPTH] = h;

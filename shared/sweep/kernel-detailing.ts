@@ -1,12 +1,45 @@
 import { barCoverMm } from '../engine/checks-detailing.ts';
 import { isAtLeastTimes, isSameLength, isWithinLength } from '../engine/limits.ts';
-import type { RuleSet } from '../engine/rules/rule-set.ts';
-import type { Demand, UserRules } from '../engine/section.ts';
+import type { DesignBasis, UserRules } from '../engine/section.ts';
+import type { SeismicRules } from '../engine/rules/seismic-rules.ts';
+import {
+  concreteShearN,
+  designShearN,
+  detailingSpacingMm,
+  isSpacingHalved,
+  stirrupSpacingLimitMm,
+} from '../engine/shear.ts';
+import { skinBarsPerSide, skinKgPerM } from '../engine/skin-steel.ts';
+import {
+  designSpacingMm,
+  hoopLimitMm,
+  spacingRulesOf,
+  spacingState,
+  type SpacingRules,
+} from '../engine/stirrup-design.ts';
 import type { Combination } from './combination.ts';
-import { BAR_RULES, COLUMN_WIDTH, COMPRESSION_SHARE, CRACK_CONTROL, HANGER_BARS } from './kernel-places.ts';
+import {
+  BAR_RULES,
+  COLUMN_WIDTH,
+  COMPRESSION_SHARE,
+  COMPRESSION_TIES,
+  CRACK_CONTROL,
+  HANGER_BARS,
+  HOOP_SPACING,
+  LEAST_DEPTH,
+  SEISMIC_BARS,
+  SHEAR,
+  SKIN_STEEL,
+  STIRRUP_SPACING,
+} from './kernel-places.ts';
+import type { PreparedSweep } from './prepared-sweep.ts';
 
 /** The checks that look neither at the depth nor at the numbers. */
-export function fixedMask({ placement, tension, compression }: Combination, rules: UserRules): number {
+export function fixedMask(
+  { placement, tension, compression }: Combination,
+  rules: UserRules,
+  seismic: SeismicRules | null,
+): number {
   let mask = 0;
   const hasBars = tension.barCount === tension.barCount;
   if (
@@ -24,39 +57,170 @@ export function fixedMask({ placement, tension, compression }: Combination, rule
   )
     mask |= COMPRESSION_SHARE;
   if (tension.breaksBarRules || compression.breaksBarRules) mask |= BAR_RULES;
+  const through = seismic?.continuousBars;
+  if (through && hasBars && !(Math.min(tension.throughBars, compression.throughBars) >= through.count))
+    mask |= SEISMIC_BARS;
   return mask;
 }
 
-/** What detailing asks of a combination: a mask for placed bars, and the least depth for ties (their spacing) and deflection. */
-export function detailingOf(
-  { placement, tension, compression, fyMPa }: Combination,
-  demand: Demand,
-  ruleSet: RuleSet,
-) {
-  const { coverMm, stirrupBar, given } = placement;
-  let placedMask = 0;
-  if (tension.largestSpacingMm === tension.largestSpacingMm) {
-    const limitMm = ruleSet.crackSpacingMm(fyMPa, barCoverMm(coverMm, stirrupBar));
-    if (!isWithinLength(tension.largestSpacingMm, limitMm)) placedMask |= CRACK_CONTROL;
+const barOr = (diameterMm: number, none: number) => (diameterMm === diameterMm ? diameterMm : none);
+
+/** Crack control, ties, stirrups and side bars of one row of depths, with the spacing and skin steel the weights take. */
+export class KernelDetailing {
+  /** Spacing of the stirrups of the section last looked at, mm. */
+  spacingMm = Infinity;
+  skinKg = 0;
+
+  private readonly at = spacingState();
+  private readonly basis: DesignBasis;
+  private readonly vuN: number;
+  private combination: Combination | null = null;
+  private rules: SpacingRules | null = null;
+  private isDesigned = false;
+  private isTieTooSmall = false;
+  /** Whether hoops are asked, and are there and thick enough. */
+  private hasHoopLimit = false;
+  private placedMask = 0;
+  private tiesMm = Infinity;
+  private isTieWithinDepth = false;
+  private leastDepthMm = -Infinity;
+  private allowedSkinMm = NaN;
+
+  private readonly prepared: PreparedSweep;
+
+  constructor(prepared: PreparedSweep) {
+    this.prepared = prepared;
+    this.basis = prepared.problem.basis;
+    this.vuN = prepared.problem.demand.vuN ?? NaN;
+    this.at.vuN = this.vuN;
   }
-  // A spacing beyond any depth fails at every depth; none is asked without compression bars.
-  let tieSpacingMm = -Infinity;
-  if (compression.largestBarMm === compression.largestBarMm) {
-    const isTied =
-      given !== null &&
-      stirrupBar !== null &&
-      isWithinLength(ruleSet.leastTieDiameterMm(compression.largestBarMm), stirrupBar.diameterMm) &&
-      isWithinLength(
-        given.spacingMm,
-        Math.min(
-          ruleSet.tieSpacingMm(compression.leastBarMm, stirrupBar.diameterMm),
-          ruleSet.isTieSpacingWithinLeastSide ? placement.widthMm : Infinity,
-        ),
-      );
-    if (!isTied) tieSpacingMm = Infinity;
-    else if (ruleSet.isTieSpacingWithinLeastSide) tieSpacingMm = given.spacingMm;
+
+  /** Everything that the depths of one combination share. */
+  begin(combination: Combination): void {
+    const { ruleSet, problem, skin, seismic } = this.prepared;
+    const { placement, tension, compression, fyMPa } = combination;
+    const { given, stirrupBar, coverMm, widthMm } = placement;
+    this.combination = combination;
+    this.isDesigned = given?.isDesigned === true;
+    this.at.asMm2 = tension.areaMm2;
+    this.at.hasSkin = false;
+    this.spacingMm = given?.spacingMm ?? Infinity;
+    this.skinKg = 0;
+    this.rules =
+      given && stirrupBar
+        ? spacingRulesOf(
+            {
+              widestMm: given.spacingMm,
+              stirrupMm: stirrupBar.diameterMm,
+              widthMm,
+              fyMPa,
+              tiedBarMm: compression.leastBarMm,
+              leastBarMm: Math.min(
+                barOr(tension.leastBarMm, Infinity),
+                barOr(compression.leastBarMm, Infinity),
+              ),
+              skinBarMm: skin?.bar?.diameterMm ?? Infinity,
+            },
+            this.basis,
+            ruleSet,
+            seismic,
+          )
+        : null;
+    this.placedMask = 0;
+    const barsCoverMm = barCoverMm(coverMm, stirrupBar);
+    if (tension.largestSpacingMm === tension.largestSpacingMm) {
+      const limitMm = ruleSet.crackSpacingMm(fyMPa, barsCoverMm);
+      if (!isWithinLength(tension.largestSpacingMm, limitMm)) this.placedMask |= CRACK_CONTROL;
+    }
+    this.beginTies(combination);
+    this.beginHoops(combination);
+    const { spanMm, support } = problem.demand;
+    this.leastDepthMm = spanMm && support ? ruleSet.leastDepthMm(spanMm, support, fyMPa) : -Infinity;
+    if (skin?.bar) this.allowedSkinMm = ruleSet.skinSpacingMm(fyMPa, barsCoverMm);
   }
-  const { spanMm, support } = demand;
-  const leastDepthMm = spanMm && support ? ruleSet.leastDepthMm(spanMm, support, fyMPa) : -Infinity;
-  return { placedMask, tieSpacingMm, leastDepthMm };
+
+  private beginTies({ placement, compression }: Combination): void {
+    const { ruleSet } = this.prepared;
+    const { largestBarMm } = compression;
+    const isAsked = largestBarMm === largestBarMm;
+    const { stirrupBar } = placement;
+    this.isTieTooSmall =
+      isAsked &&
+      !(stirrupBar && isWithinLength(ruleSet.leastTieDiameterMm(largestBarMm), stirrupBar.diameterMm));
+    const rules = isAsked ? this.rules : null;
+    this.tiesMm = rules ? Math.min(rules.tiesMm, rules.leastSideMm) : Infinity;
+    this.isTieWithinDepth = rules !== null && rules.leastSideMm !== Infinity;
+  }
+
+  private beginHoops({ placement, tension, compression }: Combination): void {
+    const hoops = this.prepared.seismic?.hoops;
+    if (!hoops) return;
+    const largestMm = Math.max(barOr(tension.largestBarMm, 0), barOr(compression.largestBarMm, 0));
+    const { stirrupBar } = placement;
+    this.hasHoopLimit =
+      stirrupBar !== null && isWithinLength(hoops.leastHoopMm(largestMm), stirrupBar.diameterMm);
+    if (!this.hasHoopLimit) this.placedMask |= HOOP_SPACING;
+  }
+
+  /** Checks of a section of depth h (mm) that want no placed bars: ties of stirrups as given, and least depth. */
+  sizeMask(h: number): number {
+    let mask = isWithinLength(this.leastDepthMm, h) ? 0 : LEAST_DEPTH;
+    if (this.isTieTooSmall || (!this.isDesigned && !this.isTied(this.spacingMm, h))) mask |= COMPRESSION_TIES;
+    return mask;
+  }
+
+  private isTied(spacingMm: number, h: number): boolean {
+    return isWithinLength(spacingMm, this.tiesMm) && (!this.isTieWithinDepth || isWithinLength(spacingMm, h));
+  }
+
+  /** Checks of placed bars: `j` is the depth's place in the space, `innermostMm` the tension layer nearest mid-depth. */
+  placedMaskAt(j: number, h: number, d: number, innermostMm: number): number {
+    let mask = this.placedMask;
+    const { deep } = this.prepared;
+    if (deep !== null) mask |= this.skinMask(deep[j] === 1, h, innermostMm);
+    if (this.isDesigned) mask |= this.designMask(h, d);
+    else if (this.vuN === this.vuN) mask |= this.givenMask(d);
+    if (this.hasHoopLimit && !isWithinLength(this.spacingMm, hoopLimitMm(this.rules!, d, h, this.at.hasSkin)))
+      mask |= HOOP_SPACING;
+    return mask;
+  }
+
+  private skinMask(isDeep: boolean, h: number, innermostMm: number): number {
+    this.at.hasSkin = false;
+    this.skinKg = 0;
+    if (!isDeep) return 0;
+    const bar = this.prepared.skin?.bar ?? null;
+    if (!bar) return SKIN_STEEL;
+    const perSide = skinBarsPerSide(h, innermostMm, this.allowedSkinMm);
+    if (perSide !== perSide) return SKIN_STEEL;
+    this.at.hasSkin = perSide > 0;
+    this.skinKg = skinKgPerM(perSide, bar.massKgPerM);
+    return 0;
+  }
+
+  private designMask(h: number, d: number): number {
+    const { at, vuN } = this;
+    const { shear } = this.combination!;
+    at.dMm = d;
+    at.depthMm = h;
+    const spacingMm = designSpacingMm(at, shear, this.rules!);
+    this.spacingMm = spacingMm;
+    let mask = this.isTied(spacingMm, h) ? 0 : COMPRESSION_TIES;
+    let isHalved = false;
+    if (vuN === vuN) {
+      if (!(at.designN >= vuN)) mask |= SHEAR;
+      isHalved = isSpacingHalved(shear, vuN, d, at.concreteN);
+    }
+    if (!isWithinLength(spacingMm, detailingSpacingMm(shear, d, isHalved))) mask |= STIRRUP_SPACING;
+    return mask;
+  }
+
+  private givenMask(d: number): number {
+    const { vuN } = this;
+    const { shear, tension } = this.combination!;
+    const concreteN = concreteShearN(shear, d, tension.areaMm2);
+    const mask = designShearN(shear, d, concreteN) >= vuN ? 0 : SHEAR;
+    const limitMm = stirrupSpacingLimitMm(shear, vuN, d, concreteN);
+    return limitMm === Infinity || isWithinLength(shear.spacingMm, limitMm) ? mask : mask | STIRRUP_SPACING;
+  }
 }

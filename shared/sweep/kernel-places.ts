@@ -21,6 +21,13 @@ export const STIRRUP_SPACING = bit('stirrup-spacing');
 export const LEAST_DEPTH = bit('least-depth');
 export const AXIS_DEPTH = bit('axis-depth');
 export const MOST_STEEL = bit('most-steel');
+export const SKIN_STEEL = bit('skin-steel');
+export const SEISMIC_WIDTH = bit('seismic-width');
+export const SEISMIC_SPAN = bit('seismic-span');
+export const SEISMIC_STEEL = bit('seismic-steel');
+export const SEISMIC_BARS = bit('seismic-bars');
+export const SEISMIC_REVERSAL = bit('seismic-reversal');
+export const HOOP_SPACING = bit('hoop-spacing');
 
 const at = (measure: MeasureId) => MEASURE_IDS.indexOf(measure);
 export const STEEL = at('steelKgPerM');

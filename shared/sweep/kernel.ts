@@ -3,10 +3,9 @@ import type { ResolvedFlange } from '../engine/flange.ts';
 import { isAtLeastTimes, isAtMostTimes, isWithinLength, requiredSteelMm2 } from '../engine/limits.ts';
 import { MEASURE_IDS } from '../engine/measures.ts';
 import { neutralAxisDepth } from '../engine/neutral-axis.ts';
-import { concreteShearN, designShearN, stirrupSpacingLimitMm } from '../engine/shear.ts';
 import type { Combination } from './combination.ts';
 import { rowAmounts, writeAmounts } from './kernel-amounts.ts';
-import { detailingOf, fixedMask } from './kernel-detailing.ts';
+import { fixedMask, KernelDetailing } from './kernel-detailing.ts';
 import {
   BAR_FIT,
   STRENGTH,
@@ -15,16 +14,13 @@ import {
   LEAST_STEEL,
   DEPTH_TO_WIDTH,
   DEPTH_CAP,
-  COMPRESSION_TIES,
-  SHEAR,
-  STIRRUP_SPACING,
-  LEAST_DEPTH,
   AXIS_DEPTH,
   MOST_STEEL,
   MU_PHI,
   DESIGN_STRENGTH,
   UTILISATION,
 } from './kernel-places.ts';
+import { KernelSeismic } from './kernel-seismic.ts';
 import {
   isAboveTension,
   isPlain,
@@ -58,7 +54,10 @@ interface Row {
 export class Kernel {
   private readonly depths = new Float64Array(MAX_LAYERS);
   private readonly areas = new Float64Array(MAX_LAYERS);
+  private readonly layers = { depths: this.depths, areas: this.areas, n: 0 };
   private readonly measures = new Float64Array(MEASURE_IDS.length);
+  private readonly detailing: KernelDetailing;
+  private readonly seismic: KernelSeismic | null;
   private readonly ultimate;
   private readonly cracked = {
     widthMm: 0,
@@ -78,6 +77,8 @@ export class Kernel {
     this.tally = tally;
     this.recorder = recorder;
     const { basis } = prepared.problem;
+    this.detailing = new KernelDetailing(prepared);
+    this.seismic = prepared.seismic && new KernelSeismic(prepared, prepared.seismic, MAX_LAYERS);
     this.ultimate = {
       blockForcePerMm: 0,
       flangeForcePerMm: 0,
@@ -109,7 +110,7 @@ export class Kernel {
     const target = demand.ductilityTarget;
     const capMm = demand.depthCapMm;
     const { minDepthToWidth, maxDepthToWidth } = rules;
-    const hoistedMask = fixedMask(combination, rules);
+    const hoistedMask = fixedMask(combination, rules, this.prepared.seismic);
     const isPlainSteel = isPlain(tension);
     const leastMm = leastDepthMm(placement, tension, compression);
 
@@ -149,13 +150,9 @@ export class Kernel {
     leastSteelSection.widthMm = widthMm;
     let leastSteelPerMm = ruleSet.leastSteelMm2(leastSteelSection);
     const asMm2 = tension.areaMm2;
-    const {
-      placedMask,
-      tieSpacingMm,
-      leastDepthMm: leastForDeflection,
-    } = detailingOf(combination, problem.demand, ruleSet);
-    const vuN = demand.vuN ?? null;
-    const shear = vuN === null ? null : combination.shear;
+    const { detailing, seismic, layers } = this;
+    detailing.begin(combination);
+    seismic?.begin(combination);
 
     const nc = compression.layerCount;
     const n = nc + tension.layerCount;
@@ -164,6 +161,7 @@ export class Kernel {
       areas[i] = compression.areas[i]!;
     }
     for (let i = 0; i < tension.layerCount; i++) areas[n - 1 - i] = tension.areas[i]!;
+    layers.n = n;
 
     const amounts = rowAmounts(combination);
 
@@ -177,8 +175,8 @@ export class Kernel {
       )
         mask |= DEPTH_TO_WIDTH;
       if (capMm !== null && !isWithinLength(h, capMm)) mask |= DEPTH_CAP;
-      if (!isWithinLength(tieSpacingMm, h)) mask |= COMPRESSION_TIES;
-      if (!isWithinLength(leastForDeflection, h)) mask |= LEAST_DEPTH;
+      mask |= detailing.sizeMask(h);
+      if (seismic !== null) mask |= seismic.sizeMask(h);
       depthEvaluated[j]!++;
 
       const d = h - offsetOf(tension, h);
@@ -220,17 +218,12 @@ export class Kernel {
       if (tensionFlange) leastSteelPerMm = this.leastSteelPerMm(tensionFlange, h);
       if (!(asMm2 >= leastSteelPerMm * d) && !this.isLeastSteelWaived(asMm2, d, concrete, fyMPa))
         mask |= LEAST_STEEL;
-      mask |= placedMask;
-      if (shear !== null && vuN !== null) {
-        const concreteN = concreteShearN(shear, d, asMm2);
-        if (!(designShearN(shear, d, concreteN) >= vuN)) mask |= SHEAR;
-        const limitMm = stirrupSpacingLimitMm(shear, vuN, d, concreteN);
-        if (limitMm !== Infinity && !isWithinLength(shear.spacingMm, limitMm)) mask |= STIRRUP_SPACING;
-      }
+      mask |= detailing.placedMaskAt(j, h, d, depths[nc]!);
+      if (seismic !== null) mask |= seismic.placedMaskAt(h, d, layers, nominal);
       tally.countMask(mask);
 
       if (mask !== 0 && (mask & (mask - 1)) !== 0 && recorder === null) continue;
-      writeAmounts(amounts, h, measures);
+      writeAmounts(amounts, h, detailing, measures);
       measures[MU_PHI] = muPhi;
       measures[DESIGN_STRENGTH] = design;
       measures[UTILISATION] = muNmm === null ? NaN : muNmm / design;

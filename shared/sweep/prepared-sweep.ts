@@ -4,8 +4,10 @@ import { compressedOverhang, flangeOf, type Overhang, type ResolvedFlange } from
 import { isWithinLength } from '../engine/limits.ts';
 import { pricingFor, unformedSides, type Pricing, type UnformedSides } from '../engine/pricing.ts';
 import type { RuleSet } from '../engine/rules/rule-set.ts';
+import type { SeismicRules } from '../engine/rules/seismic-rules.ts';
 import { ruleSetOf } from '../engine/rules/rule-set-of.ts';
 import type { Stirrup } from '../engine/section.ts';
+import { seismicRulesOf } from '../engine/seismic.ts';
 import { shearConstantsOf, type ShearConstants } from '../engine/shear.ts';
 import { stirrupShape, type StirrupShape } from '../engine/stirrup-length.ts';
 import { faceTable, type FaceEntry } from './face-table.ts';
@@ -48,6 +50,12 @@ export interface PreparedSweep {
   readonly space: Space;
   readonly ruleSet: RuleSet;
   readonly concretes: readonly ConcreteConstants[];
+  /** Null where no seismic system is asked. */
+  readonly seismic: SeismicRules | null;
+  /** Side bars; null where they are not asked, and no bar where none was chosen. */
+  readonly skin: { readonly bar: Bar | null } | null;
+  /** 1 at each depth of the space that asks for side bars; null where none does. */
+  readonly deep: Uint8Array | null;
   /** Placements by width × cover × stirrup, made on first use and dropped when many. */
   readonly placements: Map<number, Placement>;
 }
@@ -72,7 +80,19 @@ export function prepareSweep(problem: SweepProblem, view: View): PreparedSweep {
       pricing: pricingFor(basis.rates, fcMPa),
     };
   });
-  return { problem, view, space, ruleSet, concretes, placements: new Map() };
+  const { skinBar } = basis;
+  const skin =
+    skinBar === undefined
+      ? null
+      : { bar: skinBar === null ? null : getBar(basis.barStandard, skinBar, ['basis', 'skinBar']) };
+  const deep = Uint8Array.from(space.depthsMm, (h) => (skin && ruleSet.isSkinSteelAsked(h) ? 1 : 0));
+  return {
+    ...{ problem, view, space, ruleSet, concretes },
+    seismic: seismicRulesOf(ruleSet, basis),
+    skin,
+    deep: deep.includes(1) ? deep : null,
+    placements: new Map(),
+  };
 }
 
 /** The placement of the n-th combination of width, cover and stirrup (stirrup innermost). */
@@ -98,6 +118,7 @@ export function placementAt(prepared: PreparedSweep, combination: number): Place
     maxLayers: rules.maxLayers,
   };
   const flange = flangeOf({ widthMm, flange: space.flange }, ruleSet);
+  const judged = { rules, throughMm: prepared.seismic?.continuousBars?.leastDiameterMm ?? 0 };
   const placement = {
     widthMm,
     coverMm,
@@ -111,8 +132,8 @@ export function placementAt(prepared: PreparedSweep, combination: number): Place
     shear: space.fcMPa.map((fcMPa) =>
       shearConstantsOf(ruleSet.shear, { fcMPa, widthMm, coverMm, stirrup, stirrupBar, fytMPa: basis.fytMPa }),
     ),
-    tension: faceTable('tension', space.tension, context, rules),
-    compression: faceTable('compression', space.compression, context, rules),
+    tension: faceTable('tension', space.tension, context, judged),
+    compression: faceTable('compression', space.compression, context, judged),
   };
   prepared.placements.set(combination, placement);
   return placement;

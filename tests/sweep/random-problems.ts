@@ -12,6 +12,8 @@ import {
   type Flange,
   type Rates,
 } from '#shared/engine/section.ts';
+import { RULE_SETS } from '#shared/engine/rules/rule-sets.ts';
+import { seismicSystemsOf } from '#shared/engine/seismic.ts';
 import type { SpaceDefinition, SteelSetsDefinition, SweepProblem } from '#shared/sweep/problem.ts';
 
 /** Random sweep problems of a few hundred sections, over every code, bar standard, convention and rule. */
@@ -112,6 +114,7 @@ export const randomProblem: fc.Arbitrary<SweepProblem> = fc
       ),
       depth: fc.oneof(
         listOf(150, 1200, 4),
+        listOf(850, 1600, 3),
         fc.constant({ kind: 'range' as const, from: 350, to: 800, step: 150 }),
       ),
       fc: fc.constant({ kind: 'list' as const, values: fcMPa }),
@@ -123,6 +126,7 @@ export const randomProblem: fc.Arbitrary<SweepProblem> = fc
             bar: fc.constantFrom(...BARS[standard].slice(0, 3).map((b) => b.designation)),
             legs: fc.integer({ min: 2, max: 4 }),
             spacingMm: between(75, 300),
+            isDesigned: fc.constantFrom(undefined, false, true, true),
           }),
         ),
         { minLength: 1, maxLength: 2 },
@@ -131,18 +135,24 @@ export const randomProblem: fc.Arbitrary<SweepProblem> = fc
       compression: isArea ? areaSets(0) : barSets(standard, 1, true),
       flange: orNull(flange),
     });
-    const basis = fc.record({
-      ruleSet: fc.constantFrom(...RULE_SET_IDS),
-      barStandard: fc.constant(standard),
-      esMPa: fc.constantFrom(200000, 199948),
-      maxAggregateMm: between(10, 40),
-      bendAllowance: fc.constantFrom(...BEND_ALLOWANCES),
-      displacedConcrete: fc.constantFrom(...DISPLACED_CONCRETE),
-      yieldCurvatureAt: fc.constantFrom(...YIELD_CURVATURE_AT),
-      fytMPa: fc.constantFrom(280, 420, 550),
-      slabMm: fc.constantFrom(0, 150),
-      rates: orNull(ratesOf(fcMPa)),
-    });
+    const basis = fc.constantFrom(...RULE_SET_IDS).chain((ruleSet) =>
+      fc.record({
+        ruleSet: fc.constant(ruleSet),
+        seismicSystem: fc.constantFrom(undefined, ...seismicSystemsOf(RULE_SETS[ruleSet])),
+        barStandard: fc.constant(standard),
+        esMPa: fc.constantFrom(200000, 199948),
+        maxAggregateMm: between(10, 40),
+        bendAllowance: fc.constantFrom(...BEND_ALLOWANCES),
+        displacedConcrete: fc.constantFrom(...DISPLACED_CONCRETE),
+        yieldCurvatureAt: fc.constantFrom(...YIELD_CURVATURE_AT),
+        fytMPa: fc.constantFrom(280, 420, 550),
+        slabMm: fc.constantFrom(0, 150),
+        skinBar: fc.constantFrom(undefined, null, ...BARS[standard].slice(1, 3).map((b) => b.designation)),
+        stirrupStepMm: fc.constantFrom(undefined, 10, 25.4),
+        leastStirrupSpacingMm: fc.constantFrom(undefined, 100),
+        rates: orNull(ratesOf(fcMPa)),
+      }),
+    );
     const demand = fc.record({
       muNmm: orNull(between(0, 9e8)),
       ductilityTarget: orNull(between(1, 12)),
