@@ -1,4 +1,5 @@
-import type { CheckResult, DuctilityResult, FlexureResult, SkinSteel } from './evaluation.ts';
+import type { DefinedDuctility } from './defined-ductility.ts';
+import type { CheckResult, FlexureResult, SkinSteel } from './evaluation.ts';
 import type { ResolvedStirrups } from './resolved-stirrups.ts';
 import type { RuleSet } from './rules/rule-set.ts';
 import type { SeismicRules } from './rules/seismic-rules.ts';
@@ -17,7 +18,8 @@ export interface CheckContext {
   readonly stirrups: ResolvedStirrups;
   readonly skin: SkinSteel | null;
   readonly flexure: FlexureResult | null;
-  readonly ductility: DuctilityResult | null;
+  /** μφ as the basis measures it. */
+  readonly measured: DefinedDuctility | null;
 }
 
 const finite = (value: number | null) => (value !== null && Number.isFinite(value) ? value : null);

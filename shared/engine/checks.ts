@@ -84,17 +84,18 @@ function strength({ flexure, demand, ruleSet }: CheckContext): CheckResult | nul
   });
 }
 
-function curvatureDuctility({ ductility, demand }: CheckContext): CheckResult | null {
-  if (!ductility || demand.ductilityTarget === null) return null;
+function curvatureDuctility({ measured, demand }: CheckContext): CheckResult | null {
+  if (!measured || demand.ductilityTarget === null) return null;
+  const { value, definition } = measured;
   return check({
     id: 'curvature-ductility',
-    passes: ductility.curvatureDuctility >= demand.ductilityTarget,
+    passes: value !== null && value >= demand.ductilityTarget,
     demand: demand.ductilityTarget,
-    capacity: ductility.curvatureDuctility,
-    ratio: demand.ductilityTarget / ductility.curvatureDuctility,
+    capacity: value,
+    ratio: value === null ? null : demand.ductilityTarget / value,
     kind: 'ratio',
     clause: PROJECT_TARGET,
-    reason: ductility.definition,
+    reason: definition,
   });
 }
 

@@ -1,5 +1,7 @@
 import type { CurveModel } from './curve-model.ts';
-import type { CurvePoint, UltimateCause } from './curve-point.ts';
+import type { CurvePoint } from './curve-point.ts';
+import type { DefinedDuctility } from './defined-ductility.ts';
+import type { UltimateCause } from './ultimate-cause.ts';
 import type { Trace } from './curve-trace.ts';
 
 /** Two straight lines that stand for a curve. */
@@ -7,13 +9,6 @@ export interface Bilinear {
   readonly yieldCurvaturePerMm: number;
   readonly momentNmm: number;
   readonly rule: string;
-}
-
-/** A curvature ductility never goes without the sentence that says what it is. */
-export interface DefinedDuctility {
-  /** Null where no bar yields. */
-  readonly value: number | null;
-  readonly definition: string;
 }
 
 export interface CurveDuctility {

@@ -11,10 +11,6 @@ export interface CurvePoint {
   readonly tensionStrain: number;
 }
 
-export const ULTIMATE_CAUSES = ['concrete-crushing', 'core-crushing', 'bar-rupture', 'moment-drop'] as const;
-/** What ends a curve: crushing of the extreme fibre or of the core's edge, a bar that breaks, 20 % lost from the peak. */
-export type UltimateCause = (typeof ULTIMATE_CAUSES)[number];
-
 /** Least distance of a trial from the highest point, over the bracket: keeps both sides moving where the crown is a kink. */
 const LEAST_TRIAL = 0.03;
 

@@ -1,8 +1,10 @@
+import { asBuilt } from './as-built.ts';
 import { curveChoicesOf } from './curve-basis.ts';
 import { getBar } from './bars.ts';
 import type { CurveChoices } from './curve-choices.ts';
 import { endOf, type Bilinear } from './curve-marks.ts';
-import type { CurvePoint, UltimateCause } from './curve-point.ts';
+import type { CurvePoint } from './curve-point.ts';
+import type { UltimateCause } from './ultimate-cause.ts';
 import { ductilityConventions, type DuctilityByConvention } from './ductility-conventions.ts';
 import type { EvaluationContext } from './evaluate.ts';
 import { flexureAtUltimate } from './flexure.ts';
@@ -113,9 +115,12 @@ export function secondOpinionReport(section: SectionInput, context: EvaluationCo
   return secondOpinionOf({ section, layout: drawn.layout, basis, flexure, curve: drawn.curve });
 }
 
-function drawnCurve(section: SectionInput, { basis, rules }: EvaluationContext) {
-  const { layout, arrangement } = placeSteel(section, basis, rules.maxLayers);
+function drawnCurve(given: SectionInput, context: EvaluationContext) {
+  const { basis, rules } = context;
+  const placed = placeSteel(given, basis, rules.maxLayers);
+  const { layout, arrangement } = placed;
   if (!layout) return null;
+  const section = asBuilt(given, context, placed);
   const choices = curveChoicesOf(basis);
   return { layout, curve: momentCurvature({ section, layout, arrangement, basis, choices }) };
 }

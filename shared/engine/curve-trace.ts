@@ -8,8 +8,8 @@ import {
   slopeBetween,
   withPeak,
   type CurvePoint,
-  type UltimateCause,
 } from './curve-point.ts';
+import type { UltimateCause } from './ultimate-cause.ts';
 import {
   balancedCurvature,
   balancedTopStrain,

@@ -1,4 +1,5 @@
 import { barTotal, checksOf } from './checks.ts';
+import { curveDuctilityOf, measuredDuctility } from './curve-ductility.ts';
 import { ductilityOf, elasticSection } from './elastic.ts';
 import type { Evaluation, FlexureResult, Quantities } from './evaluation.ts';
 import { assertFlange, flangeOf } from './flange.ts';
@@ -51,6 +52,9 @@ export function evaluatePlaced(
   const elastic = layout && elasticSection(section, layout, basis, ruleSet);
   const ductility =
     layout && flexure && elastic && ductilityOf(section, layout, basis, { flexure, elastic, rules: ruleSet });
+  const curveDuctility =
+    layout && curveDuctilityOf(section, { layout, arrangement: placed.arrangement }, basis);
+  const measured = measuredDuctility(basis, ductility, curveDuctility);
   const detailing = { seismic, stirrups, skin };
   const checks = checksOf({
     section,
@@ -60,12 +64,12 @@ export function evaluatePlaced(
     ruleSet,
     placed,
     flexure,
-    ductility,
+    measured,
     ...detailing,
   });
   const measures = measuresOf(section, demand, quantities, {
     flexure,
-    curvatureDuctility: ductility?.curvatureDuctility ?? null,
+    curvatureDuctility: measured?.value ?? null,
   });
   return {
     engineVersion: ENGINE_VERSION,
@@ -83,6 +87,7 @@ export function evaluatePlaced(
     flexure,
     elastic,
     ductility,
+    curveDuctility,
     checks,
     meetsListedChecks: flexure !== null && checks.every((check) => check.passes),
     measures,

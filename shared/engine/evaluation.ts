@@ -1,7 +1,9 @@
 import type { ResolvedFlange } from './flange.ts';
+import type { DefinedDuctility } from './defined-ductility.ts';
 import type { Measures } from './measures.ts';
 import type { SpacingLimit } from './stirrup-design.ts';
 import type { BendAllowance, DisplacedConcrete, Face, RuleSetId, YieldCurvatureAt } from './section.ts';
+import type { UltimateCause } from './ultimate-cause.ts';
 
 /** Closed list of checks, in the order they are shown; at most 31, since bit i of a failure mask is CHECK_IDS[i]. */
 export const CHECK_IDS = [
@@ -160,6 +162,16 @@ export interface DuctilityResult {
   readonly definition: string;
 }
 
+/** Ductility read off the full curve, by the laws of the basis. Curvatures 1/mm; null where no bar yields. */
+export interface CurveDuctilityResult {
+  readonly curvatureFirstYieldPerMm: number | null;
+  readonly curvatureBilinearYieldPerMm: number | null;
+  readonly curvatureUltimatePerMm: number;
+  readonly cause: UltimateCause;
+  readonly byFirstYield: DefinedDuctility;
+  readonly byBilinearYield: DefinedDuctility;
+}
+
 export interface SteelLine {
   readonly bar: string;
   readonly position: 'tension' | 'compression' | 'skin' | 'stirrups';
@@ -264,7 +276,10 @@ export interface Evaluation {
   /** Null when the bars cannot be placed or there is no tension steel. */
   readonly flexure: FlexureResult | null;
   readonly elastic: ElasticResult | null;
+  /** The closed path's, whatever the basis measures by. */
   readonly ductility: DuctilityResult | null;
+  /** Null where the basis measures by the closed path, absent in results from before it had the choice. */
+  readonly curveDuctility?: CurveDuctilityResult | null | undefined;
   readonly checks: readonly CheckResult[];
   readonly meetsListedChecks: boolean;
   readonly measures: Measures;

@@ -1,6 +1,6 @@
 import type { ConcreteLaw } from './concrete-laws/concrete-law.ts';
 import type { CurveModel } from './curve-model.ts';
-import type { UltimateCause } from './curve-point.ts';
+import type { UltimateCause } from './ultimate-cause.ts';
 import { compressedOverhang, flangeOf } from './flange.ts';
 import type { DisplacedConcrete, SectionInput } from './section.ts';
 import type { SteelLayout } from './steel-layout.ts';

@@ -1,6 +1,7 @@
 import { bilinearOf, ductilitiesOf, type Bilinear, type CurveDuctility } from './curve-marks.ts';
 import { curveModel, type CurveInput, type CurveModel } from './curve-model.ts';
-import type { CurvePoint, UltimateCause } from './curve-point.ts';
+import type { CurvePoint } from './curve-point.ts';
+import type { UltimateCause } from './ultimate-cause.ts';
 import { Tracer, type Trace } from './curve-trace.ts';
 
 /** Nonlinear moment–curvature of one section: sagging, no axial force. Curvature 1/mm, moment N·mm. */

@@ -1,8 +1,9 @@
-import { curveChoicesOf, ductilityMeasureOf, isCurveMeasure } from './curve-basis.ts';
+import { asBuilt } from './as-built.ts';
+import { ductilityMeasureOf } from './curve-basis.ts';
+import { curveDuctilityOf, measuredDuctility } from './curve-ductility.ts';
 import { ductilityOf, elasticSection } from './elastic.ts';
 import type { EvaluationContext } from './evaluate.ts';
 import { flexureAtUltimate } from './flexure.ts';
-import { momentCurvature } from './moment-curvature.ts';
 import { ruleSetOf } from './rules/rule-set-of.ts';
 import type { DuctilityMeasure, Reinforcement, SectionInput } from './section.ts';
 import { placeSteel } from './steel-layout.ts';
@@ -42,7 +43,8 @@ const TWIN_IS =
  * @returns null where the section has no compression steel or its bars cannot be placed.
  * @throws InvalidSectionError for an unknown bar.
  */
-export function twinOf(section: SectionInput, context: EvaluationContext): TwinComparison | null {
+export function twinOf(given: SectionInput, context: EvaluationContext): TwinComparison | null {
+  const section = asBuilt(given, context, placeSteel(given, context.basis, context.rules.maxLayers));
   const own = valuesOf(section, context);
   if (!own || own.values.asPrimeMm2 === 0) return null;
   const twin = valuesOf({ ...section, reinforcement: withoutCompression(section.reinforcement) }, context);
@@ -68,11 +70,7 @@ function valuesOf(section: SectionInput, { basis, rules }: EvaluationContext) {
   const flexure = flexureAtUltimate(section, layout, basis, ruleSet);
   const elastic = elasticSection(section, layout, basis, ruleSet);
   const closed = ductilityOf(section, layout, basis, { flexure, elastic, rules: ruleSet });
-  const curve = isCurveMeasure(basis)
-    ? momentCurvature({ section, layout, arrangement, basis, choices: curveChoicesOf(basis) }).ductility
-    : null;
-  const byMeasure =
-    ductilityMeasureOf(basis) === 'curve-bilinear' ? curve?.byBilinearYield : curve?.byFirstYield;
+  const curve = curveDuctilityOf(section, { layout, arrangement }, basis);
   const values: TwinValues = {
     asMm2: layout.asMm2,
     asPrimeMm2: layout.asPrimeMm2,
@@ -84,7 +82,7 @@ function valuesOf(section: SectionInput, { basis, rules }: EvaluationContext) {
     curvatureYieldPerMm: closed.curvatureYieldPerMm,
     curvatureUltimatePerMm: closed.curvatureUltimatePerMm,
     curvatureDuctility: closed.curvatureDuctility,
-    curveDuctility: byMeasure?.value ?? null,
+    curveDuctility: curve && (measuredDuctility(basis, closed, curve)?.value ?? null),
   };
   return { values, definition: closed.definition };
 }
