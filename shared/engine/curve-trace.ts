@@ -30,7 +30,14 @@ const NEAR_DROP = 0.82;
 const NEAR_PEAK = 0.98;
 /** Share of a limiting strain by which a point is past it, and not at it but for rounding. */
 const PAST = 1e-7;
+/** Share of a limiting strain by which the last point may miss it. */
+const SHORT = 1e-3;
+/** Steps past the expected end, over the curvature before. */
+const BEYOND = 1.03;
 const PEAK_STEPS = 5;
+/** Steps where the crown is as sharp as that of a slab being lost: until both neighbours are within this share of it. */
+const MOST_PEAK_STEPS = 14;
+const CROWN_SHARE = 0.002;
 /** Difference from the expected top strain, over it, that counts as a leap: elsewhere, and close to a bar's rupture. */
 const LEAP = 0.25;
 const LEAP_NEAR_RUPTURE = 0.02;
@@ -155,9 +162,9 @@ export class Tracer {
     const pending: number[] = [];
     let firstYield: CurvePoint | null = null;
     let { cause } = end;
-    for (let next = 0; next < grid.length || pending.length > 0;) {
-      const curvature = pending.pop() ?? grid[next++]!;
+    for (let next = 0; next < grid.length || pending.length > 0 || this.isShort(points, cause);) {
       const before = points[points.length - 1];
+      const curvature = pending.pop() ?? grid[next++] ?? BEYOND * before!.curvaturePerMm;
       const guess = extrapolated(curvature, points);
       let point = this.pointAt(curvature, guess);
       if (
@@ -170,6 +177,8 @@ export class Tracer {
       }
       const early = before && this.endWithin(before, point);
       if (early) ({ point, cause } = early);
+      // the end lies behind the curvature already reached: the state before is the last
+      if (before && point.curvaturePerMm <= before.curvaturePerMm) break;
       const isYielding = before && !firstYield && excess(point, this.yielded) <= 0;
       const isCresting = before && excess(before, this.crested) < 0 && excess(point, this.crested) > 0;
       if (isYielding) firstYield = this.reaching(this.yielded, before, point);
@@ -180,6 +189,15 @@ export class Tracer {
       if (early) break;
     }
     return { points, firstYield, cause };
+  }
+
+  /**
+   * The walk has come to the expected curvature on another branch: where a wide slab is lost, the state of the limiting
+   * strain may lie behind a curvature that fell back. A beam bent further goes on to the most its branch can take.
+   */
+  private isShort(points: readonly CurvePoint[], cause: UltimateCause): boolean {
+    const held = cause === 'bar-rupture' ? this.broken : this.crushed;
+    return Math.abs(excess(points[points.length - 1]!, held)) > SHORT * Math.abs(held.strain);
   }
 
   private isLeap({ topStrain, tensionStrain }: CurvePoint, guess: number): boolean {
@@ -272,7 +290,12 @@ export class Tracer {
     let left = points[at - 1];
     let right = points[at + 1];
     if (!left || !right) return best;
-    for (let step = 0; step < PEAK_STEPS; step++) {
+    for (let step = 0; step < MOST_PEAK_STEPS; step++) {
+      const furthest = Math.max(
+        Math.abs(best.momentNmm - left.momentNmm),
+        Math.abs(best.momentNmm - right.momentNmm),
+      );
+      if (step >= PEAK_STEPS && furthest < CROWN_SHARE * best.momentNmm) break;
       const point = this.pointAt(crownOf(left, best, right), best.topStrain);
       const isLeft = point.curvaturePerMm < best.curvaturePerMm;
       if (sign * (point.momentNmm - best.momentNmm) > 0) {

@@ -182,6 +182,7 @@ export function fibreCurve(model: CurveModel, strips = DEFAULT_STRIPS): FibreCur
   const pastRupture = (s: FibreState) => -strainAt(s, model.deepestMm) - model.steel.ruptureStrain;
   const states: FibreState[] = [];
   let firstYield: FibreState | null = null;
+  let furthest = 0;
   for (let topStrain = STRAIN_STEP; topStrain < LARGEST_STRAIN; topStrain += stepFrom(topStrain)) {
     const within = [states[states.length - 1]?.topStrain ?? 0, topStrain] as const;
     let state = fibreState(section, topStrain);
@@ -195,7 +196,9 @@ export function fibreCurve(model: CurveModel, strips = DEFAULT_STRIPS): FibreCur
       state = turning(section, within, pastRupture);
       cause = 'bar-rupture';
     }
-    states.push(state);
+    // a curvature that falls back as concrete is lost is not passed by a beam bent further and further
+    if (state.curvaturePerMm > furthest) states.push(state);
+    furthest = Math.max(furthest, state.curvaturePerMm);
     if (cause) return cutAtDrop(section, states, { firstYield, cause });
   }
   throw new Error('a curve without an end');
@@ -221,29 +224,47 @@ function cutAtDrop(
     const kept = KEPT_SHARE * peak.momentNmm;
     if (state.momentNmm >= kept) continue;
     const from = Math.max(states[i - 1]!.topStrain, peak.topStrain);
-    const ultimate = turning(section, [from, state.topStrain], ({ momentNmm }) => kept - momentNmm);
+    const dropped = turning(section, [from, state.topStrain], ({ momentNmm }) => kept - momentNmm);
+    const ultimate = notFallenBack(section, states[i - 1]!, dropped);
     return { firstYield: upTo(ultimate), peak, ultimate, cause: 'moment-drop' };
   }
   const ultimate = states[states.length - 1]!;
   return { firstYield: upTo(ultimate), peak: crown(section, states, best), ultimate, cause };
 }
 
-/** The highest state between the neighbours of one, by cutting off the lower third. */
+/** An end whose curvature has fallen back is reached in a leap, from the state of most curvature before it. */
+function notFallenBack(section: FibreSection, before: FibreState, end: FibreState): FibreState {
+  if (end.curvaturePerMm >= before.curvaturePerMm) return end;
+  const most = highestBetween(section, [before.topStrain, end.topStrain], (s) => s.curvaturePerMm);
+  return most.curvaturePerMm > before.curvaturePerMm ? most : before;
+}
+
+/** The highest state between the neighbours of one. */
 function crown(section: FibreSection, states: readonly FibreState[], best: number): FibreState {
   const highest = states[best]!;
   const right = states[best + 1];
   if (!right) return highest;
-  let low = states[best - 1]?.topStrain ?? 0;
-  let high = right.topStrain;
+  const bounds = [states[best - 1]?.topStrain ?? 0, right.topStrain] as const;
+  const found = highestBetween(section, bounds, ({ momentNmm }) => momentNmm);
+  return found.momentNmm > highest.momentNmm ? found : highest;
+}
+
+/** The state between two top strains with the most of a measure, by cutting off the lower third. */
+function highestBetween(
+  section: FibreSection,
+  [from, to]: readonly [number, number],
+  measure: (state: FibreState) => number,
+): FibreState {
+  let low = from;
+  let high = to;
   for (let i = 0; i < CROWN_CUTS; i++) {
     const third = (high - low) / 3;
     const a = fibreState(section, low + third);
     const b = fibreState(section, high - third);
-    if (a.momentNmm < b.momentNmm) low += third;
+    if (measure(a) < measure(b)) low += third;
     else high -= third;
   }
-  const found = fibreState(section, (low + high) / 2);
-  return found.momentNmm > highest.momentNmm ? found : highest;
+  return fibreState(section, (low + high) / 2);
 }
 
 /** What the rectangular block needs: the section, its layers, and the rules that give the block. */

@@ -187,7 +187,7 @@ const curves = {
   'curve-strips': {
     kind: 'comparison',
     statement:
-      'The moment–curvature curve and an independent summation of strips agree: peak moment within 0.5 %, yield and ultimate curvature within 2 %, or within these with finer strips, or at an end that is only touched',
+      'The moment–curvature curve and an independent summation of strips agree: peak moment within 0.5 %, yield and ultimate curvature within 2 %, or within these with finer strips, at an end that is only touched, or where the section has more than one axis',
     of: 'sections',
     runs: 5500,
     seed: 52,

@@ -3,6 +3,7 @@ import { Tracer } from '#shared/engine/curve-trace.ts';
 import { fibreBlockState, fibreCurve, type FibreCurve } from '#shared/engine/fibre.ts';
 import { flexureAtUltimate } from '#shared/engine/flexure.ts';
 import { momentCurvature, type MomentCurvature } from '#shared/engine/moment-curvature.ts';
+import { emptyBalance, netForceN } from '#shared/engine/section-balance.ts';
 import { ruleSetOf } from '#shared/engine/rules/rule-set-of.ts';
 import { PROPERTIES } from '#shared/verification/properties.ts';
 import { randomCurves } from './random-curve.ts';
@@ -50,10 +51,31 @@ function isTouching(curve: MomentCurvature, fibre: FibreCurve): boolean {
   });
 }
 
+/**
+ * At the peak's own strain the section has more than one axis, as where a wide slab is lost beside a confined core: the
+ * halving of the axis and the walk along the curve may each take another.
+ */
+function hasSeveralAxes({ model, peak }: MomentCurvature): boolean {
+  const out = emptyBalance();
+  const axes = Array.from({ length: 400 }, (_, i) => ((i + 0.5) / 400) * model.deepestMm);
+  const isPushed = axes.map((axisMm) => {
+    const state = { curvature: peak.topStrain / axisMm, topStrain: peak.topStrain };
+    return netForceN(model, 'cracked', state, out) > 0;
+  });
+  return isPushed.filter((pushed, i) => i > 0 && pushed !== isPushed[i - 1]).length > 1;
+}
+
 describe('the curve against the summation of strips', () => {
   const property = PROPERTIES['curve-strips'];
   it(property.statement, () => {
-    const counts = { compared: 0, close: 0, withFinerStrips: 0, touching: 0, causesDiffer: 0 };
+    const counts = {
+      compared: 0,
+      close: 0,
+      withFinerStrips: 0,
+      touching: 0,
+      severalAxes: 0,
+      causesDiffer: 0,
+    };
     const worst = { strength: 0, yield: 0, ultimate: 0 };
     const causes: Record<string, number> = {};
     const unexplained: unknown[] = [];
@@ -73,12 +95,16 @@ describe('the curve against the summation of strips', () => {
       const finer = differences(curve, fibreCurve(curve.model, FINE_STRIPS));
       if (isClose(finer)) counts.withFinerStrips++;
       else if (finer.strength <= STRENGTH && isTouching(curve, fibre)) counts.touching++;
+      else if (hasSeveralAxes(curve)) counts.severalAxes++;
       else unexplained.push([input.choices.concreteLaw, curve.cause, fibre.cause, d, finer]);
     }
     console.log(`  ${JSON.stringify({ ...counts, ...worst, causes })}`);
     expect(unexplained).toEqual([]);
     expect(counts.compared).toBeGreaterThanOrEqual(property.atLeast.count);
-    expect(counts.withFinerStrips + counts.touching).toBeLessThan(0.003 * counts.compared);
+    expect(counts.withFinerStrips + counts.touching + counts.severalAxes).toBeLessThan(
+      0.003 * counts.compared,
+    );
+    expect(counts.severalAxes).toBeLessThan(5);
     for (const cause of ['concrete-crushing', 'core-crushing', 'bar-rupture', 'moment-drop'])
       expect(causes[cause]).toBeGreaterThan(20);
   });

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import type { CurveInput, CurveModel } from '#shared/engine/curve-model.ts';
 import { momentCurvature } from '#shared/engine/moment-curvature.ts';
-import type { Layer, SectionInput } from '#shared/engine/section.ts';
+import type { Flange, Layer, SectionInput } from '#shared/engine/section.ts';
 import { placeSteel } from '#shared/engine/steel-layout.ts';
 import { PROPERTIES } from '#shared/verification/properties.ts';
 import { randomCurves } from './random-curve.ts';
@@ -18,6 +18,7 @@ function resultants(model: CurveModel, curvature: number, topStrain: number) {
   };
   const { core, cover, coreTopMm: y1, coreBottomMm: y2 } = model;
   const strips = [strip(cover, model.widthMm, [0, model.depthMm])];
+  strips.push(strip(cover, model.overhangMm, [model.overhangTopMm, model.overhangBottomMm]));
   if (core) strips.push(strip(core, model.coreWidthMm, [y1, y2]), strip(cover, -model.coreWidthMm, [y1, y2]));
   const concrete = strips.reduce((sum, { force }) => sum + force, 0);
   let force = concrete;
@@ -37,6 +38,11 @@ function resultants(model: CurveModel, curvature: number, topStrain: number) {
 const withSection = (input: CurveInput, section: SectionInput): CurveInput => {
   const { layout, arrangement } = placeSteel(section, input.basis, 2);
   return { ...input, section, layout: layout!, arrangement };
+};
+
+const twice = ({ width, ...flange }: Flange): Flange => {
+  if (width.kind !== 'given') throw new Error('widths as given only');
+  return { ...flange, thicknessMm: 2 * flange.thicknessMm, width: { ...width, widthMm: 2 * width.widthMm } };
 };
 
 const withLayers = (section: SectionInput, change: (layer: Layer) => Layer): SectionInput => {
@@ -106,7 +112,12 @@ describe('moment–curvature curves', () => {
     })) {
       const { section } = input;
       const doubled = withLayers(
-        { ...section, widthMm: 2 * section.widthMm, depthMm: 2 * section.depthMm },
+        {
+          ...section,
+          widthMm: 2 * section.widthMm,
+          depthMm: 2 * section.depthMm,
+          flange: section.flange && twice(section.flange),
+        },
         (layer) => ({ ...layer, depthMm: 2 * layer.depthMm, areaMm2: 4 * layer.areaMm2 }),
       );
       const one = momentCurvature(input);

@@ -1,14 +1,20 @@
 import fc from 'fast-check';
 import { CONCRETE_LAW_IDS, STEEL_LAW_IDS, type CurveChoices } from '#shared/engine/curve-choices.ts';
 import type { CurveInput } from '#shared/engine/curve-model.ts';
-import { YIELD_CURVATURE_AT, type Layer, type SectionInput } from '#shared/engine/section.ts';
+import {
+  FACES,
+  FLANGE_SHAPES,
+  YIELD_CURVATURE_AT,
+  type Layer,
+  type SectionInput,
+} from '#shared/engine/section.ts';
 import { placeSteel } from '#shared/engine/steel-layout.ts';
 import { METRIC_BASIS } from '#shared/verification/layered-section.ts';
 
 const between = (min: number, max: number) => fc.double({ min, max, noNaN: true });
 const integerBetween = (min: number, max: number) => fc.integer({ min, max });
 
-/** Beams from a 150 × 200 to a 900 × 1500, steel from 0.15 to 3.5 % in up to three layers, f′c from 2500 to 12 000 psi. */
+/** Beams from a 150 × 200 to a 900 × 1500, every other with a slab at either face, steel from 0.15 to 3.5 % in up to three layers, f′c from 2500 to 12 000 psi. */
 const drawn = fc.record({
   b: between(150, 900),
   h: between(200, 1500),
@@ -24,6 +30,15 @@ const drawn = fc.record({
   spacing: between(60, 300),
   isDeducted: fc.boolean(),
   yieldCurvatureAt: fc.constantFrom(...YIELD_CURVATURE_AT),
+  slab: fc.option(
+    fc.record({
+      shape: fc.constantFrom(...FLANGE_SHAPES),
+      face: fc.constantFrom(...FACES),
+      overhangShare: between(0, 6),
+      thicknessShare: between(0.05, 0.35),
+    }),
+    { nil: null },
+  ),
 });
 type Drawn = typeof drawn extends fc.Arbitrary<infer T> ? T : never;
 
@@ -41,6 +56,12 @@ function sectionOf(d: Drawn): SectionInput {
     coverMm: d.cover,
     stirrup: { bar: d.hoop, legs: d.legs, spacingMm: d.spacing },
     reinforcement: { kind: 'layers', layers: [top, ...tension] },
+    flange: d.slab && {
+      shape: d.slab.shape,
+      face: d.slab.face,
+      thicknessMm: d.slab.thicknessShare * d.h,
+      width: { kind: 'given', widthMm: (1 + d.slab.overhangShare) * d.b },
+    },
   };
 }
 
