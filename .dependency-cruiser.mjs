@@ -69,17 +69,17 @@ const server = [
   never(
     'server-plumbing-imports-no-feature',
     '^server/(db|http|mail|files|compute)/',
-    '^server/(features/|jobs/worker/|app[.]ts$|main[.]ts$|cli/)',
+    '^server/(features/|jobs/worker/|app[.]ts$|main[.]ts$|worker[.]ts$|cli/)',
   ),
   never(
     'job-queue-imports-no-feature',
     '^server/jobs/[^/]+[.]ts$',
-    '^server/(features/|app[.]ts$|main[.]ts$|cli/)',
+    '^server/(features/|app[.]ts$|main[.]ts$|worker[.]ts$|cli/)',
   ),
   never(
     'server-features-import-no-assembly',
     '^server/features/',
-    '^server/(jobs/worker/|app[.]ts$|main[.]ts$|cli/)',
+    '^server/(jobs/worker/|app[.]ts$|main[.]ts$|worker[.]ts$|cli/)',
   ),
   never(
     'server-features-do-not-see-each-other',
@@ -87,7 +87,11 @@ const server = [
     '^server/features/',
     '^server/features/$1/',
   ),
-  never('job-handlers-import-no-assembly', '^server/jobs/worker/', '^server/(app|main)[.]ts$|^server/cli/'),
+  never(
+    'job-handlers-import-no-assembly',
+    '^server/jobs/worker/',
+    '^server/(app|main|worker)[.]ts$|^server/cli/',
+  ),
   never('app-does-not-import-main', '^server/app[.]ts$', '^server/main[.]ts$'),
 ];
 
@@ -96,16 +100,16 @@ const client = [
   never(
     'client-lib-is-lowest',
     '^client/src/lib/',
-    '^client/src/(ui|charts|drawing|sheet|study|features|app)/',
+    '^client/src/(ui|charts|drawing|sheet|study|section-fields|features|app)/',
   ),
   never(
     'client-ui-imports-only-lib',
     '^client/src/ui/',
-    '^client/src/(charts|drawing|sheet|study|features|app)/',
+    '^client/src/(charts|drawing|sheet|study|section-fields|features|app)/',
   ),
   never(
     'client-charts-import-no-feature',
-    '^client/src/(charts|drawing|sheet|study)/',
+    '^client/src/(charts|drawing|sheet|study|section-fields)/',
     '^client/src/(features|app)/',
   ),
   never('client-features-import-no-page', '^client/src/features/', '^client/src/app/'),

@@ -49,5 +49,16 @@ export function calloutsOf(section: SectionInput, geometry: SectionGeometry, uni
             yMm: drawnDepth(geometry, geometry.neutralAxisMm),
           },
         ];
-  return [...rows, ...bands, ...ties, ...axis].toSorted((a, b) => a.yMm - b.yMm);
+  return [...rows, ...bands, ...ties, ...skinCallout(geometry), ...axis].toSorted((a, b) => a.yMm - b.yMm);
+}
+
+/** Side bars of both sides in one word, at the right-hand one nearest mid-depth. */
+function skinCallout({ skinBars, depthMm }: SectionGeometry): Callout[] {
+  const rightMm = Math.max(...skinBars.map((bar) => bar.xMm));
+  const [nearest] = skinBars
+    .filter((bar) => bar.xMm === rightMm)
+    .toSorted((a, b) => Math.abs(a.yMm - depthMm / 2) - Math.abs(b.yMm - depthMm / 2));
+  if (nearest === undefined) return [];
+  const text = `${skinBars.length}-${nearest.bar} skin`;
+  return [{ text, tone: 'steel', xMm: nearest.xMm + nearest.radiusMm, yMm: nearest.yMm }];
 }

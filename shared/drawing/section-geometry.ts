@@ -1,8 +1,6 @@
 import { findBar } from '../engine/bars.ts';
 import type { Evaluation, PlacedBar } from '../engine/evaluation.ts';
 import type { BarStandard, Face, SectionInput } from '../engine/section.ts';
-import { flangeOf } from '../engine/flange.ts';
-import { RULE_SETS } from '../engine/rules/rule-sets.ts';
 import { isHogging } from '../print/face-word.ts';
 import { concreteOutline, drawnFlange, type DrawnFlange, type OutlinePoint } from './concrete-outline.ts';
 
@@ -26,7 +24,7 @@ export interface SectionGeometry {
   readonly stirrup: StirrupOutline | null;
   readonly bars: readonly BarCircle[];
   /** Side bars of a deep beam; drawn, and not counted in strength. */
-  readonly skinBars: readonly BarCircle[];
+  readonly skinBars: readonly (BarCircle & { readonly bar: string })[];
   readonly bands: readonly LayerBand[];
   readonly rows: readonly BarRow[];
   /** Depth c from the compression face. */
@@ -165,8 +163,9 @@ export function sectionGeometry(
   const fits = arrangement?.fits ?? true;
   const hogs = isHogging(section);
   const drawnY: DrawnY = (depth) => (hogs ? depthMm - depth : depth);
-  const resolved = flangeOf(section, RULE_SETS[evaluation.ruleSet.id]);
+  const resolved = evaluation.flange ?? null;
   const flange = resolved === null ? null : drawnFlange(resolved, widthMm, resolved.widthMm);
+  const stirrup = evaluation.stirrups ?? section.stirrup;
   return {
     widthMm,
     depthMm,
@@ -177,7 +176,10 @@ export function sectionGeometry(
     rightMm: flange?.rightMm ?? widthMm,
     fits,
     reason: fits ? '' : (arrangement?.reason ?? ''),
-    stirrup: arrangement === null ? null : stirrupOutline(section, arrangement.bendRadiusMm, standard),
+    stirrup:
+      arrangement === null
+        ? null
+        : stirrupOutline({ ...section, stirrup }, arrangement.bendRadiusMm, standard),
     bars: fits
       ? (arrangement?.bars ?? []).map((bar) => ({
           xMm: bar.xMm,
@@ -185,7 +187,14 @@ export function sectionGeometry(
           radiusMm: bar.diameterMm / 2,
         }))
       : [],
-    skinBars: [],
+    skinBars: fits
+      ? (evaluation.skin?.bars ?? []).map((bar) => ({
+          xMm: bar.xMm,
+          yMm: drawnY(bar.yMm),
+          radiusMm: bar.diameterMm / 2,
+          bar: bar.bar,
+        }))
+      : [],
     bands: layerBands(section, drawnY),
     rows: fits ? barRows(evaluation, drawnY) : [],
     neutralAxisMm: evaluation.flexure?.neutralAxisMm ?? null,

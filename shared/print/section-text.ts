@@ -1,5 +1,5 @@
 import type { UnitSystem } from '../contract/design-basis.ts';
-import type { BarGroup, SectionInput } from '../engine/section.ts';
+import type { BarGroup, SectionInput, Stirrup } from '../engine/section.ts';
 import { faceWord } from './face-word.ts';
 import { formatQuantity } from './format-quantity.ts';
 
@@ -33,8 +33,18 @@ export function steelText(section: SectionInput, units: UnitSystem): string {
     .join(', ');
 }
 
+/** `#3 designed, 12 in at most, 2 legs`: what was asked for, where the spacing is found for each section. */
+export function givenStirrupText(stirrup: SectionInput['stirrup'], units: UnitSystem): string {
+  if (!stirrup?.isDesigned) return stirrupText(stirrup, units);
+  const widest = formatQuantity(stirrup.spacingMm, 'length', units);
+  return `${stirrup.bar} designed, ${widest} at most, ${stirrup.legs} legs`;
+}
+
 /** `#3 @ 6 in, 2 legs`, or `none`. */
-export function stirrupText(stirrup: SectionInput['stirrup'], units: UnitSystem): string {
+export function stirrupText(
+  stirrup: Pick<Stirrup, 'bar' | 'legs' | 'spacingMm'> | null,
+  units: UnitSystem,
+): string {
   if (stirrup === null) return 'none';
   return `${stirrup.bar} @ ${formatQuantity(stirrup.spacingMm, 'length', units)}, ${stirrup.legs} legs`;
 }

@@ -34,7 +34,7 @@ export function SectionDrawing(props: SectionDrawingProps) {
   );
   const title = `Section ${sizeText(section, units)}, ${steelText(section, units)}`;
   const words = [
-    `Stirrups ${stirrupText(section.stirrup, units)}`,
+    `Stirrups ${stirrupText(evaluation.stirrups ?? section.stirrup, units)}`,
     `clear cover ${formatQuantity(section.coverMm, 'length', units)}`,
     geometry.effectiveDepthMm === null
       ? ''

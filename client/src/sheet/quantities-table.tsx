@@ -1,18 +1,14 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
-import type { Quantities, SteelLine } from '#shared/engine/evaluation.ts';
+import type { Quantities } from '#shared/engine/evaluation.ts';
+import type { SectionInput } from '#shared/engine/section.ts';
 import { formatMoney, formatQuantity } from '#shared/print/format-quantity.ts';
 import { unitLabel } from '#shared/print/units.ts';
 import { KeyValue } from '#client/src/ui/key-value.tsx';
 import { TableFrame } from '#client/src/ui/table-frame.tsx';
-
-export const POSITION_NAME: Readonly<Record<SteelLine['position'], string>> = {
-  tension: 'Bottom',
-  compression: 'Top',
-  skin: 'skin',
-  stirrups: 'Stirrups',
-};
+import { positionName } from './position-name.ts';
 
 interface QuantitiesTableProps {
+  readonly section: Pick<SectionInput, 'flange'>;
   readonly quantities: Quantities;
   readonly units: UnitSystem;
   /** For readers who may not see rates. */
@@ -20,7 +16,7 @@ interface QuantitiesTableProps {
 }
 
 /** Per length of beam: steel by bar and position with laps and waste in the open, concrete, formwork, cost, carbon. */
-export function QuantitiesTable({ quantities, units, isMoneyHidden = false }: QuantitiesTableProps) {
+export function QuantitiesTable({ section, quantities, units, isMoneyHidden = false }: QuantitiesTableProps) {
   const perLength = unitLabel('mass-per-length', units);
   const mass = (kgPerM: number) => formatQuantity(kgPerM, 'mass-per-length', units, { hideUnit: true });
   const { cost } = quantities;
@@ -50,7 +46,7 @@ export function QuantitiesTable({ quantities, units, isMoneyHidden = false }: Qu
               <th scope="row" className="font-mono font-normal">
                 {line.bar}
               </th>
-              <td>{POSITION_NAME[line.position]}</td>
+              <td>{positionName(line.position, section)}</td>
               <td className="figure">{line.position === 'stirrups' ? '' : line.count}</td>
               <td className="figure">
                 {formatQuantity(line.lengthPerM, 'length-per-length', units, { hideUnit: true })}

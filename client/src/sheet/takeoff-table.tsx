@@ -1,18 +1,20 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Takeoff } from '#shared/contract/records.ts';
+import type { SectionInput } from '#shared/engine/section.ts';
 import { formatMoney, formatQuantity } from '#shared/print/format-quantity.ts';
 import { unitLabel } from '#shared/print/units.ts';
 import { TableFrame } from '#client/src/ui/table-frame.tsx';
-import { POSITION_NAME } from './quantities-table.tsx';
+import { positionName } from './position-name.ts';
 
 interface TakeoffTableProps {
+  readonly section: Pick<SectionInput, 'flange'>;
   readonly takeoff: Takeoff;
   readonly units: UnitSystem;
   readonly hasMoney: boolean;
 }
 
 /** Everything for span × count: steel by bar and position, then concrete, formwork, and money where rates are known. */
-export function TakeoffTable({ takeoff, units, hasMoney }: TakeoffTableProps) {
+export function TakeoffTable({ section, takeoff, units, hasMoney }: TakeoffTableProps) {
   const mass = (tonnes: number) => formatQuantity(tonnes, 'tonnes', units, { hideUnit: true });
   const ton = unitLabel('tonnes', units);
   const rows: readonly (readonly [string, string, string])[] = [
@@ -54,7 +56,7 @@ export function TakeoffTable({ takeoff, units, hasMoney }: TakeoffTableProps) {
         {takeoff.lines.map((line) => (
           <tr key={`${line.position}-${line.bar}`}>
             <th scope="row" className="font-normal">
-              <span className="num">{line.bar}</span> {POSITION_NAME[line.position].toLowerCase()}
+              <span className="num">{line.bar}</span> {positionName(line.position, section)}
             </th>
             <td className="figure">{mass(line.tonnes)}</td>
             <td>{ton}</td>

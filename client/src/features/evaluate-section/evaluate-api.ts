@@ -9,4 +9,4 @@ export const useEvaluate = (projectId: string) =>
     mutationFn: (body: EvaluateInput) => call('evaluate', { params: { id: projectId }, body }),
   });
 
-export const sectionDraft = sessionDraft<SectionFormValues>('section 1');
+export const sectionDraft = sessionDraft<SectionFormValues>('section 2');

@@ -5,13 +5,16 @@ import { NumberField } from '#client/src/ui/number-field.tsx';
 import { SelectField } from '#client/src/ui/select-field.tsx';
 import type { LayerValues } from './section-form-values.ts';
 
-const FACE_OPTIONS = [
-  { value: 'tension', label: 'bottom' },
-  { value: 'compression', label: 'top' },
-] as const;
+const faceOptions = (hogs: boolean) =>
+  [
+    { value: 'tension', label: hogs ? 'top' : 'bottom' },
+    { value: 'compression', label: hogs ? 'bottom' : 'top' },
+  ] as const;
 
 interface LayersFieldProps {
   readonly units: UnitSystem;
+  /** Tension at the top. */
+  readonly hogs: boolean;
   readonly layers: readonly LayerValues[];
   readonly errors: FieldErrors;
   readonly onChange: (layers: readonly LayerValues[]) => void;
@@ -21,7 +24,7 @@ interface LayersFieldProps {
 const isFilled = (layer: LayerValues): boolean => layer.depthMm !== null || layer.areaMm2 !== null;
 
 /** Layers of steel exactly as printed: depth from the compression face, area, and the face they belong to. */
-export function LayersField({ units, layers, errors, onChange }: LayersFieldProps) {
+export function LayersField({ units, hogs, layers, errors, onChange }: LayersFieldProps) {
   const change = (place: number, part: Partial<LayerValues>) =>
     onChange(layers.map((layer, k) => (k === place ? { ...layer, ...part } : layer)));
   const sentPlace = (place: number) => layers.slice(0, place).filter(isFilled).length;
@@ -33,7 +36,7 @@ export function LayersField({ units, layers, errors, onChange }: LayersFieldProp
         return (
           <div key={k} className="grid grid-cols-[1fr_1fr_5.5rem_auto] items-start gap-4">
             <NumberField
-              label="Depth from the top"
+              label={hogs ? 'Depth from the bottom' : 'Depth from the top'}
               kind="length"
               units={units}
               value={layer.depthMm}
@@ -50,7 +53,7 @@ export function LayersField({ units, layers, errors, onChange }: LayersFieldProp
             />
             <SelectField
               label="Face"
-              options={FACE_OPTIONS}
+              options={faceOptions(hogs)}
               value={layer.face}
               onChange={(event) =>
                 change(k, { face: event.target.value === 'tension' ? 'tension' : 'compression' })

@@ -3,6 +3,7 @@ import { evaluateInputSchema, type EvaluateInput } from '#shared/contract/record
 import type { Face } from '#shared/engine/section.ts';
 import { errorsByField, type FieldErrors } from '#client/src/lib/field-errors.ts';
 import { parseGroups } from '#client/src/lib/parse-bar-groups.ts';
+import { typedFlange } from '#client/src/section-fields/flange-values.ts';
 import type { SectionFormValues } from './section-form-values.ts';
 
 export type SectionFormReading =
@@ -30,9 +31,14 @@ function readSteel(form: SectionFormValues, problems: Issue[]) {
   if (tension.length === 0 && problems.length === 0)
     problems.push({
       path: ['section', 'reinforcement', 'tension'],
-      message: 'Enter the bottom bars, as 3-#8',
+      message: `Enter the ${form.flange.shape !== 'none' && form.flange.face === 'tension' ? 'top' : 'bottom'} bars, as 3-#8`,
     });
   return { kind: 'bars', tension, compression: readFace(form.compressionText, 'compression', problems) };
+}
+
+function readStirrup({ stirrupBar, legs, spacingMm, isSpacingDesigned }: SectionFormValues) {
+  if (stirrupBar === '') return null;
+  return { bar: stirrupBar, legs, spacingMm, ...(isSpacingDesigned ? { isDesigned: true } : {}) };
 }
 
 /** Turns the typed section into the input of the contract, or into messages by the contract's paths. */
@@ -46,9 +52,9 @@ export function readSectionForm(form: SectionFormValues): SectionFormReading {
       fcMPa: form.fcMPa,
       fyMPa: form.fyMPa,
       coverMm: form.coverMm,
-      stirrup:
-        form.stirrupBar === '' ? null : { bar: form.stirrupBar, legs: form.legs, spacingMm: form.spacingMm },
+      stirrup: readStirrup(form),
       reinforcement: readSteel(form, problems),
+      flange: typedFlange(form.flange, form),
     },
     demand: {
       muNmm: form.muNmm,

@@ -9,6 +9,7 @@ import type {
   YieldCurvatureAt,
 } from '#shared/engine/section.ts';
 import { barsText } from '#shared/print/section-text.ts';
+import { flangeValues, NO_FLANGE, type FlangeValues } from '#client/src/section-fields/flange-values.ts';
 
 export interface LayerValues {
   readonly depthMm: number | null;
@@ -23,10 +24,13 @@ export interface SectionFormValues {
   readonly fcMPa: number | null;
   readonly fyMPa: number | null;
   readonly coverMm: number | null;
+  readonly flange: FlangeValues;
   /** Designation; empty for none. */
   readonly stirrupBar: string;
   readonly legs: number | null;
   readonly spacingMm: number | null;
+  /** The spacing is found by the engine, and what is typed is the widest. */
+  readonly isSpacingDesigned: boolean;
   /** Both ways of giving the steel are kept, so that switching loses nothing. */
   readonly steel: 'bars' | 'layers';
   readonly tensionText: string;
@@ -57,9 +61,11 @@ export function firstSectionForm(basis: ProjectDesignBasis): SectionFormValues {
     fcMPa: null,
     fyMPa: basis.fyMPa,
     coverMm: basis.coverMm,
+    flange: NO_FLANGE,
     stirrupBar: '',
     legs: 2,
     spacingMm: null,
+    isSpacingDesigned: false,
     steel: 'bars',
     tensionText: '',
     compressionText: '',
@@ -105,6 +111,8 @@ export function sectionForm(
     stirrupBar: stirrup?.bar ?? '',
     legs: stirrup?.legs ?? 2,
     spacingMm: stirrup?.spacingMm ?? null,
+    isSpacingDesigned: stirrup?.isDesigned === true,
+    flange: flangeValues(section.flange, demand),
     steel: reinforcement.kind,
     tensionText: isBars ? barsText(reinforcement.tension) : '',
     compressionText:

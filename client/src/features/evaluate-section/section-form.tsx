@@ -12,6 +12,8 @@ import { NumberField } from '#client/src/ui/number-field.tsx';
 import { SegmentedControl } from '#client/src/ui/segmented-control.tsx';
 import { SelectField } from '#client/src/ui/select-field.tsx';
 import type { DisplayKind } from '#shared/print/units.ts';
+import { FlangeFields } from '#client/src/section-fields/flange-fields.tsx';
+import { SpacingChoice } from '#client/src/section-fields/spacing-choice.tsx';
 import { ConventionFields } from './convention-fields.tsx';
 import { LayersField } from './layers-field.tsx';
 import { readSectionForm } from './read-section-form.ts';
@@ -85,6 +87,7 @@ export function SectionForm({ project, initial, isBusy, refusal, onEdit, onEvalu
       element.current?.querySelector<HTMLElement>('[aria-invalid="true"]')?.focus(),
     );
   };
+  const hogs = form.flange.shape !== 'none' && form.flange.face === 'tension';
   const sizes = [
     { value: '', label: 'none' },
     ...BARS[barStandard].map((bar) => ({ value: bar.designation, label: bar.designation })),
@@ -107,6 +110,16 @@ export function SectionForm({ project, initial, isBusy, refusal, onEdit, onEvalu
           {number('fyMPa', 'Steel fy', 'stress', 'section.fyMPa')}
           {number('coverMm', 'Clear cover', 'length', 'section.coverMm')}
         </div>
+        <FlangeFields
+          units={units}
+          values={form.flange}
+          demand={form}
+          basis={project.designBasis}
+          websMm={form.widthMm === null || Number.isNaN(form.widthMm) ? [] : [form.widthMm]}
+          errors={errors}
+          path="section.flange"
+          onChange={(flange) => change({ flange })}
+        />
       </Part>
       <Part title="Steel">
         <SegmentedControl
@@ -118,14 +131,14 @@ export function SectionForm({ project, initial, isBusy, refusal, onEdit, onEvalu
         {form.steel === 'bars' ? (
           <div className="grid gap-x-6 gap-y-4 sm:grid-cols-3">
             <ListField
-              label="Bottom bars"
+              label={hogs ? 'Top bars' : 'Bottom bars'}
               hint={barStandard === 'astm' ? 'as 3-#8 or 2-#8 + 2-#6' : 'as 3-25 or 2-25 + 2-20'}
               value={form.tensionText}
               error={errorUnder(errors, 'section.reinforcement.tension')}
               onChange={(tensionText) => change({ tensionText })}
             />
             <ListField
-              label="Top bars"
+              label={hogs ? 'Bottom bars' : 'Top bars'}
               hint="empty: none"
               value={form.compressionText}
               error={errorUnder(errors, 'section.reinforcement.compression')}
@@ -136,6 +149,7 @@ export function SectionForm({ project, initial, isBusy, refusal, onEdit, onEvalu
         ) : (
           <LayersField
             units={units}
+            hogs={hogs}
             layers={form.layers}
             errors={errors}
             onChange={(layers) => change({ layers })}
@@ -149,9 +163,21 @@ export function SectionForm({ project, initial, isBusy, refusal, onEdit, onEvalu
             error={errors.get('section.stirrup.bar')}
             onChange={(event) => change({ stirrupBar: event.target.value })}
           />
-          {form.stirrupBar !== '' && number('spacingMm', 'Spacing', 'length', 'section.stirrup.spacingMm')}
+          {form.stirrupBar !== '' &&
+            number(
+              'spacingMm',
+              form.isSpacingDesigned ? 'Spacing at most' : 'Spacing',
+              'length',
+              'section.stirrup.spacingMm',
+            )}
           {form.stirrupBar !== '' && number('legs', 'Legs', 'count', 'section.stirrup.legs')}
         </div>
+        {form.stirrupBar !== '' && (
+          <SpacingChoice
+            isDesigned={form.isSpacingDesigned}
+            onChange={(isSpacingDesigned) => change({ isSpacingDesigned })}
+          />
+        )}
       </Part>
       <Part title="What it must do">
         <div className="grid grid-cols-2 gap-x-6 gap-y-4 sm:grid-cols-3">
@@ -159,7 +185,7 @@ export function SectionForm({ project, initial, isBusy, refusal, onEdit, onEvalu
           {number('ductilityTarget', 'Ductility μφ at least', 'ratio', 'demand.ductilityTarget')}
           {number('depthCapMm', 'Depth h at most', 'length', 'demand.depthCapMm')}
           {number('vuN', 'Shear Vu', 'force', 'demand.vuN')}
-          {number('spanMm', 'Span', 'length', 'demand.spanMm')}
+          {number('spanMm', 'Span', 'span', 'demand.spanMm')}
           <SelectField
             label="Span is held"
             options={SUPPORT_OPTIONS}

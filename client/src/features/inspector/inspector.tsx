@@ -11,6 +11,7 @@ import type { Space } from '#shared/sweep/problem.ts';
 import { LazySectionStudy } from '#client/src/study/lazy-section-study.tsx';
 import { Fold } from '#client/src/ui/fold.tsx';
 import { SegmentedControl } from '#client/src/ui/segmented-control.tsx';
+import { BuiltSteelNote } from '#client/src/sheet/built-steel-note.tsx';
 import { LimitsNote } from '#client/src/sheet/limits-note.tsx';
 import { CheckList } from './check-list.tsx';
 import { DuctilityNote } from './ductility-note.tsx';
@@ -83,8 +84,9 @@ export function Inspector(props: InspectorProps) {
             </h2>
             <p className="text-sm text-muted">
               f′c {stress(section.fcMPa)}, fy {stress(section.fyMPa)}, stirrups{' '}
-              {stirrupText(section.stirrup, units)}
+              {stirrupText(evaluation.stirrups ?? section.stirrup, units)}
             </p>
+            <BuiltSteelNote section={section} evaluation={evaluation} units={units} />
           </header>
           <div className="flex justify-center">
             <SectionDrawing
@@ -121,7 +123,12 @@ export function Inspector(props: InspectorProps) {
               <DuctilityNote evaluation={evaluation} units={units} digits={digits} />
             </Fold>
             <Fold title={units === 'us' ? 'Quantities per foot' : 'Quantities per metre'}>
-              <QuantitiesList quantities={evaluation.quantities} units={units} digits={digits} />
+              <QuantitiesList
+                section={section}
+                quantities={evaluation.quantities}
+                units={units}
+                digits={digits}
+              />
             </Fold>
           </div>
         </div>

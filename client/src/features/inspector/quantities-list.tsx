@@ -1,28 +1,24 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Quantities, SteelLine } from '#shared/engine/evaluation.ts';
+import type { SectionInput } from '#shared/engine/section.ts';
 import { formatMoney, formatQuantity } from '#shared/print/format-quantity.ts';
+import { positionName } from '#client/src/sheet/position-name.ts';
 import { KeyValue } from '#client/src/ui/key-value.tsx';
 
-const POSITION: Readonly<Record<SteelLine['position'], string>> = {
-  tension: 'bottom',
-  compression: 'top',
-  skin: 'skin',
-  stirrups: 'stirrups',
-};
-
 interface QuantitiesListProps {
+  readonly section: Pick<SectionInput, 'flange'>;
   readonly quantities: Quantities;
   readonly units: UnitSystem;
   readonly digits: number;
 }
 
-const lineName = (line: SteelLine): string =>
-  line.position === 'stirrups'
-    ? `Stirrups ${line.bar}`
-    : `${line.count}-${line.bar} ${POSITION[line.position]}`;
+function lineName({ bar, count, position }: SteelLine, section: Pick<SectionInput, 'flange'>): string {
+  if (position === 'stirrups') return `Stirrups ${bar}`;
+  return `${count}-${bar} ${positionName(position, section)}`;
+}
 
 /** What a metre or a foot of the beam takes: steel line by line, allowances apart, concrete, formwork, cost. */
-export function QuantitiesList({ quantities, units, digits }: QuantitiesListProps) {
+export function QuantitiesList({ section, quantities, units, digits }: QuantitiesListProps) {
   const mass = (kgPerM: number) => formatQuantity(kgPerM, 'mass-per-length', units, { digits });
   const { cost, co2eKgPerM } = quantities;
   const costItems =
@@ -44,7 +40,7 @@ export function QuantitiesList({ quantities, units, digits }: QuantitiesListProp
   return (
     <KeyValue
       items={[
-        ...quantities.steel.map((line) => ({ label: lineName(line), value: mass(line.kgPerM) })),
+        ...quantities.steel.map((line) => ({ label: lineName(line, section), value: mass(line.kgPerM) })),
         {
           label: <strong className="font-semibold text-ink">Steel, net</strong>,
           value: mass(quantities.netSteelKgPerM),

@@ -2,6 +2,7 @@ import { useMemo } from 'react';
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import { SectionDrawing } from '#client/src/drawing/section-drawing.tsx';
 import { sizeText, steelText } from '#shared/print/section-text.ts';
+import { BuiltSteelNote } from '#client/src/sheet/built-steel-note.tsx';
 import { CheckTable } from '#client/src/sheet/check-table.tsx';
 import { LimitsNote } from '#client/src/sheet/limits-note.tsx';
 import { QuantitiesTable } from '#client/src/sheet/quantities-table.tsx';
@@ -37,6 +38,7 @@ export function CandidateSheet({ candidate, units, hasMoney }: CandidateSheetPro
           <figcaption className="mt-2 flex flex-wrap items-baseline gap-x-3">
             <span className="text-lg font-semibold">{sizeText(section, units)}</span>
             <span className="num text-steel">{steelText(section, units)}</span>
+            <BuiltSteelNote section={section} evaluation={evaluation} units={units} />
           </figcaption>
         </figure>
         <div className="grid min-w-0 gap-5">
@@ -78,10 +80,15 @@ export function CandidateSheet({ candidate, units, hasMoney }: CandidateSheetPro
       </div>
       <div className="grid grid-cols-[minmax(0,1fr)] gap-8 xl:grid-cols-2">
         <Part title="Quantities per length">
-          <QuantitiesTable quantities={evaluation.quantities} units={units} isMoneyHidden={!hasMoney} />
+          <QuantitiesTable
+            section={section}
+            quantities={evaluation.quantities}
+            units={units}
+            isMoneyHidden={!hasMoney}
+          />
         </Part>
         <Part title="Takeoff">
-          <TakeoffTable takeoff={candidate.takeoff} units={units} hasMoney={hasMoney} />
+          <TakeoffTable section={section} takeoff={candidate.takeoff} units={units} hasMoney={hasMoney} />
         </Part>
       </div>
       <Part title="Working">

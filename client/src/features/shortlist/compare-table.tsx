@@ -1,6 +1,7 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Rates } from '#shared/engine/section.ts';
 import { SectionDrawing } from '#client/src/drawing/section-drawing.tsx';
+import { faceWord } from '#shared/print/face-word.ts';
 import { formatDifferenceTo, formatQuantity } from '#shared/print/format-quantity.ts';
 import { barsText, sizeText, steelText, stirrupText } from '#shared/print/section-text.ts';
 import { candidateStateLabel } from '#client/src/lib/state-labels.ts';
@@ -101,20 +102,20 @@ export function CompareTable({ candidates, units, baselineId, hasMoney }: Compar
 }
 
 function Bars({ candidate, units }: { readonly candidate: ShownCandidate; readonly units: UnitSystem }) {
-  const { section } = candidate.snapshot;
+  const { section, evaluation } = candidate.snapshot;
   const { reinforcement } = section;
   const lines =
     reinforcement.kind === 'bars'
       ? [
-          `${barsText(reinforcement.tension)} bottom`,
+          `${barsText(reinforcement.tension)} ${faceWord('tension', section)}`,
           reinforcement.compression.length === 0
-            ? 'no top bars'
-            : `${barsText(reinforcement.compression)} top`,
+            ? `no ${faceWord('compression', section)} bars`
+            : `${barsText(reinforcement.compression)} ${faceWord('compression', section)}`,
         ]
       : [steelText(section, units)];
   return (
     <span className="num text-steel">
-      {[...lines, `stirrups ${stirrupText(section.stirrup, units)}`].map((line) => (
+      {[...lines, `stirrups ${stirrupText(evaluation.stirrups ?? section.stirrup, units)}`].map((line) => (
         <span key={line} className="block">
           {line}
         </span>

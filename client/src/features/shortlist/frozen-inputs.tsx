@@ -7,7 +7,7 @@ import {
   yieldCurvatureLabel,
 } from '#shared/print/basis-labels.ts';
 import { formatQuantity } from '#shared/print/format-quantity.ts';
-import { sizeText, steelText, stirrupText } from '#shared/print/section-text.ts';
+import { givenStirrupText, sizeText, steelText } from '#shared/print/section-text.ts';
 import type { DisplayKind } from '#shared/print/units.ts';
 import { KeyValue } from '#client/src/ui/key-value.tsx';
 
@@ -29,7 +29,7 @@ export function FrozenInputs({
         items={[
           { label: 'b × h', value: sizeText(section, units) },
           { label: 'Steel', value: steelText(section, units) },
-          { label: 'Stirrups', value: stirrupText(section.stirrup, units) },
+          { label: 'Stirrups', value: givenStirrupText(section.stirrup, units) },
           { label: 'f′c', value: print(section.fcMPa, 'stress') },
           { label: 'fy', value: print(section.fyMPa, 'stress') },
           { label: 'Clear cover', value: print(section.coverMm, 'length') },

@@ -57,8 +57,8 @@ export function DemandFields({ units, values, errors, onChange }: PartProps<Swee
       />
       <NumberField
         label="Span"
-        hint="for the least depth"
-        kind="length"
+        hint="for the least depth and the slab"
+        kind="span"
         units={units}
         value={values.spanMm ?? null}
         error={errors.get('demand.spanMm')}

@@ -5,11 +5,13 @@ import type { z } from 'zod';
 import { errorsByField, type FieldErrors } from '#client/src/lib/field-errors.ts';
 import type { DisplayKind } from '#shared/print/units.ts';
 import { parseGroups } from '#client/src/lib/parse-bar-groups.ts';
+import { typedFlange } from '#client/src/section-fields/flange-values.ts';
 import {
   AXIS_NAMES,
   type AxisName,
   type AxisValues,
   type SteelValues,
+  type StirrupValues,
   type SweepFormValues,
 } from './sweep-form-values.ts';
 import { parseCounts, parseValueList } from './value-list.ts';
@@ -64,6 +66,10 @@ function readSteel(steel: SteelValues, face: string, units: UnitSystem, problems
   };
 }
 
+function readStirrup({ bar, legs, spacingMm, isDesigned }: StirrupValues) {
+  return bar === '' ? null : { bar, legs, spacingMm, ...(isDesigned ? { isDesigned } : {}) };
+}
+
 /**
  * Turns what is typed into the input of the contract, or into messages beside the fields. Text that cannot be read is
  * reported before the contract is asked: its message says more.
@@ -78,7 +84,8 @@ export function readSweepForm(form: SweepFormValues, units: UnitSystem): SweepFo
     definition: {
       space: {
         ...axes,
-        stirrups: form.stirrups.map((stirrup) => (stirrup.bar === '' ? null : stirrup)),
+        flange: typedFlange(form.flange, form.demand),
+        stirrups: form.stirrups.map(readStirrup),
         tension: readSteel(form.steel.tension, 'tension', units, problems),
         compression: readSteel(form.steel.compression, 'compression', units, problems),
       },

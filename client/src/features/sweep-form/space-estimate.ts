@@ -29,6 +29,15 @@ export function axisCount(axis: AxisValues, name: AxisName, units: UnitSystem): 
   return step > 0 && count >= 1 && count <= MAX_AXIS_VALUES ? count : null;
 }
 
+/** Least and largest value of an axis, or none while it cannot be read. */
+export function axisEnds(axis: AxisValues, name: AxisName, units: UnitSystem): readonly number[] {
+  const isRead = axisCount(axis, name, units) !== null;
+  if (!isRead) return [];
+  if (axis.kind === 'range') return [axis.from!, axis.to!];
+  const list = parseValueList(axis.listText, AXIS_KIND[name], units);
+  return list.kind === 'values' ? [list.values[0]!, list.values.at(-1)!] : [];
+}
+
 /** How many sets of steel a face makes, or null while it cannot be read. */
 export function steelCount(steel: SteelValues, units: UnitSystem): number | null {
   if (steel.kind === 'areas') {

@@ -1,8 +1,9 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
-import type { BarStandard } from '#shared/engine/section.ts';
+import type { DesignBasis } from '#shared/engine/section.ts';
 import { AxisField } from './axis-field.tsx';
 import { type FieldErrors } from '#client/src/lib/field-errors.ts';
 import { axisCount, steelCount } from './space-estimate.ts';
+import { SlabField } from './slab-field.tsx';
 import { SteelField } from './steel-field.tsx';
 import { StirrupsField } from './stirrups-field.tsx';
 import {
@@ -15,7 +16,7 @@ import {
 
 interface SpaceFieldsProps {
   readonly units: UnitSystem;
-  readonly standard: BarStandard;
+  readonly basis: Pick<DesignBasis, 'ruleSet' | 'barStandard'>;
   readonly form: SweepFormValues;
   readonly errors: FieldErrors;
   readonly onChange: (form: SweepFormValues) => void;
@@ -31,7 +32,7 @@ function withSteel(form: SweepFormValues, face: SteelFace, next: SteelValues): S
 }
 
 /** Every axis of the space with the number of values it makes. */
-export function SpaceFields({ units, standard, form, errors, onChange }: SpaceFieldsProps) {
+export function SpaceFields({ units, basis, form, errors, onChange }: SpaceFieldsProps) {
   return (
     <div>
       {AXIS_NAMES.map((name) => (
@@ -45,12 +46,14 @@ export function SpaceFields({ units, standard, form, errors, onChange }: SpaceFi
           onChange={(values) => onChange({ ...form, axes: { ...form.axes, [name]: values } })}
         />
       ))}
+      <SlabField units={units} basis={basis} form={form} errors={errors} onChange={onChange} />
       {STEEL_FACES.map((face) => (
         <SteelField
+          hogs={form.flange.shape !== 'none' && form.flange.face === 'tension'}
           key={face}
           face={face}
           units={units}
-          standard={standard}
+          standard={basis.barStandard}
           values={form.steel[face]}
           errors={errors}
           setCount={steelCount(form.steel[face], units)}
@@ -59,7 +62,7 @@ export function SpaceFields({ units, standard, form, errors, onChange }: SpaceFi
       ))}
       <StirrupsField
         units={units}
-        standard={standard}
+        standard={basis.barStandard}
         values={form.stirrups}
         errors={errors}
         onChange={(stirrups) => onChange({ ...form, stirrups })}

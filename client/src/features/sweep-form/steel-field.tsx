@@ -10,10 +10,11 @@ import { BarRack } from './bar-rack.tsx';
 import { errorUnder, type FieldErrors } from '#client/src/lib/field-errors.ts';
 import type { SteelFace, SteelValues } from './sweep-form-values.ts';
 
-const FACE_LABEL: Readonly<Record<SteelFace, { readonly name: string; readonly where: string }>> = {
-  tension: { name: 'Bottom bars', where: 'tension face' },
-  compression: { name: 'Top bars', where: 'compression face' },
+const FACE_LABEL: Readonly<Record<SteelFace, string>> = {
+  tension: 'tension face',
+  compression: 'compression face',
 };
+const PLACE_NAME = { bottom: 'Bottom bars', top: 'Top bars' } as const;
 
 const WAYS = [
   { value: 'bars', label: 'Bars' },
@@ -27,6 +28,8 @@ const PLACES = [
 
 interface SteelFieldProps {
   readonly face: SteelFace;
+  /** Tension at the top. */
+  readonly hogs: boolean;
   readonly units: UnitSystem;
   readonly standard: BarStandard;
   readonly values: SteelValues;
@@ -41,7 +44,7 @@ function PlainAreas({
   values,
   errors,
   onChange,
-}: Omit<SteelFieldProps, 'setCount' | 'standard'>) {
+}: Omit<SteelFieldProps, 'setCount' | 'standard' | 'hogs'>) {
   const areasError = errorUnder(errors, `space.${face}.areasMm2`);
   const placeError = errorUnder(errors, `space.${face}.at`);
   return (
@@ -90,19 +93,19 @@ function PlainAreas({
 
 /** The choices of steel on one face: sizes times counts, or plain areas of a published problem. */
 export function SteelField(props: SteelFieldProps) {
-  const { face, standard, values, errors, setCount, onChange } = props;
-  const label = FACE_LABEL[face];
+  const { face, hogs, standard, values, errors, setCount, onChange } = props;
+  const name = PLACE_NAME[(face === 'tension') === hogs ? 'top' : 'bottom'];
   const ownError = errors.get(`space.${face}`);
   return (
     <fieldset className="grid min-w-0 gap-x-5 gap-y-2 border-t border-rule py-3 sm:grid-cols-[9.5rem_7.5rem_minmax(0,1fr)_5.5rem] sm:items-start">
-      <legend className="sr-only">{label.name}</legend>
+      <legend className="sr-only">{name}</legend>
       <div className="sm:pt-1" aria-hidden="true">
-        <span className="font-medium">{label.name}</span>
-        <span className="block text-xs text-muted">{label.where}</span>
+        <span className="font-medium">{name}</span>
+        <span className="block text-xs text-muted">{FACE_LABEL[face]}</span>
       </div>
       <SegmentedControl
         className="sm:col-span-1"
-        legend={`${label.name}: bars or plain areas`}
+        legend={`${name}: bars or plain areas`}
         options={WAYS}
         value={values.kind}
         onChange={(kind) => onChange({ ...values, kind })}
@@ -110,7 +113,7 @@ export function SteelField(props: SteelFieldProps) {
       {values.kind === 'bars' ? (
         <div className="grid gap-4">
           <BarRack
-            legend={`${label.name}: sizes`}
+            legend={`${name}: sizes`}
             isLegendHidden
             standard={standard}
             chosen={values.sizes}

@@ -4,6 +4,7 @@ import type { BarStandard } from '#shared/engine/section.ts';
 import { Button } from '#client/src/ui/button.tsx';
 import { NumberField } from '#client/src/ui/number-field.tsx';
 import { SelectField } from '#client/src/ui/select-field.tsx';
+import { SpacingChoice } from '#client/src/section-fields/spacing-choice.tsx';
 import { type FieldErrors } from '#client/src/lib/field-errors.ts';
 import type { StirrupValues } from './sweep-form-values.ts';
 
@@ -35,7 +36,7 @@ export function StirrupsField({ units, standard, values, errors, onChange }: Sti
       <legend className="sr-only">Stirrups</legend>
       <div className="sm:pt-6" aria-hidden="true">
         <span className="font-medium">Stirrups</span>
-        <span className="block text-xs text-muted">closed, at a given spacing</span>
+        <span className="block text-xs text-muted">closed</span>
       </div>
       <div className="grid gap-2">
         {values.map((stirrup, k) => (
@@ -52,7 +53,7 @@ export function StirrupsField({ units, standard, values, errors, onChange }: Sti
               <>
                 <NumberField
                   className="w-28"
-                  label={small('spacing')}
+                  label={small(stirrup.isDesigned ? 'spacing at most' : 'spacing')}
                   kind="length"
                   units={units}
                   value={stirrup.spacingMm}
@@ -68,6 +69,12 @@ export function StirrupsField({ units, standard, values, errors, onChange }: Sti
                   error={errors.get(`space.stirrups.${k}.legs`)}
                   onChange={(legs) => change(k, { legs })}
                 />
+                <SpacingChoice
+                  className="pt-5"
+                  isHintHidden
+                  isDesigned={stirrup.isDesigned}
+                  onChange={(isDesigned) => change(k, { isDesigned })}
+                />
               </>
             )}
             {values.length > 1 && (
@@ -82,12 +89,20 @@ export function StirrupsField({ units, standard, values, errors, onChange }: Sti
             )}
           </div>
         ))}
+        {values.some((stirrup) => stirrup.bar !== '' && stirrup.isDesigned) && (
+          <p className="text-xs text-muted">
+            Designed: each section takes the widest spacing in the project’s steps that meets shear, least
+            stirrups, ties and hoops.
+          </p>
+        )}
         {listError !== undefined && <p className="text-xs text-fails">▲ {listError}</p>}
         <div>
           <Button
             look="text"
             className="text-sm"
-            onClick={() => onChange([...values, values.at(-1) ?? { bar: '', legs: 2, spacingMm: null }])}
+            onClick={() =>
+              onChange([...values, values.at(-1) ?? { bar: '', legs: 2, spacingMm: null, isDesigned: false }])
+            }
           >
             Add another choice
           </Button>

@@ -1,7 +1,7 @@
 import { beamDemand } from '#shared/contract/beam-demand.ts';
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Beam, Project, Sweep } from '#shared/contract/records.ts';
-import type { BarStandard } from '#shared/engine/section.ts';
+import type { BarStandard, Stirrup } from '#shared/engine/section.ts';
 import { MPA_PER_PSI, MM_PER_IN } from '#shared/engine/units.ts';
 import type { AxisDefinition, SteelSetsDefinition } from '#shared/sweep/problem.ts';
 import { countsText } from '#client/src/lib/counts-text.ts';
@@ -13,8 +13,10 @@ import {
   type AxisName,
   type AxisValues,
   type SteelValues,
+  type StirrupValues,
   type SweepFormValues,
 } from './sweep-form-values.ts';
+import { flangeValues, NO_FLANGE } from '#client/src/section-fields/flange-values.ts';
 import { valueListText } from './value-list.ts';
 
 /** Ranges a first sweep starts from: common practice for beams of buildings, no source. */
@@ -83,7 +85,8 @@ export function firstSweepForm(project: Project, beam: Beam): SweepFormValues {
       fy: single(basis.fyMPa, 'stress', units),
       cover: single(basis.coverMm, 'length', units),
     },
-    stirrups: [{ bar: first.stirrup, legs: 2, spacingMm: FIRST_SPACING_MM[units] }],
+    flange: NO_FLANGE,
+    stirrups: [{ bar: first.stirrup, legs: 2, spacingMm: FIRST_SPACING_MM[units], isDesigned: false }],
     steel: {
       tension: bars(first.tension, '2–8', false, units),
       compression: bars(first.compression, '2–4', true, units),
@@ -132,6 +135,11 @@ function steelValues(sets: SteelSetsDefinition, units: UnitSystem): SteelValues 
   };
 }
 
+const stirrupValues = (stirrup: Stirrup | null): StirrupValues =>
+  stirrup === null
+    ? { bar: '', legs: 2, spacingMm: null, isDesigned: false }
+    : { ...stirrup, isDesigned: stirrup.isDesigned === true };
+
 /** A stored sweep as a form, to change or to copy. */
 export function sweepForm(sweep: Pick<Sweep, 'name' | 'definition'>, units: UnitSystem): SweepFormValues {
   const { space, demand, rules, view } = sweep.definition;
@@ -139,7 +147,8 @@ export function sweepForm(sweep: Pick<Sweep, 'name' | 'definition'>, units: Unit
   return {
     name: sweep.name,
     axes: axes as SweepFormValues['axes'],
-    stirrups: space.stirrups.map((stirrup) => stirrup ?? { bar: '', legs: 2, spacingMm: null }),
+    flange: flangeValues(space.flange, demand),
+    stirrups: space.stirrups.map(stirrupValues),
     steel: {
       tension: steelValues(space.tension, units),
       compression: steelValues(space.compression, units),

@@ -1,5 +1,6 @@
 import type { MeasureId } from '#shared/engine/measures.ts';
 import type { Support } from '#shared/engine/section.ts';
+import type { FlangeValues } from '#client/src/section-fields/flange-values.ts';
 
 /** One axis as typed. Numbers are SI; null is an empty field, NaN text that is not a number. */
 export interface AxisValues {
@@ -32,6 +33,8 @@ export interface StirrupValues {
   readonly bar: string;
   readonly legs: number | null;
   readonly spacingMm: number | null;
+  /** The spacing is found for each section, and what is typed is the widest. */
+  readonly isDesigned: boolean;
 }
 
 export const AXIS_NAMES = ['width', 'depth', 'fc', 'fy', 'cover'] as const;
@@ -44,6 +47,7 @@ export type SteelFace = (typeof STEEL_FACES)[number];
 export interface SweepFormValues {
   readonly name: string;
   readonly axes: Readonly<Record<AxisName, AxisValues>>;
+  readonly flange: FlangeValues;
   readonly stirrups: readonly StirrupValues[];
   readonly steel: Readonly<Record<SteelFace, SteelValues>>;
   readonly demand: {

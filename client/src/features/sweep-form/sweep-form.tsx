@@ -96,7 +96,13 @@ export function SweepForm(props: SweepFormProps) {
           />
         </Part>
         <Part title="What may vary">
-          <SpaceFields units={units} standard={barStandard} form={form} errors={errors} onChange={change} />
+          <SpaceFields
+            units={units}
+            basis={project.designBasis}
+            form={form}
+            errors={errors}
+            onChange={change}
+          />
         </Part>
         <Part title="What to compare first">
           <FirstView
