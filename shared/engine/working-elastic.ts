@@ -1,26 +1,51 @@
 import type { WorkingStep } from './evaluation.ts';
+import { compressedWidth, grossFlangeTerms, grossInputs, widthInputs } from './working-flange.ts';
 import { layerInputs, STATICS, step, type Input, type WorkingSource } from './working-step.ts';
 
+/** Compressed concrete of the cracked section about its axis, by the width it has. */
+const COMPRESSED = {
+  web: { moment: 'b (kd)²/2', inertia: 'b (kd)³/3' },
+  flange: { moment: 'bf (kd)²/2', inertia: 'bf (kd)³/3' },
+  both: {
+    moment: 'b (kd)²/2 + (bf − b) hf (kd − hf/2)',
+    inertia: 'b (kd)³/3 + (bf − b) ((kd)³ − (kd − hf)³)/3',
+  },
+} as const;
+
 /** Uncracked and cracked elastic section. */
-export function elasticSteps({ section, basis, layout, elastic, ruleSet }: WorkingSource): WorkingStep[] {
+export function elasticSteps(source: WorkingSource): WorkingStep[] {
+  const { section, basis, layout, elastic, ruleSet } = source;
   const above = basis.displacedConcrete === 'ignore' ? 'n' : '(n − 1)';
   const n: Input = ['n', elastic.modularRatio, 'ratio'];
   const kd: Input = ['kd', elastic.crackedAxisMm, 'length'];
-  const b: Input = ['b', section.widthMm, 'length'];
-  const gross: readonly Input[] = [n, b, ['h', section.depthMm, 'length']];
+  const added = grossFlangeTerms(source);
+  const width = compressedWidth(source, elastic.crackedAxisMm);
+  const compressed = COMPRESSED[width];
+  const widths = widthInputs(source, width);
+  const gross: readonly Input[] = [n, ...grossInputs(source), ['h', section.depthMm, 'length']];
   const ybar: Input = ['y', elastic.uncrackedAxisMm, 'length'];
   return [
     step(
       'uncracked-axis',
       'elastic',
-      ['y', '(b h²/2 + Σ (n − 1) A d)/(b h + Σ (n − 1) A), uncracked', ybar[1], 'length'],
+      [
+        'y',
+        `(b h²/2${added.moment} + Σ (n − 1) A d)/(b h${added.area} + Σ (n − 1) A), uncracked`,
+        ybar[1],
+        'length',
+      ],
       [...gross, ...layerInputs(layout)],
       STATICS,
     ),
     step(
       'iut',
       'elastic',
-      ['Iut', 'b h³/12 + b h (h/2 − y)² + Σ (n − 1) A (d − y)²', elastic.uncrackedInertiaMm4, 'inertia'],
+      [
+        'Iut',
+        `b h³/12 + b h (h/2 − y)²${added.inertia} + Σ (n − 1) A (d − y)²`,
+        elastic.uncrackedInertiaMm4,
+        'inertia',
+      ],
       [...gross, ybar, ...layerInputs(layout)],
       STATICS,
     ),
@@ -45,15 +70,25 @@ export function elasticSteps({ section, basis, layout, elastic, ruleSet }: Worki
     step(
       'kd',
       'elastic',
-      ['kd', `b (kd)²/2 + Σ ${above} A (kd − d) = Σ n A (d − kd)`, elastic.crackedAxisMm, 'length'],
-      [n, b, ...layerInputs(layout)],
+      [
+        'kd',
+        `${compressed.moment} + Σ ${above} A (kd − d) = Σ n A (d − kd)`,
+        elastic.crackedAxisMm,
+        'length',
+      ],
+      [n, ...widths, ...layerInputs(layout)],
       STATICS,
     ),
     step(
       'icr',
       'elastic',
-      ['Icr', `b (kd)³/3 + Σ ${above} A (kd − d)² + Σ n A (d − kd)²`, elastic.crackedInertiaMm4, 'inertia'],
-      [n, b, kd, ...layerInputs(layout)],
+      [
+        'Icr',
+        `${compressed.inertia} + Σ ${above} A (kd − d)² + Σ n A (d − kd)²`,
+        elastic.crackedInertiaMm4,
+        'inertia',
+      ],
+      [n, ...widths, kd, ...layerInputs(layout)],
       STATICS,
     ),
   ];

@@ -1,7 +1,8 @@
-import { leastSteelOf } from './checks.ts';
 import type { WorkingStep } from './evaluation.ts';
+import { leastSteelSteps } from './working-least-steel.ts';
 import { detailingSteps } from './working-detailing.ts';
 import { ductilitySteps, elasticSteps } from './working-elastic.ts';
+import { compressedWidth, flangeSteps, widthInputs } from './working-flange.ts';
 import { quantitySteps } from './working-quantities.ts';
 import { layerInputs, STATICS, step, type Input, type WorkingSource } from './working-step.ts';
 
@@ -11,7 +12,7 @@ export function workingOf(source: WorkingSource): readonly WorkingStep[] {
     ...materials(source),
     ...ultimate(source),
     ...strength(source),
-    ...limits(source),
+    ...leastSteelSteps(source),
     ...detailingSteps(source),
     ...elasticSteps(source),
     ...ductilitySteps(source),
@@ -60,7 +61,16 @@ function materials({ section, basis, ruleSet, flexure, elastic }: WorkingSource)
   ];
 }
 
-function ultimate({ section, layout, flexure, ruleSet }: WorkingSource): WorkingStep[] {
+/** Compressed concrete of the block, by the width it has. */
+const BLOCK = {
+  web: { axis: '0.85 f′c b β1 c', force: '0.85 f′c b a' },
+  flange: { axis: '0.85 f′c bf β1 c', force: '0.85 f′c bf a' },
+  both: { axis: '0.85 f′c (b β1 c + (bf − b) hf)', force: '0.85 f′c (b a + (bf − b) hf)' },
+} as const;
+
+function ultimate(source: WorkingSource): WorkingStep[] {
+  const { section, layout, flexure, ruleSet } = source;
+  const width = compressedWidth(source, flexure.blockDepthMm);
   const c: Input = ['c', flexure.neutralAxisMm, 'length'];
   const fc: Input = ['f′c', section.fcMPa, 'stress'];
   const block = ruleSet.clauses.block;
@@ -97,6 +107,7 @@ function ultimate({ section, layout, flexure, ruleSet }: WorkingSource): Working
     ];
   });
   return [
+    ...flangeSteps(source),
     step(
       'd',
       'ultimate',
@@ -107,8 +118,8 @@ function ultimate({ section, layout, flexure, ruleSet }: WorkingSource): Working
     step(
       'c',
       'ultimate',
-      ['c', '0.85 f′c b β1 c = ΣT, each T from its own strain; solved for c', c[1], 'length'],
-      [fc, ['b', section.widthMm, 'length'], ['β1', flexure.beta1, 'ratio'], ...layerInputs(layout)],
+      ['c', `${BLOCK[width].axis} = ΣT, each T from its own strain; solved for c`, c[1], 'length'],
+      [fc, ...widthInputs(source, width), ['β1', flexure.beta1, 'ratio'], ...layerInputs(layout)],
       STATICS,
     ),
     step(
@@ -121,10 +132,10 @@ function ultimate({ section, layout, flexure, ruleSet }: WorkingSource): Working
     step(
       'concrete-force',
       'ultimate',
-      ['C', '0.85 f′c b a', flexure.concreteForceN, 'force'],
+      ['C', BLOCK[width].force, flexure.concreteForceN, 'force'],
       [
         ['f′c', section.fcMPa, 'stress'],
-        ['b', section.widthMm, 'length'],
+        ...widthInputs(source, width),
         ['a', flexure.blockDepthMm, 'length'],
       ],
       block,
@@ -143,19 +154,26 @@ function ultimate({ section, layout, flexure, ruleSet }: WorkingSource): Working
   ];
 }
 
-function strength({ flexure, section, basis, ruleSet }: WorkingSource): WorkingStep[] {
+function strength(source: WorkingSource): WorkingStep[] {
+  const { flexure, section, basis, ruleSet } = source;
   const { clauses } = ruleSet;
+  const width = compressedWidth(source, flexure.blockDepthMm);
+  const ofBlock: readonly Input[] =
+    width === 'both'
+      ? [['f′c', section.fcMPa, 'stress'], ...widthInputs(source, width)]
+      : [['C', flexure.concreteForceN, 'force']];
+  const mn = width === 'both' ? 'Σ T d − 0.85 f′c (b a²/2 + (bf − b) hf²/2)' : 'Σ T d − C a/2';
   return [
     step(
       'mn',
       'strength',
-      ['Mn', 'Σ T d − C a/2', flexure.nominalMomentNmm, 'moment'],
+      ['Mn', mn, flexure.nominalMomentNmm, 'moment'],
       [
         ...flexure.layers.flatMap(({ forceN, depthMm }, i): Input[] => [
           [`T${i + 1}`, forceN, 'force'],
           [`d${i + 1}`, depthMm, 'length'],
         ]),
-        ['C', flexure.concreteForceN, 'force'],
+        ...ofBlock,
         ['a', flexure.blockDepthMm, 'length'],
       ],
       clauses.strength,
@@ -181,45 +199,4 @@ function strength({ flexure, section, basis, ruleSet }: WorkingSource): WorkingS
       clauses.strength,
     ),
   ];
-}
-
-function limits(source: WorkingSource): WorkingStep[] {
-  const { section, layout, ruleSet, demand } = source;
-  const { leastMm2, waivedAtMm2 } = leastSteelOf({ section, demand, ruleSet }, layout);
-  const clause = ruleSet.clauses.leastSteel;
-  const inputs: Input[] = [
-    ['f′c', section.fcMPa, 'stress'],
-    ['fy', section.fyMPa, 'stress'],
-    ['b', section.widthMm, 'length'],
-    ['d', layout.dMm, 'length'],
-  ];
-  const least = step(
-    'as-min',
-    'limits',
-    ['As,min', ruleSet.formulas.leastSteel, leastMm2, 'area'],
-    inputs,
-    clause,
-  );
-  const { leastSteelWaiver } = ruleSet;
-  if (waivedAtMm2 === null || leastSteelWaiver === null || demand.muNmm === null) return [least];
-  const sigmaMPa = ruleSet.blockStressMPa(section.fcMPa);
-  const waiver = step(
-    'as-waive',
-    'limits',
-    [
-      'As,waive',
-      'k σ b d/fy (1 − √(1 − 2 Mu/(φ σ b d²))), k times the steel Mu requires; σ = 0.85 f′c',
-      waivedAtMm2,
-      'area',
-    ],
-    [
-      ['Mu', demand.muNmm, 'moment'],
-      ['k', leastSteelWaiver, 'ratio'],
-      ['σ', sigmaMPa, 'stress'],
-      ['φ', ruleSet.tensionControlledReduction, 'ratio'],
-      ...inputs.slice(1),
-    ],
-    clause,
-  );
-  return [least, waiver];
 }

@@ -4,6 +4,7 @@ import { getBar } from '../engine/bars.ts';
 import type { FaceArrangement } from '../engine/evaluation.ts';
 import type { Support } from '../engine/section.ts';
 import { barStandardLabel } from '../print/basis-labels.ts';
+import { flangeText } from '../print/flange-text.ts';
 import { formatQuantity } from '../print/format-quantity.ts';
 import { barsText, sizeText, steelText, stirrupText } from '../print/section-text.ts';
 import type { DisplayKind } from '../print/units.ts';
@@ -29,9 +30,10 @@ export function inputGroups(snapshot: Snapshot, beam: Candidate['beam'], units: 
   ].filter(({ items }) => items.length > 0);
 }
 
-function sectionItems({ section, basis }: Snapshot, units: UnitSystem, print: Print): KeyText[] {
+function sectionItems({ section, basis, evaluation }: Snapshot, units: UnitSystem, print: Print): KeyText[] {
   return [
     { label: 'b × h', value: sizeText(section, units) },
+    ...(evaluation.flange ? [{ label: 'Flange, bf × hf', value: flangeText(evaluation.flange, units) }] : []),
     { label: 'Steel', value: steelText(section, units) },
     { label: 'Stirrups', value: stirrupText(section.stirrup, units) },
     { label: 'Clear cover to the stirrup', value: print(section.coverMm, 'length') },

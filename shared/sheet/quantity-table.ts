@@ -1,5 +1,6 @@
 import type { UnitSystem } from '../contract/design-basis.ts';
 import type { Snapshot } from '../contract/records.ts';
+import { unformedSides } from '../engine/pricing.ts';
 import type { Rates } from '../engine/section.ts';
 import { formatQuantity } from '../print/format-quantity.ts';
 import { unitLabel, type DisplayKind } from '../print/units.ts';
@@ -81,20 +82,21 @@ export function quantityTable(snapshot: Snapshot, units: UnitSystem, numbering: 
 function volumeItems({ section, basis, evaluation }: Snapshot, units: UnitSystem): QuantityItem[] {
   const { concreteM3PerM, formworkM2PerM } = evaluation.quantities;
   const length = (mm: number) => formatQuantity(mm, 'length', units);
-  const slab =
-    basis.slabMm === 0 ? length(section.depthMm) : `(${length(section.depthMm)} − ${length(basis.slabMm)})`;
+  const { slabMm, hasEdge } = unformedSides(evaluation.flange ?? null, basis.slabMm);
+  const h = length(section.depthMm);
+  const side = slabMm === 0 ? h : `(${h} − ${length(slabMm)})`;
   return [
     {
       id: 'concrete',
       item: 'Concrete',
-      how: `b h = ${length(section.widthMm)} × ${length(section.depthMm)}`,
+      how: `b h = ${length(section.widthMm)} × ${h}${evaluation.flange ? ', web through the slab' : ''}`,
       value: concreteM3PerM,
       kind: 'volume-per-length',
     },
     {
       id: 'formwork',
       item: 'Formwork, soffit and two sides',
-      how: `${length(section.widthMm)} + 2 × ${slab}`,
+      how: `${length(section.widthMm)} + ${hasEdge ? `${h} + ${side}` : `2 × ${side}`}`,
       value: formworkM2PerM,
       kind: 'surface-per-length',
     },

@@ -19,6 +19,8 @@ const SYMBOL = new RegExp(
   [
     '(?<factor>φ(?=[MV]))?(?:',
     '(?<whole>kd)|(?<cover>c(?=c))(?<coverSub>c)',
+    // bf, bt, hf, sw, ln of a flange
+    '|(?<slab>b(?=[ft])|h(?=f)|s(?=w)|l(?=n))(?<slabSub>[ftwn])',
     `|(?<lettered>[${SUBSCRIPTED}])(?<prime>′?)(?<sub>(?:${LETTERS})(?:${EXTREME})?)?`,
     `|(?<plain>[A-Za-z])(?<plainPrime>′?)(?<plainSub>\\d+|${EXTREME})?`,
     ')(?![\\p{L}′])',
@@ -31,14 +33,15 @@ export function findSymbolAt(text: string, from: number): { parts: SymbolParts; 
   SYMBOL.lastIndex = from;
   const found = SYMBOL.exec(text);
   if (found?.groups === undefined) return undefined;
-  const { factor, whole, cover, coverSub, lettered, prime, sub, plain, plainPrime, plainSub } = found.groups;
+  const { factor, whole, cover, coverSub, slab, slabSub, lettered, prime, sub, plain, plainPrime, plainSub } =
+    found.groups;
   return {
     length: found[0].length,
     parts: {
       factor: factor ?? '',
-      base: whole ?? cover ?? lettered ?? plain ?? '',
+      base: whole ?? cover ?? slab ?? lettered ?? plain ?? '',
       prime: prime ?? plainPrime ?? '',
-      sub: coverSub ?? sub ?? plainSub?.replace(',', '') ?? '',
+      sub: coverSub ?? slabSub ?? sub ?? plainSub?.replace(',', '') ?? '',
     },
   };
 }

@@ -32,7 +32,10 @@ interface Coefficients {
   readonly gapMm: number;
   readonly hookTailLeastMm: number;
   readonly largestTightBendMm: number;
-  readonly formulas: Omit<Formulas, 'strengthReduction' | 'tieSpacing' | 'skinSpacing' | 'effectiveFlange'>;
+  readonly formulas: Omit<
+    Formulas,
+    'strengthReduction' | 'tieSpacing' | 'skinSpacing' | 'effectiveFlange' | 'leastSteelWidth'
+  >;
   /** 24.3.2: s ≤ first/fs − 2.5 cc and second/fs; MPa·mm. */
   readonly crackSpacing: readonly [number, number];
   /** Table 9.3.1.1 is for Grade 60 (420): factor 0.4 + fy/base. */
@@ -244,6 +247,7 @@ export function aci318({ id, year, isMetric }: Edition): RuleSet & { readonly sh
     clauses: clausesOf(book),
     formulas: {
       ...c.formulas,
+      leastSteelWidth: 'min(bf, 2 b), flange in tension of a cantilever',
       effectiveFlange: ({ shape }) =>
         shape === 't' ? 'b + 2 min(8 hf, sw/2, ln/8)' : 'b + min(6 hf, sw/2, ln/12)',
       skinSpacing: c.formulas.crackSpacing,

@@ -37,6 +37,8 @@ export interface Formulas {
   readonly tieSpacing: string;
   readonly skinSpacing: string;
   leastDepth(support: Support): string;
+  /** Width that As,min counts on where it is not the web's. */
+  readonly leastSteelWidth: string;
   /** Effective width bf from the web's b, hf, sw (clear to the next web) and ln (clear span). */
   effectiveFlange(of: Pick<FlangeSetting, 'shape' | 'face' | 'support'>): string;
 }
