@@ -32,15 +32,24 @@ export function requiredSteelMm2(
   },
 ): number {
   const { widthMm, dMm, blockStressMPa, fyMPa, overhangMm = 0, overhangDepthMm = 0 } = section;
-  const of = (widthMm: number, momentNmm: number) => {
-    const inner = 1 - (2 * momentNmm) / (reduction * blockStressMPa * widthMm * dMm * dMm);
-    if (!(inner >= 0)) return Infinity;
-    return ((blockStressMPa * widthMm * dMm) / fyMPa) * (1 - Math.sqrt(inner));
-  };
-  if (overhangMm === 0) return of(widthMm, muNmm);
+  const blockForce = reduction * blockStressMPa;
+  if (overhangMm === 0) return steelOfBlockMm2(muNmm, blockForce, widthMm, section);
   const flangeMm = widthMm + overhangMm;
-  const inFlange = of(flangeMm, muNmm);
+  const inFlange = steelOfBlockMm2(muNmm, blockForce, flangeMm, section);
   if (inFlange * fyMPa <= blockStressMPa * flangeMm * overhangDepthMm) return inFlange;
   const overhangN = blockStressMPa * overhangMm * overhangDepthMm;
-  return overhangN / fyMPa + of(widthMm, muNmm - reduction * overhangN * (dMm - overhangDepthMm / 2));
+  const webNmm = muNmm - reduction * overhangN * (dMm - overhangDepthMm / 2);
+  return overhangN / fyMPa + steelOfBlockMm2(webNmm, blockForce, widthMm, section);
+}
+
+/** Steel of a rectangular block so wide; a function of its own, since the hot loop would make a closure anew each time. */
+function steelOfBlockMm2(
+  muNmm: number,
+  reducedStressMPa: number,
+  widthMm: number,
+  { dMm, blockStressMPa, fyMPa }: { dMm: number; blockStressMPa: number; fyMPa: number },
+): number {
+  const inner = 1 - (2 * muNmm) / (reducedStressMPa * widthMm * dMm * dMm);
+  if (!(inner >= 0)) return Infinity;
+  return ((blockStressMPa * widthMm * dMm) / fyMPa) * (1 - Math.sqrt(inner));
 }

@@ -8,7 +8,8 @@ import type { PlacedSteel } from './steel-layout.ts';
 import {
   designSpacingMm,
   governingLimit,
-  spacingRulesOf,
+  setSpacingRules,
+  spacingRules,
   spacingState,
   type SpacingLimit,
   type SpacingRules,
@@ -98,7 +99,9 @@ const barsOf = (reinforcement: Reinforcement, standard: DesignBasis['barStandard
 function rulesOf({ section, basis, ruleSet, seismic }: Unresolved): SpacingRules {
   const stirrup = section.stirrup!;
   const { tension, compression } = barsOf(section.reinforcement, basis.barStandard);
-  return spacingRulesOf(
+  const rules = spacingRules();
+  setSpacingRules(
+    rules,
     {
       widestMm: stirrup.spacingMm,
       stirrupMm: getBar(basis.barStandard, stirrup.bar, ['stirrup', 'bar']).diameterMm,
@@ -110,10 +113,9 @@ function rulesOf({ section, basis, ruleSet, seismic }: Unresolved): SpacingRules
         ? getBar(basis.barStandard, basis.skinBar, ['basis', 'skinBar']).diameterMm
         : Infinity,
     },
-    basis,
-    ruleSet,
-    seismic,
+    { basis, ruleSet, seismic },
   );
+  return rules;
 }
 
 const GOVERNING: Readonly<Record<SpacingLimit, string>> = {

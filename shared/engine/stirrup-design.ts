@@ -25,26 +25,37 @@ export const SPACING_LIMITS = [
 ] as const;
 export type SpacingLimit = (typeof SPACING_LIMITS)[number];
 
-/** Steps in which spacings are built, mm. */
-export interface SpacingSteps {
-  readonly stepMm: number;
+/**
+ * What bounds the spacing besides the depth: one combination of width, stirrup, bars and materials. Infinity: no bound.
+ * Filled again for each combination in the hot loop.
+ */
+export interface SpacingRules {
+  stepMm: number;
   /** Closest that is built: a multiple of the step, unless the engineer's widest is closer still. */
-  readonly leastMm: number;
+  leastMm: number;
+  widestMm: number;
+  /** By the diameters of compression bars and stirrup. */
+  tiesMm: number;
+  /** Least side of the section where it bounds the ties: the width, while the depth counts too. */
+  leastSideMm: number;
+  hoopsOfEffectiveDepth: number;
+  hoopsOfDepth: number;
+  hoopsByBarsMm: number;
+  /** The same where skin bars are among the bars enclosed. */
+  hoopsByBarsWithSkinMm: number;
 }
 
-/** What bounds the spacing besides the depth: one combination of width, stirrup, bars and materials. Infinity: no bound. */
-export interface SpacingRules extends SpacingSteps {
-  readonly widestMm: number;
-  /** By the diameters of compression bars and stirrup. */
-  readonly tiesMm: number;
-  /** Least side of the section where it bounds the ties: the width, while the depth counts too. */
-  readonly leastSideMm: number;
-  readonly hoopsOfEffectiveDepth: number;
-  readonly hoopsOfDepth: number;
-  readonly hoopsByBarsMm: number;
-  /** The same where skin bars are among the bars enclosed. */
-  readonly hoopsByBarsWithSkinMm: number;
-}
+export const spacingRules = (): SpacingRules => ({
+  stepMm: NaN,
+  leastMm: NaN,
+  widestMm: Infinity,
+  tiesMm: Infinity,
+  leastSideMm: Infinity,
+  hoopsOfEffectiveDepth: Infinity,
+  hoopsOfDepth: Infinity,
+  hoopsByBarsMm: Infinity,
+  hoopsByBarsWithSkinMm: Infinity,
+});
 
 /** One section going through the design; filled again for each in the hot loop. */
 export interface SpacingState {
@@ -75,52 +86,58 @@ export const spacingState = (): SpacingState => ({
   designN: NaN,
 });
 
-/** Steps of the basis; 1 in from 3 in, or 25 mm from 75 mm, unless set (common practice, no source). */
-export function spacingStepsOf(
-  basis: Pick<DesignBasis, 'stirrupStepMm' | 'leastStirrupSpacingMm'>,
+/** Step of the basis; 1 in or 25 mm unless set (common practice, no source). */
+export const stirrupStepMm = (basis: Pick<DesignBasis, 'stirrupStepMm'>, units: 'us' | 'si') =>
+  basis.stirrupStepMm ?? (units === 'us' ? MM_PER_IN : 25);
+
+/** Closest spacing of the basis; 3 in or 75 mm unless set (common practice, no source). */
+export const leastStirrupSpacingMm = (
+  basis: Pick<DesignBasis, 'leastStirrupSpacingMm'>,
   units: 'us' | 'si',
-  widestMm: number,
-): SpacingSteps {
-  const stepMm = basis.stirrupStepMm ?? (units === 'us' ? MM_PER_IN : 25);
-  const least = basis.leastStirrupSpacingMm ?? 3 * (units === 'us' ? MM_PER_IN : 25);
-  const multiple = Math.ceil(least / stepMm - 1e-9) * stepMm;
-  return { stepMm, leastMm: Math.min(multiple, widestMm) };
-}
+) => basis.leastStirrupSpacingMm ?? 3 * (units === 'us' ? MM_PER_IN : 25);
 
 /** Bars, stirrup and width that a combination's limits follow from; diameters mm. */
 export interface SpacingSetting {
-  readonly widestMm: number;
-  readonly stirrupMm: number;
-  readonly widthMm: number;
-  readonly fyMPa: number;
+  widestMm: number;
+  stirrupMm: number;
+  widthMm: number;
+  fyMPa: number;
   /** Smallest compression bar that is tied; NaN for none. */
-  readonly tiedBarMm: number;
+  tiedBarMm: number;
   /** Smallest bar of both faces; Infinity for plain layers. */
-  readonly leastBarMm: number;
+  leastBarMm: number;
   /** Skin bar; Infinity for none. */
-  readonly skinBarMm: number;
+  skinBarMm: number;
 }
 
-export function spacingRulesOf(
-  setting: SpacingSetting,
-  basis: DesignBasis,
-  ruleSet: RuleSet,
-  seismic: SeismicRules | null,
-): SpacingRules {
-  const { widestMm, stirrupMm, widthMm, fyMPa, tiedBarMm, leastBarMm, skinBarMm } = setting;
+/** What judges a spacing. */
+export interface SpacingBooks {
+  readonly basis: Pick<DesignBasis, 'stirrupStepMm' | 'leastStirrupSpacingMm'>;
+  readonly ruleSet: RuleSet;
+  readonly seismic: SeismicRules | null;
+}
+
+/** Fills the rules of one combination. */
+export function setSpacingRules(
+  r: SpacingRules,
+  { widestMm, stirrupMm, widthMm, fyMPa, tiedBarMm, leastBarMm, skinBarMm }: SpacingSetting,
+  { basis, ruleSet, seismic }: SpacingBooks,
+): void {
   const isTied = tiedBarMm === tiedBarMm;
-  const hoops = seismic?.hoops ?? null;
-  const hoopsOf = (barMm: number) => (hoops ? hoops.byBarsMm(barMm, stirrupMm, fyMPa) : Infinity);
-  return {
-    ...spacingStepsOf(basis, ruleSet.units, widestMm),
-    widestMm,
-    tiesMm: isTied ? ruleSet.tieSpacingMm(tiedBarMm, stirrupMm) : Infinity,
-    leastSideMm: isTied && ruleSet.isTieSpacingWithinLeastSide ? widthMm : Infinity,
-    hoopsOfEffectiveDepth: hoops?.shareOfEffectiveDepth ?? Infinity,
-    hoopsOfDepth: hoops?.shareOfDepth ?? Infinity,
-    hoopsByBarsMm: hoopsOf(leastBarMm),
-    hoopsByBarsWithSkinMm: hoopsOf(hoops?.countsSkinBars ? Math.min(leastBarMm, skinBarMm) : leastBarMm),
-  };
+  r.stepMm = stirrupStepMm(basis, ruleSet.units);
+  const multiple = Math.ceil(leastStirrupSpacingMm(basis, ruleSet.units) / r.stepMm - 1e-9) * r.stepMm;
+  r.leastMm = Math.min(multiple, widestMm);
+  r.widestMm = widestMm;
+  r.tiesMm = isTied ? ruleSet.tieSpacingMm(tiedBarMm, stirrupMm) : Infinity;
+  r.leastSideMm = isTied && ruleSet.isTieSpacingWithinLeastSide ? widthMm : Infinity;
+  if (!seismic?.hoops) return;
+  const { hoops } = seismic;
+  r.hoopsOfEffectiveDepth = hoops.shareOfEffectiveDepth;
+  r.hoopsOfDepth = hoops.shareOfDepth;
+  r.hoopsByBarsMm = hoops.byBarsMm(leastBarMm, stirrupMm, fyMPa);
+  r.hoopsByBarsWithSkinMm = hoops.countsSkinBars
+    ? hoops.byBarsMm(Math.min(leastBarMm, skinBarMm), stirrupMm, fyMPa)
+    : r.hoopsByBarsMm;
 }
 
 /** Largest hoop spacing where hinges may form, mm; Infinity where no hoops are asked. */

@@ -13,9 +13,11 @@ import { skinBarsPerSide, skinKgPerM } from '../engine/skin-steel.ts';
 import {
   designSpacingMm,
   hoopLimitMm,
-  spacingRulesOf,
+  setSpacingRules,
+  spacingRules,
   spacingState,
-  type SpacingRules,
+  type SpacingBooks,
+  type SpacingSetting,
 } from '../engine/stirrup-design.ts';
 import type { Combination } from './combination.ts';
 import {
@@ -75,7 +77,10 @@ export class KernelDetailing {
   private readonly basis: DesignBasis;
   private readonly vuN: number;
   private combination: Combination | null = null;
-  private rules: SpacingRules | null = null;
+  private readonly rules = spacingRules();
+  private readonly books: SpacingBooks;
+  private readonly setting: SpacingSetting;
+  private hasStirrups = false;
   private isDesigned = false;
   private isTieTooSmall = false;
   /** Whether hoops are asked, and are there and thick enough. */
@@ -93,11 +98,17 @@ export class KernelDetailing {
     this.basis = prepared.problem.basis;
     this.vuN = prepared.problem.demand.vuN ?? NaN;
     this.at.vuN = this.vuN;
+    const { ruleSet, seismic, skin } = prepared;
+    this.books = { basis: this.basis, ruleSet, seismic };
+    this.setting = {
+      ...{ widestMm: Infinity, stirrupMm: 0, widthMm: 0, fyMPa: 0, tiedBarMm: NaN, leastBarMm: Infinity },
+      skinBarMm: skin?.bar?.diameterMm ?? Infinity,
+    };
   }
 
   /** Everything that the depths of one combination share. */
   begin(combination: Combination): void {
-    const { ruleSet, problem, skin, seismic } = this.prepared;
+    const { ruleSet, problem, skin } = this.prepared;
     const { placement, tension, compression, fyMPa } = combination;
     const { given, stirrupBar, coverMm, widthMm } = placement;
     this.combination = combination;
@@ -106,26 +117,20 @@ export class KernelDetailing {
     this.at.hasSkin = false;
     this.spacingMm = given?.spacingMm ?? Infinity;
     this.skinKg = 0;
-    this.rules =
-      given && stirrupBar
-        ? spacingRulesOf(
-            {
-              widestMm: given.spacingMm,
-              stirrupMm: stirrupBar.diameterMm,
-              widthMm,
-              fyMPa,
-              tiedBarMm: compression.leastBarMm,
-              leastBarMm: Math.min(
-                barOr(tension.leastBarMm, Infinity),
-                barOr(compression.leastBarMm, Infinity),
-              ),
-              skinBarMm: skin?.bar?.diameterMm ?? Infinity,
-            },
-            this.basis,
-            ruleSet,
-            seismic,
-          )
-        : null;
+    this.hasStirrups = stirrupBar !== null;
+    if (given && stirrupBar) {
+      const { setting } = this;
+      setting.widestMm = given.spacingMm;
+      setting.stirrupMm = stirrupBar.diameterMm;
+      setting.widthMm = widthMm;
+      setting.fyMPa = fyMPa;
+      setting.tiedBarMm = compression.leastBarMm;
+      setting.leastBarMm = Math.min(
+        barOr(tension.leastBarMm, Infinity),
+        barOr(compression.leastBarMm, Infinity),
+      );
+      setSpacingRules(this.rules, setting, this.books);
+    }
     this.placedMask = 0;
     const barsCoverMm = barCoverMm(coverMm, stirrupBar);
     if (tension.largestSpacingMm === tension.largestSpacingMm) {
@@ -147,9 +152,10 @@ export class KernelDetailing {
     this.isTieTooSmall =
       isAsked &&
       !(stirrupBar && isWithinLength(ruleSet.leastTieDiameterMm(largestBarMm), stirrupBar.diameterMm));
-    const rules = isAsked ? this.rules : null;
-    this.tiesMm = rules ? Math.min(rules.tiesMm, rules.leastSideMm) : Infinity;
-    this.isTieWithinDepth = rules !== null && rules.leastSideMm !== Infinity;
+    const { rules } = this;
+    const isBound = isAsked && this.hasStirrups;
+    this.tiesMm = isBound ? Math.min(rules.tiesMm, rules.leastSideMm) : Infinity;
+    this.isTieWithinDepth = isBound && rules.leastSideMm !== Infinity;
   }
 
   private beginHoops({ placement, tension, compression }: Combination): void {
@@ -180,7 +186,7 @@ export class KernelDetailing {
     if (deep !== null) mask |= this.skinMask(deep[j] === 1, h, innermostMm);
     if (this.isDesigned) mask |= this.designMask(h, d);
     else if (this.vuN === this.vuN) mask |= this.givenMask(d);
-    if (this.hasHoopLimit && !isWithinLength(this.spacingMm, hoopLimitMm(this.rules!, d, h, this.at.hasSkin)))
+    if (this.hasHoopLimit && !isWithinLength(this.spacingMm, hoopLimitMm(this.rules, d, h, this.at.hasSkin)))
       mask |= HOOP_SPACING;
     return mask;
   }
@@ -203,7 +209,7 @@ export class KernelDetailing {
     const { shear } = this.combination!;
     at.dMm = d;
     at.depthMm = h;
-    const spacingMm = designSpacingMm(at, shear, this.rules!);
+    const spacingMm = designSpacingMm(at, shear, this.rules);
     this.spacingMm = spacingMm;
     let mask = this.isTied(spacingMm, h) ? 0 : COMPRESSION_TIES;
     let isHalved = false;
