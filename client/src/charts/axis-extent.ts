@@ -1,4 +1,4 @@
-/** Ends and tick distance of an axis, in the unit it is read in. */
+/** Ends of an axis as it is laid out (see plot-axis.ts); a step of 0 leaves its ticks to be chosen. */
 export interface AxisExtent {
   readonly min: number;
   readonly max: number;
@@ -8,7 +8,8 @@ export interface AxisExtent {
 /** Below this share of the kept axis the drawing would sit in a corner: then the axis is fitted anew. */
 const LEAST_USED_SHARE = 0.5;
 
-function tickStep(span: number, tickCount: number): number {
+/** Distance of about so many ticks over a span: 1, 2 or 5 times a power of ten. */
+export function tickStep(span: number, tickCount: number): number {
   const rough = span / tickCount;
   const power = 10 ** Math.floor(Math.log10(rough));
   const lead = rough / power;

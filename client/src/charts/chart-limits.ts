@@ -1,5 +1,6 @@
 import { fitExtent, type AxisExtent } from './axis-extent.ts';
 import type { ChartAxis, ChartPin } from './front-chart-input.ts';
+import { toPlot } from './plot-axis.ts';
 import type { DensityCell, FrontPoint } from '#shared/sweep/result.ts';
 
 /**
@@ -8,8 +9,13 @@ import type { DensityCell, FrontPoint } from '#shared/sweep/result.ts';
  */
 const CLOUD_SHOWN = 0.9;
 
-const TICKS_X = 7;
-const TICKS_Y = 6;
+/** Ticks an axis is divided into, about. */
+export const TICKS_X = 7;
+export const TICKS_Y = 6;
+
+/** Room beyond the outermost values of a logarithmic axis, as a share of it and at least, decades. */
+const AIR = 0.04;
+const LEAST_AIR_DECADES = 0.01;
 
 interface Shown {
   readonly cells: readonly DensityCell[];
@@ -48,8 +54,12 @@ function extentAlong(side: Side, axis: ChartAxis, shown: Shown): AxisExtent {
   const points = [...front, ...pins].map((point) => point[side.key]);
   const marks = target?.axis === side.key ? [...points, target.value] : points;
   const end = cells.length > 0 ? [cloudEnd(cells, side, axis.direction)] : [];
-  const all = [...marks, ...end].map((value) => value * axis.perSi);
-  return fitExtent(Math.min(...all), Math.max(...all), side.key === 'x' ? TICKS_X : TICKS_Y);
+  const all = [...marks, ...end].map((value) => toPlot(axis, value)).filter(Number.isFinite);
+  const [low, high] = [Math.min(...all), Math.max(...all)];
+  if (!axis.isLog) return fitExtent(low, high, side.key === 'x' ? TICKS_X : TICKS_Y);
+  if (all.length === 0) return { min: 0, max: 1, step: 0 };
+  const air = Math.max((high - low) * AIR, LEAST_AIR_DECADES);
+  return { min: low - air, max: high + air, step: 0 };
 }
 
 /** Both axes of the front chart: the whole front, the pins, the target, and nearly all of the cloud. */

@@ -1,12 +1,14 @@
 import type { DensityCell } from '#shared/sweep/result.ts';
 
 /** Pixels a cell should measure at least: finer ones read as noise and cost drawing time. */
-const LEAST_CELL_PX = 11;
-/** Neighbouring cells share their bound up to rounding. */
-const TOUCHING = 1e-9;
+export const CELL_PX = 11;
+/** A cell laid out at just that width may come out a little less. */
+const ROUNDING_PX = 0.01;
+/** Neighbouring cells share their bound up to rounding: a gap below this share of a cell is none. */
+const TOUCHING = 1e-6;
 
 export interface PlotScale {
-  /** Pixels per unit of the measure (SI), along x and y. */
+  /** Pixels per unit of the axis as it is laid out, along x and y. */
   readonly xPxPerUnit: number;
   readonly yPxPerUnit: number;
 }
@@ -35,10 +37,10 @@ function joinStretches(stretches: readonly Stretch[], pxPerUnit: number): Readon
   };
   for (const stretch of ordered) {
     const last = group.at(-1);
-    const isApart = last !== undefined && stretch.low - last.high > TOUCHING * Math.abs(last.high);
+    const isApart = last !== undefined && stretch.low - last.high > TOUCHING * (stretch.high - stretch.low);
     if (isApart) close();
     group.push(stretch);
-    if ((stretch.high - group[0]!.low) * pxPerUnit >= LEAST_CELL_PX) close();
+    if ((stretch.high - group[0]!.low) * pxPerUnit >= CELL_PX - ROUNDING_PX) close();
   }
   close();
   return joined;

@@ -21,6 +21,7 @@ const REPLACED = ['series'];
  * window narrowed while the chart is being fetched.
  */
 function fillFrame(chart: EChartsType): void {
+  if (chart.isDisposed()) return;
   if (chart.getWidth() !== chart.getDom().clientWidth) chart.resize({ width: 'auto', height: 'auto' });
 }
 

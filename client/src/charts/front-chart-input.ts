@@ -1,13 +1,13 @@
 import type { Direction } from '#shared/engine/measures.ts';
 import type { DensityCell, FrontPoint, Point } from '#shared/sweep/result.ts';
 import type { AxisExtent } from './axis-extent.ts';
+import type { AxisScale } from './plot-axis.ts';
 
 /** One axis as the reader sees it. `perSi` turns the stored SI value into the unit printed on the axis. */
-export interface ChartAxis {
+export interface ChartAxis extends AxisScale {
   readonly title: string;
   readonly unit: string;
   readonly direction: Direction;
-  readonly perSi: number;
   readonly formatTick: (shown: number) => string;
 }
 
@@ -39,7 +39,17 @@ export interface ChartPin {
   readonly y: number;
 }
 
-/** All measures in SI, as results carry them; extents in the shown unit. */
+/** How a third measure is told by the marks of the front. */
+export const MARK_STYLES = ['tint', 'size'] as const;
+export type MarkStyle = (typeof MARK_STYLES)[number];
+
+/** A third measure on the front's marks: for each of them 0 (least) … 1 (most), null where it has no value. */
+export interface MarkScale {
+  readonly style: MarkStyle;
+  readonly shares: readonly (number | null)[];
+}
+
+/** All measures in SI, as results carry them; extents as the axes are laid out. */
 export interface FrontChartInput {
   readonly x: ChartAxis;
   readonly y: ChartAxis;
@@ -48,6 +58,9 @@ export interface FrontChartInput {
   readonly frame: PlotFrame;
   readonly cells: readonly DensityCell[];
   readonly front: readonly FrontPoint[];
+  /** The front without ranges, drawn faintly where ranges are set. */
+  readonly outline: readonly Point[];
+  readonly markScale: MarkScale | null;
   readonly band: readonly Point[];
   /** Near-best band as a share of the best x, 0 … 0.1. */
   readonly bandShare: number;

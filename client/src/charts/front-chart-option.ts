@@ -1,13 +1,26 @@
 import type { EChartsCoreOption } from 'echarts/core';
-import type { Point } from '#shared/sweep/result.ts';
+import type { DensityCell, Point } from '#shared/sweep/result.ts';
 import { displayCells } from './density-cells.ts';
 import { bandTint, densityRects, pinFlags, targetLine } from './front-chart-shapes.ts';
 import { axisTitle, betterWords, type ChartAxis, type FrontChartInput } from './front-chart-input.ts';
 import { frontSteps, type XY } from './front-steps.ts';
+import { frontMarks } from './front-marks.ts';
+import { fromPlot, plotTicks, shownAt, toPlot } from './plot-axis.ts';
+import { TICKS_X, TICKS_Y } from './chart-limits.ts';
 import type { AxisExtent } from './axis-extent.ts';
 
 /** Layers of the drawing, from the back. */
-const Z = { density: 1, band: 2, target: 3, bandMarks: 4, steps: 5, marks: 6, pins: 7, selected: 8 } as const;
+const Z = {
+  density: 1,
+  band: 2,
+  target: 3,
+  outline: 3,
+  bandMarks: 4,
+  steps: 5,
+  marks: 6,
+  pins: 7,
+  selected: 8,
+} as const;
 
 const NUMBER_FONT = "'IBM Plex Mono', ui-monospace, monospace";
 const WORD_FONT = "'Archivo Variable', Arial, sans-serif";
@@ -15,11 +28,11 @@ const WORD_FONT = "'Archivo Variable', Arial, sans-serif";
 function axisOption(axis: ChartAxis, extent: AxisExtent, input: FrontChartInput, side: 'x' | 'y') {
   const { colours } = input;
   const isX = side === 'x';
+  const customValues = plotTicks(extent, axis.isLog, isX ? TICKS_X : TICKS_Y);
   return {
     type: 'value',
     min: extent.min,
     max: extent.max,
-    interval: extent.step,
     name: `${axisTitle(axis)}   ${betterWords(side, axis.direction)}`,
     nameLocation: isX ? 'middle' : 'end',
     nameGap: isX ? 30 : 14,
@@ -31,12 +44,13 @@ function axisOption(axis: ChartAxis, extent: AxisExtent, input: FrontChartInput,
       padding: isX ? 0 : [0, 0, 0, 8 - input.frame.left],
     },
     axisLine: { show: isX, lineStyle: { color: colours.ink, width: 1 } },
-    axisTick: { show: isX, lineStyle: { color: colours.ink } },
+    axisTick: { show: isX, lineStyle: { color: colours.ink }, customValues },
     axisLabel: {
       color: colours.muted,
       fontFamily: NUMBER_FONT,
       fontSize: 11,
-      formatter: axis.formatTick,
+      customValues,
+      formatter: (place: number) => axis.formatTick(shownAt(axis, place)),
       hideOverlap: true,
     },
     splitLine: { show: !isX, lineStyle: { color: colours.rule, width: 1 } },
@@ -44,24 +58,37 @@ function axisOption(axis: ChartAxis, extent: AxisExtent, input: FrontChartInput,
 }
 
 const shown = (input: FrontChartInput, point: XY): [number, number] => [
-  point.x * input.x.perSi,
-  point.y * input.y.perSi,
+  toPlot(input.x, point.x),
+  toPlot(input.y, point.y),
 ];
 
 /** The far corner of the plot in SI: the front's step line runs out to it on both sides. */
 function worstCorner(input: FrontChartInput): XY {
   const { x, y, xExtent, yExtent } = input;
   return {
-    x: (x.direction === 'less' ? xExtent.max : xExtent.min) / x.perSi,
-    y: (y.direction === 'less' ? yExtent.max : yExtent.min) / y.perSi,
+    x: fromPlot(x, x.direction === 'less' ? xExtent.max : xExtent.min),
+    y: fromPlot(y, y.direction === 'less' ? yExtent.max : yExtent.min),
   };
 }
 
+/** Cells drawn in the axis' own places: on a logarithmic axis they are as wide as their logarithms are apart. */
+function placedCells({ x, y, cells }: FrontChartInput): DensityCell[] {
+  return cells
+    .map(({ x0, x1, y0, y1, count }) => ({
+      x0: toPlot(x, x0),
+      x1: toPlot(x, x1),
+      y0: toPlot(y, y0),
+      y1: toPlot(y, y1),
+      count,
+    }))
+    .filter(({ x0, y0 }) => Number.isFinite(x0) && Number.isFinite(y0));
+}
+
 function densitySeries(input: FrontChartInput) {
-  const { frame, xExtent, yExtent, x, y } = input;
-  const cells = displayCells(input.cells, {
-    xPxPerUnit: ((frame.width - frame.left - frame.right) / (xExtent.max - xExtent.min)) * x.perSi,
-    yPxPerUnit: ((frame.height - frame.top - frame.bottom) / (yExtent.max - yExtent.min)) * y.perSi,
+  const { frame, xExtent, yExtent } = input;
+  const cells = displayCells(placedCells(input), {
+    xPxPerUnit: (frame.width - frame.left - frame.right) / (xExtent.max - xExtent.min),
+    yPxPerUnit: (frame.height - frame.top - frame.bottom) / (yExtent.max - yExtent.min),
   });
   return densityRects(cells, input);
 }
@@ -72,6 +99,18 @@ function marks(input: FrontChartInput, points: readonly Point[], style: object) 
     clip: true,
     animation: false,
     data: points.map((point) => ({ value: [...shown(input, point), point.index] })),
+    ...style,
+  };
+}
+
+function steps(input: FrontChartInput, points: readonly Point[], style: object) {
+  return {
+    type: 'line',
+    clip: true,
+    silent: true,
+    animation: false,
+    symbol: 'none',
+    data: frontSteps(points, worstCorner(input)).map((corner) => shown(input, corner)),
     ...style,
   };
 }
@@ -90,24 +129,21 @@ function seriesOf(input: FrontChartInput) {
       symbolSize: 3,
       itemStyle: { color: colours.near, opacity: 0.75 },
     }),
+    steps(input, input.outline, {
+      id: 'outline',
+      z: Z.outline,
+      lineStyle: { color: colours.muted, width: 1, type: [3, 3] },
+    }),
+    steps(input, front, { id: 'front-steps', z: Z.steps, lineStyle: { color: colours.ink, width: 1.4 } }),
     {
-      id: 'front-steps',
-      z: Z.steps,
-      type: 'line',
-      clip: true,
-      silent: true,
-      animation: false,
-      symbol: 'none',
-      lineStyle: { color: colours.ink, width: 1.4 },
-      data: frontSteps(front, worstCorner(input)).map((corner) => shown(input, corner)),
-    },
-    marks(input, front, {
       id: 'front',
       z: Z.marks,
+      type: 'scatter',
+      clip: true,
+      animation: false,
       symbol: 'diamond',
-      symbolSize: front.length > 60 ? 7 : 9,
-      itemStyle: { color: colours.paper, borderColor: colours.ink, borderWidth: 1.3 },
-    }),
+      ...frontMarks(input, (point) => shown(input, point)),
+    },
     { id: 'pins', z: Z.pins, ...pinFlags(input) },
     marks(input, selected === null ? [] : [selected], {
       id: 'selected',

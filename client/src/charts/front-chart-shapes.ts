@@ -1,6 +1,7 @@
 import type { CustomSeriesOption } from 'echarts/charts';
 import type { DensityCell } from '#shared/sweep/result.ts';
 import type { FrontChartInput } from './front-chart-input.ts';
+import { toPlot } from './plot-axis.ts';
 
 type RenderItem = NonNullable<CustomSeriesOption['renderItem']>;
 type RenderApi = Parameters<RenderItem>[1];
@@ -26,24 +27,18 @@ const STRONG = 0.62;
 /** Sections per unit of area: cells differ in size, so their counts alone would not compare. */
 const thickness = (cell: DensityCell): number => cell.count / ((cell.x1 - cell.x0) * (cell.y1 - cell.y0));
 
-/** Joined density cells as rectangles; the value is [x0, y0, x1, y1, count]. */
+/** Density cells, placed along the axes, as rectangles; the value is [x0, y0, x1, y1, count]. */
 export function densityRects(cells: readonly DensityCell[], input: FrontChartInput): CustomSeriesOption {
   const thick = cells.map(thickness);
   const least = Math.min(...thick);
   const range = Math.log(Math.max(...thick) / least) || 1;
-  const { x, y, colours } = input;
+  const { colours } = input;
   return {
     type: 'custom',
     clip: true,
     animation: false,
     encode: { x: [0, 2], y: [1, 3] },
-    data: cells.map((cell) => [
-      cell.x0 * x.perSi,
-      cell.y0 * y.perSi,
-      cell.x1 * x.perSi,
-      cell.y1 * y.perSi,
-      cell.count,
-    ]),
+    data: cells.map((cell) => [cell.x0, cell.y0, cell.x1, cell.y1, cell.count]),
     renderItem: (params, api) => {
       const box = boxBetween(
         api,
@@ -72,7 +67,7 @@ export function bandTint(input: FrontChartInput): CustomSeriesOption {
   const data =
     best === undefined || bandShare === 0
       ? []
-      : [[best.x * x.perSi, yExtent.min, best.x * away * x.perSi, yExtent.max]];
+      : [[toPlot(x, best.x), yExtent.min, toPlot(x, best.x * away), yExtent.max]];
   return {
     type: 'custom',
     clip: true,
@@ -96,7 +91,7 @@ export function bandTint(input: FrontChartInput): CustomSeriesOption {
 export function targetLine(input: FrontChartInput): CustomSeriesOption {
   const { target, xExtent, yExtent, colours } = input;
   const isAlongX = target?.axis === 'y';
-  const value = (target?.value ?? 0) * (isAlongX ? input.y.perSi : input.x.perSi);
+  const value = toPlot(isAlongX ? input.y : input.x, target?.value ?? 1);
   const ends = isAlongX ? [xExtent.min, value, xExtent.max, value] : [value, yExtent.min, value, yExtent.max];
   return {
     type: 'custom',
@@ -141,7 +136,7 @@ export function pinFlags(input: FrontChartInput): CustomSeriesOption {
     clip: false,
     animation: false,
     encode: { x: 0, y: 1 },
-    data: pins.map((pin) => [pin.x * x.perSi, pin.y * y.perSi, pin.index]),
+    data: pins.map((pin) => [toPlot(x, pin.x), toPlot(y, pin.y), pin.index]),
     renderItem: (params, api) => {
       const label = pins[params.dataIndex]?.label ?? '';
       const [px = 0, py = 0] = api.coord([Number(api.value(0)), Number(api.value(1))]);

@@ -1,19 +1,47 @@
-import { useMemo, useState, type KeyboardEvent } from 'react';
-import { nextExtent, type AxisExtent } from './axis-extent.ts';
+import { useEffect, useMemo, useState, type KeyboardEvent, type ReactNode } from 'react';
+import { nextExtent } from './axis-extent.ts';
 import { Chart } from './chart.tsx';
-import { frontChartOption } from './front-chart-option.ts';
+import { ChartControls, ZOOM_STEP } from './chart-controls.tsx';
 import { chartLimits } from './chart-limits.ts';
-import type { FrontChartInput, PlotFrame } from './front-chart-input.ts';
-import { nearestMark } from './nearest-mark.ts';
+import { movedExtents, windowOf, zoomedExtents, type ChartWindow, type Extents } from './chart-window.ts';
+import { CELL_PX } from './density-cells.ts';
+import type { ChartAxis, FrontChartInput, PlotFrame } from './front-chart-input.ts';
+import { frontChartOption } from './front-chart-option.ts';
+import { nearestMark, REACH_PX } from './nearest-mark.ts';
+import { fromPlot, toPlot } from './plot-axis.ts';
 import { useChartColours } from './use-chart-colours.ts';
+import { useChartGestures } from './use-chart-gestures.ts';
+import { useChartWindow } from './use-chart-window.ts';
 import { useElementSize, type ElementSize } from './use-element-size.ts';
+
+/** What is laid out on screen: the shown part and how many cells it is divided into each way. */
+export interface ChartLayout extends ChartWindow {
+  readonly cells: { readonly x: number; readonly y: number };
+}
+
+/** A spot of the cloud someone pointed at, stored units, with what one pixel is along each axis as laid out. */
+export interface CloudSpot {
+  readonly at: { readonly x: number; readonly y: number };
+  readonly perPx: { readonly x: number; readonly y: number };
+  readonly reachPx: number;
+}
 
 export interface FrontChartProps extends Omit<
   FrontChartInput,
   'xExtent' | 'yExtent' | 'frame' | 'colours' | 'selected'
 > {
-  readonly selectedIndex: number | null;
+  /** What the axes are fitted to: the whole result, whatever ranges are set. */
+  readonly fitted: Pick<FrontChartInput, 'cells' | 'front'>;
+  readonly selected: FrontChartInput['selected'];
+  readonly window: ChartWindow | null;
+  readonly onWindow: (window: ChartWindow | null) => void;
+  readonly onLayout: (layout: ChartLayout) => void;
   readonly onSelect: (index: number) => void;
+  /** A click on the cloud, away from every mark. */
+  readonly onCloud: (spot: CloudSpot) => void;
+  readonly onLog: (isXLog: boolean, isYLog: boolean) => void;
+  /** Stands above the drawing, before what the chart itself offers. */
+  readonly toolbar: ReactNode;
   /** While it is, the axes stay as they are as long as everything fits on them. */
   readonly isGrowing: boolean;
 }
@@ -30,31 +58,27 @@ const frameOf = ({ width, height }: ElementSize): PlotFrame => ({
   bottom: 46,
 });
 
-interface KeptExtents {
+interface KeptExtents extends Extents {
   readonly key: string;
-  readonly x: AxisExtent;
-  readonly y: AxisExtent;
 }
 
-/** Extents that change only when the view does, or when what is drawn no longer suits them. */
-function useExtents(props: FrontChartProps): KeptExtents {
+const axisKey = ({ title, unit, isLog }: ChartAxis) => `${title} ${unit} ${isLog}`;
+
+/** Extents of the whole, which change only when the view does, or when what is drawn no longer suits them. */
+function useWholeExtents({ x, y, fitted, pins, target, isGrowing }: FrontChartProps): Extents {
   const [kept, setKept] = useState<KeptExtents | null>(null);
   const wanted = useMemo(
-    () =>
-      chartLimits(props.x, props.y, {
-        cells: props.cells,
-        front: props.front,
-        pins: props.pins,
-        target: props.target,
-      }),
-    [props.x, props.y, props.cells, props.front, props.pins, props.target],
+    () => chartLimits(x, y, { cells: fitted.cells, front: fitted.front, pins, target }),
+    [x, y, fitted, pins, target],
   );
-  const key = `${props.x.title} ${props.x.unit} ${props.y.title} ${props.y.unit}`;
-  const previous = props.isGrowing && kept?.key === key ? kept : null;
-  const x = nextExtent(previous?.x ?? null, wanted.x);
-  const y = nextExtent(previous?.y ?? null, wanted.y);
-  if (kept?.key === key && kept.x === x && kept.y === y) return kept;
-  const next = { key, x, y };
+  const key = `${axisKey(x)} ${axisKey(y)}`;
+  const previous = isGrowing && kept?.key === key ? kept : null;
+  const next = {
+    key,
+    x: nextExtent(previous?.x ?? null, wanted.x),
+    y: nextExtent(previous?.y ?? null, wanted.y),
+  };
+  if (kept?.key === key && kept.x === next.x && kept.y === next.y) return kept;
   setKept(next);
   return next;
 }
@@ -70,61 +94,153 @@ const STEP_OF_KEY: Readonly<Record<string, number>> = {
   End: Infinity,
 };
 
+/** With Shift the arrows move what is shown, by a tenth of it. */
+const SHIFT_OF_KEY: Readonly<Record<string, { readonly x: number; readonly y: number }>> = {
+  ArrowRight: { x: 0.1, y: 0 },
+  ArrowLeft: { x: -0.1, y: 0 },
+  ArrowUp: { x: 0, y: 0.1 },
+  ArrowDown: { x: 0, y: -0.1 },
+};
+
+const ZOOM_OF_KEY: Readonly<Record<string, number>> = { '+': ZOOM_STEP, '=': ZOOM_STEP, '-': 1 / ZOOM_STEP };
+
+/** Tells the page what part is on screen, and in how many cells its cloud may be counted. */
+function useLayoutReport(props: FrontChartProps, extents: Extents, frame: PlotFrame | null): void {
+  const { x, y, onLayout } = props;
+  useEffect(() => {
+    if (frame === null) return;
+    const cells = {
+      x: Math.max(1, Math.floor((frame.width - frame.left - frame.right) / CELL_PX)),
+      y: Math.max(1, Math.floor((frame.height - frame.top - frame.bottom) / CELL_PX)),
+    };
+    onLayout({ ...windowOf(extents, { x, y }), cells });
+  }, [extents, frame, x, y, onLayout]);
+}
+
 /** The front over its density cloud. It is moved along like a slider: the arrow keys pick the next real section. */
 export function FrontChart(props: FrontChartProps) {
-  const { front, band, pins, selectedIndex, onSelect, describe } = props;
+  const { front, band, pins, selected, onSelect, describe, cells, bandShare, target, x, y } = props;
+  const { outline, markScale } = props;
   const [ref, size] = useElementSize<HTMLDivElement>();
   const colours = useChartColours();
-  const extents = useExtents(props);
+  const whole = useWholeExtents(props);
+  const { extents, show, change, isWhole } = useChartWindow(props, whole);
   const frame = useMemo(() => (size === null ? null : frameOf(size)), [size]);
+  const { handlers, box } = useChartGestures(ref, frame, change);
+  useLayoutReport(props, extents, frame);
 
-  const place = front.findIndex((point) => point.ties.includes(selectedIndex ?? -1));
-  const chosen = [front[place], ...band, ...pins].find(
-    (point) => point !== undefined && (point === front[place] || point.index === selectedIndex),
-  );
-  const { cells, bandShare, target, x, y } = props;
+  const place = front.findIndex((point) => point.ties.includes(selected?.index ?? -1));
   const option = useMemo(() => {
     if (frame === null) return null;
-    const selected = chosen ?? null;
-    const input = { x, y, cells, front, band, bandShare, pins, target, describe, selected };
+    const input = {
+      x,
+      y,
+      cells,
+      front,
+      outline,
+      markScale,
+      band,
+      bandShare,
+      pins,
+      target,
+      describe,
+      selected,
+    };
     return frontChartOption({ ...input, xExtent: extents.x, yExtent: extents.y, frame, colours });
-  }, [x, y, cells, front, band, bandShare, pins, target, describe, chosen, extents, frame, colours]);
+  }, [
+    x,
+    y,
+    cells,
+    front,
+    outline,
+    markScale,
+    band,
+    bandShare,
+    pins,
+    target,
+    describe,
+    selected,
+    extents,
+    frame,
+    colours,
+  ]);
 
   const pick = (xPx: number, yPx: number) => {
     if (frame === null) return;
     const marks = [...pins, ...front, ...(bandShare > 0 ? band : [])].map((point) => ({
       index: point.index,
-      x: point.x * x.perSi,
-      y: point.y * y.perSi,
+      x: toPlot(x, point.x),
+      y: toPlot(y, point.y),
     }));
-    const plot = { frame, xExtent: extents.x, yExtent: extents.y };
-    const mark = nearestMark(marks, { xPx, yPx }, plot);
-    if (mark !== undefined) onSelect(mark.index);
+    const mark = nearestMark(marks, { xPx, yPx }, { frame, xExtent: extents.x, yExtent: extents.y });
+    if (mark !== undefined) return onSelect(mark.index);
+    const perPx = {
+      x: (extents.x.max - extents.x.min) / (frame.width - frame.left - frame.right),
+      y: (extents.y.max - extents.y.min) / (frame.height - frame.top - frame.bottom),
+    };
+    const at = {
+      x: fromPlot(x, extents.x.min + (xPx - frame.left) * perPx.x),
+      y: fromPlot(y, extents.y.max - (yPx - frame.top) * perPx.y),
+    };
+    props.onCloud({ at, perPx, reachPx: REACH_PX });
   };
 
   const move = (event: KeyboardEvent) => {
+    if (event.ctrlKey || event.metaKey || event.altKey) return;
+    const zoom = ZOOM_OF_KEY[event.key];
+    const shift = event.shiftKey ? SHIFT_OF_KEY[event.key] : undefined;
     const step = STEP_OF_KEY[event.key];
-    if (step === undefined || front.length === 0) return;
+    if (zoom !== undefined) change((now) => zoomedExtents(now, zoom));
+    else if (event.key === '0') show(null);
+    else if (shift !== undefined) change((now) => movedExtents(now, shift));
+    else if (step !== undefined && front.length > 0) {
+      const from = place === -1 ? (step > 0 ? -1 : front.length) : place;
+      onSelect(front[Math.min(Math.max(from + step, 0), front.length - 1)]!.index);
+    } else return;
     event.preventDefault();
-    const from = place === -1 ? (step > 0 ? -1 : front.length) : place;
-    const to = Math.min(Math.max(from + step, 0), front.length - 1);
-    onSelect(front[to]!.index);
   };
 
   return (
-    <div
-      ref={ref}
-      role="slider"
-      tabIndex={front.length > 0 ? 0 : -1}
-      aria-label={`Section along the front, ${y.title} against ${x.title}`}
-      aria-valuemin={front.length > 0 ? 1 : 0}
-      aria-valuemax={front.length}
-      aria-valuenow={Math.max(place + 1, front.length > 0 ? 1 : 0)}
-      aria-valuetext={selectedIndex === null ? 'none selected' : describe(selectedIndex)}
-      onKeyDown={move}
-      className="h-full w-full"
-    >
-      {option !== null && <Chart option={option} onPoint={pick} />}
+    <div className="flex h-full flex-col">
+      <div className="flex flex-wrap items-center gap-x-4 gap-y-1 pb-1">
+        {props.toolbar}
+        <ChartControls
+          isXLog={x.isLog}
+          isYLog={y.isLog}
+          isWhole={isWhole}
+          onLog={props.onLog}
+          onZoom={change}
+          onWhole={() => show(null)}
+        />
+      </div>
+      <div
+        ref={ref}
+        role="slider"
+        tabIndex={front.length > 0 ? 0 : -1}
+        aria-label={`Section along the front, ${y.title} against ${x.title}`}
+        aria-valuemin={front.length > 0 ? 1 : 0}
+        aria-valuemax={front.length}
+        aria-valuenow={Math.max(place + 1, front.length > 0 ? 1 : 0)}
+        aria-valuetext={selected === null ? 'none selected' : describe(selected.index)}
+        onKeyDown={move}
+        onDoubleClick={() => show(null)}
+        {...handlers}
+        className="relative min-h-0 w-full flex-1 select-none"
+      >
+        {option !== null && <Chart option={option} onPoint={pick} />}
+        {box !== null && (
+          <div
+            aria-hidden="true"
+            className="pointer-events-none absolute border border-ink bg-concrete/40"
+            style={{
+              left: Math.min(box.from.xPx, box.to.xPx),
+              top: Math.min(box.from.yPx, box.to.yPx),
+              width: Math.abs(box.to.xPx - box.from.xPx),
+              height: Math.abs(box.to.yPx - box.from.yPx),
+            }}
+          />
+        )}
+      </div>
     </div>
   );
 }

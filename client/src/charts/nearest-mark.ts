@@ -3,13 +3,13 @@ import type { PlotFrame } from './front-chart-input.ts';
 
 export interface Mark {
   readonly index: number;
-  /** In the shown units. */
+  /** Places along the axes as they are laid out. */
   readonly x: number;
   readonly y: number;
 }
 
 /** A finger covers about this much, CSS pixels. */
-const REACH_PX = 24;
+export const REACH_PX = 24;
 
 /** The mark under or next to the pointer, so that a click near a small mark still picks a real section. */
 export function nearestMark(

@@ -18,7 +18,14 @@ export function ToastRegion() {
   );
 }
 
+/** What can still be done about it, one word on a button. */
+interface NoticeAction {
+  readonly words: string;
+  readonly act: () => void;
+}
+
 export const notify = {
-  done: (text: string) => toast.success(text),
+  done: (text: string, action?: NoticeAction) =>
+    toast.success(text, action && { action: { label: action.words, onClick: action.act } }),
   failed: (text: string) => toast.error(text),
 };

@@ -11,6 +11,7 @@ const axis = (direction: 'less' | 'more'): ChartAxis => ({
   unit: 'kg/m',
   direction,
   perSi: 1,
+  isLog: false,
   formatTick: String,
 });
 

@@ -14,8 +14,22 @@ const COLOURS = {
 };
 
 const input: FrontChartInput = {
-  x: { title: 'Steel', unit: 'lb/ft', direction: 'less', perSi: 0.5, formatTick: (v) => `${v}` },
-  y: { title: 'Curvature ductility μφ', unit: '', direction: 'more', perSi: 1, formatTick: (v) => `${v}` },
+  x: {
+    title: 'Steel',
+    unit: 'lb/ft',
+    direction: 'less',
+    perSi: 0.5,
+    isLog: false,
+    formatTick: (v) => `${v}`,
+  },
+  y: {
+    title: 'Curvature ductility μφ',
+    unit: '',
+    direction: 'more',
+    perSi: 1,
+    isLog: false,
+    formatTick: (v) => `${v}`,
+  },
   xExtent: { min: 5, max: 25, step: 5 },
   yExtent: { min: 0, max: 15, step: 5 },
   frame: { width: 700, height: 400, left: 50, right: 20, top: 30, bottom: 40 },
@@ -24,6 +38,8 @@ const input: FrontChartInput = {
     { index: 4, x: 20, y: 6, tieCount: 2, ties: [4, 9] },
     { index: 5, x: 30, y: 9, tieCount: 1, ties: [5] },
   ],
+  outline: [],
+  markScale: null,
   band: [
     { index: 4, x: 20, y: 6 },
     { index: 6, x: 20.5, y: 5 },
@@ -48,6 +64,41 @@ const seriesOf = (changed: Partial<FrontChartInput> = {}): ReadonlyMap<string, D
 describe('the front chart', () => {
   it('prints every mark in the unit of its axis, with the index to pick it by', () => {
     expect(seriesOf().get('front')!.data).toEqual([{ value: [10, 6, 4] }, { value: [15, 9, 5] }]);
+  });
+
+  it('lays everything by its logarithm along an axis that is one, and prints the values themselves', () => {
+    const x = { ...input.x, isLog: true };
+    const xExtent = { min: 0, max: 2, step: 0 };
+    const option = frontChartOption({ ...input, x, xExtent });
+    const drawn = new Map((option.series as DrawnSeries[]).map((series) => [series.id, series]));
+    expect(drawn.get('front')!.data[0]).toEqual({ value: [1, 6, 4] });
+    expect(drawn.get('density')!.data).toEqual([[1, 2, Math.log10(20), 4, 12]]);
+    const { axisLabel } = option.xAxis as {
+      axisLabel: { customValues: number[]; formatter: (place: number) => string };
+    };
+    expect(axisLabel.customValues.map((place) => Number(axisLabel.formatter(place)))).toEqual(
+      [1, 2, 5, 10, 20, 50, 100].map((value) => expect.closeTo(value, 9)),
+    );
+  });
+
+  it('tells a third measure by tint or by size, and leaves a mark without a value as it is', () => {
+    const marksWith = (style: 'tint' | 'size') =>
+      seriesOf({ markScale: { style, shares: [1, null] } }).get('front')!.data as {
+        symbolSize?: number;
+        itemStyle?: { color: string };
+      }[];
+    const [tinted, bare] = marksWith('tint');
+    expect(tinted!.itemStyle!.color).not.toBe(COLOURS.paper);
+    expect(bare).toEqual({ value: [15, 9, 5] });
+    const small = seriesOf({ markScale: { style: 'size', shares: [0, 1] } }).get('front')!.data as {
+      symbolSize: number;
+    }[];
+    expect(small[1]!.symbolSize).toBeGreaterThan(2 * small[0]!.symbolSize);
+  });
+
+  it('draws the front without ranges faintly behind, where ranges are set', () => {
+    expect(seriesOf().get('outline')!.data).toEqual([]);
+    expect(seriesOf({ outline: [{ index: 1, x: 20, y: 9 }] }).get('outline')!.data).toHaveLength(3);
   });
 
   it('tints the band from the best to the band’s edge over the whole height', () => {

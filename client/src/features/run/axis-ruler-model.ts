@@ -6,6 +6,8 @@ export interface RulerMark {
   readonly xPx: number;
   /** Height of the feasible share standing on it. */
   readonly heightPx: number;
+  /** Height of the part of it that lies within the ranges set. */
+  readonly withinPx: number;
   /** Of the sections evaluated with this value, the part that meets every check. */
   readonly share: number;
   readonly feasible: number;
@@ -48,7 +50,11 @@ function labelEvery(count: number, frame: RulerFrame): number {
 }
 
 /** Lays the values of an axis on a ruler, each with its feasible share relative to the largest. */
-export function rulerMarks(counts: readonly AxisCount[], frame: RulerFrame): RulerMark[] {
+export function rulerMarks(
+  counts: readonly AxisCount[],
+  frame: RulerFrame,
+  within: readonly number[] | null = null,
+): RulerMark[] {
   const ordered = counts.toSorted((a, b) => a.value - b.value);
   const low = ordered[0]?.value ?? 0;
   const span = (ordered.at(-1)?.value ?? low) - low;
@@ -57,12 +63,15 @@ export function rulerMarks(counts: readonly AxisCount[], frame: RulerFrame): Rul
   const every = labelEvery(ordered.length, frame);
   return ordered.map((count, k) => {
     const share = shares[k]!;
+    const heightPx = share === 0 ? 0 : Math.max(LEAST_BAR_PX, (share / largest) * frame.barPx);
+    const kept = within === null || count.feasible === 0 ? 1 : within[k]! / count.feasible;
     const along = span === 0 ? 0.5 : (count.value - low) / span;
     return {
       ...count,
       share,
       xPx: frame.insetPx + along * (frame.widthPx - 2 * frame.insetPx),
-      heightPx: share === 0 ? 0 : Math.max(LEAST_BAR_PX, (share / largest) * frame.barPx),
+      heightPx,
+      withinPx: kept === 0 ? 0 : Math.max(Math.min(heightPx, LEAST_BAR_PX), heightPx * kept),
       isLabelled: k % every === 0,
       hasTick: k % every === 0 || pitchOf(ordered.length, frame) >= LEAST_TICK_PITCH_PX,
     };

@@ -16,6 +16,8 @@ interface AxisRulerProps {
   readonly kind: 'length' | 'stress';
   readonly units: UnitSystem;
   readonly counts: readonly AxisCount[];
+  /** Sections within the ranges set at each value, in the order of the counts; null where none is set. */
+  readonly within: readonly number[] | null;
   readonly selected: number | null;
   readonly edges: readonly EdgeShare[];
 }
@@ -28,8 +30,8 @@ function edgeWords(edges: readonly EdgeShare[], ends: readonly [string, string])
 }
 
 /** One axis drawn as a scale ruler: what share of each value meets every check, and where the chosen section lies. */
-export function AxisRuler({ name, symbol, kind, units, counts, selected, edges }: AxisRulerProps) {
-  const marks = rulerMarks(counts, FRAME);
+export function AxisRuler({ name, symbol, kind, units, counts, within, selected, edges }: AxisRulerProps) {
+  const marks = rulerMarks(counts, FRAME, within);
   const barPx = rulerBarPx(counts.length, FRAME);
   const print = (value: number | undefined) => formatQuantity(value, kind, units, { hideUnit: true });
   const words = edgeWords(edges, [print(marks[0]?.value), print(marks.at(-1)?.value)]);
@@ -69,8 +71,18 @@ export function AxisRuler({ name, symbol, kind, units, counts, selected, edges }
               width={barPx}
               height={mark.heightPx}
               className="fill-meets"
-              opacity={0.6}
+              opacity={within === null ? 0.6 : 0.2}
             />
+            {within !== null && (
+              <rect
+                x={mark.xPx - barPx / 2}
+                y={BASE_Y - mark.withinPx}
+                width={barPx}
+                height={mark.withinPx}
+                className="fill-meets"
+                opacity={0.65}
+              />
+            )}
             {mark.hasTick && (
               <line
                 x1={mark.xPx}

@@ -12,7 +12,12 @@ interface FellOutProps {
   readonly definition: SweepDefinition;
   readonly reader: MeasureReader;
   readonly onSelect: (index: number) => void;
+  /** Shows it all in full. */
+  readonly onMore: () => void;
 }
+
+/** So many prices are told here; the rest in full elsewhere. */
+const PRICES_TOLD = 4;
 
 /** Why the rest fell out: one section may fail several checks, so the shares overlap. */
 function Shares({ result }: { readonly result: ViewResult }) {
@@ -26,7 +31,6 @@ function Shares({ result }: { readonly result: ViewResult }) {
         <tr>
           <th scope="col">Check</th>
           <th scope="col">Share that fails it</th>
-          <th scope="col">Fail nothing else</th>
         </tr>
       </thead>
       <tbody>
@@ -34,23 +38,26 @@ function Shares({ result }: { readonly result: ViewResult }) {
           <tr key={check} className="align-baseline">
             <th scope="row" className="py-0.5 text-left font-normal">
               {checkLabel(check).name}
-              {failedOnlyThis > 0 && (
-                <span className="block text-xs text-muted">
-                  alone <span className="num">{formatWhole(failedOnlyThis)}</span>
-                </span>
-              )}
             </th>
             <td className="w-[54%] py-0.5 pl-2">
               <span className="flex items-center gap-2">
-                <span className="min-w-0 flex-1" aria-hidden="true">
+                <span
+                  className="relative h-2.5 min-w-0 flex-1"
+                  title={`${formatWhole(failed)} fail it, ${formatWhole(failedOnlyThis)} of them nothing else`}
+                >
                   <span
-                    className="hatched block h-2.5 border border-concrete-edge"
+                    className="hatched absolute inset-y-0 left-0 border border-concrete-edge"
                     style={{ width: `${(failed / most) * 100}%` }}
+                  />
+                  <span
+                    className="absolute inset-y-0 left-0 bg-fails"
+                    style={{ width: `${(failedOnlyThis / most) * 100}%` }}
                   />
                 </span>
                 <span className="num w-14 shrink-0 text-right">
                   {formatNumber((failed / result.evaluated) * 100, 3, true)} %
                 </span>
+                <span className="sr-only">{formatWhole(failedOnlyThis)} of them nothing else</span>
               </span>
             </td>
           </tr>
@@ -61,16 +68,26 @@ function Shares({ result }: { readonly result: ViewResult }) {
 }
 
 /** What was asked in vain or at a price, check by check. */
-export function FellOut({ result, definition, reader, onSelect }: FellOutProps) {
+export function FellOut({ result, definition, reader, onSelect, onMore }: FellOutProps) {
   const prices = pricesOfChecks(result);
   const { x } = result.view;
   return (
     <section className="border-t border-rule pt-3">
-      <h2 className="pb-1.5 text-xs font-semibold text-muted">Why the rest fell out</h2>
+      <h2 className="pb-1 text-xs font-semibold text-muted">Why the rest fell out</h2>
       <Shares result={result} />
+      <p className="flex flex-wrap items-center gap-x-1.5 pt-1 text-xs text-muted">
+        <span className="inline-block h-2 w-4 bg-fails" aria-hidden="true" /> nothing else
+        <button
+          type="button"
+          className="ml-auto min-h-6 text-ink underline decoration-concrete-edge hover:decoration-current"
+          onClick={onMore}
+        >
+          In full, with the nearest misses
+        </button>
+      </p>
       {prices.length > 0 && (
         <ul className="mt-3 grid gap-1.5 text-sm text-muted">
-          {prices.map(({ check, index, without, best }) => (
+          {prices.slice(0, PRICES_TOLD).map(({ check, index, without, best }) => (
             <li key={check}>
               Without {checkWords(check, definition, reader.units)} the best would be{' '}
               <button

@@ -1,18 +1,24 @@
-import { useCallback, useId, useMemo, type ReactNode } from 'react';
+import { useCallback, useMemo, type ReactNode } from 'react';
 import type { Run, ViewProgress } from '#shared/contract/records.ts';
 import type { MeasureId } from '#shared/engine/measures.ts';
 import type { View } from '#shared/sweep/problem.ts';
-import { FrontChart } from '#client/src/charts/front-chart.tsx';
+import type { Point } from '#shared/sweep/result.ts';
+import { FrontChart, type CloudSpot } from '#client/src/charts/front-chart.tsx';
 import type { ChartPin } from '#client/src/charts/front-chart-input.ts';
-import { formatNumber } from '#shared/print/format-quantity.ts';
-import { measureLabel } from '#client/src/lib/measure-labels.ts';
-import { unavailableReason } from '#client/src/lib/measure-availability.ts';
-import { sizeText, steelText } from '#shared/print/section-text.ts';
-import { bandWithin } from './band-within.ts';
 import { MeasureChoice } from '#client/src/charts/measure-choice.tsx';
+import { formatNumber } from '#shared/print/format-quantity.ts';
+import { sizeText, steelText } from '#shared/print/section-text.ts';
+import { unavailableReason } from '#client/src/lib/measure-availability.ts';
+import { measureLabel } from '#client/src/lib/measure-labels.ts';
+import { BandSlider } from './band-slider.tsx';
+import type { ExploreKey } from './explore-axis.ts';
+import { thirdMeasure } from './mark-scale.ts';
 import { chartAxis, measureText, type MeasureReader } from './measure-text.ts';
-import { WIDEST_BAND_SHARE, withMeasure } from './run-address.ts';
+import { logPart, viewPart, windowPart, withMeasure } from './run-address.ts';
 import type { SectionSource } from './section-source.ts';
+import { ThirdChoice } from './third-choice.tsx';
+import type { Explore } from './use-explore.ts';
+import type { RunAddressControls } from './use-run-address.ts';
 import { isUnderWay } from './view-progress.ts';
 
 interface FrontPanelProps {
@@ -21,17 +27,15 @@ interface FrontPanelProps {
   readonly progress: ViewProgress | null;
   readonly source: SectionSource;
   readonly reader: MeasureReader;
+  readonly explore: Explore;
+  readonly address: RunAddressControls;
+  readonly keys: readonly ExploreKey[];
   readonly pins: readonly ChartPin[];
-  readonly bandShare: number;
-  readonly selectedIndex: number | null;
+  /** The chosen section by the two measures of the view; null where it has no place on the chart. */
+  readonly selected: Point | null;
   /** Stands in the chart's place when a whole run found nothing. */
   readonly whenEmpty: ReactNode;
-  readonly onView: (view: View) => void;
-  readonly onBandShare: (share: number) => void;
-  readonly onSelect: (index: number) => void;
 }
-
-const NONE = [] as const;
 
 /** The target belongs on the chart when the ductility is one of its axes. */
 function targetOf(run: Run, view: View) {
@@ -42,119 +46,131 @@ function targetOf(run: Run, view: View) {
   return view.x === 'curvatureDuctility' ? ({ axis: 'x', value, label } as const) : null;
 }
 
-function BandSlider({
-  share,
-  count,
-  onChange,
-}: {
-  share: number;
-  count: string;
-  onChange: (share: number) => void;
-}) {
-  const id = useId();
-  return (
-    <span className="ml-auto flex items-center gap-2 text-sm text-muted">
-      <label htmlFor={id}>Near-best band</label>
-      <input
-        id={id}
-        type="range"
-        min={0}
-        max={WIDEST_BAND_SHARE * 100}
-        step={0.5}
-        value={share * 100}
-        aria-valuetext={`${share * 100} %, ${count}`}
-        onChange={(event) => onChange(Number(event.target.value) / 100)}
-        className="w-24 accent-[var(--near-mark)]"
-      />
-      <span className="num w-28 whitespace-nowrap">
-        {formatNumber(share * 100, 3, true)} %, {count}
-      </span>
-    </span>
-  );
-}
-
-/** The trade-off drawn: two measures to choose, the band, and the chart on which a click picks a real section. */
-export function FrontPanel(props: FrontPanelProps) {
-  const { run, view, progress, source, reader, pins, bandShare, selectedIndex, onSelect } = props;
-  const { units } = reader;
-  const result = progress?.result ?? null;
-  const x = useMemo(() => chartAxis(view.x, reader), [view.x, reader]);
-  const y = useMemo(() => chartAxis(view.y, reader), [view.y, reader]);
-  const target = useMemo(() => targetOf(run, view), [run, view]);
-  const band = useMemo(() => (result === null ? NONE : bandWithin(result, bandShare)), [result, bandShare]);
-
-  const reasonAgainst = useCallback(
-    (measure: MeasureId) =>
-      unavailableReason(measure, {
-        space: run.definition.space,
-        demand: run.definition.demand,
-        basis: run.basis,
-        units,
-      }),
-    [run, units],
-  );
-  const describe = useCallback(
+/** A section in a line or two, for the pointer and for screen readers. */
+function useDescribe({ source, reader, view, explore }: FrontPanelProps) {
+  const { front } = explore.shown;
+  return useCallback(
     (index: number) => {
       const { section, evaluation } = source.evaluatedAt(index);
+      const { units } = reader;
       const values = [view.x, view.y].map(
         (measure) =>
           `${measureLabel(measure, units).symbol} ${measureText(measure, evaluation.measures[measure], reader)}`,
       );
-      const ties = result?.front.find((point) => point.index === index)?.tieCount ?? 1;
+      const ties = front.find((point) => point.index === index)?.tieCount ?? 1;
       const tied = ties > 1 ? `\n${ties} sections with these two values` : '';
       return `${sizeText(section, units)}, ${steelText(section, units)}\n${values.join(', ')}${tied}`;
     },
-    [source, reader, units, view, result],
+    [source, reader, view, front],
+  );
+}
+
+function PairChoice({ run, view, reader, address }: FrontPanelProps) {
+  const { units } = reader;
+  const { space, demand } = run.definition;
+  const reasonAgainst = (measure: MeasureId) =>
+    unavailableReason(measure, { space, demand, basis: run.basis, units });
+  const choice = (side: 'x' | 'y') => (
+    <MeasureChoice
+      side={side}
+      value={view[side]}
+      units={units}
+      reasonAgainst={reasonAgainst}
+      onChange={(measure) => address.write(viewPart(withMeasure(view, side, measure)))}
+    />
+  );
+  return (
+    <>
+      {choice('y')}
+      <span className="text-muted">against</span>
+      {choice('x')}
+    </>
+  );
+}
+
+function useChartProps(props: FrontPanelProps) {
+  const { run, view, reader, address, explore } = props;
+  const { isXLog, isYLog, write, select } = address;
+  const x = useMemo(() => chartAxis(view.x, reader, isXLog), [view.x, reader, isXLog]);
+  const y = useMemo(() => chartAxis(view.y, reader, isYLog), [view.y, reader, isYLog]);
+  const target = useMemo(() => targetOf(run, view), [run, view]);
+  const { pick } = explore;
+  const onCloud = useCallback(
+    (spot: CloudSpot) => void pick(spot).then((index) => index !== null && select(index)),
+    [pick, select],
+  );
+  return {
+    x,
+    y,
+    target,
+    onCloud,
+    describe: useDescribe(props),
+    onWindow: useCallback((window: Parameters<typeof windowPart>[0]) => write(windowPart(window)), [write]),
+    onLog: useCallback((isX: boolean, isY: boolean) => write(logPart(isX, isY)), [write]),
+  };
+}
+
+/** The trade-off drawn: two measures to choose, the band, and the chart on which a click picks a real section. */
+export function FrontPanel(props: FrontPanelProps) {
+  const { progress, source, reader, explore, address, keys, pins } = props;
+  const result = progress?.result ?? null;
+  const { front, band, isBandCut, cells, outline } = explore.shown;
+  const chart = useChartProps(props);
+  const { third: thirdKey, markStyle } = address;
+  const third = useMemo(
+    () => (thirdKey === null ? null : thirdMeasure(front, { key: thirdKey, style: markStyle }, source)),
+    [front, thirdKey, markStyle, source],
+  );
+  const fitted = useMemo(
+    () => ({ cells: result?.density ?? [], front: result?.front ?? [] }),
+    [result?.density, result?.front],
   );
   const isEmpty = result?.front.length === 0 && progress !== null && !isUnderWay(progress.state);
-  const isCut = result?.isBandCut === true && band.length === result.band.length;
 
   return (
     <section aria-label="Trade-off" className="flex min-w-0 flex-col">
-      <div className="flex flex-wrap items-baseline gap-x-3 gap-y-1 pb-1">
-        <MeasureChoice
-          side="y"
-          value={view.y}
-          units={units}
-          reasonAgainst={reasonAgainst}
-          onChange={(measure) => props.onView(withMeasure(view, 'y', measure))}
-        />
-        <span className="text-muted">against</span>
-        <MeasureChoice
-          side="x"
-          value={view.x}
-          units={units}
-          reasonAgainst={reasonAgainst}
-          onChange={(measure) => props.onView(withMeasure(view, 'x', measure))}
-        />
+      <div className="flex flex-wrap items-baseline gap-x-3 gap-y-1 pb-1.5">
+        <PairChoice {...props} />
         <BandSlider
-          share={bandShare}
-          count={`${isCut ? 'over ' : ''}${band.length}`}
-          onChange={props.onBandShare}
+          share={address.bandShare}
+          count={`${isBandCut ? 'over ' : ''}${band.length}`}
+          onChange={(share) => address.write({ band: String(Math.round(share * 1000) / 10) })}
         />
       </div>
       {isEmpty ? (
         props.whenEmpty
       ) : (
-        <div className="h-[clamp(19rem,46dvh,34rem)]">
+        <div className="h-[clamp(21rem,50dvh,38rem)]">
           {result === null ? (
             <div className="h-full animate-pulse border-b border-l border-rule" role="status">
               <span className="sr-only">The chart appears with the first results</span>
             </div>
           ) : (
             <FrontChart
-              x={x}
-              y={y}
-              cells={result.density}
-              front={result.front}
+              {...chart}
+              cells={cells}
+              front={front}
+              outline={outline}
               band={band}
-              bandShare={bandShare}
+              bandShare={address.bandShare}
+              markScale={third?.scale ?? null}
               pins={pins}
-              target={target}
-              describe={describe}
-              selectedIndex={selectedIndex}
-              onSelect={onSelect}
+              fitted={fitted}
+              selected={props.selected}
+              window={address.window}
+              onLayout={explore.onLayout}
+              onSelect={address.select}
               isGrowing={progress !== null && isUnderWay(progress.state)}
+              toolbar={
+                <ThirdChoice
+                  value={thirdKey}
+                  style={markStyle}
+                  keys={keys}
+                  third={third}
+                  reader={reader}
+                  onChange={(key, style) => address.write({ by: key, as: style === 'tint' ? null : style })}
+                />
+              }
             />
           )}
         </div>

@@ -29,13 +29,14 @@ const unitText = (measure: MeasureId, { units, currency }: MeasureReader): strin
 };
 
 /** The measure as an axis of the chart. */
-export function chartAxis(measure: MeasureId, reader: MeasureReader): ChartAxis {
+export function chartAxis(measure: MeasureId, reader: MeasureReader, isLog: boolean): ChartAxis {
   const label = measureLabel(measure, reader.units);
   const isNamed = label.symbol === label.name || label.kind === 'co2e-per-length';
   return {
     title: isNamed ? label.name : `${label.name} ${label.symbol}`,
     unit: unitText(measure, reader),
     direction: label.better,
+    isLog,
     perSi: 1 / displayUnit(label.kind, reader.units).perUnit,
     formatTick: (shown) => formatNumber(shown, 6, true),
   };

@@ -2,22 +2,29 @@ import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
 import type { ViewResult } from '#shared/sweep/result.ts';
 import { checkLabel } from '#shared/print/check-labels.ts';
 import { formatNumber, formatWhole } from '#shared/print/format-quantity.ts';
+import { RatioBar } from '#client/src/ui/ratio-bar.tsx';
+import { sizeText } from '#shared/print/section-text.ts';
 import { EmptyState } from '#client/src/ui/empty-state.tsx';
 import { checkWords } from './check-words.ts';
 import { measureText, type MeasureReader } from './measure-text.ts';
-import { pricesOfChecks } from './price-of-checks.ts';
+import { missedChecks } from './missed-checks.ts';
+import type { SectionSource } from './section-source.ts';
 
 interface NothingFeasibleProps {
   readonly result: ViewResult;
   readonly definition: SweepDefinition;
+  readonly source: SectionSource;
   readonly reader: MeasureReader;
   readonly onSelect: (index: number) => void;
 }
 
 /** No section meets every check: which check took most, and the sections that miss by one check only. */
-export function NothingFeasible({ result, definition, reader, onSelect }: NothingFeasibleProps) {
+export function NothingFeasible({ result, definition, source, reader, onSelect }: NothingFeasibleProps) {
   const worst = result.failures.toSorted((a, b) => b.failed - a.failed)[0];
-  const nearest = pricesOfChecks(result);
+  const nearest = missedChecks(result, source).flatMap(({ check, nearest: one }) =>
+    one === null ? [] : [{ check, ...one }],
+  );
+  const byMiss = nearest.toSorted((a, b) => (a.result?.ratio ?? Infinity) - (b.result?.ratio ?? Infinity));
   return (
     <EmptyState title={`None of ${formatWhole(result.evaluated)} sections meets every check`}>
       <div className="grid gap-3">
@@ -32,18 +39,22 @@ export function NothingFeasible({ result, definition, reader, onSelect }: Nothin
           <p>No section that can be placed fails one check only. Widen the ranges, or ask for less.</p>
         ) : (
           <div>
-            <p>The nearest sections fail one check only:</p>
-            <ul className="mt-1 grid gap-1">
-              {nearest.map(({ check, index, without }) => (
-                <li key={check}>
-                  without {checkWords(check, definition, reader.units)}:{' '}
-                  <button
-                    type="button"
-                    className="num text-ink underline decoration-concrete-edge hover:decoration-current"
-                    onClick={() => onSelect(index)}
-                  >
-                    {measureText(result.view.x, without, reader)}
-                  </button>
+            <p>The best sections that fail one check only, the nearest miss first:</p>
+            <ul className="mt-2 grid gap-2">
+              {byMiss.map(({ check, index, value, result: judged }) => (
+                <li key={check} className="grid items-center gap-x-4 sm:grid-cols-[minmax(0,1fr)_16rem_6rem]">
+                  <span>
+                    without {checkWords(check, definition, reader.units)}:{' '}
+                    <button
+                      type="button"
+                      className="num text-ink underline decoration-concrete-edge hover:decoration-current"
+                      onClick={() => onSelect(index)}
+                    >
+                      {sizeText(source.sectionAt(index), reader.units)}
+                    </button>
+                  </span>
+                  <RatioBar ratio={judged?.ratio ?? null} passes={false} />
+                  <span className="num text-right">{measureText(result.view.x, value, reader)}</span>
                 </li>
               ))}
             </ul>

@@ -2,6 +2,7 @@ import type { Run } from '#shared/contract/records.ts';
 import { evaluateSection } from '#shared/engine/evaluate.ts';
 import type { Evaluation } from '#shared/engine/evaluation.ts';
 import type { SectionInput } from '#shared/engine/section.ts';
+import type { Space } from '#shared/sweep/problem.ts';
 import { expandSpace, sectionAt } from '#shared/sweep/space.ts';
 
 export interface EvaluatedSection {
@@ -13,6 +14,7 @@ export interface EvaluatedSection {
 /** Sections of a run by their index, computed here from what the run froze, by the same code as on the server. */
 export interface SectionSource {
   readonly size: number;
+  readonly space: Space;
   readonly sectionAt: (index: number) => SectionInput;
   readonly evaluatedAt: (index: number) => EvaluatedSection;
 }
@@ -26,6 +28,7 @@ export function createSectionSource(run: Pick<Run, 'definition' | 'basis'>): Sec
   const kept = new Map<number, EvaluatedSection>();
   return {
     size: space.size,
+    space,
     sectionAt: (index) => sectionAt(space, index),
     evaluatedAt: (index) => {
       const known = kept.get(index);

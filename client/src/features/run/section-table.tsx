@@ -1,225 +1,263 @@
-import { useMemo, useState } from 'react';
-import type { Point, FrontPoint } from '#shared/sweep/result.ts';
-import { formatQuantity } from '#shared/print/format-quantity.ts';
-import { measureLabel } from '#client/src/lib/measure-labels.ts';
-import { barsText, sizeText } from '#shared/print/section-text.ts';
-import { toDisplay, unitLabel } from '#shared/print/units.ts';
-import { Button } from '#client/src/ui/button.tsx';
+import { useVirtualizer } from '@tanstack/react-virtual';
+import { useEffect, useId, useMemo, useRef, type KeyboardEvent } from 'react';
+import { sizeText } from '#shared/print/section-text.ts';
 import { SegmentedControl } from '#client/src/ui/segmented-control.tsx';
-import { TableFrame } from '#client/src/ui/table-frame.tsx';
-import { columnDecimals } from './column-decimals.ts';
+import { ColumnChooser } from './column-chooser.tsx';
+import type { ExploreKey } from './explore-axis.ts';
 import type { MeasureReader } from './measure-text.ts';
-import { sortRows, type RowKey, type RowOrder, type SectionRow } from './section-rows.ts';
+import { allColumns, cellPrinter, shownColumns, type Column } from './row-columns.ts';
+import { orderPart, type ListName } from './run-address.ts';
+import { findRows, rowsOf, sortRows, type RowOrder, type SectionRow } from './section-rows.ts';
 import type { SectionSource } from './section-source.ts';
+import type { Shown } from './use-explore.ts';
+import type { RunAddressControls } from './use-run-address.ts';
 
 interface SectionTableProps {
-  readonly front: readonly FrontPoint[];
-  readonly band: readonly Point[];
-  readonly isBandCut: boolean;
+  readonly shown: Shown;
+  readonly keys: readonly ExploreKey[];
   readonly source: SectionSource;
   readonly reader: MeasureReader;
+  readonly address: RunAddressControls;
   readonly selectedIndex: number | null;
+}
+
+const ROW_PX = 30;
+const OVERSCAN = 8;
+
+const STEP_OF_KEY: Readonly<Record<string, number>> = {
+  ArrowDown: 1,
+  ArrowUp: -1,
+  PageDown: 10,
+  PageUp: -10,
+};
+
+function orderOf(address: RunAddressControls, all: readonly Column[]): RowOrder | null {
+  const column = all.find(({ key }) => key === address.order?.key);
+  return column === undefined ? null : { key: column.key, isDescending: address.order!.isDescending };
+}
+
+/** Once up, once down, then as the front runs. */
+function nextOrder(order: RowOrder | null, key: RowOrder['key']): RowOrder | null {
+  if (order?.key !== key) return { key, isDescending: false };
+  return order.isDescending ? null : { key, isDescending: true };
+}
+
+function Heads(props: {
+  readonly columns: readonly Column[];
+  readonly order: RowOrder | null;
+  readonly onOrder: (order: RowOrder | null) => void;
+}) {
+  return (
+    <thead className="sticky top-0 z-10 bg-paper shadow-[0_1px_0_var(--ink)]">
+      <tr>
+        {props.columns.map(({ key, head, unit, isText }) => {
+          const order = props.order?.key === key ? props.order : null;
+          const mark = order === null ? '' : order.isDescending ? ' ↓' : ' ↑';
+          return (
+            <th
+              key={key}
+              scope="col"
+              className={isText ? undefined : 'figure'}
+              aria-sort={order === null ? undefined : order.isDescending ? 'descending' : 'ascending'}
+            >
+              <button
+                type="button"
+                className="hover:text-ink hover:underline"
+                onClick={() => props.onOrder(nextOrder(props.order, key))}
+              >
+                {head}
+                {unit !== '' && <span className="block text-xs font-normal">{unit}</span>}
+                <span aria-hidden="true">{mark}</span>
+              </button>
+            </th>
+          );
+        })}
+      </tr>
+    </thead>
+  );
+}
+
+interface RowsProps {
+  readonly rows: readonly SectionRow[];
+  readonly columns: readonly Column[];
+  readonly reader: MeasureReader;
+  readonly label: string;
+  readonly order: RowOrder | null;
+  readonly selectedIndex: number | null;
+  readonly onOrder: (order: RowOrder | null) => void;
   readonly onSelect: (index: number) => void;
 }
 
-/** More rows than a screen or two are laid out only when asked for. */
-const ROWS_AT_FIRST = 16;
-
-interface Column {
-  readonly key: RowKey;
-  readonly head: string;
-  readonly unit: string;
-  readonly isText?: boolean;
-  readonly cell: (row: SectionRow) => string;
-}
-
-function steelCell(row: SectionRow, face: 'tension' | 'compression', reader: MeasureReader): string {
-  const { reinforcement } = row.section;
-  if (reinforcement.kind === 'bars') return barsText(reinforcement[face]);
-  const geometry = row.evaluation.geometry;
-  return formatQuantity(face === 'tension' ? geometry?.asMm2 : geometry?.asPrimeMm2, 'area', reader.units);
-}
-
-const MEASURES = [
-  'steelKgPerM',
-  'costPerM',
-  'curvatureDuctility',
-  'designStrengthNmm',
-  'utilisation',
-] as const;
-
-function measureColumn(
-  measure: (typeof MEASURES)[number],
-  reader: MeasureReader,
-  rows: readonly SectionRow[],
-): Column {
-  const { units, currency } = reader;
-  const label = measureLabel(measure, units);
-  const shown = ({ evaluation }: SectionRow) => {
-    const value = evaluation.measures[measure];
-    return value === null ? null : toDisplay(value, label.kind, units);
-  };
-  const decimals = columnDecimals(rows.map(shown));
-  return {
-    key: measure,
-    head: label.symbol,
-    unit: label.kind === 'money-per-length' ? `${currency ?? ''}${label.unit}` : label.unit,
-    cell: (row) =>
-      shown(row)?.toLocaleString('en-US', {
-        minimumFractionDigits: decimals,
-        maximumFractionDigits: decimals,
-      }) ?? '',
-  };
-}
-
-function columnsFor(reader: MeasureReader, rows: readonly SectionRow[]): Column[] {
-  const { units } = reader;
-  const input = (key: 'width' | 'depth' | 'fc', head: string, kind: 'length' | 'stress'): Column => ({
-    key,
-    head,
-    unit: unitLabel(kind, units),
-    cell: ({ section }) =>
-      formatQuantity(
-        key === 'width' ? section.widthMm : key === 'depth' ? section.depthMm : section.fcMPa,
-        kind,
-        units,
-        { hideUnit: true },
-      ),
+/** Only the rows in sight are laid out; two empty ones hold the room of those above and below. */
+function Rows(props: RowsProps) {
+  const { rows, columns, reader, label, selectedIndex, onSelect } = props;
+  const frame = useRef<HTMLDivElement>(null);
+  const printers = useMemo(
+    () => columns.map((column) => cellPrinter(column, rows, reader)),
+    [columns, rows, reader],
+  );
+  // eslint-disable-next-line react-hooks/incompatible-library -- its functions are called here and passed nowhere
+  const list = useVirtualizer({
+    count: rows.length,
+    getScrollElement: () => frame.current,
+    estimateSize: () => ROW_PX,
+    overscan: OVERSCAN,
   });
-  return [
-    input('width', 'b', 'length'),
-    input('depth', 'h', 'length'),
-    input('fc', 'f′c', 'stress'),
-    {
-      key: 'tension',
-      head: 'Bottom',
-      unit: '',
-      isText: true,
-      cell: (row) => steelCell(row, 'tension', reader),
-    },
-    {
-      key: 'compression',
-      head: 'Top',
-      unit: '',
-      isText: true,
-      cell: (row) => steelCell(row, 'compression', reader),
-    },
-    // Without rates, or for a reader who may not see them, a column of blanks would say nothing.
-    ...MEASURES.filter((measure) => measure !== 'costPerM' || reader.currency !== null).map((measure) =>
-      measureColumn(measure, reader, rows),
-    ),
-    { key: 'ties', head: 'Ties', unit: '', cell: (row) => (row.tieCount > 1 ? String(row.tieCount) : '') },
-  ];
-}
+  const place = rows.findIndex((row) => row.index === selectedIndex);
+  useEffect(() => {
+    if (place >= 0) list.scrollToIndex(place, { align: 'auto' });
+  }, [list, place]);
+  const items = list.getVirtualItems();
+  const above = items[0]?.start ?? 0;
+  const below = list.getTotalSize() - (items.at(-1)?.end ?? 0);
+  const stop = items.some((item) => item.index === place) ? place : (items[0]?.index ?? 0);
 
-function useRows(
-  props: SectionTableProps,
-  list: 'front' | 'band',
-  order: RowOrder | null,
-): readonly SectionRow[] {
-  const { front, band, source } = props;
-  return useMemo(() => {
-    const ties = new Map(front.map((point) => [point.index, point.tieCount]));
-    const points = list === 'front' ? front : band;
-    const rows = points.map((point) => ({
-      ...source.evaluatedAt(point.index),
-      tieCount: ties.get(point.index) ?? 1,
-    }));
-    return sortRows(rows, order);
-  }, [front, band, source, list, order]);
-}
-
-/** The numbers behind the chart, for those who would rather read them, and for screen readers. */
-export function SectionTable(props: SectionTableProps) {
-  const { front, band, isBandCut, reader, selectedIndex, onSelect } = props;
-  const [list, setList] = useState<'front' | 'band'>('front');
-  const [order, setOrder] = useState<RowOrder | null>(null);
-  const [isLong, setLong] = useState(false);
-  const rows = useRows(props, list, order);
-  const columns = useMemo(() => columnsFor(reader, rows), [reader, rows]);
-  const shown = isLong ? rows : rows.slice(0, ROWS_AT_FIRST);
-
-  const orderBy = (key: RowKey) =>
-    setOrder((now) => {
-      if (now?.key !== key) return { key, isDescending: false };
-      return now.isDescending ? null : { key, isDescending: true };
-    });
-  const lists = [
-    { value: 'front', label: `Front ${front.length}` },
-    { value: 'band', label: `Near-best band ${isBandCut ? 'over ' : ''}${band.length}` },
-  ] as const;
+  const move = (event: KeyboardEvent) => {
+    const step = STEP_OF_KEY[event.key];
+    if (
+      step === undefined ||
+      !(event.target instanceof HTMLElement) ||
+      event.target.dataset.row === undefined
+    )
+      return;
+    event.preventDefault();
+    const to = Math.min(Math.max(Number(event.target.dataset.row) + step, 0), rows.length - 1);
+    onSelect(rows[to]!.index);
+    list.scrollToIndex(to, { align: 'auto' });
+    requestAnimationFrame(() => frame.current?.querySelector<HTMLElement>(`[data-row="${to}"]`)?.focus());
+  };
 
   return (
-    <section aria-label="Sections as a table">
-      <div className="flex flex-wrap items-baseline justify-between gap-3 pb-2">
-        <h2 className="text-xs font-semibold text-muted">As a table</h2>
-        <SegmentedControl legend="Sections listed" options={lists} value={list} onChange={setList} />
-      </div>
-      <TableFrame label={list === 'front' ? 'Sections on the front' : 'Sections in the near-best band'}>
-        <thead>
-          <tr>
-            {columns.map((column) => {
-              const isOrdered = order?.key === column.key;
-              const mark = !isOrdered ? '' : order.isDescending ? ' ↓' : ' ↑';
-              return (
-                <th
-                  key={column.key}
-                  scope="col"
-                  className={column.isText ? undefined : 'figure'}
-                  aria-sort={isOrdered ? (order.isDescending ? 'descending' : 'ascending') : undefined}
-                >
-                  <button
-                    type="button"
-                    className="hover:text-ink hover:underline"
-                    onClick={() => orderBy(column.key)}
-                  >
-                    {column.head}
-                    {column.unit !== '' && <span className="block text-xs font-normal">{column.unit}</span>}
-                    <span aria-hidden="true">{mark}</span>
-                  </button>
-                </th>
-              );
-            })}
-          </tr>
-        </thead>
+    <div
+      ref={frame}
+      role="region"
+      aria-label={label}
+      tabIndex={0}
+      className="relative max-h-[27rem] max-w-full overflow-auto"
+      onKeyDown={move}
+    >
+      <table className="ledger" aria-label={label} aria-rowcount={rows.length + 1}>
+        <Heads columns={columns} order={props.order} onOrder={props.onOrder} />
         <tbody>
-          {shown.map((row) => {
-            const isChosen = row.index === selectedIndex;
+          {above > 0 && (
+            <tr aria-hidden="true" style={{ height: above }}>
+              <td colSpan={columns.length} />
+            </tr>
+          )}
+          {items.map(({ index: at }) => {
+            const row = rows[at];
+            if (row === undefined) return null;
+            const isChosen = at === place;
             return (
               <tr
                 key={row.index}
+                aria-rowindex={at + 2}
                 aria-current={isChosen || undefined}
+                style={{ height: ROW_PX }}
                 className={`cursor-pointer hover:bg-concrete/40 ${isChosen ? 'bg-concrete shadow-[inset_3px_0_var(--steel)]' : ''}`}
                 onClick={() => onSelect(row.index)}
               >
                 {columns.map((column, k) => (
                   <td key={column.key} className={column.isText ? 'num whitespace-nowrap' : 'figure'}>
-                    {k === 0 ? (
+                    {k > 0 ? (
+                      printers[k]!(row)
+                    ) : (
                       <button
                         type="button"
+                        data-row={at}
+                        tabIndex={at === stop ? 0 : -1}
                         className={isChosen ? 'font-semibold' : 'underline decoration-rule'}
                         aria-label={`Look at ${sizeText(row.section, reader.units)}`}
                         onClick={() => onSelect(row.index)}
                       >
-                        {column.cell(row)}
+                        {printers[k]!(row)}
                       </button>
-                    ) : (
-                      column.cell(row)
                     )}
                   </td>
                 ))}
               </tr>
             );
           })}
+          {below > 0 && (
+            <tr aria-hidden="true" style={{ height: below }}>
+              <td colSpan={columns.length} />
+            </tr>
+          )}
         </tbody>
-      </TableFrame>
-      {rows.length > shown.length && (
-        <Button look="text" className="mt-2 text-sm" onClick={() => setLong(true)}>
-          Show all {rows.length}
-        </Button>
-      )}
-      {list === 'band' && band.length === 0 && (
-        <p className="py-2 text-sm text-muted">The band is 0 % wide: widen it above the chart.</p>
+      </table>
+    </div>
+  );
+}
+
+/** The numbers behind the chart, for those who would rather read them, and for screen readers. */
+export function SectionTable(props: SectionTableProps) {
+  const { shown, keys, source, reader, address, selectedIndex } = props;
+  const { list, find: words, write, select } = address;
+  const searchId = useId();
+  const all = useMemo(() => allColumns(keys, reader), [keys, reader]);
+  const columns = useMemo(() => shownColumns(all, address.columns), [all, address.columns]);
+  const order = orderOf(address, all);
+  const { key: orderKey = null, isDescending = false } = order ?? {};
+  const points = list === 'front' ? shown.front : shown.band;
+  const listed = useMemo(() => rowsOf(points, source), [points, source]);
+  const rows = useMemo(
+    () =>
+      sortRows(
+        findRows(listed, words, reader.units),
+        orderKey === null ? null : { key: orderKey, isDescending },
+      ),
+    [listed, words, reader.units, orderKey, isDescending],
+  );
+  const lists: readonly { readonly value: ListName; readonly label: string }[] = [
+    { value: 'front', label: `Front ${shown.front.length}` },
+    { value: 'band', label: `Near-best band ${shown.isBandCut ? 'over ' : ''}${shown.band.length}` },
+  ];
+
+  return (
+    <section aria-label="Sections as a table">
+      <div className="flex flex-wrap items-center gap-x-4 gap-y-2 pb-2">
+        <SegmentedControl
+          legend="Sections listed"
+          options={lists}
+          value={list}
+          onChange={(next) => write({ list: next === 'front' ? null : next })}
+        />
+        <span className="ml-auto flex items-center gap-2 text-sm text-muted print:hidden">
+          <label htmlFor={searchId}>Find</label>
+          <input
+            id={searchId}
+            type="search"
+            value={words}
+            placeholder={reader.units === 'us' ? '#8, 12 × 24' : '4-25, 300 × 600'}
+            onChange={(event) => write({ find: event.target.value === '' ? null : event.target.value })}
+            className="ruled num w-32 py-0.5 text-ink"
+          />
+        </span>
+        <ColumnChooser
+          all={all}
+          shown={columns}
+          onChange={(next) => write({ cols: next === null ? null : next.join(',') })}
+        />
+      </div>
+      {rows.length > 0 ? (
+        <Rows
+          rows={rows}
+          columns={columns}
+          reader={reader}
+          label={list === 'front' ? 'Sections on the front' : 'Sections in the near-best band'}
+          order={order}
+          selectedIndex={selectedIndex}
+          onOrder={(next) => write(orderPart(next))}
+          onSelect={select}
+        />
+      ) : (
+        <p className="py-2 text-sm text-muted">
+          {listed.length > 0
+            ? 'No section listed has these bars or this size.'
+            : list === 'band' && address.bandShare === 0
+              ? 'The band is 0 % wide: widen it above the chart.'
+              : 'Nothing lies within the ranges set.'}
+        </p>
       )}
     </section>
   );

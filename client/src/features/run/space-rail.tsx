@@ -40,6 +40,8 @@ function axisText(axis: AxisDefinition, kind: 'length' | 'stress', units: UnitSy
 interface SpaceRailProps {
   readonly definition: SweepDefinition;
   readonly result: ViewResult | null;
+  /** Sections within the ranges at each value; null where no range is set or they are not at hand. */
+  readonly within: Readonly<Record<EdgeAxis, readonly number[]>> | null;
   readonly units: UnitSystem;
   readonly selected: SectionInput | null;
 }
@@ -51,7 +53,7 @@ const VALUE_OF: Readonly<Record<EdgeAxis, (section: SectionInput) => number>> = 
 };
 
 /** The design space beside its result: where on each axis the sections that meet every check lie. */
-export function SpaceRail({ definition, result, units, selected }: SpaceRailProps) {
+export function SpaceRail({ definition, result, within, units, selected }: SpaceRailProps) {
   const { space } = definition;
   const rows = [
     ['Bottom bars', setsText(space.tension)],
@@ -73,6 +75,7 @@ export function SpaceRail({ definition, result, units, selected }: SpaceRailProp
             kind={kind}
             units={units}
             counts={result?.axisCounts[axis] ?? fallback}
+            within={within?.[axis] ?? null}
             selected={selected === null ? null : VALUE_OF[axis](selected)}
             edges={(result?.edges ?? []).filter((edge) => edge.axis === axis)}
           />

@@ -1,24 +1,26 @@
 import { useCallback, useMemo } from 'react';
 import { useSearchParams } from 'react-router-dom';
 import type { View } from '#shared/sweep/problem.ts';
-import { readRunAddress, type RunAddress } from './run-address.ts';
+import { readRunAddress, type AddressPart, type RunAddress } from './run-address.ts';
 
 export interface RunAddressControls extends RunAddress {
-  readonly setView: (view: View) => void;
+  readonly write: (part: AddressPart) => void;
   readonly select: (index: number) => void;
-  readonly setBandShare: (share: number) => void;
 }
 
-/** View, section and band, kept in the address: what one sees can be sent to a colleague as it is. */
+/** Everything one sees of a run, kept in the address: it can be sent to a colleague as it is, and nothing resets itself. */
 export function useRunAddress(first: View): RunAddressControls {
   const [params, setParams] = useSearchParams();
   const address = useMemo(() => readRunAddress(params, first), [params, first]);
   const write = useCallback(
-    (values: Readonly<Record<string, string>>) =>
+    (part: AddressPart) =>
       setParams(
         (now) => {
           const next = new URLSearchParams(now);
-          for (const [key, value] of Object.entries(values)) next.set(key, value);
+          for (const [key, value] of Object.entries(part)) {
+            if (value === null) next.delete(key);
+            else next.set(key, value);
+          }
           return next;
         },
         // At once: of two keys pressed in quick succession the second must begin where the first one led.
@@ -26,10 +28,6 @@ export function useRunAddress(first: View): RunAddressControls {
       ),
     [setParams],
   );
-  return {
-    ...address,
-    setView: useCallback((view) => write({ x: view.x, y: view.y }), [write]),
-    select: useCallback((index) => write({ i: String(index) }), [write]),
-    setBandShare: useCallback((share) => write({ band: String(Math.round(share * 1000) / 10) }), [write]),
-  };
+  const select = useCallback((index: number) => write({ i: String(index) }), [write]);
+  return useMemo(() => ({ ...address, write, select }), [address, write, select]);
 }

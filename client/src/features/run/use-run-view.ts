@@ -1,11 +1,15 @@
 import { useDeferredValue, useMemo } from 'react';
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Run } from '#shared/contract/records.ts';
-import type { ViewResult } from '#shared/sweep/result.ts';
+import type { View } from '#shared/sweep/problem.ts';
+import type { Point, ViewResult } from '#shared/sweep/result.ts';
+import type { ExploreKey } from './explore-axis.ts';
+import { exploreKeys, usualAxes } from './explore-keys.ts';
 import { pricesOfChecks } from './price-of-checks.ts';
 import { readableView } from './readable-view.ts';
 import { useCancelRun, useRunEvents, useView } from './run-api.ts';
-import { createSectionSource, type SectionSource } from './section-source.ts';
+import { createSectionSource, type EvaluatedSection, type SectionSource } from './section-source.ts';
+import { useExplore } from './use-explore.ts';
 import { useRunAddress } from './use-run-address.ts';
 import { isUnderWay } from './view-progress.ts';
 
@@ -19,6 +23,26 @@ function chosenIndex(source: SectionSource, asked: number | null, result: ViewRe
   return result.front[0]?.index ?? pricesOfChecks(result)[0]?.index ?? null;
 }
 
+/** Where the chosen section stands on the chart; null where it has no numbers, as one whose bars do not fit. */
+function placeOf(chosen: EvaluatedSection | null, { x, y }: View): Point | null {
+  const across = chosen?.evaluation.measures[x] ?? null;
+  const up = chosen?.evaluation.measures[y] ?? null;
+  return chosen === null || across === null || up === null ? null : { index: chosen.index, x: across, y: up };
+}
+
+const NO_KEYS: readonly ExploreKey[] = [];
+
+/** The view, live or finished, and how it comes: what the service is asked and told. */
+function useProgress(run: Run, view: View) {
+  const query = useView(run, view);
+  const latest = query.data ?? null;
+  // The drawing of a part waits for the hand: a click on Cancel is never queued behind a chart.
+  const progress = useDeferredValue(latest);
+  const isLive = isUnderWay(latest?.state ?? run.state);
+  useRunEvents(run.id, isLive);
+  return { latest, progress, isLive, error: query.error, retry: () => void query.refetch() };
+}
+
 /** Everything a run's page shows, from the address, the service and the engine. */
 export function useRunView(run: Run, units: UnitSystem) {
   const address = useRunAddress(run.definition.view);
@@ -26,18 +50,32 @@ export function useRunView(run: Run, units: UnitSystem) {
   const view = useMemo(() => readableView(run, { x, y }, units), [run, x, y, units]);
   const { definition, basis } = run;
   const source = useMemo(() => createSectionSource({ definition, basis }), [definition, basis]);
-  const query = useView(run, view);
-  const latest = query.data ?? null;
-  // The drawing of a part waits for the hand: a click on Cancel is never queued behind a chart.
-  const progress = useDeferredValue(latest);
-  const isLive = isUnderWay(latest?.state ?? run.state);
-  useRunEvents(run.id, isLive);
-  const cancel = useCancelRun(run.id);
   const reader = useMemo(() => ({ units, currency: basis.rates?.currency ?? null }), [units, basis.rates]);
+  const { latest, progress, isLive, error, retry } = useProgress(run, view);
+  const cancel = useCancelRun(run.id);
 
   const result = progress?.result ?? null;
   const index = chosenIndex(source, address.index, result);
   const selected = useMemo(() => (index === null ? null : source.evaluatedAt(index)), [source, index]);
+  const place = useMemo(() => placeOf(selected, view), [selected, view]);
+
+  const keys = useMemo(
+    () => exploreKeys({ definition, basis }, source.space, units),
+    [definition, basis, source, units],
+  );
+  const axes = useMemo(
+    () => address.axes?.filter((key) => keys.includes(key)) ?? usualAxes(keys),
+    [address.axes, keys],
+  );
+  const explore = useExplore({
+    run,
+    view,
+    result,
+    isFinished: progress?.state === 'finished',
+    source,
+    address,
+    keys: address.panel === 'ranges' ? axes : NO_KEYS,
+  });
   return {
     address,
     view,
@@ -47,9 +85,13 @@ export function useRunView(run: Run, units: UnitSystem) {
     progress,
     result,
     selected,
+    place,
     isLive,
     cancel,
-    error: query.error,
-    retry: () => void query.refetch(),
+    error,
+    retry,
+    keys,
+    axes,
+    explore,
   };
 }

@@ -42,6 +42,16 @@ export function useMoveCandidate(candidateId: string) {
   });
 }
 
+/** Takes back a pin just made; it stays on record as superseded. */
+export function useWithdraw(projectId: string) {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: (candidateId: string) =>
+      call('moveCandidate', { params: { id: candidateId }, body: { to: 'superseded', note: '' } }),
+    onSuccess: () => client.invalidateQueries({ queryKey: queryKeys.project(projectId) }),
+  });
+}
+
 export function useComment(candidateId: string) {
   const client = useQueryClient();
   return useMutation({

@@ -1,0 +1,45 @@
+import { getBar } from '#shared/engine/bars.ts';
+import { MEASURE_IDS, type MeasureId } from '#shared/engine/measures.ts';
+import type { BarStandard } from '#shared/engine/section.ts';
+import type { Space, SteelSet } from '#shared/sweep/problem.ts';
+import type { EvaluatedSection } from './section-source.ts';
+
+/** What a section was made from beside its width and depth, which are measures already. */
+export const INPUT_KEYS = ['fc', 'bottomSteel', 'topSteel', 'fy', 'cover'] as const;
+export type InputKey = (typeof INPUT_KEYS)[number];
+
+/** Everything a range can be set on: the inputs and the measures. */
+export type ExploreKey = InputKey | MeasureId;
+export const EXPLORE_KEYS: readonly ExploreKey[] = [...INPUT_KEYS, ...MEASURE_IDS];
+
+export const isInputKey = (key: ExploreKey): key is InputKey => INPUT_KEYS.some((one) => one === key);
+export const isExploreKey = (text: string): text is ExploreKey => EXPLORE_KEYS.some((key) => key === text);
+
+/** Area of one set of steel, mm². */
+function areaOf(set: SteelSet, standard: BarStandard): number {
+  if (set.kind === 'area') return set.areaMm2;
+  return set.bars.reduce((sum, { bar, count }) => sum + getBar(standard, bar).areaMm2 * count, 0);
+}
+
+/** Value of every place of an input's axis, in the order of the space's index. */
+export function inputValues(
+  space: Space,
+  standard: BarStandard,
+): Readonly<Record<InputKey, readonly number[]>> {
+  return {
+    fc: space.fcMPa,
+    fy: space.fyMPa,
+    cover: space.coversMm,
+    bottomSteel: space.tension.map((set) => areaOf(set, standard)),
+    topSteel: space.compression.map((set) => areaOf(set, standard)),
+  };
+}
+
+/** One value of an evaluated section; null where it has none. */
+export function exploreValue({ section, evaluation }: EvaluatedSection, key: ExploreKey): number | null {
+  if (!isInputKey(key)) return evaluation.measures[key];
+  if (key === 'fc') return section.fcMPa;
+  if (key === 'fy') return section.fyMPa;
+  if (key === 'cover') return section.coverMm;
+  return (key === 'bottomSteel' ? evaluation.geometry?.asMm2 : evaluation.geometry?.asPrimeMm2) ?? null;
+}

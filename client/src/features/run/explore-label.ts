@@ -1,0 +1,43 @@
+import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import { formatQuantity } from '#shared/print/format-quantity.ts';
+import { unitLabel, type DisplayKind } from '#shared/print/units.ts';
+import { measureLabel } from '#client/src/lib/measure-labels.ts';
+import { isInputKey, type ExploreKey, type InputKey } from './explore-axis.ts';
+import type { MeasureReader } from './measure-text.ts';
+
+export interface ExploreLabel {
+  readonly name: string;
+  readonly symbol: string;
+  readonly kind: DisplayKind;
+  /** With the currency where it is money; empty for a plain number. */
+  readonly unit: string;
+}
+
+const INPUTS: Readonly<Record<InputKey, Omit<ExploreLabel, 'unit'>>> = {
+  fc: { name: 'Concrete', symbol: 'f′c', kind: 'stress' },
+  bottomSteel: { name: 'Bottom steel', symbol: 'As', kind: 'area' },
+  topSteel: { name: 'Top steel', symbol: 'A′s', kind: 'area' },
+  fy: { name: 'Steel', symbol: 'fy', kind: 'stress' },
+  cover: { name: 'Clear cover', symbol: 'cover', kind: 'length' },
+};
+
+export function exploreLabel(key: ExploreKey, { units, currency }: MeasureReader): ExploreLabel {
+  const label = isInputKey(key) ? INPUTS[key] : measureLabel(key, units);
+  const unit = unitLabel(label.kind, units);
+  const { name, symbol, kind } = label;
+  return { name, symbol, kind, unit: kind === 'money-per-length' ? `${currency ?? ''}${unit}` : unit };
+}
+
+/** `Depth h`, and `Steel` where the symbol is the name. */
+export const exploreTitle = ({ name, symbol }: Pick<ExploreLabel, 'name' | 'symbol'>): string =>
+  name === symbol ? name : `${name} ${symbol}`;
+
+/** The value with its unit, as in `24 in` and `72.7 USD/ft`. */
+export function exploreText(key: ExploreKey, value: number | null, reader: MeasureReader): string {
+  const { kind, unit } = exploreLabel(key, reader);
+  const number = formatQuantity(value, kind, reader.units, { hideUnit: true });
+  return number === '' || unit === '' ? number : `${number} ${unit}`;
+}
+
+export const bareText = (key: ExploreKey, value: number | null, units: UnitSystem): string =>
+  formatQuantity(value, exploreLabel(key, { units, currency: null }).kind, units, { hideUnit: true });
