@@ -52,7 +52,7 @@ describe('a run of a hundred and seventy million sections', () => {
     await page.getByRole('button', { name: 'Cancel' }).click();
     const words = page.getByText(/^cancelled: [\d,]+ of [\d,]+ evaluated$/);
     await words.waitFor();
-    await page.getByText('Stopped', { exact: true }).waitFor();
+    await page.getByText('Cancelled', { exact: true }).waitFor();
     expect(await bar(page).count()).toBe(0);
     const [kept = 0, whole] = (await words.innerText()).match(/[\d,]+/g)!.map(countIn);
     expect(whole).toBe(HUGE_COUNT);

@@ -22,7 +22,7 @@ const RUN: Readonly<Record<RunState, StateLabel>> = {
   queued: { word: 'Queued', mark: 'ring', tone: 'muted' },
   running: { word: 'Running', mark: 'half', tone: 'near' },
   finished: { word: 'Finished', mark: 'full', tone: 'meets' },
-  cancelled: { word: 'Stopped', mark: 'struck', tone: 'muted' },
+  cancelled: { word: 'Cancelled', mark: 'struck', tone: 'muted' },
   failed: { word: 'Failed', mark: 'cross', tone: 'fails' },
 };
 

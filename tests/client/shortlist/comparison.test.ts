@@ -82,9 +82,9 @@ describe('candidates side by side', () => {
     const few = candidate({ id: 'f', lines: [['#8', 2]] });
     const bars = takeoffRows([many, few], null).filter((r) => r.id.startsWith('bar-'));
     expect(bars.map(({ label, values }) => [label, ...values])).toEqual([
-      ['#3', 0.25, null],
-      ['#8', null, 2],
-      ['#10', 1.5, null],
+      ['#3 tension', 0.25, null],
+      ['#8 tension', null, 2],
+      ['#10 tension', 1.5, null],
     ]);
   });
 });

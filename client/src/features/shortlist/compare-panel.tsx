@@ -1,9 +1,12 @@
+import { useMemo } from 'react';
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Candidate } from '#shared/contract/records.ts';
 import { useSearchValue } from '#client/src/lib/use-search-value.ts';
+import { LazyCurveComparison } from '#client/src/study/lazy-curve-comparison.tsx';
 import { SelectField } from '#client/src/ui/select-field.tsx';
 import { CompareTable } from './compare-table.tsx';
 import { areComparable } from './comparison.ts';
+import { PriceFlipNote } from './price-flip-note.tsx';
 import { COMPARE_MIN } from './selection.ts';
 
 interface ComparePanelProps {
@@ -18,6 +21,16 @@ export function ComparePanel({ candidates, units, hasMoney }: ComparePanelProps)
   const [baselineId, setBaseline] = useSearchValue(
     'base',
     (id) => candidates.find((candidate) => candidate.id === id)?.id ?? null,
+  );
+  const curves = useMemo(
+    () =>
+      candidates.map(({ id, label, snapshot: { section, basis, demand, rules } }) => ({
+        id,
+        label,
+        section,
+        context: { basis, demand, rules },
+      })),
+    [candidates],
   );
   if (candidates.length === 0) return null;
   return (
@@ -50,6 +63,13 @@ export function ComparePanel({ candidates, units, hasMoney }: ComparePanelProps)
             </p>
           )}
           <CompareTable candidates={candidates} units={units} baselineId={baselineId} hasMoney={hasMoney} />
+          {hasMoney && <PriceFlipNote candidates={candidates} />}
+          <section className="mt-8" aria-label="Moment–curvature of all">
+            <h3 className="mb-2 border-t border-ink pt-2 font-semibold">
+              Moment–curvature, one over the other
+            </h3>
+            <LazyCurveComparison sections={curves} units={units} />
+          </section>
         </>
       )}
     </section>

@@ -10,6 +10,7 @@ import { missingFactors, missingRates } from '#client/src/sheet/missing-rates.ts
 import { StateTag } from '#client/src/ui/state-tag.tsx';
 import { TableFrame } from '#client/src/ui/table-frame.tsx';
 import { CandidateFlag } from './candidate-flag.tsx';
+import { costRows } from './cost-lines.ts';
 import { measureRows, takeoffRows, type ComparisonRow, type ShownCandidate } from './comparison.ts';
 
 /** Height of the tallest section on the common ground line, px. */
@@ -28,6 +29,7 @@ const MONEY_ROWS = ['costPerM', 'cost-total'];
 export function CompareTable({ candidates, units, baselineId, hasMoney }: CompareTableProps) {
   const tallestMm = Math.max(...candidates.map((candidate) => candidate.snapshot.section.depthMm));
   const shown = (row: ComparisonRow) => hasMoney || !MONEY_ROWS.includes(row.id);
+  const costLines = costRows(candidates, baselineId, hasMoney);
   const sameTakeoff =
     new Set(candidates.map(({ takeoff }) => `${takeoff.spanMm}×${takeoff.count}`)).size === 1;
   const { spanMm, count } = candidates[0]!.takeoff;
@@ -85,6 +87,16 @@ export function CompareTable({ candidates, units, baselineId, hasMoney }: Compar
         baselineId={baselineId}
         hasMoney={hasMoney}
       />
+      {costLines.length > 0 && (
+        <FigureRows
+          title="Cost and carbon by line, per length"
+          rows={costLines}
+          candidates={candidates}
+          units={units}
+          baselineId={baselineId}
+          hasMoney={hasMoney}
+        />
+      )}
       <FigureRows
         title={
           sameTakeoff
@@ -205,7 +217,8 @@ function Figure({ row, index, units, candidate, baselineId, hasMoney }: FigurePr
       <span className="font-sans text-xs text-muted">not known: {missing.join(', ')}</span>
     );
   }
-  const currency = row.id === 'costPerM' ? candidate.snapshot.evaluation.quantities.cost?.currency : null;
+  const currency =
+    row.kind === 'money-per-length' ? candidate.snapshot.evaluation.quantities.cost?.currency : null;
   const total = row.id === 'cost-total' ? candidate.takeoff.currency : null;
   return (
     <span className="inline-grid grid-cols-[5.5rem_auto] items-baseline gap-x-3">

@@ -19,7 +19,7 @@ export interface ComparisonRow {
   readonly baseline: number | null;
 }
 
-interface RowSource {
+export interface RowSource {
   readonly id: string;
   readonly label: string;
   readonly kind: DisplayKind;
@@ -66,26 +66,38 @@ const TAKEOFF_ROWS: readonly RowSource[] = [
   { id: 'co2e-total', label: 'Carbon', kind: 'co2e', better: 'less', of: (c) => c.takeoff.co2eKg },
 ];
 
+const STEEL_POSITIONS = ['tension', 'compression', 'skin', 'stirrups'] as const;
+
 /** Rows of measures per length of beam. */
 export const measureRows = (candidates: readonly ShownCandidate[], baselineId: string | null) =>
-  MEASURE_ROWS.map((source) => rowOf(source, candidates, baselineId));
+  rowsOf(MEASURE_ROWS, candidates, baselineId);
 
-/** Rows of the takeoff for span × count: first the tonnes of each bar size that occurs, then the sums. */
+/** One row for each source. */
+export const rowsOf = (
+  sources: readonly RowSource[],
+  candidates: readonly ShownCandidate[],
+  baselineId: string | null,
+): ComparisonRow[] => sources.map((source) => rowOf(source, candidates, baselineId));
+
+/** Rows of the takeoff for span × count: first the tonnes of each bar size by position, then the sums. */
 export function takeoffRows(candidates: readonly ShownCandidate[], baselineId: string | null) {
-  const bars = [...new Set(candidates.flatMap((c) => c.takeoff.lines.map((line) => line.bar)))].sort(
-    byBarSize,
-  );
-  const barRows: RowSource[] = bars.map((bar) => ({
-    id: `bar-${bar}`,
-    label: bar,
-    kind: 'tonnes',
-    better: null,
-    of: (candidate) => {
-      const lines = candidate.takeoff.lines.filter((line) => line.bar === bar);
-      return lines.length === 0 ? null : lines.reduce((sum, line) => sum + line.tonnes, 0);
-    },
-  }));
-  return [...barRows, ...TAKEOFF_ROWS].map((source) => rowOf(source, candidates, baselineId));
+  const barRows = STEEL_POSITIONS.flatMap((position) => {
+    const own = candidates.flatMap((c) => c.takeoff.lines.filter((line) => line.position === position));
+    const bars = [...new Set(own.map((line) => line.bar))].sort(byBarSize);
+    return bars.map((bar): RowSource => ({
+      id: `bar-${bar}-${position}`,
+      label: `${bar} ${position}`,
+      kind: 'tonnes',
+      better: null,
+      of: (candidate) => {
+        const lines = candidate.takeoff.lines.filter(
+          (line) => line.bar === bar && line.position === position,
+        );
+        return lines.length === 0 ? null : lines.reduce((sum, line) => sum + line.tonnes, 0);
+      },
+    }));
+  });
+  return rowsOf([...barRows, ...TAKEOFF_ROWS], candidates, baselineId);
 }
 
 const byBarSize = (a: string, b: string): number => sizeNumber(a) - sizeNumber(b) || a.localeCompare(b);

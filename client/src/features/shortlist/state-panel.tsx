@@ -45,7 +45,9 @@ export function StatePanel({ candidate }: { readonly candidate: Candidate }) {
             <span className="text-muted">
               {transition.by.name}, {roleLabel(transition.by.role).toLowerCase()}
             </span>
-            {transition.note !== '' && <p className="mt-1 whitespace-pre-wrap">{transition.note}</p>}
+            {hasOwnNote(transition, candidate) && (
+              <p className="mt-1 whitespace-pre-wrap">{transition.note}</p>
+            )}
           </li>
         ))}
       </ol>
@@ -53,6 +55,10 @@ export function StatePanel({ candidate }: { readonly candidate: Candidate }) {
     </section>
   );
 }
+
+/** The note of the pin stands at the head of the page already. */
+const hasOwnNote = ({ note, from }: Candidate['transitions'][number], candidate: Candidate): boolean =>
+  note !== '' && (from !== null || note !== candidate.note);
 
 interface MoveDialogProps {
   readonly candidate: Candidate;
