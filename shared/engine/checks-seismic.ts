@@ -150,7 +150,7 @@ function reversal(context: CheckContext, seismic: SeismicRules): CheckResult | n
   const leastNmm = share * flexure.nominalMomentNmm;
   return check({
     id: 'seismic-reversal',
-    passes: isAtLeastTimes(reversed, share, flexure.nominalMomentNmm),
+    passes: isAtLeastTimes(reversed, 1, leastNmm),
     demand: leastNmm,
     capacity: reversed,
     ratio: leastNmm / reversed,

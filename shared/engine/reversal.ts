@@ -1,27 +1,68 @@
 import { compressedOverhang, flangeOf, type Overhang, type ResolvedFlange } from './flange.ts';
+import { isAtLeastTimes } from './limits.ts';
 import { neutralAxisDepth, type UltimateConstants } from './neutral-axis.ts';
 import type { RuleSet } from './rules/rule-set.ts';
 import type { DesignBasis, SectionInput } from './section.ts';
 import type { SteelLayout } from './steel-layout.ts';
 
-/** Layers with the faces changed over, kept from section to section. */
-export interface ReversedLayers {
+/** The section bent the other way: its constants, with its own flange if it has one at what was the tension face. */
+export interface Reversal {
+  // apart from the overhang, so that every caller of the solver hands it objects of one shape
+  readonly ultimate: UltimateConstants;
+  overhangPerMm: number;
+  overhangDepthMm: number;
   readonly depths: Float64Array;
   readonly areas: Float64Array;
 }
 
-/** Constants of the section bent the other way: its own flange, if it has one at what was the tension face. */
-export interface ReversalConstants extends UltimateConstants {
-  overhangPerMm: number;
-  overhangDepthMm: number;
+/** Room for n layers; everything else is set per combination. */
+export const reversalOf = (
+  { esMPa, displacedConcrete }: Pick<DesignBasis, 'esMPa' | 'displacedConcrete'>,
+  n: number,
+): Reversal => ({
+  ultimate: {
+    blockForcePerMm: 0,
+    flangeForcePerMm: 0,
+    overhangForceN: 0,
+    flangeReachMm: 0,
+    blockStressMPa: 0,
+    blockDepthFactor: 0,
+    fyMPa: 0,
+    esMPa,
+    epsilonCu: 0,
+    displacedConcrete,
+  },
+  overhangPerMm: 0,
+  overhangDepthMm: 0,
+  depths: new Float64Array(n),
+  areas: new Float64Array(n),
+});
+
+/** Puts one concrete, one steel and one web in place. */
+export function setBlock(
+  { ultimate: k }: Reversal,
+  of: {
+    readonly blockStressMPa: number;
+    readonly blockDepthFactor: number;
+    readonly crushingStrain: number;
+    readonly widthMm: number;
+    readonly yieldMPa: number;
+  },
+): void {
+  k.blockStressMPa = of.blockStressMPa;
+  k.blockDepthFactor = of.blockDepthFactor;
+  k.blockForcePerMm = of.blockStressMPa * of.widthMm * of.blockDepthFactor;
+  k.fyMPa = of.yieldMPa;
+  k.epsilonCu = of.crushingStrain;
 }
 
-/** Puts the constants of a web and its overhang in compression in place; the block's own are set already. */
-export function setOverhang(k: ReversalConstants, { overhangMm, overhangDepthMm }: Overhang): void {
-  k.overhangPerMm = k.blockStressMPa * overhangMm;
-  k.overhangDepthMm = overhangDepthMm;
-  k.flangeForcePerMm = k.blockForcePerMm + k.overhangPerMm * k.blockDepthFactor;
-  k.overhangForceN = k.overhangPerMm * overhangDepthMm;
+/** Puts a web and its overhang in compression in place; the block and the steel are set already. */
+export function setOverhang(reversal: Reversal, { overhangMm, overhangDepthMm }: Overhang): void {
+  const { ultimate: k } = reversal;
+  reversal.overhangPerMm = k.blockStressMPa * overhangMm;
+  reversal.overhangDepthMm = overhangDepthMm;
+  k.flangeForcePerMm = k.blockForcePerMm + reversal.overhangPerMm * k.blockDepthFactor;
+  k.overhangForceN = reversal.overhangPerMm * overhangDepthMm;
   k.flangeReachMm = overhangDepthMm / k.blockDepthFactor;
 }
 
@@ -32,20 +73,22 @@ export const reversedOverhang = (webMm: number, flange: ResolvedFlange | null): 
     flange && { ...flange, face: flange.face === 'tension' ? 'compression' : 'tension' },
   );
 
+/** Sorted layers of a section, mm and mm²; the first n are used, the first `compressionCount` of them at that face. */
+export interface SortedLayers {
+  readonly depths: Float64Array;
+  readonly areas: Float64Array;
+  n: number;
+  compressionCount: number;
+}
+
 /**
- * Nominal strength of a section bent the other way, N·mm: the first n layers (mm, mm²) with their depths measured from the
- * other face. 0 without steel at the face that is then in tension. Shared by `evaluateSection` and the hot loop.
+ * Nominal strength of a section bent the other way, N·mm: its layers with their depths measured from the other face. 0
+ * without steel at the face that is then in tension. Shared by `evaluateSection` and the hot loop.
  */
-export function reversedMomentNmm(
-  layers: { readonly depths: Float64Array; readonly areas: Float64Array; readonly n: number },
-  hasCompressionSteel: boolean,
-  depthMm: number,
-  k: ReversalConstants,
-  reversed: ReversedLayers,
-): number {
-  if (!hasCompressionSteel) return 0;
+export function reversedMomentNmm(layers: SortedLayers, depthMm: number, reversal: Reversal): number {
+  if (layers.compressionCount === 0) return 0;
   const { n } = layers;
-  const { depths, areas } = reversed;
+  const { depths, areas, ultimate: k } = reversal;
   for (let i = 0; i < n; i++) {
     depths[i] = depthMm - layers.depths[n - 1 - i]!;
     areas[i] = layers.areas[n - 1 - i]!;
@@ -53,8 +96,8 @@ export function reversedMomentNmm(
   const c = neutralAxisDepth(depths, areas, n, k);
   const a = k.blockDepthFactor * c;
   const deductionDepth = k.displacedConcrete === 'deduct' ? a : k.displacedConcrete === 'ignore' ? -1 : c;
-  const inFlange = Math.min(a, k.overhangDepthMm);
-  let moment = -(k.blockForcePerMm * c) * (a / 2) - k.overhangPerMm * inFlange * (inFlange / 2);
+  const inFlange = Math.min(a, reversal.overhangDepthMm);
+  let moment = -(k.blockForcePerMm * c) * (a / 2) - reversal.overhangPerMm * inFlange * (inFlange / 2);
   for (let i = 0; i < n; i++) {
     const depth = depths[i]!;
     const elastic = k.esMPa * ((k.epsilonCu * (depth - c)) / c);
@@ -64,34 +107,69 @@ export function reversedMomentNmm(
   return moment;
 }
 
-/** The same for a section with placed steel. */
+/** Steel of the two faces as asked: areas, and the depths of their centroids from the compression face. */
+export interface FacesOfSteel {
+  asMm2: number;
+  dMm: number;
+  asPrimeMm2: number;
+  dPrimeMm: number;
+}
+
+/** Bounds are trusted only this far from the limit. */
+const BOUND_MARGIN = 1e-6;
+
+/**
+ * Whether the strength bent the other way is at least `leastNmm`, for the hot loop: by bounds where they settle it, which
+ * saves most of the solver's work, else exactly. Above: every bar at fy, nothing taken off for the concrete. Below: the
+ * steel then in tension is known to yield, and compression acts no deeper than the deepest bar of the other face or half
+ * the block that balances it.
+ */
+export function isReversalMet(
+  layers: SortedLayers,
+  faces: FacesOfSteel,
+  depthMm: number,
+  leastNmm: number,
+  reversal: Reversal,
+): boolean {
+  const { compressionCount } = layers;
+  if (compressionCount > 0 && leastNmm > 0) {
+    const { blockForcePerMm, blockDepthFactor, blockStressMPa, fyMPa, esMPa, epsilonCu } = reversal.ultimate;
+    const { asMm2, asPrimeMm2 } = faces;
+    const leverMm = depthMm - faces.dPrimeMm;
+    const largestMPa = Math.max(fyMPa, blockStressMPa);
+    const most = largestMPa * (asPrimeMm2 * leverMm + asMm2 * (depthMm - faces.dMm));
+    if (most < leastNmm * (1 - BOUND_MARGIN)) return false;
+    const tensionN = asPrimeMm2 * fyMPa;
+    const deepestMm = depthMm - layers.depths[compressionCount]!;
+    const axisMm = (tensionN + asMm2 * blockStressMPa) / blockForcePerMm;
+    const shallowestMm = depthMm - layers.depths[compressionCount - 1]!;
+    const doesYield =
+      Math.max(deepestMm, axisMm) * (1 + fyMPa / (esMPa * epsilonCu)) < shallowestMm * (1 - BOUND_MARGIN);
+    const pressureMm = Math.max(deepestMm, (blockDepthFactor * axisMm) / 2);
+    const least = tensionN * (leverMm - pressureMm) - asMm2 * blockStressMPa * pressureMm;
+    if (doesYield && least > leastNmm * (1 + BOUND_MARGIN)) return true;
+  }
+  return isAtLeastTimes(reversedMomentNmm(layers, depthMm, reversal), 1, leastNmm);
+}
+
+/** The same strength for a section with placed steel, N·mm. */
 export function reversedStrengthNmm(
   section: SectionInput,
   layout: SteelLayout,
   basis: DesignBasis,
   rules: RuleSet,
 ): number {
-  const { depths, areas } = layout;
+  const { depths, areas, faces } = layout;
   const n = depths.length;
-  const blockStressMPa = rules.blockStressMPa(section.fcMPa);
-  const blockDepthFactor = rules.blockDepthFactor(section.fcMPa);
-  const constants = {
-    blockForcePerMm: blockStressMPa * section.widthMm * blockDepthFactor,
-    flangeForcePerMm: 0,
-    overhangForceN: 0,
-    flangeReachMm: 0,
-    overhangPerMm: 0,
-    overhangDepthMm: 0,
-    blockStressMPa,
-    blockDepthFactor,
-    fyMPa: rules.designYieldMPa(section.fyMPa),
-    esMPa: basis.esMPa,
-    epsilonCu: rules.crushingStrain(section.fcMPa),
-    displacedConcrete: basis.displacedConcrete,
-  };
-  setOverhang(constants, reversedOverhang(section.widthMm, flangeOf(section, rules)));
-  return reversedMomentNmm({ depths, areas, n }, layout.asPrimeMm2 > 0, section.depthMm, constants, {
-    depths: new Float64Array(n),
-    areas: new Float64Array(n),
+  const reversal = reversalOf(basis, n);
+  setBlock(reversal, {
+    blockStressMPa: rules.blockStressMPa(section.fcMPa),
+    blockDepthFactor: rules.blockDepthFactor(section.fcMPa),
+    crushingStrain: rules.crushingStrain(section.fcMPa),
+    widthMm: section.widthMm,
+    yieldMPa: rules.designYieldMPa(section.fyMPa),
   });
+  setOverhang(reversal, reversedOverhang(section.widthMm, flangeOf(section, rules)));
+  const compressionCount = faces.filter((face) => face === 'compression').length;
+  return reversedMomentNmm({ depths, areas, n, compressionCount }, section.depthMm, reversal);
 }

@@ -1,9 +1,12 @@
 import { isAtLeastTimes, isWithinLength } from '../engine/limits.ts';
 import {
-  reversedMomentNmm,
+  isReversalMet,
+  reversalOf,
   reversedOverhang,
+  setBlock,
   setOverhang,
-  type ReversalConstants,
+  type Reversal,
+  type SortedLayers,
 } from '../engine/reversal.ts';
 import type { FaceSteelLimits, SeismicRules } from '../engine/rules/seismic-rules.ts';
 import { faceLeastMm2, faceMostMm2, leastWebMm } from '../engine/seismic.ts';
@@ -11,20 +14,13 @@ import type { Combination } from './combination.ts';
 import { SEISMIC_REVERSAL, SEISMIC_SPAN, SEISMIC_STEEL, SEISMIC_WIDTH } from './kernel-places.ts';
 import { offsetOf, type PreparedSweep } from './prepared-sweep.ts';
 
-/** Sorted layers of the section looked at; the first n entries are used. */
-export interface KernelLayers {
-  readonly depths: Float64Array;
-  readonly areas: Float64Array;
-  n: number;
-}
-
 /** What a moment frame asks of the sections of one row of depths; made only where a system is asked. */
 export class KernelSeismic {
   private readonly seismic: SeismicRules;
   private readonly prepared: PreparedSweep;
   private readonly spanMm: number;
-  private readonly reversed;
-  private readonly ultimate: ReversalConstants;
+  private readonly reversal: Reversal;
+  private readonly faces = { asMm2: 0, dMm: 0, asPrimeMm2: 0, dPrimeMm: 0 };
   private combination: Combination | null = null;
   private tensionLimits: FaceSteelLimits | null = null;
   private compressionLimits: FaceSteelLimits | null = null;
@@ -35,26 +31,12 @@ export class KernelSeismic {
     this.seismic = seismic;
     this.prepared = prepared;
     this.spanMm = demand.spanMm ? demand.spanMm : NaN;
-    this.reversed = { depths: new Float64Array(layerCount), areas: new Float64Array(layerCount) };
-    this.ultimate = {
-      blockForcePerMm: 0,
-      flangeForcePerMm: 0,
-      overhangForceN: 0,
-      flangeReachMm: 0,
-      overhangPerMm: 0,
-      overhangDepthMm: 0,
-      blockStressMPa: 0,
-      blockDepthFactor: 0,
-      fyMPa: 0,
-      esMPa: basis.esMPa,
-      epsilonCu: 0,
-      displacedConcrete: basis.displacedConcrete,
-    };
+    this.reversal = reversalOf(basis, layerCount);
   }
 
   /** Everything that the depths of one combination share. */
   begin(combination: Combination): void {
-    const { seismic, ultimate } = this;
+    const { seismic } = this;
     const { ruleSet, problem } = this.prepared;
     const { placement, concrete, fyMPa } = combination;
     this.combination = combination;
@@ -70,12 +52,16 @@ export class KernelSeismic {
       this.isYieldTooHigh = seismic.largestFyMPa !== null && !(fyMPa <= seismic.largestFyMPa);
     }
     if (seismic.reversalShare === null) return;
-    ultimate.blockStressMPa = concrete.blockStressMPa;
-    ultimate.blockDepthFactor = concrete.blockDepthFactor;
-    ultimate.blockForcePerMm = concrete.blockStressMPa * placement.widthMm * concrete.blockDepthFactor;
-    ultimate.fyMPa = ruleSet.designYieldMPa(fyMPa);
-    ultimate.epsilonCu = concrete.crushingStrain;
-    setOverhang(ultimate, reversedOverhang(placement.widthMm, placement.flange));
+    setBlock(this.reversal, {
+      blockStressMPa: concrete.blockStressMPa,
+      blockDepthFactor: concrete.blockDepthFactor,
+      crushingStrain: concrete.crushingStrain,
+      widthMm: placement.widthMm,
+      yieldMPa: ruleSet.designYieldMPa(fyMPa),
+    });
+    this.faces.asMm2 = combination.tension.areaMm2;
+    this.faces.asPrimeMm2 = combination.compression.areaMm2;
+    setOverhang(this.reversal, reversedOverhang(placement.widthMm, placement.flange));
   }
 
   /** Least width in depth h, mm. */
@@ -87,7 +73,7 @@ export class KernelSeismic {
   }
 
   /** Span, steel of both faces and the strength bent the other way against `nominalNmm`, for placed bars. */
-  placedMaskAt(h: number, d: number, layers: KernelLayers, nominalNmm: number): number {
+  placedMaskAt(h: number, d: number, layers: SortedLayers, nominalNmm: number): number {
     const { seismic, spanMm } = this;
     let mask = 0;
     const leastSpan = seismic.leastSpanToDepth;
@@ -97,9 +83,10 @@ export class KernelSeismic {
       mask |= SEISMIC_STEEL;
     const share = seismic.reversalShare;
     if (share === null) return mask;
-    const hasSteel = this.combination!.compression.areaMm2 > 0;
-    const reversedNmm = reversedMomentNmm(layers, hasSteel, h, this.ultimate, this.reversed);
-    return isAtLeastTimes(reversedNmm, share, nominalNmm) ? mask : mask | SEISMIC_REVERSAL;
+    this.faces.dMm = d;
+    this.faces.dPrimeMm = offsetOf(this.combination!.compression, h);
+    const isMet = isReversalMet(layers, this.faces, h, share * nominalNmm, this.reversal);
+    return isMet ? mask : mask | SEISMIC_REVERSAL;
   }
 
   private isSteelWithin(h: number, d: number): boolean {

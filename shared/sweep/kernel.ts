@@ -54,7 +54,7 @@ interface Row {
 export class Kernel {
   private readonly depths = new Float64Array(MAX_LAYERS);
   private readonly areas = new Float64Array(MAX_LAYERS);
-  private readonly layers = { depths: this.depths, areas: this.areas, n: 0 };
+  private readonly layers = { depths: this.depths, areas: this.areas, n: 0, compressionCount: 0 };
   private readonly measures = new Float64Array(MEASURE_IDS.length);
   private readonly detailing: KernelDetailing;
   private readonly seismic: KernelSeismic | null;
@@ -162,6 +162,7 @@ export class Kernel {
     }
     for (let i = 0; i < tension.layerCount; i++) areas[n - 1 - i] = tension.areas[i]!;
     layers.n = n;
+    layers.compressionCount = nc;
 
     const amounts = rowAmounts(combination);
 
