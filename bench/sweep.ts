@@ -89,14 +89,13 @@ async function threads(): Promise<void> {
   const elapsed: number[] = [];
   for (const count of [1, 2]) {
     const pool = await startComputePool(count);
-    const sectionCount = spaceSize(ALL_FIT.space);
     const once = () =>
       sweepInChunks({
         pool,
         key: 'bench',
         problem: ALL_FIT,
         view: VIEW,
-        sectionCount,
+        to: spaceSize(ALL_FIT.space),
         cancelFlag: createCancelFlag(),
       });
     await once();

@@ -6,6 +6,7 @@ import { registerBeamRoutes } from './features/beams/routes.ts';
 import { registerCandidateRoutes } from './features/candidates/routes.ts';
 import { listSharedCandidates } from './features/candidates/shared-candidates.ts';
 import { registerEvaluationRoutes } from './features/evaluations/routes.ts';
+import { registerOperationsRoutes } from './features/operations/routes.ts';
 import { registerPeopleRoutes } from './features/people/routes.ts';
 import { registerProjectRoutes } from './features/projects/routes.ts';
 import { registerRunRoutes } from './features/runs/routes.ts';
@@ -14,6 +15,7 @@ import { registerShareLinkRoutes } from './features/share-links/routes.ts';
 import { registerSweepRoutes } from './features/sweeps/routes.ts';
 import { errorHandler } from './http/error-handler.ts';
 import { health } from './http/health.ts';
+import { Metrics, metricsHandler } from './http/metrics.ts';
 import { createOpenApiDocument } from './http/openapi.ts';
 import { limitRequests } from './http/rate-limit.ts';
 import { requestLog } from './http/request-log.ts';
@@ -28,7 +30,7 @@ const LARGEST_BODY = '1mb';
 const isCompressible = (req: Request, res: Response) =>
   !String(res.getHeader('content-type')).startsWith('text/event-stream') && compression.filter(req, res);
 
-function buildApi(deps: Deps): Router {
+function buildApi(deps: Deps, metrics: Metrics): Router {
   const api = Router();
   api.use((_req, res, next) => {
     res.set('cache-control', 'no-store');
@@ -39,6 +41,7 @@ function buildApi(deps: Deps): Router {
   const openApi = createOpenApiDocument();
   api.get('/openapi.json', (_req, res) => void res.json(openApi));
   api.use(sessionMiddleware(deps.config, deps.sessionStore));
+  api.get('/metrics', metricsHandler(metrics, deps));
   api.use(express.json({ limit: LARGEST_BODY }));
   registerSessionRoutes(api, deps);
   registerPeopleRoutes(api, deps);
@@ -48,6 +51,7 @@ function buildApi(deps: Deps): Router {
   registerRunRoutes(api, deps);
   registerEvaluationRoutes(api, deps);
   registerCandidateRoutes(api, deps);
+  registerOperationsRoutes(api, deps);
   registerShareLinkRoutes(api, deps, listSharedCandidates);
   api.use(() => {
     throw notFound('This address');
@@ -62,8 +66,9 @@ export function buildApp(deps: Deps): Express {
   app.set('etag', false);
   app.set('trust proxy', false);
   app.set('query parser', 'simple');
+  const metrics = new Metrics(deps);
   app.use(requestLog(deps.log), securityHeaders(), compression({ filter: isCompressible }));
-  app.use('/api', buildApi(deps));
+  app.use('/api', metrics.time, buildApi(deps, metrics));
   app.use(staticClient(deps.config.appRoot));
   app.use(() => {
     throw notFound('This page');

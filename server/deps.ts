@@ -1,11 +1,11 @@
 import type { Store } from 'express-session';
 import type pg from 'pg';
 import type { Passwords } from './compute/passwords.ts';
-import type { ComputePool } from './compute/pool.ts';
 import type { SheetFiles } from './compute/sheet-files.ts';
 import type { Config } from './config.ts';
 import type { Database } from './db/client.ts';
 import type { RunEvents } from './jobs/run-events.ts';
+import type { WorkTally } from './jobs/work-tally.ts';
 import type { Log } from './log.ts';
 
 /** What routes and jobs are handed; made and ended by services.ts. */
@@ -16,7 +16,7 @@ export interface Deps {
   readonly db: Database;
   readonly sessionStore: Store;
   readonly passwords: Passwords;
-  readonly compute: ComputePool;
+  readonly tally: WorkTally;
   readonly sheetFiles: SheetFiles;
   readonly runEvents: RunEvents;
 }

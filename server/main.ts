@@ -3,10 +3,10 @@ import { setTimeout as delay } from 'node:timers/promises';
 import { buildApp } from './app.ts';
 import { readConfig } from './config.ts';
 import { startServices, type Services } from './services.ts';
+import { onStopSignal } from './stop-signal.ts';
 
-/** Requests in hand get this long to end; with the jobs put back the whole stop stays under 8 s. */
+/** Requests in hand get this long to end; with the jobs put back the whole stop stays under the limit of 8 s. */
 const FINISH_REQUESTS_MS = 3000;
-const STOP_LIMIT_MS = 8000;
 const CLOSE_IDLE_MS = 50;
 
 async function stop(server: Server, services: Services): Promise<void> {
@@ -31,23 +31,4 @@ const server = buildApp(services.deps).listen(config.port, config.host, (error?:
   log.info(`Listening on http://${config.host}:${config.port}`);
 });
 
-let isStopping = false;
-async function stopOnce(signal: string): Promise<void> {
-  if (isStopping) return;
-  isStopping = true;
-  log.info(`${signal}: stopping`);
-  setTimeout(() => {
-    log.error('Stopping took too long; what was left is dropped');
-    process.exit(1);
-  }, STOP_LIMIT_MS).unref();
-  await stop(server, services);
-  process.exit(0);
-}
-for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) {
-  process.on(signal, () => {
-    stopOnce(signal).catch((error: unknown) => {
-      log.error({ err: error }, 'The service did not stop in order');
-      process.exit(1);
-    });
-  });
-}
+onStopSignal(log, () => stop(server, services));

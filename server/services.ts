@@ -1,14 +1,17 @@
+import type { ProcessKind } from '#shared/contract/operations.ts';
 import { startPasswords } from './compute/passwords.ts';
 import { startComputePool } from './compute/pool.ts';
 import { startSheetFiles } from './compute/sheet-files.ts';
-import type { Config } from './config.ts';
-import { createDatabase, createPool } from './db/client.ts';
+import type { Config, WorkerConfig } from './config.ts';
+import { createDatabase, createPool, type Database } from './db/client.ts';
 import type { Deps } from './deps.ts';
 import { createSessionStore } from './http/session-store.ts';
 import { Queue } from './jobs/queue.ts';
 import { RunEvents } from './jobs/run-events.ts';
+import { WorkTally } from './jobs/work-tally.ts';
 import { createTasks } from './jobs/worker/tasks.ts';
-import { createLog } from './log.ts';
+import { WorkerRegistry } from './jobs/worker-registry.ts';
+import { createLog, type Log } from './log.ts';
 
 export interface Services {
   readonly deps: Deps;
@@ -18,32 +21,77 @@ export interface Services {
   stop(): Promise<void>;
 }
 
-/** Everything behind the HTTP server: connections, threads and the queue. */
+/** Everything behind the HTTP server: connections and, unless it is told to leave that to others, threads and queue. */
 export async function startServices(config: Config): Promise<Services> {
   const { databaseUrl } = config;
   const log = createLog(config.logLevel);
-  const [passwords, compute, sheetFiles] = await Promise.all([
-    startPasswords(config.passwordCost),
-    startComputePool(config.computeThreads),
-    startSheetFiles(),
-  ]);
+  const [passwords, sheetFiles] = await Promise.all([startPasswords(config.passwordCost), startSheetFiles()]);
   const pool = createPool(databaseUrl, log);
   const db = createDatabase(pool);
   const sessionStore = createSessionStore(pool, log);
   const runEvents = new RunEvents({ databaseUrl, log });
   await runEvents.start();
-  const tasks = createTasks({ db, compute, runEvents, log });
-  const queue = new Queue({ databaseUrl, db, log, listener: runEvents.listener, createTasks: tasks });
-  await queue.start();
+  const tally = new WorkTally();
+  const work = config.hasBuiltInWorker
+    ? await startWork('service', { config, db, log, runEvents, tally })
+    : undefined;
   return {
-    deps: { config, log, pool, db, sessionStore, passwords, compute, sheetFiles, runEvents },
+    deps: { config, log, pool, db, sessionStore, passwords, tally, sheetFiles, runEvents },
     endStreams: () => runEvents.endStreams(),
     stop: async () => {
       sessionStore.close();
-      await queue.stop();
+      await work?.stop();
       await runEvents.stop();
-      await Promise.all([compute.close(), passwords.close(), sheetFiles.close()]);
+      await Promise.all([passwords.close(), sheetFiles.close()]);
       await pool.end();
+    },
+  };
+}
+
+/** A worker by itself: it takes jobs of the same database and serves nothing. */
+export async function startWorker(
+  config: WorkerConfig,
+): Promise<{ readonly log: Log; readonly stop: () => Promise<void> }> {
+  const { databaseUrl } = config;
+  const log = createLog(config.logLevel);
+  const pool = createPool(databaseUrl, log);
+  const db = createDatabase(pool);
+  const runEvents = new RunEvents({ databaseUrl, log });
+  await runEvents.start();
+  const work = await startWork('worker', { config, db, log, runEvents, tally: new WorkTally() });
+  return {
+    log,
+    stop: async () => {
+      await work.stop();
+      await runEvents.stop();
+      await pool.end();
+    },
+  };
+}
+
+interface WorkOptions {
+  readonly config: WorkerConfig;
+  readonly db: Database;
+  readonly log: Log;
+  readonly runEvents: RunEvents;
+  readonly tally: WorkTally;
+}
+
+async function startWork(
+  kind: ProcessKind,
+  { config, db, log, runEvents, tally }: WorkOptions,
+): Promise<{ readonly stop: () => Promise<void> }> {
+  const compute = await startComputePool(config.computeThreads);
+  const { threads } = compute;
+  const { listener } = runEvents;
+  const registry = new WorkerRegistry({ kind, threads, db, log, listener, tally });
+  const tasks = createTasks({ db, compute, runEvents, log, tally });
+  const queue = new Queue({ databaseUrl: config.databaseUrl, db, log, registry, createTasks: tasks });
+  await queue.start();
+  return {
+    stop: async () => {
+      await queue.stop();
+      await compute.close();
     },
   };
 }

@@ -47,6 +47,7 @@ async function buildServer() {
     absWorkingDir: PROJECT_ROOT,
     entryPoints: {
       main: 'server/main.ts',
+      worker: 'server/worker.ts',
       migrate: 'server/cli/migrate.ts',
       seed: 'server/cli/seed.ts',
       ...Object.fromEntries(

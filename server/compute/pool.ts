@@ -1,11 +1,13 @@
-import { Piscina } from 'piscina';
+import { Piscina, queueOptionsSymbol } from 'piscina';
 import type { SweepReply, SweepTask } from './protocol.ts';
+import { SmallestFirst, type TaskSize } from './smallest-first.ts';
 import { resolveWorkerFile } from './worker-file.ts';
 
-/** The threads that sweep. Tasks are served in the order they came, so runs that keep few in flight take turns. */
+/** The threads that sweep. Tasks of smaller pieces of work are served first. */
 export interface ComputePool {
   readonly threads: number;
-  sweep(task: SweepTask): Promise<SweepReply>;
+  /** `ofSections` is the size of the whole that the task is a chunk of. */
+  sweep(task: SweepTask, ofSections: number): Promise<SweepReply>;
   /** Stops the threads at once; unfinished tasks are rejected. */
   close(): Promise<void>;
 }
@@ -21,11 +23,15 @@ export async function startComputePool(threads: number): Promise<ComputePool> {
     minThreads: threads,
     maxThreads: threads,
     concurrentTasksPerWorker: 1,
+    taskQueue: new SmallestFirst(),
     niceIncrement: NICE,
   });
   return {
     threads,
-    sweep: (task) => piscina.run(task),
+    sweep: (task, ofSections) => {
+      const size: TaskSize = { sections: ofSections };
+      return piscina.run(Object.assign(task, { [queueOptionsSymbol]: size }));
+    },
     close: () => piscina.destroy(),
   };
 }

@@ -3,6 +3,7 @@ import { emptyChunk } from '#shared/sweep/chunk.ts';
 import { mergeChunks } from '#shared/sweep/merge.ts';
 import type { SweepProblem, View } from '#shared/sweep/problem.ts';
 import type { ComputePool } from './pool.ts';
+import type { SweepReply } from './protocol.ts';
 
 /** About 50 ms of work: enough to make the 0.1 ms of a task's way to a thread vanish, little enough to take turns. */
 const LARGEST_CHUNK = 2 ** 18;
@@ -19,41 +20,44 @@ interface ChunkedSweep {
   readonly key: string;
   readonly problem: SweepProblem;
   readonly view: View;
-  readonly sectionCount: number;
+  /** The sections [from, to); from the first where not said. */
+  readonly from?: number;
+  readonly to: number;
   /** Shared with the threads: set its cell to stop all chunks after their batch. */
   readonly cancelFlag: Int32Array;
   readonly chunkSections?: number;
-  readonly onProgress?: (merged: ChunkResult, evaluated: number) => void;
+  readonly onProgress?: (part: SweptPart) => void;
 }
 
-/** What is merged when it ended: everything, or the part done before the cancel flag was set. */
-export interface ChunkedSweepResult {
+/** What is done of a range: all of [from, doneTo), and nothing behind it, so that the rest is one range again. */
+export interface SweptPart {
   readonly chunk: ChunkResult;
-  readonly evaluated: number;
+  readonly doneTo: number;
 }
 
 export function createCancelFlag(): Int32Array {
   return new Int32Array(new SharedArrayBuffer(Int32Array.BYTES_PER_ELEMENT));
 }
 
-/** Sweeps the whole space on the pool. The result does not depend on the threads, the chunks or their order. */
-export async function sweepInChunks(sweep: ChunkedSweep): Promise<ChunkedSweepResult> {
-  const { pool, key, problem, view, sectionCount, cancelFlag, onProgress } = sweep;
-  const chunkSections = sweep.chunkSections ?? chunkSizeFor(sectionCount, pool.threads);
-  let merged = emptyChunk();
-  let evaluated = 0;
-  let next = 0;
+/**
+ * Sweeps a range on the pool, or its first part when the cancel flag is set meanwhile. The result of the range does not
+ * depend on the threads, the chunks or their order.
+ */
+export async function sweepInChunks(sweep: ChunkedSweep): Promise<SweptPart> {
+  const { pool, key, problem, view, to, cancelFlag, onProgress } = sweep;
+  const { from = 0 } = sweep;
+  const chunkSections = sweep.chunkSections ?? chunkSizeFor(to - from, pool.threads);
+  const done = new DonePart(from);
+  let next = from;
   const isStopped = () => Atomics.load(cancelFlag, 0) !== 0;
 
   async function takeChunks(): Promise<void> {
-    while (next < sectionCount && !isStopped()) {
-      const from = next;
-      const to = Math.min(from + chunkSections, sectionCount);
-      next = to;
-      const reply = await pool.sweep({ key, problem, view, from, to, cancelFlag });
-      merged = mergeChunks(merged, reply.chunk);
-      evaluated += reply.doneTo - from;
-      onProgress?.(merged, evaluated);
+    while (next < to && !isStopped()) {
+      const chunkFrom = next;
+      next = Math.min(chunkFrom + chunkSections, to);
+      const task = { key, problem, view, from: chunkFrom, to: next, cancelFlag };
+      const hasGrown = done.add(chunkFrom, await pool.sweep(task, to - from));
+      if (hasGrown) onProgress?.(done.part);
     }
   }
 
@@ -66,7 +70,33 @@ export async function sweepInChunks(sweep: ChunkedSweep): Promise<ChunkedSweepRe
     await Promise.allSettled(lanes);
     throw error;
   }
-  return { chunk: merged, evaluated };
+  return done.part;
+}
+
+/** Chunks merged from the first on; what came before its turn waits for those ahead of it. */
+class DonePart {
+  #part: SweptPart;
+  readonly #early = new Map<number, SweepReply>();
+
+  constructor(from: number) {
+    this.#part = { chunk: emptyChunk(), doneTo: from };
+  }
+
+  get part(): SweptPart {
+    return this.#part;
+  }
+
+  /** Answers whether the part has grown. */
+  add(from: number, reply: SweepReply): boolean {
+    this.#early.set(from, reply);
+    const before = this.#part.doneTo;
+    for (;;) {
+      const following = this.#early.get(this.#part.doneTo);
+      if (following === undefined) return this.#part.doneTo > before;
+      this.#early.delete(this.#part.doneTo);
+      this.#part = { chunk: mergeChunks(this.#part.chunk, following.chunk), doneTo: following.doneTo };
+    }
+  }
 }
 
 function chunkSizeFor(sectionCount: number, threads: number): number {

@@ -18,6 +18,8 @@ export function createPool(databaseUrl: string, log: Log): pg.Pool {
   });
   // Without a listener the restart of the database, which breaks idle connections, would end the process.
   pool.on('error', (error) => log.warn({ err: error }, 'An idle database connection broke'));
+  // Nor is anybody told when one breaks between two queries of a transaction, but by its next query.
+  pool.on('connect', (client) => client.on('error', () => undefined));
   return pool;
 }
 

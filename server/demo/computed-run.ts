@@ -29,7 +29,7 @@ export async function computeViews(
       key: JSON.stringify([problem, view]),
       problem,
       view,
-      sectionCount: spaceSize(space),
+      to: spaceSize(space),
       cancelFlag: createCancelFlag(),
     });
     const result = finishResult(problem, view, chunk);

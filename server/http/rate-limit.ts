@@ -1,6 +1,7 @@
 import type { Request, RequestHandler } from 'express';
 import { ipKeyGenerator, rateLimit } from 'express-rate-limit';
 import { tooManyRequests } from '../errors.ts';
+import { isLoopbackAddress } from './loopback.ts';
 
 const MINUTE_MS = 60_000;
 const SIGN_IN_WINDOW_MS = 15 * MINUTE_MS;
@@ -9,11 +10,9 @@ const SIGN_IN_FAILURES = 10;
 /** Wrong passwords from one address whatever the e-mail: an office shares one, a guesser tries many names. */
 const SIGN_IN_FAILURES_OF_ADDRESS = 100;
 
-const LOOPBACK = /^(::ffff:)?127[.]|^::1$/;
-
 /** This machine is one address: its programs may choose among the 16 million of 127.0.0.0/8. */
 function addressOf({ ip = '' }: Request): string {
-  return LOOPBACK.test(ip) ? 'loopback' : ipKeyGenerator(ip);
+  return isLoopbackAddress(ip) ? 'loopback' : ipKeyGenerator(ip);
 }
 
 interface Limit {

@@ -1,4 +1,5 @@
-import { and, eq, inArray, sql } from 'drizzle-orm';
+import { and, eq, inArray, sql, type SQL } from 'drizzle-orm';
+import type { PgUpdateSetSource } from 'drizzle-orm/pg-core';
 import type { RunState } from '#shared/contract/records.ts';
 import type { Database } from '../db/client.ts';
 import { runViews } from '../db/schema/run-views.ts';
@@ -10,39 +11,49 @@ export interface ViewTarget {
   readonly viewId: string;
   /** States the view must be in; in any other the change is refused. */
   readonly from: readonly RunState[];
-  /** The worker that must hold it, where the change comes from one. */
-  readonly heldBy?: string;
+  /** What must hold besides. */
+  readonly when?: SQL | undefined;
 }
 
-export type ViewChange = Partial<
-  Pick<
-    typeof runViews.$inferInsert,
-    | 'state'
-    | 'evaluated'
-    | 'feasible'
-    | 'elapsedMs'
-    | 'result'
-    | 'frontCount'
-    | 'hash'
-    | 'message'
-    | 'workerId'
-    | 'startedAt'
-    | 'finishedAt'
-    | 'cancelRequestedAt'
-  >
->;
+export type ViewChange = Pick<
+  PgUpdateSetSource<typeof runViews>,
+  | 'state'
+  | 'evaluated'
+  | 'merged'
+  | 'feasible'
+  | 'elapsedMs'
+  | 'countedAt'
+  | 'result'
+  | 'frontCount'
+  | 'hash'
+  | 'message'
+  | 'startedAt'
+  | 'finishedAt'
+  | 'cancelRequestedAt'
+> & { readonly state?: RunState };
 
 /** All but the result, which can be large. */
 const CHANGED_COLUMNS = {
   id: runViews.id,
   x: runViews.x,
   y: runViews.y,
-  evaluated: runViews.evaluated,
+  state: runViews.state,
+  merged: runViews.merged,
   cancelRequestedAt: runViews.cancelRequestedAt,
 };
 export type ChangedView = Pick<typeof runViews.$inferSelect, keyof typeof CHANGED_COLUMNS>;
 
 const ENDED: readonly RunState[] = ['finished', 'cancelled', 'failed'];
+
+/** Longer than between two reports of a worker; what lies between two further apart is no work but an outage. */
+const LONGEST_GAP_MS = 2000;
+const NOW = sql`clock_timestamp()`;
+const WORKED = sql<number>`elapsed_ms + case when counted_at is null then 0
+  else least(extract(epoch from ${NOW} - counted_at) * 1000, ${LONGEST_GAP_MS}) end`;
+/** Parts of a change: begins to count the time a view is worked on, brings it up to date, ends it. */
+export const COUNT_FROM_NOW: ViewChange = { countedAt: NOW };
+export const COUNT_TIME: ViewChange = { elapsedMs: WORKED, countedAt: NOW };
+export const STOP_COUNTING: ViewChange = { elapsedMs: WORKED, countedAt: null };
 
 /**
  * The one way to change a view: writes it, keeps the run's own state in step, and tells whoever follows the run.
@@ -63,14 +74,12 @@ export async function changeView(
     if (run === undefined) return undefined;
     const [view] = await tx
       .update(runViews)
-      .set({ ...change, sequence: run.sequence })
-      .where(
-        and(
-          eq(runViews.id, target.viewId),
-          inArray(runViews.state, [...target.from]),
-          target.heldBy === undefined ? undefined : eq(runViews.workerId, target.heldBy),
-        ),
-      )
+      .set({
+        ...change,
+        sequence: run.sequence,
+        ...(change.result === undefined ? {} : { resultSequence: run.sequence }),
+      })
+      .where(and(eq(runViews.id, target.viewId), inArray(runViews.state, [...target.from]), target.when))
       .returning(CHANGED_COLUMNS);
     if (view === undefined) return undefined;
     const isOwnView = run.view.x === view.x && run.view.y === view.y;

@@ -5,8 +5,8 @@ import type { Log } from '../log.ts';
 const FIRST_RETRY_MS = 100;
 const LONGEST_RETRY_MS = 2000;
 
-/** First key of the advisory locks that show which queue workers live; the second is the hash of the worker's id. */
-export const WORKER_LOCK_CLASS = 72_710_216;
+/** First key of the advisory locks that show which processes live; the second is the hash of the process's id. */
+export const PROCESS_LOCK_CLASS = 72_710_216;
 
 interface ListenerOptions {
   readonly databaseUrl: string;
@@ -18,13 +18,13 @@ interface ListenerOptions {
 }
 
 /**
- * The process's one standing connection: listens to the channels, and holds a lock for each queue worker of this
- * process. PostgreSQL frees the locks when the process dies, at once and without a clock, so others can tell. They are
- * shared locks, because after a reconnect the lost connection's may still be there.
+ * The process's one standing connection: listens to the channels, and holds a lock in the name of the process.
+ * PostgreSQL frees it when the process dies, at once and without a clock, so others can tell. It is a shared lock,
+ * because after a reconnect the lost connection's may still be there.
  */
 export class DatabaseListener {
   readonly #options: ListenerOptions;
-  readonly #workerIds = new Set<string>();
+  #processId: string | undefined;
   #connection: pg.Client | undefined;
   #lastQuery: Promise<unknown> = Promise.resolve();
   #isStopped = false;
@@ -44,29 +44,10 @@ export class DatabaseListener {
     await this.#connection?.end().catch(() => undefined);
   }
 
-  get workerIds(): readonly string[] {
-    return [...this.#workerIds];
-  }
-
-  async holdWorkerLock(workerId: string): Promise<void> {
-    this.#workerIds.add(workerId);
-    await this.#query('select pg_advisory_lock_shared($1, hashtext($2))', workerId);
-  }
-
-  async releaseWorkerLock(workerId: string): Promise<void> {
-    this.#workerIds.delete(workerId);
-    await this.#query('select pg_advisory_unlock_shared($1, hashtext($2))', workerId);
-  }
-
-  /**
-   * One after the other, as the connection wants them. Without a connection, reconnecting takes the locks; once
-   * stopped, its end frees them.
-   */
-  #query(text: string, workerId: string): Promise<unknown> {
-    if (this.#isStopped) return this.#lastQuery;
-    const done = this.#lastQuery.then(() => this.#connection?.query(text, [WORKER_LOCK_CLASS, workerId]));
-    this.#lastQuery = done.catch(() => undefined);
-    return done;
+  async holdProcessLock(processId: string): Promise<void> {
+    this.#processId = processId;
+    this.#lastQuery = this.#connection === undefined ? this.#lastQuery : lock(this.#connection, processId);
+    await this.#lastQuery;
   }
 
   async #connect(): Promise<void> {
@@ -80,8 +61,7 @@ export class DatabaseListener {
     connection.on('notification', ({ channel, payload }) => onNotification(channel, payload ?? ''));
     await connection.connect();
     for (const channel of channels) await connection.query(`listen ${pg.escapeIdentifier(channel)}`);
-    for (const id of this.#workerIds)
-      await connection.query('select pg_advisory_lock_shared($1, hashtext($2))', [WORKER_LOCK_CLASS, id]);
+    if (this.#processId !== undefined) await lock(connection, this.#processId);
     this.#connection = connection;
     connection.once('end', () => {
       this.#connection = undefined;
@@ -103,3 +83,6 @@ export class DatabaseListener {
     }
   }
 }
+
+const lock = (connection: pg.Client, processId: string): Promise<unknown> =>
+  connection.query('select pg_advisory_lock_shared($1, hashtext($2))', [PROCESS_LOCK_CLASS, processId]);

@@ -6,6 +6,7 @@ export function describeResult(result: ViewResult): ViewChange {
   return {
     result,
     evaluated: result.evaluated,
+    merged: result.evaluated,
     feasible: result.feasible,
     frontCount: result.front.length,
   };

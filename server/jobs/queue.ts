@@ -1,105 +1,74 @@
-import { EventEmitter } from 'node:events';
-import { setTimeout as delay } from 'node:timers/promises';
-import { Logger, run, type Runner, type TaskList, type WorkerEvents } from 'graphile-worker';
-import type { Log } from '../log.ts';
+import type { TaskList } from 'graphile-worker';
 import type { Database } from '../db/client.ts';
-import type { DatabaseListener } from './database-listener.ts';
+import type { Log } from '../log.ts';
+import { QueueLane } from './queue-lane.ts';
 import { recoverJobs } from './recover-jobs.ts';
+import type { WorkerRegistry } from './worker-registry.ts';
 
-/** Runs computed side by side. They share the pool's threads chunk by chunk, so a small one passes a huge one. */
-const CONCURRENT_JOBS = 4;
-/** Jobs are picked up by NOTIFY; the poll is for what a broken connection missed. */
-const POLL_MS = 1000;
-const RECOVERY_INTERVAL_MS = 10_000;
-const RESTART_MS = 1000;
+/**
+ * Places for small runs and merges, and for shards of large runs. Two shards, so that the threads have one while the other
+ * is handed over; a small run never finds all places taken by a large one.
+ */
+const CONCURRENCY = { quick: 6, bulk: 2 } as const;
+/** With the heartbeat's limit, the time within which another worker has what a dead one held. */
+const RECOVERY_INTERVAL_MS = 1500;
 
 interface QueueOptions {
   readonly databaseUrl: string;
   readonly db: Database;
   readonly log: Log;
-  readonly listener: DatabaseListener;
-  /** Given a signal that fires when the service stops: a handler then puts its job back and returns at once. */
-  readonly createTasks: (stopSignal: AbortSignal) => TaskList;
+  readonly registry: WorkerRegistry;
+  /** Given a signal that fires when the process stops: a handler then puts its job back and returns at once. */
+  readonly createTasks: (stopSignal: AbortSignal) => Readonly<Record<keyof typeof CONCURRENCY, TaskList>>;
 }
 
-/** The built-in worker of the queue. Jobs are added by SQL within the transaction that asks for them. */
+/** This process's share of the queue's work. Jobs are added by SQL within the transaction that asks for them. */
 export class Queue {
   readonly #options: QueueOptions;
   readonly #stopping = new AbortController();
-  #runner: Runner | undefined;
+  readonly #lanes: readonly QueueLane[];
   #recovery: NodeJS.Timeout | undefined;
 
   constructor(options: QueueOptions) {
     this.#options = options;
+    const { databaseUrl, log, registry, createTasks } = options;
+    const tasks = createTasks(this.#stopping.signal);
+    this.#lanes = (['quick', 'bulk'] as const).map(
+      (name) =>
+        new QueueLane({
+          databaseUrl,
+          log,
+          concurrency: CONCURRENCY[name],
+          taskList: tasks[name],
+          onWorker: (change, workerId) => registry.note(change, workerId),
+        }),
+    );
   }
 
   async start(): Promise<void> {
+    await this.#options.registry.start();
     await this.#recover();
     this.#recovery = setInterval(() => void this.#recover(), RECOVERY_INTERVAL_MS);
     this.#recovery.unref();
-    await this.#startRunner();
+    for (const lane of this.#lanes) await lane.start();
   }
 
   /** Takes no more jobs, has those in work put back, and returns when they are. */
   async stop(): Promise<void> {
     clearInterval(this.#recovery);
-    const stopped = this.#runner?.stop();
+    const stopped = this.#lanes.map((lane) => lane.stop());
     this.#stopping.abort();
-    await stopped?.catch(() => undefined);
-  }
-
-  async #startRunner(): Promise<void> {
-    const { databaseUrl, createTasks, log } = this.#options;
-    const runner = await run({
-      connectionString: databaseUrl,
-      maxPoolSize: CONCURRENT_JOBS + 2,
-      concurrency: CONCURRENT_JOBS,
-      pollInterval: POLL_MS,
-      noHandleSignals: true,
-      crontab: '',
-      taskList: createTasks(this.#stopping.signal),
-      events: this.#createEvents(),
-      logger: adaptLog(log),
-    });
-    this.#runner = runner;
-    // The runner gives up after some failures to reach the database in a row.
-    runner.promise.catch((error: unknown) => this.#restartRunner(error));
-  }
-
-  async #restartRunner(error: unknown): Promise<void> {
-    this.#options.log.warn({ err: error }, 'The queue stopped working and is started again');
-    while (!this.#stopping.signal.aborted) {
-      await delay(RESTART_MS, undefined, { ref: false });
-      try {
-        await this.#startRunner();
-        return;
-      } catch (failure) {
-        this.#options.log.warn({ err: failure }, 'The queue could not be started yet');
-      }
-    }
-  }
-
-  #createEvents(): WorkerEvents {
-    const events: WorkerEvents = new EventEmitter();
-    const { listener, log } = this.#options;
-    const report = (error: unknown) => log.warn({ err: error }, 'A worker could not show that it lives');
-    events.on('worker:create', ({ worker }) => void listener.holdWorkerLock(worker.workerId).catch(report));
-    events.on('worker:stop', ({ worker }) => void listener.releaseWorkerLock(worker.workerId).catch(report));
-    return events;
+    await Promise.all(stopped);
+    await this.#options.registry.stop();
   }
 
   async #recover(): Promise<void> {
-    const { db, listener, log } = this.#options;
+    const { db, registry, log } = this.#options;
+    if (!registry.isSteady) return;
     try {
-      await recoverJobs(db, { ownWorkerIds: listener.workerIds, log });
+      await recoverJobs(db, { ownProcessId: registry.id, log });
     } catch (error) {
       log.warn({ err: error }, 'Jobs of lost workers could not be looked for');
     }
   }
-}
-
-/** The queue reports each job it takes; of interest here is only what goes wrong. */
-function adaptLog(log: Log): Logger {
-  const writers = { error: log.error, warning: log.warn, info: log.debug, debug: log.debug };
-  return new Logger(() => (level, message, meta) => writers[level].call(log, { err: meta?.error }, message));
 }

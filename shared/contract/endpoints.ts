@@ -1,6 +1,7 @@
 import type { z } from 'zod';
 import { candidateEndpoints } from './endpoints/candidate-endpoints.ts';
 import { officeEndpoints } from './endpoints/office-endpoints.ts';
+import { operationsEndpoints } from './endpoints/operations-endpoints.ts';
 import { projectEndpoints } from './endpoints/project-endpoints.ts';
 import { runEndpoints } from './endpoints/run-endpoints.ts';
 import { shareLinkEndpoints } from './endpoints/share-link-endpoints.ts';
@@ -17,6 +18,7 @@ export const endpoints = {
   ...runEndpoints,
   ...candidateEndpoints,
   ...shareLinkEndpoints,
+  ...operationsEndpoints,
 } as const;
 
 export type EndpointName = keyof typeof endpoints;

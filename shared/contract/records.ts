@@ -93,6 +93,8 @@ export type RunState = (typeof RUN_STATES)[number];
 /** Live state of one view of a run; what the event stream sends. */
 export const viewProgressSchema = z.object({
   viewId: idSchema,
+  /** Increases with every change of one of the run's views: of two states of a view, the one with more is the later. */
+  sequence: z.number(),
   view: viewSchema,
   state: z.enum(RUN_STATES),
   evaluated: z.number(),
@@ -104,6 +106,13 @@ export const viewProgressSchema = z.object({
   message: z.string().nullable(),
 });
 export type ViewProgress = z.infer<typeof viewProgressSchema>;
+/** As the event stream tells it: without the result where the reader has that already. */
+export const viewEventSchema = viewProgressSchema.partial({ result: true });
+export type ViewEvent = z.infer<typeof viewEventSchema>;
+
+/** Where a view stands that nobody works on yet: views taken before it, and processes that take any. */
+export const queuePositionSchema = z.object({ viewId: idSchema, ahead: z.number(), workers: z.number() });
+export type QueuePosition = z.infer<typeof queuePositionSchema>;
 
 export const runSummarySchema = z.object({
   id: idSchema,

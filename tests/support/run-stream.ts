@@ -1,5 +1,5 @@
 import { get, type IncomingMessage } from 'node:http';
-import type { ViewProgress } from '#shared/contract/records.ts';
+import type { ViewEvent, ViewProgress } from '#shared/contract/records.ts';
 import type { TestOffice } from './office.ts';
 import type { SignedIn } from './signed-in.ts';
 
@@ -48,7 +48,7 @@ export async function followRun(
     unread = blocks.pop()!;
     for (const block of blocks) {
       const event = parseEvent(block);
-      if (event !== undefined) events.push(event);
+      if (event !== undefined) events.push(withResult(event, events));
     }
     for (const check of waiting) check();
   });
@@ -73,7 +73,19 @@ export async function followRun(
   };
 }
 
-function parseEvent(block: string): RunEvent | undefined {
+/** An event without a result leaves the view's last one in place. */
+function withResult({ id, progress }: ParsedEvent, before: readonly RunEvent[]): RunEvent {
+  const last = before.findLast((event) => event.progress.viewId === progress.viewId);
+  const { result = last?.progress.result ?? null } = progress;
+  return { id, progress: { ...progress, result } };
+}
+
+interface ParsedEvent {
+  readonly id: number;
+  readonly progress: ViewEvent;
+}
+
+function parseEvent(block: string): ParsedEvent | undefined {
   const fields = new Map(
     block.split('\n').map((line) => {
       const at = line.indexOf(': ');
@@ -82,7 +94,7 @@ function parseEvent(block: string): RunEvent | undefined {
   );
   const data = fields.get('data');
   if (fields.get('event') !== 'progress' || data === undefined) return undefined;
-  return { id: Number(fields.get('id')), progress: JSON.parse(data) as ViewProgress };
+  return { id: Number(fields.get('id')), progress: JSON.parse(data) as ViewEvent };
 }
 
 export const hasEnded = ({ progress }: RunEvent): boolean =>

@@ -9,6 +9,7 @@ export const queryKeys = {
   sweep: (sweepId: string) => ['sweep', sweepId] as const,
   run: (runId: string) => ['run', runId] as const,
   view: (runId: string, x: string, y: string) => ['run', runId, 'view', x, y] as const,
+  liveView: (runId: string, viewId: string) => ['run', runId, 'live', viewId] as const,
   runSection: (runId: string, index: number) => ['run', runId, 'section', index] as const,
   candidates: (projectId: string) => ['project', projectId, 'candidates'] as const,
   candidate: (candidateId: string) => ['candidate', candidateId] as const,

@@ -16,6 +16,7 @@ import { RUN_STATES } from '#shared/contract/records.ts';
 import { MEASURE_IDS } from '#shared/engine/measures.ts';
 import type { ViewResult } from '#shared/sweep/result.ts';
 import { oneOf } from './one-of.ts';
+import { people } from './people.ts';
 import { runs } from './runs.ts';
 
 /** A run seen through two measures: computed once from the run's frozen inputs, then kept. */
@@ -38,13 +39,19 @@ export const runViews = pgTable(
     hash: text(),
     /** Why it failed, in words for the person who reads it. */
     message: text(),
-    /** The queue's worker that computes it: only that one may write to it. Null when nobody does. */
-    workerId: text('worker_id'),
     /** The run's event this state was sent with. */
     sequence: bigint({ mode: 'number' }).notNull().default(0),
+    /** The run's event the result was last changed with; 0 while there is none. */
+    resultSequence: bigint('result_sequence', { mode: 'number' }).notNull().default(0),
+    /** Sections the result covers; `evaluated` counts those in work too. */
+    merged: bigint({ mode: 'number' }).notNull().default(0),
+    /** Who opened it; null for the run's own view, which whoever started the run did. */
+    openedBy: uuid('opened_by').references(() => people.id),
     cancelRequestedAt: timestamp('cancel_requested_at', { withTimezone: true }),
     createdAt: timestamp('created_at', { withTimezone: true }).notNull().defaultNow(),
     startedAt: timestamp('started_at', { withTimezone: true }),
+    /** When `elapsed_ms` was last brought up to date; null while nobody works on it. */
+    countedAt: timestamp('counted_at', { withTimezone: true }),
     finishedAt: timestamp('finished_at', { withTimezone: true }),
   },
   (t) => [
@@ -56,7 +63,10 @@ export const runViews = pgTable(
     check('run_views_y_check', oneOf(t.y, MEASURE_IDS)),
     check('run_views_two_measures_check', sql`${t.x} <> ${t.y}`),
     check('run_views_state_check', oneOf(t.state, RUN_STATES)),
-    check('run_views_counts_check', sql`0 <= ${t.feasible} and ${t.feasible} <= ${t.evaluated}`),
+    check(
+      'run_views_counts_check',
+      sql`0 <= ${t.feasible} and ${t.feasible} <= ${t.merged} and ${t.merged} <= ${t.evaluated}`,
+    ),
     check(
       'run_views_finished_check',
       sql`${t.state} <> 'finished' or (${t.result} is not null and ${t.hash} is not null)`,

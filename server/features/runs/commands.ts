@@ -5,6 +5,7 @@ import type { DesignBasis } from '#shared/engine/section.ts';
 import { ENGINE_VERSION } from '#shared/engine/version.ts';
 import type { View } from '#shared/sweep/problem.ts';
 import { spaceSize } from '#shared/sweep/space.ts';
+import type { RunningLimits } from '../../config.ts';
 import type { Database } from '../../db/client.ts';
 import { beams } from '../../db/schema/beams.ts';
 import { runViews } from '../../db/schema/run-views.ts';
@@ -13,23 +14,28 @@ import { sweeps } from '../../db/schema/sweeps.ts';
 import { conflict, forbidden, invalidInput, notFound } from '../../errors.ts';
 import { frozenBasis } from '../../http/frozen-basis.ts';
 import { requireReadableProject, requireRole } from '../../http/project-access.ts';
-import { changeView, type ViewTarget } from '../../jobs/change-view.ts';
-import { dequeueComputeView, enqueueComputeView } from '../../jobs/compute-view-job.ts';
-import { describePart } from '../../jobs/describe-result.ts';
-import { notifyViewCancelled } from '../../jobs/run-notifications.ts';
+import { changeView } from '../../jobs/change-view.ts';
+import { enqueueShards, insertShards } from '../../jobs/compute-jobs.ts';
+import { cancelView, resumeView } from '../../jobs/end-view.ts';
 import { findMissingInputs } from './available-measures.ts';
 import { canSeeView, RUNNERS } from './policy.ts';
 import { requireView, type RunRecord, type ViewRow } from './queries.ts';
+import { refuseTooManySections, takeTurn } from './running-limits.ts';
 import { requireRunnable } from './runnable.ts';
 
 const UNFINISHED: RunState[] = ['queued', 'running'];
+const RESUMABLE: readonly RunState[] = ['cancelled', 'failed'];
 /** A run for each beam of a floor at once; more would keep everybody else's waiting. */
 const RUNS_PER_PERSON = 50;
 /** Anyone who reads a run may look at it through other measures, a few at a time. */
 const UNFINISHED_VIEWS_PER_RUN = 8;
 
 /** Freezes the sweep as it is now and puts its computation in the queue. Answers the run's id. */
-export async function startRun(db: Database, person: Person, sweepId: string): Promise<string> {
+export async function startRun(
+  db: Database,
+  person: Person,
+  { sweepId, limits }: { sweepId: string; limits: RunningLimits },
+): Promise<string> {
   return db.transaction(async (tx) => {
     // The sweep's row is locked: runs are numbered one after the other, and nobody edits it in between.
     const [sweep] = await tx.select().from(sweeps).where(eq(sweeps.id, sweepId)).for('update');
@@ -40,6 +46,8 @@ export async function startRun(db: Database, person: Person, sweepId: string): P
     await refuseTooManyRuns(tx, person);
     const basis = frozenBasis(project);
     requireRunnable(sweep.definition, basis, project.designBasis.units);
+    const adding = spaceSize(sweep.definition.space);
+    await refuseTooManySections(tx, { person, limits, adding });
     return insertRun(tx, { sweepId, definition: sweep.definition, basis, startedBy: person.id });
   });
 }
@@ -73,20 +81,25 @@ async function insertRun(tx: Database, { sweepId, definition, basis, startedBy }
       sectionCount: spaceSize(definition.space),
       startedBy,
     })
-    .returning({ id: runs.id });
-  await insertView(tx, run!.id, definition.view);
+    .returning({ id: runs.id, sectionCount: runs.sectionCount });
+  await insertView(tx, run!, { view: definition.view, openedBy: null });
   return run!.id;
 }
 
 /** Answers its id; undefined where the run has such a view already. */
-async function insertView(tx: Database, runId: string, { x, y }: View): Promise<string | undefined> {
+async function insertView(
+  tx: Database,
+  { id: runId, sectionCount }: Pick<RunRecord['run'], 'id' | 'sectionCount'>,
+  { view: { x, y }, openedBy }: { view: View; openedBy: string | null },
+): Promise<string | undefined> {
   const [inserted] = await tx
     .insert(runViews)
-    .values({ runId, x, y })
+    .values({ runId, x, y, openedBy })
     .onConflictDoNothing()
     .returning({ id: runViews.id });
   if (inserted === undefined) return undefined;
-  await enqueueComputeView(tx, inserted.id);
+  await insertShards(tx, inserted.id, { from: 0, to: sectionCount });
+  await enqueueShards(tx, inserted.id);
   // No change but the event: whoever follows the run learns of the new view.
   await changeView(tx, { runId, viewId: inserted.id, from: ['queued'] }, {});
   return inserted.id;
@@ -100,38 +113,55 @@ export async function cancelRun(db: Database, person: Person, { run }: RunRecord
       .select({ viewId: runViews.id })
       .from(runViews)
       .where(and(eq(runViews.runId, run.id), inArray(runViews.state, UNFINISHED)));
-    for (const { viewId } of unfinished) await cancelView(tx, { runId: run.id, viewId, run });
+    for (const { viewId } of unfinished)
+      await cancelView(tx, { runId: run.id, viewId, sectionCount: run.sectionCount });
   });
 }
 
-async function cancelView(
-  tx: Database,
-  { runId, viewId, run }: { runId: string; viewId: string; run: RunRecord['run'] },
+/** Takes the run's own view up again where it was left. One under way, or finished, has nothing to resume: no error. */
+export async function resumeRun(
+  db: Database,
+  person: Person,
+  { record: { run }, limits }: { record: RunRecord; limits: RunningLimits },
 ): Promise<void> {
-  const now = new Date();
-  const waiting: ViewTarget = { runId, viewId, from: ['queued'] };
-  const cancelled = await changeView(tx, waiting, {
-    state: 'cancelled',
-    cancelRequestedAt: now,
-    finishedAt: now,
-    message: describePart(0, run.sectionCount),
+  requireRole(person, RUNNERS, 'resume runs');
+  await db.transaction(async (tx) => {
+    await takeTurn(tx);
+    const view = await requireOwnView(tx, run);
+    if (!RESUMABLE.includes(view.state)) return;
+    refuseOtherEngine(run);
+    await refuseTooManyRuns(tx, person);
+    await refuseTooManySections(tx, { person, limits, adding: run.sectionCount - view.evaluated });
+    await resumeView(tx, { runId: run.id, viewId: view.id, sectionCount: run.sectionCount });
   });
-  if (cancelled !== undefined) {
-    await dequeueComputeView(tx, viewId);
-    return;
-  }
-  const asked = await changeView(tx, { ...waiting, from: ['running'] }, { cancelRequestedAt: now });
-  if (asked !== undefined) await notifyViewCancelled(tx, viewId);
+}
+
+async function requireOwnView(tx: Database, run: RunRecord['run']) {
+  const { x, y } = run.definition.view;
+  const [view] = await tx
+    .select({ id: runViews.id, state: runViews.state, evaluated: runViews.evaluated })
+    .from(runViews)
+    .where(and(eq(runViews.runId, run.id), eq(runViews.x, x), eq(runViews.y, y)));
+  if (view === undefined) throw notFound('View');
+  return view;
+}
+
+/** Shards of two engines do not add up to the result of either. */
+function refuseOtherEngine({ engineVersion }: RunRecord['run']): void {
+  if (engineVersion !== ENGINE_VERSION)
+    throw conflict(
+      `The run was started with engine ${engineVersion}; the engine is ${ENGINE_VERSION} by now. Start a new run.`,
+    );
 }
 
 /**
  * The run seen through two measures, computed from its frozen inputs where it was not yet. One that failed or was
- * cancelled is computed anew, except the run's own: a run happens once.
+ * cancelled is taken up again, except the run's own: that is resumed by whoever may run it.
  */
 export async function openView(
   db: Database,
   person: Person,
-  { record, view }: { record: RunRecord; view: View },
+  { record, view, limits }: { record: RunRecord; view: View; limits: RunningLimits },
 ): Promise<ViewRow> {
   if (!canSeeView(person, view)) throw forbidden(`Your role (${person.role}) may not see costs`);
   const { run, project } = record;
@@ -143,8 +173,13 @@ export async function openView(
   });
   if (missing.length > 0) throw invalidInput(missing);
   const viewId = await db.transaction(async (tx) => {
-    const id = (await insertView(tx, run.id, view)) ?? (await retryView(tx, record, view));
+    await takeTurn(tx);
+    const inserted = await insertView(tx, run, { view, openedBy: person.id });
+    const { id, isBegun } =
+      inserted === undefined ? await retryView(tx, record, view) : { id: inserted, isBegun: true };
     await refuseTooManyViews(tx, run.id);
+    // Its own sections are counted already.
+    if (isBegun) await refuseTooManySections(tx, { person, limits, adding: 0 });
     return id;
   });
   return requireView(db, person, { runId: run.id, viewId });
@@ -159,19 +194,18 @@ async function refuseTooManyViews(tx: Database, runId: string): Promise<void> {
     );
 }
 
-async function retryView(tx: Database, { run }: RunRecord, { x, y }: View): Promise<string> {
+async function retryView(
+  tx: Database,
+  { run }: RunRecord,
+  { x, y }: View,
+): Promise<{ id: string; isBegun: boolean }> {
   const [existing] = await tx
     .select({ id: runViews.id })
     .from(runViews)
     .where(and(eq(runViews.runId, run.id), eq(runViews.x, x), eq(runViews.y, y)));
-  const viewId = existing!.id;
+  const { id } = existing!;
   const own = run.definition.view;
-  if (own.x === x && own.y === y) return viewId;
-  const again = await changeView(
-    tx,
-    { runId: run.id, viewId, from: ['failed', 'cancelled'] },
-    { state: 'queued', message: null, cancelRequestedAt: null, finishedAt: null, startedAt: null },
-  );
-  if (again !== undefined) await enqueueComputeView(tx, viewId);
-  return viewId;
+  if ((own.x === x && own.y === y) || run.engineVersion !== ENGINE_VERSION) return { id, isBegun: false };
+  const { sectionCount } = run;
+  return { id, isBegun: await resumeView(tx, { runId: run.id, viewId: id, sectionCount }) };
 }

@@ -2,13 +2,16 @@ import { once } from 'node:events';
 import type { Response } from 'express';
 import type { Person } from '#shared/contract/records.ts';
 import type { Database } from '../../db/client.ts';
+import { listQueuePositions } from '../../jobs/queue-position.ts';
 import type { RunEvents } from '../../jobs/run-events.ts';
 import type { Log } from '../../log.ts';
-import { presentViewProgress } from './present.ts';
+import { presentViewEvent } from './present.ts';
 import { listViewsChangedAfter, type RunRecord } from './queries.ts';
 
 /** Under the idle limit of the proxies an office may have in between. Also how long a stream outlives the right to it. */
 const HEARTBEAT_MS = 15_000;
+/** Between two looks at the queue, while something of the run waits in it. */
+const POSITION_MS = 1000;
 /** What a client waits before it connects again. */
 const RETRY_MS = 1000;
 
@@ -37,6 +40,7 @@ export function streamRun(stream: RunStream): void {
     res.write(': still here\n\n');
     send();
   }, HEARTBEAT_MS);
+  const positions = setInterval(() => void sender.sendPositions(), POSITION_MS);
   const unfollow = runEvents.follow(record.run.id, {
     onViewChanged: send,
     onGap: send,
@@ -44,6 +48,7 @@ export function streamRun(stream: RunStream): void {
   });
   res.once('close', () => {
     clearInterval(heartbeat);
+    clearInterval(positions);
     unfollow();
     sender.close();
   });
@@ -61,6 +66,9 @@ class ChangeSender {
   #isDirty = false;
   #isSending = false;
   #isClosed = false;
+  /** Whether a view of the run may be waiting in the queue. */
+  #mayWait = true;
+  #toldPositions = '';
 
   constructor(stream: RunStream) {
     this.#stream = stream;
@@ -88,6 +96,22 @@ class ChangeSender {
     }
   }
 
+  /** Tells where the run's views stand in the queue, where that has changed. No event of the run: it has no id. */
+  async sendPositions(): Promise<void> {
+    if (!this.#mayWait || this.#isClosed) return;
+    const { db, res, record, log } = this.#stream;
+    try {
+      const positions = await listQueuePositions(db, record.run.id);
+      this.#mayWait = positions.length > 0;
+      const told = JSON.stringify(positions);
+      if (this.#isClosed || told === this.#toldPositions) return;
+      this.#toldPositions = told;
+      for (const position of positions) res.write(`event: queue\ndata: ${JSON.stringify(position)}\n\n`);
+    } catch (error) {
+      log.warn({ err: error }, 'The position in the queue could not be read');
+    }
+  }
+
   close(): void {
     this.#isClosed = true;
     // Whoever waits for it to drain is let go.
@@ -108,11 +132,13 @@ class ChangeSender {
       this.#end();
       return;
     }
-    for (const view of await listViewsChangedAfter(db, id, this.#sent)) {
+    for (const changed of await listViewsChangedAfter(db, id, this.#sent)) {
       if (this.#isClosed) return;
-      this.#sent = view.sequence;
-      const data = JSON.stringify(presentViewProgress(view, sectionCount, reader));
-      if (!res.write(`event: progress\nid: ${view.sequence}\ndata: ${data}\n\n`)) await once(res, 'drain');
+      const { sequence } = changed.view;
+      this.#sent = sequence;
+      this.#mayWait ||= changed.view.state === 'queued';
+      const data = JSON.stringify(presentViewEvent(changed, sectionCount, reader));
+      if (!res.write(`event: progress\nid: ${sequence}\ndata: ${data}\n\n`)) await once(res, 'drain');
     }
   }
 }

@@ -1,5 +1,5 @@
 import { fullBasisSchema } from '#shared/contract/design-basis.ts';
-import type { Person, Run, RunSummary, ViewProgress } from '#shared/contract/records.ts';
+import type { Person, Run, RunSummary, ViewEvent, ViewProgress } from '#shared/contract/records.ts';
 import { canSeeRates } from '../../http/project-access.ts';
 import { canSeeView } from './policy.ts';
 import type { RunRecord, ViewRow } from './queries.ts';
@@ -11,6 +11,7 @@ type ViewState = Omit<ViewRow, 'result'>;
 function presentViewState(view: ViewState, sectionCount: number): Omit<ViewProgress, 'result'> {
   return {
     viewId: view.id,
+    sequence: view.sequence,
     view: { x: view.x, y: view.y },
     state: view.state,
     evaluated: view.evaluated,
@@ -28,6 +29,15 @@ export function presentViewProgress(view: ViewRow, sectionCount: number, person:
   if (view.result === null || canSeeRates(person)) return { ...state, result: view.result };
   const best = view.result.best.filter(({ measure }) => measure !== 'costPerM');
   return { ...state, result: { ...view.result, best } };
+}
+
+/** A change for whoever has the view's result already, unless that changed as well. */
+export function presentViewEvent(
+  { view, isResultNew }: { view: ViewRow; isResultNew: boolean },
+  sectionCount: number,
+  person: Person,
+): ViewEvent {
+  return isResultNew ? presentViewProgress(view, sectionCount, person) : presentViewState(view, sectionCount);
 }
 
 interface RunParts extends RunRecord {

@@ -1,4 +1,4 @@
-import { and, asc, eq, getTableColumns, gt } from 'drizzle-orm';
+import { and, asc, eq, getTableColumns, gt, sql } from 'drizzle-orm';
 import type { Person } from '#shared/contract/records.ts';
 import type { Evaluation } from '#shared/engine/evaluation.ts';
 import { evaluateSection } from '#shared/engine/evaluate.ts';
@@ -49,17 +49,30 @@ export async function listViews(db: Database, runId: string): Promise<Omit<ViewR
   return db.select(columns).from(runViews).where(eq(runViews.runId, runId)).orderBy(asc(runViews.createdAt));
 }
 
+export interface ChangedView {
+  readonly view: ViewRow;
+  /** Whether the result changed after the event too; null in `view` where it did not. */
+  readonly isResultNew: boolean;
+}
+
 /** The views that changed after an event of the run, in the order they did. */
 export async function listViewsChangedAfter(
   db: Database,
   runId: string,
   sequence: number,
-): Promise<ViewRow[]> {
-  return db
-    .select()
+): Promise<ChangedView[]> {
+  const { result, ...columns } = getTableColumns(runViews);
+  const isResultNew = gt(runViews.resultSequence, sequence);
+  const rows = await db
+    .select({
+      ...columns,
+      // Large, and most changes leave it alone: not read for nothing.
+      result: sql<ViewRow['result']>`case when ${isResultNew} then ${result} end`,
+    })
     .from(runViews)
     .where(and(eq(runViews.runId, runId), gt(runViews.sequence, sequence)))
     .orderBy(asc(runViews.sequence));
+  return rows.map((view) => ({ view, isResultNew: view.resultSequence > sequence }));
 }
 
 export async function requireView(

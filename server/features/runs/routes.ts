@@ -9,17 +9,21 @@ import { runs } from '../../db/schema/runs.ts';
 import type { Deps } from '../../deps.ts';
 import { notFound } from '../../errors.ts';
 import { bind } from '../../http/bind.ts';
-import { findReadableProject } from '../../http/project-access.ts';
+import { findReadableProject, requireRole } from '../../http/project-access.ts';
 import { findPersonStillSignedIn, requireSignedInPerson } from '../../http/signed-in-person.ts';
-import { cancelRun, openView, startRun } from './commands.ts';
+import { readRunningLoad } from '../../jobs/running-load.ts';
+import { cancelRun, openView, resumeRun, startRun } from './commands.ts';
 import { streamRun } from './event-stream.ts';
 import { OpenStreams } from './open-streams.ts';
+import { RUNNERS } from './policy.ts';
 import { presentRun, presentViewProgress } from './present.ts';
 import { getSection, listViews, requireRun, requireView } from './queries.ts';
 
 export function registerRunRoutes(router: Router, deps: Deps): void {
+  const { runningLimits: limits } = deps.config;
+
   bind(router, deps, 'startRun', async ({ person, params, deps: { db } }) =>
-    readRun(db, person, await startRun(db, person, params.id)),
+    readRun(db, person, await startRun(db, person, { sweepId: params.id, limits })),
   );
 
   bind(router, deps, 'getRun', ({ person, params, deps: { db } }) => readRun(db, person, params.id));
@@ -29,9 +33,19 @@ export function registerRunRoutes(router: Router, deps: Deps): void {
     return readRun(db, person, params.id);
   });
 
+  bind(router, deps, 'resumeRun', async ({ person, params, deps: { db } }) => {
+    await resumeRun(db, person, { record: await requireRun(db, person, params.id), limits });
+    return readRun(db, person, params.id);
+  });
+
+  bind(router, deps, 'getRunningLoad', ({ person, deps: { db } }) => {
+    requireRole(person, RUNNERS, 'see what is under way');
+    return readRunningLoad(db, person.id, limits);
+  });
+
   bind(router, deps, 'openView', async ({ person, params, body, deps: { db } }) => {
     const record = await requireRun(db, person, params.id);
-    const view = await openView(db, person, { record, view: body });
+    const view = await openView(db, person, { record, view: body, limits });
     return presentViewProgress(view, record.run.sectionCount, person);
   });
 

@@ -1,15 +1,30 @@
 import type { JobHelpers, TaskList } from 'graphile-worker';
-import { COMPUTE_VIEW_TASK, computeViewPayloadSchema } from '../compute-view-job.ts';
-import { computeView, type ComputeViewContext } from './compute-view.ts';
+import {
+  MERGE_TASK,
+  mergePayloadSchema,
+  SHARD_TASK,
+  shardPayloadSchema,
+  SMALL_RUN_TASK,
+} from '../compute-jobs.ts';
+import { computeShard } from './compute-shard.ts';
+import type { WorkContext } from './context.ts';
+import { mergeView } from './merge-view.ts';
+import { MergedShards } from './merged-shards.ts';
 
-/** The handlers of the queue's tasks. */
-export function createTasks(context: Omit<ComputeViewContext, 'stopSignal'>) {
-  return (stopSignal: AbortSignal): TaskList => ({
-    [COMPUTE_VIEW_TASK]: async (payload: unknown, helpers: JobHelpers) => {
-      const { viewId } = computeViewPayloadSchema.parse(payload);
+/**
+ * The handlers of the queue's tasks, by the lane they are taken in: small runs and merges never wait for a place that a
+ * shard of a large run holds.
+ */
+export function createTasks(context: Omit<WorkContext, 'stopSignal'>) {
+  const merged = new MergedShards();
+  return (stopSignal: AbortSignal): { readonly quick: TaskList; readonly bulk: TaskList } => {
+    const takeShard = async (payload: unknown, helpers: JobHelpers) => {
+      const key = shardPayloadSchema.parse(payload);
       // Set on every job that is handed to a handler: it is what locks it.
-      const workerId = helpers.job.locked_by!;
-      await computeView({ viewId, workerId }, { ...context, stopSignal });
-    },
-  });
+      await computeShard({ ...key, workerId: helpers.job.locked_by! }, { ...context, stopSignal });
+    };
+    const merge = (payload: unknown) =>
+      mergeView(mergePayloadSchema.parse(payload).viewId, { ...context, merged, stopSignal });
+    return { quick: { [SMALL_RUN_TASK]: takeShard, [MERGE_TASK]: merge }, bulk: { [SHARD_TASK]: takeShard } };
+  };
 }

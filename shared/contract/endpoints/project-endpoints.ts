@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { designBasisSchema, priceBookSchema } from '../design-basis.ts';
+import { priceBookSchema, savedDesignBasisSchema } from '../design-basis.ts';
 import {
   beamInputSchema,
   beamSchema,
@@ -49,7 +49,7 @@ export const projectEndpoints = {
     method: 'put',
     path: '/projects/:id/design-basis',
     params: byId,
-    body: designBasisSchema,
+    body: savedDesignBasisSchema,
     response: projectSchema,
     isPublic: false,
   },

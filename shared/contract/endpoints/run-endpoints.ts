@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { idSchema } from '../numbers.ts';
+import { runningLoadSchema } from '../operations.ts';
 import { evaluateOutputSchema, runSchema, viewProgressSchema } from '../records.ts';
 import { viewSchema } from '../sweep-definition.ts';
 import { byId, nothing } from './endpoint-params.ts';
@@ -28,6 +29,23 @@ export const runEndpoints = {
     params: byId,
     body: nothing,
     response: runSchema,
+    isPublic: false,
+  },
+  /** Takes a cancelled or failed run up again from what it has done. */
+  resumeRun: {
+    method: 'post',
+    path: '/runs/:id/resume',
+    params: byId,
+    body: nothing,
+    response: runSchema,
+    isPublic: false,
+  },
+  getRunningLoad: {
+    method: 'get',
+    path: '/running-load',
+    params: nothing,
+    body: null,
+    response: runningLoadSchema,
     isPublic: false,
   },
   /** Finds the view, or queues its computation from the run's frozen inputs. */

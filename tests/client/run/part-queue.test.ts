@@ -5,6 +5,7 @@ import { createPartQueue } from '#client/src/features/run/part-queue.ts';
 
 const part = (viewId: string, evaluated: number, state: ViewProgress['state'] = 'running'): ViewProgress => ({
   viewId,
+  sequence: evaluated,
   view: { x: 'steelKgPerM', y: 'depthMm' },
   state,
   evaluated,

@@ -10,11 +10,19 @@ import { bandWithin } from '#client/src/features/run/band-within.ts';
 import { checkWords } from '#client/src/features/run/check-words.ts';
 import { columnDecimals } from '#client/src/features/run/column-decimals.ts';
 import { pricesOfChecks } from '#client/src/features/run/price-of-checks.ts';
-import { readRunAddress, withMeasure } from '#client/src/features/run/run-address.ts';
+import {
+  filtersPart,
+  logPart,
+  orderPart,
+  readRunAddress,
+  viewPart,
+  windowPart,
+  withMeasure,
+} from '#client/src/features/run/run-address.ts';
 import { createSectionSource } from '#client/src/features/run/section-source.ts';
 import { sortRows } from '#client/src/features/run/section-rows.ts';
 import { stripScale } from '#client/src/features/run/strip-scale.ts';
-import { newerProgress, paceOf } from '#client/src/features/run/view-progress.ts';
+import { newerProgress, PaceWindow, paceOf } from '#client/src/features/run/view-progress.ts';
 import { BASIS, DEFINITION } from './problem.ts';
 
 const PROBLEM = { ...DEFINITION, basis: BASIS };
@@ -146,16 +154,44 @@ describe('the address of a run', () => {
   const read = (text: string) => readRunAddress(new URLSearchParams(text), first);
 
   it('gives view, section and band', () => {
-    expect(read('x=costPerM&y=depthMm&i=42&band=2.5')).toEqual({
+    expect(read('x=costPerM&y=depthMm&i=42&band=2.5')).toMatchObject({
       view: { x: 'costPerM', y: 'depthMm' },
       index: 42,
       bandShare: 0.025,
     });
   });
 
+  it('gives back all that was written into it', () => {
+    const filters = { depthMm: { low: 500, high: 609.6 }, costPerM: { low: null, high: 300 } };
+    const window = { x: { low: 10, high: 20 }, y: { low: 4, high: 9 } };
+    const parts = {
+      ...logPart(true, true),
+      ...windowPart(window),
+      ...filtersPart(filters),
+      ...orderPart({ key: 'depthMm', isDescending: true }),
+    };
+    const written = new URLSearchParams(
+      Object.entries(parts).flatMap(([key, value]) => (value === null ? [] : [[key, value]])),
+    );
+    expect(read(written.toString())).toMatchObject({
+      filters,
+      window,
+      isXLog: true,
+      isYLog: true,
+      order: { key: 'depthMm', isDescending: true },
+    });
+  });
+
+  it('drops the enlarged part with the axes it was of, and keeps the ranges', () => {
+    expect(viewPart({ x: 'costPerM', y: 'depthMm' })).toMatchObject({ zx: null, zy: null });
+    expect(Object.keys(viewPart({ x: 'costPerM', y: 'depthMm' }))).not.toContain('f');
+  });
+
   it('falls back where it makes no sense', () => {
-    expect(read('x=beauty&y=depthMm&i=-1&band=x')).toEqual({ view: first, index: null, bandShare: 0.05 });
-    expect(read('x=depthMm&y=depthMm&i=1e9&band=400')).toEqual({ view: first, index: null, bandShare: 0.1 });
+    expect(read('x=beauty&y=depthMm&i=-1&band=x')).toEqual(read(''));
+    expect(read('x=depthMm&y=depthMm&i=1e9&band=400')).toEqual({ ...read(''), bandShare: 0.1 });
+    expect(read('by=beauty&as=song&zx=9~1&zy=1~2&f=depthMm:9~1;hue:1~2&show=off&sort=a b')).toEqual(read(''));
+    expect(read('').bandShare).toBe(0.05);
   });
 
   it('swaps the measures when one side takes the other’s', () => {
@@ -168,32 +204,54 @@ describe('the address of a run', () => {
 });
 
 describe('answers and events that overtake each other', () => {
-  const progress = (state: ViewProgress['state'], evaluated: number): ViewProgress => ({
+  const progress = (sequence: number, changes: Partial<ViewProgress> = {}): ViewProgress => ({
     viewId: 'v',
+    sequence,
     view,
-    state,
-    evaluated,
+    state: 'running',
+    evaluated: 100,
     feasible: 0,
     sectionCount: 1000,
     elapsedMs: 100,
     result: null,
     message: null,
+    ...changes,
   });
 
-  it('never take a finished view back to running', () => {
-    const finished = progress('finished', 1000);
-    expect(newerProgress(finished, progress('running', 400))).toBe(finished);
-    expect(newerProgress(progress('running', 400), finished)).toBe(finished);
+  it('never take a view back to an earlier state', () => {
+    const finished = progress(9, { state: 'finished', evaluated: 1000 });
+    expect(newerProgress(finished, progress(8))).toBe(finished);
+    expect(newerProgress(progress(8), finished)).toEqual(finished);
   });
 
-  it('keep the further of two running states', () => {
-    const far = progress('running', 700);
-    expect(newerProgress(far, progress('running', 300))).toBe(far);
+  it('take a resumed view back to work, even with less done than was shown', () => {
+    const resumed = progress(6, { state: 'queued', evaluated: 40 });
+    expect(newerProgress(progress(5, { state: 'cancelled' }), resumed)).toEqual(resumed);
   });
 
-  it('tell the time left from the pace so far', () => {
-    expect(paceOf(progress('running', 250))).toEqual({ share: 0.25, perSecond: 2500, leftMs: 300 });
-    expect(paceOf(progress('queued', 0))).toEqual({ share: 0, perSecond: null, leftMs: null });
+  it('keep the result that an event does not repeat, and ask for one they do not know', () => {
+    const { result: _result, ...event } = progress(4, { evaluated: 200 });
+    const known = progress(3, { result: RESULT });
+    expect(newerProgress(known, event)).toEqual({ ...event, result: RESULT });
+    expect(newerProgress(undefined, event)).toBeUndefined();
+    expect(newerProgress({ ...known, viewId: 'another' }, event)).toBeUndefined();
+  });
+
+  it('tell the time left from the pace so far, or of late', () => {
+    const quarter = progress(2, { evaluated: 250 });
+    expect(paceOf(quarter)).toEqual({ share: 0.25, perSecond: 2500, leftMs: 300 });
+    expect(paceOf(quarter, 5000)).toEqual({ share: 0.25, perSecond: 5000, leftMs: 150 });
+    expect(paceOf(quarter, 0).leftMs).toBeNull();
+    expect(paceOf(progress(1, { evaluated: 0 }))).toEqual({ share: 0, perSecond: null, leftMs: null });
+  });
+
+  it('know the pace of late from a second of work on, and begin anew when a worker was lost', () => {
+    const pace = new PaceWindow();
+    const told = [0, 900, 2000, 9000, 10_000].map((elapsedMs) =>
+      pace.add({ elapsedMs, evaluated: elapsedMs < 9000 ? elapsedMs : 20_000 + elapsedMs }),
+    );
+    expect(told).toEqual([null, null, 1000, (27_000 / 7000) * 1000, 3500]);
+    expect(pace.add({ elapsedMs: 10_100, evaluated: 500 })).toBeNull();
   });
 });
 

@@ -1,4 +1,4 @@
-import type { ViewProgress } from '#shared/contract/records.ts';
+import type { ViewEvent } from '#shared/contract/records.ts';
 import { whenIdle } from '#client/src/lib/when-idle.ts';
 import { isUnderWay } from './view-progress.ts';
 
@@ -6,7 +6,7 @@ import { isUnderWay } from './view-progress.ts';
 const LONGEST_WAIT_MS = 2000;
 
 export interface PartQueue {
-  readonly add: (progress: ViewProgress) => void;
+  readonly add: (progress: ViewEvent) => void;
   readonly close: () => void;
 }
 
@@ -14,8 +14,8 @@ export interface PartQueue {
  * Parts of a run may come faster than a busy machine draws them, and each one taken would start the drawing of the last
  * over. A part waits until the page is idle and gives way to the next of its view; an end is taken at once.
  */
-export function createPartQueue(take: (progress: ViewProgress) => void): PartQueue {
-  const waiting = new Map<string, ViewProgress>();
+export function createPartQueue(take: (progress: ViewEvent) => void): PartQueue {
+  const waiting = new Map<string, ViewEvent>();
   let callOff: (() => void) | null = null;
   const takeAll = () => {
     callOff = null;
@@ -26,7 +26,8 @@ export function createPartQueue(take: (progress: ViewProgress) => void): PartQue
   return {
     add: (progress) => {
       if (isUnderWay(progress.state)) {
-        waiting.set(progress.viewId, progress);
+        // One that comes without its result leaves that of the one it takes the place of.
+        waiting.set(progress.viewId, { ...waiting.get(progress.viewId), ...progress });
         callOff ??= whenIdle(takeAll, LONGEST_WAIT_MS);
         return;
       }

@@ -1,13 +1,22 @@
 import { queryOptions, useMutation, useQuery, useQueryClient, type QueryClient } from '@tanstack/react-query';
 import { useEffect } from 'react';
 import { RUN_EVENTS_PATH } from '#shared/contract/endpoints.ts';
-import { viewProgressSchema, type Run, type ViewProgress } from '#shared/contract/records.ts';
+import {
+  queuePositionSchema,
+  viewEventSchema,
+  type QueuePosition,
+  type Run,
+  type ViewEvent,
+  type ViewProgress,
+} from '#shared/contract/records.ts';
 import type { View } from '#shared/sweep/problem.ts';
 import { call } from '#client/src/lib/api.ts';
+import { messageOf } from '#client/src/lib/api-error.ts';
 import { apiUrl } from '#client/src/lib/paths.ts';
 import { queryKeys } from '#client/src/lib/query-keys.ts';
+import { notify } from '#client/src/ui/toast.tsx';
 import { createPartQueue } from './part-queue.ts';
-import { isUnderWay, newerProgress } from './view-progress.ts';
+import { isUnderWay, newerProgress, PaceWindow } from './view-progress.ts';
 
 export const runQuery = (runId: string) =>
   queryOptions({
@@ -33,7 +42,7 @@ export function useView(run: Run | undefined, view: View | null) {
     queryKey: run === undefined || view === null ? ['view', 'none'] : viewKey(run.id, view),
     queryFn: async ({ signal, queryKey }) => {
       const answer = await fetchView(run!, view!, signal);
-      return newerProgress(client.getQueryData<ViewProgress>(queryKey), answer);
+      return newerProgress(client.getQueryData<ViewProgress>(queryKey), answer) ?? answer;
     },
     enabled: run !== undefined && view !== null,
     staleTime: Infinity,
@@ -43,11 +52,31 @@ export function useView(run: Run | undefined, view: View | null) {
   });
 }
 
-function takeProgress(client: QueryClient, runId: string, progress: ViewProgress): void {
-  const key = viewKey(runId, progress.view);
-  client.setQueryData<ViewProgress>(key, (known) => newerProgress(known, progress));
+function takeProgress(client: QueryClient, runId: string, progress: ViewEvent): void {
+  const queryKey = viewKey(runId, progress.view);
+  const next = newerProgress(client.getQueryData<ViewProgress>(queryKey), progress);
+  if (next === undefined) void client.invalidateQueries({ queryKey, exact: true });
+  else client.setQueryData<ViewProgress>(queryKey, next);
   if (!isUnderWay(progress.state))
     void client.invalidateQueries({ queryKey: queryKeys.run(runId), exact: true });
+}
+
+/** What the stream tells of a view besides its progress. */
+export interface LiveView {
+  readonly position: QueuePosition | null;
+  /** Sections a second of late. */
+  readonly perSecond: number | null;
+}
+const NOT_LIVE: LiveView = { position: null, perSecond: null };
+
+export function useLiveView(runId: string, viewId: string): LiveView {
+  const live = useQuery<LiveView>({
+    queryKey: queryKeys.liveView(runId, viewId),
+    queryFn: () => NOT_LIVE,
+    initialData: NOT_LIVE,
+    enabled: false,
+  });
+  return live.data;
 }
 
 /** Follows a run while something of it is under way; the browser reconnects and is told what it missed. */
@@ -57,15 +86,43 @@ export function useRunEvents(runId: string, isLive: boolean): void {
     if (!isLive) return;
     const source = new EventSource(apiUrl(RUN_EVENTS_PATH, { id: runId }));
     const parts = createPartQueue((progress) => takeProgress(client, runId, progress));
+    const paces = new Map<string, PaceWindow>();
+    const tell = (viewId: string, live: Partial<LiveView>) =>
+      client.setQueryData<LiveView>(queryKeys.liveView(runId, viewId), (known) => ({
+        ...(known ?? NOT_LIVE),
+        ...live,
+      }));
     source.addEventListener('progress', (event) => {
-      const parsed = viewProgressSchema.safeParse(JSON.parse(String(event.data)));
-      if (parsed.success) parts.add(parsed.data);
+      const parsed = viewEventSchema.safeParse(JSON.parse(String(event.data)));
+      if (!parsed.success) return;
+      const { viewId } = parsed.data;
+      const pace = paces.get(viewId) ?? new PaceWindow();
+      paces.set(viewId, pace);
+      tell(viewId, { perSecond: pace.add(parsed.data), position: null });
+      parts.add(parsed.data);
+    });
+    source.addEventListener('queue', (event) => {
+      const parsed = queuePositionSchema.safeParse(JSON.parse(String(event.data)));
+      if (parsed.success) tell(parsed.data.viewId, { position: parsed.data });
     });
     return () => {
       source.close();
       parts.close();
     };
   }, [client, runId, isLive]);
+}
+
+/** Takes a stopped run up again; its page follows it from then on. */
+export function useResumeRun(runId: string) {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: () => call('resumeRun', { params: { id: runId }, body: {} }),
+    onSuccess: (run) => {
+      client.setQueryData(queryKeys.run(runId), run);
+      return client.invalidateQueries({ queryKey: queryKeys.run(runId) });
+    },
+    onError: (error) => notify.failed(messageOf(error)),
+  });
 }
 
 export function useCancelRun(runId: string) {

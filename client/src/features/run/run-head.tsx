@@ -1,9 +1,11 @@
 import type { ReactNode } from 'react';
-import type { Run, ViewProgress } from '#shared/contract/records.ts';
+import type { QueuePosition, Run, ViewProgress } from '#shared/contract/records.ts';
+import { ENGINE_VERSION } from '#shared/engine/version.ts';
 import { formatDuration, formatNumber, formatWhole } from '#shared/print/format-quantity.ts';
 import { runStateLabel } from '#client/src/lib/state-labels.ts';
 import { Button } from '#client/src/ui/button.tsx';
 import { StateTag } from '#client/src/ui/state-tag.tsx';
+import { useLiveView, useResumeRun, type LiveView } from './run-api.ts';
 import { isUnderWay, paceOf } from './view-progress.ts';
 
 interface RunHeadProps {
@@ -15,10 +17,20 @@ interface RunHeadProps {
   readonly actions: ReactNode;
 }
 
-function progressWords(progress: ViewProgress): string {
-  const { perSecond, leftMs } = paceOf(progress);
+function queueWords(position: QueuePosition | null): string {
+  if (position === null) return 'Waiting for a free worker';
+  if (position.workers === 0) return 'Waiting: no worker is running';
+  if (position.ahead === 0) return 'Waiting for a free worker, next in the queue';
+  return `Waiting, ${formatWhole(position.ahead)} ahead in the queue`;
+}
+
+function progressWords(progress: ViewProgress, live: LiveView): string {
+  const { perSecond, leftMs } = paceOf(progress, live.perSecond);
   const done = `${formatWhole(progress.evaluated)} of ${formatWhole(progress.sectionCount)}`;
-  if (progress.state === 'queued') return 'Waiting for a free thread';
+  if (progress.state === 'queued')
+    return progress.evaluated === 0
+      ? queueWords(live.position)
+      : `${done} evaluated. ${queueWords(live.position)}`;
   if (perSecond === null || leftMs === null) return `${done} evaluated`;
   return `${done} evaluated, ${formatNumber(perSecond / 1e6, 2)} million a second, ${formatDuration(leftMs)} left`;
 }
@@ -30,12 +42,18 @@ function stateWords(progress: ViewProgress): string | null {
   return null;
 }
 
-/** What is run, how far it is, and the way to stop it. The rule below fills with the share that is done. */
+/** Stopped half-way by the engine that is still in use: what it has done is kept, and the rest can follow. */
+const isResumable = ({ state, engineVersion }: Run): boolean =>
+  (state === 'cancelled' || state === 'failed') && engineVersion === ENGINE_VERSION;
+
+/** What is run, how far it is, and the ways to stop it and to take it up again. The rule below fills with the share that is done. */
 export function RunHead({ run, progress, mayStop, isStopping, onStop, actions }: RunHeadProps) {
+  const live = useLiveView(run.id, progress?.viewId ?? '');
+  const resume = useResumeRun(run.id);
   const state = progress?.state ?? run.state;
   const isLive = isUnderWay(state);
   const share = progress === null || !isLive ? 0 : paceOf(progress).share;
-  const words = progress === null ? null : isLive ? progressWords(progress) : stateWords(progress);
+  const words = progress === null ? null : isLive ? progressWords(progress, live) : stateWords(progress);
   return (
     <header className="relative border-b border-rule">
       <div className="flex min-h-13 flex-wrap items-center gap-x-5 gap-y-1 px-4 py-2 sm:px-5">
@@ -54,6 +72,11 @@ export function RunHead({ run, progress, mayStop, isStopping, onStop, actions }:
           {isLive && mayStop && (
             <Button onClick={onStop} isBusy={isStopping}>
               Cancel
+            </Button>
+          )}
+          {isResumable(run) && mayStop && (
+            <Button onClick={() => resume.mutate()} isBusy={resume.isPending}>
+              Resume
             </Button>
           )}
           {actions}

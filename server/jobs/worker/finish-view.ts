@@ -1,0 +1,32 @@
+import { eq } from 'drizzle-orm';
+import type { ViewResult } from '#shared/sweep/result.ts';
+import type { Database } from '../../db/client.ts';
+import { viewShards } from '../../db/schema/view-shards.ts';
+import { changeView, STOP_COUNTING } from '../change-view.ts';
+import { dequeueShards } from '../compute-jobs.ts';
+import { describeResult } from '../describe-result.ts';
+
+/** Writes the result of the whole space, once; its shards have served and go. */
+export async function finishView(
+  db: Database,
+  { runId, viewId }: { readonly runId: string; readonly viewId: string },
+  result: ViewResult,
+): Promise<void> {
+  await db.transaction(async (tx) => {
+    const finished = await changeView(
+      tx,
+      { runId, viewId, from: ['queued', 'running'] },
+      {
+        ...describeResult(result),
+        ...STOP_COUNTING,
+        state: 'finished',
+        hash: result.hash,
+        message: null,
+        finishedAt: new Date(),
+      },
+    );
+    if (finished === undefined) return;
+    await dequeueShards(tx, viewId);
+    await tx.delete(viewShards).where(eq(viewShards.viewId, viewId));
+  });
+}
