@@ -1,9 +1,15 @@
 import { z } from 'zod';
+import { findBar } from '../engine/bars.ts';
+import { CONCRETE_LAW_IDS, STEEL_LAW_IDS, type CurveChoices } from '../engine/curve-choices.ts';
+import { ruleSetOf } from '../engine/rules/rule-set-of.ts';
+import { seismicSystemsOf } from '../engine/seismic.ts';
 import {
   BAR_STANDARDS,
   BEND_ALLOWANCES,
   DISPLACED_CONCRETE,
+  DUCTILITY_MEASURES,
   RULE_SET_IDS,
+  SEISMIC_SYSTEMS,
   YIELD_CURVATURE_AT,
   type DesignBasis,
   type Rates,
@@ -41,6 +47,21 @@ export const priceBookSchema = ratesSchema.extend({
 });
 export type PriceBook = z.infer<typeof priceBookSchema>;
 
+/** Laws of the full curve; limits catch slips, what is sensible is the engineer's. */
+const curveChoicesSchema = z.object({
+  concreteLaw: z.enum(CONCRETE_LAW_IDS, { error: 'Choose a law of the concrete' }),
+  steelLaw: z.enum(STEEL_LAW_IDS, { error: 'Choose a law of the steel' }),
+  peakShare: bounded('Peak stress over f′c', 0.3, 1.2, '').optional(),
+  peakStrain: bounded('Strain at peak', 0.0005, 0.02, '').optional(),
+  crushingStrain: bounded('Crushing strain', 0.001, 0.1, '').optional(),
+  ruptureStrain: bounded('Strain at which bars break', 0.005, 0.5, '').optional(),
+  strengthRatio: bounded('fu over fy', 1, 2, '').optional(),
+  hardeningStrain: bounded('Strain at which hardening begins', 0.001, 0.1, '').optional(),
+  hoopYieldMPa: fyMPaSchema.optional(),
+  hoopRuptureStrain: bounded('Strain at which hoops break', 0.005, 0.5, '').optional(),
+  hasTensionBeforeCracking: z.boolean().optional(),
+}) satisfies z.ZodType<CurveChoices>;
+
 /** What decides numbers, without the rates: those live in the price book and are joined when a run is frozen. */
 export const engineBasisSchema = z.object({
   ruleSet: z.enum(RULE_SET_IDS, { error: 'Choose a design code' }),
@@ -52,6 +73,13 @@ export const engineBasisSchema = z.object({
   yieldCurvatureAt: z.enum(YIELD_CURVATURE_AT),
   fytMPa: fyMPaSchema,
   slabMm: bounded('Slab thickness', 0, 2000, 'mm'),
+  seismicSystem: z.enum(SEISMIC_SYSTEMS, { error: 'Choose a seismic system, or none' }).optional(),
+  skinBar: nonEmptyText('Skin bar', 8).nullable().optional(),
+  stirrupStepMm: bounded('Step of stirrup spacings', 1, 300, 'mm').optional(),
+  leastStirrupSpacingMm: bounded('Closest stirrups', 25, 600, 'mm').optional(),
+  barOversize: bounded('Outside of a bar over its name', 1, 1.3, '').optional(),
+  ductilityMeasure: z.enum(DUCTILITY_MEASURES).optional(),
+  curve: curveChoicesSchema.optional(),
 }) satisfies z.ZodType<Omit<DesignBasis, 'rates'>>;
 
 /** A project's design basis: the engine's part, units, and the values a new sweep starts from. */
@@ -61,6 +89,24 @@ export const designBasisSchema = engineBasisSchema.extend({
   coverMm: coverMmSchema,
 });
 export type ProjectDesignBasis = z.infer<typeof designBasisSchema>;
+
+/** A design basis as it is saved: its parts must go together. */
+export const savedDesignBasisSchema = designBasisSchema.superRefine((basis, ctx) => {
+  const { seismicSystem = 'none', skinBar, barStandard } = basis;
+  const rules = ruleSetOf(basis);
+  if (!seismicSystemsOf(rules).includes(seismicSystem))
+    ctx.addIssue({
+      code: 'custom',
+      path: ['seismicSystem'],
+      message: `${rules.title} knows no such seismic system`,
+    });
+  if (skinBar && !findBar(barStandard, skinBar))
+    ctx.addIssue({
+      code: 'custom',
+      path: ['skinBar'],
+      message: `The bar standard lists no bar ${skinBar}`,
+    });
+});
 
 export const fullBasisSchema = engineBasisSchema.extend({
   rates: ratesSchema.nullable(),

@@ -41,6 +41,7 @@ export const stirrupSchema = z.object({
   bar: barDesignationSchema,
   legs: wholeCount('Stirrup legs', 2, 12),
   spacingMm: bounded('Stirrup spacing', 25, 2000, 'mm'),
+  isDesigned: z.boolean().optional(),
 }) satisfies z.ZodType<Stirrup>;
 
 const reinforcementSchema = z.discriminatedUnion('kind', [
