@@ -1,0 +1,62 @@
+import fc from 'fast-check';
+import { describe, expect, it } from 'vitest';
+import { MEASURE_IDS } from '#shared/engine/measures.ts';
+import { boundedFront } from '#shared/sweep/bounded-search.ts';
+import { prepareSweep } from '#shared/sweep/prepared-sweep.ts';
+import { finishResult } from '#shared/sweep/finish.ts';
+import { sweepRange } from '#shared/sweep/sweep-range.ts';
+import { OFFICE_PROBLEM, OFFICE_SIZE } from './office-problem.ts';
+import { randomProblem } from './random-problems.ts';
+
+const views = fc
+  .tuple(fc.constantFrom(...MEASURE_IDS), fc.constantFrom(...MEASURE_IDS))
+  .filter(([x, y]) => x !== y)
+  .map(([x, y]) => ({ x, y }));
+
+/** Random problems ask so much that few have a front: half of them here ask little. */
+const problems = fc.oneof(
+  randomProblem,
+  randomProblem.map((problem) => ({
+    ...problem,
+    demand: {
+      ...problem.demand,
+      muNmm: problem.demand.muNmm && problem.demand.muNmm / 5,
+      ductilityTarget: problem.demand.ductilityTarget && problem.demand.ductilityTarget / 3,
+      depthCapMm: null,
+      vuN: null,
+      spanMm: null,
+    },
+    rules: { ...problem.rules, columnWidthMm: null, maxDepthToWidth: null, minCompressionShare: null },
+  })),
+);
+
+describe('branch and bound', () => {
+  it('finds the front that evaluating every section finds, ties and all, in 500 random spaces', () => {
+    let withFront = 0;
+    fc.assert(
+      fc.property(problems, views, (problem, view) => {
+        const prepared = prepareSweep(problem, view);
+        const { front } = finishResult(problem, view, sweepRange(prepared, 0, prepared.space.size));
+        const bounded = boundedFront(problem, view);
+        if (front.length > 0) withFront++;
+        expect(bounded.front).toEqual(front);
+        expect(bounded.evaluated + bounded.provenUnnecessary).toBe(prepared.space.size);
+      }),
+      { numRuns: 500, seed: 500 },
+    );
+    expect(withFront).toBeGreaterThan(100);
+  });
+
+  it.each([
+    ['steelKgPerM', 'curvatureDuctility'],
+    ['costPerM', 'depthMm'],
+    ['co2eKgPerM', 'designStrengthNmm'],
+  ] as const)('finds the front of the office sweep in %s and %s', (x, y) => {
+    const view = { x, y };
+    const prepared = prepareSweep(OFFICE_PROBLEM, view);
+    const { front } = finishResult(OFFICE_PROBLEM, view, sweepRange(prepared, 0, OFFICE_SIZE));
+    const bounded = boundedFront(OFFICE_PROBLEM, view);
+    expect(bounded.front).toEqual(front);
+    expect(bounded.evaluated).toBeLessThan(OFFICE_SIZE / 2);
+  });
+});
