@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import type { Evaluation } from '../engine/evaluation.ts';
 import type { ViewResult } from '../sweep/result.ts';
-import { designBasisSchema, fullBasisSchema, priceBookSchema } from './design-basis.ts';
+import { designBasisSchema, fullBasisSchema, priceBookSchema, savedDesignBasisSchema } from './design-basis.ts';
 import {
   bounded,
   depthMmSchema,
@@ -42,7 +42,7 @@ export const signInSchema = z.object({
 export const projectInputSchema = z.object({
   name: nonEmptyText('Project name', 120),
   number: nonEmptyText('Project number', 40),
-  designBasis: designBasisSchema,
+  designBasis: savedDesignBasisSchema,
 });
 export const projectSchema = projectInputSchema.extend({
   id: idSchema,
