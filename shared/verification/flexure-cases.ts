@@ -132,13 +132,4 @@ export const FLEXURE_CASES: Readonly<Record<string, ComputeCase>> = {
       phi_u_per_mm: ductility!.curvatureUltimatePerMm,
     };
   },
-  'ACI-T01': ({ bf, d, As, fc, fy }) => {
-    // The block stays in the flange, so the section acts as a rectangle of the flange's width.
-    const { a, c, eps_t, phiMn } = us({ b: bf, d, As, fc, fy });
-    return { T: (As * fy) / 1000, Ac: a * bf, a, c, eps_t, z: d - a / 2, phiMn, phiMn_kip_in: kipIn(phiMn) };
-  },
-  'ACI-T03': ({ b_eff, d, h, fc, fy, Mu }) => {
-    const T = (Mu * 12) / (0.9 * 19.5);
-    return { T, a: us({ b: b_eff, h, d, As: (T * 1000) / fy, fc, fy }).a };
-  },
 };

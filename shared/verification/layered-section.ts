@@ -3,6 +3,8 @@ import type { Evaluation } from '#shared/engine/evaluation.ts';
 import type {
   DesignBasis,
   Demand,
+  Face,
+  Flange,
   Layer,
   RuleSetId,
   SectionInput,
@@ -55,12 +57,23 @@ interface LayeredSection {
   readonly As2?: number;
   readonly fc: number;
   readonly fy: number;
+  /** Flange in all and its thickness; none unless both are given. */
+  readonly bf?: number;
+  readonly hf?: number;
+  /** Face the flange lies at; the compression face unless set. */
+  readonly slabAt?: Face;
 }
 
 function layersOf({ d, As, d2, As2 }: LayeredSection, length: number, area: number): Layer[] {
   const tension: Layer = { depthMm: d * length, areaMm2: As * area, face: 'tension' };
   if (d2 === undefined || As2 === undefined) return [tension];
   return [{ depthMm: d2 * length, areaMm2: As2 * area, face: 'compression' }, tension];
+}
+
+function flangeOf({ bf, hf, slabAt = 'compression' }: LayeredSection, length: number): Flange | null {
+  if (bf === undefined || hf === undefined) return null;
+  const width = { kind: 'given', widthMm: bf * length } as const;
+  return { shape: 't', thicknessMm: hf * length, face: slabAt, width };
 }
 
 function sectionOf(
@@ -75,6 +88,7 @@ function sectionOf(
     coverMm: 40,
     stirrup: null,
     reinforcement: { kind: 'layers', layers: layersOf(printed, length, area) },
+    flange: flangeOf(printed, length),
   };
 }
 

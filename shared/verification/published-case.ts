@@ -15,6 +15,8 @@ export interface CaseInputs {
   readonly M: number;
   readonly Mu: number;
   readonly bf: number;
+  readonly bw: number;
+  readonly hf: number;
   readonly b_eff: number;
   readonly d_support: number;
   readonly d_midspan: number;
