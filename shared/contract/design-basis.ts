@@ -14,6 +14,7 @@ import {
   type DesignBasis,
   type Rates,
 } from '../engine/section.ts';
+import { nationalValuesSchema } from './national-values.ts';
 import { bounded, coverMmSchema, fcMPaSchema, fyMPaSchema, nonEmptyText } from './numbers.ts';
 
 export const UNIT_SYSTEMS = ['us', 'si'] as const;
@@ -80,6 +81,7 @@ export const engineBasisSchema = z.object({
   barOversize: bounded('Outside of a bar over its name', 1, 1.3, '').optional(),
   ductilityMeasure: z.enum(DUCTILITY_MEASURES).optional(),
   curve: curveChoicesSchema.optional(),
+  nationalValues: nationalValuesSchema.nullable().optional(),
 }) satisfies z.ZodType<Omit<DesignBasis, 'rates'>>;
 
 /** A project's design basis: the engine's part, units, and the values a new sweep starts from. */

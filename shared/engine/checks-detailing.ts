@@ -1,6 +1,7 @@
 import { getBar, type Bar } from './bars.ts';
 import { check, type CheckContext } from './check-result.ts';
 import type { CheckResult } from './evaluation.ts';
+import { compressedOverhang, flangeOf } from './flange.ts';
 import { isWithinLength } from './limits.ts';
 import { seismicChecks } from './checks-seismic.ts';
 import {
@@ -12,6 +13,7 @@ import {
   stirrupSpacingLimitMm,
 } from './shear.ts';
 import { allowedSkinSpacingMm } from './skin-steel.ts';
+import { leastEffectiveDepthMm } from './span-to-depth.ts';
 import { tieLimitMm, type SpacingLimit } from './stirrup-design.ts';
 
 /** Crack control, ties, shear and least depth, in the order of CHECK_IDS; those that do not apply are null. */
@@ -50,7 +52,7 @@ function crackControl(context: CheckContext): CheckResult | null {
     ratio: limitMm > 0 ? spacingMm / limitMm : null,
     kind: 'length',
     clause: ruleSet.clauses.crackControl,
-    reason: 'centre spacing of the bars nearest the tension face, fs = 2/3 fy',
+    reason: `centre spacing of the bars nearest the tension face, ${ruleSet.texts.serviceStress}`,
   });
 }
 
@@ -125,11 +127,7 @@ function shear(context: CheckContext): CheckResult | null {
     ratio: state.vuN / capacity,
     kind: 'force',
     clause: context.ruleSet.clauses.shear,
-    reason: withNeed(
-      context,
-      ['shear-strength'],
-      'φVn ≥ Vu with the stirrups there are, Vs counted to the section limit',
-    ),
+    reason: withNeed(context, ['shear-strength'], context.ruleSet.texts.shear),
   });
 }
 
@@ -156,11 +154,15 @@ function stirrupSpacing(context: CheckContext): CheckResult | null {
   const { spacingMm } = limits.constants;
   const hasNumbers = spacingMm < Infinity && limitMm > 0 && limitMm < Infinity;
   const reason = {
-    none: 'Vu asks for no stirrups',
+    none: `${context.ruleSet.symbols.shear} asks for no stirrups`,
     missing: context.section.stirrup
       ? 'stirrup legs stand too far apart across the width'
-      : 'Vu asks for stirrups',
-    numbers: withNeed(context, ['along', 'least-area'], 'stirrup spacing along the beam, and Av,min'),
+      : context.ruleSet.texts.stirrupsMissing,
+    numbers: withNeed(
+      context,
+      ['along', 'least-area'],
+      `stirrup spacing along the beam, and ${context.ruleSet.symbols.stirrupArea},min`,
+    ),
   }[limitMm === Infinity ? 'none' : limitMm === 0 ? 'missing' : 'numbers'];
   return check({
     id: 'stirrup-spacing',
@@ -174,20 +176,49 @@ function stirrupSpacing(context: CheckContext): CheckResult | null {
   });
 }
 
-function leastDepth({ section, demand, ruleSet }: CheckContext): CheckResult | null {
+function leastDepth(context: CheckContext): CheckResult | null {
+  const { section, demand, ruleSet } = context;
   const { spanMm, support } = demand;
   if (!spanMm || !support) return null;
-  const leastMm = ruleSet.leastDepthMm(spanMm, support, section.fyMPa);
+  const toDepth = ruleSet.largestSpanToDepth === null ? null : spanToDepthOf(context);
+  if (ruleSet.largestSpanToDepth !== null && toDepth === null) return null;
+  const leastMm = toDepth?.leastMm ?? ruleSet.leastDepthMm(spanMm, support, section.fyMPa);
+  const depthMm = toDepth?.dMm ?? section.depthMm;
   return check({
     id: 'least-depth',
-    passes: isWithinLength(leastMm, section.depthMm),
+    passes: isWithinLength(leastMm, depthMm),
     demand: leastMm,
-    capacity: section.depthMm,
-    ratio: leastMm / section.depthMm,
+    capacity: depthMm,
+    ratio: leastMm / depthMm,
     kind: 'length',
     clause: ruleSet.clauses.leastDepth,
-    reason: 'least depth where deflections are not computed, nothing attached that they could damage',
+    reason: ruleSet.texts.leastDepth,
   });
+}
+
+/** Least effective depth by span over d, with what it follows from; null where it is not asked, or no bars are placed. */
+export function spanToDepthOf({
+  section,
+  demand,
+  ruleSet,
+  placed,
+}: Pick<CheckContext, 'section' | 'demand' | 'ruleSet' | 'placed'>) {
+  const { spanMm, support } = demand;
+  const { largestSpanToDepth } = ruleSet;
+  if (!spanMm || !support || !placed.layout || largestSpanToDepth === null) return null;
+  const { dMm, asMm2, asPrimeMm2 } = placed.layout;
+  const { overhangMm } = compressedOverhang(section.widthMm, flangeOf(section, ruleSet));
+  const inputs = {
+    spanMm,
+    support,
+    fckMPa: section.fcMPa,
+    fykMPa: section.fyMPa,
+    webMm: section.widthMm,
+    faceWidthMm: section.widthMm + overhangMm,
+    asMm2,
+    asPrimeMm2,
+  };
+  return { inputs, dMm, leastMm: leastEffectiveDepthMm(largestSpanToDepth, inputs, dMm) };
 }
 
 function axisDepth({ flexure, placed, section, ruleSet }: CheckContext): CheckResult | null {

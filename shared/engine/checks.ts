@@ -80,7 +80,7 @@ function strength({ flexure, demand, ruleSet }: CheckContext): CheckResult | nul
     ratio: demand.muNmm / flexure.designMomentNmm,
     kind: 'moment',
     clause: ruleSet.clauses.strength,
-    reason: 'φMn ≥ Mu',
+    reason: `${ruleSet.symbols.designMoment} ≥ ${ruleSet.symbols.moment}`,
   });
 }
 

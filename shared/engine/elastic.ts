@@ -127,10 +127,13 @@ export function ductilityOf(
     'deduct-above-axis': 'concrete displaced by bars above the neutral axis deducted',
     ignore: 'displaced concrete ignored',
   }[basis.displacedConcrete];
+  const { epsilonCu, axis, fyDesign, blockStress } = rules.symbols;
+  const designed =
+    fyDesign === rules.symbols.fy ? '' : `design values ${blockStress} and ${fyDesign} in both curvatures; `;
   return {
     curvatureYieldPerMm,
     curvatureUltimatePerMm,
     curvatureDuctility: curvatureUltimatePerMm / curvatureYieldPerMm,
-    definition: `μφ = φu/φy; φy = εy/(d − kd) on the cracked elastic section at ${where}; φu = εcu/c with εcu = ${flexure.epsilonCu}; ${displaced}`,
+    definition: `μφ = φu/φy; φy = εy/(d − kd) on the cracked elastic section at ${where}; φu = ${epsilonCu}/${axis} with ${epsilonCu} = ${Number(flexure.epsilonCu.toPrecision(4))}; ${designed}${displaced}`,
   };
 }

@@ -1,12 +1,13 @@
 /** What a caller hands to the engine: one section, the design basis it is judged by, the demand on it, the user's rules. */
 
 import type { CurveChoices } from './curve-choices.ts';
+import type { NationalValues } from './rules/national-values.ts';
 
 export const FACES = ['tension', 'compression'] as const;
 /** The face a bar group belongs to. Sagging is positive, so the tension face is the soffit. */
 export type Face = (typeof FACES)[number];
 
-export const RULE_SET_IDS = ['aci318-19', 'aci318m-19', 'aci318-14', 'aci318m-14'] as const;
+export const RULE_SET_IDS = ['aci318-19', 'aci318m-19', 'aci318-14', 'aci318m-14', 'en1992'] as const;
 /** Design code and edition; the `m` sets are the metric editions with their own rounded coefficients. */
 export type RuleSetId = (typeof RULE_SET_IDS)[number];
 
@@ -153,6 +154,8 @@ export interface DesignBasis {
   /** Outside of a bar over its nominal diameter where bars are fitted, 1.10 to 1.18 for deformed bars; 1 unless set. */
   readonly barOversize?: number | undefined;
   readonly ductilityMeasure?: DuctilityMeasure | undefined;
+  /** Values a code leaves to the country; recommended ones where left out. */
+  readonly nationalValues?: NationalValues | null | undefined;
   /** Laws of the full curve; those of the design code unless set. */
   readonly curve?: CurveChoices | undefined;
 }

@@ -1,7 +1,8 @@
-import { barCoverMm, stirrupBarOf } from './checks-detailing.ts';
+import { barCoverMm, spanToDepthOf, stirrupBarOf } from './checks-detailing.ts';
 import type { WorkingStep } from './evaluation.ts';
+import { spanToDepthSection } from './span-to-depth.ts';
 import { shearSteps } from './working-shear.ts';
-import { step, type WorkingSource } from './working-step.ts';
+import { step, type Input, type WorkingSource } from './working-step.ts';
 
 /** Limits of crack control and least depth, and shear, each where it is asked. */
 export function detailingSteps(source: WorkingSource): WorkingStep[] {
@@ -19,7 +20,7 @@ function crackStep(source: WorkingSource): WorkingStep[] {
       'limits',
       ['s,max', ruleSet.formulas.crackSpacing, value, 'length'],
       [
-        ['fy', section.fyMPa, 'stress'],
+        [ruleSet.symbols.fy, section.fyMPa, 'stress'],
         ['cc', coverMm, 'length'],
       ],
       ruleSet.clauses.crackControl,
@@ -27,20 +28,48 @@ function crackStep(source: WorkingSource): WorkingStep[] {
   ];
 }
 
-function leastDepthStep({ section, demand, ruleSet }: WorkingSource): WorkingStep[] {
+function leastDepthStep(source: WorkingSource): WorkingStep[] {
+  const { section, demand, ruleSet } = source;
   const { spanMm, support } = demand;
   if (!spanMm || !support) return [];
-  const value = ruleSet.leastDepthMm(spanMm, support, section.fyMPa);
+  const span: Input = ['span', spanMm, 'length'];
+  const clause = ruleSet.clauses.leastDepth;
+  const toDepth = spanToDepthOf(source);
+  if (toDepth === null) {
+    const value = ruleSet.leastDepthMm(spanMm, support, section.fyMPa);
+    const formula = ruleSet.formulas.leastDepth(support);
+    return [
+      step(
+        'least-depth',
+        'limits',
+        ['h,min', formula, value, 'length'],
+        [span, [ruleSet.symbols.fy, section.fyMPa, 'stress']],
+        clause,
+      ),
+    ];
+  }
+  const of = spanToDepthSection(toDepth.inputs, toDepth.dMm);
+  const ratio: Input = ['l/d', spanMm / toDepth.leastMm, 'ratio'];
   return [
+    step(
+      'span-to-depth',
+      'limits',
+      [ratio[0], ruleSet.formulas.spanToDepth(of), ratio[1], 'ratio'],
+      [
+        ['ρ', of.rho, 'ratio'],
+        ['ρ′', of.rhoPrime, 'ratio'],
+        [ruleSet.symbols.fc, section.fcMPa, 'stress'],
+        [ruleSet.symbols.fy, section.fyMPa, 'stress'],
+        span,
+      ],
+      clause,
+    ),
     step(
       'least-depth',
       'limits',
-      ['h,min', ruleSet.formulas.leastDepth(support), value, 'length'],
-      [
-        ['span', spanMm, 'length'],
-        ['fy', section.fyMPa, 'stress'],
-      ],
-      ruleSet.clauses.leastDepth,
+      ['d,min', ruleSet.formulas.leastDepth(support), toDepth.leastMm, 'length'],
+      [span, ratio],
+      clause,
     ),
   ];
 }

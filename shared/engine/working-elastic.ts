@@ -17,6 +17,7 @@ export function elasticSteps(source: WorkingSource): WorkingStep[] {
   const { section, basis, layout, elastic, ruleSet } = source;
   const above = basis.displacedConcrete === 'ignore' ? 'n' : '(n − 1)';
   const n: Input = ['n', elastic.modularRatio, 'ratio'];
+  const { symbols } = ruleSet;
   const kd: Input = ['kd', elastic.crackedAxisMm, 'length'];
   const added = grossFlangeTerms(source);
   const width = compressedWidth(source, elastic.crackedAxisMm);
@@ -52,16 +53,16 @@ export function elasticSteps(source: WorkingSource): WorkingStep[] {
     step(
       'fr',
       'elastic',
-      ['fr', ruleSet.formulas.ruptureModulus, elastic.ruptureModulusMPa, 'stress'],
-      [['f′c', section.fcMPa, 'stress']],
+      [symbols.ruptureModulus, ruleSet.formulas.ruptureModulus, elastic.ruptureModulusMPa, 'stress'],
+      [[symbols.fc, section.fcMPa, 'stress']],
       ruleSet.clauses.ruptureModulus,
     ),
     step(
       'mcr',
       'elastic',
-      ['Mcr', 'fr Iut/yt, yt = h − y', elastic.crackingMomentNmm, 'moment'],
+      ['Mcr', `${symbols.ruptureModulus} Iut/yt, yt = h − y`, elastic.crackingMomentNmm, 'moment'],
       [
-        ['fr', elastic.ruptureModulusMPa, 'stress'],
+        [symbols.ruptureModulus, elastic.ruptureModulusMPa, 'stress'],
         ['Iut', elastic.uncrackedInertiaMm4, 'inertia'],
         ['yt', section.depthMm - elastic.uncrackedAxisMm, 'length'],
       ],
@@ -102,7 +103,10 @@ export function ductilitySteps({
   elastic,
   flexure,
   ductility,
+  ruleSet,
 }: WorkingSource): WorkingStep[] {
+  const { symbols } = ruleSet;
+  const ec: Input = [symbols.concreteModulus, elastic.ecMPa, 'stress'];
   const isCentroid = basis.yieldCurvatureAt === 'centroid';
   const depth: Input = isCentroid ? ['d', layout.dMm, 'length'] : ['dt', layout.dtMm, 'length'];
   const phiY: Input = ['φy', ductility.curvatureYieldPerMm, 'curvature'];
@@ -112,35 +116,39 @@ export function ductilitySteps({
       'phi-y',
       'ductility',
       ['φy', `εy/(${depth[0]} − kd)`, phiY[1], 'curvature'],
-      [['εy', section.fyMPa / basis.esMPa, 'strain'], depth, ['kd', elastic.crackedAxisMm, 'length']],
+      [
+        ['εy', ruleSet.designYieldMPa(section.fyMPa) / basis.esMPa, 'strain'],
+        depth,
+        ['kd', elastic.crackedAxisMm, 'length'],
+      ],
       STATICS,
     ),
     step(
       'my',
       'ductility',
-      ['My', 'Ec Icr φy', elastic.yieldMomentNmm, 'moment'],
-      [['Ec', elastic.ecMPa, 'stress'], ['Icr', elastic.crackedInertiaMm4, 'inertia'], phiY],
+      ['My', `${ec[0]} Icr φy`, elastic.yieldMomentNmm, 'moment'],
+      [ec, ['Icr', elastic.crackedInertiaMm4, 'inertia'], phiY],
       STATICS,
     ),
     step(
       'fc-yield',
       'ductility',
-      ['fc/f′c at yield', 'Ec φy kd/f′c', elastic.concreteStressShareAtYield, 'ratio'],
       [
-        ['Ec', elastic.ecMPa, 'stress'],
-        phiY,
-        ['kd', elastic.crackedAxisMm, 'length'],
-        ['f′c', section.fcMPa, 'stress'],
+        `fc/${symbols.fc} at yield`,
+        `${ec[0]} φy kd/${symbols.fc}`,
+        elastic.concreteStressShareAtYield,
+        'ratio',
       ],
+      [ec, phiY, ['kd', elastic.crackedAxisMm, 'length'], [symbols.fc, section.fcMPa, 'stress']],
       STATICS,
     ),
     step(
       'phi-u',
       'ductility',
-      ['φu', 'εcu/c', phiU[1], 'curvature'],
+      ['φu', `${symbols.epsilonCu}/${symbols.axis}`, phiU[1], 'curvature'],
       [
-        ['εcu', flexure.epsilonCu, 'strain'],
-        ['c', flexure.neutralAxisMm, 'length'],
+        [symbols.epsilonCu, flexure.epsilonCu, 'strain'],
+        [symbols.axis, flexure.neutralAxisMm, 'length'],
       ],
       STATICS,
     ),

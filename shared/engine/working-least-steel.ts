@@ -16,18 +16,26 @@ export function leastSteelSteps(source: WorkingSource): WorkingStep[] {
   const { leastMm2, waivedAtMm2, widthMm } = leastSteelOf({ section, demand, ruleSet }, layout);
   const clause = ruleSet.clauses.leastSteel;
   const { leastSteel } = ruleSet.formulas;
-  const fy: Input = ['fy', section.fyMPa, 'stress'];
+  const { symbols } = ruleSet;
+  const fy: Input = [symbols.fy, section.fyMPa, 'stress'];
   const d: Input = ['d', layout.dMm, 'length'];
   const b: Input = ['b', section.widthMm, 'length'];
   const isOwnWidth = widthMm !== section.widthMm;
   const steps: WorkingStep[] = [];
+  const { leastSteelWidth } = ruleSet.formulas;
+  const letters = leastSteelWidth.split(/[^\p{L}]+/u);
+  const sizes: readonly Input[] = [
+    b,
+    ...widthInputs(source, 'both').slice(1),
+    ['h', section.depthMm, 'length'],
+  ];
   if (isOwnWidth)
     steps.push(
       step(
         'as-min-width',
         'limits',
-        ['bt', ruleSet.formulas.leastSteelWidth, widthMm, 'length'],
-        [b, ...widthInputs(source, 'both').slice(1, 2)],
+        ['bt', leastSteelWidth, widthMm, 'length'],
+        sizes.filter(([symbol]) => letters.includes(symbol)),
         clause,
       ),
     );
@@ -36,7 +44,7 @@ export function leastSteelSteps(source: WorkingSource): WorkingStep[] {
       'as-min',
       'limits',
       ['As,min', isOwnWidth ? leastSteel.replace(' b d', ' bt d') : leastSteel, leastMm2, 'area'],
-      [['f′c', section.fcMPa, 'stress'], fy, [isOwnWidth ? 'bt' : 'b', widthMm, 'length'], d],
+      [[symbols.fc, section.fcMPa, 'stress'], fy, [isOwnWidth ? 'bt' : 'b', widthMm, 'length'], d],
       clause,
     ),
   );

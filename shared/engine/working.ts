@@ -1,4 +1,6 @@
 import type { WorkingStep } from './evaluation.ts';
+import type { CodeSymbols } from './rules/code-symbols.ts';
+import type { RuleSet } from './rules/rule-set.ts';
 import { leastSteelSteps } from './working-least-steel.ts';
 import { detailingSteps } from './working-detailing.ts';
 import { ductilitySteps, elasticSteps } from './working-elastic.ts';
@@ -21,39 +23,41 @@ export function workingOf(source: WorkingSource): readonly WorkingStep[] {
 }
 
 function materials({ section, basis, ruleSet, flexure, elastic }: WorkingSource): WorkingStep[] {
-  const fc: Input = ['f′c', section.fcMPa, 'stress'];
-  const { clauses } = ruleSet;
+  const { clauses, symbols } = ruleSet;
+  const fc: Input = [symbols.fc, section.fcMPa, 'stress'];
+  const yieldMPa = ruleSet.designYieldMPa(section.fyMPa);
   return [
+    ...ruleSet.designSteps(section.fcMPa, section.fyMPa),
     step(
       'beta1',
       'materials',
-      ['β1', ruleSet.formulas.blockDepthFactor, flexure.beta1, 'ratio'],
+      [symbols.blockDepthFactor, ruleSet.formulas.blockDepthFactor, flexure.beta1, 'ratio'],
       [fc],
       clauses.block,
     ),
     step(
       'ec',
       'materials',
-      ['Ec', ruleSet.formulas.concreteModulus, elastic.ecMPa, 'stress'],
+      [symbols.concreteModulus, ruleSet.formulas.concreteModulus, elastic.ecMPa, 'stress'],
       [fc],
       clauses.concreteModulus,
     ),
     step(
       'n',
       'materials',
-      ['n', 'Es/Ec', elastic.modularRatio, 'ratio'],
+      ['n', `Es/${symbols.concreteModulus}`, elastic.modularRatio, 'ratio'],
       [
         ['Es', basis.esMPa, 'stress'],
-        ['Ec', elastic.ecMPa, 'stress'],
+        [symbols.concreteModulus, elastic.ecMPa, 'stress'],
       ],
       STATICS,
     ),
     step(
       'epsilonTy',
       'materials',
-      ['εty', 'fy/Es', ruleSet.designYieldMPa(section.fyMPa) / basis.esMPa, 'strain'],
+      [symbols.epsilonY, `${symbols.fyDesign}/Es`, yieldMPa / basis.esMPa, 'strain'],
       [
-        ['fy', ruleSet.designYieldMPa(section.fyMPa), 'stress'],
+        [symbols.fyDesign, yieldMPa, 'stress'],
         ['Es', basis.esMPa, 'stress'],
       ],
       clauses.strengthReduction,
@@ -61,18 +65,24 @@ function materials({ section, basis, ruleSet, flexure, elastic }: WorkingSource)
   ];
 }
 
-/** Compressed concrete of the block, by the width it has. */
+/** Compressed concrete of the block under its stress σ, by the width it has: its depth from the axis, and its force. */
 const BLOCK = {
-  web: { axis: '0.85 f′c b β1 c', force: '0.85 f′c b a' },
-  flange: { axis: '0.85 f′c bf β1 c', force: '0.85 f′c bf a' },
-  both: { axis: '0.85 f′c (b β1 c + (bf − b) hf)', force: '0.85 f′c (b a + (bf − b) hf)' },
+  web: { axis: 'σ b β c', force: 'σ b a' },
+  flange: { axis: 'σ bf β c', force: 'σ bf a' },
+  both: { axis: 'σ (b β c + (bf − b) hf)', force: 'σ (b a + (bf − b) hf)' },
 } as const;
+
+/** A formula of the block in the letters of the code. */
+const inLetters = (formula: string, { blockStress, blockDepthFactor, axis }: CodeSymbols) =>
+  formula.replace('σ', blockStress).replace('β c', `${blockDepthFactor} ${axis}`);
 
 function ultimate(source: WorkingSource): WorkingStep[] {
   const { section, layout, flexure, ruleSet } = source;
   const width = compressedWidth(source, flexure.blockDepthMm);
-  const c: Input = ['c', flexure.neutralAxisMm, 'length'];
-  const fc: Input = ['f′c', section.fcMPa, 'stress'];
+  const { symbols } = ruleSet;
+  const c: Input = [symbols.axis, flexure.neutralAxisMm, 'length'];
+  const fc = blockStressInputs(section.fcMPa, ruleSet);
+  const beta: Input = [symbols.blockDepthFactor, flexure.beta1, 'ratio'];
   const block = ruleSet.clauses.block;
   const layers = flexure.layers.flatMap((layer, i) => {
     const name = `${i + 1}`;
@@ -80,20 +90,20 @@ function ultimate(source: WorkingSource): WorkingStep[] {
     const strain: Input = [`ε${name}`, layer.strain, 'strain'];
     const stress: Input = [`fs${name}`, layer.stressMPa, 'stress'];
     const forceFormula = layer.displacedConcreteDeducted
-      ? `A${name} (fs${name} + 0.85 f′c)`
+      ? `A${name} (fs${name} + ${symbols.blockStress})`
       : `A${name} fs${name}`;
     return [
       step(
         `strain-${name}`,
         'ultimate',
-        [strain[0], `εcu (d${name} − c)/c`, strain[1], 'strain'],
+        [strain[0], `${symbols.epsilonCu} (d${name} − ${c[0]})/${c[0]}`, strain[1], 'strain'],
         [d, c],
         block,
       ),
       step(
         `stress-${name}`,
         'ultimate',
-        [stress[0], `Es ε${name}, within ±fy`, stress[1], 'stress'],
+        [stress[0], `Es ε${name}, within ±${symbols.fyDesign}`, stress[1], 'stress'],
         [strain],
         block,
       ),
@@ -101,7 +111,7 @@ function ultimate(source: WorkingSource): WorkingStep[] {
         `force-${name}`,
         'ultimate',
         [`T${name}`, forceFormula, layer.forceN, 'force'],
-        [[`A${name}`, layer.areaMm2, 'area'], stress, ...(layer.displacedConcreteDeducted ? [fc] : [])],
+        [[`A${name}`, layer.areaMm2, 'area'], stress, ...(layer.displacedConcreteDeducted ? fc : [])],
         STATICS,
       ),
     ];
@@ -118,26 +128,21 @@ function ultimate(source: WorkingSource): WorkingStep[] {
     step(
       'c',
       'ultimate',
-      ['c', `${BLOCK[width].axis} = ΣT, each T from its own strain; solved for c`, c[1], 'length'],
-      [fc, ...widthInputs(source, width), ['β1', flexure.beta1, 'ratio'], ...layerInputs(layout)],
+      [
+        c[0],
+        `${inLetters(BLOCK[width].axis, symbols)} = ΣT, each T from its own strain; solved for ${c[0]}`,
+        c[1],
+        'length',
+      ],
+      [...fc, ...widthInputs(source, width), beta, ...layerInputs(layout)],
       STATICS,
     ),
-    step(
-      'a',
-      'ultimate',
-      ['a', 'β1 c', flexure.blockDepthMm, 'length'],
-      [['β1', flexure.beta1, 'ratio'], c],
-      block,
-    ),
+    step('a', 'ultimate', ['a', `${beta[0]} ${c[0]}`, flexure.blockDepthMm, 'length'], [beta, c], block),
     step(
       'concrete-force',
       'ultimate',
-      ['C', BLOCK[width].force, flexure.concreteForceN, 'force'],
-      [
-        ['f′c', section.fcMPa, 'stress'],
-        ...widthInputs(source, width),
-        ['a', flexure.blockDepthMm, 'length'],
-      ],
+      ['C', inLetters(BLOCK[width].force, symbols), flexure.concreteForceN, 'force'],
+      [...fc, ...widthInputs(source, width), ['a', flexure.blockDepthMm, 'length']],
       block,
     ),
     ...layers,
@@ -154,47 +159,60 @@ function ultimate(source: WorkingSource): WorkingStep[] {
   ];
 }
 
+/** What the block's stress follows from: f′c, or design values worked out before. */
+const blockStressInputs = (fcMPa: number, ruleSet: RuleSet): readonly Input[] => {
+  const { symbols } = ruleSet;
+  const named = symbols.blockStress.split(' ');
+  const steps = ruleSet.designSteps(fcMPa, 1).filter(({ symbol }) => named.includes(symbol));
+  return steps.length === 0
+    ? [[symbols.fc, fcMPa, 'stress']]
+    : steps.map(({ symbol, value, kind }) => [symbol, value, kind]);
+};
+
+/** Moment of the internal forces, and its reduction where the code has one beside partial factors. */
 function strength(source: WorkingSource): WorkingStep[] {
   const { flexure, section, basis, ruleSet } = source;
-  const { clauses } = ruleSet;
+  const { clauses, symbols } = ruleSet;
   const width = compressedWidth(source, flexure.blockDepthMm);
   const ofBlock: readonly Input[] =
     width === 'both'
-      ? [['f′c', section.fcMPa, 'stress'], ...widthInputs(source, width)]
+      ? [...blockStressInputs(section.fcMPa, ruleSet), ...widthInputs(source, width)]
       : [['C', flexure.concreteForceN, 'force']];
-  const mn = width === 'both' ? 'Σ T d − 0.85 f′c (b a²/2 + (bf − b) hf²/2)' : 'Σ T d − C a/2';
+  const mn = width === 'both' ? `Σ T d − ${symbols.blockStress} (b a²/2 + (bf − b) hf²/2)` : 'Σ T d − C a/2';
+  const nominal = step(
+    'mn',
+    'strength',
+    [symbols.nominalMoment, mn, flexure.nominalMomentNmm, 'moment'],
+    [
+      ...flexure.layers.flatMap(({ forceN, depthMm }, i): Input[] => [
+        [`T${i + 1}`, forceN, 'force'],
+        [`d${i + 1}`, depthMm, 'length'],
+      ]),
+      ...ofBlock,
+      ['a', flexure.blockDepthMm, 'length'],
+    ],
+    clauses.strength,
+  );
+  if (symbols.nominalMoment === symbols.designMoment) return [nominal];
   return [
-    step(
-      'mn',
-      'strength',
-      ['Mn', mn, flexure.nominalMomentNmm, 'moment'],
-      [
-        ...flexure.layers.flatMap(({ forceN, depthMm }, i): Input[] => [
-          [`T${i + 1}`, forceN, 'force'],
-          [`d${i + 1}`, depthMm, 'length'],
-        ]),
-        ...ofBlock,
-        ['a', flexure.blockDepthMm, 'length'],
-      ],
-      clauses.strength,
-    ),
+    nominal,
     step(
       'phi',
       'strength',
       ['φ', ruleSet.formulas.strengthReduction, flexure.strengthReduction, 'ratio'],
       [
         ['εt', flexure.tensionStrain, 'strain'],
-        ['εty', ruleSet.designYieldMPa(section.fyMPa) / basis.esMPa, 'strain'],
+        [symbols.epsilonY, ruleSet.designYieldMPa(section.fyMPa) / basis.esMPa, 'strain'],
       ],
       clauses.strengthReduction,
     ),
     step(
       'phi-mn',
       'strength',
-      ['φMn', 'φ Mn', flexure.designMomentNmm, 'moment'],
+      [symbols.designMoment, `φ ${symbols.nominalMoment}`, flexure.designMomentNmm, 'moment'],
       [
         ['φ', flexure.strengthReduction, 'ratio'],
-        ['Mn', flexure.nominalMomentNmm, 'moment'],
+        [symbols.nominalMoment, flexure.nominalMomentNmm, 'moment'],
       ],
       clauses.strength,
     ),

@@ -12,6 +12,7 @@ const RULE_SET: Readonly<Record<RuleSetId, string>> = {
   'aci318m-19': 'ACI 318M-19',
   'aci318-14': 'ACI 318-14',
   'aci318m-14': 'ACI 318M-14',
+  en1992: 'EN 1992-1-1:2004',
 };
 
 const BAR_STANDARD: Readonly<Record<BarStandard, string>> = {

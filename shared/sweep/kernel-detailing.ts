@@ -19,6 +19,7 @@ import {
   type SpacingBooks,
   type SpacingSetting,
 } from '../engine/stirrup-design.ts';
+import { leastEffectiveDepthMm, type SpanToDepthInputs } from '../engine/span-to-depth.ts';
 import type { Combination } from './combination.ts';
 import {
   BAR_RULES,
@@ -89,6 +90,8 @@ export class KernelDetailing {
   private tiesMm = Infinity;
   private isTieWithinDepth = false;
   private leastDepthMm = -Infinity;
+  /** Null where the span is not asked, or the code gives the overall depth. */
+  private spanToDepth: SpanToDepthInputs | null = null;
   private allowedSkinMm = NaN;
 
   private readonly prepared: PreparedSweep;
@@ -108,7 +111,7 @@ export class KernelDetailing {
 
   /** Everything that the depths of one combination share. */
   begin(combination: Combination): void {
-    const { ruleSet, problem, skin } = this.prepared;
+    const { ruleSet, skin } = this.prepared;
     const { placement, tension, compression, fyMPa } = combination;
     const { given, stirrupBar, coverMm, widthMm } = placement;
     this.combination = combination;
@@ -139,8 +142,7 @@ export class KernelDetailing {
     }
     this.beginTies(combination);
     this.beginHoops(combination);
-    const { spanMm, support } = problem.demand;
-    this.leastDepthMm = spanMm && support ? ruleSet.leastDepthMm(spanMm, support, fyMPa) : -Infinity;
+    this.beginDeflection(combination);
     if (skin?.bar) this.allowedSkinMm = ruleSet.skinSpacingMm(fyMPa, barsCoverMm);
   }
 
@@ -168,6 +170,27 @@ export class KernelDetailing {
     if (!this.hasHoopLimit) this.placedMask |= HOOP_SPACING;
   }
 
+  private beginDeflection({ placement, tension, compression, concrete, fyMPa }: Combination): void {
+    const { ruleSet, problem } = this.prepared;
+    const { spanMm, support } = problem.demand;
+    if (!spanMm || !support) return;
+    if (ruleSet.largestSpanToDepth === null) {
+      this.leastDepthMm = ruleSet.leastDepthMm(spanMm, support, fyMPa);
+      return;
+    }
+    const { widthMm, overhang } = placement;
+    this.spanToDepth = {
+      spanMm,
+      support,
+      fckMPa: concrete.fcMPa,
+      fykMPa: fyMPa,
+      webMm: widthMm,
+      faceWidthMm: widthMm + overhang.overhangMm,
+      asMm2: tension.areaMm2,
+      asPrimeMm2: compression.areaMm2,
+    };
+  }
+
   /** Checks of a section of depth h (mm) that want no placed bars: ties of stirrups as given, and least depth. */
   sizeMask(h: number): number {
     let mask = isWithinLength(this.leastDepthMm, h) ? 0 : LEAST_DEPTH;
@@ -184,11 +207,17 @@ export class KernelDetailing {
     let mask = this.placedMask;
     const { deep } = this.prepared;
     if (deep !== null) mask |= this.skinMask(deep[j] === 1, h, innermostMm);
+    if (this.spanToDepth !== null) mask |= this.deflectionMask(this.spanToDepth, d);
     if (this.isDesigned) mask |= this.designMask(h, d);
     else if (this.vuN === this.vuN) mask |= this.givenMask(d);
     if (this.hasHoopLimit && !isWithinLength(this.spacingMm, hoopLimitMm(this.rules, d, h, this.at.hasSkin)))
       mask |= HOOP_SPACING;
     return mask;
+  }
+
+  private deflectionMask(inputs: SpanToDepthInputs, d: number): number {
+    const leastMm = leastEffectiveDepthMm(this.prepared.ruleSet.largestSpanToDepth!, inputs, d);
+    return isWithinLength(leastMm, d) ? 0 : LEAST_DEPTH;
   }
 
   private skinMask(isDeep: boolean, h: number, innermostMm: number): number {

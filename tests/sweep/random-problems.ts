@@ -15,6 +15,7 @@ import {
 import { RULE_SETS } from '#shared/engine/rules/rule-sets.ts';
 import { seismicSystemsOf } from '#shared/engine/seismic.ts';
 import type { SpaceDefinition, SteelSetsDefinition, SweepProblem } from '#shared/sweep/problem.ts';
+import { randomNationalValues } from './random-national-values.ts';
 
 /** Random sweep problems of a few hundred sections, over every code, bar standard, convention and rule. */
 const orNull = <T>(arbitrary: fc.Arbitrary<T>) => fc.option(arbitrary, { nil: null });
@@ -151,6 +152,7 @@ export const randomProblem: fc.Arbitrary<SweepProblem> = fc
         stirrupStepMm: fc.constantFrom(undefined, 10, 25.4),
         leastStirrupSpacingMm: fc.constantFrom(undefined, 100),
         rates: orNull(ratesOf(fcMPa)),
+        nationalValues: orNull(randomNationalValues),
       }),
     );
     const demand = fc.record({

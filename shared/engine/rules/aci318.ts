@@ -3,7 +3,8 @@ import type { RuleSetId } from '../section.ts';
 import { MM_PER_IN, MPA_PER_PSI } from '../units.ts';
 import type { Support } from '../section.ts';
 import { aciSeismic } from './aci318-seismic.ts';
-import type { Clauses, Formulas, RuleSet } from './rule-set.ts';
+import { ACI_SYMBOLS } from './code-symbols.ts';
+import type { Clauses, Formulas, RuleSet, Texts } from './rule-set.ts';
 import type { AdditiveShearRules } from './shear-rules.ts';
 
 /**
@@ -34,7 +35,7 @@ interface Coefficients {
   readonly largestTightBendMm: number;
   readonly formulas: Omit<
     Formulas,
-    'strengthReduction' | 'tieSpacing' | 'skinSpacing' | 'effectiveFlange' | 'leastSteelWidth'
+    'strengthReduction' | 'tieSpacing' | 'skinSpacing' | 'effectiveFlange' | 'leastSteelWidth' | 'spanToDepth'
   >;
   /** 24.3.2: s ≤ first/fs − 2.5 cc and second/fs; MPa·mm. */
   readonly crackSpacing: readonly [number, number];
@@ -148,6 +149,13 @@ const METRIC: Coefficients = {
   },
 };
 
+const TEXTS: Texts = {
+  shear: 'φVn ≥ Vu with the stirrups there are, Vs counted to the section limit',
+  stirrupsMissing: 'Vu asks for stirrups',
+  leastDepth: 'least depth where deflections are not computed, nothing attached that they could damage',
+  serviceStress: 'fs = 2/3 fy',
+};
+
 const clausesOf = (book: string): Clauses => ({
   block: `${book} 22.2.2.4`,
   strengthReduction: `${book} Table 21.2.2`,
@@ -235,6 +243,7 @@ export function aci318({ id, year, isMetric }: Edition): RuleSet & { readonly sh
     leastTieDiameterMm,
     leastDepthMm: (spanMm, support, fyMPa) =>
       (spanMm / SPAN_TO_DEPTH[support]) * (0.4 + fyMPa / c.leastDepthFyBaseMPa),
+    largestSpanToDepth: null,
     shear: {
       form: 'additive',
       ...c.shear,
@@ -244,10 +253,14 @@ export function aci318({ id, year, isMetric }: Edition): RuleSet & { readonly sh
     isSkinSteelAsked: (depthMm) => !isWithinLength(depthMm, isMetric ? 900 : 36 * MM_PER_IN),
     skinSpacingMm: crackSpacingMm,
     seismic: aciSeismic({ title: book, year, isMetric, leastSteelShare, leastTieDiameterMm }),
+    designSteps: () => [],
+    symbols: ACI_SYMBOLS,
+    texts: TEXTS,
     clauses: clausesOf(book),
     formulas: {
       ...c.formulas,
       leastSteelWidth: 'min(bf, 2 b), flange in tension of a cantilever',
+      spanToDepth: () => '',
       effectiveFlange: ({ shape }) =>
         shape === 't' ? 'b + 2 min(8 hf, sw/2, ln/8)' : 'b + min(6 hf, sw/2, ln/12)',
       skinSpacing: c.formulas.crackSpacing,

@@ -1,6 +1,8 @@
 import type { ConcreteLawId } from '../curve-choices.ts';
+import type { WorkingStep } from '../evaluation.ts';
 import type { FlangeSetting, ResolvedFlange } from '../flange.ts';
 import type { RuleSetId, Support } from '../section.ts';
+import type { CodeSymbols } from './code-symbols.ts';
 import type { SeismicSystems } from './seismic-rules.ts';
 import type { ShearRules } from './shear-rules.ts';
 
@@ -39,8 +41,33 @@ export interface Formulas {
   leastDepth(support: Support): string;
   /** Width that As,min counts on where it is not the web's. */
   readonly leastSteelWidth: string;
+  /** Largest span over d, written with the branch and the factors that apply; empty where the code has none. */
+  spanToDepth(of: SpanToDepthSection): string;
   /** Effective width bf from the web's b, hf, sw (clear to the next web) and ln (clear span). */
   effectiveFlange(of: Pick<FlangeSetting, 'shape' | 'face' | 'support'>): string;
+}
+
+/** What is said beside a check where codes differ. */
+export interface Texts {
+  readonly shear: string;
+  /** Why a beam without stirrups fails. */
+  readonly stirrupsMissing: string;
+  readonly leastDepth: string;
+  /** Steel stress that crack control takes for the service stress. */
+  readonly serviceStress: string;
+}
+
+/** What the largest span over d may depend on; mm, MPa. */
+export interface SpanToDepthSection {
+  readonly spanMm: number;
+  readonly support: Support;
+  readonly fckMPa: number;
+  readonly fykMPa: number;
+  /** As/(b d) and A′s/(b d), b the width of the compression face. */
+  readonly rho: number;
+  readonly rhoPrime: number;
+  /** Width of a flange in compression over the web's; 1 without. */
+  readonly flangeToWeb: number;
 }
 
 /**
@@ -103,8 +130,10 @@ export interface RuleSet {
   readonly isTieSpacingWithinLeastSide: boolean;
   /** Least stirrup diameter that ties a bar of that diameter. */
   leastTieDiameterMm(barDiameterMm: number): number;
-  /** Least overall depth where deflections are not computed. */
+  /** Least overall depth where deflections are not computed; 0 where the code limits the span over d instead. */
   leastDepthMm(spanMm: number, support: Support, fyMPa: number): number;
+  /** Largest span over d where deflections are not computed; null where the code gives the overall depth. */
+  readonly largestSpanToDepth: ((of: SpanToDepthSection) => number) | null;
   readonly shear: ShearRules;
   /** The code's own law for a section's full curve, and its peak over f′c for any law; Hognestad's, with each law's own peak, unless set. */
   readonly curveConcrete?: { readonly law: ConcreteLawId; readonly peakShare: number } | undefined;
@@ -114,6 +143,10 @@ export interface RuleSet {
   skinSpacingMm(fyMPa: number, clearCoverMm: number): number;
   /** What each class of moment frame asks. */
   readonly seismic: SeismicSystems;
+  /** Values that strength counts on, worked out before anything else. */
+  designSteps(fcMPa: number, fyMPa: number): readonly WorkingStep[];
+  readonly symbols: CodeSymbols;
+  readonly texts: Texts;
   readonly clauses: Clauses;
   readonly formulas: Formulas;
 }
