@@ -16,6 +16,8 @@ export interface ArrangementContext {
   readonly maxAggregateMm: number;
   readonly bendAllowance: BendAllowance;
   readonly maxLayers: number;
+  /** Outside of a bar over its nominal diameter, for widths, gaps and reach; depths and areas stay nominal. 1 unless set. */
+  readonly barOversize?: number | undefined;
 }
 
 /** One face's group in layers; offsets are measured from its own face to the layer's centroid, nearest layer first. */
@@ -49,7 +51,7 @@ export function arrangeFace(face: Face, group: BarGroup, context: ArrangementCon
     }))
     .sort((a, b) => b.bar.diameterMm - a.bar.diameterMm);
   const total = sized.reduce((sum, { count }) => sum + count, 0);
-  if (total === 0) return emptyFace(face, legInnerMm(context));
+  if (total === 0) return emptyFace(face, legInnerMm(context, oversizeOf(context)));
   const largest = sized[0]!.bar.diameterMm;
   const gapMm = context.rules.barGapMm(largest, context.maxAggregateMm);
   const needed = (layer: LayerBars) => widthNeeded(layer, gapMm, context);
@@ -68,10 +70,12 @@ export function arrangeFace(face: Face, group: BarGroup, context: ArrangementCon
   return placedFace(face, layers, gapMm, context);
 }
 
-/** Inside face of the stirrup leg to the concrete surface. */
-function legInnerMm({ coverMm, stirrupBar }: ArrangementContext): number {
-  return coverMm + (stirrupBar ? stirrupBar.diameterMm : 0);
+/** Inside face of the stirrup leg to the concrete surface, with ribs where `oversize` is above 1. */
+function legInnerMm({ coverMm, stirrupBar }: ArrangementContext, oversize: number): number {
+  return coverMm + (stirrupBar ? oversize * stirrupBar.diameterMm : 0);
 }
+
+const oversizeOf = ({ barOversize = 1 }: ArrangementContext) => barOversize;
 
 /** Corner-bar centre from the concrete's side. */
 function cornerMm(diameterMm: number, context: ArrangementContext): number {
@@ -79,12 +83,16 @@ function cornerMm(diameterMm: number, context: ArrangementContext): number {
     context.stirrupBar && context.bendAllowance === 'corner-in-bend'
       ? context.rules.bendRadiusMm(context.stirrupBar.diameterMm)
       : 0;
-  return legInnerMm(context) + Math.max(radius, diameterMm / 2);
+  const oversize = oversizeOf(context);
+  return legInnerMm(context, oversize) + Math.max(radius, (oversize * diameterMm) / 2);
 }
 
+/** Outsides of a layer's bars between the centres of its corner bars, mm. */
+const insideMm = (layer: LayerBars, context: ArrangementContext) =>
+  oversizeOf(context) * (layer.reduce((sum, bar) => sum + bar.diameterMm, 0) - layer[0]!.diameterMm);
+
 function widthNeeded(layer: LayerBars, gapMm: number, context: ArrangementContext): number {
-  const inside = layer.reduce((sum, bar) => sum + bar.diameterMm, 0) - layer[0]!.diameterMm;
-  return 2 * cornerMm(layer[0]!.diameterMm, context) + inside + (layer.length - 1) * gapMm;
+  return 2 * cornerMm(layer[0]!.diameterMm, context) + insideMm(layer, context) + (layer.length - 1) * gapMm;
 }
 
 function emptyFace(face: Face, reachMm: number): FaceLayers {
@@ -153,18 +161,24 @@ function placedFace(
   const columns = columnsOf(layers[0]!, context);
   let clearGapMm = Infinity;
   const layerGapMm = context.rules.layerGapMm(layers[0]![0]!.diameterMm, context.maxAggregateMm);
-  let inner = legInnerMm(context);
+  const oversize = oversizeOf(context);
+  let inner = legInnerMm(context, 1);
+  let reachMm = legInnerMm(context, oversize);
   const placed = layers.map((layer, i) => {
-    if (i > 0) inner += layerGapMm;
+    if (i > 0) {
+      inner += layerGapMm;
+      reachMm += layerGapMm;
+    }
     const deepest = Math.max(...layer.map((bar) => bar.diameterMm));
     const xs = inLine(columns, layer.length);
     for (let j = 1; j < layer.length; j++)
       clearGapMm = Math.min(
         clearGapMm,
-        xs[j]! - xs[j - 1]! - (layer[j]!.diameterMm + layer[j - 1]!.diameterMm) / 2,
+        xs[j]! - xs[j - 1]! - (oversize * (layer[j]!.diameterMm + layer[j - 1]!.diameterMm)) / 2,
       );
     const bars = layer.map((bar, j) => ({ bar, xMm: xs[j]!, offsetMm: inner + bar.diameterMm / 2 }));
     inner += deepest;
+    reachMm += oversize * deepest;
     return { ...centroidOf(bars), bars };
   });
   const { offsetMm: centroidOffsetMm, areaMm2 } =
@@ -179,17 +193,17 @@ function placedFace(
     widthNeededMm: widthNeeded(layers[0]!, gapMm, context),
     reason: `${layers.map((layer) => layer.length).join(' + ')} in ${layerWord(layers.length)}`,
   };
-  return { report, layers: placed, centroidOffsetMm, areaMm2, reachMm: inner, layerGapMm };
+  return { report, layers: placed, centroidOffsetMm, areaMm2, reachMm, layerGapMm };
 }
 
 /** Centres of the layer nearest the face: corners first, equal clear gaps between. */
 function columnsOf(layer: LayerBars, context: ArrangementContext): readonly number[] {
+  const oversize = oversizeOf(context);
   const corner = cornerMm(layer[0]!.diameterMm, context);
-  const inside = layer.reduce((sum, bar) => sum + bar.diameterMm, 0) - layer[0]!.diameterMm;
-  const gap = (context.widthMm - 2 * corner - inside) / (layer.length - 1);
+  const gap = (context.widthMm - 2 * corner - insideMm(layer, context)) / (layer.length - 1);
   const columns = [corner];
   for (let i = 1; i < layer.length; i++)
-    columns.push(columns[i - 1]! + gap + (layer[i]!.diameterMm + layer[i - 1]!.diameterMm) / 2);
+    columns.push(columns[i - 1]! + gap + (oversize * (layer[i]!.diameterMm + layer[i - 1]!.diameterMm)) / 2);
   return columns;
 }
 

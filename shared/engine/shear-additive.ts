@@ -1,3 +1,4 @@
+import { isAtLeastTimes } from './limits.ts';
 import type { AdditiveShearRules } from './rules/shear-rules.ts';
 import type { StirrupConstants } from './shear-inputs.ts';
 
@@ -41,7 +42,7 @@ export function vcN(k: AdditiveShear, dMm: number, asMm2: number, spacingMm: num
 
 /** Whether the stirrups are at least Av,min. */
 export const hasLeastStirrups = (k: AdditiveShear, spacingMm: number) =>
-  k.avMm2 >= k.leastAvPerMm * spacingMm;
+  isAtLeastTimes(k.avMm2, k.leastAvPerMm, spacingMm);
 
 /** Vs, N: Av fyt d/s (22.5.8.5.3), counted up to the section limit (22.5.1.2). */
 export function stirrupShearN(k: AdditiveShear, dMm: number, spacingMm = k.spacingMm): number {

@@ -65,6 +65,7 @@ export function placeSteel(section: SectionInput, basis: DesignBasis, maxLayers:
           maxAggregateMm: basis.maxAggregateMm,
           bendAllowance: basis.bendAllowance,
           maxLayers,
+          barOversize: basis.barOversize,
         });
   const neededMm = leastForStirrupMm(coverMm, stirrupBar, rules);
   const availableMm = Math.min(section.widthMm, section.depthMm);

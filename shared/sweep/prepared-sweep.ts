@@ -116,6 +116,7 @@ export function placementAt(prepared: PreparedSweep, combination: number): Place
     maxAggregateMm: basis.maxAggregateMm,
     bendAllowance: basis.bendAllowance,
     maxLayers: rules.maxLayers,
+    barOversize: basis.barOversize,
   };
   const flange = flangeOf({ widthMm, flange: space.flange }, ruleSet);
   const judged = { rules, throughMm: prepared.seismic?.continuousBars?.leastDiameterMm ?? 0 };

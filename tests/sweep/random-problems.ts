@@ -149,6 +149,7 @@ export const randomProblem: fc.Arbitrary<SweepProblem> = fc
         fytMPa: fc.constantFrom(280, 420, 550),
         slabMm: fc.constantFrom(0, 150),
         skinBar: fc.constantFrom(undefined, null, ...BARS[standard].slice(1, 3).map((b) => b.designation)),
+        barOversize: fc.constantFrom(undefined, 1.15),
         stirrupStepMm: fc.constantFrom(undefined, 10, 25.4),
         leastStirrupSpacingMm: fc.constantFrom(undefined, 100),
         rates: orNull(ratesOf(fcMPa)),
