@@ -85,7 +85,7 @@ export function curveModel(input: CurveInput): CurveModel {
     ...overhangOf(section, rules),
     confinement,
     confinementNote,
-    steel: steelOf(section.fyMPa, basis.esMPa, choices),
+    steel: steelOf(rules.designYieldMPa(section.fyMPa), basis.esMPa, choices),
     depths: layout.depths,
     areas: layout.areas,
     isDisplacedDeducted: basis.displacedConcrete !== 'ignore',

@@ -308,7 +308,7 @@ export function fibreBlockState(of: BlockSection, strips = BLOCK_STRIPS): FibreS
     core: block,
     barDepths: layout.depths,
     barAreas: layout.areas,
-    steel: elasticPlastic({ fyMPa: section.fyMPa, esMPa: of.esMPa }),
+    steel: elasticPlastic({ fyMPa: rules.designYieldMPa(section.fyMPa), esMPa: of.esMPa }),
     displacedMPa: (_, strain) => {
       if (of.displacedConcrete === 'ignore') return 0;
       return of.displacedConcrete === 'deduct' ? block.stress(strain) : blockMPa;

@@ -2,6 +2,7 @@ import { BAR_CASES } from './bar-cases.ts';
 import { CURVE_CASES } from './curve-cases.ts';
 import { DETAILING_CASES } from './detailing-cases.ts';
 import { ELASTIC_CASES } from './elastic-cases.ts';
+import { EUROCODE_CASES } from './eurocode-cases.ts';
 import { FLANGE_CASES } from './flange-cases.ts';
 import { FLEXURE_CASES } from './flexure-cases.ts';
 import { HAND_WORKED_CASES } from './hand-worked-case.ts';
@@ -16,6 +17,7 @@ export const COMPUTATIONS: Readonly<Record<string, ComputeCase>> = {
   ...BAR_CASES,
   ...CURVE_CASES,
   ...DETAILING_CASES,
+  ...EUROCODE_CASES,
   ...HAND_WORKED_CASES,
   ...OPTIMUM_CASES,
 };
