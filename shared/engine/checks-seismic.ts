@@ -2,7 +2,7 @@ import { getBar } from './bars.ts';
 import { check, type CheckContext } from './check-result.ts';
 import type { CheckResult } from './evaluation.ts';
 import { isAtLeastTimes, isWithinLength } from './limits.ts';
-import { reversedStrengthNmm } from './reversal.ts';
+import { reversedStrength } from './reversal.ts';
 import type { FaceSteelLimits, SeismicRules } from './rules/seismic-rules.ts';
 import { FACES, type BarGroup, type BarStandard, type Face } from './section.ts';
 import { faceLeastMm2, faceMostMm2, leastWebMm } from './seismic.ts';
@@ -58,8 +58,10 @@ function span({ demand, placed }: CheckContext, seismic: SeismicRules): CheckRes
 const faceDepthMm = ({ dMm, dPrimeMm }: SteelLayout, face: Face, depthMm: number) =>
   face === 'tension' || dPrimeMm === null ? dMm : depthMm - dPrimeMm;
 
+type SteelContext = Pick<CheckContext, 'section' | 'basis' | 'demand' | 'placed' | 'seismic'>;
+
 /** Limits of one face's steel with what they are worked out from. */
-export function faceSteelOf({ section, basis, demand, placed, seismic }: CheckContext, face: Face) {
+export function faceSteelOf({ section, basis, demand, placed, seismic }: SteelContext, face: Face) {
   const limits = seismic?.steelLimits?.(face, {
     fcMPa: section.fcMPa,
     fyMPa: section.fyMPa,
@@ -72,7 +74,7 @@ export function faceSteelOf({ section, basis, demand, placed, seismic }: CheckCo
     face === 'tension' ? [layout.asMm2, layout.asPrimeMm2] : [layout.asPrimeMm2, layout.asMm2];
   const dMm = faceDepthMm(layout, face, section.depthMm);
   const at: readonly [FaceSteelLimits, number, number, number] = [limits, section.widthMm, dMm, otherMm2];
-  return { face, areaMm2, dMm, leastMm2: faceLeastMm2(...at), mostMm2: faceMostMm2(...at) };
+  return { face, areaMm2, otherMm2, dMm, leastMm2: faceLeastMm2(...at), mostMm2: faceMostMm2(...at) };
 }
 
 function steel(context: CheckContext, seismic: SeismicRules): CheckResult | null {
@@ -146,7 +148,7 @@ function reversal(context: CheckContext, seismic: SeismicRules): CheckResult | n
   const { section, basis, ruleSet, placed, flexure } = context;
   const share = seismic.reversalShare;
   if (share === null || !placed.layout || !flexure) return null;
-  const reversed = reversedStrengthNmm(section, placed.layout, basis, ruleSet);
+  const { momentNmm: reversed } = reversedStrength(section, placed.layout, basis, ruleSet);
   const leastNmm = share * flexure.nominalMomentNmm;
   return check({
     id: 'seismic-reversal',

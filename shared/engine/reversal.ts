@@ -11,6 +11,8 @@ export interface Reversal {
   readonly ultimate: UltimateConstants;
   overhangPerMm: number;
   overhangDepthMm: number;
+  /** Of the section last solved; 0 before. */
+  neutralAxisMm: number;
   readonly depths: Float64Array;
   readonly areas: Float64Array;
 }
@@ -34,6 +36,7 @@ export const reversalOf = (
   },
   overhangPerMm: 0,
   overhangDepthMm: 0,
+  neutralAxisMm: 0,
   depths: new Float64Array(n),
   areas: new Float64Array(n),
 });
@@ -94,6 +97,7 @@ export function reversedMomentNmm(layers: SortedLayers, depthMm: number, reversa
     areas[i] = layers.areas[n - 1 - i]!;
   }
   const c = neutralAxisDepth(depths, areas, n, k);
+  reversal.neutralAxisMm = c;
   const a = k.blockDepthFactor * c;
   const deductionDepth = k.displacedConcrete === 'deduct' ? a : k.displacedConcrete === 'ignore' ? -1 : c;
   const inFlange = Math.min(a, reversal.overhangDepthMm);
@@ -152,13 +156,13 @@ export function isReversalMet(
   return isAtLeastTimes(reversedMomentNmm(layers, depthMm, reversal), 1, leastNmm);
 }
 
-/** The same strength for a section with placed steel, N·mm. */
-export function reversedStrengthNmm(
+/** The same strength for a section with placed steel, and the axis it was found with (0 without such steel). */
+export function reversedStrength(
   section: SectionInput,
   layout: SteelLayout,
   basis: DesignBasis,
   rules: RuleSet,
-): number {
+): { readonly momentNmm: number; readonly neutralAxisMm: number } {
   const { depths, areas, faces } = layout;
   const n = depths.length;
   const reversal = reversalOf(basis, n);
@@ -171,5 +175,7 @@ export function reversedStrengthNmm(
   });
   setOverhang(reversal, reversedOverhang(section.widthMm, flangeOf(section, rules)));
   const compressionCount = faces.filter((face) => face === 'compression').length;
-  return reversedMomentNmm({ depths, areas, n, compressionCount }, section.depthMm, reversal);
+  const layers = { depths, areas, n, compressionCount };
+  const momentNmm = reversedMomentNmm(layers, section.depthMm, reversal);
+  return { momentNmm, neutralAxisMm: reversal.neutralAxisMm };
 }

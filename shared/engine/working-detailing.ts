@@ -1,12 +1,21 @@
 import { barCoverMm, spanToDepthOf, stirrupBarOf } from './checks-detailing.ts';
 import type { WorkingStep } from './evaluation.ts';
 import { spanToDepthSection } from './span-to-depth.ts';
+import { seismicSteps } from './working-seismic.ts';
 import { shearSteps } from './working-shear.ts';
+import { skinSteps, stirrupSteps } from './working-stirrups.ts';
 import { step, type Input, type WorkingSource } from './working-step.ts';
 
 /** Limits of crack control and least depth, and shear, each where it is asked. */
 export function detailingSteps(source: WorkingSource): WorkingStep[] {
-  return [...crackStep(source), ...leastDepthStep(source), ...shearSteps(source)];
+  return [
+    ...crackStep(source),
+    ...leastDepthStep(source),
+    ...skinSteps(source),
+    ...seismicSteps(source),
+    ...stirrupSteps(source),
+    ...shearSteps(source),
+  ];
 }
 
 function crackStep(source: WorkingSource): WorkingStep[] {

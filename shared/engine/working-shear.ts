@@ -18,9 +18,11 @@ export function shearSteps(source: WorkingSource): WorkingStep[] {
   const state = shearOf(source);
   if (!state) return [];
   const { constants: k } = state;
+  // the design writes its own limits
+  const isDesigned = source.stirrups.design !== null;
   return k.form === 'additive'
-    ? [...additiveSteps(source, state, k), ...additiveSpacingSteps(source, state, k)]
-    : [...strutShearSteps(source, state, k), ...strutSpacingSteps(source, state, k)];
+    ? [...additiveSteps(source, state, k), ...(isDesigned ? [] : additiveSpacingSteps(source, state, k))]
+    : [...strutShearSteps(source, state, k), ...(isDesigned ? [] : strutSpacingSteps(source, state, k))];
 }
 
 function additiveSteps(
