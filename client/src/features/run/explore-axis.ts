@@ -5,7 +5,7 @@ import type { Space, SteelSet } from '#shared/sweep/problem.ts';
 import type { EvaluatedSection } from './section-source.ts';
 
 /** What a section was made from beside its width and depth, which are measures already. */
-export const INPUT_KEYS = ['fc', 'bottomSteel', 'topSteel', 'fy', 'cover'] as const;
+export const INPUT_KEYS = ['fc', 'tensionSteel', 'compressionSteel', 'fy', 'cover'] as const;
 export type InputKey = (typeof INPUT_KEYS)[number];
 
 /** Everything a range can be set on: the inputs and the measures. */
@@ -30,8 +30,8 @@ export function inputValues(
     fc: space.fcMPa,
     fy: space.fyMPa,
     cover: space.coversMm,
-    bottomSteel: space.tension.map((set) => areaOf(set, standard)),
-    topSteel: space.compression.map((set) => areaOf(set, standard)),
+    tensionSteel: space.tension.map((set) => areaOf(set, standard)),
+    compressionSteel: space.compression.map((set) => areaOf(set, standard)),
   };
 }
 
@@ -41,5 +41,5 @@ export function exploreValue({ section, evaluation }: EvaluatedSection, key: Exp
   if (key === 'fc') return section.fcMPa;
   if (key === 'fy') return section.fyMPa;
   if (key === 'cover') return section.coverMm;
-  return (key === 'bottomSteel' ? evaluation.geometry?.asMm2 : evaluation.geometry?.asPrimeMm2) ?? null;
+  return (key === 'tensionSteel' ? evaluation.geometry?.asMm2 : evaluation.geometry?.asPrimeMm2) ?? null;
 }

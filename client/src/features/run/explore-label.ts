@@ -15,8 +15,8 @@ export interface ExploreLabel {
 
 const INPUTS: Readonly<Record<InputKey, Omit<ExploreLabel, 'unit'>>> = {
   fc: { name: 'Concrete', symbol: 'f′c', kind: 'stress' },
-  bottomSteel: { name: 'Bottom steel', symbol: 'As', kind: 'area' },
-  topSteel: { name: 'Top steel', symbol: 'A′s', kind: 'area' },
+  tensionSteel: { name: 'Tension steel', symbol: 'As', kind: 'area' },
+  compressionSteel: { name: 'Compression steel', symbol: 'A′s', kind: 'area' },
   fy: { name: 'Steel', symbol: 'fy', kind: 'stress' },
   cover: { name: 'Clear cover', symbol: 'cover', kind: 'length' },
 };

@@ -72,16 +72,16 @@ export class FeasibleColumns {
     const inner: Readonly<Record<InputKey, number>> = {
       fc: depthsMm.length,
       fy: depthsMm.length * fcMPa.length,
-      topSteel: depthsMm.length * fcMPa.length * fyMPa.length,
-      bottomSteel: depthsMm.length * fcMPa.length * fyMPa.length * compression.length,
+      compressionSteel: depthsMm.length * fcMPa.length * fyMPa.length,
+      tensionSteel: depthsMm.length * fcMPa.length * fyMPa.length * compression.length,
       cover:
         depthsMm.length * fcMPa.length * fyMPa.length * compression.length * tension.length * stirrups.length,
     };
     const length: Readonly<Record<InputKey, number>> = {
       fc: fcMPa.length,
       fy: fyMPa.length,
-      topSteel: compression.length,
-      bottomSteel: tension.length,
+      compressionSteel: compression.length,
+      tensionSteel: tension.length,
       cover: coversMm.length,
     };
     return (index) => Math.floor(index / inner[key]) % length[key];

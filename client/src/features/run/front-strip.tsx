@@ -4,6 +4,7 @@ import type { BarStandard, SectionInput } from '#shared/engine/section.ts';
 import type { View } from '#shared/sweep/problem.ts';
 import type { FrontPoint } from '#shared/sweep/result.ts';
 import { SectionDrawing } from '#client/src/drawing/section-drawing.tsx';
+import { sectionGeometry } from '#shared/drawing/section-geometry.ts';
 import { formatQuantity } from '#shared/print/format-quantity.ts';
 import { barsText, sizeText } from '#shared/print/section-text.ts';
 import { measureText, type MeasureReader } from './measure-text.ts';
@@ -28,7 +29,7 @@ const DRAWING_PX = 132;
 /** Room above the deepest section for a pin's flag. */
 const HEAD_PX = 22;
 /** Three lines of words and the way to pin. */
-const WORDS_PX = 92;
+const WORDS_PX = 80;
 
 const STEP_OF_KEY: Readonly<Record<string, number>> = {
   ArrowRight: 1,
@@ -121,19 +122,29 @@ function StripCell(props: CellProps) {
   );
 }
 
+/** What the slab of these sections adds to the width of their webs; all of a run share it. */
+function overhangMm(front: readonly FrontPoint[], source: SectionSource, standard: BarStandard): number {
+  const [first] = front;
+  if (first === undefined) return 0;
+  const { section, evaluation } = source.evaluatedAt(first.index);
+  const { leftMm, rightMm } = sectionGeometry(section, evaluation, standard);
+  return rightMm - leftMm - section.widthMm;
+}
+
 const isCalm = (): boolean => matchMedia('(prefers-reduced-motion: reduce)').matches;
 
 /** The sections along the front, side by side on one ground line at one scale. Only those in sight are drawn. */
 export function FrontStrip(props: FrontStripProps) {
-  const { front, source, selectedIndex, onSelect } = props;
+  const { front, source, standard, selectedIndex, onSelect } = props;
   const frame = useRef<HTMLDivElement>(null);
   const scale = useMemo(
     () =>
       stripScale(
         front.map((point): SectionInput => source.sectionAt(point.index)),
         DRAWING_PX,
+        overhangMm(front, source, standard),
       ),
-    [front, source],
+    [front, source, standard],
   );
   // eslint-disable-next-line react-hooks/incompatible-library -- its functions are called here and passed nowhere
   const strip = useVirtualizer({

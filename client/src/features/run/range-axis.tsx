@@ -11,12 +11,14 @@ import { movedRange, shareOn, steppedValue, valueAt, type RangeScale } from './r
 /** Height of an axis, and the room above and below it that a handle at its end stands in. */
 export const AXIS_PX = 230;
 export const AXIS_PAD_PX = 18;
-/** Widths of one axis: the place of its line within its column, and the longest bar of its spread. */
-export const COLUMN_PX = 96;
-const BAR_PX = 34;
+/** What stands above the axis in its column: its name, its unit, and the upper end to type. */
+export const AXIS_HEAD_PX = 72;
+/** The longest bar of a spread, as a share of its column. */
+const BAR_SHARE = 0.36;
 
 interface RangeAxisProps {
   readonly axis: ExploreKey;
+  readonly columnPx: number;
   readonly spread: Spread;
   readonly scale: RangeScale;
   readonly range: ValueRange;
@@ -101,7 +103,8 @@ function Handle(props: RangeAxisProps & { readonly end: 'low' | 'high' }) {
 }
 
 /** How many sections have which value: all of them pale, those within every range solid. */
-function SpreadBars({ spread, scale }: { readonly spread: Spread; readonly scale: RangeScale }) {
+function SpreadBars({ spread, columnPx }: { readonly spread: Spread; readonly columnPx: number }) {
+  const middle = columnPx / 2;
   const most = Math.max(...spread.all, 1);
   const tall = AXIS_PX / spread.all.length;
   const path = (counts: readonly number[]) =>
@@ -109,39 +112,28 @@ function SpreadBars({ spread, scale }: { readonly spread: Spread; readonly scale
       .map((count, bin) =>
         count === 0
           ? ''
-          : `M ${COLUMN_PX / 2} ${AXIS_PAD_PX + AXIS_PX - (bin + 1) * tall + 0.5} h ${Math.max(1.5, (count / most) * BAR_PX)} v ${tall - 1} H ${COLUMN_PX / 2} z`,
+          : `M ${middle} ${AXIS_PAD_PX + AXIS_PX - (bin + 1) * tall + 0.5} h ${Math.max(1.5, (count / most) * BAR_SHARE * columnPx)} v ${tall - 1} H ${middle} z`,
       )
       .join('');
   return (
-    <svg
-      aria-hidden="true"
-      width={COLUMN_PX}
-      height={AXIS_PX + 2 * AXIS_PAD_PX}
-      className="absolute inset-0"
-      data-low={scale.low}
-    >
+    <svg aria-hidden="true" width={columnPx} height={AXIS_PX + 2 * AXIS_PAD_PX} className="absolute inset-0">
       <path d={path(spread.all)} className="fill-meets" opacity={0.2} />
       <path d={path(spread.within)} className="fill-meets" opacity={0.6} />
-      <line
-        x1={COLUMN_PX / 2}
-        x2={COLUMN_PX / 2}
-        y1={AXIS_PAD_PX}
-        y2={AXIS_PAD_PX + AXIS_PX}
-        className="stroke-ink"
-      />
+      <line x1={middle} x2={middle} y1={AXIS_PAD_PX} y2={AXIS_PAD_PX + AXIS_PX} className="stroke-ink" />
     </svg>
   );
 }
 
 /** One axis of the ranges: its spread, its two handles, and the same two ends to type. */
 export function RangeAxis(props: RangeAxisProps) {
-  const { axis, spread, scale, range, selected, reader, onRange } = props;
+  const { axis, columnPx, spread, scale, range, selected, reader, onRange } = props;
   const label = exploreLabel(axis, reader);
   const better = isInputKey(axis) ? null : MEASURE_DIRECTION[axis];
   const field = (end: 'low' | 'high') => (
     <NumberField
       label={`${exploreTitle(label)} ${end === 'low' ? 'from' : 'to'}`}
       isLabelHidden
+      className="mx-1 text-sm [&_input]:border-rule [&_input]:px-0 [&_input]:py-0.5 [&_input]:text-center"
       kind={label.kind}
       units={reader.units}
       unitText=""
@@ -155,22 +147,24 @@ export function RangeAxis(props: RangeAxisProps) {
   return (
     <div
       className="shrink-0 text-center"
-      style={{ width: COLUMN_PX }}
+      style={{ width: columnPx }}
       role="group"
       aria-label={exploreTitle(label)}
     >
-      <p className="text-sm font-semibold whitespace-nowrap" title={exploreTitle(label)}>
-        {label.symbol}
-        {better !== null && (
-          <span className="font-normal text-muted" title={`${better} is better`}>
-            {better === 'less' ? ' ↓' : ' ↑'}
-          </span>
-        )}
-      </p>
-      <p className="h-4 text-xs text-muted">{label.unit}</p>
-      <p className="num mt-1 text-xs leading-4 text-muted">{bareText(axis, scale.high, reader.units)}</p>
+      <div className="grid content-start" style={{ height: AXIS_HEAD_PX }}>
+        <p className="text-sm font-semibold whitespace-nowrap" title={exploreTitle(label)}>
+          {label.symbol}
+          {better !== null && (
+            <span className="font-normal text-muted" title={`${better} is better`}>
+              {better === 'less' ? ' ↓' : ' ↑'}
+            </span>
+          )}
+        </p>
+        <p className="h-4.5 text-xs text-muted">{label.unit}</p>
+        {field('high')}
+      </div>
       <div className="relative" style={{ height: AXIS_PX + 2 * AXIS_PAD_PX }}>
-        <SpreadBars spread={spread} scale={scale} />
+        <SpreadBars spread={spread} columnPx={columnPx} />
         {selected !== null && (
           <span
             aria-hidden="true"
@@ -181,11 +175,7 @@ export function RangeAxis(props: RangeAxisProps) {
         <Handle {...props} end="high" />
         <Handle {...props} end="low" />
       </div>
-      <p className="num text-xs leading-4 text-muted">{bareText(axis, scale.low, reader.units)}</p>
-      <div className="mx-1.5 mt-1.5 grid gap-0.5 text-sm [&_input]:py-0.5">
-        {field('high')}
-        {field('low')}
-      </div>
+      {field('low')}
       <button
         type="button"
         className={`mt-1 min-h-6 text-xs underline decoration-concrete-edge hover:decoration-current ${range.low === null && range.high === null ? 'invisible' : ''}`}

@@ -4,7 +4,8 @@ import { exploreValue, type ExploreKey } from './explore-axis.ts';
 import { exploreLabel, exploreTitle } from './explore-label.ts';
 import { snapValues } from './explore-keys.ts';
 import type { MeasureReader } from './measure-text.ts';
-import { AXIS_PAD_PX, AXIS_PX, COLUMN_PX, RangeAxis } from './range-axis.tsx';
+import { useElementSize } from '#client/src/charts/use-element-size.ts';
+import { AXIS_HEAD_PX, AXIS_PAD_PX, AXIS_PX, RangeAxis } from './range-axis.tsx';
 import { withRange } from './range-filters.ts';
 import { listedSpread, shareOn, type RangeScale } from './range-scale.ts';
 import { rowsOf } from './section-rows.ts';
@@ -30,11 +31,12 @@ interface DrawnAxis {
   readonly scale: RangeScale;
 }
 
-/** Height of what stands above the axes in each column. */
-const HEAD_PX = 58;
+/** An axis takes its part of the width there is, within these. */
+const NARROWEST_PX = 68;
+const WIDEST_PX = 124;
 
 /** A section as a line from axis to axis; broken where it has no value. */
-function linePath(row: EvaluatedSection, axes: readonly DrawnAxis[]): string {
+function linePath(row: EvaluatedSection, axes: readonly DrawnAxis[], columnPx: number): string {
   let isPenUp = true;
   return axes
     .map(({ key, scale }, k) => {
@@ -43,34 +45,41 @@ function linePath(row: EvaluatedSection, axes: readonly DrawnAxis[]): string {
         isPenUp = true;
         return '';
       }
-      const y = HEAD_PX + AXIS_PAD_PX + (1 - shareOn(scale, value)) * AXIS_PX;
+      const y = AXIS_HEAD_PX + AXIS_PAD_PX + (1 - shareOn(scale, value)) * AXIS_PX;
       const command = isPenUp ? 'M' : 'L';
       isPenUp = false;
-      return `${command}${(k + 0.5) * COLUMN_PX} ${y.toFixed(1)}`;
+      return `${command}${((k + 0.5) * columnPx).toFixed(1)} ${y.toFixed(1)}`;
     })
     .join('');
 }
 
 function Lines(props: {
   readonly axes: readonly DrawnAxis[];
+  readonly columnPx: number;
   readonly front: readonly EvaluatedSection[];
   readonly band: readonly EvaluatedSection[];
   readonly selected: EvaluatedSection | null;
 }) {
-  const { axes, front, band, selected } = props;
-  const path = (rows: readonly EvaluatedSection[]) => rows.map((row) => linePath(row, axes)).join('');
-  const height = HEAD_PX + AXIS_PX + 2 * AXIS_PAD_PX;
+  const { axes, columnPx, front, band, selected } = props;
+  const path = (rows: readonly EvaluatedSection[]) =>
+    rows.map((row) => linePath(row, axes, columnPx)).join('');
+  const height = AXIS_HEAD_PX + AXIS_PX + 2 * AXIS_PAD_PX;
   return (
     <svg
       aria-hidden="true"
       className="pointer-events-none absolute top-0 left-0 fill-none"
-      width={axes.length * COLUMN_PX}
+      width={axes.length * columnPx}
       height={height}
     >
       <path d={path(band)} className="stroke-near-mark" opacity={0.3} />
       <path d={path(front)} className="stroke-ink" opacity={0.45} />
       {selected !== null && (
-        <path d={linePath(selected, axes)} className="stroke-steel" strokeWidth={2} strokeLinejoin="round" />
+        <path
+          d={linePath(selected, axes, columnPx)}
+          className="stroke-steel"
+          strokeWidth={2}
+          strokeLinejoin="round"
+        />
       )}
     </svg>
   );
@@ -126,14 +135,16 @@ export function RangesPanel(props: RangesPanelProps) {
   const { explore, source, reader, selected } = props;
   const { filters, setFilters, shown, state } = explore;
   const axes = useAxes(props);
+  const [frame, size] = useElementSize<HTMLElement>();
+  const columnPx = Math.min(WIDEST_PX, Math.max(NARROWEST_PX, Math.floor((size?.width ?? 0) / axes.length)));
   const front = useMemo(() => rowsOf(shown.front, source), [shown.front, source]);
   const band = useMemo(() => rowsOf(shown.band, source), [shown.band, source]);
   return (
-    <section aria-label="Ranges">
+    <section ref={frame} aria-label="Ranges">
       <div className="flex flex-wrap items-baseline gap-x-4 gap-y-1 pb-2">
         <p className="max-w-prose text-sm text-muted">
-          Lines are the sections of the front, ochre ones those near the best. Draw the brackets, or type, and
-          every view keeps to what lies between.
+          Lines are sections of the front, ochre ones near the best; an arrow says which way is better. Drag a
+          bracket or type an end, and every view keeps to what lies between.
           {state === 'stored-only' &&
             ' This run is too large to be held here whole: the ranges act on the sections listed, not on the cloud.'}
         </p>
@@ -147,12 +158,13 @@ export function RangesPanel(props: RangesPanelProps) {
         </div>
       ) : (
         <div className="overflow-x-auto pb-1" role="region" aria-label="Axes of the ranges" tabIndex={0}>
-          <div className="relative flex" style={{ width: axes.length * COLUMN_PX }}>
-            <Lines axes={axes} front={front} band={band} selected={selected} />
+          <div className="relative flex" style={{ width: axes.length * columnPx }}>
+            <Lines axes={axes} columnPx={columnPx} front={front} band={band} selected={selected} />
             {axes.map(({ key, spread, scale }) => (
               <RangeAxis
                 key={key}
                 axis={key}
+                columnPx={columnPx}
                 spread={spread}
                 scale={scale}
                 range={filters[key] ?? { low: null, high: null }}

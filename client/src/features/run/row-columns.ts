@@ -1,3 +1,5 @@
+import type { SectionInput } from '#shared/engine/section.ts';
+import { faceWord } from '#shared/print/face-word.ts';
 import { formatQuantity } from '#shared/print/format-quantity.ts';
 import { barsText } from '#shared/print/section-text.ts';
 import { toDisplay } from '#shared/print/units.ts';
@@ -38,8 +40,21 @@ const USUAL: readonly RowKey[] = [
   'ties',
 ];
 
-/** Every column there can be, in the order they stand. Size and f′c are told even where all rows have the same. */
-export function allColumns(keys: readonly ExploreKey[], reader: MeasureReader): readonly Column[] {
+/** Bars by where they lie in the beam as it is built: with the slab at its tension face the tension bars are on top. */
+function barColumn(face: 'tension' | 'compression', section: SectionInput): Column {
+  const head = faceWord(face, section) === 'top' ? 'Top' : 'Bottom';
+  return { key: face, head, title: `${head} bars`, unit: '', isText: true };
+}
+
+/**
+ * Every column there can be, in the order they stand. Size and f′c are told even where all rows have the same. `section` is
+ * any of the run: where its faces lie, those of all do.
+ */
+export function allColumns(
+  keys: readonly ExploreKey[],
+  reader: MeasureReader,
+  section: SectionInput,
+): readonly Column[] {
   const valueColumn = (key: ExploreKey): Column => {
     const label = exploreLabel(key, reader);
     return { key, head: label.symbol, title: exploreTitle(label), unit: label.unit, isText: false };
@@ -49,8 +64,8 @@ export function allColumns(keys: readonly ExploreKey[], reader: MeasureReader): 
   const measures = keys.filter((key) => !INPUT_KEYS.some((one) => one === key) && !always.includes(key));
   return [
     ...always.map(valueColumn),
-    { key: 'tension', head: 'Bars', title: 'Tension bars', unit: '', isText: true },
-    { key: 'compression', head: 'Opposite', title: 'Compression bars', unit: '', isText: true },
+    barColumn('tension', section),
+    barColumn('compression', section),
     ...inputs.map(valueColumn),
     ...measures.map(valueColumn),
     { key: 'ties', head: 'Ties', title: 'Sections that tie', unit: '', isText: false },

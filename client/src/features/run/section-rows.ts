@@ -20,8 +20,8 @@ export interface RowOrder {
 /** What a row is ordered by; bars go by their area. Null where the value is not known. */
 function valueOf(row: SectionRow, key: RowKey): number | null {
   if (key === 'ties') return row.tieCount;
-  if (key === 'tension') return exploreValue(row, 'bottomSteel');
-  return exploreValue(row, key === 'compression' ? 'topSteel' : key);
+  if (key === 'tension') return exploreValue(row, 'tensionSteel');
+  return exploreValue(row, key === 'compression' ? 'compressionSteel' : key);
 }
 
 /** Rows in order; equal ones stay as they were, unknown values always come last. */

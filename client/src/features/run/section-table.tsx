@@ -136,7 +136,7 @@ function Rows(props: RowsProps) {
       className="relative max-h-[27rem] max-w-full overflow-auto"
       onKeyDown={move}
     >
-      <table className="ledger" aria-label={label} aria-rowcount={rows.length + 1}>
+      <table className="ledger [&_td]:py-1" aria-label={label} aria-rowcount={rows.length + 1}>
         <Heads columns={columns} order={props.order} onOrder={props.onOrder} />
         <tbody>
           {above > 0 && (
@@ -194,7 +194,7 @@ export function SectionTable(props: SectionTableProps) {
   const { shown, keys, source, reader, address, selectedIndex } = props;
   const { list, find: words, write, select } = address;
   const searchId = useId();
-  const all = useMemo(() => allColumns(keys, reader), [keys, reader]);
+  const all = useMemo(() => allColumns(keys, reader, source.sectionAt(0)), [keys, reader, source]);
   const columns = useMemo(() => shownColumns(all, address.columns), [all, address.columns]);
   const order = orderOf(address, all);
   const { key: orderKey = null, isDescending = false } = order ?? {};

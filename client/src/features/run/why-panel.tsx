@@ -3,7 +3,7 @@ import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
 import type { ViewResult } from '#shared/sweep/result.ts';
 import { checkLabel } from '#shared/print/check-labels.ts';
 import { formatDifferenceTo, formatNumber, formatWhole } from '#shared/print/format-quantity.ts';
-import { sizeText, steelText } from '#shared/print/section-text.ts';
+import { barsText, sizeText, steelText } from '#shared/print/section-text.ts';
 import { measureLabel } from '#client/src/lib/measure-labels.ts';
 import { RatioBar } from '#client/src/ui/ratio-bar.tsx';
 import { TableFrame } from '#client/src/ui/table-frame.tsx';
@@ -72,10 +72,17 @@ function Nearest({ missed, props }: { readonly missed: MissedCheck; readonly pro
   if (nearest === null)
     return (
       <td colSpan={3} className="text-muted">
-        none fails it alone with numbers
+        {missed.failedOnlyThis > 0
+          ? 'bars that cannot be placed have no numbers'
+          : 'no section fails it alone'}
       </td>
     );
   const { section } = source.evaluatedAt(nearest.index);
+  const { reinforcement } = section;
+  const bars =
+    reinforcement.kind === 'bars'
+      ? `${barsText(reinforcement.tension)} + ${barsText(reinforcement.compression)}`
+      : steelText(section, reader.units);
   const best = result.front[0]?.x ?? null;
   const { kind } = measureLabel(x, reader.units);
   return (
@@ -84,14 +91,14 @@ function Nearest({ missed, props }: { readonly missed: MissedCheck; readonly pro
         <button
           type="button"
           aria-pressed={selectedIndex === nearest.index}
-          className="num text-left underline decoration-concrete-edge hover:decoration-current aria-pressed:font-semibold"
+          className="num text-left whitespace-nowrap underline decoration-concrete-edge hover:decoration-current aria-pressed:font-semibold"
           onClick={() => onSelect(nearest.index)}
         >
           {sizeText(section, reader.units)}
-          <span className="block text-steel">{steelText(section, reader.units)}</span>
+          <span className="block whitespace-nowrap text-steel">{bars}</span>
         </button>
       </td>
-      <td className="min-w-44">
+      <td className="min-w-48">
         <RatioBar ratio={nearest.result?.ratio ?? null} passes={false} />
       </td>
       <td className="figure">
@@ -133,17 +140,11 @@ export function WhyPanel(props: WhyPanelProps) {
               fail nothing else
             </span>
           </p>
-          <TableFrame label="Checks, what they took and what they cost" minWidth="44rem">
+          <TableFrame label="Checks, what they took and what they cost" minWidth="42rem">
             <thead>
               <tr>
                 <th scope="col">Check</th>
                 <th scope="col">Sections that fail it</th>
-                <th scope="col" className="figure">
-                  Share
-                </th>
-                <th scope="col" className="figure">
-                  Only this
-                </th>
                 <th scope="col">Best without it</th>
                 <th scope="col">Misses by</th>
                 <th scope="col" className="figure">
@@ -154,7 +155,7 @@ export function WhyPanel(props: WhyPanelProps) {
             </thead>
             <tbody>
               {missed.map((one) => (
-                <tr key={one.check}>
+                <tr key={one.check} className="middle">
                   <th scope="row">
                     {checkLabel(one.check).name}
                     <span className="num block text-xs font-normal text-muted">
@@ -163,9 +164,11 @@ export function WhyPanel(props: WhyPanelProps) {
                   </th>
                   <td>
                     <FailedBar missed={one} most={most} />
+                    <span className="num mt-1 block text-xs whitespace-nowrap">
+                      {percent(one.failed, result.evaluated)}
+                      <span className="text-muted">, {formatWhole(one.failedOnlyThis)} only this</span>
+                    </span>
                   </td>
-                  <td className="figure">{percent(one.failed, result.evaluated)}</td>
-                  <td className="figure">{formatWhole(one.failedOnlyThis)}</td>
                   <Nearest missed={one} props={props} />
                 </tr>
               ))}
