@@ -7,10 +7,17 @@ type FormNumberFieldProps<F extends FieldValues> = Omit<
 > & {
   readonly control: Control<F>;
   readonly name: FieldPath<F>;
+  /** An empty field is left out of the record instead of being null in it. */
+  readonly isOptional?: boolean;
 };
 
 /** A NumberField bound to one path of a form; the form holds SI. */
-export function FormNumberField<F extends FieldValues>({ control, name, ...field }: FormNumberFieldProps<F>) {
+export function FormNumberField<F extends FieldValues>({
+  control,
+  name,
+  isOptional = false,
+  ...field
+}: FormNumberFieldProps<F>) {
   return (
     <Controller
       control={control}
@@ -21,7 +28,7 @@ export function FormNumberField<F extends FieldValues>({ control, name, ...field
           name={bound.name}
           inputRef={bound.ref}
           value={bound.value ?? null}
-          onChange={bound.onChange}
+          onChange={(stored) => bound.onChange(isOptional ? (stored ?? undefined) : stored)}
           onBlur={bound.onBlur}
           error={field.error ?? fieldState.error?.message}
         />

@@ -70,7 +70,7 @@ describe('candidates side by side', () => {
     expect(row([a, b], 'costPerM', 'b').baseline ?? null).toBeNull();
   });
 
-  it('adds up the tonnes of one bar size over its positions, sizes in order, absent ones blank', () => {
+  it('lists the tonnes of each bar size by position, sizes in order, absent ones blank', () => {
     const many = candidate({
       id: 'm',
       lines: [

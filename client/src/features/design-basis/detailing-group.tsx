@@ -1,0 +1,74 @@
+import { useWatch, type UseFormReturn } from 'react-hook-form';
+import type { ProjectDesignBasis } from '#shared/contract/design-basis.ts';
+import { BARS } from '#shared/engine/bars.ts';
+import { ruleSetOf } from '#shared/engine/rules/rule-set-of.ts';
+import { seismicSystemsOf } from '#shared/engine/seismic.ts';
+import { leastStirrupSpacingMm, stirrupStepMm } from '#shared/engine/stirrup-design.ts';
+import { optionsOf } from '#shared/print/basis-labels.ts';
+import { seismicSystemLabel } from '#shared/print/ductility-labels.ts';
+import { fieldText } from '#shared/print/format-quantity.ts';
+import { FieldGroup } from '#client/src/ui/field-group.tsx';
+import { FormNumberField } from '#client/src/ui/form-number-field.tsx';
+import { SelectField } from '#client/src/ui/select-field.tsx';
+
+/** Side bars of beams are small; thicker ones count in strength in every office. */
+const LARGEST_SKIN_BAR_MM = 20;
+
+/** What stirrups, side bars and hoops are built by. */
+export function DetailingGroup({ form }: { readonly form: UseFormReturn<ProjectDesignBasis> }) {
+  const { control, register, formState } = form;
+  const [units, ruleSet, barStandard] = useWatch({ control, name: ['units', 'ruleSet', 'barStandard'] });
+  const rules = ruleSetOf({ ruleSet });
+  const sizes = BARS[barStandard].filter((bar) => bar.diameterMm <= LARGEST_SKIN_BAR_MM);
+  return (
+    <FieldGroup title="Stirrups, side bars, seismic">
+      <FormNumberField
+        control={control}
+        name="stirrupStepMm"
+        isOptional
+        kind="length"
+        units={units}
+        label="Step of stirrup spacings"
+        placeholder={fieldText(stirrupStepMm({}, rules.units), 'length', units)}
+        hint="Designed spacings are multiples of it. Empty: the number shown."
+      />
+      <FormNumberField
+        control={control}
+        name="leastStirrupSpacingMm"
+        isOptional
+        kind="length"
+        units={units}
+        label="Closest stirrups"
+        placeholder={fieldText(leastStirrupSpacingMm({}, rules.units), 'length', units)}
+        hint="Closer ones are not built: the section fails. Empty: the number shown."
+      />
+      <SelectField
+        label="Side bars of deep beams"
+        hint={`${rules.clauses.skinSteel}. Without a size a deep beam fails that check.`}
+        options={[
+          { value: '', label: 'none' },
+          ...sizes.map(({ designation }) => ({ value: designation, label: designation })),
+        ]}
+        error={formState.errors.skinBar?.message}
+        {...register('skinBar', { setValueAs: (bar: string | null) => (bar === '' ? null : bar) })}
+      />
+      <SelectField
+        label="Seismic system"
+        hint="Of the frame the beams belong to. Its detailing is then checked."
+        options={optionsOf(seismicSystemsOf(rules), seismicSystemLabel)}
+        error={formState.errors.seismicSystem?.message}
+        {...register('seismicSystem')}
+      />
+      <FormNumberField
+        control={control}
+        name="barOversize"
+        isOptional
+        kind="ratio"
+        units={units}
+        label="Outside of a bar over its name"
+        placeholder="1"
+        hint="Deformations make bars 1.10 to 1.18 times as thick where they are fitted. Empty: as named."
+      />
+    </FieldGroup>
+  );
+}
