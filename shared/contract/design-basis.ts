@@ -48,20 +48,29 @@ export const priceBookSchema = ratesSchema.extend({
 });
 export type PriceBook = z.infer<typeof priceBookSchema>;
 
-/** Laws of the full curve; limits catch slips, what is sensible is the engineer's. */
-const curveChoicesSchema = z.object({
-  concreteLaw: z.enum(CONCRETE_LAW_IDS, { error: 'Choose a law of the concrete' }),
-  steelLaw: z.enum(STEEL_LAW_IDS, { error: 'Choose a law of the steel' }),
-  peakShare: bounded('Peak stress over f′c', 0.3, 1.2, '').optional(),
-  peakStrain: bounded('Strain at peak', 0.0005, 0.02, '').optional(),
-  crushingStrain: bounded('Crushing strain', 0.001, 0.1, '').optional(),
-  ruptureStrain: bounded('Strain at which bars break', 0.005, 0.5, '').optional(),
-  strengthRatio: bounded('fu over fy', 1, 2, '').optional(),
-  hardeningStrain: bounded('Strain at which hardening begins', 0.001, 0.1, '').optional(),
-  hoopYieldMPa: fyMPaSchema.optional(),
-  hoopRuptureStrain: bounded('Strain at which hoops break', 0.005, 0.5, '').optional(),
-  hasTensionBeforeCracking: z.boolean().optional(),
-}) satisfies z.ZodType<CurveChoices>;
+/** Laws of the full curve; what is left out takes its law's own value. The limits catch slips and keep a law whole: a bar breaks after it hardens. */
+const curveChoicesSchema = z
+  .object({
+    concreteLaw: z.enum(CONCRETE_LAW_IDS, { error: 'Choose a concrete law' }),
+    steelLaw: z.enum(STEEL_LAW_IDS, { error: 'Choose a steel law' }),
+    peakShare: bounded('Peak stress over f′c', 0.5, 1.2, '').optional(),
+    peakStrain: bounded('Strain at peak stress', 0.001, 0.01, '').optional(),
+    crushingStrain: bounded('Crushing strain', 0.002, 0.1, '').optional(),
+    ruptureStrain: bounded('Rupture strain of bars', 0.02, 0.3, '').optional(),
+    strengthRatio: bounded('fu over fy', 1, 2, '').optional(),
+    hardeningStrain: bounded('Strain at the start of hardening', 0.001, 0.015, '').optional(),
+    hoopYieldMPa: fyMPaSchema.optional(),
+    hoopRuptureStrain: bounded('Rupture strain of hoops', 0.02, 0.3, '').optional(),
+    hasTensionBeforeCracking: z.boolean().optional(),
+  })
+  .superRefine(({ peakStrain, crushingStrain }, context) => {
+    if (peakStrain !== undefined && crushingStrain !== undefined && crushingStrain < peakStrain)
+      context.addIssue({
+        code: 'custom',
+        path: ['crushingStrain'],
+        message: 'Concrete is crushed beyond its peak: enter a strain above that of the peak',
+      });
+  }) satisfies z.ZodType<CurveChoices>;
 
 /** What decides numbers, without the rates: those live in the price book and are joined when a run is frozen. */
 export const engineBasisSchema = z.object({
@@ -79,7 +88,7 @@ export const engineBasisSchema = z.object({
   stirrupStepMm: bounded('Step of stirrup spacings', 1, 300, 'mm').optional(),
   leastStirrupSpacingMm: bounded('Closest stirrups', 25, 600, 'mm').optional(),
   barOversize: bounded('Outside of a bar over its name', 1, 1.3, '').optional(),
-  ductilityMeasure: z.enum(DUCTILITY_MEASURES).optional(),
+  ductilityMeasure: z.enum(DUCTILITY_MEASURES, { error: 'Choose a ductility measure' }).optional(),
   curve: curveChoicesSchema.optional(),
   nationalValues: nationalValuesSchema.nullable().optional(),
 }) satisfies z.ZodType<Omit<DesignBasis, 'rates'>>;

@@ -3,11 +3,12 @@ import { ruleSetOf } from './rules/rule-set-of.ts';
 import type { DesignBasis, DuctilityMeasure } from './section.ts';
 
 /** What μφ is held against the target; the closed path unless the basis says otherwise. */
-export const ductilityMeasureOf = (basis: DesignBasis): DuctilityMeasure =>
+export const ductilityMeasureOf = (basis: Pick<DesignBasis, 'ductilityMeasure'>): DuctilityMeasure =>
   basis.ductilityMeasure ?? 'closed';
 
 /** Whether μφ of this basis is read off the full curve. */
-export const isCurveMeasure = (basis: DesignBasis) => ductilityMeasureOf(basis) !== 'closed';
+export const isCurveMeasure = (basis: Pick<DesignBasis, 'ductilityMeasure'>) =>
+  ductilityMeasureOf(basis) !== 'closed';
 
 /**
  * The laws of the full curve: the basis's own, else those of its design code. Where a code works with design strengths,

@@ -27,7 +27,7 @@ export interface CurveChoices {
   readonly strengthRatio?: number | undefined;
   /** Strain at which hardening begins. */
   readonly hardeningStrain?: number | undefined;
-  /** Yield strength of the hoops, MPa; that of the bars unless set. */
+  /** Yield strength of the hoops, MPa; that of the stirrups unless set. */
   readonly hoopYieldMPa?: number | undefined;
   /** Strain at which a hoop breaks; 0.12 unless set. */
   readonly hoopRuptureStrain?: number | undefined;

@@ -54,9 +54,9 @@ export interface CurveModel {
 }
 
 export interface CurveInput {
-  /** Checked by `evaluateSection` or of the same kind; its bars placed. */
+  /** Checked by `evaluateSection` or of the same kind; its bars placed, its stirrups as built. */
   readonly section: SectionInput;
-  readonly layout: SteelLayout;
+  readonly layout: Pick<SteelLayout, 'depths' | 'areas' | 'dMm' | 'dtMm' | 'asMm2' | 'asPrimeMm2'>;
   /** Null for plain layers. */
   readonly arrangement: Arrangement | null;
   readonly basis: DesignBasis;
@@ -68,11 +68,48 @@ export interface CurveInput {
  * @throws InvalidSectionError for a choice that is not a number above zero.
  */
 export function curveModel(input: CurveInput): CurveModel {
-  const { section, layout, basis, choices } = input;
+  const { section, basis, choices } = input;
+  return curveModelOf(input, curveMaterials(section, basis, choices));
+}
+
+/** What a model takes from the materials and the basis alone, so that sections of the same materials can share it. */
+export interface CurveMaterials {
+  readonly rules: RuleSet;
+  /** Law of an unconfined section, and of the cover round a confined core. */
+  readonly plain: ConcreteLaw;
+  readonly cover: ConcreteLaw;
+  readonly steel: SteelLaw;
+  readonly tension: TensionBeforeCracking;
+}
+
+/** @throws InvalidSectionError for a choice that is not a number above zero. */
+export function curveMaterials(
+  { fcMPa, fyMPa }: Pick<SectionInput, 'fcMPa' | 'fyMPa'>,
+  basis: DesignBasis,
+  choices: CurveChoices,
+): CurveMaterials {
   assertChoices(choices);
   const rules = ruleSetOf(basis);
-  const ecMPa = rules.concreteModulusMPa(section.fcMPa);
-  const { cover, core, confinement, confinementNote } = concreteOf(input, ecMPa);
+  const ecMPa = rules.concreteModulusMPa(fcMPa);
+  const { concreteLaw, peakShare, peakStrain } = choices;
+  const plain = unconfinedLaw(concreteLaw, fcMPa, ecMPa, choices);
+  return {
+    rules,
+    plain,
+    // a crushing strain set by the caller is the core's
+    cover: isConfinedLaw(concreteLaw)
+      ? unconfinedLaw(concreteLaw, fcMPa, ecMPa, { peakShare, peakStrain })
+      : plain,
+    steel: steelOf(rules.designYieldMPa(fyMPa), basis.esMPa, choices),
+    tension: { ecMPa, crackingStrain: rules.ruptureModulusMPa(fcMPa) / ecMPa },
+  };
+}
+
+/** `curveModel` with its materials given; to be those of its section and basis. */
+export function curveModelOf(input: CurveInput, materials: CurveMaterials): CurveModel {
+  const { section, layout, basis } = input;
+  const { rules, steel, tension } = materials;
+  const { cover, core, confinement, confinementNote } = concreteOf(input, materials);
   const coreTopMm = core && confinement ? confinement.coreTopMm : 0;
   return {
     widthMm: section.widthMm,
@@ -85,7 +122,7 @@ export function curveModel(input: CurveInput): CurveModel {
     ...overhangOf(section, rules),
     confinement,
     confinementNote,
-    steel: steelOf(rules.designYieldMPa(section.fyMPa), basis.esMPa, choices),
+    steel,
     depths: layout.depths,
     areas: layout.areas,
     isDisplacedDeducted: basis.displacedConcrete !== 'ignore',
@@ -93,7 +130,7 @@ export function curveModel(input: CurveInput): CurveModel {
     deepestMm: layout.dtMm,
     crushingDepthMm: coreTopMm,
     crushingStrain: (core ?? cover).crushingStrain,
-    tension: { ecMPa, crackingStrain: rules.ruptureModulusMPa(section.fcMPa) / ecMPa },
+    tension,
   };
 }
 
@@ -140,20 +177,22 @@ interface Concrete {
   readonly confinementNote: string;
 }
 
-function concreteOf(input: CurveInput, ecMPa: number): Concrete {
-  const { section, choices } = input;
+/** Laws that take the section's own hoops. */
+export const isConfinedLaw = (law: ConcreteLawId) =>
+  law === 'mander-confined' || law === 'kent-park-confined';
+
+function concreteOf(input: CurveInput, { plain, cover }: CurveMaterials): Concrete {
+  const { section, basis, choices } = input;
   const law = choices.concreteLaw;
-  const plain = (settings: LawSettings) => unconfinedLaw(law, section.fcMPa, ecMPa, settings);
   const unconfined = (confinementNote: string): Concrete => ({
-    cover: plain(choices),
+    cover: plain,
     core: null,
     confinement: null,
     confinementNote,
   });
-  if (law !== 'mander-confined' && law !== 'kent-park-confined')
-    return unconfined('unconfined by choice of law');
+  if (!isConfinedLaw(law)) return unconfined('unconfined by choice of law');
   const hoops = findConfinement(input, {
-    yieldMPa: choices.hoopYieldMPa ?? section.fyMPa,
+    yieldMPa: choices.hoopYieldMPa ?? basis.fytMPa,
     ruptureStrain: choices.hoopRuptureStrain ?? 0.12,
   });
   if (!hoops) return unconfined('no hoops round a core: taken as unconfined');
@@ -166,8 +205,6 @@ function concreteOf(input: CurveInput, ecMPa: number): Concrete {
     law === 'mander-confined'
       ? manderConfined(section.fcMPa, hoops, choices)
       : kentParkConfined(section.fcMPa, hoops, choices);
-  // a crushing strain set by the caller is the core's
-  const cover = plain({ peakShare: choices.peakShare, peakStrain: choices.peakStrain });
   return { cover, core, confinement: hoops, confinementNote: 'core inside the hoop centre lines confined' };
 }
 

@@ -3,8 +3,10 @@ import type { ResolvedFlange } from '../engine/flange.ts';
 import { isAtLeastTimes, isAtMostTimes, isWithinLength, requiredSteelMm2 } from '../engine/limits.ts';
 import { MEASURE_IDS } from '../engine/measures.ts';
 import { neutralAxisDepth } from '../engine/neutral-axis.ts';
+import { isCurveMeasure } from '../engine/curve-basis.ts';
 import type { Combination } from './combination.ts';
 import { rowAmounts, writeAmounts } from './kernel-amounts.ts';
+import { KernelCurve } from './kernel-curve.ts';
 import { fixedMask, KernelDetailing } from './kernel-detailing.ts';
 import {
   BAR_FIT,
@@ -58,6 +60,8 @@ export class Kernel {
   private readonly measures = new Float64Array(MEASURE_IDS.length);
   private readonly detailing: KernelDetailing;
   private readonly seismic: KernelSeismic | null;
+  /** Null where μφ is the closed path's. */
+  private readonly curve: KernelCurve | null;
   private readonly ultimate;
   private readonly cracked = {
     widthMm: 0,
@@ -79,6 +83,7 @@ export class Kernel {
     const { basis } = prepared.problem;
     this.detailing = new KernelDetailing(prepared);
     this.seismic = prepared.seismic && new KernelSeismic(prepared, prepared.seismic, MAX_LAYERS);
+    this.curve = isCurveMeasure(basis) ? new KernelCurve(prepared) : null;
     this.ultimate = {
       blockForcePerMm: 0,
       flangeForcePerMm: 0,
@@ -150,9 +155,10 @@ export class Kernel {
     leastSteelSection.widthMm = widthMm;
     let leastSteelPerMm = ruleSet.leastSteelMm2(leastSteelSection);
     const asMm2 = tension.areaMm2;
-    const { detailing, seismic, layers } = this;
+    const { detailing, seismic, layers, curve } = this;
     detailing.begin(combination);
     seismic?.begin(combination);
+    curve?.begin(combination);
 
     const nc = compression.layerCount;
     const n = nc + tension.layerCount;
@@ -208,10 +214,10 @@ export class Kernel {
       const epsilonT = (epsilonCu * (dt - c)) / c;
       const design = ruleSet.strengthReduction(epsilonT, epsilonTy) * nominal;
       const kd = crackedAxisDepth(depths, areas, n, cracked);
-      const muPhi = epsilonCu / c / (epsilonTy / ((isYieldAtCentroid ? d : dt) - kd));
+      let muPhi = epsilonCu / c / (epsilonTy / ((isYieldAtCentroid ? d : dt) - kd));
 
       if (muNmm !== null && !(design >= muNmm)) mask |= STRENGTH;
-      if (target !== null && !(muPhi >= target)) mask |= DUCTILITY;
+      if (curve === null && target !== null && !(muPhi >= target)) mask |= DUCTILITY;
       if (!(epsilonT >= leastStrain)) mask |= TENSION_STRAIN;
       if (!(c <= largestAxisShare * d)) mask |= AXIS_DEPTH;
       if (faceSteelShare !== null && !(largestFaceSteelMm2 <= faceSteelShare * widthMm * h))
@@ -221,6 +227,10 @@ export class Kernel {
         mask |= LEAST_STEEL;
       mask |= detailing.placedMaskAt(j, h, d, depths[nc]!);
       if (seismic !== null) mask |= seismic.placedMaskAt(h, d, layers, nominal);
+      if (curve !== null) {
+        muPhi = mask === 0 ? curve.muPhi(row.firstIndex + j, layers, d, detailing) : NaN;
+        if (mask === 0 && target !== null && !(muPhi >= target)) mask = DUCTILITY;
+      }
       tally.countMask(mask);
 
       if (mask !== 0 && (mask & (mask - 1)) !== 0 && recorder === null) continue;
@@ -228,16 +238,23 @@ export class Kernel {
       measures[MU_PHI] = muPhi;
       measures[DESIGN_STRENGTH] = design;
       measures[UTILISATION] = muNmm === null ? NaN : muNmm / design;
-      if (mask === 0) {
-        feasibleInRow++;
-        depthFeasible[j]!++;
-        tally.addFeasible(row.firstIndex + j, measures);
-      } else if ((mask & (mask - 1)) === 0)
-        tally.addFailingOnly(31 - Math.clz32(mask), row.firstIndex + j, measures);
       if (recorder) {
         const place = row.firstIndex + j - recorder.first;
         recorder.masks[place] = mask;
         recorder.measures.set(measures, place * MEASURE_IDS.length);
+      }
+      if (mask === 0) {
+        feasibleInRow++;
+        depthFeasible[j]!++;
+        tally.addFeasible(row.firstIndex + j, measures);
+      } else if ((mask & (mask - 1)) === 0) {
+        const failed = 31 - Math.clz32(mask);
+        if (curve !== null && mask !== DUCTILITY) {
+          if (!tally.wouldBeBestWithout(failed, measures, MU_PHI)) continue;
+          measures[MU_PHI] = curve.muPhi(row.firstIndex + j, layers, d, detailing);
+          if (target !== null && !(measures[MU_PHI]! >= target)) continue;
+        }
+        tally.addFailingOnly(failed, row.firstIndex + j, measures);
       }
     }
     return feasibleInRow;

@@ -1,8 +1,12 @@
+import { isCurveMeasure } from '../engine/curve-basis.ts';
+import type { DesignBasis } from '../engine/section.ts';
 import type { AxisDefinition, SpaceDefinition } from './problem.ts';
 import { axisLengths, spaceSize } from './space.ts';
 
 /** Largest run accepted: about a minute on two threads. Larger spaces are refused with the axis to coarsen. */
 export const MAX_SECTIONS_PER_RUN = 200_000_000;
+/** The same where μφ is read off the full curve, were every section to meet the other checks: a curve takes some 40 µs. */
+export const MAX_SECTIONS_WITH_CURVES = 4_000_000;
 
 const NUMERIC_AXES = ['width', 'depth', 'fc', 'fy', 'cover'] as const;
 const AXIS_NAMES = {
@@ -22,6 +26,8 @@ export interface SizeRefusal {
   readonly issues: readonly { readonly path: (string | number)[]; readonly message: string }[];
 }
 
+const WITH_CURVES = ' where ductility is read off the full curve';
+
 const print = (count: number) => count.toLocaleString('en-US');
 
 function longest(axes: readonly NamedAxis[], lengths: Readonly<Record<NamedAxis, number>>): NamedAxis {
@@ -36,10 +42,15 @@ function fieldOf(space: SpaceDefinition, axis: NamedAxis): string {
   return definition.kind === 'range' ? 'step' : 'values';
 }
 
-/** Why a space is too large to run and which of its axes to coarsen; null where it is not. */
-export function sizeRefusal({ space }: { readonly space: SpaceDefinition }): SizeRefusal | null {
+/** Why a space is too large to run on a basis and which of its axes to coarsen; null where it is not. */
+export function sizeRefusal(
+  { space }: { readonly space: SpaceDefinition },
+  basis: Pick<DesignBasis, 'ductilityMeasure'>,
+): SizeRefusal | null {
   const count = spaceSize(space);
-  if (!(count > MAX_SECTIONS_PER_RUN)) return null;
+  const isCurve = isCurveMeasure(basis);
+  const most = isCurve ? MAX_SECTIONS_WITH_CURVES : MAX_SECTIONS_PER_RUN;
+  if (!(count > most)) return null;
   const lengths = axisLengths(space);
   const numeric = longest(NUMERIC_AXES, lengths);
   // With a single value on every numeric axis there is nothing to coarsen but the steel.
@@ -47,7 +58,7 @@ export function sizeRefusal({ space }: { readonly space: SpaceDefinition }): Siz
   const field = fieldOf(space, axis);
   const remedy = field === 'step' ? 'Use a larger step' : 'Leave some out';
   return {
-    message: `${print(count)} sections are more than the ${print(MAX_SECTIONS_PER_RUN)} that one run takes`,
+    message: `${print(count)} sections are more than the ${print(most)} that one run takes${isCurve ? WITH_CURVES : ''}`,
     issues: [
       {
         path: ['space', axis, field],

@@ -74,6 +74,18 @@ export class Tally {
     if (x >= 0 && y >= 0) this.density.add(x, y);
   }
 
+  /**
+   * Whether a section that fails exactly the check of this bit would be the best without it, if the measure at `unknown`,
+   * which costs much to find, turned out well.
+   */
+  wouldBeBestWithout(bit: number, measures: Float64Array, unknown: number): boolean {
+    const { xMeasure, yMeasure } = this;
+    const isYPossible = yMeasure === unknown || !Number.isNaN(measures[yMeasure]);
+    if (xMeasure === unknown) return isYPossible;
+    const x = SIGNS[xMeasure]! * measures[xMeasure]!;
+    return isYPossible && (x < this.withoutX[bit]! || (this.withoutIndex[bit] === -1 && !Number.isNaN(x)));
+  }
+
   /** A section that fails exactly the check of this bit and has numbers. */
   addFailingOnly(bit: number, index: number, measures: Float64Array): void {
     const x = SIGNS[this.xMeasure]! * measures[this.xMeasure]!;

@@ -1,5 +1,6 @@
 import fc from 'fast-check';
 import { BARS } from '#shared/engine/bars.ts';
+import { CONCRETE_LAW_IDS, STEEL_LAW_IDS, type CurveChoices } from '#shared/engine/curve-choices.ts';
 import {
   BAR_STANDARDS,
   BEND_ALLOWANCES,
@@ -74,6 +75,13 @@ const areaSets = (min: number): fc.Arbitrary<SteelSetsDefinition> =>
   });
 
 /** Slabs on webs to 700 mm in sections from 150 mm on, at either face. */
+const curve: fc.Arbitrary<CurveChoices> = fc.record({
+  concreteLaw: fc.constantFrom(...CONCRETE_LAW_IDS),
+  steelLaw: fc.constantFrom(...STEEL_LAW_IDS),
+  crushingStrain: fc.constantFrom(undefined, 0.003),
+  hoopYieldMPa: fc.constantFrom(undefined, 300),
+});
+
 const flange: fc.Arbitrary<Flange> = fc.record({
   shape: fc.constantFrom(...FLANGE_SHAPES),
   thicknessMm: between(40, 145),
@@ -166,3 +174,18 @@ export const randomProblem: fc.Arbitrary<SweepProblem> = fc
     });
     return fc.record({ space, basis, demand, rules: rules(BARS[standard].map((b) => b.designation)) });
   });
+
+/** The same with μφ read off the full curve. */
+const randomCurveProblem: fc.Arbitrary<SweepProblem> = fc
+  .record({
+    problem: randomProblem,
+    ductilityMeasure: fc.constantFrom('curve-first-yield' as const, 'curve-bilinear' as const),
+    curve: fc.option(curve, { nil: undefined }),
+  })
+  .map(({ problem, ...measured }) => ({ ...problem, basis: { ...problem.basis, ...measured } }));
+
+/** A curve costs a hundred times the rest of a section: one problem in eight draws them. */
+export const randomProblemByAnyMeasure = fc.oneof(
+  { weight: 7, arbitrary: randomProblem },
+  { weight: 1, arbitrary: randomCurveProblem },
+);

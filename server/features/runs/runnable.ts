@@ -11,7 +11,7 @@ import { findMissingInputs } from './available-measures.ts';
 /** Refuses a definition that cannot be run as it is, naming the fields of the sweep's form. */
 export function requireRunnable(definition: SweepDefinition, basis: DesignBasis, units: UnitSystem): void {
   const { space, demand, rules, view } = definition;
-  const refusal = sizeRefusal(definition);
+  const refusal = sizeRefusal(definition, basis);
   if (refusal !== null)
     throw tooManySections(
       refusal.message,

@@ -42,7 +42,7 @@ export interface HoopSteel {
 /** The placed bars are wanted for w′; without them (plain layers) the hoop's corners and legs alone are held points. */
 export interface HoopedSection {
   readonly section: SectionInput;
-  readonly layout: SteelLayout;
+  readonly layout: Pick<SteelLayout, 'asMm2' | 'asPrimeMm2'>;
   readonly arrangement: Arrangement | null;
   readonly basis: DesignBasis;
 }

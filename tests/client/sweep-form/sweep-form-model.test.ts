@@ -207,5 +207,6 @@ describe('the size while typing', () => {
     >[1][number];
     expect(estimatedMs(2_000_000, [run]) - estimatedMs(1_000_000, [run])).toBeCloseTo(1000, 6);
     expect(estimatedMs(2_000_000, [{ ...run, evaluated: 10 }])).toBe(estimatedMs(2_000_000, []));
+    expect(estimatedMs(2_000_000, [run], true)).toBeGreaterThan(4 * estimatedMs(2_000_000, [run]));
   });
 });

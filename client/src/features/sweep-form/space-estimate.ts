@@ -9,6 +9,8 @@ import { parseCounts, parseValueList } from './value-list.ts';
 
 /** Two threads of an ordinary machine; corrected by this sweep's own last run where there is one. */
 const USUAL_SECTIONS_PER_SECOND = 8_000_000;
+/** The same where μφ is read off the full curve: it is drawn for about one section in five. */
+const USUAL_WITH_CURVES_PER_SECOND = 200_000;
 /** Handing a run over and back takes about this long however small it is. */
 const HANDOVER_MS = 150;
 /** A run shorter than this says nothing about speed. */
@@ -51,7 +53,9 @@ export function steelCount(steel: SteelValues, units: UnitSystem): number | null
   return sets > 0 ? sets : null;
 }
 
-export function estimatedMs(sections: number, runs: readonly RunSummary[]): number {
+/** A run by the closed path says nothing of one that draws curves: for those only the usual rate is taken. */
+export function estimatedMs(sections: number, runs: readonly RunSummary[], isOffCurve = false): number {
+  if (isOffCurve) return HANDOVER_MS + (1000 * sections) / USUAL_WITH_CURVES_PER_SECOND;
   const telling = runs.find(
     (run) => run.state === 'finished' && run.elapsedMs !== null && run.evaluated >= TELLING_SECTIONS,
   );

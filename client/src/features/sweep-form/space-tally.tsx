@@ -1,5 +1,6 @@
 import { useMemo } from 'react';
 import type { Project, RunSummary } from '#shared/contract/records.ts';
+import { isCurveMeasure } from '#shared/engine/curve-basis.ts';
 import { sizeRefusal } from '#shared/sweep/size-limit.ts';
 import { spaceSize } from '#shared/sweep/space.ts';
 import { formatDuration, formatNumber, formatWhole } from '#shared/print/format-quantity.ts';
@@ -19,9 +20,13 @@ const timeText = (ms: number): string => (ms < 1000 ? 'less than 1 s' : formatDu
 /** How large the space is as it stands, what of it cannot be built anyway, and how long a run will take. */
 export function SpaceTally({ project, reading, runs }: SpaceTallyProps) {
   const definition = reading.kind === 'complete' ? reading.input.definition : null;
-  const refusal = definition === null ? null : sizeRefusal(definition);
+  const { designBasis } = project;
+  const refusal = definition === null ? null : sizeRefusal(definition, designBasis);
   const problem = useMemo(
-    () => (definition === null || sizeRefusal(definition) !== null ? null : problemOf(project, definition)),
+    () =>
+      definition === null || sizeRefusal(definition, project.designBasis) !== null
+        ? null
+        : problemOf(project, definition),
     [definition, project],
   );
   const cannotFit = useCannotFit(problem);
@@ -48,7 +53,9 @@ export function SpaceTally({ project, reading, runs }: SpaceTallyProps) {
         <div className="flex justify-between gap-4">
           <dt className="text-muted">A run takes about</dt>
           <dd className="num">
-            {size === null || refusal !== null ? '…' : timeText(estimatedMs(size, runs))}
+            {size === null || refusal !== null
+              ? '…'
+              : timeText(estimatedMs(size, runs, isCurveMeasure(designBasis)))}
           </dd>
         </div>
       </dl>

@@ -48,7 +48,7 @@ export function SweepForm(props: SweepFormProps) {
   const reading = useMemo(() => readSweepForm(form, units), [form, units]);
   useEffect(preloadChart, []);
 
-  const size = reading.kind === 'complete' ? sizeRefusal(reading.input.definition) : null;
+  const size = reading.kind === 'complete' ? sizeRefusal(reading.input.definition, project.designBasis) : null;
   const errors = useMemo(() => {
     const own = reading.kind === 'incomplete' ? reading.errors : errorsByField(size?.issues ?? []);
     const theirs = errorsByField(answered === form ? issuesOf(refusal) : [], FORM_ROOT);
