@@ -99,6 +99,40 @@ const strength = {
   },
 } as const satisfies Record<string, TestedProperty>;
 
+const flanges = {
+  'flange-of-web': {
+    kind: 'property',
+    statement: 'A T whose flange is as wide as its web is the rectangle, to the bit, in every result',
+    of: 'sections',
+    runs: 500,
+    seed: 61,
+  },
+  'flange-width': {
+    kind: 'property',
+    statement:
+      'Nominal strength rises with the width of a flange in compression, and both neutral axes lie higher',
+    of: 'sections',
+    runs: 500,
+    seed: 62,
+  },
+  'flange-hogging': {
+    kind: 'property',
+    statement: 'With the slab in tension a T is its web at yield and at ultimate, and cracks later',
+    of: 'sections',
+    runs: 500,
+    seed: 63,
+  },
+  'flange-equilibrium': {
+    kind: 'comparison',
+    statement:
+      'The neutral axis of a T balances to 1e-9 of the concrete force, is the deepest axis that does, and equals an independent bisection where displaced concrete is ignored',
+    of: 'sections',
+    runs: 1500,
+    seed: 64,
+    atLeast: { count: 300, what: 'blocks deeper than the flange' },
+  },
+} as const satisfies Record<string, TestedProperty>;
+
 const bars = {
   'bars-remeasured': {
     kind: 'comparison',
@@ -237,7 +271,7 @@ const curves = {
   },
 } as const satisfies Record<string, TestedProperty>;
 
-export const PROPERTIES = { ...ductility, ...strength, ...bars, ...curves, ...sweeps };
+export const PROPERTIES = { ...ductility, ...strength, ...flanges, ...bars, ...curves, ...sweeps };
 
 export const TESTED_PROPERTIES: readonly TestedProperty[] = Object.values(PROPERTIES);
 
