@@ -8,6 +8,7 @@ import { FLEXURE_CASES } from './flexure-cases.ts';
 import { HAND_WORKED_CASES } from './hand-worked-case.ts';
 import { OPTIMUM_CASES } from './optimum-cases.ts';
 import type { ComputeCase } from './published-case.ts';
+import { SEISMIC_CASES } from './seismic-cases.ts';
 
 /** How each case is computed, by its id. */
 export const COMPUTATIONS: Readonly<Record<string, ComputeCase>> = {
@@ -17,6 +18,7 @@ export const COMPUTATIONS: Readonly<Record<string, ComputeCase>> = {
   ...BAR_CASES,
   ...CURVE_CASES,
   ...DETAILING_CASES,
+  ...SEISMIC_CASES,
   ...EUROCODE_CASES,
   ...HAND_WORKED_CASES,
   ...OPTIMUM_CASES,
