@@ -43,7 +43,7 @@ export function calloutsOf(section: SectionInput, geometry: SectionGeometry, uni
       ? []
       : [
           {
-            text: `c ${formatQuantity(geometry.neutralAxisMm, 'length', units, { hideUnit: true, digits: 3 })}`,
+            text: `${geometry.axisSymbol} ${formatQuantity(geometry.neutralAxisMm, 'length', units, { hideUnit: true, digits: 3 })}`,
             tone: 'ink',
             xMm: geometry.widthMm,
             yMm: drawnDepth(geometry, geometry.neutralAxisMm),

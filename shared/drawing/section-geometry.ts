@@ -1,6 +1,7 @@
 import { findBar } from '../engine/bars.ts';
 import type { Evaluation, PlacedBar } from '../engine/evaluation.ts';
 import type { BarStandard, Face, SectionInput } from '../engine/section.ts';
+import { codeSymbols } from '../print/code-symbols.ts';
 import { isHogging } from '../print/face-word.ts';
 import { concreteOutline, drawnFlange, type DrawnFlange, type OutlinePoint } from './concrete-outline.ts';
 
@@ -27,8 +28,9 @@ export interface SectionGeometry {
   readonly skinBars: readonly (BarCircle & { readonly bar: string })[];
   readonly bands: readonly LayerBand[];
   readonly rows: readonly BarRow[];
-  /** Depth c from the compression face. */
+  /** Depth of the axis from the compression face, and the letter the code gives it: c, or x. */
   readonly neutralAxisMm: number | null;
+  readonly axisSymbol: string;
   /** Depth d from the compression face. */
   readonly effectiveDepthMm: number | null;
   readonly coverMm: number;
@@ -198,6 +200,7 @@ export function sectionGeometry(
     bands: layerBands(section, drawnY),
     rows: fits ? barRows(evaluation, drawnY) : [],
     neutralAxisMm: evaluation.flexure?.neutralAxisMm ?? null,
+    axisSymbol: codeSymbols(evaluation.ruleSet.id).axis,
     effectiveDepthMm: evaluation.geometry?.dMm ?? null,
     coverMm: section.coverMm,
   };

@@ -1,4 +1,6 @@
 import type { CheckId } from '../engine/evaluation.ts';
+import type { RuleSetId } from '../engine/section.ts';
+import { codeSymbols } from './code-symbols.ts';
 
 export interface CheckLabel {
   readonly name: string;
@@ -33,4 +35,12 @@ const CHECKS: Readonly<Record<CheckId, CheckLabel>> = {
   'hoop-spacing': { name: 'Seismic: hoop spacing', symbol: 's' },
 };
 
-export const checkLabel = (id: CheckId): CheckLabel => CHECKS[id];
+/** A check's name, its symbol in the letters of a code; in those of ACI 318 where none is told. */
+export function checkLabel(id: CheckId, code?: RuleSetId): CheckLabel {
+  const label = CHECKS[id];
+  if (code === undefined) return label;
+  const { designMoment, designShear, compressionSteel } = codeSymbols(code);
+  if (id === 'strength') return { ...label, symbol: designMoment };
+  if (id === 'shear') return { ...label, symbol: designShear };
+  return id === 'compression-share' ? { ...label, symbol: `${compressionSteel}/As` } : label;
+}

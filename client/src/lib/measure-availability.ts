@@ -45,7 +45,7 @@ const named = (gaps: readonly string[]): string =>
 /** Why a measure cannot be compared by in this space; null where it can. */
 export function unavailableReason(measure: MeasureId, setting: MeasureSetting): string | null {
   const { space, basis, demand } = setting;
-  if (measure === 'utilisation') return demand.muNmm === null ? 'needs a moment Mu' : null;
+  if (measure === 'utilisation') return demand.muNmm === null ? 'needs a moment' : null;
   if (measure === 'barCount')
     return space.tension.kind === 'areas' || space.compression.kind === 'areas'
       ? 'plain areas have no bars'

@@ -1,5 +1,7 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import { MEASURE_DIRECTION, type Direction, type MeasureId } from '#shared/engine/measures.ts';
+import type { RuleSetId } from '#shared/engine/section.ts';
+import { codeSymbols } from '#shared/print/code-symbols.ts';
 import { unitLabel, type DisplayKind } from '#shared/print/units.ts';
 
 interface MeasureName {
@@ -22,6 +24,12 @@ const MEASURES: Readonly<Record<MeasureId, MeasureName>> = {
   barCount: { name: 'Bars', symbol: 'Bars', kind: 'count' },
 };
 
+function inLettersOf(code: RuleSetId, id: MeasureId): Partial<MeasureName> {
+  const { moment, designMoment } = codeSymbols(code);
+  if (id === 'designStrengthNmm') return { symbol: designMoment };
+  return id === 'utilisation' ? { symbol: `${moment}/${designMoment}` } : {};
+}
+
 export interface MeasureLabel extends MeasureName {
   readonly id: MeasureId;
   /** In the project's units; for money the part after the currency, `/ft`. Empty for a plain number. */
@@ -31,8 +39,9 @@ export interface MeasureLabel extends MeasureName {
   readonly betterText: string;
 }
 
-export function measureLabel(id: MeasureId, units: UnitSystem): MeasureLabel {
-  const measure = MEASURES[id];
+/** `code` puts symbols in its own letters; without it they are those of ACI 318. */
+export function measureLabel(id: MeasureId, units: UnitSystem, code?: RuleSetId): MeasureLabel {
+  const measure = { ...MEASURES[id], ...(code === undefined ? {} : inLettersOf(code, id)) };
   const better = MEASURE_DIRECTION[id];
   return { ...measure, id, unit: unitLabel(measure.kind, units), better, betterText: `${better} is better` };
 }

@@ -1,5 +1,6 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { CheckResult } from '#shared/engine/evaluation.ts';
+import type { RuleSetId } from '#shared/engine/section.ts';
 import { checkLabel } from '#shared/print/check-labels.ts';
 import { formatQuantity } from '#shared/print/format-quantity.ts';
 import { quantitiesInText } from '#shared/print/quantities-in-text.ts';
@@ -10,10 +11,11 @@ import { TableFrame } from '#client/src/ui/table-frame.tsx';
 interface CheckTableProps {
   readonly checks: readonly CheckResult[];
   readonly units: UnitSystem;
+  readonly code: RuleSetId;
 }
 
 /** Every check with its clause, what is asked, what is there, and the ratio against its limit. */
-export function CheckTable({ checks, units }: CheckTableProps) {
+export function CheckTable({ checks, units, code }: CheckTableProps) {
   return (
     <TableFrame label="Checks">
       <thead>
@@ -30,15 +32,15 @@ export function CheckTable({ checks, units }: CheckTableProps) {
       </thead>
       <tbody>
         {checks.map((check) => (
-          <CheckRow key={check.id} check={check} units={units} />
+          <CheckRow key={check.id} check={check} units={units} code={code} />
         ))}
       </tbody>
     </TableFrame>
   );
 }
 
-function CheckRow({ check, units }: { readonly check: CheckResult; readonly units: UnitSystem }) {
-  const { name, symbol } = checkLabel(check.id);
+function CheckRow({ check, units, code }: Omit<CheckTableProps, 'checks'> & { readonly check: CheckResult }) {
+  const { name, symbol } = checkLabel(check.id, code);
   const unit = unitLabel(check.kind, units);
   const print = (value: number | null) => formatQuantity(value, check.kind, units, { hideUnit: true });
   return (

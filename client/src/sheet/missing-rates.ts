@@ -12,7 +12,7 @@ export function missingRates(rates: Rates | null, fcMPa: number): readonly strin
   return [
     rates.steelPerKg === null ? 'rate of longitudinal bars' : '',
     rates.stirrupPerKg === null ? 'rate of stirrups' : '',
-    (mixOf(rates, fcMPa)?.costPerM3 ?? null) === null ? 'rate of concrete of this f′c' : '',
+    (mixOf(rates, fcMPa)?.costPerM3 ?? null) === null ? 'rate of concrete of this strength' : '',
     rates.formworkPerM2 === null ? 'rate of formwork' : '',
   ].filter((name) => name !== '');
 }
@@ -22,6 +22,6 @@ export function missingFactors(rates: Rates | null, fcMPa: number): readonly str
   if (rates === null) return ['no price book'];
   return [
     rates.steelCo2ePerKg === null ? 'carbon factor of steel' : '',
-    (mixOf(rates, fcMPa)?.co2eKgPerM3 ?? null) === null ? 'carbon factor of concrete of this f′c' : '',
+    (mixOf(rates, fcMPa)?.co2eKgPerM3 ?? null) === null ? 'carbon factor of concrete of this strength' : '',
   ].filter((name) => name !== '');
 }

@@ -2,6 +2,7 @@ import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Evaluation } from '#shared/engine/evaluation.ts';
 import type { SectionInput } from '#shared/engine/section.ts';
 import { checkLabel } from '#shared/print/check-labels.ts';
+import { codeSymbols } from '#shared/print/code-symbols.ts';
 import { formatDifferenceTo, formatMoney, formatNumber } from '#shared/print/format-quantity.ts';
 import { unitLabel } from '#shared/print/units.ts';
 import { measureLabel } from '#client/src/lib/measure-labels.ts';
@@ -49,7 +50,10 @@ function Headline({ section, evaluation, neighbours, units, isMoneyHidden }: Nei
   return (
     <p className="text-sm">
       {`${all}. One is ${word}: `}
-      <span className="font-medium">{stepText(better, section, units)}</span>,{' '}
+      <span className="font-medium">
+        {stepText(better, section, units, codeSymbols(evaluation.ruleSet.id).fc)}
+      </span>
+      ,{' '}
       <span className="num">
         {currency}
         {difference}
@@ -74,7 +78,7 @@ export function NeighbourTable(props: NeighbourTableProps) {
           <tr>
             <th scope="col">Step</th>
             {columns.map((id) => {
-              const { symbol, unit } = measureLabel(id, units);
+              const { symbol, unit } = measureLabel(id, units, evaluation.ruleSet.id);
               return (
                 <th key={id} scope="col" className="figure">
                   {symbol}
@@ -91,7 +95,11 @@ export function NeighbourTable(props: NeighbourTableProps) {
           {neighbours.map((one) => (
             <tr key={`${one.input} ${JSON.stringify(one.section)}`}>
               <th scope="row" className="font-normal whitespace-nowrap">
-                <StepName neighbour={one} text={stepText(one, section, units)} onSelect={onSelect} />
+                <StepName
+                  neighbour={one}
+                  text={stepText(one, section, units, codeSymbols(evaluation.ruleSet.id).fc)}
+                  onSelect={onSelect}
+                />
               </th>
               {columns.map((id) => (
                 <td key={id} className="figure">

@@ -1,5 +1,6 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Scatter, ScatterVariant } from '#shared/engine/scatter.ts';
+import type { CodeSymbols } from '#shared/engine/rules/code-symbols.ts';
 import { checkLabel } from '#shared/print/check-labels.ts';
 import { formatNumber, formatQuantity } from '#shared/print/format-quantity.ts';
 import { unitLabel } from '#shared/print/units.ts';
@@ -9,13 +10,14 @@ import { VerdictMark } from '#client/src/ui/verdict-mark.tsx';
 interface ScatterTableProps {
   readonly scatter: Scatter;
   readonly units: UnitSystem;
+  readonly symbols: CodeSymbols;
 }
 
-function departureText({ id, from, to }: ScatterVariant, units: UnitSystem): string {
+function departureText({ id, from, to }: ScatterVariant, units: UnitSystem, fcSymbol: string): string {
   if (id === 'bar-oversize') return `bars ${formatNumber((to - 1) * 100, 3, true)} % larger than their name`;
   const isCover = id === 'cover-less' || id === 'cover-more';
   const kind = isCover ? 'length' : 'stress';
-  const name = isCover ? 'cover' : 'f′c';
+  const name = isCover ? 'cover' : fcSymbol;
   const ends = [from, to].map((value) => formatQuantity(value, kind, units, { hideUnit: true, digits: 3 }));
   return `${name} ${ends[0]} → ${ends[1]} ${unitLabel(kind, units)}`;
 }
@@ -38,7 +40,7 @@ function headline({ asDrawn, holds, variants }: Scatter): string {
 }
 
 /** Whether the section still meets its checks where cover, concrete and bars stray from the drawing. */
-export function ScatterTable({ scatter, units }: ScatterTableProps) {
+export function ScatterTable({ scatter, units, symbols }: ScatterTableProps) {
   return (
     <div className="grid gap-2">
       <p className="text-sm">{headline(scatter)}</p>
@@ -47,7 +49,7 @@ export function ScatterTable({ scatter, units }: ScatterTableProps) {
           <tr>
             <th scope="col">Departure</th>
             <th scope="col" className="figure">
-              φMn, {unitLabel('moment', units)}
+              {symbols.designMoment}, {unitLabel('moment', units)}
             </th>
             <th scope="col" className="figure">
               μφ
@@ -59,7 +61,7 @@ export function ScatterTable({ scatter, units }: ScatterTableProps) {
           {scatter.variants.map((variant) => (
             <tr key={`${variant.id} ${variant.to}`}>
               <th scope="row" className="font-normal">
-                {departureText(variant, units)}
+                {departureText(variant, units, symbols.fc)}
                 <span className="block text-2xs text-muted">{variant.note}</span>
               </th>
               <td className="figure">

@@ -6,6 +6,7 @@ import type { Evaluation } from '#shared/engine/evaluation.ts';
 import { scatterOf } from '#shared/engine/scatter.ts';
 import type { SectionInput } from '#shared/engine/section.ts';
 import { twinOf } from '#shared/engine/twin.ts';
+import { codeSymbols } from '#shared/print/code-symbols.ts';
 import { faceWord } from '#shared/print/face-word.ts';
 import type { Space } from '#shared/sweep/problem.ts';
 import { CurveView } from './curve-view.tsx';
@@ -55,8 +56,10 @@ const useCurve = ({ section, context }: SectionStudyProps): CurveReport | null =
 function Curve(props: SectionStudyProps) {
   const report = useCurve(props);
   if (report === null) return NOT_PLACED;
-  const { muNmm } = props.context.demand;
-  const levels = muNmm === null ? [] : [{ label: 'Mu', momentNmm: muNmm }];
+  const { context } = props;
+  const { muNmm } = context.demand;
+  const levels =
+    muNmm === null ? [] : [{ label: codeSymbols(context.basis.ruleSet).moment, momentNmm: muNmm }];
   return <CurveView report={report} levels={levels} units={props.units} />;
 }
 
@@ -76,13 +79,18 @@ function Twin({ section, context, units }: SectionStudyProps) {
       </p>
     );
   return (
-    <TwinTable comparison={comparison} units={units} compressionFace={faceWord('compression', section)} />
+    <TwinTable
+      comparison={comparison}
+      units={units}
+      symbols={codeSymbols(context.basis.ruleSet)}
+      compressionFace={faceWord('compression', section)}
+    />
   );
 }
 
 function Scatter({ section, context, units }: SectionStudyProps) {
   const scatter = useMemo(() => scatterOf(section, context), [section, context]);
-  return <ScatterTable scatter={scatter} units={units} />;
+  return <ScatterTable scatter={scatter} units={units} symbols={codeSymbols(context.basis.ruleSet)} />;
 }
 
 function Steps(props: SectionStudyProps) {

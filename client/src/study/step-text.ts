@@ -9,7 +9,7 @@ import type { Step } from './steps.ts';
 const NUMBERS = {
   width: { symbol: 'b', key: 'widthMm', kind: 'length' },
   depth: { symbol: 'h', key: 'depthMm', kind: 'length' },
-  fc: { symbol: 'f′c', key: 'fcMPa', kind: 'stress' },
+  fc: { symbol: null, key: 'fcMPa', kind: 'stress' },
 } as const;
 
 /** One step in words: `b 12 → 14 in`, `bottom 3-#8 → 4-#8`. */
@@ -17,6 +17,7 @@ export function stepText(
   { input, section }: Pick<Step, 'input' | 'section'>,
   from: SectionInput,
   units: UnitSystem,
+  fcSymbol: string,
 ): string {
   if (input === 'tension' || input === 'compression') {
     const bars = [from, section].map(({ reinforcement }) =>
@@ -28,5 +29,5 @@ export function stepText(
   const ends = [from[key], section[key]].map((value) =>
     formatQuantity(value, kind, units, { hideUnit: true }),
   );
-  return `${symbol} ${ends.join(' → ')} ${unitLabel(kind, units)}`;
+  return `${symbol ?? fcSymbol} ${ends.join(' → ')} ${unitLabel(kind, units)}`;
 }

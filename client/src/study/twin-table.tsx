@@ -1,4 +1,5 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import type { CodeSymbols } from '#shared/engine/rules/code-symbols.ts';
 import type { TwinComparison, TwinValues } from '#shared/engine/twin.ts';
 import { formatNumber, formatQuantity } from '#shared/print/format-quantity.ts';
 import { unitLabel, type DisplayKind } from '#shared/print/units.ts';
@@ -7,6 +8,7 @@ import { TableFrame } from '#client/src/ui/table-frame.tsx';
 interface TwinTableProps {
   readonly comparison: TwinComparison;
   readonly units: UnitSystem;
+  readonly symbols: CodeSymbols;
   /** `top` or `bottom`: where the compression bars lie. */
   readonly compressionFace: 'top' | 'bottom';
 }
@@ -18,13 +20,23 @@ interface TwinRow {
   readonly of: (values: TwinValues) => number | null;
 }
 
-const ROWS: readonly TwinRow[] = [
+/** Design strength stands apart where a reduction makes it another number than that of the internal forces. */
+const rowsOf = (s: CodeSymbols): readonly TwinRow[] => [
   { symbol: 'As', name: 'tension steel', kind: 'area', of: (v) => v.asMm2 },
-  { symbol: 'A′s', name: 'compression steel', kind: 'area', of: (v) => v.asPrimeMm2 },
-  { symbol: 'c', name: 'neutral axis', kind: 'length', of: (v) => v.neutralAxisMm },
+  { symbol: s.compressionSteel, name: 'compression steel', kind: 'area', of: (v) => v.asPrimeMm2 },
+  { symbol: s.axis, name: 'neutral axis', kind: 'length', of: (v) => v.neutralAxisMm },
   { symbol: 'εt', name: 'tension strain', kind: 'strain', of: (v) => v.tensionStrain },
-  { symbol: 'Mn', name: 'nominal strength', kind: 'moment', of: (v) => v.nominalMomentNmm },
-  { symbol: 'φMn', name: 'design strength', kind: 'moment', of: (v) => v.designMomentNmm },
+  ...(s.nominalMoment === s.designMoment
+    ? []
+    : [
+        {
+          symbol: s.nominalMoment,
+          name: 'nominal strength',
+          kind: 'moment',
+          of: (v) => v.nominalMomentNmm,
+        } satisfies TwinRow,
+      ]),
+  { symbol: s.designMoment, name: 'design strength', kind: 'moment', of: (v) => v.designMomentNmm },
   { symbol: 'φy', name: 'yield curvature', kind: 'curvature', of: (v) => v.curvatureYieldPerMm },
   { symbol: 'φu', name: 'ultimate curvature', kind: 'curvature', of: (v) => v.curvatureUltimatePerMm },
   { symbol: 'μφ', name: 'closed form', kind: 'ratio', of: (v) => v.curvatureDuctility },
@@ -45,9 +57,9 @@ function changeText(own: number | null, twin: number | null): string {
 }
 
 /** The section beside the same without its compression steel: what that steel does, and what it does not. */
-export function TwinTable({ comparison, units, compressionFace }: TwinTableProps) {
+export function TwinTable({ comparison, units, symbols, compressionFace }: TwinTableProps) {
   const { section, twin, measure } = comparison;
-  const rows = measure === 'closed' ? ROWS : [...ROWS, CURVE_ROW];
+  const rows = measure === 'closed' ? rowsOf(symbols) : [...rowsOf(symbols), CURVE_ROW];
   const print = (value: number | null, kind: DisplayKind) =>
     formatQuantity(value, kind, units, { hideUnit: true, digits: 4 });
   return (

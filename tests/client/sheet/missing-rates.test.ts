@@ -20,8 +20,8 @@ describe('what a cost is waiting for', () => {
   });
 
   it('names the mix when no line of the price book has its f′c', () => {
-    expect(missingRates(COMPLETE, 34.47)).toEqual(['rate of concrete of this f′c']);
-    expect(missingFactors(COMPLETE, 34.47)).toEqual(['carbon factor of concrete of this f′c']);
+    expect(missingRates(COMPLETE, 34.47)).toEqual(['rate of concrete of this strength']);
+    expect(missingFactors(COMPLETE, 34.47)).toEqual(['carbon factor of concrete of this strength']);
   });
 
   it('names each rate left blank', () => {

@@ -66,7 +66,7 @@ describe('sections one step away', () => {
   });
 
   it('count one bar and one size less and more, and never leave a beam without tension bars', () => {
-    const texts = stepsFrom(SECTION, SETTING).map((step) => stepText(step, SECTION, 'si'));
+    const texts = stepsFrom(SECTION, SETTING).map((step) => stepText(step, SECTION, 'si', 'f′c'));
     for (const text of ['bottom 4-25 → 3-25', 'bottom 4-25 → 4-28', 'top 2-16 → 2-18', 'b 350 → 400 mm'])
       expect(texts).toContain(text);
     const one = {

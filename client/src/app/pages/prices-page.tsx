@@ -1,4 +1,5 @@
 import { EMPTY_PRICE_BOOK } from '#client/src/features/price-book/empty-price-book.ts';
+import { codeSymbols } from '#shared/print/code-symbols.ts';
 import { PriceBookForm } from '#client/src/features/price-book/price-book-form.tsx';
 import { useProject } from '#client/src/lib/project-context.ts';
 import { useMay } from '#client/src/lib/reader-context.ts';
@@ -21,6 +22,7 @@ export function PricesPage() {
       projectId={project.id}
       priceBook={project.priceBook ?? EMPTY_PRICE_BOOK}
       units={project.designBasis.units}
+      fcSymbol={codeSymbols(project.designBasis.ruleSet).fc}
       isReadOnly={!mayEdit}
     />
   );

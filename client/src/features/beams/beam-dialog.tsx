@@ -2,6 +2,7 @@ import { zodResolver } from '@hookform/resolvers/zod';
 import { useState } from 'react';
 import { useForm, type DefaultValues } from 'react-hook-form';
 import { beamInputSchema, type Beam, type BeamInput } from '#shared/contract/records.ts';
+import { codeSymbols } from '#shared/print/code-symbols.ts';
 import { placeIssues } from '#client/src/lib/form-issues.ts';
 import { useProject } from '#client/src/lib/project-context.ts';
 import { Button } from '#client/src/ui/button.tsx';
@@ -30,6 +31,7 @@ const EMPTY: DefaultValues<BeamInput> = {
 export function BeamDialog({ beam, onClose }: BeamDialogProps) {
   const { id: projectId, designBasis } = useProject();
   const { units } = designBasis;
+  const symbols = codeSymbols(designBasis.ruleSet);
   const save = useSaveBeam(projectId, beam?.id ?? null);
   const [failure, setFailure] = useState<string | null>(null);
   const form = useForm<BeamInput>({
@@ -83,15 +85,15 @@ export function BeamDialog({ beam, onClose }: BeamDialogProps) {
             name="muNmm"
             kind="moment"
             units={units}
-            label="Moment Mu"
-            hint="Sagging, tension at the bottom."
+            label={`Moment ${symbols.moment}`}
+            hint="The largest that the section must carry, sagging or hogging."
           />
           <FormNumberField
             control={control}
             name="vuN"
             kind="force"
             units={units}
-            label="Shear Vu"
+            label={`Shear ${symbols.shear}`}
             hint="Kept with the beam; empty if not known yet."
           />
           <FormNumberField

@@ -2,6 +2,7 @@ import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Beam } from '#shared/contract/records.ts';
 import { formatQuantity } from '#shared/print/format-quantity.ts';
 import { paths } from '#client/src/lib/paths.ts';
+import type { CodeSymbols } from '#shared/engine/rules/code-symbols.ts';
 import { unitLabel, type DisplayKind } from '#shared/print/units.ts';
 import { Button, ButtonLink } from '#client/src/ui/button.tsx';
 import { TableFrame } from '#client/src/ui/table-frame.tsx';
@@ -9,35 +10,39 @@ import { TableFrame } from '#client/src/ui/table-frame.tsx';
 interface BeamTableProps {
   readonly beams: readonly Beam[];
   readonly units: UnitSystem;
+  readonly symbols: CodeSymbols;
   readonly onEdit: (beam: Beam) => void;
   readonly onDelete: (beam: Beam) => void;
   readonly mayEdit: boolean;
   readonly maySweep: boolean;
 }
 
-const FIGURES: readonly {
+interface Figure {
   readonly head: string;
   readonly kind: DisplayKind;
   readonly of: (beam: Beam) => number | null;
-}[] = [
+}
+
+const figuresOf = ({ moment, shear }: CodeSymbols): readonly Figure[] => [
   { head: 'Span', kind: 'span', of: (beam) => beam.spanMm },
   { head: 'Count', kind: 'count', of: (beam) => beam.count },
-  { head: 'Mu', kind: 'moment', of: (beam) => beam.muNmm },
-  { head: 'Vu', kind: 'force', of: (beam) => beam.vuN },
+  { head: moment, kind: 'moment', of: (beam) => beam.muNmm },
+  { head: shear, kind: 'force', of: (beam) => beam.vuN },
   { head: 'μφ ≥', kind: 'count', of: (beam) => beam.ductilityTarget },
   { head: 'h ≤', kind: 'length', of: (beam) => beam.depthCapMm },
   { head: 'Sweeps', kind: 'count', of: (beam) => beam.sweepCount },
   { head: 'Candidates', kind: 'count', of: (beam) => beam.candidateCount },
 ];
 
-export function BeamTable({ beams, units, onEdit, onDelete, mayEdit, maySweep }: BeamTableProps) {
+export function BeamTable({ beams, units, symbols, onEdit, onDelete, mayEdit, maySweep }: BeamTableProps) {
+  const figures = figuresOf(symbols);
   return (
     <TableFrame label="Beams">
       <thead>
         <tr>
           <th scope="col">Mark</th>
           <th scope="col">Location</th>
-          {FIGURES.map(({ head, kind }) => (
+          {figures.map(({ head, kind }) => (
             <th key={head} scope="col" className="figure">
               {head} <span className="block text-2xs font-normal">{unitLabel(kind, units) || ' '}</span>
             </th>
@@ -56,7 +61,7 @@ export function BeamTable({ beams, units, onEdit, onDelete, mayEdit, maySweep }:
               {beam.mark}
             </th>
             <td className="min-w-36 text-muted">{beam.location}</td>
-            {FIGURES.map(({ head, kind, of }) => (
+            {figures.map(({ head, kind, of }) => (
               <td key={head} className="figure">
                 {formatQuantity(of(beam), kind, units, { hideUnit: true })}
               </td>

@@ -1,5 +1,6 @@
 import { useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
+import { codeSymbols } from '#shared/print/code-symbols.ts';
 import type { Beam } from '#shared/contract/records.ts';
 import { useProject } from '#client/src/lib/project-context.ts';
 import { useMay } from '#client/src/lib/reader-context.ts';
@@ -47,6 +48,7 @@ export function BeamsPanel() {
           <BeamTable
             beams={beams.data}
             units={project.designBasis.units}
+            symbols={codeSymbols(project.designBasis.ruleSet)}
             onEdit={setEdited}
             onDelete={setDoomed}
             mayEdit={mayEdit}

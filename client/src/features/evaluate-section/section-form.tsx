@@ -11,6 +11,7 @@ import { ListField } from '#client/src/ui/list-field.tsx';
 import { NumberField } from '#client/src/ui/number-field.tsx';
 import { SegmentedControl } from '#client/src/ui/segmented-control.tsx';
 import { SelectField } from '#client/src/ui/select-field.tsx';
+import { codeSymbols } from '#shared/print/code-symbols.ts';
 import type { DisplayKind } from '#shared/print/units.ts';
 import { FlangeFields } from '#client/src/section-fields/flange-fields.tsx';
 import { SpacingChoice } from '#client/src/section-fields/spacing-choice.tsx';
@@ -48,7 +49,8 @@ function Part({ title, children }: { readonly title: string; readonly children: 
 
 /** One section typed in, by bars or exactly as printed in layers, judged when asked. */
 export function SectionForm({ project, initial, isBusy, refusal, onEdit, onEvaluate }: SectionFormProps) {
-  const { units, barStandard } = project.designBasis;
+  const { units, barStandard, ruleSet } = project.designBasis;
+  const symbols = codeSymbols(ruleSet);
   const [form, setForm] = useState(initial);
   const [sent, setSent] = useState<SectionFormValues | null>(null);
   const [isAsked, setAsked] = useState(false);
@@ -106,8 +108,8 @@ export function SectionForm({ project, initial, isBusy, refusal, onEdit, onEvalu
         <div className="grid grid-cols-2 gap-x-6 gap-y-4 sm:grid-cols-3">
           {number('widthMm', 'Width b', 'length', 'section.widthMm')}
           {number('depthMm', 'Depth h', 'length', 'section.depthMm')}
-          {number('fcMPa', 'Concrete f′c', 'stress', 'section.fcMPa')}
-          {number('fyMPa', 'Steel fy', 'stress', 'section.fyMPa')}
+          {number('fcMPa', `Concrete ${symbols.fc}`, 'stress', 'section.fcMPa')}
+          {number('fyMPa', `Steel ${symbols.fy}`, 'stress', 'section.fyMPa')}
           {number('coverMm', 'Clear cover', 'length', 'section.coverMm')}
         </div>
         <FlangeFields
@@ -181,10 +183,10 @@ export function SectionForm({ project, initial, isBusy, refusal, onEdit, onEvalu
       </Part>
       <Part title="What it must do">
         <div className="grid grid-cols-2 gap-x-6 gap-y-4 sm:grid-cols-3">
-          {number('muNmm', 'Moment Mu', 'moment', 'demand.muNmm')}
+          {number('muNmm', `Moment ${symbols.moment}`, 'moment', 'demand.muNmm')}
           {number('ductilityTarget', 'Ductility μφ at least', 'ratio', 'demand.ductilityTarget')}
           {number('depthCapMm', 'Depth h at most', 'length', 'demand.depthCapMm')}
-          {number('vuN', 'Shear Vu', 'force', 'demand.vuN')}
+          {number('vuN', `Shear ${symbols.shear}`, 'force', 'demand.vuN')}
           {number('spanMm', 'Span', 'span', 'demand.spanMm')}
           <SelectField
             label="Span is held"

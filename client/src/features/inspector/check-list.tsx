@@ -1,5 +1,6 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { CheckResult } from '#shared/engine/evaluation.ts';
+import type { RuleSetId } from '#shared/engine/section.ts';
 import { checkLabel } from '#shared/print/check-labels.ts';
 import { formatQuantity } from '#shared/print/format-quantity.ts';
 import { quantitiesInText } from '#shared/print/quantities-in-text.ts';
@@ -8,6 +9,7 @@ import { RatioBar } from '#client/src/ui/ratio-bar.tsx';
 interface CheckListProps {
   readonly checks: readonly CheckResult[];
   readonly units: UnitSystem;
+  readonly code: RuleSetId;
   /** Significant figures of demand and capacity. */
   readonly digits: number;
 }
@@ -27,9 +29,10 @@ function numbersOf({ demand, capacity, kind }: CheckResult, units: UnitSystem, f
 function CheckRow({
   check,
   units,
+  code,
   digits,
 }: Omit<CheckListProps, 'checks'> & { readonly check: CheckResult }) {
-  const { name, symbol } = checkLabel(check.id);
+  const { name, symbol } = checkLabel(check.id, code);
   const numbers = numbersOf(check, units, digits);
   return (
     <li className="border-t border-rule py-2">
@@ -49,11 +52,11 @@ function CheckRow({
 }
 
 /** Every check that applies to the section, with its clause, its numbers and how near the limit it is. */
-export function CheckList({ checks, units, digits }: CheckListProps) {
+export function CheckList({ checks, units, code, digits }: CheckListProps) {
   return (
     <ul className="border-b border-rule">
       {checks.map((check) => (
-        <CheckRow key={check.id} check={check} units={units} digits={digits} />
+        <CheckRow key={check.id} check={check} units={units} code={code} digits={digits} />
       ))}
     </ul>
   );

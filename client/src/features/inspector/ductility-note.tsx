@@ -1,5 +1,6 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Evaluation } from '#shared/engine/evaluation.ts';
+import { codeSymbols } from '#shared/print/code-symbols.ts';
 import { formatQuantity } from '#shared/print/format-quantity.ts';
 import { KeyValue } from '#client/src/ui/key-value.tsx';
 
@@ -46,8 +47,9 @@ export function DuctilityNote({
       </p>
       {elastic?.isElasticPictureDoubtful === true && (
         <p className="border-l-2 border-near-mark pl-3 text-sm text-near">
-          At first yield the concrete carries {formatQuantity(share, 'percent', units, { digits: 2 })} of f′c.
-          Above 70 % it is no longer elastic, and φy is only an estimate.
+          At first yield the concrete carries {formatQuantity(share, 'percent', units, { digits: 2 })} of{' '}
+          {codeSymbols(evaluation.ruleSet.id).fc}. Above 70 % it is no longer elastic, and φy is only an
+          estimate.
         </p>
       )}
     </div>

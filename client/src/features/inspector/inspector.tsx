@@ -4,6 +4,7 @@ import type { EvaluationContext } from '#shared/engine/evaluate.ts';
 import type { Evaluation } from '#shared/engine/evaluation.ts';
 import type { BarStandard, SectionInput } from '#shared/engine/section.ts';
 import { SectionDrawing } from '#client/src/drawing/section-drawing.tsx';
+import { codeSymbols } from '#shared/print/code-symbols.ts';
 import { formatQuantity } from '#shared/print/format-quantity.ts';
 import { quantitiesInText } from '#shared/print/quantities-in-text.ts';
 import { sizeText, steelText, stirrupText } from '#shared/print/section-text.ts';
@@ -72,6 +73,7 @@ export function Inspector(props: InspectorProps) {
   const { section, evaluation, standard, units, actions } = props;
   const [figures, setFigures] = useState<Figures>('3');
   const digits = Number(figures);
+  const symbols = codeSymbols(evaluation.ruleSet.id);
   const stress = (mpa: number) => formatQuantity(mpa, 'stress', units);
   return (
     <article className="@container" aria-label={`Section ${sizeText(section, units)}`}>
@@ -83,7 +85,7 @@ export function Inspector(props: InspectorProps) {
               <span className="num text-base text-steel">{steelText(section, units)}</span>
             </h2>
             <p className="text-sm text-muted">
-              f′c {stress(section.fcMPa)}, fy {stress(section.fyMPa)}, stirrups{' '}
+              {symbols.fc} {stress(section.fcMPa)}, {symbols.fy} {stress(section.fyMPa)}, stirrups{' '}
               {stirrupText(evaluation.stirrups ?? section.stirrup, units)}
             </p>
             <BuiltSteelNote section={section} evaluation={evaluation} units={units} />
@@ -116,7 +118,12 @@ export function Inspector(props: InspectorProps) {
                 />
               </div>
             </div>
-            <CheckList checks={evaluation.checks} units={units} digits={Math.max(digits, 3)} />
+            <CheckList
+              checks={evaluation.checks}
+              units={units}
+              code={evaluation.ruleSet.id}
+              digits={Math.max(digits, 3)}
+            />
           </section>
           <div>
             <Fold title="Ductility and its convention" isOpen>

@@ -7,18 +7,21 @@ import { FormNumberField } from '#client/src/ui/form-number-field.tsx';
 interface MixTableProps {
   readonly control: Control<PriceBook>;
   readonly units: UnitSystem;
+  readonly fcSymbol: string;
   readonly currency: string;
   readonly isReadOnly: boolean;
 }
 
 /** One line per concrete mix; a section finds its rate by its f′c. */
-export function MixTable({ control, units, currency, isReadOnly }: MixTableProps) {
+export function MixTable({ control, units, fcSymbol, currency, isReadOnly }: MixTableProps) {
   const mixes = useFieldArray({ control, name: 'concrete' });
   const perVolume = `${currency}${unitLabel('money-per-volume', units)}`;
   return (
     <div className="grid gap-3 sm:col-span-2 xl:col-span-3">
       {mixes.fields.length === 0 && (
-        <p className="text-muted">No mixes yet. Sections are not priced until their f′c has a line here.</p>
+        <p className="text-muted">
+          No mixes yet. Sections are not priced until their {fcSymbol} has a line here.
+        </p>
       )}
       {mixes.fields.map((mix, i) => (
         <div
@@ -32,7 +35,7 @@ export function MixTable({ control, units, currency, isReadOnly }: MixTableProps
             name={`concrete.${i}.fcMPa`}
             kind="stress"
             units={units}
-            label="f′c"
+            label={fcSymbol}
           />
           <FormNumberField
             control={control}

@@ -13,10 +13,12 @@ interface PriceBookFormProps {
   readonly projectId: string;
   readonly priceBook: PriceBook;
   readonly units: UnitSystem;
+  /** Strength of concrete in the letters of the project’s code. */
+  readonly fcSymbol: string;
   readonly isReadOnly: boolean;
 }
 
-export function PriceBookForm({ projectId, priceBook, units, isReadOnly }: PriceBookFormProps) {
+export function PriceBookForm({ projectId, priceBook, units, fcSymbol, isReadOnly }: PriceBookFormProps) {
   const save = useSetPriceBook(projectId);
   const form = useForm<PriceBook>({ resolver: zodResolver(priceBookSchema), defaultValues: priceBook });
   const { control, register } = form;
@@ -102,8 +104,14 @@ export function PriceBookForm({ projectId, priceBook, units, isReadOnly }: Price
             hint="Production stages A1–A3."
           />
         </FieldGroup>
-        <FieldGroup title="Concrete mixes" lead="Matched to a section by its f′c, exactly.">
-          <MixTable control={control} units={units} currency={currency} isReadOnly={isReadOnly} />
+        <FieldGroup title="Concrete mixes" lead={`Matched to a section by its ${fcSymbol}, exactly.`}>
+          <MixTable
+            control={control}
+            units={units}
+            fcSymbol={fcSymbol}
+            currency={currency}
+            isReadOnly={isReadOnly}
+          />
         </FieldGroup>
       </RecordForm>
     </>

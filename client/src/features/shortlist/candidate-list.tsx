@@ -6,6 +6,7 @@ import { formatMoney, formatQuantity } from '#shared/print/format-quantity.ts';
 import { paths } from '#client/src/lib/paths.ts';
 import { sizeText, steelText } from '#shared/print/section-text.ts';
 import { candidateStateLabel } from '#client/src/lib/state-labels.ts';
+import { codeSymbols } from '#shared/print/code-symbols.ts';
 import { unitLabel } from '#shared/print/units.ts';
 import { CheckboxField } from '#client/src/ui/checkbox-field.tsx';
 import { StateTag } from '#client/src/ui/state-tag.tsx';
@@ -33,6 +34,7 @@ interface CandidateListProps {
 /** The candidates of one beam. */
 export function CandidateList(props: CandidateListProps) {
   const { candidates, units, selected, onToggle, tallestMm, hasMoney } = props;
+  const symbols = codeSymbols(candidates[0]!.snapshot.basis.ruleSet);
   const { beam } = candidates[0]!;
   return (
     <TableFrame
@@ -61,7 +63,7 @@ export function CandidateList(props: CandidateListProps) {
             μφ
           </th>
           <th scope="col" className="figure">
-            Mu/φMn
+            {symbols.moment}/{symbols.designMoment}
           </th>
           <th scope="col" className="pl-4!">
             Author

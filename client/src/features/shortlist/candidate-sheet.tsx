@@ -42,7 +42,7 @@ export function CandidateSheet({ candidate, units, hasMoney }: CandidateSheetPro
           </figcaption>
         </figure>
         <div className="grid min-w-0 gap-5">
-          <CheckTable checks={evaluation.checks} units={units} />
+          <CheckTable checks={evaluation.checks} units={units} code={basis.ruleSet} />
           {evaluation.ductility !== null && !isDuctilityChecked && (
             <p className="text-sm text-muted">μφ: {evaluation.ductility.definition}</p>
           )}

@@ -74,7 +74,7 @@ export function CompareTable({ candidates, units, baselineId, hasMoney }: Compar
         />
         <TextRow label="Bars" candidates={candidates} of={(c) => <Bars candidate={c} units={units} />} />
         <TextRow
-          label="f′c"
+          label="Concrete"
           candidates={candidates}
           of={(c) => <span className="num">{formatQuantity(c.snapshot.section.fcMPa, 'stress', units)}</span>}
         />

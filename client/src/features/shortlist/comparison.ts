@@ -40,8 +40,8 @@ const MEASURE_ROWS: readonly RowSource[] = [
   measure('costPerM', 'Cost', 'money-per-length'),
   measure('curvatureDuctility', 'Ductility μφ', 'ratio'),
   measure('depthMm', 'Depth h', 'length'),
-  measure('designStrengthNmm', 'Strength φMn', 'moment'),
-  measure('utilisation', 'Mu/φMn', 'ratio'),
+  measure('designStrengthNmm', 'Design strength', 'moment'),
+  measure('utilisation', 'Utilisation', 'ratio'),
   measure('co2eKgPerM', 'Carbon', 'co2e-per-length'),
 ];
 

@@ -6,6 +6,7 @@ import {
   displacedConcreteLabel,
   yieldCurvatureLabel,
 } from '#shared/print/basis-labels.ts';
+import { codeSymbols } from '#shared/print/code-symbols.ts';
 import { formatQuantity } from '#shared/print/format-quantity.ts';
 import { givenStirrupText, sizeText, steelText } from '#shared/print/section-text.ts';
 import type { DisplayKind } from '#shared/print/units.ts';
@@ -20,6 +21,7 @@ export function FrozenInputs({
   readonly units: UnitSystem;
 }) {
   const { section, demand, basis, rules, evaluation } = snapshot;
+  const symbols = codeSymbols(basis.ruleSet);
   const print = (value: number | null, kind: DisplayKind) => formatQuantity(value, kind, units);
   const asked = (value: number | null, kind: DisplayKind) =>
     value === null ? 'not asked' : print(value, kind);
@@ -30,13 +32,13 @@ export function FrozenInputs({
           { label: 'b × h', value: sizeText(section, units) },
           { label: 'Steel', value: steelText(section, units) },
           { label: 'Stirrups', value: givenStirrupText(section.stirrup, units) },
-          { label: 'f′c', value: print(section.fcMPa, 'stress') },
-          { label: 'fy', value: print(section.fyMPa, 'stress') },
+          { label: symbols.fc, value: print(section.fcMPa, 'stress') },
+          { label: symbols.fy, value: print(section.fyMPa, 'stress') },
           { label: 'Clear cover', value: print(section.coverMm, 'length') },
-          { label: 'Mu', value: asked(demand.muNmm, 'moment') },
+          { label: symbols.moment, value: asked(demand.muNmm, 'moment') },
           { label: 'μφ at least', value: asked(demand.ductilityTarget, 'count') },
           { label: 'h at most', value: asked(demand.depthCapMm, 'length') },
-          { label: 'Vu', value: asked(demand.vuN ?? null, 'force') },
+          { label: symbols.shear, value: asked(demand.vuN ?? null, 'force') },
         ]}
       />
       <KeyValue

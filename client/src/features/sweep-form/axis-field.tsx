@@ -1,4 +1,5 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import type { CodeSymbols } from '#shared/engine/rules/code-symbols.ts';
 import { NumberField } from '#client/src/ui/number-field.tsx';
 import { ListField } from '#client/src/ui/list-field.tsx';
 import { SegmentedControl } from '#client/src/ui/segmented-control.tsx';
@@ -8,13 +9,15 @@ import { AXIS_KIND } from './read-sweep-form.ts';
 import { errorUnder, type FieldErrors } from '#client/src/lib/field-errors.ts';
 import type { AxisName, AxisValues } from './sweep-form-values.ts';
 
-const AXIS_LABEL: Readonly<Record<AxisName, { readonly name: string; readonly symbol: string }>> = {
+type AxisLabel = { readonly name: string; readonly symbol: string };
+
+const labelsOf = ({ fc, fy }: CodeSymbols): Readonly<Record<AxisName, AxisLabel>> => ({
   width: { name: 'Width', symbol: 'b' },
   depth: { name: 'Depth', symbol: 'h' },
-  fc: { name: 'Concrete', symbol: 'f′c' },
-  fy: { name: 'Steel', symbol: 'fy' },
+  fc: { name: 'Concrete', symbol: fc },
+  fy: { name: 'Steel', symbol: fy },
   cover: { name: 'Clear cover', symbol: 'to the stirrup' },
-};
+});
 
 const WAYS = [
   { value: 'range', label: 'Range' },
@@ -30,6 +33,7 @@ const ENDS = [
 interface AxisFieldProps {
   readonly name: AxisName;
   readonly units: UnitSystem;
+  readonly symbols: CodeSymbols;
   readonly values: AxisValues;
   readonly errors: FieldErrors;
   /** How many values it makes; null while it cannot be read. */
@@ -38,8 +42,8 @@ interface AxisFieldProps {
 }
 
 /** One axis of the space: a range with a step, or the values one by one. */
-export function AxisField({ name, units, values, errors, valueCount, onChange }: AxisFieldProps) {
-  const label = AXIS_LABEL[name];
+export function AxisField({ name, units, symbols, values, errors, valueCount, onChange }: AxisFieldProps) {
+  const label = labelsOf(symbols)[name];
   const kind = AXIS_KIND[name];
   const full = `${label.name} ${label.symbol}`;
   const listError = errorUnder(errors, `space.${name}.values`);

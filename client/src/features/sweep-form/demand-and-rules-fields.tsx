@@ -1,4 +1,5 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import type { CodeSymbols } from '#shared/engine/rules/code-symbols.ts';
 import type { BarStandard, Support } from '#shared/engine/section.ts';
 import { SUPPORT_OPTIONS } from '#client/src/lib/support-options.ts';
 import { CheckboxField } from '#client/src/ui/checkbox-field.tsx';
@@ -15,13 +16,19 @@ interface PartProps<Part> {
   readonly onChange: (values: Part) => void;
 }
 
+interface DemandProps extends PartProps<SweepFormValues['demand']> {
+  readonly symbols: CodeSymbols;
+  /** Tension at the top. */
+  readonly hogs: boolean;
+}
+
 /** What the section must do; taken from the beam, to be changed for this sweep only. */
-export function DemandFields({ units, values, errors, onChange }: PartProps<SweepFormValues['demand']>) {
+export function DemandFields({ units, symbols, hogs, values, errors, onChange }: DemandProps) {
   return (
     <div className="grid grid-cols-2 gap-x-8 gap-y-4 md:grid-cols-3">
       <NumberField
-        label="Moment Mu"
-        hint="factored, sagging"
+        label={`Moment ${symbols.moment}`}
+        hint={hogs ? 'factored, hogging' : 'factored, sagging'}
         kind="moment"
         units={units}
         value={values.muNmm}
@@ -47,7 +54,7 @@ export function DemandFields({ units, values, errors, onChange }: PartProps<Swee
         onChange={(depthCapMm) => onChange({ ...values, depthCapMm })}
       />
       <NumberField
-        label="Shear Vu"
+        label={`Shear ${symbols.shear}`}
         hint="empty: not asked for"
         kind="force"
         units={units}

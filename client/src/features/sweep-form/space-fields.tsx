@@ -1,5 +1,6 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { DesignBasis } from '#shared/engine/section.ts';
+import { codeSymbols } from '#shared/print/code-symbols.ts';
 import { AxisField } from './axis-field.tsx';
 import { type FieldErrors } from '#client/src/lib/field-errors.ts';
 import { axisCount, steelCount } from './space-estimate.ts';
@@ -40,6 +41,7 @@ export function SpaceFields({ units, basis, form, errors, onChange }: SpaceField
           key={name}
           name={name}
           units={units}
+          symbols={codeSymbols(basis.ruleSet)}
           values={form.axes[name]}
           errors={errors}
           valueCount={axisCount(form.axes[name], name, units)}

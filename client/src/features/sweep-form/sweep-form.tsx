@@ -1,5 +1,6 @@
 import { useEffect, useMemo, useRef, useState, type ReactNode } from 'react';
 import type { Project, RunSummary } from '#shared/contract/records.ts';
+import { codeSymbols } from '#shared/print/code-symbols.ts';
 import { sizeRefusal } from '#shared/sweep/size-limit.ts';
 import { messageOf } from '#client/src/lib/api-error.ts';
 import { preloadChart } from '#client/src/charts/chart.tsx';
@@ -48,7 +49,8 @@ export function SweepForm(props: SweepFormProps) {
   const reading = useMemo(() => readSweepForm(form, units), [form, units]);
   useEffect(preloadChart, []);
 
-  const size = reading.kind === 'complete' ? sizeRefusal(reading.input.definition, project.designBasis) : null;
+  const size =
+    reading.kind === 'complete' ? sizeRefusal(reading.input.definition, project.designBasis) : null;
   const errors = useMemo(() => {
     const own = reading.kind === 'incomplete' ? reading.errors : errorsByField(size?.issues ?? []);
     const theirs = errorsByField(answered === form ? issuesOf(refusal) : [], FORM_ROOT);
@@ -90,6 +92,8 @@ export function SweepForm(props: SweepFormProps) {
         <Part title="What it must do">
           <DemandFields
             units={units}
+            symbols={codeSymbols(project.designBasis.ruleSet)}
+            hogs={form.flange.shape !== 'none' && form.flange.face === 'tension'}
             values={form.demand}
             errors={errors}
             onChange={(demand) => change({ ...form, demand })}
