@@ -61,8 +61,8 @@ export function SpaceTally({ project, reading, runs }: SpaceTallyProps) {
       </dl>
       {isCurveMeasure(designBasis) && (
         <p className="border-l-2 border-near-mark py-1 pl-3 text-sm text-near">
-          △ The design basis reads μφ off the full curve. It is drawn for every section that meets all else, so
-          the time depends on how many do.
+          △ The design basis reads μφ off the full curve. It is drawn for every section that meets all else,
+          so the time depends on how many do.
         </p>
       )}
       {reading.kind === 'incomplete' && (
