@@ -69,8 +69,16 @@ const strutStresses: ComputeCase = (_, raw) => ({
   v_cot1: listOf<number>(raw, 'fck').map((fck) => strutStress(fck, 1)),
 });
 
+/** A flanged section with the British αcc; mm, MPa. */
+const flanged: ComputeCase = ({ bw, bf, hf, d, As }, { fck, fyk }) => {
+  const flexure = flexureOf({ b: bw, bf, hf, d, As, fc: number(fck), fy: number(fyk) }, BRITISH);
+  return { s: flexure.blockDepthMm, MRd_kNm: flexure.nominalMomentNmm / 1e6 };
+};
+
 /** How each case of EN 1992-1-1 and EN 1998-1 is computed with the engine. */
 export const EUROCODE_CASES: Readonly<Record<string, ComputeCase>> = {
+  'EC2-T01': flanged,
+  'EC2-T02': flanged,
   'EC2-01': (_, raw) => ({
     z_over_d: listOf<number>(raw, 'K').map((K) => {
       const z = designed({ b: 1000, d: 1000, fck: 30, fyk: 500 }, K * 30e9).z / 1000;
