@@ -1,3 +1,4 @@
+import { bracketedRoot } from './bracketed-root.ts';
 import { curvatureGrid } from './curve-grid.ts';
 import type { CurveModel } from './curve-model.ts';
 import {
@@ -14,7 +15,6 @@ import {
   balancedCurvature,
   balancedTopStrain,
   emptyBalance,
-  illinois,
   momentNmm,
   netForceN,
   type Balance,
@@ -120,7 +120,7 @@ export class Tracer {
 
   /** The uncracked state at a curvature up to cracking. */
   uncrackedAt(curvature: number): CurvePoint {
-    const topStrain = illinois(
+    const topStrain = bracketedRoot(
       (strain) => netForceN(this.model, 'uncracked', { curvature, topStrain: strain }, this.out),
       0,
       curvature * this.model.depthMm,
@@ -229,7 +229,7 @@ export class Tracer {
   private crossing(from: CurvePoint, to: CurvePoint, measure: (point: CurvePoint) => number): CurvePoint {
     const slope = slopeBetween(from, to);
     const guess = (curvature: number) => from.topStrain + slope * (curvature - from.curvaturePerMm);
-    const root = illinois(
+    const root = bracketedRoot(
       (curvature) => measure(this.pointAt(curvature, guess(curvature))),
       from.curvaturePerMm,
       to.curvaturePerMm,

@@ -1,3 +1,4 @@
+import { bracketedRoot } from './bracketed-root.ts';
 import type { CurveModel } from './curve-model.ts';
 
 /**
@@ -180,8 +181,9 @@ export function momentNmm(
 }
 
 const MOST_STEPS = 80;
-/** Unbalanced force, over the concrete's compression, that counts as none. */
+/** Unbalanced force, over the concrete's compression, that counts as none: where the top strain is sought, and a curvature. */
 const BALANCED = 2e-10;
+const HELD_BALANCED = 1e-13;
 
 /**
  * Top strain that balances the cracked section at a curvature: one step of Newton from a guess, then secants, inside a
@@ -221,7 +223,7 @@ export interface HeldStrain {
 
 /**
  * Curvature between two bounds at which the section balances with a strain held at a depth; NaN where the bounds do not
- * bracket one. False position with the stale end's force halved (Illinois), to the last digits.
+ * bracket one.
  */
 export function balancedCurvature(
   model: CurveModel,
@@ -230,36 +232,10 @@ export function balancedCurvature(
   out: Balance,
   stage: Stage = 'cracked',
 ): number {
-  const forceAt = (curvature: number) =>
-    netForceN(model, stage, { curvature, topStrain: held.strain + curvature * held.depthMm }, out);
-  return illinois(forceAt, low, high);
-}
-
-/** Root of a continuous function between two bounds by the Illinois rule; NaN unless they bracket one. */
-export function illinois(valueAt: (x: number) => number, low: number, high: number): number {
-  let a = low;
-  let b = high;
-  let fa = valueAt(a);
-  let fb = valueAt(b);
-  if (fa === 0) return a;
-  if (fb === 0) return b;
-  if (!(fa < 0 !== fb < 0) || Number.isNaN(fa + fb)) return NaN;
-  for (let step = 0; step < MOST_STEPS; step++) {
-    // every fourth step halves, so that a kink cannot hold the rule up
-    const x = step % 4 === 3 ? 0.5 * (a + b) : (a * fb - b * fa) / (fb - fa);
-    const fx = valueAt(x);
-    if (fx === 0 || Math.abs(x - b) <= 1e-13 * Math.abs(x)) return x;
-    if (fx < 0 === fb < 0) {
-      b = x;
-      fb = fx;
-      fa *= 0.5;
-    } else {
-      a = b;
-      fa = fb;
-      b = x;
-      fb = fx;
-    }
-    if (Math.abs(a - b) <= 1e-13 * Math.abs(b)) break;
-  }
-  return b;
+  const forceAt = (curvature: number) => {
+    const topStrain = held.strain + curvature * held.depthMm;
+    const force = netForceN(model, stage, { curvature, topStrain }, out);
+    return Math.abs(force) <= HELD_BALANCED * out.concreteN ? 0 : force;
+  };
+  return bracketedRoot(forceAt, low, high);
 }
