@@ -61,6 +61,9 @@ const END_OF: Readonly<Record<UltimateCause, (model: CurveModel) => string>> = {
 
 const shown = (strain: number) => String(Number(strain.toPrecision(4)));
 
+/** The strain at which the steel yields, as it is written. */
+export const yieldStrainOf = (model: CurveModel) => (model.isDesignStrength ? 'fyd/Es' : 'fy/Es');
+
 /** What ended a curve, as a clause after “where”. */
 export const endOf = (model: CurveModel, cause: UltimateCause) => END_OF[cause](model);
 
@@ -71,9 +74,10 @@ export function ductilitiesOf(model: CurveModel, trace: Trace, bilinear: Bilinea
     model.yieldDepthMm === model.deepestMm
       ? 'the outermost tension layer'
       : 'the centroid of the tension steel';
-  const laws = `${(model.core ?? model.cover).name} concrete, ${model.steel.name} steel`;
+  const laws = `${(model.core ?? model.cover).name} concrete, ${model.steel.name} steel${model.isDesignStrength ? ', design strengths' : ''}`;
+  const yieldStrain = yieldStrainOf(model);
   const ultimateIs = `φu where ${endOf(model, cause)}; ${laws}`;
-  const never = `no bar reaches fy/Es at ${where} before ultimate, so there is no yield curvature; ${ultimateIs}`;
+  const never = `no bar reaches ${yieldStrain} at ${where} before ultimate, so there is no yield curvature; ${ultimateIs}`;
   if (!firstYield) {
     const none = { value: null, definition: never };
     return { byFirstYield: none, byBilinearYield: none };
@@ -83,7 +87,7 @@ export function ductilitiesOf(model: CurveModel, trace: Trace, bilinear: Bilinea
   return {
     byFirstYield: {
       value: last / firstYield.curvaturePerMm,
-      definition: `μφ = φu/φy; φy where ${where} reaches fy/Es on the nonlinear curve; ${ultimateIs}`,
+      definition: `μφ = φu/φy; φy where ${where} reaches ${yieldStrain} on the nonlinear curve; ${ultimateIs}`,
     },
     byBilinearYield: bilinear
       ? { value: last / bilinear.yieldCurvaturePerMm, definition: corner }

@@ -40,6 +40,8 @@ export interface CurveModel {
   /** Why the core is or is not confined. */
   readonly confinementNote: string;
   readonly steel: SteelLaw;
+  /** The laws are at a code's design strengths, fcd and fyd. */
+  readonly isDesignStrength: boolean;
   readonly depths: Float64Array;
   readonly areas: Float64Array;
   readonly isDisplacedDeducted: boolean;
@@ -79,6 +81,7 @@ export interface CurveMaterials {
   readonly plain: ConcreteLaw;
   readonly cover: ConcreteLaw;
   readonly steel: SteelLaw;
+  readonly isDesignStrength: boolean;
   readonly tension: TensionBeforeCracking;
 }
 
@@ -101,6 +104,7 @@ export function curveMaterials(
       ? unconfinedLaw(concreteLaw, fcMPa, ecMPa, { peakShare, peakStrain })
       : plain,
     steel: steelOf(rules.designYieldMPa(fyMPa), basis.esMPa, choices),
+    isDesignStrength: rules.designYieldMPa(fyMPa) !== fyMPa,
     tension: { ecMPa, crackingStrain: rules.ruptureModulusMPa(fcMPa) / ecMPa },
   };
 }
@@ -108,7 +112,7 @@ export function curveMaterials(
 /** `curveModel` with its materials given; to be those of its section and basis. */
 export function curveModelOf(input: CurveInput, materials: CurveMaterials): CurveModel {
   const { section, layout, basis } = input;
-  const { rules, steel, tension } = materials;
+  const { rules, steel, isDesignStrength, tension } = materials;
   const { cover, core, confinement, confinementNote } = concreteOf(input, materials);
   const coreTopMm = core && confinement ? confinement.coreTopMm : 0;
   return {
@@ -123,6 +127,7 @@ export function curveModelOf(input: CurveInput, materials: CurveMaterials): Curv
     confinement,
     confinementNote,
     steel,
+    isDesignStrength,
     depths: layout.depths,
     areas: layout.areas,
     isDisplacedDeducted: basis.displacedConcrete !== 'ignore',

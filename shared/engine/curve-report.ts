@@ -2,7 +2,7 @@ import { asBuilt } from './as-built.ts';
 import { curveChoicesOf } from './curve-basis.ts';
 import { getBar } from './bars.ts';
 import type { CurveChoices } from './curve-choices.ts';
-import { endOf, type Bilinear } from './curve-marks.ts';
+import { endOf, yieldStrainOf, type Bilinear } from './curve-marks.ts';
 import type { CurvePoint } from './curve-point.ts';
 import type { UltimateCause } from './ultimate-cause.ts';
 import { ductilityConventions, type DuctilityByConvention } from './ductility-conventions.ts';
@@ -141,7 +141,7 @@ function marksOf(curve: MomentCurvature): readonly CurveMark[] {
       : 'the centroid of the tension steel';
   const marks = [
     cracking && at('cracking', 'cracking', cracking, 'the tension face reaches fr, uncracked'),
-    firstYield && at('first-yield', 'first yield', firstYield, `${where} reaches fy/Es`),
+    firstYield && at('first-yield', 'first yield', firstYield, `${where} reaches ${yieldStrainOf(model)}`),
     bilinear && {
       id: 'bilinear-yield' as const,
       label: 'bilinear yield',

@@ -1,21 +1,16 @@
-import type { CurveModel } from './curve-model.ts';
-import { Tracer } from './curve-trace.ts';
 import { fibreBlockState, fibreCurve, type FibreCurve } from './fibre.ts';
 import type { FlexureResult } from './evaluation.ts';
 import type { MomentCurvature } from './moment-curvature.ts';
+import { reasonForDifference } from './opinion-reasons.ts';
 import { ruleSetOf } from './rules/rule-set-of.ts';
 import type { DesignBasis, SectionInput } from './section.ts';
 import type { SteelLayout } from './steel-layout.ts';
 
 /** Largest difference that counts as agreement: of a moment, and of a curvature. */
-export const STRENGTH_TOLERANCE = 0.005;
-export const CURVATURE_TOLERANCE = 0.02;
+const STRENGTH_TOLERANCE = 0.005;
+const CURVATURE_TOLERANCE = 0.02;
 const STRIPS = 100;
 const FINE_STRIPS = 1200;
-/** A limit is only touched where the section nowhere passes it by more than this share. */
-const TOUCHED = 0.01;
-/** States looked at between two ends. */
-const TOUCH_STATES = 101;
 
 export const OPINION_IDS = [
   'closed-strength',
@@ -23,7 +18,6 @@ export const OPINION_IDS = [
   'first-yield',
   'peak',
   'ultimate',
-  'ultimate-moment',
 ] as const;
 export type OpinionId = (typeof OPINION_IDS)[number];
 
@@ -53,8 +47,6 @@ export interface SecondOpinion {
 
 const METHOD =
   'the section cut into strips with the stress at the middle of each, led by the strain of the compression face, the axis found by halving; the same laws, another algorithm';
-const TOUCHES =
-  'between the two ends the section stays within 1 % of a limit without passing it: which of the states is called the end hangs on rounding';
 const UNEXPLAINED = 'no reason found: treat both values with care';
 
 const LABELS: Readonly<Record<OpinionId, string>> = {
@@ -63,7 +55,6 @@ const LABELS: Readonly<Record<OpinionId, string>> = {
   'first-yield': 'curvature at first yield',
   peak: 'highest moment',
   ultimate: 'curvature at ultimate',
-  'ultimate-moment': 'moment at ultimate',
 };
 
 /** The closed strength and the curve's marks once more by strips, with every difference and, where it is large, its reason. */
@@ -82,27 +73,26 @@ export function secondOpinionOf(of: {
     lineOf('closed-strength', flexure.nominalMomentNmm, block.momentNmm),
     lineOf('closed-curvature', flexure.epsilonCu / flexure.neutralAxisMm, block.curvaturePerMm),
   ];
-  const { strips, fibre, isTouching } = agreeingStrips(curve);
-  const marks = curveLines(curve, fibre).map((line) =>
-    line.agrees ? line : { ...line, reason: isTouching && line.id !== 'peak' ? TOUCHES : UNEXPLAINED },
-  );
-  const lines = [...closed, ...marks];
+  const { strips, lines: marks, reason } = agreeingStrips(curve);
+  const lines = [
+    ...closed,
+    ...marks.map((line) => (line.agrees ? line : { ...line, reason: reason ?? UNEXPLAINED })),
+  ];
   return { method: METHOD, strips, lines, agrees: lines.every((line) => line.agrees) };
 }
 
 /** What a curve's marks differ by from those of strips. */
-export function curveLines(curve: MomentCurvature, fibre: FibreCurve): readonly OpinionLine[] {
+function curveLines(curve: MomentCurvature, fibre: FibreCurve): readonly OpinionLine[] {
   const yields = [curve.firstYield, fibre.firstYield].map((state) => state?.curvaturePerMm ?? null);
   return [
     lineOf('first-yield', yields[0]!, yields[1]!),
     lineOf('peak', curve.peak.momentNmm, fibre.peak.momentNmm),
     lineOf('ultimate', curve.ultimate.curvaturePerMm, fibre.ultimate.curvaturePerMm),
-    lineOf('ultimate-moment', curve.ultimate.momentNmm, fibre.ultimate.momentNmm),
   ];
 }
 
 function lineOf(id: OpinionId, value: number | null, strips: number | null): OpinionLine {
-  const kind = id === 'closed-strength' || id === 'peak' || id === 'ultimate-moment' ? 'moment' : 'curvature';
+  const kind = id === 'closed-strength' || id === 'peak' ? 'moment' : 'curvature';
   const tolerance = kind === 'moment' ? STRENGTH_TOLERANCE : CURVATURE_TOLERANCE;
   const difference = value === null || strips === null ? null : strips / value - 1;
   const agrees = difference === null ? value === strips : Math.abs(difference) <= tolerance;
@@ -110,34 +100,21 @@ function lineOf(id: OpinionId, value: number | null, strips: number | null): Opi
   return { id, label: LABELS[id], kind, value, strips, difference, tolerance, agrees, reason };
 }
 
-/** Strips as usual; finer ones where these do not agree, and then whether the two ends only touch a limit. */
-export function agreeingStrips(curve: MomentCurvature): {
+/** What strips of a curve came to, how finely they were cut, and why they differ where they do. */
+export interface AgreeingStrips {
   readonly strips: number;
-  readonly fibre: FibreCurve;
-  readonly isTouching: boolean;
-} {
-  const isClose = (fibre: FibreCurve) => curveLines(curve, fibre).every((line) => line.agrees);
-  const coarse = fibreCurve(curve.model, STRIPS);
-  if (isClose(coarse)) return { strips: STRIPS, fibre: coarse, isTouching: false };
-  const fine = fibreCurve(curve.model, FINE_STRIPS);
-  const isTouching = !isClose(fine) && isTouchingBetween(curve.model, curve, fine);
-  return { strips: FINE_STRIPS, fibre: fine, isTouching };
+  readonly lines: readonly OpinionLine[];
+  /** Null where they agree, or no reason is known. */
+  readonly reason: string | null;
 }
 
-/** From the earlier end to the later one the section never passes a limit by more than the share that counts as touching. */
-function isTouchingBetween(model: CurveModel, curve: MomentCurvature, fibre: FibreCurve): boolean {
-  const ends = [curve.ultimate.curvaturePerMm, fibre.ultimate.curvaturePerMm].sort((a, b) => a - b);
-  const tracer = new Tracer(model);
-  return Array.from(
-    { length: TOUCH_STATES },
-    (_, i) => ends[0]! + (i / TOUCH_STATES) * (ends[1]! - ends[0]!),
-  ).every((phi) => {
-    const point = tracer.pointAt(phi);
-    const crushing = point.topStrain - phi * model.crushingDepthMm;
-    return (
-      crushing <= (1 + TOUCHED) * model.crushingStrain &&
-      point.tensionStrain <= (1 + TOUCHED) * model.steel.ruptureStrain &&
-      point.momentNmm >= (1 - TOUCHED) * 0.8 * curve.peak.momentNmm
-    );
-  });
+/** A curve's marks by strips as usual, or by finer ones where these do not agree. */
+export function agreeingStrips(curve: MomentCurvature): AgreeingStrips {
+  const coarse = curveLines(curve, fibreCurve(curve.model, STRIPS));
+  if (coarse.every((line) => line.agrees)) return { strips: STRIPS, lines: coarse, reason: null };
+  const fibre = fibreCurve(curve.model, FINE_STRIPS);
+  const lines = curveLines(curve, fibre);
+  if (lines.every((line) => line.agrees)) return { strips: FINE_STRIPS, lines, reason: null };
+  const isPeakTheSame = lines.every((line) => line.id !== 'peak' || line.agrees);
+  return { strips: FINE_STRIPS, lines, reason: reasonForDifference(curve, fibre, isPeakTheSame) };
 }
