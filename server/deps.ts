@@ -1,7 +1,7 @@
 import type { Store } from 'express-session';
 import type pg from 'pg';
 import type { Passwords } from './compute/passwords.ts';
-import type { SheetFiles } from './compute/sheet-files.ts';
+import type { SheetDesk } from './compute/sheet-desk.ts';
 import type { Config } from './config.ts';
 import type { Database } from './db/client.ts';
 import type { RunEvents } from './jobs/run-events.ts';
@@ -17,6 +17,6 @@ export interface Deps {
   readonly sessionStore: Store;
   readonly passwords: Passwords;
   readonly tally: WorkTally;
-  readonly sheetFiles: SheetFiles;
+  readonly sheetDesk: SheetDesk;
   readonly runEvents: RunEvents;
 }

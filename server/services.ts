@@ -1,7 +1,7 @@
 import type { ProcessKind } from '#shared/contract/operations.ts';
 import { startPasswords } from './compute/passwords.ts';
 import { startComputePool } from './compute/pool.ts';
-import { startSheetFiles } from './compute/sheet-files.ts';
+import { startSheetDesk } from './compute/sheet-desk.ts';
 import type { Config, WorkerConfig } from './config.ts';
 import { createDatabase, createPool, type Database } from './db/client.ts';
 import type { Deps } from './deps.ts';
@@ -25,7 +25,7 @@ export interface Services {
 export async function startServices(config: Config): Promise<Services> {
   const { databaseUrl } = config;
   const log = createLog(config.logLevel);
-  const [passwords, sheetFiles] = await Promise.all([startPasswords(config.passwordCost), startSheetFiles()]);
+  const [passwords, sheetDesk] = await Promise.all([startPasswords(config.passwordCost), startSheetDesk()]);
   const pool = createPool(databaseUrl, log);
   const db = createDatabase(pool);
   const sessionStore = createSessionStore(pool, log);
@@ -36,13 +36,13 @@ export async function startServices(config: Config): Promise<Services> {
     ? await startWork('service', { config, db, log, runEvents, tally })
     : undefined;
   return {
-    deps: { config, log, pool, db, sessionStore, passwords, tally, sheetFiles, runEvents },
+    deps: { config, log, pool, db, sessionStore, passwords, tally, sheetDesk, runEvents },
     endStreams: () => runEvents.endStreams(),
     stop: async () => {
       sessionStore.close();
       await work?.stop();
       await runEvents.stop();
-      await Promise.all([passwords.close(), sheetFiles.close()]);
+      await Promise.all([passwords.close(), sheetDesk.close()]);
       await pool.end();
     },
   };

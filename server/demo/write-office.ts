@@ -1,5 +1,6 @@
 import type { Role } from '#shared/contract/records.ts';
 import { expandSpace, sectionAt } from '#shared/sweep/space.ts';
+import { studiesOf } from '#shared/engine/studies.ts';
 import { ENGINE_VERSION } from '#shared/engine/version.ts';
 import { DEMO_ACCOUNTS } from '../cli/demo-accounts.mjs';
 import type { Database } from '../db/client.ts';
@@ -14,7 +15,7 @@ import { runViews } from '../db/schema/run-views.ts';
 import { runs } from '../db/schema/runs.ts';
 import { sweeps } from '../db/schema/sweeps.ts';
 import { labelOf } from '../features/candidates/label.ts';
-import { hashSnapshot, takeSnapshot } from '../features/candidates/snapshot.ts';
+import { hashSnapshot, takeSnapshot, withStudies } from '../features/candidates/snapshot.ts';
 import type { DemoRun } from './office.ts';
 import { DEMO_PROJECTS } from './projects.ts';
 import { DEMO_CANDIDATES, type DemoCandidate } from './shortlist.ts';
@@ -142,7 +143,8 @@ async function writeCandidate(
   const { front } = views[0]!.result;
   const index = front[Math.round(candidate.alongFront * (front.length - 1))]!.index;
   const section = sectionAt(expandSpace(space, basis.barStandard), index);
-  const snapshot = takeSnapshot({ section, demand, rules, basis });
+  const inputs = { section, demand, rules, basis };
+  const snapshot = withStudies(takeSnapshot(inputs), studiesOf(section, inputs));
   const id = stableId(`candidate/${sweep.project}/${label}`);
   const pin = { to: 'proposed', by: 'engineer', note: candidate.note, after: 0 } as const;
   const steps = [pin, ...candidate.steps];

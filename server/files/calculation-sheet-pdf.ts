@@ -1,241 +1,200 @@
 import type { Paper } from '#shared/contract/endpoints.ts';
-import type { SheetValue } from '#shared/contract/records.ts';
-import { LARGE_SHEET } from '#shared/drawing/large-plan.ts';
-import { OWN_VALUE_TOLERANCE, ownValueTexts } from '#shared/sheet/own-value.ts';
-import type {
-  KeyText,
-  NumberedLine,
-  Sheet,
-  SheetPart,
-  SheetTable,
-  Signature,
-  WorkingLine,
-} from '#shared/sheet/sheet.ts';
-import { symbolAndAmount, textRuns } from '#shared/sheet/text-runs.ts';
-import { PdfFlow } from './pdf-flow.ts';
-import { breakRuns, lineHeightPt, writeLines, type RunStyle } from './pdf-runs.ts';
-import { drawSection } from './pdf-section-drawing.ts';
-import { writeTable, type PdfParagraph, type PdfTable } from './pdf-table.ts';
+import { CURVE_SHEET } from '#shared/drawing/curve-plan.ts';
+import { OWN_VALUE_TOLERANCE } from '#shared/sheet/own-value.ts';
+import type { Sheet, SheetPart, Signature } from '#shared/sheet/sheet.ts';
+import { textRuns } from '#shared/sheet/text-runs.ts';
+import { drawCurvePlot } from './pdf-curve-plot.ts';
+import { PdfFlow, type PdfBox } from './pdf-flow.ts';
+import { breakSegments, lineHeightPt, writeLines, type RunStyle } from './pdf-runs.ts';
+import { writeInputs, writeTitle } from './pdf-sheet-head.ts';
+import { rowTable, workingTable, type OwnValues } from './pdf-sheet-tables.ts';
+import { tableHeightPt, writeTable, type PdfTable } from './pdf-table.ts';
 
-export interface SheetFile {
+export interface SheetFile extends OwnValues {
   readonly sheet: Sheet;
-  /** Own values of whoever checked it. */
-  readonly ownValues: readonly SheetValue[];
   readonly paper: Paper;
   readonly writtenAt: Date;
   readonly footer: string;
   readonly isCompressed?: boolean;
 }
 
+/** A sheet that runs over is set again a little smaller, and no smaller than the last: that still reads on paper. */
+const DENSITIES = [1, 0.94, 0.88] as const;
+const MOST_PAGES = 4;
+
 /** A calculation sheet as a PDF: the same words and digits as the page. The same sheet is the same bytes. */
 export function calculationSheetPdf(file: SheetFile): Promise<Buffer> {
-  const { sheet, paper, writtenAt, footer, isCompressed = true } = file;
-  const flow = new PdfFlow(paper, { title: sheet.title, writtenAt, footer }, isCompressed);
-  writeTitle(flow, sheet);
-  writeInputs(flow, sheet);
-  for (const part of sheet.parts) writePart(flow, part, file);
-  writeHeading(flow, 'Conventions');
-  for (const text of sheet.conventions) writeText(flow, text, BODY);
-  writeHeading(flow, 'Not checked');
-  writeText(flow, `${sheet.notChecked.join('; ')}.`, BODY);
-  writeHeading(flow, 'Caution');
-  for (const text of sheet.caution) writeText(flow, text, { ...BODY, isBold: true });
-  writeFrozen(flow, sheet);
-  writeSignatures(flow, sheet.signatures);
+  let flow = writeSheet(file, DENSITIES[0]);
+  for (const density of DENSITIES.slice(1)) if (flow.pageCount > MOST_PAGES) flow = writeSheet(file, density);
   return flow.finish();
 }
 
-const BODY: RunStyle = { sizePt: 7.2 };
+function writeSheet(file: SheetFile, density: number): PdfFlow {
+  const { sheet, paper, writtenAt, footer, isCompressed = true } = file;
+  const flow = new PdfFlow(paper, { title: sheet.title, writtenAt, footer }, { isCompressed, density });
+  writeTitle(flow, sheet);
+  writeInputs(flow, sheet);
+  for (const parts of paired(sheet.parts))
+    if (parts.length === 2) writePair(flow, parts, file);
+    else for (const part of parts) writePart(flow, part, file);
+  writeWords(flow, sheet);
+  writeFrozen(flow, sheet);
+  writeSignatures(flow, sheet.signatures);
+  return flow;
+}
+
+const BODY: RunStyle = { sizePt: 6.6 };
+const SMALL: RunStyle = { sizePt: 6.3, colour: 'muted' };
+const PARAGRAPH_GAP_PT = 1.2;
+
+const linesOf = (flow: PdfFlow, text: string, style: RunStyle, widthPt: number) =>
+  breakSegments(flow, [{ runs: textRuns(text, { isProse: true }), style }], widthPt);
+
+const textHeightPt = (flow: PdfFlow, text: string, style: RunStyle, widthPt: number) =>
+  linesOf(flow, text, style, widthPt).length * lineHeightPt(style.sizePt) + PARAGRAPH_GAP_PT;
 
 function writeText(flow: PdfFlow, text: string, style: RunStyle): void {
-  const lines = breakRuns(flow, textRuns(text, { isProse: true }), flow.widthPt, style);
+  const lines = linesOf(flow, text, style, flow.widthPt);
   const height = lines.length * lineHeightPt(style.sizePt);
   flow.ensure(height);
-  writeLines(flow, lines, { xPt: flow.leftPt, yPt: flow.yPt, widthPt: flow.widthPt }, style);
-  flow.yPt += height + 1.5;
+  writeLines(flow, lines, { xPt: flow.leftPt, yPt: flow.yPt, widthPt: flow.widthPt }, style.sizePt);
+  flow.yPt += height + PARAGRAPH_GAP_PT;
 }
 
 /** A heading and at least two lines of what it heads stay together. */
-const HEADING_PT = 9;
-const KEPT_WITH_HEADING_PT = 60;
+const HEADING_PT = 8.6;
+const HEADING_ROOM_PT = HEADING_PT + 7.5;
+const KEPT_WITH_HEADING_PT = 56;
 
 function writeHeading(flow: PdfFlow, text: string): void {
   flow.ensure(KEPT_WITH_HEADING_PT);
-  flow.yPt += 5;
+  flow.yPt += 4;
   flow.write(text, flow.leftPt, flow.yPt + HEADING_PT, { font: 'bold', sizePt: HEADING_PT });
-  flow.yPt += HEADING_PT + 5;
+  flow.yPt += HEADING_ROOM_PT - 4;
 }
 
-function writeTitle(flow: PdfFlow, { title, subtitle, verdict }: Sheet): void {
-  flow.write(title, flow.leftPt, flow.yPt + 13, { font: 'bold', sizePt: 13 });
-  flow.write(subtitle, flow.leftPt, flow.yPt + 25, { sizePt: 8, colour: 'muted' });
-  const mark = verdict.meets ? '✓' : '✕';
-  flow.write(`${mark} ${verdict.text}`, flow.leftPt, flow.yPt + 38, {
-    font: 'bold',
-    sizePt: 8.5,
-    colour: verdict.meets ? 'meets' : 'fails',
-  });
-  flow.yPt += 44;
-  flow.rule(flow.yPt, { colour: 'ink', weightPt: 0.8 });
-  flow.yPt += 6;
-}
+/** Narrow tables stand side by side where both are there. */
+const PAIRS: Readonly<Record<string, string>> = { 'second-opinion': 'twin' };
 
-const DRAWING_SCALE = 0.66;
-
-/** The drawing on the left, what went into the numbers on the right. */
-function writeInputs(flow: PdfFlow, { drawing, inputs, units }: Sheet): void {
-  const top = flow.yPt;
-  drawSection(flow, { ...drawing, units }, { xPt: flow.leftPt - 8, yPt: top, scale: DRAWING_SCALE });
-  const xPt = flow.leftPt + LARGE_SHEET.width * DRAWING_SCALE + 4;
-  const widthPt = flow.leftPt + flow.widthPt - xPt;
-  let yPt = top;
-  for (const group of inputs) {
-    flow.write(group.title, xPt, yPt + 8, { font: 'bold', sizePt: 7.6 });
-    yPt = writeKeys(flow, group.items, { xPt, yPt: yPt + 11, widthPt }) + 3;
+function paired(parts: readonly SheetPart[]): SheetPart[][] {
+  const groups: SheetPart[][] = [];
+  for (const part of parts) {
+    const before = groups.at(-1);
+    if (before?.length === 1 && PAIRS[before[0]!.id] === part.id) before.push(part);
+    else groups.push([part]);
   }
-  flow.yPt = Math.max(yPt, top + LARGE_SHEET.height * DRAWING_SCALE) + 2;
+  return groups;
 }
 
-interface KeyBox {
-  readonly xPt: number;
-  readonly yPt: number;
-  readonly widthPt: number;
-}
+type Own = SheetFile;
 
-/** Names on the left, values against the right edge. Answers where it ended. */
-function writeKeys(flow: PdfFlow, items: readonly KeyText[], box: KeyBox): number {
-  const style = { sizePt: 6.8 };
-  let { yPt } = box;
-  for (const { label, value } of items) {
-    const name = breakRuns(flow, textRuns(label, { isProse: true }), box.widthPt * 0.4, style);
-    const text = breakRuns(flow, textRuns(value, { isProse: true }), box.widthPt * 0.62, style);
-    writeLines(flow, name, { ...box, yPt }, { ...style, colour: 'muted' });
-    writeLines(flow, text, { ...box, yPt, isRight: true }, style);
-    yPt += Math.max(name.length, text.length) * lineHeightPt(style.sizePt);
-  }
-  return yPt;
-}
+const tableOf = (part: SheetPart, own: Own): PdfTable =>
+  part.kind === 'working' ? workingTable(part.lines, own) : rowTable(part.table, own);
 
-function writePart(flow: PdfFlow, part: SheetPart, file: SheetFile): void {
-  writeHeading(flow, part.title);
-  if (part.kind === 'working') {
-    writeTable(flow, workingTable(part, file));
+const remarksOf = (part: SheetPart) => (part.kind === 'working' ? [] : part.table.remarks);
+
+function writePart(flow: PdfFlow, part: SheetPart, own: Own): void {
+  if (part.kind === 'curve') {
+    writeCurve(flow, part, own);
     return;
   }
-  for (const remark of part.table.remarks) writeText(flow, remark, { sizePt: 6.6, colour: 'muted' });
-  writeTable(flow, rowTable(part.table, file));
+  writeHeading(flow, part.title);
+  for (const remark of remarksOf(part)) writeText(flow, remark, SMALL);
+  writeTable(flow, tableOf(part, own));
 }
 
-const OWN_COLUMN = { label: 'Own value', share: 10, isFigure: true } as const;
+const PAIR_GAP_PT = 16;
+const FIRST_OF_PAIR = 0.57;
 
-/** What the checker got, or an empty line to write on. */
-function ownCell({ sheet, ownValues }: SheetFile, line: NumberedLine): PdfParagraph[] {
-  return ownValueTexts(ownValues, line, sheet.units).flatMap(({ amount, difference, meets, word }) => [
-    { text: amount },
-    {
-      text: `${meets ? '✓' : '≠'} ${word} ${difference}`.trim(),
-      isSmall: true,
-      colour: meets ? ('meets' as const) : ('fails' as const),
-    },
-  ]);
+function writePair(flow: PdfFlow, parts: readonly SheetPart[], own: Own): void {
+  const room = flow.widthPt - PAIR_GAP_PT;
+  const boxes: readonly PdfBox[] = [
+    { leftPt: flow.leftPt, widthPt: room * FIRST_OF_PAIR },
+    { leftPt: flow.leftPt + room * FIRST_OF_PAIR + PAIR_GAP_PT, widthPt: room * (1 - FIRST_OF_PAIR) },
+  ];
+  const heights = parts.map(
+    (part, i) =>
+      HEADING_ROOM_PT +
+      remarksOf(part).reduce((sum, text) => sum + textHeightPt(flow, text, SMALL, boxes[i]!.widthPt), 0) +
+      tableHeightPt(flow, tableOf(part, own), boxes[i]!.widthPt),
+  );
+  flow.ensure(Math.max(...heights));
+  flow.beside(boxes, (i) => writePart(flow, parts[i]!, own));
 }
 
-function workingTable(part: Extract<SheetPart, { kind: 'working' }>, file: SheetFile): PdfTable {
-  return {
-    columns: [
-      { label: 'No.', share: 3.5, isFigure: true },
-      { label: 'Formula', share: 40, isFigure: false },
-      { label: 'Numbers put in', share: 35, isFigure: false },
-      { label: 'Result', share: 15, isFigure: true },
-      OWN_COLUMN,
-      { label: 'Clause', share: 14, isFigure: false },
-    ],
-    rows: part.lines.map((line) => [
-      [{ text: `${line.number}`, colour: 'muted' }],
-      [
-        { text: [line.symbol, line.relation, line.expression].join(' ').replace(' :', ':'), isFormula: true },
-        { text: line.remark, isSmall: true, colour: 'muted' },
-      ],
-      [{ text: inputRuns(line) }],
-      [{ text: unbroken(line.result), isBold: true }],
-      ownCell(file, line),
-      [{ text: line.clause, isSmall: true }],
-    ]),
-  };
+const PLOT_SCALE = 0.55;
+const PLOT_GAP_PT = 10;
+
+/** The plot on the left, its marked points beside it, under the laws and definitions. */
+function writeCurve(flow: PdfFlow, part: Extract<SheetPart, { kind: 'curve' }>, own: Own): void {
+  const plotWidthPt = CURVE_SHEET.width * PLOT_SCALE;
+  const leftPt = flow.leftPt + plotWidthPt + PLOT_GAP_PT;
+  const besidePlot = { leftPt, widthPt: flow.leftPt + flow.widthPt - leftPt };
+  const table = tableOf(part, own);
+  const text = part.table.remarks.reduce((sum, t) => sum + textHeightPt(flow, t, SMALL, flow.widthPt), 0);
+  const plotPt = CURVE_SHEET.height * PLOT_SCALE;
+  flow.ensure(HEADING_ROOM_PT + text + Math.max(plotPt, tableHeightPt(flow, table, besidePlot.widthPt)));
+  writeHeading(flow, part.title);
+  for (const remark of part.table.remarks) writeText(flow, remark, SMALL);
+  flow.beside([{ leftPt: flow.leftPt, widthPt: plotWidthPt }, besidePlot], (i) => {
+    if (i === 1) writeTable(flow, table);
+    else {
+      drawCurvePlot(flow, part.plot, { xPt: flow.leftPt, yPt: flow.yPt, scale: PLOT_SCALE });
+      flow.yPt += plotPt;
+    }
+  });
 }
 
-/** A number and its unit stay on one line. */
-const unbroken = (text: string) => text.replaceAll(' ', '\u00a0');
+const WORDS_GAP_PT = 16;
+const CONVENTIONS_SHARE = 0.6;
 
-const COMMA = { text: ', ', isSymbol: false, isSub: false } as const;
-
-const inputRuns = ({ inputs }: WorkingLine) =>
-  inputs.flatMap(({ symbol, text }, i) => [...(i > 0 ? [COMMA] : []), ...symbolAndAmount(symbol, text)]);
-
-/** Columns by their names where words need more room than figures do. */
-const SHARE: Readonly<Record<string, number>> = {
-  i: 3,
-  Face: 11,
-  Item: 22,
-  From: 44,
-  Amount: 14,
-  Check: 38,
-  Demand: 11,
-  Capacity: 12,
-  Result: 8,
-  Clause: 20,
-};
-const FIGURE_SHARE = 9;
-
-function rowTable(table: SheetTable, file: SheetFile): PdfTable {
-  return {
-    columns: [
-      { label: 'No.', share: 4, isFigure: true },
-      ...table.columns.map(({ label, isFigure }) => ({
-        label,
-        isFigure,
-        share: SHARE[label] ?? FIGURE_SHARE,
-      })),
-      {
-        ...OWN_COLUMN,
-        label: `Own ${table.comparedColumn}`,
-      },
-    ],
-    rows: table.rows.map((row) => [
-      [{ text: `${row.number}`, colour: 'muted' as const }],
-      ...row.cells.map((text, i) =>
-        cellOf(row, text, { isFirst: i === 0, isFigure: table.columns[i]!.isFigure }),
-      ),
-      ownCell(file, row),
-    ]),
-  };
+/** How the numbers are to be read, beside what is not checked and the caution. */
+function writeWords(flow: PdfFlow, { conventions, notChecked, caution }: Sheet): void {
+  const room = flow.widthPt - WORDS_GAP_PT;
+  const [first, second] = [room * CONVENTIONS_SHARE, room * (1 - CONVENTIONS_SHARE)];
+  const unchecked = `${notChecked.join('; ')}.`;
+  const bold = { ...BODY, isBold: true };
+  const heightOf = (texts: readonly (readonly [string, RunStyle])[], widthPt: number) =>
+    texts.reduce((sum, [text, style]) => sum + textHeightPt(flow, text, style, widthPt), HEADING_ROOM_PT);
+  const left = heightOf(
+    conventions.map((text) => [text, BODY]),
+    first,
+  );
+  const right =
+    heightOf([[unchecked, BODY]], second) +
+    heightOf(
+      caution.map((text) => [text, bold]),
+      second,
+    );
+  flow.ensure(Math.max(left, right));
+  const boxes = [
+    { leftPt: flow.leftPt, widthPt: first },
+    { leftPt: flow.leftPt + first + WORDS_GAP_PT, widthPt: second },
+  ];
+  flow.beside(boxes, (i) => {
+    writeHeading(flow, i === 0 ? 'Conventions' : 'Not checked');
+    if (i === 0) for (const text of conventions) writeText(flow, text, BODY);
+    else {
+      writeText(flow, unchecked, BODY);
+      writeHeading(flow, 'Caution');
+      for (const text of caution) writeText(flow, text, bold);
+    }
+  });
 }
 
-function cellOf(
-  row: SheetTable['rows'][number],
-  text: string,
-  { isFirst, isFigure }: { readonly isFirst: boolean; readonly isFigure: boolean },
-): PdfParagraph[] {
-  const isVerdict = row.passes !== undefined && (text === 'meets' || text === 'fails');
-  if (isVerdict)
-    return [
-      { text: `${row.passes ? '✓' : '✕'} ${text}`, isBold: true, colour: row.passes ? 'meets' : 'fails' },
-    ];
-  const note = isFirst ? (row.note ?? '') : '';
-  return [{ text: isFigure ? unbroken(text) : text }, { text: note, isSmall: true, colour: 'muted' }];
-}
+const SIGNATURE_PT = 42;
 
+/** Frozen versions stand on the page of the signatures. */
 function writeFrozen(flow: PdfFlow, { frozen }: Sheet): void {
+  flow.ensure(KEPT_WITH_HEADING_PT + SIGNATURE_PT);
   writeHeading(flow, 'Frozen with the pin');
   writeText(flow, frozen.map(({ label, value }) => `${label} ${value}`).join(' · '), BODY);
   writeText(
     flow,
     `An own value meets the sheet within ${100 * OWN_VALUE_TOLERANCE} % of it; the difference is (own − sheet)/sheet.`,
-    { sizePt: 6.6, colour: 'muted' },
+    SMALL,
   );
 }
-
-const SIGNATURE_PT = 46;
 
 function writeSignatures(flow: PdfFlow, signatures: readonly Signature[]): void {
   flow.ensure(SIGNATURE_PT);
@@ -243,7 +202,7 @@ function writeSignatures(flow: PdfFlow, signatures: readonly Signature[]): void 
   const widthPt = (flow.widthPt - gap * (signatures.length - 1)) / signatures.length;
   signatures.forEach(({ role, name, date }, i) => {
     const xPt = flow.leftPt + i * (widthPt + gap);
-    const lineY = flow.yPt + 30;
+    const lineY = flow.yPt + 28;
     flow.write([name, date].filter((text) => text !== '').join(', '), xPt, lineY - 3, { sizePt: 7.2 });
     flow.doc
       .moveTo(xPt, lineY)

@@ -3,7 +3,7 @@ import type { Paper } from '#shared/contract/endpoints.ts';
 import { PDF_FONTS, pdfFontFile, type PdfFont } from './pdf-fonts.ts';
 
 /** Points of 1/72 in. */
-const MARGIN_PT = 40;
+const MARGIN_PT = 38;
 const FOOTER_PT = 16;
 const PAPER_SIZE: Readonly<Record<Paper, 'A4' | 'LETTER'>> = { a4: 'A4', letter: 'LETTER' };
 
@@ -32,6 +32,12 @@ export interface PdfTextStyle {
   readonly colour?: PdfColour;
 }
 
+/** A part of a page's width. */
+export interface PdfBox {
+  readonly leftPt: number;
+  readonly widthPt: number;
+}
+
 /** Pages that are filled from the top; whoever writes asks for room first. */
 export class PdfFlow {
   readonly doc: PDFKit.PDFDocument;
@@ -39,9 +45,17 @@ export class PdfFlow {
   /** Width at 1000 points of what was measured before: most words of a sheet come many times. */
   readonly #widths = new Map<string, number>();
   yPt = MARGIN_PT;
+  #box: PdfBox | undefined;
 
-  constructor(paper: Paper, head: PdfHead, isCompressed: boolean) {
+  readonly #density: number;
+
+  constructor(
+    paper: Paper,
+    head: PdfHead,
+    { isCompressed, density }: { readonly isCompressed: boolean; readonly density: number },
+  ) {
     this.#head = head;
+    this.#density = density;
     this.doc = new PDFDocument({
       size: PAPER_SIZE[paper],
       margin: 0,
@@ -58,16 +72,42 @@ export class PdfFlow {
       },
     });
     for (const font of PDF_FONTS) this.doc.registerFont(font, pdfFontFile(font));
+    this.doc.scale(density);
+  }
+
+  /** Everything on a page is drawn at the density's size, so that more of it has room: points here are larger ones. */
+  get #pageWidthPt() {
+    return this.doc.page.width / this.#density;
+  }
+  get #pageHeightPt() {
+    return this.doc.page.height / this.#density;
+  }
+  get pageCount() {
+    return this.doc.bufferedPageRange().count;
   }
 
   get leftPt() {
-    return MARGIN_PT;
+    return this.#box?.leftPt ?? MARGIN_PT;
   }
   get widthPt() {
-    return this.doc.page.width - 2 * MARGIN_PT;
+    return this.#box?.widthPt ?? this.#pageWidthPt - 2 * MARGIN_PT;
+  }
+
+  /** Writes side by side what fits on one page together, each from the same top, and goes on below the longest. */
+  beside(boxes: readonly PdfBox[], write: (i: number) => void): void {
+    const top = this.yPt;
+    let lowest = top;
+    boxes.forEach((box, i) => {
+      this.#box = box;
+      this.yPt = top;
+      write(i);
+      lowest = Math.max(lowest, this.yPt);
+    });
+    this.#box = undefined;
+    this.yPt = lowest;
   }
   get #bottomPt() {
-    return this.doc.page.height - MARGIN_PT - FOOTER_PT;
+    return this.#pageHeightPt - MARGIN_PT - FOOTER_PT;
   }
 
   hasRoom = (heightPt: number): boolean => this.yPt + heightPt <= this.#bottomPt;
@@ -76,6 +116,7 @@ export class PdfFlow {
   ensure(heightPt: number): boolean {
     if (this.hasRoom(heightPt)) return false;
     this.doc.addPage();
+    this.doc.scale(this.#density);
     this.yPt = MARGIN_PT;
     return true;
   }
@@ -114,7 +155,7 @@ export class PdfFlow {
     const { start, count } = this.doc.bufferedPageRange();
     for (let page = start; page < start + count; page++) {
       this.doc.switchToPage(page);
-      const baseline = this.doc.page.height - MARGIN_PT + 4;
+      const baseline = this.#pageHeightPt - MARGIN_PT + 4;
       const style = { sizePt: 6.5, colour: 'muted' } as const;
       const pageText = `page ${page + 1} of ${count}`;
       this.write(this.#head.footer, this.leftPt, baseline, style);

@@ -8,12 +8,19 @@ export interface RunStyle {
   readonly isBold?: boolean;
 }
 
+/** Runs of one style; several of them are set one behind the other. */
+export interface Segment {
+  readonly runs: readonly TextRun[];
+  readonly style: RunStyle;
+}
+
 interface Piece {
   readonly text: string;
   readonly font: PdfFont;
   readonly sizePt: number;
   readonly dropPt: number;
   readonly widthPt: number;
+  readonly colour: PdfColour;
 }
 
 /** Pieces without a place to break between them. */
@@ -29,20 +36,15 @@ export interface RunLine {
 
 const SUB_SIZE = 0.72;
 const SUB_DROP = 0.18;
-export const lineHeightPt = (sizePt: number) => sizePt * 1.28;
+export const lineHeightPt = (sizePt: number) => sizePt * 1.25;
 
-/** Breaks runs into lines of a width. A word wider than the line stands alone on it. */
-export function breakRuns(
-  flow: PdfFlow,
-  runs: readonly TextRun[],
-  widthPt: number,
-  style: RunStyle,
-): RunLine[] {
-  const spacePt = flow.measure(' ', { sizePt: style.sizePt });
+/** Breaks segments into lines of a width; spaces are those of the first. A word wider than the line stands alone on it. */
+export function breakSegments(flow: PdfFlow, segments: readonly Segment[], widthPt: number): RunLine[] {
+  const spacePt = spaceOf(flow, segments[0]?.style.sizePt ?? 0);
   const lines: RunLine[] = [];
   let words: Word[] = [];
   let usedPt = 0;
-  for (const word of wordsOf(flow, runs, style)) {
+  for (const word of segments.flatMap((segment) => wordsOf(flow, segment))) {
     const neededPt = words.length === 0 ? word.widthPt : usedPt + spacePt + word.widthPt;
     if (words.length > 0 && neededPt > widthPt) {
       lines.push({ words, widthPt: usedPt });
@@ -55,7 +57,9 @@ export function breakRuns(
   return lines;
 }
 
-function wordsOf(flow: PdfFlow, runs: readonly TextRun[], style: RunStyle): Word[] {
+const spaceOf = (flow: PdfFlow, sizePt: number) => flow.measure(' ', { sizePt });
+
+function wordsOf(flow: PdfFlow, { runs, style }: Segment): Word[] {
   const words: Word[] = [];
   let pieces: Piece[] = [];
   const close = () => {
@@ -76,27 +80,24 @@ function pieceOf(flow: PdfFlow, { isSymbol, isSub }: TextRun, text: string, styl
   const font: PdfFont = style.isBold ? 'bold' : isSymbol ? 'slanted' : 'plain';
   const sizePt = isSub ? style.sizePt * SUB_SIZE : style.sizePt;
   const dropPt = isSub ? style.sizePt * SUB_DROP : 0;
-  return { text, font, sizePt, dropPt, widthPt: flow.measure(text, { font, sizePt }) };
+  const widthPt = flow.measure(text, { font, sizePt });
+  return { text, font, sizePt, dropPt, widthPt, colour: style.colour ?? 'ink' };
 }
 
-/** Writes lines from a top edge down; `right` sets them against the right edge. */
+/** Writes lines of a size from a top edge down; `isRight` sets them against the right edge. */
 export function writeLines(
   flow: PdfFlow,
   lines: readonly RunLine[],
   box: { readonly xPt: number; readonly yPt: number; readonly widthPt: number; readonly isRight?: boolean },
-  style: RunStyle,
+  sizePt: number,
 ): void {
-  const spacePt = flow.measure(' ', { sizePt: style.sizePt });
+  const spacePt = spaceOf(flow, sizePt);
   lines.forEach((line, row) => {
-    const baseline = box.yPt + style.sizePt + row * lineHeightPt(style.sizePt);
+    const baseline = box.yPt + sizePt + row * lineHeightPt(sizePt);
     let x = box.isRight ? box.xPt + box.widthPt - line.widthPt : box.xPt;
     for (const { pieces } of line.words) {
-      for (const { text, font, sizePt, dropPt, widthPt } of pieces) {
-        flow.write(text, x, baseline + dropPt, {
-          font,
-          sizePt,
-          ...(style.colour ? { colour: style.colour } : {}),
-        });
+      for (const { text, widthPt, dropPt, ...style } of pieces) {
+        flow.write(text, x, baseline + dropPt, style);
         x += widthPt;
       }
       x += spacePt;

@@ -1,7 +1,13 @@
 import { z } from 'zod';
 import type { Evaluation } from '../engine/evaluation.ts';
+import type { Studies } from '../engine/studies.ts';
 import type { ViewResult } from '../sweep/result.ts';
-import { designBasisSchema, fullBasisSchema, priceBookSchema, savedDesignBasisSchema } from './design-basis.ts';
+import {
+  designBasisSchema,
+  fullBasisSchema,
+  priceBookSchema,
+  savedDesignBasisSchema,
+} from './design-basis.ts';
 import {
   bounded,
   depthMmSchema,
@@ -16,6 +22,7 @@ import { sweepDefinitionSchema, viewSchema } from './sweep-definition.ts';
 
 /** The engine's and the sweep's own outputs are trusted on the way out; the schema names them without re-checking. */
 const evaluationSchema = z.custom<Evaluation>((v) => typeof v === 'object' && v !== null);
+const studiesSchema = z.custom<Studies>((v) => typeof v === 'object' && v !== null);
 const viewResultSchema = z.custom<ViewResult>((v) => typeof v === 'object' && v !== null);
 
 export const ROLES = ['admin', 'engineer', 'checker', 'estimator', 'viewer'] as const;
@@ -180,6 +187,8 @@ export const snapshotSchema = z.object({
   basis: fullBasisSchema,
   engineVersion: z.string(),
   evaluation: evaluationSchema,
+  /** Curve, second algorithm, twin, scatter; pins from before they were frozen too have none. */
+  studies: studiesSchema.optional(),
 });
 export type Snapshot = z.infer<typeof snapshotSchema>;
 

@@ -2,11 +2,13 @@ import type { UnitSystem } from '../contract/design-basis.ts';
 import type { Snapshot } from '../contract/records.ts';
 import type { CheckResult } from '../engine/evaluation.ts';
 import { checkLabel } from '../print/check-labels.ts';
-import { formatNumber, formatQuantity } from '../print/format-quantity.ts';
+import { formatQuantity } from '../print/format-quantity.ts';
 import { quantitiesInText } from '../print/quantities-in-text.ts';
 import { figuresOf } from './figures.ts';
 import type { Numbering } from './numbering.ts';
+import { ratioText } from './ratio-text.ts';
 import type { SheetPart } from './sheet.ts';
+import { figureColumn, verdictColumn, wordColumn } from './table-column.ts';
 
 /** Every check as the engine judged it: demand, capacity, their ratio against 1, the clause. */
 export function checkTable(snapshot: Snapshot, units: UnitSystem, numbering: Numbering): SheetPart {
@@ -18,12 +20,12 @@ export function checkTable(snapshot: Snapshot, units: UnitSystem, numbering: Num
     kind: 'table',
     table: {
       columns: [
-        { label: 'Check', isFigure: false },
-        { label: 'Demand', isFigure: true },
-        { label: 'Capacity', isFigure: true },
-        { label: 'Ratio', isFigure: true },
-        { label: 'Result', isFigure: false },
-        { label: 'Clause', isFigure: false },
+        wordColumn('Check'),
+        figureColumn('Demand'),
+        figureColumn('Capacity'),
+        figureColumn('Ratio'),
+        verdictColumn('Result'),
+        wordColumn('Clause'),
       ],
       rows: snapshot.evaluation.checks.map((check) => ({
         id: `check-${check.id}`,
@@ -47,11 +49,4 @@ export function checkTable(snapshot: Snapshot, units: UnitSystem, numbering: Num
       comparedColumn: 'Ratio',
     },
   };
-}
-
-/** Three decimals, and never `1.000` for a ratio that is past its limit. */
-function ratioText(ratio: number): string {
-  if (ratio > 99) return '> 99';
-  if (ratio > 1 && ratio < 1.0005) return formatNumber(ratio, 7);
-  return ratio.toFixed(3);
 }

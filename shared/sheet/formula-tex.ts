@@ -8,6 +8,15 @@ const GREEK: Readonly<Record<string, string>> = {
   μ: '\\mu ',
   σ: '\\sigma ',
   ρ: '\\rho ',
+  α: '\\alpha ',
+  γ: '\\gamma ',
+  λ: '\\lambda ',
+  η: '\\eta ',
+  ν: '\\nu ',
+  θ: '\\theta ',
+  Δ: '\\Delta ',
+  δ: '\\delta ',
+  κ: '\\kappa ',
 };
 const RELATIONS: Readonly<Record<string, string>> = {
   '+': '+',
@@ -19,10 +28,11 @@ const RELATIONS: Readonly<Record<string, string>> = {
   ',': ',\\ ',
   ';': ';\\ ',
 };
+const PRIME: Readonly<Record<string, string>> = { '′': "'", '″': "''" };
 const POWERS: Readonly<Record<string, string>> = { '²': '^{2}', '³': '^{3}' };
 
 /** Functions, which are set as such. */
-const FUNCTIONS = ['max', 'min'];
+const FUNCTIONS = ['max', 'min', 'cot', 'tan', 'sin', 'cos'];
 
 /** A rule told in words, with no formula to set. */
 export const isSentence = (formula: string): boolean =>
@@ -50,7 +60,7 @@ export function formulaTex(formula: string): string {
 function symbolTex({ factor, base, prime, sub }: SymbolParts): string {
   const letters = GREEK[base] ?? base;
   const below = sub === '' ? '' : `_{${GREEK[sub] ?? `\\mathrm{${sub}}`}}`;
-  return `${GREEK[factor] ?? factor}${letters}${prime === '' ? '' : "'"}${below}`;
+  return `${GREEK[factor] ?? factor}${letters}${PRIME[prime] ?? ''}${below}`;
 }
 
 /** Writes a product, a quotient of the product before the stroke and the one factor after it, and sums of these. */

@@ -2,15 +2,11 @@ import type { UnitSystem } from '../contract/design-basis.ts';
 import type { Snapshot } from '../contract/records.ts';
 import type { LayerState } from '../engine/evaluation.ts';
 import { formatQuantity } from '../print/format-quantity.ts';
-import { unitLabel, type DisplayKind } from '../print/units.ts';
+import type { DisplayKind } from '../print/units.ts';
 import { figuresOf } from './figures.ts';
 import type { Numbering } from './numbering.ts';
 import type { SheetPart } from './sheet.ts';
-
-const heading = (label: string, kind: DisplayKind, units: UnitSystem) => {
-  const unit = unitLabel(kind, units);
-  return { label: unit === '' ? label : `${label}, ${unit}`, isFigure: true };
-};
+import { figureColumn, unitColumn, wordColumn } from './table-column.ts';
 
 /** Strain, stress and force of every layer at ultimate, with each force's moment about the compression face. */
 export function layerTable(snapshot: Snapshot, units: UnitSystem, numbering: Numbering): SheetPart | null {
@@ -36,16 +32,16 @@ export function layerTable(snapshot: Snapshot, units: UnitSystem, numbering: Num
     kind: 'table',
     table: {
       columns: [
-        { label: 'i', isFigure: true },
-        { label: 'Face', isFigure: false },
-        heading('d', 'length', units),
-        heading('A', 'area', units),
-        { label: 'ε', isFigure: true },
-        heading('fs', 'stress', units),
-        { label: 'Steel', isFigure: false },
-        { label: 'Displaced', isFigure: false },
-        heading('T', 'force', units),
-        heading('T d', 'moment', units),
+        figureColumn('i'),
+        wordColumn('Face'),
+        unitColumn('d', 'length', units),
+        unitColumn('A', 'area', units),
+        figureColumn('ε'),
+        unitColumn('fs', 'stress', units),
+        wordColumn('Steel'),
+        wordColumn('Displaced'),
+        unitColumn('T', 'force', units),
+        unitColumn('T d', 'moment', units),
       ],
       rows: flexure.layers.map((layer, i) => ({
         id: `force-${i + 1}`,

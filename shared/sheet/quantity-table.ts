@@ -8,6 +8,7 @@ import type { Numbering } from './numbering.ts';
 import type { QuantityItem } from './quantity-item.ts';
 import type { SheetPart, SheetRow } from './sheet.ts';
 import { steelItems } from './steel-items.ts';
+import { figureColumn, wordColumn } from './table-column.ts';
 
 /** Lines in money begin so: they are kept from readers without rates. */
 const MONEY = 'cost-';
@@ -65,11 +66,7 @@ export function quantityTable(snapshot: Snapshot, units: UnitSystem, numbering: 
     title: 'Quantities per length of beam',
     kind: 'table',
     table: {
-      columns: [
-        { label: 'Item', isFigure: false },
-        { label: 'From', isFigure: false },
-        { label: 'Amount', isFigure: true },
-      ],
+      columns: [wordColumn('Item'), wordColumn('From'), figureColumn('Amount')],
       rows: items.map(rowOf),
       remarks: [
         'Net steel is bars and stirrups; laps and waste are allowances, shares of the price book, and not part of it. Concrete is gross. A missing rate leaves the amount blank.',

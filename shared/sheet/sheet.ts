@@ -1,4 +1,5 @@
 import type { UnitSystem } from '../contract/design-basis.ts';
+import type { CurvePlanInput } from '../drawing/curve-plan.ts';
 import type { SectionGeometry } from '../drawing/section-geometry.ts';
 import type { SectionInput } from '../engine/section.ts';
 import type { DisplayKind } from '../print/units.ts';
@@ -62,13 +63,17 @@ export interface WorkingLine extends NumberedLine {
 export interface SheetColumn {
   readonly label: string;
   readonly isFigure: boolean;
+  /** Its word says whether the row passes. */
+  readonly isVerdict?: boolean;
 }
 
 export interface SheetRow extends NumberedLine {
   readonly cells: readonly string[];
-  /** For a check: whether it passes. */
+  /** Where the row has a verdict: whether it passes. */
   readonly passes?: boolean;
   readonly note?: string;
+  /** Stands out among its neighbours. */
+  readonly isStrong?: boolean;
 }
 
 export interface SheetTable {
@@ -76,11 +81,12 @@ export interface SheetTable {
   readonly rows: readonly SheetRow[];
   /** Formulas and remarks that hold for every row. */
   readonly remarks: readonly string[];
-  /** The column that a checker's own value is compared with. */
-  readonly comparedColumn: string;
+  /** The column that a checker's own value is compared with; null where there is none. */
+  readonly comparedColumn: string | null;
 }
 
 export type SheetPart = { readonly id: string; readonly title: string } & (
   | { readonly kind: 'working'; readonly lines: readonly WorkingLine[] }
   | { readonly kind: 'table'; readonly table: SheetTable }
+  | { readonly kind: 'curve'; readonly plot: CurvePlanInput; readonly table: SheetTable }
 );

@@ -10,20 +10,25 @@ export interface SymbolParts {
  * Letters that carry a subscript of letters. Other letters stand alone or are numbered, so that no word of a sentence is
  * taken for a symbol.
  */
-const SUBSCRIPTED = 'fAEMIVFTdyεβφμρσ';
-const LETTERS = 'cu|cr|ty|ut|yt|s\\d+|\\d+|[scyrtunwvbgφ]';
-const EXTREME = ',(?:min|max|waive)';
+const SUBSCRIPTED = 'fAEMIVTNLdyεβφμρσαγληνθΔδκ';
+const LETTERS = [
+  // Eurocode: design, characteristic and mean values, stirrups.
+  'Ed|Rd|ck|yk|cd|yd|ud|uk|ctm|cm|cc|ywd|ywk|sw|sy|su|max|min',
+  'cu\\d?|cr|ty|ut|yt|ye|s\\d+|c\\d|\\d+|[scyrtunwvbgkpdφΔ]',
+].join('|');
+const EXTREME = ',(?:min|max|waive|long|lim|req|eff|[csd])';
+/** Lengths whose letter alone would make symbols of words (by, hat, lb). */
+const NAMED = 'b(?:eff|[wft])|hf|sw|l[n0]';
 
 /** One symbol from the place where the search stands; anything after it must not be a letter. */
 const SYMBOL = new RegExp(
   [
     '(?<factor>φ(?=[MV]))?(?:',
     '(?<whole>kd)|(?<cover>c(?=c))(?<coverSub>c)',
-    // bf, bt, hf, sw, ln of a flange
-    '|(?<slab>b(?=[ft])|h(?=f)|s(?=w)|l(?=n))(?<slabSub>[ftwn])',
-    `|(?<lettered>[${SUBSCRIPTED}])(?<prime>′?)(?<sub>(?:${LETTERS})(?:${EXTREME})?)?`,
+    `|(?<named>${NAMED})`,
+    `|(?<lettered>[${SUBSCRIPTED}])(?<prime>[′″]?)(?<sub>(?:${LETTERS})(?:${EXTREME})?)?`,
     `|(?<plain>[A-Za-z])(?<plainPrime>′?)(?<plainSub>\\d+|${EXTREME})?`,
-    ')(?![\\p{L}′])',
+    ')(?![\\p{L}\\p{Nd}′])',
   ].join(''),
   'uy',
 );
@@ -33,15 +38,15 @@ export function findSymbolAt(text: string, from: number): { parts: SymbolParts; 
   SYMBOL.lastIndex = from;
   const found = SYMBOL.exec(text);
   if (found?.groups === undefined) return undefined;
-  const { factor, whole, cover, coverSub, slab, slabSub, lettered, prime, sub, plain, plainPrime, plainSub } =
+  const { factor, whole, cover, coverSub, named, lettered, prime, sub, plain, plainPrime, plainSub } =
     found.groups;
   return {
     length: found[0].length,
     parts: {
       factor: factor ?? '',
-      base: whole ?? cover ?? slab ?? lettered ?? plain ?? '',
+      base: whole ?? cover ?? named?.slice(0, 1) ?? lettered ?? plain ?? '',
       prime: prime ?? plainPrime ?? '',
-      sub: coverSub ?? slabSub ?? sub ?? plainSub?.replace(',', '') ?? '',
+      sub: coverSub ?? named?.slice(1) ?? sub ?? plainSub?.replace(',', '') ?? '',
     },
   };
 }

@@ -4,6 +4,7 @@ import { formatQuantity } from '../print/format-quantity.ts';
 import { figuresOf } from './figures.ts';
 import { isSentence, splitRemark } from './formula-tex.ts';
 import type { Numbering } from './numbering.ts';
+import { residualText } from './residual-text.ts';
 import type { WorkingLine } from './sheet.ts';
 
 /** What the parts of a sheet are made of: topics of the working, and the residual, which stands after the layers. */
@@ -61,9 +62,3 @@ function formulaParts(formula: string): Pick<WorkingLine, 'relation' | 'expressi
   const parts = splitRemark(formula);
   return { ...parts, relation: parts.expression.includes('=') ? 'from' : '=' };
 }
-
-/** Below this the rest is the rounding of the arithmetic. */
-const ROUNDING = 1e-12;
-
-const residualText = (value: number): string =>
-  Math.abs(value) < ROUNDING ? 'under 10⁻¹²' : formatQuantity(value, 'ratio', 'si', { digits: 2 });

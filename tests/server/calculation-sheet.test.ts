@@ -208,17 +208,13 @@ describe('the sheet as a file', () => {
 
   test('made on the thread is what it is without one', async () => {
     const candidate = candidateOf();
-    const file = {
-      sheet: buildSheet({ project: { name: 'Footbridge', number: 'P-1' }, units: 'si', candidate }),
-      ownValues: [],
-      paper: 'letter',
-      writtenAt: new Date(candidate.createdAt),
-      footer: 'P-1',
-    } as const;
+    const source = { project: { name: 'Footbridge', number: 'P-1' }, units: 'si', candidate } as const;
+    const writtenAt = new Date(candidate.createdAt);
+    const rest = { ownValues: [], paper: 'letter', writtenAt, footer: 'P-1' } as const;
     const [apart, again, here] = await Promise.all([
-      office.deps.sheetFiles.pdf(file),
-      office.deps.sheetFiles.pdf(file),
-      calculationSheetPdf(file),
+      office.deps.sheetDesk.pdf({ source, ...rest }),
+      office.deps.sheetDesk.pdf({ source, ...rest }),
+      calculationSheetPdf({ sheet: buildSheet(source), ...rest }),
     ]);
     expect(apart.equals(here)).toBe(true);
     expect(again.equals(here)).toBe(true);

@@ -2,6 +2,7 @@ import { createHash } from 'node:crypto';
 import { eq } from 'drizzle-orm';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { candidates } from '#server/db/schema/candidates.ts';
+import { studiesOf } from '#shared/engine/studies.ts';
 import type { Candidate, CandidateState, Run } from '#shared/contract/records.ts';
 import type { SectionInput } from '#shared/engine/section.ts';
 import { addProject, DESIGN_BASIS, SMALL_SWEEP, type OfficeProject } from '../support/office-project.ts';
@@ -69,6 +70,7 @@ describe('a pin', () => {
     expect(answer.status).toBe(200);
     const pinned: Candidate = answer.body;
     const shown = await (await office.as('engineer')).get(`/runs/${run.id}/sections/${front[0]}`).expect(200);
+    const { section, demand, rules, basis } = pinned.snapshot;
     expect(pinned.snapshot).toEqual({
       section: shown.body.section,
       evaluation: shown.body.evaluation,
@@ -76,6 +78,7 @@ describe('a pin', () => {
       rules: SMALL_SWEEP.rules,
       basis: run.basis,
       engineVersion: run.engineVersion,
+      studies: JSON.parse(JSON.stringify(studiesOf(section, { demand, rules, basis }))),
     });
     expect(pinned).toMatchObject({
       label: 'A',

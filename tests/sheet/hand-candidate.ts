@@ -1,6 +1,7 @@
 import type { Candidate } from '#shared/contract/records.ts';
 import { evaluateSection } from '#shared/engine/evaluate.ts';
 import type { DesignBasis, SectionInput } from '#shared/engine/section.ts';
+import { studiesOf } from '#shared/engine/studies.ts';
 import { takeoff } from '#shared/engine/takeoff.ts';
 import { MPA_PER_KSI, MM_PER_IN, NMM_PER_KIPFT } from '#shared/engine/units.ts';
 import { METRIC_BASIS, NO_RULES } from '#shared/verification/layered-section.ts';
@@ -91,6 +92,7 @@ export function candidateOf(parts: Parts = {}): Candidate {
         basis,
         engineVersion: evaluation.engineVersion,
         evaluation,
+        studies: studiesOf(section, { basis, demand, rules: NO_RULES }),
       }),
     ) as Candidate['snapshot'],
     hash: 'ab'.repeat(32),

@@ -1,6 +1,7 @@
 import { and, eq, ne } from 'drizzle-orm';
 import type { CandidateState, Person, PinInput, Snapshot } from '#shared/contract/records.ts';
 import type { Database } from '../../db/client.ts';
+import type { Deps } from '../../deps.ts';
 import { violatesReference } from '../../db/database-error.ts';
 import { candidateComments } from '../../db/schema/candidate-comments.ts';
 import { candidateTransitions } from '../../db/schema/candidate-transitions.ts';
@@ -14,11 +15,11 @@ import { canFollow, COMMENT, findRefusal, PIN } from './policy.ts';
 import { requirePinnable } from './pinnable.ts';
 import { requireCandidate } from './queries.ts';
 import { listSheetValues } from './sheet-values.ts';
-import { hashSnapshot } from './snapshot.ts';
+import { hashSnapshot, withStudies } from './snapshot.ts';
 
 /** Freezes a section with everything that decided its numbers. Answers the candidate's id. */
 export async function pinCandidate(
-  db: Database,
+  { db, sheetDesk }: Pick<Deps, 'db' | 'sheetDesk'>,
   person: Person,
   { projectId, input }: { projectId: string; input: PinInput },
 ): Promise<string> {
@@ -26,7 +27,9 @@ export async function pinCandidate(
   requireRole(person, PIN, 'pin candidates');
   const { beam } = await requireReadableBeam(db, person, input.beamId);
   if (beam.projectId !== project.id) throw notFound('Beam');
-  const snapshot = await requirePinnable(db, { project, beam, source: input.source });
+  const pinned = await requirePinnable(db, { project, beam, source: input.source });
+  const { section, basis, demand, rules } = pinned;
+  const snapshot = withStudies(pinned, await sheetDesk.studies(section, { basis, demand, rules }));
   return db
     .transaction((tx) => insertCandidate(tx, { person, beam, input, snapshot }))
     .catch((error: unknown) => {

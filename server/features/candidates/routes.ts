@@ -18,8 +18,8 @@ export function registerCandidateRoutes(router: Router, deps: Deps): void {
     return (await listCandidates(db, id)).map((record) => presentCandidate(record, person));
   });
 
-  bind(router, deps, 'pinCandidate', async ({ person, params, body, deps: { db } }) =>
-    readCandidate(db, person, await pinCandidate(db, person, { projectId: params.id, input: body })),
+  bind(router, deps, 'pinCandidate', async ({ person, params, body }) =>
+    readCandidate(deps.db, person, await pinCandidate(deps, person, { projectId: params.id, input: body })),
   );
 
   bind(router, deps, 'getCandidate', ({ person, params, deps: { db } }) =>

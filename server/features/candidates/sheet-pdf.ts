@@ -2,7 +2,6 @@ import type { Router } from 'express';
 import { z } from 'zod';
 import { PAPERS, SHEET_PDF_PATH } from '#shared/contract/endpoints.ts';
 import { idSchema } from '#shared/contract/numbers.ts';
-import { buildSheet } from '#shared/sheet/build-sheet.ts';
 import type { Deps } from '../../deps.ts';
 import { requireReadableProject } from '../../http/project-access.ts';
 import { requireSignedInPerson } from '../../http/signed-in-person.ts';
@@ -17,7 +16,7 @@ const querySchema = z.object({
 });
 
 /** The sheet as a file, for whoever may read the candidate and with what that reader is shown of it. */
-export function registerSheetPdf(router: Router, { db, sheetFiles }: Deps): void {
+export function registerSheetPdf(router: Router, { db, sheetDesk }: Deps): void {
   router.get(SHEET_PDF_PATH, async (req, res) => {
     const person = await requireSignedInPerson(db, req);
     const { id } = requireValidParams(paramsSchema, req.params);
@@ -25,15 +24,16 @@ export function registerSheetPdf(router: Router, { db, sheetFiles }: Deps): void
     const record = await requireCandidate(db, person, id);
     const { projectId, label, createdAt, hash } = record.candidate;
     const project = await requireReadableProject(db, person, { projectId, what: 'Candidate' });
+    const { name, number } = project;
     const candidate = presentCandidate(record, person);
-    const file = await sheetFiles.pdf({
-      sheet: buildSheet({ project, units: project.designBasis.units, candidate }),
+    const file = await sheetDesk.pdf({
+      source: { project: { name, number }, units: project.designBasis.units, candidate },
       ownValues: presentSheetValues(await listSheetValues(db, record.candidate), person),
       paper,
       writtenAt: createdAt,
-      footer: `${project.number} · beam ${record.beam.mark} · candidate ${label} · ${hash.slice(0, 16)}`,
+      footer: `${number} · beam ${record.beam.mark} · candidate ${label} · ${hash.slice(0, 16)}`,
     });
-    const name = `sheet-${record.beam.mark}-${label}`.replace(/[^\w.-]+/g, '-');
-    res.type('application/pdf').attachment(`${name}.pdf`).send(file);
+    const fileName = `sheet-${record.beam.mark}-${label}`.replace(/[^\w.-]+/g, '-');
+    res.type('application/pdf').attachment(`${fileName}.pdf`).send(file);
   });
 }

@@ -1,6 +1,6 @@
 import { and, asc, eq } from 'drizzle-orm';
 import type { Person, SheetValue, SheetValueInput } from '#shared/contract/records.ts';
-import { comparableValues } from '#shared/sheet/build-sheet.ts';
+import { comparableValues } from '#shared/sheet/sheet-parts.ts';
 import type { Database } from '../../db/client.ts';
 import { candidates } from '../../db/schema/candidates.ts';
 import { people } from '../../db/schema/people.ts';

@@ -1,6 +1,7 @@
 import { createHash } from 'node:crypto';
 import type { Snapshot } from '#shared/contract/records.ts';
 import { evaluateSection } from '#shared/engine/evaluate.ts';
+import type { Studies } from '#shared/engine/studies.ts';
 import type { DesignBasis, Demand, SectionInput, UserRules } from '#shared/engine/section.ts';
 
 interface SnapshotInputs {
@@ -20,6 +21,12 @@ export function takeSnapshot({ section, demand, rules, basis }: SnapshotInputs):
   // Through JSON, so that what is hashed is what is stored and sent.
   return JSON.parse(JSON.stringify({ section, demand, rules, basis, engineVersion, evaluation })) as Snapshot;
 }
+
+/** With what is looked at beyond the checks, frozen too. */
+export const withStudies = (snapshot: Snapshot, studies: Studies): Snapshot => ({
+  ...snapshot,
+  studies: JSON.parse(JSON.stringify(studies)) as Studies,
+});
 
 /** SHA-256 over the canonical JSON: no blanks, keys sorted, as anyone can repeat it from the snapshot they are sent. */
 export function hashSnapshot(snapshot: Snapshot): string {

@@ -54,6 +54,9 @@ function show({ values = [], mayWrite = false, isUs = false }: Shown = {}) {
 
 const row = (text: string) => screen.getAllByText(text)[0]!.closest('tr')!;
 
+/** The setter is loaded after the sheet, on a busy machine seconds later. */
+const PATIENT = { timeout: 20_000 };
+
 describe('a calculation sheet on screen', () => {
   it('prints every line of the sheet with its number, result and clause', () => {
     const { sheet } = show();
@@ -75,7 +78,7 @@ describe('a calculation sheet on screen', () => {
 
   it('sets its formulas, with a fraction for a quotient', async () => {
     show();
-    await waitFor(() => expect(document.querySelectorAll('.katex').length).toBeGreaterThan(20));
+    await waitFor(() => expect(document.querySelectorAll('.katex').length).toBeGreaterThan(20), PATIENT);
     expect(row('7.161 ×10⁻⁶/mm').querySelector('.mfrac')).not.toBeNull();
     expect(document.querySelector('.katex-error')).toBeNull();
   });

@@ -3,10 +3,11 @@ import type { BarStandard } from '#shared/engine/section.ts';
 import type { Sheet, SheetPart } from '#shared/sheet/sheet.ts';
 import { OWN_VALUE_TOLERANCE } from '#shared/sheet/own-value.ts';
 import { textRuns } from '#shared/sheet/text-runs.ts';
+import { CurvePlot } from '#client/src/drawing/curve-plot.tsx';
 import { SectionDrawing } from '#client/src/drawing/section-drawing.tsx';
 import { KeyValue } from '#client/src/ui/key-value.tsx';
 import type { SheetReading } from './own-value-cell.tsx';
-import { RowsTable } from './rows-table.tsx';
+import { Remarks, RowsTable } from './rows-table.tsx';
 import { SymbolText } from './symbol-text.tsx';
 import { WorkingLinesTable } from './working-lines-table.tsx';
 
@@ -61,16 +62,43 @@ function Heading({ children }: { readonly children: React.ReactNode }) {
   return <h2 className="mb-2 break-after-avoid border-t border-ink pt-2 font-semibold">{children}</h2>;
 }
 
-function Part({ part, reading }: { readonly part: SheetPart; readonly reading: SheetReading }) {
+interface PartProps {
+  readonly part: SheetPart;
+  readonly reading: SheetReading;
+}
+
+function Part({ part, reading }: PartProps) {
   return (
     <section className="min-w-0" aria-label={part.title}>
       <Heading>{part.title}</Heading>
       {part.kind === 'working' ? (
         <WorkingLinesTable title={part.title} lines={part.lines} reading={reading} />
       ) : (
-        <RowsTable title={part.title} table={part.table} reading={reading} />
+        <>
+          <Remarks remarks={part.table.remarks} />
+          {part.kind === 'curve' ? (
+            <CurvePart part={part} reading={reading} />
+          ) : (
+            <RowsTable title={part.title} table={part.table} reading={reading} />
+          )}
+        </>
       )}
     </section>
+  );
+}
+
+/** The plot and the numbers of its marked points. */
+function CurvePart({ part, reading }: PartProps & { readonly part: { readonly kind: 'curve' } }) {
+  return (
+    <div className="grid min-w-0 grid-cols-[minmax(0,1fr)] items-start gap-x-8 gap-y-3 xl:grid-cols-[26rem_minmax(0,1fr)] print:grid-cols-[18rem_minmax(0,1fr)]">
+      <figure>
+        <CurvePlot
+          title="Moment over curvature; its marked points are in the table beside it"
+          {...part.plot}
+        />
+      </figure>
+      <RowsTable title={part.title} table={part.table} reading={reading} minWidth="40rem" />
+    </div>
   );
 }
 
