@@ -6,7 +6,7 @@ import type { Support } from '../engine/section.ts';
 import { barStandardLabel } from '../print/basis-labels.ts';
 import { flangeText } from '../print/flange-text.ts';
 import { formatQuantity } from '../print/format-quantity.ts';
-import { barsText, sizeText, steelText, stirrupText } from '../print/section-text.ts';
+import { barsText, givenStirrupText, sizeText, steelText } from '../print/section-text.ts';
 import type { DisplayKind } from '../print/units.ts';
 import type { InputGroup, KeyText } from './sheet.ts';
 
@@ -35,7 +35,7 @@ function sectionItems({ section, basis, evaluation }: Snapshot, units: UnitSyste
     { label: 'b × h', value: sizeText(section, units) },
     ...(evaluation.flange ? [{ label: 'Flange, bf × hf', value: flangeText(evaluation.flange, units) }] : []),
     { label: 'Steel', value: steelText(section, units) },
-    { label: 'Stirrups', value: stirrupText(section.stirrup, units) },
+    { label: 'Stirrups', value: givenStirrupText(section.stirrup, units) },
     { label: 'Clear cover to the stirrup', value: print(section.coverMm, 'length') },
     { label: 'f′c', value: print(section.fcMPa, 'stress') },
     { label: 'fy', value: print(section.fyMPa, 'stress') },

@@ -57,12 +57,13 @@ const nameOf = ({ bar, position, count }: SteelLine): string =>
       ? `Stirrups ${bar}, ${count} legs`
       : `${count}-${bar} ${POSITION[position]}`;
 
-function howOf(line: SteelLine, { section, basis }: Snapshot, units: UnitSystem): string {
+function howOf(line: SteelLine, { section, basis, evaluation }: Snapshot, units: UnitSystem): string {
   const length = (mm: number) => formatQuantity(mm, 'length', units, { digits: 4 });
   if (line.bar === 'area') return 'area times 7850 kg/m³';
   const unitMass = formatQuantity(getBar(basis.barStandard, line.bar).massKgPerM, MASS, units, { digits: 4 });
   if (line.position !== 'stirrups' || section.stirrup === null) return `${line.count} × ${unitMass}`;
-  const { spacingMm } = section.stirrup;
+  // results from before spacings were designed have those given
+  const { spacingMm } = (evaluation as Partial<typeof evaluation>).stirrups ?? section.stirrup;
   const cutMm = line.lengthPerM * spacingMm;
   const outsideMm = 2 * (section.widthMm + section.depthMm - 4 * section.coverMm);
   return `cut length ${length(cutMm)} (outside 2 (b + h − 4 cover) = ${length(outsideMm)}, hooks, ties and bends ${length(cutMm - outsideMm)}) / ${length(spacingMm)} × ${unitMass}`;

@@ -1,13 +1,9 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Issue } from '#shared/contract/errors.ts';
 import type { MeasureId } from '#shared/engine/measures.ts';
-import type { ConcreteRate, Rates } from '#shared/engine/section.ts';
 import { MPA_PER_PSI } from '#shared/engine/units.ts';
+import { measureGaps, type MeasureGap } from '#shared/sweep/measure-gaps.ts';
 import type { SweepProblem, View } from '#shared/sweep/problem.ts';
-import { expandAxis } from '#shared/sweep/axis.ts';
-
-/** Two strengths within this are one mix, MPa; as the engine matches them. */
-const SAME_MIX_MPA = 0.01;
 
 interface MeasureContext {
   readonly problem: SweepProblem;
@@ -28,48 +24,20 @@ export function findMissingInputs(view: View, { problem, units, path }: MeasureC
 }
 
 function missingFor(measure: MeasureId, problem: SweepProblem, units: UnitSystem): string | undefined {
-  if (measure === 'utilisation' && problem.demand.muNmm === null)
+  const gaps = measureGaps(measure, problem);
+  if (gaps.length === 0) return undefined;
+  if (measure === 'utilisation')
     return 'Utilisation needs a moment Mu: enter one in the demand, or choose another measure';
-  const { tension, compression } = problem.space;
-  if (measure === 'barCount' && (tension.kind === 'areas' || compression.kind === 'areas'))
-    return 'Steel given as areas has no number of bars: choose another measure';
-  if (measure === 'costPerM') {
-    const gaps = [...missingCostRates(problem), ...missingMixes(problem, units, (mix) => mix.costPerM3)];
-    return gaps.length === 0
-      ? undefined
-      : `Cost needs rates the price book does not have: ${gaps.join(', ')}`;
-  }
-  if (measure === 'co2eKgPerM') {
-    const steel = (problem.basis.rates?.steelCo2ePerKg ?? null) === null ? ['steel'] : [];
-    const gaps = [...steel, ...missingMixes(problem, units, (mix) => mix.co2eKgPerM3)];
-    return gaps.length === 0
-      ? undefined
-      : `Carbon needs factors the price book does not have: ${gaps.join(', ')}`;
-  }
-  return undefined;
+  if (measure === 'barCount') return 'Steel given as areas has no number of bars: choose another measure';
+  const named = gaps.map((gap) => gapText(gap, units)).join(', ');
+  return measure === 'costPerM'
+    ? `Cost needs rates the price book does not have: ${named}`
+    : `Carbon needs factors the price book does not have: ${named}`;
 }
 
-function missingCostRates({ basis, space }: SweepProblem): string[] {
-  const needed: readonly (readonly [keyof Rates, string])[] = [
-    ['steelPerKg', 'steel'],
-    ...(space.stirrups.some((stirrup) => stirrup !== null) ? [['stirrupPerKg', 'stirrups'] as const] : []),
-    ['formworkPerM2', 'formwork'],
-  ];
-  return needed.filter(([rate]) => (basis.rates?.[rate] ?? null) === null).map(([, name]) => name);
-}
-
-function missingMixes(
-  { basis, space }: SweepProblem,
-  units: UnitSystem,
-  rateOf: (mix: ConcreteRate) => number | null,
-): string[] {
-  const mixes = basis.rates?.concrete ?? [];
-  return expandAxis(space.fc)
-    .filter((fcMPa) => {
-      const mix = mixes.find((candidate) => Math.abs(candidate.fcMPa - fcMPa) <= SAME_MIX_MPA);
-      return mix === undefined || rateOf(mix) === null;
-    })
-    .map((fcMPa) => `concrete f′c ${formatStrength(fcMPa, units)}`);
+function gapText(gap: MeasureGap, units: UnitSystem): string {
+  if (gap.kind === 'rate') return gap.of;
+  return gap.kind === 'mix' ? `concrete f′c ${formatStrength(gap.fcMPa, units)}` : gap.kind;
 }
 
 function formatStrength(fcMPa: number, units: UnitSystem): string {
