@@ -92,7 +92,10 @@ describe('with the keyboard alone', () => {
     const visit = await office.visit('engineer');
     const { page } = visit;
     await visit.open(runPath('roof'));
-    await page.locator('canvas').waitFor();
+    await page
+      .getByRole('slider', { name: /^Section along the front/ })
+      .locator('canvas')
+      .waitFor();
     const stops = await tabTo(page, 'Pin to shortlist');
     expectInOrder(stops, [
       'Skip to the page',

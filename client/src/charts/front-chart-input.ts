@@ -1,5 +1,5 @@
 import type { Direction } from '#shared/engine/measures.ts';
-import type { DensityCell, FrontPoint, Point } from '#shared/sweep/result.ts';
+import type { FrontPoint, Point } from '#shared/sweep/result.ts';
 import type { AxisExtent } from './axis-extent.ts';
 import type { AxisScale } from './plot-axis.ts';
 
@@ -56,7 +56,6 @@ export interface FrontChartInput {
   readonly xExtent: AxisExtent;
   readonly yExtent: AxisExtent;
   readonly frame: PlotFrame;
-  readonly cells: readonly DensityCell[];
   readonly front: readonly FrontPoint[];
   /** The front without ranges, drawn faintly where ranges are set. */
   readonly outline: readonly Point[];

@@ -1,7 +1,6 @@
 import type { EChartsCoreOption } from 'echarts/core';
-import type { DensityCell, Point } from '#shared/sweep/result.ts';
-import { displayCells } from './density-cells.ts';
-import { bandTint, densityRects, pinFlags, targetLine } from './front-chart-shapes.ts';
+import type { Point } from '#shared/sweep/result.ts';
+import { bandTint, pinFlags, targetLine } from './front-chart-shapes.ts';
 import { axisTitle, betterWords, type ChartAxis, type FrontChartInput } from './front-chart-input.ts';
 import { frontSteps, type XY } from './front-steps.ts';
 import { frontMarks } from './front-marks.ts';
@@ -11,7 +10,6 @@ import type { AxisExtent } from './axis-extent.ts';
 
 /** Layers of the drawing, from the back. */
 const Z = {
-  density: 1,
   band: 2,
   target: 3,
   outline: 3,
@@ -71,28 +69,6 @@ function worstCorner(input: FrontChartInput): XY {
   };
 }
 
-/** Cells drawn in the axis' own places: on a logarithmic axis they are as wide as their logarithms are apart. */
-function placedCells({ x, y, cells }: FrontChartInput): DensityCell[] {
-  return cells
-    .map(({ x0, x1, y0, y1, count }) => ({
-      x0: toPlot(x, x0),
-      x1: toPlot(x, x1),
-      y0: toPlot(y, y0),
-      y1: toPlot(y, y1),
-      count,
-    }))
-    .filter(({ x0, y0 }) => Number.isFinite(x0) && Number.isFinite(y0));
-}
-
-function densitySeries(input: FrontChartInput) {
-  const { frame, xExtent, yExtent } = input;
-  const cells = displayCells(placedCells(input), {
-    xPxPerUnit: (frame.width - frame.left - frame.right) / (xExtent.max - xExtent.min),
-    yPxPerUnit: (frame.height - frame.top - frame.bottom) / (yExtent.max - yExtent.min),
-  });
-  return densityRects(cells, input);
-}
-
 function marks(input: FrontChartInput, points: readonly Point[], style: object) {
   return {
     type: 'scatter',
@@ -119,7 +95,6 @@ function seriesOf(input: FrontChartInput) {
   const { colours, front, band, selected } = input;
   const inBand = input.bandShare > 0 ? band : [];
   return [
-    { id: 'density', z: Z.density, ...densitySeries(input) },
     { id: 'band-tint', z: Z.band, ...bandTint(input) },
     { id: 'target', z: Z.target, ...targetLine(input) },
     marks(input, inBand, {
@@ -157,17 +132,11 @@ function seriesOf(input: FrontChartInput) {
 }
 
 interface Hovered {
-  readonly seriesId?: string;
   readonly value?: readonly number[];
 }
 
-/** Text under the pointer: a section's own words, or how many sections a cell holds. */
-function hoverText(input: FrontChartInput, hovered: Hovered): string {
-  const value = hovered.value ?? [];
-  if (hovered.seriesId === 'density') {
-    const count = value[4] ?? 0;
-    return `${count.toLocaleString('en-US')} ${count === 1 ? 'section meets' : 'sections meet'} every check here`;
-  }
+/** Text under the pointer: a section's own words. */
+function hoverText(input: FrontChartInput, { value = [] }: Hovered): string {
   const index = value[2];
   return index === undefined ? '' : input.describe(index).replaceAll('\n', '<br>');
 }

@@ -1,5 +1,4 @@
 import type { CustomSeriesOption } from 'echarts/charts';
-import type { DensityCell } from '#shared/sweep/result.ts';
 import type { FrontChartInput } from './front-chart-input.ts';
 import { toPlot } from './plot-axis.ts';
 
@@ -18,45 +17,6 @@ function boxBetween(api: RenderApi, from: readonly number[], to: readonly number
   const [ax = 0, ay = 0] = api.coord([...from]);
   const [bx = 0, by = 0] = api.coord([...to]);
   return { x: Math.min(ax, bx), y: Math.min(ay, by), width: Math.abs(bx - ax), height: Math.abs(by - ay) };
-}
-
-/** Faintest and strongest ink of a cell; the scale between is logarithmic, so one lonely section still shows. */
-const FAINT = 0.13;
-const STRONG = 0.62;
-
-/** Sections per unit of area: cells differ in size, so their counts alone would not compare. */
-const thickness = (cell: DensityCell): number => cell.count / ((cell.x1 - cell.x0) * (cell.y1 - cell.y0));
-
-/** Density cells, placed along the axes, as rectangles; the value is [x0, y0, x1, y1, count]. */
-export function densityRects(cells: readonly DensityCell[], input: FrontChartInput): CustomSeriesOption {
-  const thick = cells.map(thickness);
-  const least = Math.min(...thick);
-  const range = Math.log(Math.max(...thick) / least) || 1;
-  const { colours } = input;
-  return {
-    type: 'custom',
-    clip: true,
-    animation: false,
-    encode: { x: [0, 2], y: [1, 3] },
-    data: cells.map((cell) => [cell.x0, cell.y0, cell.x1, cell.y1, cell.count]),
-    renderItem: (params, api) => {
-      const box = boxBetween(
-        api,
-        [Number(api.value(0)), Number(api.value(1))],
-        [Number(api.value(2)), Number(api.value(3))],
-      );
-      const strength = Math.log((thick[params.dataIndex] ?? least) / least) / range;
-      return {
-        type: 'rect',
-        shape: {
-          ...box,
-          width: Math.max(2, box.width - 0.6),
-          height: Math.max(2, box.height - 0.6),
-        },
-        style: { fill: colours.meets, opacity: FAINT + (STRONG - FAINT) * strength },
-      };
-    },
-  };
 }
 
 /** Everything whose leading measure lies within the band of the best, as a tint across the plot. */

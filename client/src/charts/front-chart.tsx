@@ -1,9 +1,20 @@
-import { useEffect, useMemo, useState, type KeyboardEvent, type ReactNode } from 'react';
+import {
+  useEffect,
+  useMemo,
+  useRef,
+  useState,
+  type KeyboardEvent,
+  type PointerEvent,
+  type ReactNode,
+} from 'react';
+import type { DensityCell } from '#shared/sweep/result.ts';
 import { nextExtent } from './axis-extent.ts';
 import { Chart } from './chart.tsx';
 import { ChartControls, ZOOM_STEP } from './chart-controls.tsx';
 import { chartLimits } from './chart-limits.ts';
 import { movedExtents, windowOf, zoomedExtents, type ChartWindow, type Extents } from './chart-window.ts';
+import { boxAt, cloudBoxes } from './cloud-boxes.ts';
+import { CloudLayer } from './cloud-layer.tsx';
 import { CELL_PX } from './density-cells.ts';
 import type { ChartAxis, FrontChartInput, PlotFrame } from './front-chart-input.ts';
 import { frontChartOption } from './front-chart-option.ts';
@@ -30,8 +41,9 @@ export interface FrontChartProps extends Omit<
   FrontChartInput,
   'xExtent' | 'yExtent' | 'frame' | 'colours' | 'selected'
 > {
+  readonly cells: readonly DensityCell[];
   /** What the axes are fitted to: the whole result, whatever ranges are set. */
-  readonly fitted: Pick<FrontChartInput, 'cells' | 'front'>;
+  readonly fitted: { readonly cells: readonly DensityCell[]; readonly front: FrontChartInput['front'] };
   readonly selected: FrontChartInput['selected'];
   readonly window: ChartWindow | null;
   readonly onWindow: (window: ChartWindow | null) => void;
@@ -104,16 +116,23 @@ const SHIFT_OF_KEY: Readonly<Record<string, { readonly x: number; readonly y: nu
 
 const ZOOM_OF_KEY: Readonly<Record<string, number>> = { '+': ZOOM_STEP, '=': ZOOM_STEP, '-': 1 / ZOOM_STEP };
 
+/** While a hand moves what is shown the cloud is carried along; it is counted anew once the hand rests. */
+const RESTED_MS = 140;
+
 /** Tells the page what part is on screen, and in how many cells its cloud may be counted. */
 function useLayoutReport(props: FrontChartProps, extents: Extents, frame: PlotFrame | null): void {
   const { x, y, onLayout } = props;
+  const isFirst = useRef(true);
   useEffect(() => {
     if (frame === null) return;
     const cells = {
       x: Math.max(1, Math.floor((frame.width - frame.left - frame.right) / CELL_PX)),
       y: Math.max(1, Math.floor((frame.height - frame.top - frame.bottom) / CELL_PX)),
     };
-    onLayout({ ...windowOf(extents, { x, y }), cells });
+    const report = () => onLayout({ ...windowOf(extents, { x, y }), cells });
+    const timer = setTimeout(report, isFirst.current ? 0 : RESTED_MS);
+    isFirst.current = false;
+    return () => clearTimeout(timer);
   }, [extents, frame, x, y, onLayout]);
 }
 
@@ -135,7 +154,6 @@ export function FrontChart(props: FrontChartProps) {
     const input = {
       x,
       y,
-      cells,
       front,
       outline,
       markScale,
@@ -150,7 +168,6 @@ export function FrontChart(props: FrontChartProps) {
   }, [
     x,
     y,
-    cells,
     front,
     outline,
     markScale,
@@ -164,6 +181,14 @@ export function FrontChart(props: FrontChartProps) {
     frame,
     colours,
   ]);
+
+  const boxes = useMemo(
+    () => (frame === null ? [] : cloudBoxes({ x, y, cells, frame, xExtent: extents.x, yExtent: extents.y })),
+    [x, y, cells, frame, extents],
+  );
+  const [hovered, setHovered] = useState<number | null>(null);
+  const hover = ({ nativeEvent: { offsetX, offsetY } }: PointerEvent) =>
+    setHovered(boxAt(boxes, offsetX, offsetY)?.count ?? null);
 
   const pick = (xPx: number, yPx: number) => {
     if (frame === null) return;
@@ -213,33 +238,49 @@ export function FrontChart(props: FrontChartProps) {
           onWhole={() => show(null)}
         />
       </div>
-      <div
-        ref={ref}
-        role="slider"
-        tabIndex={front.length > 0 ? 0 : -1}
-        aria-label={`Section along the front, ${y.title} against ${x.title}`}
-        aria-valuemin={front.length > 0 ? 1 : 0}
-        aria-valuemax={front.length}
-        aria-valuenow={Math.max(place + 1, front.length > 0 ? 1 : 0)}
-        aria-valuetext={selected === null ? 'none selected' : describe(selected.index)}
-        onKeyDown={move}
-        onDoubleClick={() => show(null)}
-        {...handlers}
-        className="relative min-h-0 w-full flex-1 select-none"
-      >
-        {option !== null && <Chart option={option} onPoint={pick} />}
-        {box !== null && (
-          <div
+      <div className="relative min-h-0 w-full flex-1">
+        {frame !== null && <CloudLayer boxes={boxes} frame={frame} colour={colours.meets} />}
+        {hovered !== null && (
+          <p
             aria-hidden="true"
-            className="pointer-events-none absolute border border-ink bg-concrete/40"
-            style={{
-              left: Math.min(box.from.xPx, box.to.xPx),
-              top: Math.min(box.from.yPx, box.to.yPx),
-              width: Math.abs(box.to.xPx - box.from.xPx),
-              height: Math.abs(box.to.yPx - box.from.yPx),
-            }}
-          />
+            className="num pointer-events-none absolute top-1.5 right-4 z-10 text-xs text-muted"
+          >
+            {hovered.toLocaleString('en-US')} {hovered === 1 ? 'section' : 'sections'} here
+          </p>
         )}
+        <div
+          ref={ref}
+          role="slider"
+          tabIndex={front.length > 0 ? 0 : -1}
+          aria-label={`Section along the front, ${y.title} against ${x.title}`}
+          aria-valuemin={front.length > 0 ? 1 : 0}
+          aria-valuemax={front.length}
+          aria-valuenow={Math.max(place + 1, front.length > 0 ? 1 : 0)}
+          aria-valuetext={selected === null ? 'none selected' : describe(selected.index)}
+          onKeyDown={move}
+          onDoubleClick={() => show(null)}
+          {...handlers}
+          onPointerMove={(event) => {
+            handlers.onPointerMove(event);
+            hover(event);
+          }}
+          onPointerLeave={() => setHovered(null)}
+          className="absolute inset-0 select-none"
+        >
+          {option !== null && <Chart option={option} onPoint={pick} />}
+          {box !== null && (
+            <div
+              aria-hidden="true"
+              className="pointer-events-none absolute border border-ink bg-concrete/40"
+              style={{
+                left: Math.min(box.from.xPx, box.to.xPx),
+                top: Math.min(box.from.yPx, box.to.yPx),
+                width: Math.abs(box.to.xPx - box.from.xPx),
+                height: Math.abs(box.to.yPx - box.from.yPx),
+              }}
+            />
+          )}
+        </div>
       </div>
     </div>
   );

@@ -33,7 +33,6 @@ const input: FrontChartInput = {
   xExtent: { min: 5, max: 25, step: 5 },
   yExtent: { min: 0, max: 15, step: 5 },
   frame: { width: 700, height: 400, left: 50, right: 20, top: 30, bottom: 40 },
-  cells: [{ x0: 20, x1: 40, y0: 2, y1: 4, count: 12 }],
   front: [
     { index: 4, x: 20, y: 6, tieCount: 2, ties: [4, 9] },
     { index: 5, x: 30, y: 9, tieCount: 1, ties: [5] },
@@ -72,7 +71,6 @@ describe('the front chart', () => {
     const option = frontChartOption({ ...input, x, xExtent });
     const drawn = new Map((option.series as DrawnSeries[]).map((series) => [series.id, series]));
     expect(drawn.get('front')!.data[0]).toEqual({ value: [1, 6, 4] });
-    expect(drawn.get('density')!.data).toEqual([[1, 2, Math.log10(20), 4, 12]]);
     const { axisLabel } = option.xAxis as {
       axisLabel: { customValues: number[]; formatter: (place: number) => string };
     };
@@ -123,10 +121,6 @@ describe('the front chart', () => {
     expect(seriesOf({ target: null }).get('target')!.data).toEqual([]);
   });
 
-  it('keeps the number of sections in the cells it draws', () => {
-    expect(seriesOf().get('density')!.data).toEqual([[10, 2, 20, 4, 12]]);
-  });
-
   it('runs the step line from the worst y up the best mark and out to the worst x', () => {
     expect(seriesOf().get('front-steps')!.data).toEqual([
       [10, 0],
@@ -138,16 +132,14 @@ describe('the front chart', () => {
   });
 
   it('draws an empty run without a mark', () => {
-    const series = seriesOf({ front: [], band: [], cells: [], pins: [], selected: null });
-    for (const id of ['front', 'front-steps', 'band', 'band-tint', 'density', 'pins', 'selected'])
+    const series = seriesOf({ front: [], band: [], pins: [], selected: null });
+    for (const id of ['front', 'front-steps', 'band', 'band-tint', 'pins', 'selected'])
       expect(series.get(id)!.data).toEqual([]);
   });
 
-  it('reads a section out in its own words, and a cell by its number of sections', () => {
+  it('reads a section out in its own words', () => {
     const { formatter } = frontChartOption(input).tooltip as { formatter: (hovered: object) => string };
-    expect(formatter({ seriesId: 'front', value: [10, 6, 4] })).toBe('section 4<br>its values');
-    expect(formatter({ seriesId: 'density', value: [10, 2, 20, 4, 1] })).toContain('1 section meets');
-    expect(formatter({ seriesId: 'density', value: [10, 2, 20, 4, 1200] })).toContain('1,200 sections meet');
+    expect(formatter({ value: [10, 6, 4] })).toBe('section 4<br>its values');
   });
 
   it('says on each axis which way is better', () => {

@@ -8,8 +8,8 @@ import { FeasibleDesk, type FeasibleThread } from './feasible-desk.ts';
 
 /** Judged anew in a second or two by one thread; larger runs are explored by what they stored. */
 const MOST_SECTIONS = 6_000_000;
-/** A hundred megabytes of columns. */
-const MOST_FEASIBLE = 1_100_000;
+/** Some 140 MB of columns. */
+const MOST_FEASIBLE = 1_500_000;
 const LONGEST_WAIT_MS = 1500;
 
 export type FeasibleState =
