@@ -42,6 +42,7 @@ export function evaluatePlaced(
 ): Evaluation {
   const { basis, demand, rules } = context;
   const ruleSet = ruleSetOf(basis);
+  const flange = flangeOf(given, ruleSet);
   const { layout } = placed;
   const seismic = seismicRulesOf(ruleSet, basis);
   const skin = skinSteelOf(given, layout, basis, ruleSet);
@@ -80,7 +81,7 @@ export function evaluatePlaced(
       bendAllowance: basis.bendAllowance,
     },
     geometry: layout && geometryOf(section, layout),
-    flange: flangeOf(section, ruleSet),
+    flange,
     arrangement: placed.arrangement,
     stirrups: stirrups.built,
     skin,
@@ -108,7 +109,7 @@ export function evaluatePlaced(
             ...detailing,
           })
         : [],
-    notChecked: notCheckedFor(basis, demand),
+    notChecked: notCheckedFor(basis, demand, flange),
   };
 }
 

@@ -1,3 +1,4 @@
+import type { ResolvedFlange } from './flange.ts';
 import type { DesignBasis, Demand } from './section.ts';
 
 const SEISMIC_REST =
@@ -7,6 +8,7 @@ const SEISMIC_REST =
 export function notCheckedFor(
   basis: Pick<DesignBasis, 'seismicSystem' | 'skinBar'>,
   { muNmm, vuN, spanMm, support }: Demand,
+  flange: ResolvedFlange | null = null,
 ): readonly string[] {
   const isGiven = (value: number | null | undefined) => value !== null && value !== undefined;
   const hasSystem = basis.seismicSystem !== undefined && basis.seismicSystem !== 'none';
@@ -18,6 +20,7 @@ export function notCheckedFor(
     'limits of the code on f′c, fy, cover and lightweight concrete (normalweight is assumed)',
     isGiven(vuN) ? 'shear and stirrup spacing elsewhere along the span' : 'shear',
     'torsion',
+    ...flangeRest(flange),
     'crack width (the spacing of the bars is checked)',
     spanMm && support
       ? 'deflection, short and long term (least depth is checked)'
@@ -29,5 +32,15 @@ export function notCheckedFor(
     'axial force and biaxial bending',
     'lateral stability',
     'fire resistance and durability',
+  ];
+}
+
+/** What a slab brings that is the slab's design, or is left to the drawing. */
+function flangeRest(flange: ResolvedFlange | null): readonly string[] {
+  if (flange === null) return [];
+  return [
+    'shear between web and slab, and the slab’s own bars across the web',
+    ...(flange.face === 'tension' ? ['tension bars spread over the slab: all are placed in the web'] : []),
+    ...(flange.shape === 'l' ? ['sideways bending of an L: the slab is taken to hold it'] : []),
   ];
 }

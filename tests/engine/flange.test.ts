@@ -316,6 +316,18 @@ describe('quantities with a flange', () => {
   });
 });
 
+describe('what is not checked of a flange', () => {
+  it('names the slab’s own design, bars over a slab in tension, and an L bent sideways', () => {
+    const web = metricSection({ b: 300, h: 600, d: 540, As: 1200, fc: 28, fy: 420 });
+    const of = (shape: 't' | 'l', face: 'tension' | 'compression') =>
+      evaluated(withFlange(web, { shape, thicknessMm: 100, face }, 900)).notChecked.join('; ');
+    expect(evaluated(web).notChecked.join('; ')).not.toContain('slab');
+    expect(of('t', 'compression')).toContain('shear between web and slab');
+    expect(of('t', 'compression')).not.toContain('spread over the slab');
+    expect(of('l', 'tension')).toMatch(/spread over the slab.*sideways bending of an L/);
+  });
+});
+
 describe('a broken flange', () => {
   const web = metricSection({ b: 300, h: 600, d: 540, As: 1200, fc: 28, fy: 420 });
   it.each([
