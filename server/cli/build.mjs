@@ -19,7 +19,7 @@ export async function ensureBuilt() {
     if (fs.existsSync(stamp) && fs.readFileSync(stamp, 'utf8') === fingerprint) return;
     // Beside dist and renamed when complete: a build cut short, or one that fails, leaves the last good one.
     fs.rmSync(UNFINISHED, { recursive: true, force: true });
-    await Promise.all([buildClient(), buildServer()]);
+    await Promise.all([buildClient(), buildServer(path.join(UNFINISHED, 'server'))]);
     fs.writeFileSync(path.join(UNFINISHED, FINGERPRINT), fingerprint);
     fs.rmSync(OUTPUT, { recursive: true, force: true });
     fs.renameSync(UNFINISHED, OUTPUT);
@@ -38,8 +38,12 @@ async function buildClient() {
   });
 }
 
-/** One file per entry, packages left in node_modules. Threads load plain JavaScript and need no TypeScript loader. */
-async function buildServer() {
+/**
+ * One file per entry, packages left in node_modules. Threads load plain JavaScript and need no TypeScript loader.
+ *
+ * @param {string} outputFolder inside the project, so that packages are found
+ */
+export async function buildServer(outputFolder) {
   const { build, stop } = await import('esbuild');
   const computeFolder = path.join(PROJECT_ROOT, 'server', 'compute');
   const workers = fs.readdirSync(computeFolder).filter((file) => file.endsWith('worker.ts'));
@@ -54,7 +58,7 @@ async function buildServer() {
         workers.map((file) => [`workers/${path.basename(file, '.ts')}`, `server/compute/${file}`]),
       ),
     },
-    outdir: path.join(UNFINISHED, 'server'),
+    outdir: outputFolder,
     bundle: true,
     packages: 'external',
     platform: 'node',

@@ -6,7 +6,7 @@ import { runs } from '../db/schema/runs.ts';
 import { viewShards } from '../db/schema/view-shards.ts';
 import { workerProcesses } from '../db/schema/worker-processes.ts';
 import type { Log } from '../log.ts';
-import { enqueueMerge, mergeKeyOf, shardKeyOf } from './compute-jobs.ts';
+import { enqueueMerge, enqueueShards, mergeKeyOf, shardKeyOf } from './compute-jobs.ts';
 import { PROCESS_LOCK_CLASS } from './database-listener.ts';
 import { failView } from './end-view.ts';
 
@@ -26,6 +26,7 @@ export async function recoverJobs(
 ): Promise<void> {
   await markLost(db, ownProcessId, log);
   await freeWhatDeadWorkersHeld(db, log);
+  await enqueueWhatHasNoJob(db);
   await mergeWhatWaits(db);
   await failWhatNobodyCanCompute(db, log);
 }
@@ -77,8 +78,6 @@ async function freeWhatDeadWorkersHeld(db: Database, log: Log): Promise<void> {
 }
 
 const UNDER_WAY = inArray(runViews.state, ['queued', 'running']);
-const HAS_JOB = sql`(job.locked_at is not null or job.attempts < job.max_attempts)`;
-
 /** Views of which all is done, or that were cancelled, whose last worker died before it could say so. */
 async function mergeWhatWaits(db: Database): Promise<void> {
   const waiting = await db
@@ -99,6 +98,23 @@ async function mergeWhatWaits(db: Database): Promise<void> {
   for (const { viewId } of waiting) await enqueueMerge(db, viewId);
 }
 
+const JOB_OF_SHARD = sql`select from graphile_worker.jobs job
+  where job.key = ${shardKeyOf(sql`shard.view_id`, sql`shard.from_index`)}`;
+
+/**
+ * Shards that nobody has in work and no job is for: where two workers had one, one of them given up for dead, the end of
+ * the first took the job away from the second, which died.
+ */
+async function enqueueWhatHasNoJob(db: Database): Promise<void> {
+  const { rows } = await db.execute<{ view_id: string; from_index: string }>(sql`
+    select shard.view_id, shard.from_index from view_shards shard
+    join run_views on run_views.id = shard.view_id
+    where ${UNDER_WAY} and run_views.cancel_requested_at is null
+      and shard.result is null and shard.worker_id is null and not exists (${JOB_OF_SHARD})`);
+  for (const shard of rows) await enqueueShards(db, shard.view_id, Number(shard.from_index));
+}
+
+/** Views with a shard that was tried as often as it may be. */
 async function failWhatNobodyCanCompute(db: Database, log: Log): Promise<void> {
   const lost = await db
     .select({ viewId: runViews.id, runId: runViews.runId })
@@ -111,10 +127,7 @@ async function failWhatNobodyCanCompute(db: Database, log: Log): Promise<void> {
           not exists (select from view_shards where view_id = ${runViews.id})
           or exists (
             select from view_shards shard where shard.view_id = ${runViews.id} and shard.result is null
-              and not exists (
-                select from graphile_worker.jobs job
-                where job.key = ${shardKeyOf(sql`shard.view_id`, sql`shard.from_index`)} and ${HAS_JOB}
-              )
+              and exists (${JOB_OF_SHARD} and job.locked_at is null and job.attempts >= job.max_attempts)
           )
         )`,
       ),

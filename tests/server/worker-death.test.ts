@@ -1,7 +1,9 @@
 import { spawn, type ChildProcess } from 'node:child_process';
 import { once } from 'node:events';
+import path from 'node:path';
 import { eq } from 'drizzle-orm';
-import { afterEach, beforeEach, expect, test } from 'vitest';
+import { afterAll, afterEach, beforeAll, beforeEach, expect, test } from 'vitest';
+import { PROJECT_ROOT } from '#server/cli/project-paths.mjs';
 import { readConfig } from '#server/config.ts';
 import { createDatabase, createPool } from '#server/db/client.ts';
 import { runViews } from '#server/db/schema/run-views.ts';
@@ -14,6 +16,7 @@ import { startServices, type Services } from '#server/services.ts';
 import { finishResult } from '#shared/sweep/finish.ts';
 import { prepareSweep } from '#shared/sweep/prepared-sweep.ts';
 import { sweepRange } from '#shared/sweep/sweep-range.ts';
+import { buildForDrills } from '../support/drill-office.ts';
 import { addProject, scaledSweep } from '../support/office-project.ts';
 import { createTestDatabase, type TestDatabase } from '../support/test-database.ts';
 import { insertPeople } from '../support/office.ts';
@@ -22,12 +25,17 @@ import { testEnvironment } from '../support/test-environment.ts';
 const log = createLog('silent');
 const SWEEP = scaledSweep(20, 1801);
 
+let server: Awaited<ReturnType<typeof buildForDrills>>;
 let database: TestDatabase;
 let pool: ReturnType<typeof createPool>;
 let runEvents: RunEvents;
 let child: ChildProcess | undefined;
 let services: Services | undefined;
 
+beforeAll(async () => {
+  server = await buildForDrills();
+});
+afterAll(() => server.remove());
 beforeEach(async () => {
   database = await createTestDatabase();
   pool = createPool(database.url, log);
@@ -44,7 +52,8 @@ afterEach(async () => {
 });
 
 const startService = () =>
-  spawn(process.execPath, ['--import', 'tsx', 'server/main.ts'], {
+  spawn(process.execPath, [path.join(server.folder, 'main.js')], {
+    cwd: PROJECT_ROOT,
     env: { ...process.env, ...testEnvironment(database.url), PORT: '0' },
     stdio: ['ignore', 'ignore', 'inherit'],
   });
@@ -115,7 +124,7 @@ test.each(ENDINGS)(
     });
     expect(run.state).toBe('finished');
   },
-  60_000,
+  120_000,
 );
 
 test('a run cancelled while nobody computes it keeps what the killed process had done', async () => {
@@ -130,7 +139,7 @@ test('a run cancelled while nobody computes it keeps what the killed process had
   const { evaluated, result } = await until((view) => view.state === 'cancelled');
   expect(evaluated).toBe(left.evaluated);
   expect(result).toEqual(left.result);
-}, 60_000);
+}, 120_000);
 
 test('a run whose job ends its process each time is given up, and says so', async () => {
   const { until } = await startOfficeRun();

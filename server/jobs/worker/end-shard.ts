@@ -3,6 +3,7 @@ import { finishResult } from '#shared/sweep/finish.ts';
 import { chunkToBytes } from '../../compute/chunk-bytes.ts';
 import type { SweptPart } from '../../compute/sweep-in-chunks.ts';
 import type { Database } from '../../db/client.ts';
+import { runs } from '../../db/schema/runs.ts';
 import { viewShards } from '../../db/schema/view-shards.ts';
 import { changeView, STOP_COUNTING } from '../change-view.ts';
 import { enqueueMerge, enqueueShards } from '../compute-jobs.ts';
@@ -89,6 +90,8 @@ async function writeResult(
 /** The process stops: another, or this one's next start, takes the rest up again. */
 async function putBack(tx: Database, { runId, viewId }: ClaimedShard, from: number): Promise<void> {
   await enqueueShards(tx, viewId, from);
+  // Two shards put back at once would each see the other still held.
+  await tx.select({ id: runs.id }).from(runs).where(eq(runs.id, runId)).for('update');
   if (!(await isHeld(tx, viewId)))
     await changeView(tx, { runId, viewId, from: ['running'] }, { ...STOP_COUNTING, state: 'queued' });
 }
