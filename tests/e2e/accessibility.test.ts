@@ -90,6 +90,10 @@ describe('every page, on light and dark paper and at every width', () => {
     expect(await inspect(visits, PAGES_SIGNED_IN)).toEqual([]);
   });
 
+  it('has nothing that axe finds and fits its window, for who runs the service', async () => {
+    expect(await inspect([await office.visit('admin')], ['/operations'])).toEqual([]);
+  });
+
   it('has nothing that axe finds and fits its window, for a stranger', async () => {
     const engineer = await office.visit('engineer');
     const { token } = await engineer.call<ShareLink>('post', `${LIBRARY}/share-links`);

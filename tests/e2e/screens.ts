@@ -120,6 +120,7 @@ const OFFICE: readonly Screen[] = [
     await page.getByRole('dialog', { name: 'Keyboard shortcuts' }).waitFor();
   }),
   at('verification', 'engineer', '/verification'),
+  at('operations-idle', 'admin', '/operations'),
   at('not-found', 'engineer', '/no-such-page'),
   at('forbidden', 'engineer', '/forbidden'),
 ];
@@ -225,6 +226,15 @@ const SHORTLIST: readonly Screen[] = [
 /** Last: the first of them keeps both cores busy for a while. */
 const LONG_RUNS: readonly Screen[] = [
   { name: 'run-under-way', role: 'engineer', arrive: async (visit) => void (await openHugeRun(visit)) },
+  {
+    name: 'operations-busy',
+    role: 'admin',
+    arrive: async (visit) => {
+      await openHugeRun(visit);
+      await visit.open('/operations');
+      await visit.page.getByRole('table', { name: 'Shards in work' }).waitFor();
+    },
+  },
   {
     name: 'run-cancelled',
     role: 'engineer',

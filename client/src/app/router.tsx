@@ -79,6 +79,10 @@ const routes: RouteObject[] = [
                     path: 'verification',
                     ...page(async () => (await import('./pages/verification-page.tsx')).VerificationPage),
                   },
+                  {
+                    path: 'operations',
+                    ...page(async () => (await import('./pages/operations-page.tsx')).OperationsPage),
+                  },
                   { path: 'forbidden', Component: ForbiddenPage },
                   { path: '*', Component: NotFoundPage },
                 ],

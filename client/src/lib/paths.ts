@@ -15,6 +15,7 @@ export const paths = {
   section: (projectId: string) => `/projects/${projectId}/section`,
   candidate: (projectId: string, candidateId: string) => `/projects/${projectId}/candidates/${candidateId}`,
   verification: () => '/verification',
+  operations: () => '/operations',
   sheet: (projectId: string, candidateId: string) => `/projects/${projectId}/candidates/${candidateId}/sheet`,
   shared: (token: string) => `/shared/${token}`,
 };

@@ -12,6 +12,7 @@ export const ACTIONS = [
   'comment',
   'share',
   'see-rates',
+  'operate',
 ] as const;
 export type Action = (typeof ACTIONS)[number];
 

@@ -15,6 +15,8 @@ export const queryKeys = {
   candidate: (candidateId: string) => ['candidate', candidateId] as const,
   sheetValues: (candidateId: string) => ['candidate', candidateId, 'sheet-values'] as const,
   shareLinks: (projectId: string) => ['project', projectId, 'share-links'] as const,
+  operations: () => ['operations'] as const,
+  runningLoad: () => ['running-load'] as const,
   verification: (engineVersion: string) => ['verification', engineVersion] as const,
   shared: (token: string) => ['shared', token] as const,
 };

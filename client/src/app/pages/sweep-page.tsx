@@ -8,6 +8,7 @@ import { sweepDraft } from '#client/src/features/sweep-form/sweep-draft.ts';
 import { firstSweepForm, sweepForm } from '#client/src/features/sweep-form/sweep-form-defaults.ts';
 import { SweepForm } from '#client/src/features/sweep-form/sweep-form.tsx';
 import { sweepQuery, useSaveSweep } from '#client/src/features/sweep-form/sweep-api.ts';
+import { RunningLoadNote } from '#client/src/features/running-load/running-load-note.tsx';
 import { useStartRun } from '#client/src/features/sweeps/api.ts';
 import { RunTable } from '#client/src/features/sweeps/run-table.tsx';
 import { paths } from '#client/src/lib/paths.ts';
@@ -103,6 +104,7 @@ function SweepEditor({ beam, sweep, copyOf }: EditorProps) {
         onEdit={(form) => sweepDraft.write(draftId, form)}
         onSave={onSave}
         onRun={onRun}
+        secondary={mayRun && <RunningLoadNote />}
       />
       {sweep !== null && sweep.runs.length > 0 && (
         <section className="mt-4 border-t border-ink pt-2">

@@ -2,6 +2,7 @@ import { DropdownMenu } from 'radix-ui';
 import { useState } from 'react';
 import { Link } from 'react-router-dom';
 import { paths } from '#client/src/lib/paths.ts';
+import { isAllowed } from '#client/src/lib/permissions.ts';
 import { useReader } from '#client/src/lib/reader-context.ts';
 import { roleLabel } from '#client/src/lib/state-labels.ts';
 import { currentTheme, setTheme, THEMES, type Theme } from '#client/src/lib/theme.ts';
@@ -61,6 +62,11 @@ export function AccountMenu({ onShortcuts }: { readonly onShortcuts: () => void 
         <DropdownMenu.Item className={item} asChild>
           <Link to={paths.verification()}>Verification book</Link>
         </DropdownMenu.Item>
+        {isAllowed(reader.role, 'operate') && (
+          <DropdownMenu.Item className={item} asChild>
+            <Link to={paths.operations()}>Workers and queue</Link>
+          </DropdownMenu.Item>
+        )}
         <DropdownMenu.Item className={item} onSelect={onShortcuts}>
           Keyboard shortcuts
           <kbd className="num ml-auto text-muted">?</kbd>
