@@ -1,23 +1,25 @@
 import type { ResolvedFlange } from './flange.ts';
 import type { DesignBasis, Demand } from './section.ts';
+import { ruleSetOf } from './rules/rule-set-of.ts';
 
 const SEISMIC_REST =
   'of the seismic detailing: shear from the strengths at the joints, lateral support of the bars, laps and anchorage, the beam’s fit to its column, and where hoops may be wider apart';
 
 /** What no check covers for what is asked; shown wherever results are shown. */
 export function notCheckedFor(
-  basis: Pick<DesignBasis, 'seismicSystem' | 'skinBar'>,
+  basis: Pick<DesignBasis, 'ruleSet' | 'seismicSystem' | 'skinBar'>,
   { muNmm, vuN, spanMm, support }: Demand,
   flange: ResolvedFlange | null = null,
 ): readonly string[] {
   const isGiven = (value: number | null | undefined) => value !== null && value !== undefined;
+  const { fc, fy, moment } = ruleSetOf(basis).symbols;
   const hasSystem = basis.seismicSystem !== undefined && basis.seismicSystem !== 'none';
   return [
     ...(isGiven(muNmm)
-      ? ['whether Mu includes the self-weight of this section']
+      ? [`whether ${moment} includes the self-weight of this section`]
       : ['strength against a moment']),
     'sections elsewhere along the span',
-    'limits of the code on f′c, fy, cover and lightweight concrete (normalweight is assumed)',
+    `limits of the code on ${fc}, ${fy}, cover and lightweight concrete (normalweight is assumed)`,
     isGiven(vuN) ? 'shear and stirrup spacing elsewhere along the span' : 'shear',
     'torsion',
     ...flangeRest(flange),

@@ -4,7 +4,7 @@ import { spanToDepthSection } from './span-to-depth.ts';
 import { seismicSteps } from './working-seismic.ts';
 import { shearSteps } from './working-shear.ts';
 import { skinSteps, stirrupSteps } from './working-stirrups.ts';
-import { step, type Input, type WorkingSource } from './working-step.ts';
+import { materialInputs, step, type Input, type WorkingSource } from './working-step.ts';
 
 /** Limits of crack control and least depth, and shear, each where it is asked. */
 export function detailingSteps(source: WorkingSource): WorkingStep[] {
@@ -23,14 +23,15 @@ function crackStep(source: WorkingSource): WorkingStep[] {
   if (!placed.arrangement) return [];
   const coverMm = barCoverMm(section.coverMm, stirrupBarOf(source));
   const value = ruleSet.crackSpacingMm(section.fyMPa, coverMm);
+  const formula = ruleSet.formulas.crackSpacing;
   return [
     step(
       'crack-spacing',
       'limits',
-      ['s,max', ruleSet.formulas.crackSpacing, value, 'length'],
+      ['s,max', formula, value, 'length'],
       [
-        [ruleSet.symbols.fy, section.fyMPa, 'stress'],
-        ['cc', coverMm, 'length'],
+        ...materialInputs(formula, section, ruleSet),
+        ...(formula.includes('cc') ? [['cc', coverMm, 'length'] as const] : []),
       ],
       ruleSet.clauses.crackControl,
     ),

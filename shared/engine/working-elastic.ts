@@ -1,6 +1,13 @@
 import type { WorkingStep } from './evaluation.ts';
 import { compressedWidth, grossFlangeTerms, grossInputs, widthInputs } from './working-flange.ts';
-import { layerInputs, STATICS, step, type Input, type WorkingSource } from './working-step.ts';
+import {
+  layerInputs,
+  materialInputs,
+  STATICS,
+  step,
+  type Input,
+  type WorkingSource,
+} from './working-step.ts';
 
 /** Compressed concrete of the cracked section about its axis, by the width it has. */
 const COMPRESSED = {
@@ -54,7 +61,7 @@ export function elasticSteps(source: WorkingSource): WorkingStep[] {
       'fr',
       'elastic',
       [symbols.ruptureModulus, ruleSet.formulas.ruptureModulus, elastic.ruptureModulusMPa, 'stress'],
-      [[symbols.fc, section.fcMPa, 'stress']],
+      materialInputs(ruleSet.formulas.ruptureModulus, section, ruleSet),
       ruleSet.clauses.ruptureModulus,
     ),
     step(

@@ -1,7 +1,7 @@
 import { leastSteelOf } from './checks.ts';
 import type { WorkingStep } from './evaluation.ts';
 import { compressedWidth, widthInputs } from './working-flange.ts';
-import { step, type Input, type WorkingSource } from './working-step.ts';
+import { materialInputs, step, type Input, type WorkingSource } from './working-step.ts';
 
 /** Steel that Mu requires times k, by the width of the block: web, flange, or the overhang's part and the web's. */
 const WAIVER = {
@@ -44,7 +44,7 @@ export function leastSteelSteps(source: WorkingSource): WorkingStep[] {
       'as-min',
       'limits',
       ['As,min', isOwnWidth ? leastSteel.replace(' b d', ' bt d') : leastSteel, leastMm2, 'area'],
-      [[symbols.fc, section.fcMPa, 'stress'], fy, [isOwnWidth ? 'bt' : 'b', widthMm, 'length'], d],
+      [...materialInputs(leastSteel, section, ruleSet), [isOwnWidth ? 'bt' : 'b', widthMm, 'length'], d],
       clause,
     ),
   );

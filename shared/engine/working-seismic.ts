@@ -3,7 +3,7 @@ import type { WorkingStep } from './evaluation.ts';
 import { reversedStrength } from './reversal.ts';
 import { FACES } from './section.ts';
 import { leastWebMm } from './seismic.ts';
-import { STATICS, step, type Input, type WorkingSource } from './working-step.ts';
+import { materialInputs, STATICS, step, type Input, type WorkingSource } from './working-step.ts';
 
 /** What the moment frame asks, with numbers. Hoops are with the stirrups. */
 export function seismicSteps(source: WorkingSource): WorkingStep[] {
@@ -58,7 +58,7 @@ function steelSteps(source: WorkingSource): WorkingStep[] {
         `seismic-least-${face}`,
         'limits',
         [`As,min ${face}`, formulas.leastSteel, of.leastMm2, 'area'],
-        inputs,
+        [...inputs, ...designInputs(source, formulas.leastSteel)],
         clauses.steel,
       ),
     ];
@@ -68,12 +68,27 @@ function steelSteps(source: WorkingSource): WorkingStep[] {
           `seismic-most-${face}`,
           'limits',
           [`As,max ${face}`, formulas.mostSteel, of.mostMm2, 'area'],
-          inputs,
+          [...inputs, ...designInputs(source, formulas.mostSteel)],
           clauses.steel,
         ),
       );
     return steps;
   });
+}
+
+/** Design values a limit names besides the strengths, and the curvature ductility it is to allow. */
+function designInputs({ section, basis, demand, ruleSet }: WorkingSource, formula: string): Input[] {
+  const { fc, fy, epsilonY } = ruleSet.symbols;
+  const named = materialInputs(formula, section, ruleSet).filter(
+    ([symbol]) => symbol !== fc && symbol !== fy,
+  );
+  const { ductilityTarget } = demand;
+  if (ductilityTarget === null || !formula.includes('μφ')) return named;
+  return [
+    ...named,
+    [epsilonY, ruleSet.designYieldMPa(section.fyMPa) / basis.esMPa, 'strain'],
+    ['μφ', ductilityTarget, 'ratio'],
+  ];
 }
 
 function reversalSteps({ section, layout, basis, ruleSet, seismic, flexure }: WorkingSource): WorkingStep[] {

@@ -82,7 +82,7 @@ function trussSteps(k: StrutShear, dMm: number, alone: Input, clause: string): W
     step(
       'vs-max',
       'limits',
-      [struts[0], 'b z ν1 fcd/(cot θ + 1/cot θ)', struts[1], 'force'],
+      [struts[0], 'b z ν1 fcd/(cot θ + tan θ)', struts[1], 'force'],
       [b, z, ...strut, cot],
       clause,
     ),

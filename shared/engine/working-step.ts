@@ -64,3 +64,19 @@ export const layerInputs = (layout: SteelLayout, face?: Face): Input[] =>
           [`A${i + 1}`, layout.areas[i]!, 'area'],
         ],
   );
+
+/** Strengths and design values that a formula names, as inputs of its step. */
+export function materialInputs(
+  formula: string,
+  { fcMPa, fyMPa }: Pick<SectionInput, 'fcMPa' | 'fyMPa'>,
+  ruleSet: Pick<RuleSet, 'symbols' | 'designSteps'>,
+): Input[] {
+  const letters = formula.split(/[^\p{L}\p{N}′]+/u);
+  const { symbols } = ruleSet;
+  const known: Input[] = [
+    [symbols.fc, fcMPa, 'stress'],
+    [symbols.fy, fyMPa, 'stress'],
+    ...ruleSet.designSteps(fcMPa, fyMPa).map(({ symbol, value, kind }): Input => [symbol, value, kind]),
+  ];
+  return known.filter(([symbol]) => letters.includes(symbol));
+}

@@ -1,12 +1,19 @@
 import type { WorkingStep } from './evaluation.ts';
 import type { CodeSymbols } from './rules/code-symbols.ts';
-import type { RuleSet } from './rules/rule-set.ts';
 import { leastSteelSteps } from './working-least-steel.ts';
 import { detailingSteps } from './working-detailing.ts';
 import { ductilitySteps, elasticSteps } from './working-elastic.ts';
 import { compressedWidth, flangeSteps, widthInputs } from './working-flange.ts';
+import { ductilityLimitSteps } from './working-limits.ts';
 import { quantitySteps } from './working-quantities.ts';
-import { layerInputs, STATICS, step, type Input, type WorkingSource } from './working-step.ts';
+import {
+  layerInputs,
+  materialInputs,
+  STATICS,
+  step,
+  type Input,
+  type WorkingSource,
+} from './working-step.ts';
 
 /** Every step from materials to ductility in the order a checker works: formula, numbers put in, result, clause. */
 export function workingOf(source: WorkingSource): readonly WorkingStep[] {
@@ -14,6 +21,7 @@ export function workingOf(source: WorkingSource): readonly WorkingStep[] {
     ...materials(source),
     ...ultimate(source),
     ...strength(source),
+    ...ductilityLimitSteps(source),
     ...leastSteelSteps(source),
     ...detailingSteps(source),
     ...elasticSteps(source),
@@ -81,7 +89,7 @@ function ultimate(source: WorkingSource): WorkingStep[] {
   const width = compressedWidth(source, flexure.blockDepthMm);
   const { symbols } = ruleSet;
   const c: Input = [symbols.axis, flexure.neutralAxisMm, 'length'];
-  const fc = blockStressInputs(section.fcMPa, ruleSet);
+  const fc = materialInputs(symbols.blockStress, section, ruleSet);
   const beta: Input = [symbols.blockDepthFactor, flexure.beta1, 'ratio'];
   const block = ruleSet.clauses.block;
   const layers = flexure.layers.flatMap((layer, i) => {
@@ -159,16 +167,6 @@ function ultimate(source: WorkingSource): WorkingStep[] {
   ];
 }
 
-/** What the block's stress follows from: f′c, or design values worked out before. */
-const blockStressInputs = (fcMPa: number, ruleSet: RuleSet): readonly Input[] => {
-  const { symbols } = ruleSet;
-  const named = symbols.blockStress.split(' ');
-  const steps = ruleSet.designSteps(fcMPa, 1).filter(({ symbol }) => named.includes(symbol));
-  return steps.length === 0
-    ? [[symbols.fc, fcMPa, 'stress']]
-    : steps.map(({ symbol, value, kind }) => [symbol, value, kind]);
-};
-
 /** Moment of the internal forces, and its reduction where the code has one beside partial factors. */
 function strength(source: WorkingSource): WorkingStep[] {
   const { flexure, section, basis, ruleSet } = source;
@@ -176,7 +174,7 @@ function strength(source: WorkingSource): WorkingStep[] {
   const width = compressedWidth(source, flexure.blockDepthMm);
   const ofBlock: readonly Input[] =
     width === 'both'
-      ? [...blockStressInputs(section.fcMPa, ruleSet), ...widthInputs(source, width)]
+      ? [...materialInputs(symbols.blockStress, section, ruleSet), ...widthInputs(source, width)]
       : [['C', flexure.concreteForceN, 'force']];
   const mn = width === 'both' ? `Σ T d − ${symbols.blockStress} (b a²/2 + (bf − b) hf²/2)` : 'Σ T d − C a/2';
   const nominal = step(

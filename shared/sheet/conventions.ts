@@ -1,5 +1,8 @@
 import type { UnitSystem } from '../contract/design-basis.ts';
 import type { Snapshot } from '../contract/records.ts';
+import type { CodeSymbols } from '../engine/rules/code-symbols.ts';
+import type { YieldCurvatureAt } from '../engine/section.ts';
+import { codeSymbols } from '../print/code-symbols.ts';
 import { formatNumber } from '../print/format-quantity.ts';
 
 const DISPLACED = {
@@ -11,11 +14,22 @@ const DISPLACED = {
 } as const;
 
 const YIELD_AT = {
-  'outermost-layer':
-    'φy is the curvature at which the outermost tension layer first reaches εy = fy/Es on the cracked elastic section: φy = εy/(dt − kd).',
-  centroid:
-    'φy is the curvature at which the centroid of the tension steel reaches εy = fy/Es on the cracked elastic section: φy = εy/(d − kd).',
+  'outermost-layer': { what: 'outermost tension layer first', depth: 'dt' },
+  centroid: { what: 'centroid of the tension steel', depth: 'd' },
 } as const;
+
+function yieldConvention(at: YieldCurvatureAt, { fyDesign }: CodeSymbols): string {
+  const { what, depth } = YIELD_AT[at];
+  return `φy is the curvature at which the ${what} reaches εy = ${fyDesign}/Es on the cracked elastic section: φy = εy/(${depth} − kd).`;
+}
+
+/** Said where a code works with design strengths: its curvatures do so too. */
+const designValues = ({ fy, fyDesign, blockStress }: CodeSymbols): string[] =>
+  fy === fyDesign
+    ? []
+    : [
+        `Strength and both curvatures are worked with design values, ${blockStress} in the block and ${fyDesign} in the steel; there is no further reduction.`,
+      ];
 
 const BEND = {
   'corner-in-bend':
@@ -26,16 +40,19 @@ const BEND = {
 /** How the numbers are to be read: signs, units, and each choice on which they depend. */
 export function conventionsOf({ evaluation }: Snapshot, units: UnitSystem): string[] {
   const { conventions, flexure, elastic } = evaluation;
+  const symbols = codeSymbols(evaluation.ruleSet.id);
+  const crushing = flexure ? `${symbols.epsilonCu} = ${formatNumber(flexure.epsilonCu, 4, true)}, ` : '';
   const share = elastic === null ? '' : formatNumber(elastic.concreteStressShareAtYield, 2);
   return [
     'Sagging moments are positive; depths are measured from the compression face. In steel, tension is positive in strain, stress and force; C is the compression in the concrete. Moments are taken about the compression face.',
-    `Ultimate: plane sections, no tension in concrete, rectangular block, εcu = ${flexure?.epsilonCu ?? 0.003}, steel elastic and then perfectly plastic, each layer at its own strain; no layer is assumed to yield.`,
+    `Ultimate: plane sections, no tension in concrete, rectangular block, ${crushing}steel elastic and then perfectly plastic, each layer at its own strain; no layer is assumed to yield.`,
     DISPLACED[conventions.displacedConcrete],
-    YIELD_AT[conventions.yieldCurvatureAt],
-    'φu = εcu/c at the ultimate state above; μφ = φu/φy. Other definitions give other numbers.',
+    ...designValues(symbols),
+    yieldConvention(conventions.yieldCurvatureAt, symbols),
+    `φu = ${symbols.epsilonCu}/${symbols.axis} at the ultimate state above; μφ = φu/φy. Other definitions give other numbers.`,
     ...(elastic?.isElasticPictureDoubtful
       ? [
-          `At first yield the concrete carries ${share} f′c by the elastic section, more than 0.7 f′c: it has left its straight line there, and φy and My are approximate.`,
+          `At first yield the concrete carries ${share} ${symbols.fc} by the elastic section, more than 0.7 ${symbols.fc}: it has left its straight line there, and φy and My are approximate.`,
         ]
       : []),
     ...(evaluation.arrangement === null ? [] : [BEND[conventions.bendAllowance]]),

@@ -30,9 +30,10 @@ const RELATIONS: Readonly<Record<string, string>> = {
 };
 const PRIME: Readonly<Record<string, string>> = { '′': "'", '″': "''" };
 const POWERS: Readonly<Record<string, string>> = { '²': '^{2}', '³': '^{3}' };
+const FRACTIONS: Readonly<Record<string, string>> = { '⅓': '1/3', '⅔': '2/3' };
 
 /** Functions, which are set as such. */
-const FUNCTIONS = ['max', 'min', 'cot', 'tan', 'sin', 'cos'];
+const FUNCTIONS = ['max', 'min', 'cot', 'tan', 'sin', 'cos', 'ln'];
 
 /** A rule told in words, with no formula to set. */
 export const isSentence = (formula: string): boolean =>
@@ -135,6 +136,11 @@ class Setter {
     for (let power = POWERS[this.#text() ?? '']; power !== undefined; power = POWERS[this.#text() ?? '']) {
       this.#at++;
       tex += power;
+    }
+    if (this.#text() === '^') {
+      this.#at++;
+      const exponent = this.#take() ?? '';
+      tex += `^{${FRACTIONS[exponent] ?? exponent}}`;
     }
     return tex;
   }

@@ -5,6 +5,7 @@ import type { FaceArrangement } from '../engine/evaluation.ts';
 import type { Support } from '../engine/section.ts';
 import { barStandardLabel } from '../print/basis-labels.ts';
 import { flangeText } from '../print/flange-text.ts';
+import { codeSymbols } from '../print/code-symbols.ts';
 import { formatQuantity } from '../print/format-quantity.ts';
 import { barsText, givenStirrupText, sizeText, steelText } from '../print/section-text.ts';
 import type { DisplayKind } from '../print/units.ts';
@@ -31,24 +32,26 @@ export function inputGroups(snapshot: Snapshot, beam: Candidate['beam'], units: 
 }
 
 function sectionItems({ section, basis, evaluation }: Snapshot, units: UnitSystem, print: Print): KeyText[] {
+  const symbols = codeSymbols(evaluation.ruleSet.id);
   return [
     { label: 'b × h', value: sizeText(section, units) },
     ...(evaluation.flange ? [{ label: 'Flange, bf × hf', value: flangeText(evaluation.flange, units) }] : []),
     { label: 'Steel', value: steelText(section, units) },
     { label: 'Stirrups', value: givenStirrupText(section.stirrup, units) },
     { label: 'Clear cover to the stirrup', value: print(section.coverMm, 'length') },
-    { label: 'f′c', value: print(section.fcMPa, 'stress') },
-    { label: 'fy', value: print(section.fyMPa, 'stress') },
+    { label: symbols.fc, value: print(section.fcMPa, 'stress') },
+    { label: symbols.fy, value: print(section.fyMPa, 'stress') },
     // Snapshots from before stirrups had a strength of their own lack it.
-    { label: 'fyt', value: print((basis as Partial<typeof basis>).fytMPa, 'stress') },
+    { label: symbols.fyt, value: print((basis as Partial<typeof basis>).fytMPa, 'stress') },
   ].filter(({ value }) => value !== '');
 }
 
-function demandItems({ demand }: Snapshot, beam: Candidate['beam'], print: Print): KeyText[] {
+function demandItems({ demand, evaluation }: Snapshot, beam: Candidate['beam'], print: Print): KeyText[] {
+  const symbols = codeSymbols(evaluation.ruleSet.id);
   const asked = (value: number | null | undefined, kind: DisplayKind) => print(value, kind) || 'not asked';
   return [
-    { label: 'Mu', value: asked(demand.muNmm, 'moment') },
-    { label: 'Vu', value: asked(demand.vuN, 'force') },
+    { label: symbols.moment, value: asked(demand.muNmm, 'moment') },
+    { label: symbols.shear, value: asked(demand.vuN, 'force') },
     { label: 'μφ at least', value: asked(demand.ductilityTarget, 'count') },
     { label: 'h at most', value: asked(demand.depthCapMm, 'length') },
     ...(demand.support && demand.spanMm

@@ -13,12 +13,12 @@ export interface SymbolParts {
 const SUBSCRIPTED = 'fAEMIVTNLdyεβφμρσαγληνθΔδκ';
 const LETTERS = [
   // Eurocode: design, characteristic and mean values, stirrups.
-  'Ed|Rd|ck|yk|cd|yd|ud|uk|ctm|cm|cc|ywd|ywk|sw|sy|su|max|min',
-  'cu\\d?|cr|ty|ut|yt|ye|s\\d+|c\\d|\\d+|[scyrtunwvbgkpdφΔ]',
+  'Ed|Rd|ck|yk|cd|yd|ud|uk|ctm|ct|cm|cc|ywd|ywk|sw|sy|su|max|min',
+  'cu\\d?|cr|ty|ut|yt|ye|s\\d+|c\\d|\\d+|[slcyrtunwvbgkpdφΔ]',
 ].join('|');
 const EXTREME = ',(?:min|max|waive|long|lim|req|eff|[csd])';
 /** Lengths whose letter alone would make symbols of words (by, hat, lb). */
-const NAMED = 'b(?:eff|[wft])|hf|sw|l[n0]';
+const NAMED = 'b(?:eff|[wft])|hf|sw|l(?:0|n(?!\\())';
 
 /** One symbol from the place where the search stands; anything after it must not be a letter. */
 const SYMBOL = new RegExp(

@@ -35,7 +35,13 @@ interface Coefficients {
   readonly largestTightBendMm: number;
   readonly formulas: Omit<
     Formulas,
-    'strengthReduction' | 'tieSpacing' | 'skinSpacing' | 'effectiveFlange' | 'leastSteelWidth' | 'spanToDepth'
+    | 'strengthReduction'
+    | 'tieSpacing'
+    | 'skinSpacing'
+    | 'effectiveFlange'
+    | 'leastSteelWidth'
+    | 'spanToDepth'
+    | 'axisShare'
   >;
   /** 24.3.2: s ≤ first/fs − 2.5 cc and second/fs; MPa·mm. */
   readonly crackSpacing: readonly [number, number];
@@ -261,6 +267,7 @@ export function aci318({ id, year, isMetric }: Edition): RuleSet & { readonly sh
       ...c.formulas,
       leastSteelWidth: 'min(bf, 2 b), flange in tension of a cantilever',
       spanToDepth: () => '',
+      axisShare: () => '',
       effectiveFlange: ({ shape }) =>
         shape === 't' ? 'b + 2 min(8 hf, sw/2, ln/8)' : 'b + min(6 hf, sw/2, ln/12)',
       skinSpacing: c.formulas.crackSpacing,

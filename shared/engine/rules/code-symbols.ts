@@ -61,7 +61,7 @@ export const EN_SYMBOLS: CodeSymbols = {
   blockDepthFactor: 'λ',
   axis: 'x',
   concreteModulus: 'Ecm',
-  ruptureModulus: 'fctm',
+  ruptureModulus: 'fct,eff',
   moment: 'MEd',
   shear: 'VEd',
   nominalMoment: 'MRd',
@@ -69,5 +69,5 @@ export const EN_SYMBOLS: CodeSymbols = {
   designShear: 'VRd',
   stirrupArea: 'Asw',
   compressionSteel: 'As2',
-  compressionDepth: 'd2',
+  compressionDepth: 'd′',
 };

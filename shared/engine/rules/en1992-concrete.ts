@@ -4,7 +4,7 @@ import { parabolaRectangleConstants } from '../concrete-laws/parabola-rectangle.
 
 /** fck above which concrete is high strength and most rules change, MPa. */
 const HIGH_STRENGTH_FROM = 50;
-const isHighStrength = (fckMPa: number) => fckMPa > HIGH_STRENGTH_FROM;
+export const isHighStrength = (fckMPa: number) => fckMPa > HIGH_STRENGTH_FROM;
 
 /** Mean strength fcm = fck + 8, MPa. */
 const meanStrengthMPa = (fckMPa: number) => fckMPa + 8;

@@ -77,8 +77,8 @@ export function spanToDepthFormula(of: SpanToDepthSection): string {
   const isLight = of.rho <= 0.001 * Math.sqrt(of.fckMPa);
   const basic = isLight
     ? '11 + 1.5 √fck ρ0/ρ + 3.2 √fck (ρ0/ρ − 1)^1.5'
-    : '11 + 1.5 √fck ρ0/max(ρ − ρ′, ρ0) + √fck √(ρ′/ρ0)/12';
+    : '11 + 1.5 √fck ρ0/(max(ρ − ρ′, ρ0)) + √fck √(ρ′/ρ0)/12';
   const flange = flangeFactor(of) === 1 ? '' : ' 0.8';
-  const longSpan = spanFactor(of) === 1 ? '' : ' 7 m/span';
-  return `${SPAN_FACTOR[of.support]} (${basic}) 500/fyk${flange}${longSpan}; ρ0 = 0.001 √fck`;
+  const longSpan = spanFactor(of) === 1 ? '' : ' (7 m/span)';
+  return `${SPAN_FACTOR[of.support]} (${basic}) (500/fyk)${flange}${longSpan}; ρ0 = 0.001 √fck`;
 }

@@ -1,6 +1,6 @@
 import type { WorkingStep } from '../evaluation.ts';
 import { step } from '../working-step.ts';
-import { blockStressShare, crushingStrainOf, meanTensionMPa } from './en1992-concrete.ts';
+import { blockStressShare, crushingStrainOf, isHighStrength, meanTensionMPa } from './en1992-concrete.ts';
 import type { FullNationalValues } from './national-values.ts';
 
 const TABLE_31 = 'EN 1992-1-1 Table 3.1';
@@ -9,6 +9,8 @@ const TABLE_31 = 'EN 1992-1-1 Table 3.1';
 export const designStepsOf =
   (v: FullNationalValues) =>
   (fckMPa: number, fykMPa: number): readonly WorkingStep[] => {
+    const fyd = fykMPa / v.gammaS;
+    const serviceStress = v.serviceStressShare * fyd;
     const fck = ['fck', fckMPa, 'stress'] as const;
     return [
       step(
@@ -21,7 +23,7 @@ export const designStepsOf =
       step(
         'eta',
         'materials',
-        ['η', '1 − (fck − 50)/200, fck from 50 to 90 MPa; 1 below', blockStressShare(fckMPa), 'ratio'],
+        ['η', '1 − (fck − 50)/200, fck within 50 and 90 MPa', blockStressShare(fckMPa), 'ratio'],
         [fck],
         'EN 1992-1-1 3.1.7(3)',
       ),
@@ -30,7 +32,7 @@ export const designStepsOf =
         'materials',
         [
           'εcu3',
-          '(2.6 + 35 ((90 − fck)/100)^4)/1000 above C50; 0.0035 to C50',
+          isHighStrength(fckMPa) ? '(2.6 + 35 ((90 − fck)/100)^4)/1000' : '0.0035, to C50',
           crushingStrainOf(fckMPa),
           'strain',
         ],
@@ -40,7 +42,7 @@ export const designStepsOf =
       step(
         'fyd',
         'materials',
-        ['fyd', 'fyk/γs', fykMPa / v.gammaS, 'stress'],
+        ['fyd', 'fyk/γs', fyd, 'stress'],
         [
           ['fyk', fykMPa, 'stress'],
           ['γs', v.gammaS, 'ratio'],
@@ -50,9 +52,21 @@ export const designStepsOf =
       step(
         'fctm',
         'materials',
-        ['fctm', '0.3 fck^⅔ to C50, 2.12 ln(1 + (fck + 8)/10) above; MPa', meanTensionMPa(fckMPa), 'stress'],
+        [
+          'fctm',
+          isHighStrength(fckMPa) ? '2.12 ln(1 + (fck + 8)/10); MPa' : '0.3 fck^⅔; MPa',
+          meanTensionMPa(fckMPa),
+          'stress',
+        ],
         [fck],
         TABLE_31,
+      ),
+      step(
+        'sigma-s',
+        'materials',
+        ['σs', `${v.serviceStressShare} fyd, taken for the stress in service`, serviceStress, 'stress'],
+        [['fyd', fyd, 'stress']],
+        'office assumption',
       ),
     ];
   };

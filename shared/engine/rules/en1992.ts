@@ -4,6 +4,7 @@ import {
   blockStressShare,
   crushingStrainOf,
   elasticAxisShare,
+  isHighStrength,
   meanTensionMPa,
   plasticAxisShare,
   secantModulusMPa,
@@ -126,11 +127,11 @@ function shearRules(v: FullNationalValues): StrutShearRules {
 function clausesOf(v: FullNationalValues): Clauses {
   return {
     block: `${BOOK} 3.1.7(3)`,
-    strengthReduction: `${BOOK} 2.4.2.4, 3.2.7`,
+    strengthReduction: `${BOOK} 3.2.7`,
     strength: `${BOOK} 6.1`,
     tensionStrain: `${BOOK} 5.5(4)`,
     concreteModulus: `${BOOK} Table 3.1`,
-    ruptureModulus: `${BOOK} Table 3.1`,
+    ruptureModulus: `${BOOK} 7.1(2)`,
     leastSteel: `${BOOK} 9.2.1.1(1)`,
     barSpacing: `${BOOK} 8.2(2)`,
     hangers: `${BOOK} 9.2.2(2)`,
@@ -156,15 +157,23 @@ function textsOf(v: FullNationalValues): Texts {
   };
 }
 
+function axisFormula(v: FullNationalValues, fckMPa: number): string {
+  if (v.isPlasticAnalysis)
+    return `${plasticAxisShare(fckMPa)} d, plastic analysis without a check of rotations`;
+  const offset = isHighStrength(fckMPa) ? v.axisK3 : v.axisK1;
+  return `(${v.redistribution} − ${offset}) d/(${v.axisK2} (0.6 + 0.0014/εcu3)), δ = ${v.redistribution}`;
+}
+
 function formulasOf(v: FullNationalValues): Formulas {
   return {
-    blockDepthFactor: '0.8 − (fck − 50)/400, fck from 50 to 90 MPa; 0.8 below',
+    blockDepthFactor: '0.8 − (fck − 50)/400, fck within 50 and 90 MPa',
     concreteModulus: '22000 ((fck + 8)/10)^0.3; MPa',
-    ruptureModulus: '0.3 fck^⅔ to C50, 2.12 ln(1 + (fck + 8)/10) above; MPa',
+    ruptureModulus: 'fctm',
     leastSteel: `max(${v.leastSteel} fctm/fyk, ${v.leastSteelFloor}) b d`,
     strengthReduction: '1, the partial factors being in fcd and fyd',
-    crackSpacing: `Table 7.3N between its lines for wk = ${v.crackWidthMm} mm, σs taken as ${v.serviceStressShare} fyd`,
-    skinSpacing: `Table 7.3N between its lines for wk = ${v.crackWidthMm} mm, σs half of ${v.serviceStressShare} fyd`,
+    axisShare: (fckMPa) => axisFormula(v, fckMPa),
+    crackSpacing: `Table 7.3N between its lines at σs for wk = ${v.crackWidthMm} mm`,
+    skinSpacing: `Table 7.3N between its lines at σs/2 for wk = ${v.crackWidthMm} mm`,
     tieSpacing: `stirrup spacing within ${v.tieDiameters} diameters of the least compression bar`,
     leastSteelWidth: 'b + (bf − b) min(hf, h/2)/(h/2), the tension zone taken as half of the depth',
     effectiveFlange: effectiveFlangeFormula,

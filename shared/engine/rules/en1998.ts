@@ -23,7 +23,7 @@ function ductile(level: 'M' | 'H', values: FullNationalValues): SeismicRules {
   const section = isHigh ? '5.5.3.1' : '5.4.3.1';
   const [fixedMm, bars] = isHigh ? [175, 6] : [225, 8];
   return {
-    title: `ductility class ${level}`,
+    title: `frame of ductility class ${level}`,
     leastWidth: isHigh ? { shareOfDepth: Infinity, mostMm: 200 } : null,
     leastSpanToDepth: null,
     largestFyMPa: null,
@@ -59,8 +59,8 @@ function ductile(level: 'M' | 'H', values: FullNationalValues): SeismicRules {
     formulas: {
       width: '200 mm',
       leastSteel: '0.5 fctm b d/fyk; at the compression face half of As',
-      mostSteel: 'As2 + 0.0018 fcd b d/(μφ εyd fyd)',
-      hoops: `min(h/4, 24 dbw, ${fixedMm} mm, ${bars} dbL)`,
+      mostSteel: 'As of the other face + 0.0018 fcd b d/(μφ εyd fyd)',
+      hoops: `min(h/4, 24 ds, ${fixedMm} mm, ${bars} db)`,
     },
   };
 }

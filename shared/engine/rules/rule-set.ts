@@ -35,6 +35,8 @@ export interface Formulas {
   readonly ruptureModulus: string;
   readonly leastSteel: string;
   readonly strengthReduction: string;
+  /** Largest depth of the neutral axis; empty where the strain is limited instead. */
+  axisShare(fcMPa: number): string;
   readonly crackSpacing: string;
   readonly tieSpacing: string;
   readonly skinSpacing: string;
