@@ -67,7 +67,7 @@ const MOST_TICKS = 6;
 /** Room above the highest moment, so that its number does not touch the frame. */
 const HEADROOM = 1.06;
 /** Marks nearer than this are numbered together. */
-const SAME_PLACE_PX = 12;
+const SAME_PLACE_PX = 20;
 /** Numbers stand off the highest of their marks, clear of the axis and of the curve that rises to the left of it. */
 const NUMBER_OFF_PX = { x: 4, y: -7 } as const;
 

@@ -152,6 +152,9 @@ export function RunWorkspace({ run, project }: RunWorkspaceProps) {
         evaluation={selected.evaluation}
         standard={run.basis.barStandard}
         units={units}
+        context={source.context}
+        space={source.space}
+        onSelect={address.select}
         actions={
           <div className="grid gap-3">
             <PinPanel

@@ -8,7 +8,6 @@ import type { BarStandard, RuleSetId } from '#shared/engine/section.ts';
 export const basisFormValues = (basis: ProjectDesignBasis): ProjectDesignBasis => ({
   ...basis,
   seismicSystem: basis.seismicSystem ?? 'none',
-  skinBar: basis.skinBar ?? null,
   ductilityMeasure: basis.ductilityMeasure ?? 'closed',
 });
 

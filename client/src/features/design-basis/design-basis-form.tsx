@@ -20,6 +20,7 @@ import {
   ruleSetLabel,
   unitSystemLabel,
 } from '#shared/print/basis-labels.ts';
+import { codeSymbols } from '#shared/print/code-symbols.ts';
 import { FieldGroup } from '#client/src/ui/field-group.tsx';
 import { FormNumberField } from '#client/src/ui/form-number-field.tsx';
 import { RecordForm } from '#client/src/ui/record-form.tsx';
@@ -46,6 +47,7 @@ export function DesignBasisForm({ projectId, basis, isReadOnly }: DesignBasisFor
   const { control, register } = form;
   const { errors } = form.formState;
   const [units, ruleSet] = useWatch({ control, name: ['units', 'ruleSet'] });
+  const symbols = codeSymbols(ruleSet);
   const codeField = register('ruleSet');
   const standardField = register('barStandard');
   /** Sets what a choice brings along, as if each had been chosen. */
@@ -101,7 +103,7 @@ export function DesignBasisForm({ projectId, basis, isReadOnly }: DesignBasisFor
           name="fyMPa"
           kind="stress"
           units={units}
-          label="Yield strength fy"
+          label={`Yield strength ${symbols.fy}`}
           hint="Longitudinal bars. New sweeps start from it."
         />
         <FormNumberField
@@ -109,7 +111,7 @@ export function DesignBasisForm({ projectId, basis, isReadOnly }: DesignBasisFor
           name="fytMPa"
           kind="stress"
           units={units}
-          label="Yield strength fyt"
+          label={`Yield strength ${symbols.fyt}`}
           hint="Stirrups."
         />
         <FormNumberField

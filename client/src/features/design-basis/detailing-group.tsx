@@ -6,7 +6,7 @@ import { seismicSystemsOf } from '#shared/engine/seismic.ts';
 import { leastStirrupSpacingMm, stirrupStepMm } from '#shared/engine/stirrup-design.ts';
 import { optionsOf } from '#shared/print/basis-labels.ts';
 import { seismicSystemLabel } from '#shared/print/ductility-labels.ts';
-import { fieldText } from '#shared/print/format-quantity.ts';
+import { formatQuantity } from '#shared/print/format-quantity.ts';
 import { FieldGroup } from '#client/src/ui/field-group.tsx';
 import { FormNumberField } from '#client/src/ui/form-number-field.tsx';
 import { SelectField } from '#client/src/ui/select-field.tsx';
@@ -14,11 +14,19 @@ import { SelectField } from '#client/src/ui/select-field.tsx';
 /** Side bars of beams are small; thicker ones count in strength in every office. */
 const LARGEST_SKIN_BAR_MM = 20;
 
+/** A basis from before side bars were checked says nothing of them until a size is chosen. */
+const NOT_CHECKED = 'not-checked';
+const NONE = 'none';
+
 /** What stirrups, side bars and hoops are built by. */
 export function DetailingGroup({ form }: { readonly form: UseFormReturn<ProjectDesignBasis> }) {
   const { control, register, formState } = form;
-  const [units, ruleSet, barStandard] = useWatch({ control, name: ['units', 'ruleSet', 'barStandard'] });
+  const [units, ruleSet, barStandard, skinBar] = useWatch({
+    control,
+    name: ['units', 'ruleSet', 'barStandard', 'skinBar'],
+  });
   const rules = ruleSetOf({ ruleSet });
+  const shown = (mm: number) => formatQuantity(mm, 'length', units, { hideUnit: true });
   const sizes = BARS[barStandard].filter((bar) => bar.diameterMm <= LARGEST_SKIN_BAR_MM);
   return (
     <FieldGroup title="Stirrups, side bars, seismic">
@@ -29,7 +37,7 @@ export function DetailingGroup({ form }: { readonly form: UseFormReturn<ProjectD
         kind="length"
         units={units}
         label="Step of stirrup spacings"
-        placeholder={fieldText(stirrupStepMm({}, rules.units), 'length', units)}
+        placeholder={shown(stirrupStepMm({}, rules.units))}
         hint="Designed spacings are multiples of it. Empty: the number shown."
       />
       <FormNumberField
@@ -39,18 +47,22 @@ export function DetailingGroup({ form }: { readonly form: UseFormReturn<ProjectD
         kind="length"
         units={units}
         label="Closest stirrups"
-        placeholder={fieldText(leastStirrupSpacingMm({}, rules.units), 'length', units)}
+        placeholder={shown(leastStirrupSpacingMm({}, rules.units))}
         hint="Closer ones are not built: the section fails. Empty: the number shown."
       />
       <SelectField
         label="Side bars of deep beams"
-        hint={`${rules.clauses.skinSteel}. Without a size a deep beam fails that check.`}
+        hint={`${rules.clauses.skinSteel}. They count in weight and cost, not in strength.`}
         options={[
-          { value: '', label: 'none' },
+          ...(skinBar === undefined ? [{ value: NOT_CHECKED, label: 'not checked' }] : []),
+          { value: NONE, label: 'none: deep beams fail' },
           ...sizes.map(({ designation }) => ({ value: designation, label: designation })),
         ]}
         error={formState.errors.skinBar?.message}
-        {...register('skinBar', { setValueAs: (bar: string | null) => (bar === '' ? null : bar) })}
+        value={skinBar === undefined ? NOT_CHECKED : (skinBar ?? NONE)}
+        onChange={({ target }) =>
+          form.setValue('skinBar', target.value === NONE ? null : target.value, { shouldDirty: true })
+        }
       />
       <SelectField
         label="Seismic system"

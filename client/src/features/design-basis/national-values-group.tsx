@@ -5,7 +5,8 @@ import {
   TABLED_CRACK_WIDTHS_MM,
   type NationalValues,
 } from '#shared/engine/rules/national-values.ts';
-import { fieldText, formatQuantity } from '#shared/print/format-quantity.ts';
+import { formatNumber, formatQuantity } from '#shared/print/format-quantity.ts';
+import { toDisplay } from '#shared/print/units.ts';
 import { Button } from '#client/src/ui/button.tsx';
 import { CheckboxField } from '#client/src/ui/checkbox-field.tsx';
 import { FieldGroup } from '#client/src/ui/field-group.tsx';
@@ -57,7 +58,7 @@ export function NationalValuesGroup({ form }: { readonly form: UseFormReturn<Pro
               units={units}
               label={label}
               hint={clause}
-              placeholder={fieldText(RECOMMENDED_VALUES[name], kind, units)}
+              placeholder={formatNumber(toDisplay(RECOMMENDED_VALUES[name], kind, units), 4, true)}
             />
           ))}
           {title === 'Bending' && (

@@ -11,7 +11,7 @@ const SHARED = {
 /**
  * What a new project starts from. Es 29,000 ksi and 200,000 MPa: ACI 318-19 and 318M-19, 20.2.2.2. Cover 1.5 in and
  * 40 mm for beams not exposed to weather: 20.5.1.3.1. Grade 60 / 420 and 3/4 in (20 mm) aggregate: common practice,
- * no source.
+ * no source. Side bars #4 and 12: common practice, no source.
  */
 export const BASIS_PRESETS: Readonly<Record<'us' | 'si', ProjectDesignBasis>> = {
   us: {
@@ -24,6 +24,7 @@ export const BASIS_PRESETS: Readonly<Record<'us' | 'si', ProjectDesignBasis>> = 
     fyMPa: 60 * MPA_PER_KSI,
     fytMPa: 60 * MPA_PER_KSI,
     coverMm: 1.5 * MM_PER_IN,
+    skinBar: '#4',
   },
   si: {
     ...SHARED,
@@ -35,5 +36,6 @@ export const BASIS_PRESETS: Readonly<Record<'us' | 'si', ProjectDesignBasis>> = 
     fyMPa: 420,
     fytMPa: 420,
     coverMm: 40,
+    skinBar: '12',
   },
 };

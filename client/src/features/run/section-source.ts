@@ -1,5 +1,5 @@
 import type { Run } from '#shared/contract/records.ts';
-import { evaluateSection } from '#shared/engine/evaluate.ts';
+import { evaluateSection, type EvaluationContext } from '#shared/engine/evaluate.ts';
 import type { Evaluation } from '#shared/engine/evaluation.ts';
 import type { SectionInput } from '#shared/engine/section.ts';
 import type { Space } from '#shared/sweep/problem.ts';
@@ -15,6 +15,8 @@ export interface EvaluatedSection {
 export interface SectionSource {
   readonly size: number;
   readonly space: Space;
+  /** What the run judges by. */
+  readonly context: EvaluationContext;
   readonly sectionAt: (index: number) => SectionInput;
   readonly evaluatedAt: (index: number) => EvaluatedSection;
 }
@@ -29,6 +31,7 @@ export function createSectionSource(run: Pick<Run, 'definition' | 'basis'>): Sec
   return {
     size: space.size,
     space,
+    context,
     sectionAt: (index) => sectionAt(space, index),
     evaluatedAt: (index) => {
       const known = kept.get(index);
