@@ -1,9 +1,4 @@
-import {
-  CURVATURE_TOLERANCE,
-  STRENGTH_TOLERANCE,
-  type OpinionLine,
-  type SecondOpinion,
-} from '../engine/second-opinion.ts';
+import type { OpinionLine, SecondOpinion } from '../engine/second-opinion.ts';
 import { formatNumber, formatQuantity } from '../print/format-quantity.ts';
 import type { StudyWriting } from './curve-part.ts';
 import type { SheetPart, SheetRow } from './sheet.ts';
@@ -48,14 +43,18 @@ export function opinionTable(
       ],
       rows: opinion.lines.map(rowOf),
       remarks: [
-        `${capital(opinion.method)}; ${opinion.strips} strips for the curve. Agreement: moments within ${percentOf(STRENGTH_TOLERANCE)}, curvatures within ${percentOf(CURVATURE_TOLERANCE)}.`,
+        `${capital(opinion.method)}; ${opinion.strips} strips for the curve. Agreement: ${allowedText(opinion)}.`,
       ],
       comparedColumn: 'Strips',
     },
   };
 }
 
-const percentOf = (share: number) => `${formatNumber(100 * share, 2, true)} %`;
+/** `moment within 0.5 %, curvature within 2 %`, as it was held to when it was worked out. */
+const allowedText = ({ lines }: SecondOpinion): string =>
+  [...new Map(lines.map(({ kind, tolerance }) => [kind, tolerance]))]
+    .map(([kind, tolerance]) => `${kind} within ${formatNumber(100 * tolerance, 2, true)} %`)
+    .join(', ');
 
 const capital = (text: string) => text.charAt(0).toUpperCase() + text.slice(1);
 
