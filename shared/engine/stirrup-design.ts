@@ -69,6 +69,8 @@ export interface SpacingState {
   readonly limits: Float64Array;
   /** The least of them. */
   neededMm: number;
+  /** Whether the spacing limits of stirrups halve. */
+  isHalved: boolean;
   /** Results for the spacing chosen: Vc or VRd,c, and the design strength; NaN where no shear is asked. */
   concreteN: number;
   designN: number;
@@ -82,6 +84,7 @@ export const spacingState = (): SpacingState => ({
   hasSkin: false,
   limits: new Float64Array(SPACING_LIMITS.length),
   neededMm: NaN,
+  isHalved: false,
   concreteN: NaN,
   designN: NaN,
 });
@@ -153,6 +156,8 @@ export function hoopLimitMm(r: SpacingRules, dMm: number, depthMm: number, hasSk
 export const tieLimitMm = (r: SpacingRules, depthMm: number) =>
   r.leastSideMm === Infinity ? r.tiesMm : Math.min(r.tiesMm, r.leastSideMm, depthMm);
 
+const LEAST_AREA = SPACING_LIMITS.indexOf('least-area');
+
 /** Each limit of SPACING_LIMITS into `at.limits`, the least into `at.neededMm`. */
 function findLimits(at: SpacingState, k: ShearConstants, r: SpacingRules): void {
   const { limits, vuN, dMm, depthMm } = at;
@@ -161,7 +166,9 @@ function findLimits(at: SpacingState, k: ShearConstants, r: SpacingRules): void 
   const concreteN = isShearAsked ? concreteShearN(k, dMm, at.asMm2, 0) : NaN;
   limits[0] = r.widestMm;
   limits[1] = isShearAsked ? strengthSpacingMm(k, vuN, dMm, concreteN) : Infinity;
-  limits[2] = longestAlongMm(k, dMm, isShearAsked && isSpacingHalved(k, vuN, dMm, concreteN));
+  at.concreteN = concreteN;
+  at.isHalved = isShearAsked && isSpacingHalved(k, vuN, dMm, concreteN);
+  limits[2] = longestAlongMm(k, dMm, at.isHalved);
   limits[3] = k.avMm2 / k.leastAvPerMm;
   limits[4] = r.tiesMm;
   limits[5] = r.leastSideMm === Infinity ? Infinity : Math.min(r.leastSideMm, depthMm);
@@ -179,20 +186,27 @@ function findLimits(at: SpacingState, k: ShearConstants, r: SpacingRules): void 
  */
 export function designSpacingMm(at: SpacingState, k: ShearConstants, r: SpacingRules): number {
   findLimits(at, k, r);
-  const { vuN, dMm, asMm2 } = at;
+  const { vuN, dMm } = at;
   const steps = Math.floor((at.neededMm + 1e-6) / r.stepMm);
   let spacingMm = steps * r.stepMm;
   if (!(spacingMm > r.leastMm && isWithinLength(spacingMm, at.neededMm))) spacingMm = r.leastMm;
   if (vuN !== vuN) return spacingMm;
-  at.concreteN = concreteShearN(k, dMm, asMm2, spacingMm);
+  // fewer than the least stirrups only where the closest that is built is not close enough
+  if (!(spacingMm <= at.limits[LEAST_AREA]!)) setReduced(at, k, spacingMm);
   at.designN = designShearN(k, dMm, at.concreteN, spacingMm);
   // the closed form of the strength may end a rounding above the multiple it asks for
   while (!(at.designN >= vuN) && spacingMm > r.leastMm) {
     spacingMm = Math.max(r.leastMm, spacingMm - r.stepMm);
-    at.concreteN = concreteShearN(k, dMm, asMm2, spacingMm);
+    if (!(spacingMm <= at.limits[LEAST_AREA]!)) setReduced(at, k, spacingMm);
     at.designN = designShearN(k, dMm, at.concreteN, spacingMm);
   }
   return spacingMm;
+}
+
+/** Vc with the stirrups there are, and whether the spacing limits halve by it. */
+function setReduced(at: SpacingState, k: ShearConstants, spacingMm: number): void {
+  at.concreteN = concreteShearN(k, at.dMm, at.asMm2, spacingMm);
+  at.isHalved = isSpacingHalved(k, at.vuN, at.dMm, at.concreteN);
 }
 
 /** Which limit is least; the first of equal ones. */

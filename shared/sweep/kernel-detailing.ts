@@ -2,13 +2,7 @@ import { barCoverMm } from '../engine/checks-detailing.ts';
 import { isAtLeastTimes, isSameLength, isWithinLength } from '../engine/limits.ts';
 import type { DesignBasis, UserRules } from '../engine/section.ts';
 import type { SeismicRules } from '../engine/rules/seismic-rules.ts';
-import {
-  concreteShearN,
-  designShearN,
-  detailingSpacingMm,
-  isSpacingHalved,
-  stirrupSpacingLimitMm,
-} from '../engine/shear.ts';
+import { concreteShearN, designShearN, detailingSpacingMm, stirrupSpacingLimitMm } from '../engine/shear.ts';
 import { skinBarsPerSide, skinKgPerM } from '../engine/skin-steel.ts';
 import {
   designSpacingMm,
@@ -241,12 +235,8 @@ export class KernelDetailing {
     const spacingMm = designSpacingMm(at, shear, this.rules);
     this.spacingMm = spacingMm;
     let mask = this.isTied(spacingMm, h) ? 0 : COMPRESSION_TIES;
-    let isHalved = false;
-    if (vuN === vuN) {
-      if (!(at.designN >= vuN)) mask |= SHEAR;
-      isHalved = isSpacingHalved(shear, vuN, d, at.concreteN);
-    }
-    if (!isWithinLength(spacingMm, detailingSpacingMm(shear, d, isHalved))) mask |= STIRRUP_SPACING;
+    if (vuN === vuN && !(at.designN >= vuN)) mask |= SHEAR;
+    if (!isWithinLength(spacingMm, detailingSpacingMm(shear, d, at.isHalved))) mask |= STIRRUP_SPACING;
     return mask;
   }
 
