@@ -1,3 +1,4 @@
+import { arrangeFace, arrangementReport, type FaceLayers } from '../engine/arrangement.ts';
 import { curveChoicesOf, ductilityMeasureOf } from '../engine/curve-basis.ts';
 import type { CurveChoices } from '../engine/curve-choices.ts';
 import { curveEnds, curveMuPhi } from '../engine/curve-ductility.ts';
@@ -8,8 +9,8 @@ import {
   type CurveInput,
   type CurveMaterials,
 } from '../engine/curve-model.ts';
+import type { Arrangement } from '../engine/evaluation.ts';
 import type { DuctilityMeasure, SectionInput } from '../engine/section.ts';
-import { placeSteel } from '../engine/steel-layout.ts';
 import type { Combination } from './combination.ts';
 import type { PreparedSweep } from './prepared-sweep.ts';
 import { sectionAt } from './space.ts';
@@ -34,6 +35,8 @@ export class KernelCurve {
   /** By the combination's own strengths, f′c then fy. */
   private readonly materials = new Map<number, Map<number, CurveMaterials>>();
   private combination: Combination | null = null;
+  /** The combination's bars, arranged when a confined law first asks for them. */
+  private faces: { readonly tension: FaceLayers; readonly compression: FaceLayers } | null = null;
 
   constructor(prepared: PreparedSweep) {
     const { basis } = prepared.problem;
@@ -45,6 +48,7 @@ export class KernelCurve {
 
   begin(combination: Combination): void {
     this.combination = combination;
+    this.faces = null;
   }
 
   /**
@@ -60,7 +64,7 @@ export class KernelCurve {
     return curveMuPhi(curveEnds(model), this.measure);
   }
 
-  /** A confined law asks where the bars stand: the section is placed once more. */
+  /** A confined law asks where the bars stand. */
   private steelOf(
     section: SectionInput,
     { depths, areas, n }: Layers,
@@ -76,8 +80,17 @@ export class KernelCurve {
       asPrimeMm2: compression.areaMm2,
     };
     if (!this.isConfined) return { layout, arrangement: null };
-    const { basis, rules } = this.prepared.problem;
-    return { layout, arrangement: placeSteel(section, basis, rules.maxLayers).arrangement };
+    return { layout, arrangement: this.arrangementOf(section) };
+  }
+
+  private arrangementOf({ reinforcement, depthMm }: SectionInput): Arrangement | null {
+    if (reinforcement.kind === 'layers') return null;
+    const { context } = this.combination!.placement;
+    this.faces ??= {
+      tension: arrangeFace('tension', reinforcement.tension, context),
+      compression: arrangeFace('compression', reinforcement.compression, context),
+    };
+    return arrangementReport(depthMm, this.faces.tension, this.faces.compression, context);
   }
 
   private materialsOf(section: SectionInput): CurveMaterials {

@@ -30,6 +30,8 @@ export interface Placement {
   readonly widthMm: number;
   readonly coverMm: number;
   readonly given: Stirrup | null;
+  /** What its bars are arranged by. */
+  readonly context: ArrangementContext;
   readonly flange: ResolvedFlange | null;
   readonly overhang: Overhang;
   readonly unformed: UnformedSides;
@@ -127,6 +129,7 @@ export function placementAt(prepared: PreparedSweep, combination: number): Place
     overhang: compressedOverhang(widthMm, flange),
     unformed: unformedSides(flange, basis.slabMm),
     given: stirrup,
+    context,
     stirrupBar,
     stirrup: stirrup && stirrupBar && stirrupShape(stirrupBar, stirrup, coverMm, ruleSet),
     leastForStirrupMm: leastForStirrupMm(coverMm, stirrupBar, ruleSet),

@@ -83,6 +83,41 @@ describe('the scatter of a candidate', () => {
     }
   });
 
+  it('fits bars with their deformations: bars that just fit by their name no longer do, least of all the thickest', () => {
+    const tight: SectionInput = {
+      ...HOOPED,
+      widthMm: 225,
+      reinforcement: { kind: 'bars', tension: [{ bar: '25', count: 3 }], compression: [] },
+    };
+    const context = { ...contextOf(null), rules: { ...NO_RULES, maxLayers: 1 } };
+    const neededAt = (barOversize: number) =>
+      evaluateSection(tight, { ...context, basis: { ...context.basis, barOversize } }).arrangement!.faces[0]!
+        .widthNeededMm;
+    const widthMm = (neededAt(1.1) + neededAt(1.14)) / 2;
+    const oversizes = scatterOf({ ...tight, widthMm }, context).variants.filter(
+      ({ id }) => id === 'bar-oversize',
+    );
+    expect(oversizes.map(({ from, to, newlyFailing }) => [from, to, newlyFailing])).toEqual([
+      [1, 1.1, []],
+      [1, 1.14, ['bar-fit']],
+      [1, 1.18, ['bar-fit']],
+    ]);
+  });
+
+  it('keeps the spacing that stirrups were designed to: weaker concrete has to do with it', () => {
+    const designed = { ...HOOPED, stirrup: { bar: '10', legs: 2, spacingMm: 400, isDesigned: true } };
+    const context = contextOf(null);
+    const asked = (vuN: number) => ({ ...context, demand: { ...context.demand, vuN } });
+    // as much shear as the spacing found takes, so that anything less fails
+    const { stirrups } = evaluateSection(designed, asked(250e3));
+    const given = { ...HOOPED, stirrup: { bar: '10', legs: 2, spacingMm: stirrups!.spacingMm } };
+    const shear = evaluateSection(given, asked(250e3)).checks.find(({ id }) => id === 'shear')!;
+    const used = asked(shear.capacity!);
+    expect(evaluateSection(designed, used).stirrups!.spacingMm).toBe(stirrups!.spacingMm);
+    expect(variantOf('strength-low', designed, used).newlyFailing).toContain('shear');
+    expect(variantOf('strength-high', designed, used).newlyFailing).not.toContain('shear');
+  });
+
   it('counts a beam without room as one that fails, and cover that is not there as one that is not asked', () => {
     const thin = { ...HOOPED, coverMm: 5 };
     expect(variantOf('cover-less', thin, contextOf(null))).toMatchObject({ outcome: null, newlyFailing: [] });

@@ -15,6 +15,12 @@ import { OFFICE_PROBLEM } from './office-problem.ts';
 
 const DUCTILITY = CHECK_IDS.indexOf('curvature-ductility');
 
+const VIEWS: readonly View[] = [
+  { x: 'steelKgPerM', y: 'curvatureDuctility' },
+  { x: 'curvatureDuctility', y: 'costPerM' },
+  { x: 'depthMm', y: 'costPerM' },
+];
+
 /** A small office sweep whose ductility is read off the full curve. */
 function problemOf(concreteLaw: ConcreteLawId, measure: DuctilityMeasure): SweepProblem {
   return {
@@ -36,19 +42,28 @@ function problemOf(concreteLaw: ConcreteLawId, measure: DuctilityMeasure): Sweep
   };
 }
 
-/** What a sweep is to add up, from every section explained one by one. */
-function explained(problem: SweepProblem, view: View) {
-  const { space } = prepareSweep(problem, view);
-  const rows = Array.from({ length: space.size }, (_, index) => {
+/** Every section explained one by one. */
+function explained(problem: SweepProblem) {
+  const { space } = prepareSweep(problem, VIEWS[0]!);
+  return Array.from({ length: space.size }, (_, index) => {
     const { checks, flexure, measures } = evaluateSection(sectionAt(space, index), problem);
     const fails = checks.filter((check) => !check.passes).map(({ id }) => CHECK_IDS.indexOf(id));
-    const x = signOf(view.x) * (measures[view.x] ?? NaN);
-    return { index, fails, others: fails.filter((bit) => bit !== DUCTILITY), hasNumbers: flexure !== null, x };
+    const others = fails.filter((bit) => bit !== DUCTILITY);
+    return { index, fails, others, hasNumbers: flexure !== null, measures };
   });
-  const best = CHECK_IDS.map((_, bit) => {
-    const alone = rows.filter((row) => row.hasNumbers && row.fails.length === 1 && row.fails[0] === bit);
-    return alone.reduce((a, b) => (b.x < a.x ? b : a), { index: -1, x: Infinity });
-  });
+}
+
+/** What a sweep is to add up of them. */
+function expectedOf(rows: ReturnType<typeof explained>, view: View) {
+  const xOf = ({ measures }: (typeof rows)[number]) => signOf(view.x) * (measures[view.x] ?? NaN);
+  const best = CHECK_IDS.map((_, bit) =>
+    rows
+      .filter((row) => row.hasNumbers && row.fails.length === 1 && row.fails[0] === bit)
+      .reduce((a, row) => (xOf(row) < a.x ? { index: row.index, x: xOf(row) } : a), {
+        index: -1,
+        x: Infinity,
+      }),
+  );
   return {
     feasible: rows.filter((row) => row.fails.length === 0).length,
     // ductility is not asked of a section that fails another check
@@ -62,23 +77,19 @@ function explained(problem: SweepProblem, view: View) {
 }
 
 describe('a sweep whose ductility is read off the full curve', () => {
-  const views: readonly View[] = [
-    { x: 'steelKgPerM', y: 'curvatureDuctility' },
-    { x: 'curvatureDuctility', y: 'costPerM' },
-    { x: 'depthMm', y: 'costPerM' },
-  ];
   it('counts, and finds the best without each check, as sections explained one by one do', () => {
     let priced = 0;
     let refused = 0;
     for (const [law, measure] of [
       ['hognestad', 'curve-bilinear'],
       ['mander-confined', 'curve-first-yield'],
-    ] as const)
-      for (const view of views) {
-        const problem = problemOf(law, measure);
+    ] as const) {
+      const problem = problemOf(law, measure);
+      const rows = explained(problem);
+      for (const view of VIEWS) {
         const prepared = prepareSweep(problem, view);
         const swept = sweepRange(prepared, 0, prepared.space.size);
-        const expected = explained(problem, view);
+        const expected = expectedOf(rows, view);
         expect(swept.feasible).toBe(expected.feasible);
         expect([...swept.failed]).toEqual(expected.failed);
         expect([...swept.withoutIndex]).toEqual(expected.withoutIndex);
@@ -86,6 +97,7 @@ describe('a sweep whose ductility is read off the full curve', () => {
         refused += expected.failed[DUCTILITY]!;
         priced += expected.withoutIndex.filter((index, bit) => index >= 0 && bit !== DUCTILITY).length;
       }
+    }
     expect(refused).toBeGreaterThan(20);
     expect(priced).toBeGreaterThan(5);
   });
@@ -104,7 +116,7 @@ describe('a sweep whose ductility is read off the full curve', () => {
   });
 
   it('adds up to the same whatever its chunks', () => {
-    const prepared = prepareSweep(problemOf('mander', 'curve-bilinear'), views[0]!);
+    const prepared = prepareSweep(problemOf('mander', 'curve-bilinear'), VIEWS[0]!);
     const { size } = prepared.space;
     const whole = sweepRange(prepared, 0, size);
     fc.assert(
