@@ -203,6 +203,19 @@ describe('equilibrium with a flange', () => {
     }, sigma * area);
   }
 
+  it('of the cracked elastic section: first moments about its axis cancel, the slab as so many thin strips', () => {
+    for (const As of [800, 2000, 6600]) {
+      const { elastic } = evaluateMetric({ b: 300, bf: 1000, hf: 100, h: 600, d: 540, As, fc: 28, fy: 420 });
+      const { crackedAxisMm: kd, modularRatio: n } = nonNull(elastic);
+      let pushed = 0;
+      for (let i = 0; i < 20_000; i++) {
+        const y = ((i + 0.5) / 20_000) * kd;
+        pushed += (y < 100 ? 1000 : 300) * (kd - y) * (kd / 20_000);
+      }
+      expect(pushed / (n * As * (540 - kd))).toBeCloseTo(1, 3);
+    }
+  });
+
   const property = PROPERTIES['flange-equilibrium'];
   it(property.statement, () => {
     let deep = 0;

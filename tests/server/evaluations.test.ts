@@ -109,3 +109,25 @@ test('nobody evaluates on a project that is not theirs', async () => {
   const body = { section: SECTION, demand, rules, basis: {} };
   await outsider.post(`/projects/${project.projectId}/evaluations`, body).expect(404);
 });
+
+test('a T section is judged with its slab, and a slab that does not go with its web is refused by its field', async () => {
+  const flange = {
+    shape: 't',
+    thicknessMm: 120,
+    face: 'compression',
+    width: { kind: 'effective', clearToNextWebMm: 2400, spanMm: 8000 },
+  } as const;
+  const answer = await evaluate({ section: { ...SECTION, flange } });
+  expect(answer.status).toBe(200);
+  expect(answer.body).toMatchObject({
+    evaluation: { flange: { shape: 't', widthMm: 300 + 2 * 960, thicknessMm: 120, face: 'compression' } },
+  });
+  const refused = async (change: object) => {
+    const { status, body } = await evaluate({ section: { ...SECTION, flange: { ...flange, ...change } } });
+    expect(status).toBe(400);
+    return JSON.stringify(body);
+  };
+  expect(await refused({ thicknessMm: 600 })).toContain('The flange must be thinner than the depth h');
+  expect(await refused({ width: { kind: 'given', widthMm: 299 } })).toContain('as wide as the web, or wider');
+  expect(await refused({ shape: 'x' })).toContain('Choose a T or an L');
+});
