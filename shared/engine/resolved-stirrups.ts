@@ -135,7 +135,7 @@ function reasonOf(
   { leastMm }: SpacingRules,
   units: 'us' | 'si',
 ): string {
-  const what = `${GOVERNING[governs]} governs`;
+  const what = `governed by ${GOVERNING[governs]}`;
   if (neededMm + 1e-6 >= leastMm) return what;
   if (!(neededMm > 0)) return `${what}: no spacing is close enough`;
   const length = units === 'us' ? `${(neededMm / MM_PER_IN).toFixed(2)} in` : `${neededMm.toFixed(0)} mm`;

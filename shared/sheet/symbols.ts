@@ -16,7 +16,7 @@ const LETTERS = [
   'Ed|Rd|ck|yk|cd|yd|ud|uk|ctm|ct|cm|cc|ywd|ywk|sw|sy|su|max|min',
   'cu\\d?|cr|ty|ut|yt|ye|s\\d+|c\\d|\\d+|[slcyrtunwvbgkpdφΔ]',
 ].join('|');
-const EXTREME = ',(?:min|max|waive|long|lim|req|eff|[csd])';
+const EXTREME = ',(?:min|max|waive|long|lim|req|eff|widest|least|along|shear|area|ties|hoops|skin|[csd])';
 /** Lengths whose letter alone would make symbols of words (by, hat, lb). */
 const NAMED = 'b(?:eff|[wft])|hf|sw|l(?:0|n(?!\\())';
 

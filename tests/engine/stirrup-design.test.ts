@@ -87,7 +87,7 @@ describe('a designed stirrup', () => {
     expect(tooMuch.stirrups!.neededMm).toBeCloseTo(65.9, 1);
     expect(tooMuch.checks.find((check) => check.id === 'shear')).toMatchObject({
       passes: false,
-      reason: 'strength in shear governs: 66 mm would be needed, closer than stirrups are built',
+      reason: 'governed by strength in shear: 66 mm would be needed, closer than stirrups are built',
     });
     expect(tooMuch.checks.filter((check) => !check.passes).map((check) => check.id)).toEqual(['shear']);
     expect(evaluate(vu(460)).stirrups).toMatchObject({ spacingMm: 75, neededMm: 0 });
