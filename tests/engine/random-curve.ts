@@ -8,7 +8,7 @@ import {
   type Layer,
   type SectionInput,
 } from '#shared/engine/section.ts';
-import { placeSteel } from '#shared/engine/steel-layout.ts';
+import { placeSteel, type SteelLayout } from '#shared/engine/steel-layout.ts';
 import { METRIC_BASIS } from '#shared/verification/layered-section.ts';
 
 const between = (min: number, max: number) => fc.double({ min, max, noNaN: true });
@@ -65,11 +65,13 @@ function sectionOf(d: Drawn): SectionInput {
   };
 }
 
+type RandomCurve = CurveInput & { readonly layout: SteelLayout };
+
 /** So many sections that can be built, each with its curve's input; all laws come by turns unless one is given. */
 export function randomCurves(
   { runs, seed }: { readonly runs: number; readonly seed: number },
   choices?: CurveChoices,
-): CurveInput[] {
+): RandomCurve[] {
   return fc.sample(drawn, { numRuns: runs, seed }).flatMap((d, i) => {
     const section = sectionOf(d);
     const basis = {
