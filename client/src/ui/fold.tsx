@@ -21,7 +21,7 @@ export function Fold({ title, note, isOpen = false, children }: FoldProps) {
         {title}
         {note !== undefined && <span className="ml-2 font-normal text-muted">{note}</span>}
       </summary>
-      <div className="pb-4">{wasOpened && children}</div>
+      <div className="pb-4">{(wasOpened || isOpen) && children}</div>
     </details>
   );
 }

@@ -1,3 +1,4 @@
+import { useState } from 'react';
 import { useWatch, type UseFormReturn } from 'react-hook-form';
 import type { ProjectDesignBasis } from '#shared/contract/design-basis.ts';
 import {
@@ -30,11 +31,19 @@ export function NationalValuesGroup({ form }: { readonly form: UseFormReturn<Pro
   const [units, values] = useWatch({ control, name: ['units', 'nationalValues'] });
   const count = differing(values);
   const hasError = formState.errors.nationalValues !== undefined;
-  const set = (part: Typed) => setValue('nationalValues', { ...values, ...part }, { shouldDirty: true });
+  // Opened for an error it stays open, also once the error is mended.
+  const [hadError, setHadError] = useState(false);
+  if (hasError && !hadError) setHadError(true);
+  const takeRecommended = () => {
+    for (const { fields } of NATIONAL_FIELDS)
+      for (const { name } of fields)
+        setValue(`nationalValues.${name}`, undefined, { shouldDirty: true, shouldValidate: hadError });
+    setValue('nationalValues.isPlasticAnalysis', undefined, { shouldDirty: true });
+    setValue('nationalValues.crackWidthMm', undefined, { shouldDirty: true });
+  };
   return (
     <Fold
-      key={hasError ? 'with errors' : 'without'}
-      isOpen={hasError}
+      isOpen={hadError}
       title="National values"
       note={
         count === 0
@@ -67,7 +76,11 @@ export function NationalValuesGroup({ form }: { readonly form: UseFormReturn<Pro
               label="Plastic analysis"
               hint="5.6.2(2): x/d bounded without checking rotations."
               checked={values?.isPlasticAnalysis === true}
-              onChange={({ target }) => set({ isPlasticAnalysis: target.checked ? true : undefined })}
+              onChange={({ target }) =>
+                setValue('nationalValues.isPlasticAnalysis', target.checked ? true : undefined, {
+                  shouldDirty: true,
+                })
+              }
             />
           )}
           {title === 'Placing and cracks' && (
@@ -79,15 +92,16 @@ export function NationalValuesGroup({ form }: { readonly form: UseFormReturn<Pro
                 label: formatQuantity(mm, 'length', 'si'),
               }))}
               value={String(values?.crackWidthMm ?? RECOMMENDED_VALUES.crackWidthMm)}
-              onChange={({ target }) => set({ crackWidthMm: Number(target.value) as Typed['crackWidthMm'] })}
+              onChange={({ target }) =>
+                setValue('nationalValues.crackWidthMm', Number(target.value) as Typed['crackWidthMm'], {
+                  shouldDirty: true,
+                })
+              }
             />
           )}
         </FieldGroup>
       ))}
-      <Button
-        disabled={count === 0}
-        onClick={() => setValue('nationalValues', undefined, { shouldDirty: true })}
-      >
+      <Button disabled={count === 0} onClick={takeRecommended}>
         Back to the recommended values
       </Button>
     </Fold>
