@@ -25,10 +25,27 @@ const ALL_FIT: SweepProblem = {
   rules: { ...OFFICE.rules, minDepthToWidth: null },
 };
 
-/** Every check there is: shear, stirrup spacing and least depth too. */
-const EVERY_CHECK: SweepProblem = {
+/** Shear, stirrup spacing and least depth too. */
+const WITH_SHEAR: SweepProblem = {
   ...ALL_FIT,
   demand: { ...ALL_FIT.demand, depthCapMm: 790, vuN: 250e3, spanMm: 7000, support: 'simple' },
+};
+
+/** Every check there is: stirrups designed for each section, in a special moment frame. */
+const EVERY_CHECK: SweepProblem = {
+  ...WITH_SHEAR,
+  basis: { ...WITH_SHEAR.basis, seismicSystem: 'special', skinBar: '12' },
+  space: {
+    ...WITH_SHEAR.space,
+    stirrups: [{ bar: '10', legs: 4, spacingMm: 300, isDesigned: true }],
+  },
+};
+
+/** The same so deep that every section has skin steel. */
+const DEEP: SweepProblem = {
+  ...EVERY_CHECK,
+  demand: { ...EVERY_CHECK.demand, depthCapMm: null },
+  space: { ...EVERY_CHECK.space, depth: { kind: 'range', from: 910, to: 1310, step: 3.25 } },
 };
 
 function hotLoop(name: string, problem: SweepProblem): void {
@@ -53,7 +70,9 @@ function hotLoop(name: string, problem: SweepProblem): void {
 
 hotLoop('hot loop, office sweep', OFFICE);
 hotLoop('hot loop, every bar set fits', ALL_FIT);
-hotLoop('the same with Vu, span and support', EVERY_CHECK);
+hotLoop('the same with Vu, span and support', WITH_SHEAR);
+hotLoop('and designed stirrups, special frame', EVERY_CHECK);
+hotLoop('and skin steel', DEEP);
 
 const prepared = prepareSweep(OFFICE, VIEW);
 const { size } = prepared.space;
