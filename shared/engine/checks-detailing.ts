@@ -13,7 +13,7 @@ import {
   stirrupSpacingLimitMm,
 } from './shear.ts';
 import { allowedSkinSpacingMm } from './skin-steel.ts';
-import { leastEffectiveDepthMm } from './span-to-depth.ts';
+import { leastEffectiveDepthMm, spanToDepthAt } from './span-to-depth.ts';
 import { tieLimitMm, type SpacingLimit } from './stirrup-design.ts';
 
 /** Crack control, ties, shear and least depth, in the order of CHECK_IDS; those that do not apply are null. */
@@ -208,7 +208,7 @@ export function spanToDepthOf({
   if (!spanMm || !support || !placed.layout || largestSpanToDepth === null) return null;
   const { dMm, asMm2, asPrimeMm2 } = placed.layout;
   const { overhangMm } = compressedOverhang(section.widthMm, flangeOf(section, ruleSet));
-  const inputs = {
+  const at = spanToDepthAt({
     spanMm,
     support,
     fckMPa: section.fcMPa,
@@ -217,8 +217,8 @@ export function spanToDepthOf({
     faceWidthMm: section.widthMm + overhangMm,
     asMm2,
     asPrimeMm2,
-  };
-  return { inputs, dMm, leastMm: leastEffectiveDepthMm(largestSpanToDepth, inputs, dMm) };
+  });
+  return { at, dMm, leastMm: leastEffectiveDepthMm(largestSpanToDepth, at, dMm) };
 }
 
 function axisDepth({ flexure, placed, section, ruleSet }: CheckContext): CheckResult | null {

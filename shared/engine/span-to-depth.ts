@@ -1,38 +1,44 @@
 import type { SpanToDepthSection } from './rules/rule-set.ts';
 
-/** What the least effective depth follows from; mm, mm², MPa. Areas and widths are shared by all depths of a row. */
-export interface SpanToDepthInputs {
-  readonly spanMm: number;
-  readonly support: SpanToDepthSection['support'];
-  readonly fckMPa: number;
-  readonly fykMPa: number;
-  readonly webMm: number;
+/**
+ * What the least effective depth follows from, with the ratios of the depth last asked for: one object is reused for all
+ * depths of a row. mm, mm², MPa.
+ */
+export interface SpanToDepthAt extends SpanToDepthSection {
+  rho: number;
+  rhoPrime: number;
   /** Width of the compression face. */
   readonly faceWidthMm: number;
   readonly asMm2: number;
   readonly asPrimeMm2: number;
 }
 
-/** The steel ratios that the rule is asked with at effective depth d. */
-export function spanToDepthSection(of: SpanToDepthInputs, dMm: number): SpanToDepthSection {
-  const area = of.faceWidthMm * dMm;
-  const { spanMm, support, fckMPa, fykMPa } = of;
+export function spanToDepthAt(
+  of: Omit<SpanToDepthAt, 'rho' | 'rhoPrime' | 'flangeToWeb'> & { readonly webMm: number },
+): SpanToDepthAt {
+  const { spanMm, support, fckMPa, fykMPa, webMm, faceWidthMm, asMm2, asPrimeMm2 } = of;
   return {
     spanMm,
     support,
     fckMPa,
     fykMPa,
-    flangeToWeb: of.faceWidthMm / of.webMm,
-    rho: of.asMm2 / area,
-    rhoPrime: of.asPrimeMm2 / area,
+    flangeToWeb: faceWidthMm / webMm,
+    faceWidthMm,
+    asMm2,
+    asPrimeMm2,
+    rho: 0,
+    rhoPrime: 0,
   };
 }
 
-/** Least effective depth where deflections are not computed, mm: the span over the largest span to depth. */
+/** Least effective depth where deflections are not computed, mm: the span over the largest span to depth at d. */
 export function leastEffectiveDepthMm(
   largest: (of: SpanToDepthSection) => number,
-  of: SpanToDepthInputs,
+  at: SpanToDepthAt,
   dMm: number,
 ): number {
-  return of.spanMm / largest(spanToDepthSection(of, dMm));
+  const area = at.faceWidthMm * dMm;
+  at.rho = at.asMm2 / area;
+  at.rhoPrime = at.asPrimeMm2 / area;
+  return at.spanMm / largest(at);
 }

@@ -1,6 +1,5 @@
 import { barCoverMm, spanToDepthOf, stirrupBarOf } from './checks-detailing.ts';
 import type { WorkingStep } from './evaluation.ts';
-import { spanToDepthSection } from './span-to-depth.ts';
 import { seismicSteps } from './working-seismic.ts';
 import { shearSteps } from './working-shear.ts';
 import { skinSteps, stirrupSteps } from './working-stirrups.ts';
@@ -58,16 +57,16 @@ function leastDepthStep(source: WorkingSource): WorkingStep[] {
       ),
     ];
   }
-  const of = spanToDepthSection(toDepth.inputs, toDepth.dMm);
+  const { at } = toDepth;
   const ratio: Input = ['l/d', spanMm / toDepth.leastMm, 'ratio'];
   return [
     step(
       'span-to-depth',
       'limits',
-      [ratio[0], ruleSet.formulas.spanToDepth(of), ratio[1], 'ratio'],
+      [ratio[0], ruleSet.formulas.spanToDepth(at), ratio[1], 'ratio'],
       [
-        ['ρ', of.rho, 'ratio'],
-        ['ρ′', of.rhoPrime, 'ratio'],
+        ['ρ', at.rho, 'ratio'],
+        ['ρ′', at.rhoPrime, 'ratio'],
         [ruleSet.symbols.fc, section.fcMPa, 'stress'],
         [ruleSet.symbols.fy, section.fyMPa, 'stress'],
         span,

@@ -13,7 +13,7 @@ import {
   type SpacingBooks,
   type SpacingSetting,
 } from '../engine/stirrup-design.ts';
-import { leastEffectiveDepthMm, type SpanToDepthInputs } from '../engine/span-to-depth.ts';
+import { leastEffectiveDepthMm, spanToDepthAt, type SpanToDepthAt } from '../engine/span-to-depth.ts';
 import type { Combination } from './combination.ts';
 import {
   BAR_RULES,
@@ -85,7 +85,7 @@ export class KernelDetailing {
   private isTieWithinDepth = false;
   private leastDepthMm = -Infinity;
   /** Null where the span is not asked, or the code gives the overall depth. */
-  private spanToDepth: SpanToDepthInputs | null = null;
+  private spanToDepth: SpanToDepthAt | null = null;
   private allowedSkinMm = NaN;
 
   private readonly prepared: PreparedSweep;
@@ -173,7 +173,7 @@ export class KernelDetailing {
       return;
     }
     const { widthMm, overhang } = placement;
-    this.spanToDepth = {
+    this.spanToDepth = spanToDepthAt({
       spanMm,
       support,
       fckMPa: concrete.fcMPa,
@@ -182,7 +182,7 @@ export class KernelDetailing {
       faceWidthMm: widthMm + overhang.overhangMm,
       asMm2: tension.areaMm2,
       asPrimeMm2: compression.areaMm2,
-    };
+    });
   }
 
   /** Checks of a section of depth h (mm) that want no placed bars: ties of stirrups as given, and least depth. */
@@ -209,8 +209,8 @@ export class KernelDetailing {
     return mask;
   }
 
-  private deflectionMask(inputs: SpanToDepthInputs, d: number): number {
-    const leastMm = leastEffectiveDepthMm(this.prepared.ruleSet.largestSpanToDepth!, inputs, d);
+  private deflectionMask(at: SpanToDepthAt, d: number): number {
+    const leastMm = leastEffectiveDepthMm(this.prepared.ruleSet.largestSpanToDepth!, at, d);
     return isWithinLength(leastMm, d) ? 0 : LEAST_DEPTH;
   }
 

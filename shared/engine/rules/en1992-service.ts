@@ -50,8 +50,11 @@ export const deflectionStressMPa = (fykMPa: number) => REFERENCE_STRESS_MPA * (f
  * K [11 + 1.5 √fck ρ0/(ρ − ρ′) + √fck √(ρ′/ρ0)/12] above; times 310/σs, 0.8 for flanges over three webs wide and 7 m over a
  * longer span. ρ − ρ′ counts no less than ρ0, where the book's form has no end.
  */
-export function largestSpanToDepth(of: SpanToDepthSection & { readonly stressMPa: number }): number {
-  const { fckMPa, rho, rhoPrime, support, stressMPa } = of;
+export function largestSpanToDepth(
+  of: SpanToDepthSection,
+  stressMPa = deflectionStressMPa(of.fykMPa),
+): number {
+  const { fckMPa, rho, rhoPrime, support } = of;
   const root = Math.sqrt(fckMPa);
   const reference = 0.001 * root;
   let basic: number;

@@ -9,12 +9,7 @@ import {
   plasticAxisShare,
   secantModulusMPa,
 } from './en1992-concrete.ts';
-import {
-  deflectionStressMPa,
-  largestSpanToDepth,
-  spanToDepthFormula,
-  tabledBarSpacingMm,
-} from './en1992-service.ts';
+import { largestSpanToDepth, spanToDepthFormula, tabledBarSpacingMm } from './en1992-service.ts';
 import { effectiveFlangeFormula, effectiveFlangeMm, meanTensionWidthMm } from './en1992-flange.ts';
 import { designStepsOf } from './en1992-steps.ts';
 import { en1998 } from './en1998.ts';
@@ -83,7 +78,7 @@ export function en1992({ nationalValues, isDuctile = false }: En1992Choices = {}
     isTieSpacingWithinLeastSide: false,
     leastTieDiameterMm: () => 0,
     leastDepthMm: () => 0,
-    largestSpanToDepth: (of) => largestSpanToDepth({ ...of, stressMPa: deflectionStressMPa(of.fykMPa) }),
+    largestSpanToDepth: (of) => largestSpanToDepth(of),
     shear: shearRules(v),
     curveConcrete: { law: 'parabola-rectangle', peakShare: v.alphaCc / v.gammaC },
     ...skinRules(v),
