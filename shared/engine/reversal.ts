@@ -88,7 +88,7 @@ export interface SortedLayers {
  * Nominal strength of a section bent the other way, N·mm: its layers with their depths measured from the other face. 0
  * without steel at the face that is then in tension. Shared by `evaluateSection` and the hot loop.
  */
-export function reversedMomentNmm(layers: SortedLayers, depthMm: number, reversal: Reversal): number {
+function reversedMomentNmm(layers: SortedLayers, depthMm: number, reversal: Reversal): number {
   if (layers.compressionCount === 0) return 0;
   const { n } = layers;
   const { depths, areas, ultimate: k } = reversal;
@@ -112,7 +112,7 @@ export function reversedMomentNmm(layers: SortedLayers, depthMm: number, reversa
 }
 
 /** Steel of the two faces as asked: areas, and the depths of their centroids from the compression face. */
-export interface FacesOfSteel {
+interface FacesOfSteel {
   asMm2: number;
   dMm: number;
   asPrimeMm2: number;

@@ -36,7 +36,7 @@ export interface FaceEntry {
 }
 
 /** What the bars of a set are judged by besides their place. */
-export interface FaceRules {
+interface FaceRules {
   readonly rules: UserRules;
   /** Least diameter of bars that run through, mm. */
   readonly throughMm: number;

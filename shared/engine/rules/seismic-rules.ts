@@ -11,7 +11,7 @@ export interface SeismicClauses {
 }
 
 /** The rule as its book prints it, for the working. */
-export interface SeismicFormulas {
+interface SeismicFormulas {
   readonly width: string;
   readonly leastSteel: string;
   readonly mostSteel: string;
@@ -30,7 +30,7 @@ export interface FaceSteelLimits {
 }
 
 /** What the steel limits of a face may depend on besides its size. */
-export interface SeismicMaterials {
+interface SeismicMaterials {
   readonly fcMPa: number;
   readonly fyMPa: number;
   readonly esMPa: number;
@@ -39,7 +39,7 @@ export interface SeismicMaterials {
 }
 
 /** Spacing of hoops where hinges may form: min(a d, b h, by bars). Infinity leaves a limit out. */
-export interface HoopRules {
+interface HoopRules {
   readonly shareOfEffectiveDepth: number;
   readonly shareOfDepth: number;
   /** Limits by the smallest longitudinal bar, the hoop and fixed lengths, mm; a diameter is Infinity for plain layers. */
