@@ -14,6 +14,8 @@ const PAGES_SIGNED_IN = [
   '/verification',
   candidatePath('B'),
   runPath('reading-room'),
+  `${runPath('reading-room')}?show=ranges&f=depthMm:~584.2&by=fc`,
+  `${runPath('reading-room')}?show=why`,
   '/projects',
   '/projects/new',
   ...['beams', 'sweeps', 'basis', 'prices', 'people'].map((tab) => `${LIBRARY}/${tab}`),
