@@ -26,7 +26,14 @@ const problems = fc.oneof(
       vuN: null,
       spanMm: null,
     },
-    rules: { ...problem.rules, columnWidthMm: null, maxDepthToWidth: null, minCompressionShare: null },
+    basis: { ...problem.basis, seismicSystem: undefined, skinBar: undefined },
+    rules: {
+      ...problem.rules,
+      columnWidthMm: null,
+      maxDepthToWidth: null,
+      minCompressionShare: null,
+      requireHangers: false,
+    },
   })),
 );
 
