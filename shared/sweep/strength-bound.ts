@@ -65,15 +65,16 @@ export function mostMomentNmm(e: BoxExtremes): number {
   return fullN * e.mostTensionDepthMm - leastLossNmm(e, fullN);
 }
 
-const NEED_STEPS = 3;
+const NEED_STEPS = 4;
 
 /**
- * Least tension steel that can give a nominal moment, mm²: T = (M + loss(T))/d from loss nil upwards, each step still below
- * the answer since the loss rises with T. Zero where the block could reach the tension steel.
+ * Least tension steel that can give a nominal moment, mm²: T = (M + loss(T))/d from T = 0 upwards, each step still below the
+ * answer since the loss rises with T; it begins as a gain where the other steel can pull. Zero where the block could reach
+ * the tension steel.
  */
 export function neededTensionMm2(e: BoxExtremes, momentNmm: number): number {
   if (isBlockDeep(e)) return 0;
-  let tensionN = Math.max(0, momentNmm / e.mostTensionDepthMm);
+  let tensionN = 0;
   for (let i = 0; i < NEED_STEPS; i++)
     tensionN = Math.max(tensionN, (momentNmm + leastLossNmm(e, tensionN)) / e.mostTensionDepthMm);
   return tensionN / e.yieldMPa;
