@@ -8,11 +8,11 @@ export interface Spot {
 
 /**
  * Where a chart has drawn its selected mark, read off the canvas itself: the middle of all that is painted in the
- * colour of steel, the only one on it whose red exceeds its green by so much. Waits until there is some.
+ * colour of steel, the only one on it whose red exceeds its green by so much (ochre's does by 62). Waits until there is some.
  */
 export async function markCentre(canvas: Locator): Promise<Spot> {
   return canvas.evaluate(async (element) => {
-    const RED_OVER_GREEN = 60;
+    const RED_OVER_GREEN = 80;
     const HALF_OPAQUE = 128;
     const PATIENCE_MS = 10_000;
     const drawn = element as HTMLCanvasElement;
