@@ -173,7 +173,7 @@ describe('an engineer', () => {
       .getByRole('link', { name: `candidate ${label}` })
       .click();
     const state = page.getByRole('region', { name: 'State' });
-    await state.getByText(WHY).waitFor();
+    await page.getByText(WHY).first().waitFor();
     expect(await state.getByRole('button').allInnerTexts()).toEqual(['Withdraw']);
     const candidateId = page.url().split('/').at(-1)!;
     for (const to of ['checked', 'approved']) {
