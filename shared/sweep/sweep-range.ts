@@ -46,13 +46,7 @@ export function sweepColumns(prepared: PreparedSweep, from: number, to: number):
 }
 
 /** Walks the axes around the depth with everything invariant hoisted, and runs the hot loop on each row. */
-function forEachRow(
-  prepared: PreparedSweep,
-  from: number,
-  to: number,
-  kernel: Kernel,
-  tally: Tally,
-): void {
+function forEachRow(prepared: PreparedSweep, from: number, to: number, kernel: Kernel, tally: Tally): void {
   const { space } = prepared;
   if (!(from >= 0 && from <= to && to <= space.size))
     throw new RangeError(`[${from}, ${to}) is not a range of this space of ${space.size} sections`);
