@@ -1,4 +1,4 @@
-import type { Role } from '#shared/contract/records.ts';
+import type { Role, SheetValue, Snapshot } from '#shared/contract/records.ts';
 import { expandSpace, sectionAt } from '#shared/sweep/space.ts';
 import { studiesOf } from '#shared/engine/studies.ts';
 import { ENGINE_VERSION } from '#shared/engine/version.ts';
@@ -14,9 +14,11 @@ import { projects } from '../db/schema/projects.ts';
 import { runViews } from '../db/schema/run-views.ts';
 import { runs } from '../db/schema/runs.ts';
 import { sweeps } from '../db/schema/sweeps.ts';
+import { sheetValues } from '../db/schema/sheet-values.ts';
 import { labelOf } from '../features/candidates/label.ts';
 import { hashSnapshot, takeSnapshot, withStudies } from '../features/candidates/snapshot.ts';
 import type { DemoRun } from './office.ts';
+import { ownValuesOf } from './own-values.ts';
 import { DEMO_PROJECTS } from './projects.ts';
 import { DEMO_CANDIDATES, type DemoCandidate } from './shortlist.ts';
 import { stableId } from './stable-id.ts';
@@ -162,6 +164,17 @@ async function writeCandidate(
     hash: hashSnapshot(snapshot),
     createdAt: dateOf(candidate.day),
   });
+  const own = checkedValues(candidate, run, snapshot);
+  if (own.length > 0)
+    await tx.insert(sheetValues).values(
+      own.map(({ line, value, by, updatedAt }) => ({
+        candidateId: id,
+        line,
+        personId: by.id,
+        value,
+        updatedAt: new Date(updatedAt),
+      })),
+    );
   await tx.insert(candidateTransitions).values(
     steps.map(({ to, by, note, after }, i) => ({
       id: stableId(`transition/${id}/${i}`),
@@ -170,6 +183,7 @@ async function writeCandidate(
       to,
       byId: personId(by),
       note,
+      sheetValues: to === 'checked' || to === 'approved' ? own : null,
       createdAt: dateOf(candidate.day + after, i),
     })),
   );
@@ -181,4 +195,14 @@ async function writeCandidate(
       text,
       createdAt: dateOf(candidate.day + after, 120 + i),
     });
+}
+
+/** What the checker wrote on the sheet before marking it as checked; none where nobody did. */
+function checkedValues(candidate: DemoCandidate, { sweep }: DemoRun, snapshot: Snapshot): SheetValue[] {
+  const check = candidate.steps.find(({ to }) => to === 'checked');
+  if (check === undefined) return [];
+  const { designBasis } = DEMO_PROJECTS.find(({ key }) => key === sweep.project)!;
+  const { name } = DEMO_ACCOUNTS.find(({ role }) => role === check.by)!;
+  const by = { id: personId(check.by), name };
+  return ownValuesOf(snapshot, designBasis.units, { by, at: dateOf(candidate.day + check.after, -90) });
 }

@@ -81,6 +81,7 @@ const SHARE: Readonly<Record<string, number>> = {
   Difference: 12,
   Quantity: 12,
   'With A′s': 18,
+  'With As2': 18,
   Without: 12,
   Change: 34,
   Governs: 26,

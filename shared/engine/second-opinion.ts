@@ -7,8 +7,8 @@ import type { DesignBasis, SectionInput } from './section.ts';
 import type { SteelLayout } from './steel-layout.ts';
 
 /** Largest difference that counts as agreement: of a moment, and of a curvature. */
-export const STRENGTH_TOLERANCE = 0.005;
-export const CURVATURE_TOLERANCE = 0.02;
+const STRENGTH_TOLERANCE = 0.005;
+const CURVATURE_TOLERANCE = 0.02;
 const STRIPS = 100;
 const FINE_STRIPS = 1200;
 

@@ -14,6 +14,7 @@ import { figureColumn, verdictColumn, wordColumn } from './table-column.ts';
 export function checkTable(snapshot: Snapshot, units: UnitSystem, numbering: Numbering): SheetPart {
   const print = (value: number | null, { kind }: CheckResult) =>
     formatQuantity(value, kind, units, { digits: figuresOf(kind) });
+  const label = ({ id }: CheckResult) => checkLabel(id, snapshot.evaluation.ruleSet.id);
   return {
     id: 'checks',
     title: 'Checks',
@@ -33,7 +34,7 @@ export function checkTable(snapshot: Snapshot, units: UnitSystem, numbering: Num
         value: check.ratio,
         kind: 'ratio',
         cells: [
-          `${checkLabel(check.id).name} ${checkLabel(check.id).symbol}`.trim(),
+          `${label(check).name} ${label(check).symbol}`.trim(),
           print(check.demand, check),
           print(check.capacity, check),
           check.ratio === null ? '' : ratioText(check.ratio),

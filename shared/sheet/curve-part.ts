@@ -20,7 +20,7 @@ export interface StudyWriting {
 /** The full curve: its laws, the plot, and the marked points with what each is. */
 export function curvePart(
   curve: CurveReport | null,
-  levels: readonly MomentLevel[],
+  { levels, axis }: { readonly levels: readonly MomentLevel[]; readonly axis: string },
   { units, numbering, isFrozen }: StudyWriting,
 ): SheetPart | null {
   if (!curve) return null;
@@ -55,7 +55,7 @@ export function curvePart(
         wordColumn('Point'),
         unitColumn('φ', 'curvature', units),
         unitColumn('M', 'moment', units),
-        unitColumn('c', 'length', units),
+        unitColumn(axis, 'length', units),
         unitColumn('εc', 'strain', units),
         unitColumn('εt', 'strain', units),
       ],

@@ -1,4 +1,5 @@
 import type { CurveReport } from '../engine/curve-report.ts';
+import type { CodeSymbols } from '../engine/rules/code-symbols.ts';
 import type { DuctilityByConvention } from '../engine/ductility-conventions.ts';
 import { formatQuantity } from '../print/format-quantity.ts';
 import type { StudyWriting } from './curve-part.ts';
@@ -11,6 +12,7 @@ const CLOSED = 'closed-';
 /** μφ under every convention, with the one held against the target marked. */
 export function ductilityTable(
   curve: CurveReport | null,
+  { axis, epsilonCu }: CodeSymbols,
   { units, numbering, isFrozen }: StudyWriting,
 ): SheetPart | null {
   if (!curve) return null;
@@ -43,7 +45,7 @@ export function ductilityTable(
       ],
       rows: curve.ductility.map(rowOf),
       remarks: [
-        'μφ = φu/φy depends on what is called yield and ultimate, so it never stands without its convention. Closed form: φy = εy/(dt − kd), or with d at the centroid, of the cracked elastic section; φu = εcu/c of the block.',
+        `μφ = φu/φy depends on what is called yield and ultimate, so it never stands without its convention. Closed form: φy = εy/(dt − kd), or with d at the centroid, of the cracked elastic section; φu = ${epsilonCu}/${axis} of the block.`,
       ],
       comparedColumn: 'μφ',
     },

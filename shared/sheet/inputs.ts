@@ -3,12 +3,13 @@ import type { Candidate, Snapshot } from '../contract/records.ts';
 import { getBar } from '../engine/bars.ts';
 import type { FaceArrangement } from '../engine/evaluation.ts';
 import type { Support } from '../engine/section.ts';
-import { barStandardLabel } from '../print/basis-labels.ts';
 import { flangeText } from '../print/flange-text.ts';
 import { codeSymbols } from '../print/code-symbols.ts';
+import { faceWord } from '../print/face-word.ts';
 import { formatQuantity } from '../print/format-quantity.ts';
-import { barsText, givenStirrupText, sizeText, steelText } from '../print/section-text.ts';
+import { barsText, givenStirrupText, sizeText, steelText, stirrupText } from '../print/section-text.ts';
 import type { DisplayKind } from '../print/units.ts';
+import { basisItems, nationalItems, type Print } from './basis-items.ts';
 import type { InputGroup, KeyText } from './sheet.ts';
 
 const SUPPORT: Readonly<Record<Support, string>> = {
@@ -18,8 +19,6 @@ const SUPPORT: Readonly<Record<Support, string>> = {
   cantilever: 'cantilever',
 };
 
-type Print = (value: number | null | undefined, kind: DisplayKind) => string;
-
 /** Everything that went into the numbers, with its unit. */
 export function inputGroups(snapshot: Snapshot, beam: Candidate['beam'], units: UnitSystem): InputGroup[] {
   const print: Print = (value, kind) => formatQuantity(value, kind, units);
@@ -27,6 +26,7 @@ export function inputGroups(snapshot: Snapshot, beam: Candidate['beam'], units: 
     { title: 'Section', items: sectionItems(snapshot, units, print) },
     { title: 'Demand', items: demandItems(snapshot, beam, print) },
     { title: 'Design basis', items: basisItems(snapshot, print) },
+    { title: 'National values', items: nationalItems(snapshot, print) },
     { title: 'Bars as placed', items: placedItems(snapshot, units, print) },
   ].filter(({ items }) => items.length > 0);
 }
@@ -34,7 +34,7 @@ export function inputGroups(snapshot: Snapshot, beam: Candidate['beam'], units: 
 function sectionItems({ section, basis, evaluation }: Snapshot, units: UnitSystem, print: Print): KeyText[] {
   const symbols = codeSymbols(evaluation.ruleSet.id);
   return [
-    { label: 'b × h', value: sizeText(section, units) },
+    { label: evaluation.flange ? 'bw × h' : 'b × h', value: sizeText({ ...section, flange: null }, units) },
     ...(evaluation.flange ? [{ label: 'Flange, bf × hf', value: flangeText(evaluation.flange, units) }] : []),
     { label: 'Steel', value: steelText(section, units) },
     { label: 'Stirrups', value: givenStirrupText(section.stirrup, units) },
@@ -61,22 +61,12 @@ function demandItems({ demand, evaluation }: Snapshot, beam: Candidate['beam'], 
   ];
 }
 
-function basisItems({ basis, rules, evaluation }: Snapshot, print: Print): KeyText[] {
-  return [
-    { label: 'Code', value: evaluation.ruleSet.title },
-    { label: 'Bars', value: barStandardLabel(basis.barStandard) },
-    { label: 'Es', value: print(basis.esMPa, 'stress') },
-    { label: 'Largest aggregate', value: print(basis.maxAggregateMm, 'length') },
-    { label: 'Slab, sides not formed', value: basis.slabMm === 0 ? 'none' : print(basis.slabMm, 'length') },
-    { label: 'Layers at a face, at most', value: `${rules.maxLayers}` },
-  ];
-}
-
 function placedItems(snapshot: Snapshot, units: UnitSystem, print: Print): KeyText[] {
   const { geometry, arrangement } = snapshot.evaluation;
   const area = (value: number) => formatQuantity(value, 'area', units, { digits: 4 });
   const ratio = (value: number) => formatQuantity(value, 'ratio', 'si', { digits: 4 });
   return [
+    ...builtItems(snapshot, units, print),
     ...(arrangement?.faces ?? []).flatMap((face) => faceItems(snapshot, face, print)),
     ...(geometry === null
       ? []
@@ -96,11 +86,40 @@ function placedItems(snapshot: Snapshot, units: UnitSystem, print: Print): KeyTe
   ];
 }
 
-const FACE_NAME = { tension: 'Bottom', compression: 'Top' } as const;
+/** Stirrups whose spacing was found, and the bars along the sides. Results from before either was lack both. */
+function builtItems({ evaluation }: Snapshot, units: UnitSystem, print: Print): KeyText[] {
+  const { stirrups, skin } = evaluation as Partial<typeof evaluation>;
+  return [
+    ...(stirrups?.isDesigned
+      ? [
+          { label: 'Stirrups as designed', value: stirrupText(stirrups, units) },
+          ...(stirrups.governs === null
+            ? []
+            : [
+                {
+                  label: 'Spacing by',
+                  value: `${stirrups.governs.replaceAll('-', ' ')}, ${print(stirrups.neededMm, 'length')} before rounding down`,
+                },
+              ]),
+        ]
+      : []),
+    ...(skin && skin.perSide > 0
+      ? [
+          {
+            label: 'Side bars, not in strength',
+            value: `${skin.perSide}-${skin.bar} a side, ${print(skin.spacingMm, 'length')} apart, at most ${print(skin.allowedMm, 'length')}`,
+          },
+        ]
+      : []),
+  ];
+}
+
+const FACE_NAME = { bottom: 'Bottom', top: 'Top' } as const;
 
 function faceItems(snapshot: Snapshot, face: FaceArrangement, print: Print): KeyText[] {
   const { section, basis, evaluation } = snapshot;
   if (face.layerCounts.length === 0) return [];
+  const name = FACE_NAME[faceWord(face.face, section)];
   const nearest = evaluation.arrangement!.bars.filter((bar) => bar.face === face.face && bar.layer === 0);
   const offset = (yMm: number) => (face.face === 'tension' ? section.depthMm - yMm : yMm);
   const stirrupMm = section.stirrup === null ? 0 : getBar(basis.barStandard, section.stirrup.bar).diameterMm;
@@ -110,18 +129,18 @@ function faceItems(snapshot: Snapshot, face: FaceArrangement, print: Print): Key
   const group = section.reinforcement.kind === 'bars' ? section.reinforcement[face.face] : [];
   return [
     {
-      label: `${FACE_NAME[face.face]} bars`,
+      label: `${name} bars`,
       value: `${barsText(group)}, layers of ${face.layerCounts.join(' + ')}`,
     },
     {
-      label: `${FACE_NAME[face.face]} bar centre`,
+      label: `${name} bar centre`,
       value: `${isAgainstStirrup ? `${print(section.coverMm, 'length')} + ${print(stirrupMm, 'length')} + ${print(largest.diameterMm, 'length')}/2 = ` : ''}${print(centreMm, 'length')} from its face`,
     },
     ...(face.clearGapMm === null
       ? []
       : [
           {
-            label: `${FACE_NAME[face.face]} clear gap`,
+            label: `${name} clear gap`,
             value: `${print(face.clearGapMm, 'length')}, least allowed ${print(face.requiredGapMm, 'length')}`,
           },
         ]),

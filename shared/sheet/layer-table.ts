@@ -1,6 +1,7 @@
 import type { UnitSystem } from '../contract/design-basis.ts';
 import type { Snapshot } from '../contract/records.ts';
 import type { LayerState } from '../engine/evaluation.ts';
+import { codeSymbols } from '../print/code-symbols.ts';
 import { formatQuantity } from '../print/format-quantity.ts';
 import type { DisplayKind } from '../print/units.ts';
 import { figuresOf } from './figures.ts';
@@ -12,6 +13,7 @@ import { figureColumn, unitColumn, wordColumn } from './table-column.ts';
 export function layerTable(snapshot: Snapshot, units: UnitSystem, numbering: Numbering): SheetPart | null {
   const { flexure } = snapshot.evaluation;
   if (flexure === null) return null;
+  const symbols = codeSymbols(snapshot.evaluation.ruleSet.id);
   const print = (value: number, kind: DisplayKind) =>
     formatQuantity(value, kind, units, { hideUnit: true, digits: figuresOf(kind) });
   const cellsOf = (layer: LayerState, i: number) => [
@@ -51,7 +53,7 @@ export function layerTable(snapshot: Snapshot, units: UnitSystem, numbering: Num
         cells: cellsOf(layer, i),
       })),
       remarks: [
-        'ε = εcu (d − c)/c; fs = Es ε, within ±fy; T = A fs, or A (fs + 0.85 f′c) where the concrete a bar displaces is deducted. Tension is positive.',
+        `ε = ${symbols.epsilonCu} (d − ${symbols.axis})/${symbols.axis}; fs = Es ε, within ±${symbols.fyDesign}; T = A fs, or A (fs + ${symbols.blockStress}) where the concrete a bar displaces is deducted. Tension is positive.`,
       ],
       comparedColumn: 'T',
     },

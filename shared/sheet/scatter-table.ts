@@ -1,5 +1,6 @@
 import type { UnitSystem } from '../contract/design-basis.ts';
 import type { CheckId } from '../engine/evaluation.ts';
+import type { CodeSymbols } from '../engine/rules/code-symbols.ts';
 import type { Scatter, ScatterOutcome, ScatterVariant } from '../engine/scatter.ts';
 import { checkLabel } from '../print/check-labels.ts';
 import { formatNumber, formatQuantity } from '../print/format-quantity.ts';
@@ -9,7 +10,11 @@ import type { SheetPart, SheetRow } from './sheet.ts';
 import { figureColumn, unitColumn, verdictColumn, wordColumn } from './table-column.ts';
 
 /** Whether the section still meets its checks where execution strays from the drawing. */
-export function scatterTable(scatter: Scatter, { units, numbering, isFrozen }: StudyWriting): SheetPart {
+export function scatterTable(
+  scatter: Scatter,
+  symbols: CodeSymbols,
+  { units, numbering, isFrozen }: StudyWriting,
+): SheetPart {
   const rowOf = (id: string, name: string, outcome: ScatterOutcome | null, note: string): SheetRow => ({
     id: `scatter-${id}`,
     number: numbering.next(),
@@ -26,7 +31,7 @@ export function scatterTable(scatter: Scatter, { units, numbering, isFrozen }: S
     table: {
       columns: [
         wordColumn('Change'),
-        unitColumn('φMn', 'moment', units),
+        unitColumn(symbols.designMoment, 'moment', units),
         figureColumn('μφ'),
         wordColumn('Governs'),
         figureColumn('Ratio'),
@@ -37,14 +42,14 @@ export function scatterTable(scatter: Scatter, { units, numbering, isFrozen }: S
         ...scatter.variants.map((variant) =>
           rowOf(
             `${variant.id}${variant.id === 'bar-oversize' ? `-${variant.to}` : ''}`,
-            changeText(variant, units),
+            changeText(variant, symbols.fc, units),
             variant.outcome,
             noteOf(variant),
           ),
         ),
       ],
       remarks: [
-        `One change at a time, everything else as drawn (common practice, no source for the amounts): the bars of both faces move with the cover; f′c stands for the concrete as it came; bars are fitted with their deformations. ${
+        `One change at a time, everything else as drawn (common practice, no source for the amounts): the bars of both faces move with the cover; ${symbols.fc} stands for the concrete as it came; bars are fitted with their deformations. ${
           scatter.holds
             ? 'The section meets its listed checks in every case.'
             : 'The section does not meet its listed checks in every case.'
@@ -73,10 +78,10 @@ const outcomeCells = (outcome: ScatterOutcome | null, units: UnitSystem): string
         outcome.meetsListedChecks ? 'meets' : 'fails',
       ];
 
-function changeText({ id, from, to }: ScatterVariant, units: UnitSystem): string {
+function changeText({ id, from, to }: ScatterVariant, fc: string, units: UnitSystem): string {
   if (id === 'bar-oversize') return `Bars ${formatNumber(to, 3)} of their size over the deformations`;
   const isCover = id === 'cover-less' || id === 'cover-more';
   const kind = isCover ? 'length' : 'stress';
   const print = (value: number, hideUnit = false) => formatQuantity(value, kind, units, { hideUnit });
-  return `${isCover ? 'Cover' : 'f′c'} ${print(from, true)} → ${print(to)}`;
+  return `${isCover ? 'Cover' : fc} ${print(from, true)} → ${print(to)}`;
 }

@@ -1,6 +1,7 @@
 import type { UnitSystem } from '../contract/design-basis.ts';
 import type { Snapshot } from '../contract/records.ts';
 import type { MomentLevel } from '../drawing/curve-plan.ts';
+import { codeSymbols } from '../print/code-symbols.ts';
 import { checkTable } from './check-table.ts';
 import { curvePart } from './curve-part.ts';
 import { ductilityTable } from './ductility-table.ts';
@@ -23,7 +24,8 @@ interface PartsWriting {
 
 /** The numbered parts of a sheet, from materials to quantities, in the order a checker works. */
 export function sheetParts(snapshot: Snapshot, { units, numbering, studies }: PartsWriting): SheetPart[] {
-  const { working } = snapshot.evaluation;
+  const { working, ruleSet } = snapshot.evaluation;
+  const symbols = codeSymbols(ruleSet.id);
   const steps = (id: string, title: string, topics: Parameters<typeof workingPart>[1]): SheetPart => ({
     id,
     title,
@@ -41,12 +43,12 @@ export function sheetParts(snapshot: Snapshot, { units, numbering, studies }: Pa
     steps('elastic', 'Elastic section', ['elastic']),
     steps('ductility', 'Curvatures and ductility', ['ductility']),
     steps('more', 'Further working', 'rest'),
-    curvePart(curve, levelsOf(snapshot), writing),
-    ductilityTable(curve, writing),
+    curvePart(curve, { levels: levelsOf(snapshot), axis: symbols.axis }, writing),
+    ductilityTable(curve, symbols, writing),
     hingePart(curve, writing),
     opinionTable(secondOpinion, writing),
-    twinTable(twin, writing),
-    scatter && scatterTable(scatter, writing),
+    twinTable(twin, symbols, writing),
+    scatter && scatterTable(scatter, symbols, writing),
     checkTable(snapshot, units, numbering),
     quantityTable(snapshot, units, numbering),
   ];
@@ -56,8 +58,8 @@ export function sheetParts(snapshot: Snapshot, { units, numbering, studies }: Pa
 }
 
 /** What the curve is held against, drawn over it. */
-const levelsOf = ({ demand: { muNmm } }: Snapshot): MomentLevel[] =>
-  muNmm === null ? [] : [{ label: 'Mu', momentNmm: muNmm }];
+const levelsOf = ({ demand: { muNmm }, basis }: Snapshot): MomentLevel[] =>
+  muNmm === null ? [] : [{ label: codeSymbols(basis.ruleSet).moment, momentNmm: muNmm }];
 
 /** Lines as they are written for somebody who does not read the units. */
 const plainParts = (snapshot: Snapshot): SheetPart[] =>

@@ -2,16 +2,14 @@ import type { UnitSystem } from '../contract/design-basis.ts';
 import type { Snapshot } from '../contract/records.ts';
 import { getBar } from '../engine/bars.ts';
 import type { SteelLine } from '../engine/evaluation.ts';
+import type { SectionInput } from '../engine/section.ts';
+import { faceWord } from '../print/face-word.ts';
 import { formatQuantity } from '../print/format-quantity.ts';
 import type { QuantityItem } from './quantity-item.ts';
 
 const MASS = 'mass-per-length';
-const POSITION = {
-  tension: 'bottom',
-  compression: 'top',
-  skin: 'at the sides',
-  stirrups: 'stirrups',
-} as const;
+const positionWord = ({ position }: SteelLine, section: SectionInput): string =>
+  position === 'skin' ? 'at the sides' : position === 'stirrups' ? 'stirrups' : faceWord(position, section);
 
 /** Steel of the section with the arithmetic of each line, then the sum, the allowances and the total. */
 export function steelItems(snapshot: Snapshot, units: UnitSystem): QuantityItem[] {
@@ -31,7 +29,12 @@ export function steelItems(snapshot: Snapshot, units: UnitSystem): QuantityItem[
   });
   return [
     ...steel.map((line) =>
-      item(`steel-${line.position}-${line.bar}`, nameOf(line), howOf(line, snapshot, units), line.kgPerM),
+      item(
+        `steel-${line.position}-${line.bar}`,
+        nameOf(line, snapshot.section),
+        howOf(line, snapshot, units),
+        line.kgPerM,
+      ),
     ),
     item('steel', 'Net steel', 'sum of the lines above', netSteelKgPerM),
     item(
@@ -50,12 +53,13 @@ export function steelItems(snapshot: Snapshot, units: UnitSystem): QuantityItem[
   ];
 }
 
-const nameOf = ({ bar, position, count }: SteelLine): string =>
-  bar === 'area'
-    ? `Steel ${POSITION[position]}`
-    : position === 'stirrups'
-      ? `Stirrups ${bar}, ${count} legs`
-      : `${count}-${bar} ${POSITION[position]}`;
+function nameOf(line: SteelLine, section: SectionInput): string {
+  const { bar, position, count } = line;
+  if (bar === 'area') return `Steel ${positionWord(line, section)}`;
+  return position === 'stirrups'
+    ? `Stirrups ${bar}, ${count} legs`
+    : `${count}-${bar} ${positionWord(line, section)}`;
+}
 
 function howOf(line: SteelLine, { section, basis, evaluation }: Snapshot, units: UnitSystem): string {
   const length = (mm: number) => formatQuantity(mm, 'length', units, { digits: 4 });

@@ -7,8 +7,8 @@ export interface TextRun {
   readonly isSub: boolean;
 }
 
-/** What reads as a symbol and is a word, a unit or a code in a sentence: a, metres, newtons, feet, T and L, A1–A3, A615. */
-const WORD_IN_PROSE = /^(?:a|m|A|I|N|L|ft|In|Is|An|At|A\d+)$/;
+/** What reads as a symbol and is a word, a unit or a code in a sentence: a, metres, newtons, feet, T and L, A1–A3, A615, C50. */
+const WORD_IN_PROSE = /^(?:a|m|A|I|N|L|ft|In|Is|An|At|[AC]\d+)$/;
 const GREEK_SUB = /^[α-ω]$/;
 
 /** A formula or a sentence as runs, for a page without formula setting and for paper. */

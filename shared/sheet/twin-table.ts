@@ -1,3 +1,4 @@
+import type { CodeSymbols } from '../engine/rules/code-symbols.ts';
 import type { TwinComparison, TwinValues } from '../engine/twin.ts';
 import { formatNumber, formatQuantity } from '../print/format-quantity.ts';
 import type { DisplayKind } from '../print/units.ts';
@@ -8,11 +9,13 @@ import { figureColumn, wordColumn } from './table-column.ts';
 
 type Compared = readonly [id: string, symbol: string, key: keyof TwinValues, kind: DisplayKind];
 
-const COMPARED: readonly Compared[] = [
-  ['c', 'c', 'neutralAxisMm', 'length'],
+const comparedOf = ({ axis, nominalMoment, designMoment }: CodeSymbols): readonly Compared[] => [
+  ['c', axis, 'neutralAxisMm', 'length'],
   ['strain', 'εt', 'tensionStrain', 'strain'],
-  ['mn', 'Mn', 'nominalMomentNmm', 'moment'],
-  ['phi-mn', 'φMn', 'designMomentNmm', 'moment'],
+  ['mn', nominalMoment, 'nominalMomentNmm', 'moment'],
+  ...(designMoment === nominalMoment
+    ? []
+    : ([['phi-mn', designMoment, 'designMomentNmm', 'moment']] as const)),
   ['phi-y', 'φy', 'curvatureYieldPerMm', 'curvature'],
   ['phi-u', 'φu', 'curvatureUltimatePerMm', 'curvature'],
   ['mu-phi', 'μφ', 'curvatureDuctility', 'ratio'],
@@ -22,6 +25,7 @@ const COMPARED: readonly Compared[] = [
 /** The section beside itself without compression steel. */
 export function twinTable(
   comparison: TwinComparison | null,
+  symbols: CodeSymbols,
   { units, numbering, isFrozen }: StudyWriting,
 ): SheetPart | null {
   if (!comparison) return null;
@@ -51,13 +55,15 @@ export function twinTable(
     table: {
       columns: [
         wordColumn('Quantity'),
-        figureColumn('With A′s'),
+        figureColumn(`With ${symbols.compressionSteel}`),
         figureColumn('Without'),
         figureColumn('Ratio'),
       ],
-      rows: COMPARED.filter(([, , key]) => section[key] !== null || twin[key] !== null).map(rowOf),
+      rows: comparedOf(symbols)
+        .filter(([, , key]) => section[key] !== null || twin[key] !== null)
+        .map(rowOf),
       remarks: [
-        `${twinIs.charAt(0).toUpperCase()}${twinIs.slice(1)}; As ${steel(section.asMm2)}, A′s ${steel(section.asPrimeMm2)}. ${definition}.`,
+        `${twinIs.charAt(0).toUpperCase()}${twinIs.slice(1)}; As ${steel(section.asMm2)}, ${symbols.compressionSteel} ${steel(section.asPrimeMm2)}. ${definition}.`,
       ],
       comparedColumn: 'Without',
     },

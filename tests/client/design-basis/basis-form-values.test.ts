@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { savedDesignBasisSchema, type ProjectDesignBasis } from '#shared/contract/design-basis.ts';
-import { NATIONAL_FIELDS } from '#client/src/features/design-basis/national-fields.ts';
+import { NATIONAL_FIELDS } from '#shared/print/national-fields.ts';
 import {
   basisFormValues,
   usualBarStandard,

@@ -14,7 +14,7 @@ import { FieldGroup } from '#client/src/ui/field-group.tsx';
 import { Fold } from '#client/src/ui/fold.tsx';
 import { FormNumberField } from '#client/src/ui/form-number-field.tsx';
 import { SelectField } from '#client/src/ui/select-field.tsx';
-import { NATIONAL_FIELDS } from './national-fields.ts';
+import { NATIONAL_FIELDS } from '#shared/print/national-fields.ts';
 
 type Typed = NonNullable<ProjectDesignBasis['nationalValues']>;
 

@@ -1,5 +1,5 @@
-import type { NationalValues } from '#shared/engine/rules/national-values.ts';
-import type { DisplayKind } from '#shared/print/units.ts';
+import type { NationalValues } from '../engine/rules/national-values.ts';
+import type { DisplayKind } from './units.ts';
 
 type NumberName = Exclude<keyof NationalValues, 'isPlasticAnalysis' | 'crackWidthMm'>;
 
