@@ -48,7 +48,7 @@ export interface Cut {
 export const SPREAD_BINS = 32;
 
 /** 1 for each section within all ranges. */
-export function within(columns: FeasibleColumns, filters: RangeFilters): Uint8Array {
+function within(columns: FeasibleColumns, filters: RangeFilters): Uint8Array {
   const kept = new Uint8Array(columns.count).fill(1);
   for (const [key, range] of filterEntries(filters)) {
     const values = columns.column(key);

@@ -32,7 +32,7 @@ const BOUNDS: Readonly<Record<EdgeAxis, { readonly low: number; readonly high: n
 };
 const SLACK = 1e-6;
 
-export const VALUE_ON: Readonly<Record<EdgeAxis, (section: SectionInput) => number>> = {
+const VALUE_ON: Readonly<Record<EdgeAxis, (section: SectionInput) => number>> = {
   width: (section) => section.widthMm,
   depth: (section) => section.depthMm,
   fc: (section) => section.fcMPa,

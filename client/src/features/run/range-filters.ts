@@ -17,7 +17,7 @@ export const highestWithin = (range: ValueRange): number =>
   range.high === null ? Infinity : range.high + Math.abs(range.high) * SLACK;
 
 /** A value that is not known lies in no range. */
-export const isWithinRange = (value: number | null, range: ValueRange): boolean =>
+const isWithinRange = (value: number | null, range: ValueRange): boolean =>
   value !== null && value >= lowestWithin(range) && value <= highestWithin(range);
 
 export const filterEntries = (filters: RangeFilters): (readonly [ExploreKey, ValueRange])[] =>

@@ -121,7 +121,7 @@ export function WhyPanel(props: WhyPanelProps) {
   const label = measureLabel(result.view.x, reader.units);
   const most = missed[0]?.failed ?? 1;
   return (
-    <section aria-label="Why the rest fell out, in full" className="grid gap-5">
+    <section aria-label="Why the rest fell out, in full" className="grid grid-cols-[minmax(0,1fr)] gap-5">
       <Ladder rungs={rungs} />
       {missed.length === 0 ? (
         <p className="text-sm text-muted">Nothing fell out: every section meets every check.</p>
