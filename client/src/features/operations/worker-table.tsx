@@ -39,7 +39,9 @@ export function WorkerTable({ workers }: { readonly workers: readonly WorkerProc
           <th scope="col" className="figure">
             Failed
           </th>
-          <th scope="col">Engine</th>
+          <th scope="col" className="pl-6">
+            Engine
+          </th>
           <th scope="col">Since</th>
         </tr>
       </thead>
@@ -61,7 +63,7 @@ export function WorkerTable({ workers }: { readonly workers: readonly WorkerProc
             <td className={`figure ${worker.shardsFailed > 0 ? 'text-fails' : ''}`}>
               {formatWhole(worker.shardsFailed)}
             </td>
-            <td className="num">{worker.engineVersion}</td>
+            <td className="num pl-6">{worker.engineVersion}</td>
             <td className="whitespace-nowrap text-muted">{formatDate(worker.startedAt, true)}</td>
           </tr>
         ))}
