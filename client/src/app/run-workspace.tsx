@@ -139,45 +139,50 @@ export function RunWorkspace({ run, project }: RunWorkspaceProps) {
       </div>
     );
 
-  const section =
-    selected === null ? (
-      isOver || state.error !== null ? (
-        <p className="text-muted">Choose a section to look at it.</p>
+  const { select } = address;
+  // Kept as it is while a hand drags a range or a band: only another section makes it anew.
+  const section = useMemo(
+    () =>
+      selected === null ? (
+        isOver || state.error !== null ? (
+          <p className="text-muted">Choose a section to look at it.</p>
+        ) : (
+          <Skeleton lines={12} />
+        )
       ) : (
-        <Skeleton lines={12} />
-      )
-    ) : (
-      <Inspector
-        section={selected.section}
-        evaluation={selected.evaluation}
-        standard={run.basis.barStandard}
-        units={units}
-        context={source.context}
-        space={source.space}
-        onSelect={address.select}
-        actions={
-          <div className="grid gap-3">
-            <PinPanel
-              key={selected.index}
-              projectId={project.id}
-              beamId={run.beam.id}
-              beamMark={run.beam.mark}
-              source={{ kind: 'run', runId: run.id, index: selected.index }}
-              pinned={pinned}
-            />
-            <p className="text-sm">
-              <ButtonLink
-                look="text"
-                className="text-sm"
-                to={`${paths.section(project.id)}?run=${run.id}&i=${selected.index}`}
-              >
-                Change it by hand
-              </ButtonLink>
-            </p>
-          </div>
-        }
-      />
-    );
+        <Inspector
+          section={selected.section}
+          evaluation={selected.evaluation}
+          standard={run.basis.barStandard}
+          units={units}
+          context={source.context}
+          space={source.space}
+          onSelect={select}
+          actions={
+            <div className="grid gap-3">
+              <PinPanel
+                key={selected.index}
+                projectId={project.id}
+                beamId={run.beam.id}
+                beamMark={run.beam.mark}
+                source={{ kind: 'run', runId: run.id, index: selected.index }}
+                pinned={pinned}
+              />
+              <p className="text-sm">
+                <ButtonLink
+                  look="text"
+                  className="text-sm"
+                  to={`${paths.section(project.id)}?run=${run.id}&i=${selected.index}`}
+                >
+                  Change it by hand
+                </ButtonLink>
+              </p>
+            </div>
+          }
+        />
+      ),
+    [selected, isOver, state.error, run, project.id, units, pinned, source, select],
+  );
 
   return (
     <>

@@ -25,12 +25,12 @@ function rangeWords(key: ExploreKey, { low, high }: ValueRange, reader: MeasureR
 
 /** The ranges that are set, in sight of everything they act on, and what lies within them. Nothing but a hand takes one out. */
 export function RangeChips({ explore, feasible, frontCount, reader }: RangeChipsProps) {
-  const { filters, setFilters, shown } = explore;
+  const { filters, setFilters, shown, state } = explore;
   const entries = filterEntries(filters);
   if (entries.length === 0) return null;
   const found =
     shown.count === null
-      ? `${formatWhole(shown.front.length)} of the ${formatWhole(frontCount)} sections on the front`
+      ? `${formatWhole(shown.front.length)} of the ${formatWhole(frontCount)} sections on the front${state === 'coming' ? ', counting all …' : ''}`
       : `${formatWhole(shown.count)} of ${formatWhole(feasible)} sections, front ${formatWhole(shown.front.length)}`;
   return (
     <section
