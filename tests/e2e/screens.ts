@@ -147,6 +147,10 @@ const PROJECT: readonly Screen[] = [
     await page.getByRole('button', { name: 'Delete B1' }).click();
     await page.getByRole('alertdialog').or(page.getByRole('dialog')).waitFor();
   }),
+  after('basis-en', ['engineer', `${CLINIC}/basis`], async (page) => {
+    await page.getByLabel('Design code').selectOption('en1992');
+    await page.locator('summary', { hasText: 'National values' }).click();
+  }),
   after('basis-refused', ['engineer', `${LIBRARY}/basis`], async (page) => {
     await page.getByLabel('Clear cover').fill('99');
     await page.getByRole('button', { name: 'Save design basis' }).click();
@@ -207,6 +211,21 @@ const SECTION: readonly Screen[] = [
     await page.locator('[aria-invalid=true]').first().waitFor();
   }),
   after('section-evaluated', ['engineer', `${LIBRARY}/section`], (page) => evaluate(page, '16')),
+  after('section-hogging-slab', ['engineer', `${LIBRARY}/section`], async (page) => {
+    for (const way of ['T', 'Hogging', 'As given'])
+      await page.getByRole('radio', { name: way, exact: true }).first().check();
+    await fill(page, {
+      'Width b': '14',
+      'Depth h': '30',
+      'Concrete f′c': '5',
+      'Thickness hf': '6',
+      'Width bf': '96',
+    });
+    await fill(page, { 'Top bars': '4-#9', 'Bottom bars': '2-#8' });
+    await page.getByRole('button', { name: 'Evaluate' }).click();
+    await page.getByRole('article').waitFor();
+    for (const title of await page.locator('summary').all()) await title.click();
+  }),
   after('section-rejected', ['engineer', `${LIBRARY}/section`], (page) => evaluate(page, '8.5')),
 ];
 

@@ -76,7 +76,7 @@ export function NeighbourTable(props: NeighbourTableProps) {
       <TableFrame label="Sections one step away">
         <thead>
           <tr>
-            <th scope="col">Step</th>
+            <th scope="col">Step, and its checks</th>
             {columns.map((id) => {
               const { symbol, unit } = measureLabel(id, units, evaluation.ruleSet.id);
               return (
@@ -88,30 +88,29 @@ export function NeighbourTable(props: NeighbourTableProps) {
                 </th>
               );
             })}
-            <th scope="col">Checks</th>
           </tr>
         </thead>
         <tbody>
           {neighbours.map((one) => (
             <tr key={`${one.input} ${JSON.stringify(one.section)}`}>
-              <th scope="row" className="font-normal whitespace-nowrap">
+              <th scope="row" className="min-w-32 font-normal">
                 <StepName
                   neighbour={one}
                   text={stepText(one, section, units, codeSymbols(evaluation.ruleSet.id).fc)}
                   onSelect={onSelect}
                 />
+                <span className="block">
+                  <VerdictMark
+                    verdict={one.meets ? 'meets' : 'fails'}
+                    word={one.meets ? 'meets' : failingWords(one)}
+                  />
+                </span>
               </th>
               {columns.map((id) => (
                 <td key={id} className="figure">
                   {change(one.values[id], evaluation.measures[id], measureLabel(id, units).kind, units)}
                 </td>
               ))}
-              <td>
-                <VerdictMark
-                  verdict={one.meets ? 'meets' : 'fails'}
-                  word={one.meets ? 'meets' : failingWords(one)}
-                />
-              </td>
             </tr>
           ))}
         </tbody>
@@ -141,9 +140,14 @@ function StepName(props: {
   const { neighbour, text, onSelect } = props;
   const { index } = neighbour;
   if (onSelect === undefined) return text;
-  if (index === null) return <span className="text-muted">{text}, not swept</span>;
+  if (index === null)
+    return (
+      <>
+        {text} <span className="text-2xs text-muted">not swept</span>
+      </>
+    );
   return (
-    <Button look="text" className="text-sm" onClick={() => onSelect(index)}>
+    <Button look="text" className="-ml-1 text-sm" onClick={() => onSelect(index)}>
       {text}
     </Button>
   );
