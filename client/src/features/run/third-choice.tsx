@@ -25,6 +25,12 @@ function Legend({ third, reader }: { readonly third: ThirdMeasure; readonly read
   const colours = useChartColours();
   const { key, low, high, scale } = third;
   const { unit } = exploreLabel(key, reader);
+  if (low === high)
+    return (
+      <span className="num whitespace-nowrap">
+        all {bareText(key, low, reader.units)} {unit}
+      </span>
+    );
   return (
     <span className="inline-flex items-center gap-1.5 whitespace-nowrap">
       <span className="num">{bareText(key, low, reader.units)}</span>
