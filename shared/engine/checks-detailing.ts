@@ -14,7 +14,8 @@ import {
 } from './shear.ts';
 import { allowedSkinSpacingMm } from './skin-steel.ts';
 import { leastEffectiveDepthMm, spanToDepthAt } from './span-to-depth.ts';
-import { tieLimitMm, type SpacingLimit } from './stirrup-design.ts';
+import type { SpacingLimit } from './spacing-limits.ts';
+import { tieLimitMm } from './stirrup-design.ts';
 
 /** Crack control, ties, shear and least depth, in the order of CHECK_IDS; those that do not apply are null. */
 export function detailingChecks(context: CheckContext): readonly (CheckResult | null)[] {
@@ -97,6 +98,9 @@ function compressionTies(context: CheckContext): CheckResult | null {
 /** Designed stirrups of bars that cannot be placed have no spacing to judge. */
 const isDesignOpen = ({ section, placed }: CheckContext) =>
   section.stirrup?.isDesigned === true && !placed.layout;
+
+/** What shear is worked out from, where Vu is given. */
+export type ShearState = NonNullable<ReturnType<typeof shearOf>>;
 
 /** Vu with everything shear needs; null where Vu is not asked or the bars are not placed. */
 export function shearOf(context: Pick<CheckContext, 'section' | 'basis' | 'demand' | 'ruleSet' | 'placed'>) {

@@ -1,7 +1,7 @@
 import type { ResolvedFlange } from './flange.ts';
 import type { DefinedDuctility } from './defined-ductility.ts';
 import type { Measures } from './measures.ts';
-import type { SpacingLimit } from './stirrup-design.ts';
+import type { SpacingLimit } from './spacing-limits.ts';
 import type { BendAllowance, DisplacedConcrete, Face, RuleSetId, YieldCurvatureAt } from './section.ts';
 import type { UltimateCause } from './ultimate-cause.ts';
 

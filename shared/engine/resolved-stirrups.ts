@@ -5,13 +5,13 @@ import type { SeismicRules } from './rules/seismic-rules.ts';
 import type { DesignBasis, Demand, Reinforcement, SectionInput } from './section.ts';
 import { shearConstantsOf, type ShearConstants } from './shear.ts';
 import type { PlacedSteel } from './steel-layout.ts';
+import type { SpacingLimit } from './spacing-limits.ts';
 import {
   designSpacingMm,
   governingLimit,
   setSpacingRules,
   spacingRules,
   spacingState,
-  type SpacingLimit,
   type SpacingRules,
   type SpacingState,
 } from './stirrup-design.ts';

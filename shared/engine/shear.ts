@@ -59,7 +59,7 @@ export function strengthSpacingMm(k: ShearConstants, vuN: number, dMm: number, c
 }
 
 /** Whether Vu asks for stirrups at all; by EN 1992-1-1 6.2.1(4) a beam always has them. */
-export const needsStirrups = (k: ShearConstants, vuN: number, dMm: number, concreteN: number) =>
+const needsStirrups = (k: ShearConstants, vuN: number, dMm: number, concreteN: number) =>
   k.form !== 'additive' || needsLeastStirrups(k, vuN, dMm, concreteN);
 
 /** Whether the spacing limits halve; only the additive form has that. */
@@ -71,7 +71,7 @@ export const longestAlongMm = (k: ShearConstants, dMm: number, isHalved: boolean
   k.form === 'additive' ? alongLimitMm(k, dMm, isHalved) : k.rules.longestSpacingShare * dMm;
 
 /** Largest spacing of legs across the width, mm. */
-export const longestAcrossMm = (k: ShearConstants, dMm: number, isHalved: boolean) =>
+const longestAcrossMm = (k: ShearConstants, dMm: number, isHalved: boolean) =>
   k.form === 'additive'
     ? acrossLimitMm(k, dMm, isHalved)
     : Math.min(k.rules.longestAcrossShare * dMm, k.rules.longestAcrossMm);

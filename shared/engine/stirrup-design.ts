@@ -10,20 +10,8 @@ import {
   strengthSpacingMm,
   type ShearConstants,
 } from './shear.ts';
+import { SPACING_LIMITS, type SpacingLimit } from './spacing-limits.ts';
 import { MM_PER_IN } from './units.ts';
-
-/** What may bound the spacing of stirrups, in the order it is worked out; `given` is the widest allowed by the engineer. */
-export const SPACING_LIMITS = [
-  'given',
-  'shear-strength',
-  'along',
-  'least-area',
-  'ties',
-  'least-side',
-  'hoops-depth',
-  'hoops-bars',
-] as const;
-export type SpacingLimit = (typeof SPACING_LIMITS)[number];
 
 /**
  * What bounds the spacing besides the depth: one combination of width, stirrup, bars and materials. Infinity: no bound.

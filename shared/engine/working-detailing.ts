@@ -3,7 +3,8 @@ import type { WorkingStep } from './evaluation.ts';
 import { seismicSteps } from './working-seismic.ts';
 import { shearSteps } from './working-shear.ts';
 import { skinSteps, stirrupSteps } from './working-stirrups.ts';
-import { materialInputs, step, type Input, type WorkingSource } from './working-step.ts';
+import { materialInputs, type WorkingSource } from './working-source.ts';
+import { step, type Input } from './working-step.ts';
 
 /** Limits of crack control and least depth, and shear, each where it is asked. */
 export function detailingSteps(source: WorkingSource): WorkingStep[] {

@@ -1,13 +1,7 @@
 import type { WorkingStep } from './evaluation.ts';
 import { compressedWidth, grossFlangeTerms, grossInputs, widthInputs } from './working-flange.ts';
-import {
-  layerInputs,
-  materialInputs,
-  STATICS,
-  step,
-  type Input,
-  type WorkingSource,
-} from './working-step.ts';
+import { layerInputs, materialInputs, type WorkingSource } from './working-source.ts';
+import { STATICS, step, type Input } from './working-step.ts';
 
 /** Compressed concrete of the cracked section about its axis, by the width it has. */
 const COMPRESSED = {

@@ -1,6 +1,7 @@
 import { compressedOverhang, flangeOf } from './flange.ts';
 import type { WorkingStep } from './evaluation.ts';
-import { step, type Input, type WorkingSource } from './working-step.ts';
+import type { WorkingSource } from './working-source.ts';
+import { step, type Input } from './working-step.ts';
 
 type Source = Pick<WorkingSource, 'section' | 'ruleSet'>;
 

@@ -1,7 +1,8 @@
 import { leastSteelOf } from './checks.ts';
 import type { WorkingStep } from './evaluation.ts';
 import { compressedWidth, widthInputs } from './working-flange.ts';
-import { materialInputs, step, type Input, type WorkingSource } from './working-step.ts';
+import { materialInputs, type WorkingSource } from './working-source.ts';
+import { step, type Input } from './working-step.ts';
 
 /** Steel that Mu requires times k, by the width of the block: web, flange, or the overhang's part and the web's. */
 const WAIVER = {

@@ -1,5 +1,6 @@
 import type { WorkingStep } from './evaluation.ts';
-import { step, type WorkingSource } from './working-step.ts';
+import type { WorkingSource } from './working-source.ts';
+import { step } from './working-step.ts';
 
 /** Largest depth of the neutral axis and most steel, where the code limits these. */
 export function ductilityLimitSteps({ section, layout, ruleSet }: WorkingSource): WorkingStep[] {

@@ -1,5 +1,6 @@
 import type { SteelLine, WorkingStep } from './evaluation.ts';
-import { step, type Input, type WorkingSource } from './working-step.ts';
+import type { WorkingSource } from './working-source.ts';
+import { step, type Input } from './working-step.ts';
 
 const TAKEOFF = 'bar standard, common practice';
 

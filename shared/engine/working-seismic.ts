@@ -3,7 +3,8 @@ import type { WorkingStep } from './evaluation.ts';
 import { reversedStrength } from './reversal.ts';
 import { FACES } from './section.ts';
 import { leastWebMm } from './seismic.ts';
-import { materialInputs, STATICS, step, type Input, type WorkingSource } from './working-step.ts';
+import { materialInputs, type WorkingSource } from './working-source.ts';
+import { STATICS, step, type Input } from './working-step.ts';
 
 /** What the moment frame asks, with numbers. Hoops are with the stirrups. */
 export function seismicSteps(source: WorkingSource): WorkingStep[] {

@@ -1,8 +1,9 @@
 import type { WorkingStep } from './evaluation.ts';
 import { cotTheta, longitudinalShare, sizeFactor, vRdMaxN, vRdsN, type StrutShear } from './shear-strut.ts';
 import { designShearN, stirrupSpacingLimitMm } from './shear.ts';
-import type { ShearState } from './working-shear.ts';
-import { step, type Input, type WorkingSource } from './working-step.ts';
+import type { ShearState } from './checks-detailing.ts';
+import type { WorkingSource } from './working-source.ts';
+import { step, type Input } from './working-step.ts';
 
 /** VRd,c, then struts and stirrups at the slope that carries most (EN 1992-1-1 6.2.2, 6.2.3). */
 export function strutShearSteps(

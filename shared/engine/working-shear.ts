@@ -1,4 +1,4 @@
-import { shearOf } from './checks-detailing.ts';
+import { shearOf, type ShearState } from './checks-detailing.ts';
 import type { WorkingStep } from './evaluation.ts';
 import {
   hasLeastStirrups,
@@ -8,10 +8,8 @@ import {
 } from './shear-additive.ts';
 import { designShearN, isSpacingHalved, stirrupSpacingLimitMm } from './shear.ts';
 import { strutShearSteps, strutSpacingSteps } from './working-shear-strut.ts';
-import { step, type Input, type WorkingSource } from './working-step.ts';
-
-/** What shear is worked out from, where Vu is given. */
-export type ShearState = NonNullable<ReturnType<typeof shearOf>>;
+import type { WorkingSource } from './working-source.ts';
+import { step, type Input } from './working-step.ts';
 
 /** Strength in shear and the spacing of stirrups, in the form the code has. */
 export function shearSteps(source: WorkingSource): WorkingStep[] {

@@ -3,8 +3,10 @@ import { barCoverMm, stirrupBarOf } from './checks-detailing.ts';
 import type { WorkingStep } from './evaluation.ts';
 import { concreteShearN, isSpacingHalved, longestAlongMm, type ShearConstants } from './shear.ts';
 import { innermostTensionMm } from './skin-steel.ts';
-import { hoopLimitMm, SPACING_LIMITS, tieLimitMm, type SpacingLimit } from './stirrup-design.ts';
-import { step, type Input, type WorkingSource } from './working-step.ts';
+import { SPACING_LIMITS, type SpacingLimit } from './spacing-limits.ts';
+import { hoopLimitMm, tieLimitMm } from './stirrup-design.ts';
+import type { WorkingSource } from './working-source.ts';
+import { step, type Input } from './working-step.ts';
 
 /** Largest spacings by ties and hoops, and where the spacing is designed, every other limit and the spacing chosen. */
 export function stirrupSteps(source: WorkingSource): WorkingStep[] {

@@ -6,14 +6,8 @@ import { ductilitySteps, elasticSteps } from './working-elastic.ts';
 import { compressedWidth, flangeSteps, widthInputs } from './working-flange.ts';
 import { ductilityLimitSteps } from './working-limits.ts';
 import { quantitySteps } from './working-quantities.ts';
-import {
-  layerInputs,
-  materialInputs,
-  STATICS,
-  step,
-  type Input,
-  type WorkingSource,
-} from './working-step.ts';
+import { layerInputs, materialInputs, type WorkingSource } from './working-source.ts';
+import { STATICS, step, type Input } from './working-step.ts';
 
 /** Every step from materials to ductility in the order a checker works: formula, numbers put in, result, clause. */
 export function workingOf(source: WorkingSource): readonly WorkingStep[] {

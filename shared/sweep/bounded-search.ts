@@ -33,7 +33,7 @@ const LEAF_SECTIONS = 8;
  * measures, is dropped whole; the box with the best leading measure is split next, down to rows which the hot loop
  * evaluates.
  */
-export class BoundedSearch {
+class BoundedSearch {
   private readonly prepared: PreparedSweep;
   private readonly steps: SweepSteps;
   private readonly view: View;

@@ -6,7 +6,7 @@ import { axisLengths, spaceSize } from './space.ts';
 /** Largest run accepted: about a minute on two threads. Larger spaces are refused with the axis to coarsen. */
 export const MAX_SECTIONS_PER_RUN = 200_000_000;
 /** The same where μφ is read off the full curve, were every section to meet the other checks: a curve takes some 40 µs. */
-export const MAX_SECTIONS_WITH_CURVES = 4_000_000;
+const MAX_SECTIONS_WITH_CURVES = 4_000_000;
 
 const NUMERIC_AXES = ['width', 'depth', 'fc', 'fy', 'cover'] as const;
 const AXIS_NAMES = {

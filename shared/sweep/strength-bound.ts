@@ -104,7 +104,7 @@ export function leastAxisMm(e: BoxExtremes): number {
 }
 
 /** Least depth of the cracked elastic axis, mm, in the same sense. */
-export function leastCrackedAxisMm(e: BoxExtremes): number {
+function leastCrackedAxisMm(e: BoxExtremes): number {
   const pull = e.leastModularRatio * e.leastTensionMm2;
   const d = e.leastInnermostDepthMm;
   const alone = (Math.sqrt(pull * pull + 2 * e.widthMm * pull * d) - pull) / e.widthMm;

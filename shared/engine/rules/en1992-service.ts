@@ -28,7 +28,7 @@ export function tabledBarSpacingMm(stressMPa: number, crackWidthMm: number): num
 }
 
 /** K of Table 7.4N. */
-export const SPAN_FACTOR: Readonly<Record<Support, number>> = {
+const SPAN_FACTOR: Readonly<Record<Support, number>> = {
   simple: 1,
   'one-end-continuous': 1.3,
   'both-ends-continuous': 1.5,
@@ -43,7 +43,7 @@ const LONG_SPAN_MM = 7000;
 const WIDE_FLANGE = 3;
 
 /** σs where the steel is as much as strength requires, MPa (7.17 with As,prov = As,req). */
-export const deflectionStressMPa = (fykMPa: number) => REFERENCE_STRESS_MPA * (fykMPa / REFERENCE_FYK_MPA);
+const deflectionStressMPa = (fykMPa: number) => REFERENCE_STRESS_MPA * (fykMPa / REFERENCE_FYK_MPA);
 
 /**
  * Largest span over effective depth (7.16a, b; 7.4.2(2)): K [11 + 1.5 √fck ρ0/ρ + 3.2 √fck (ρ0/ρ − 1)^1.5] to ρ0 = 10⁻³ √fck,

@@ -113,7 +113,7 @@ describe('a new sweep', () => {
   it('is the same again after being stored and opened', () => {
     const definition = definitionOf({
       ...withSteel('tension', { mixedText: '2-#8 + 2-#6' }),
-      stirrups: [{ bar: '', legs: 2, spacingMm: null }, ...FIRST.stirrups],
+      stirrups: [{ bar: '', legs: 2, spacingMm: null, isDesigned: false }, ...FIRST.stirrups],
     });
     const reopened = sweepForm({ name: 'again', definition }, 'us');
     expect(definitionOf(reopened)).toEqual(definition);
