@@ -11,6 +11,8 @@ import type { StopSwitch } from './stop-switch.ts';
 
 /** Often enough for a front that seems to grow by itself, seldom enough to cost nothing. */
 const INTERVAL_MS = 150;
+/** Counts alone, of each of several shards: a page that is told too often never comes to draw its chart. */
+const COUNT_INTERVAL_MS = 500;
 /** A front of many points takes time to put together, on the thread that answers requests: no more than this share. */
 const LARGEST_SHARE = 0.2;
 
@@ -45,7 +47,7 @@ export class ShardProgress {
     this.#context.tally.addSections(part.doneTo - this.#doneTo);
     this.#doneTo = part.doneTo;
     if (this.#writing !== undefined || performance.now() < this.#nextWriteAt) return;
-    this.#nextWriteAt = performance.now() + INTERVAL_MS;
+    this.#nextWriteAt = performance.now() + (this.#isWhole ? INTERVAL_MS : COUNT_INTERVAL_MS);
     this.#writing = this.#write(part).finally(() => {
       this.#writing = undefined;
     });
@@ -83,9 +85,15 @@ export class ShardProgress {
     }
   }
 
+  /** Whether the run is this one shard. */
+  get #isWhole(): boolean {
+    const { from, to, sectionCount } = this.#shard;
+    return from === 0 && to === sectionCount;
+  }
+
   #describeFront({ chunk }: SweptPart): ViewChange {
-    const { problem, view, from, to, sectionCount } = this.#shard;
-    if (from !== 0 || to !== sectionCount) return {};
+    if (!this.#isWhole) return {};
+    const { problem, view } = this.#shard;
     const begunAt = performance.now();
     const result = finishResult(problem, view, chunk);
     const tookMs = performance.now() - begunAt;

@@ -85,21 +85,22 @@ export function useRunEvents(runId: string, isLive: boolean): void {
   useEffect(() => {
     if (!isLive) return;
     const source = new EventSource(apiUrl(RUN_EVENTS_PATH, { id: runId }));
-    const parts = createPartQueue((progress) => takeProgress(client, runId, progress));
     const paces = new Map<string, PaceWindow>();
     const tell = (viewId: string, live: Partial<LiveView>) =>
       client.setQueryData<LiveView>(queryKeys.liveView(runId, viewId), (known) => ({
         ...(known ?? NOT_LIVE),
         ...live,
       }));
+    // All of it waits for the page to be idle: anything drawn meanwhile would start the drawing of a part over.
+    const parts = createPartQueue((progress) => {
+      const pace = paces.get(progress.viewId) ?? new PaceWindow();
+      paces.set(progress.viewId, pace);
+      tell(progress.viewId, { perSecond: pace.add(progress), position: null });
+      takeProgress(client, runId, progress);
+    });
     source.addEventListener('progress', (event) => {
       const parsed = viewEventSchema.safeParse(JSON.parse(String(event.data)));
-      if (!parsed.success) return;
-      const { viewId } = parsed.data;
-      const pace = paces.get(viewId) ?? new PaceWindow();
-      paces.set(viewId, pace);
-      tell(viewId, { perSecond: pace.add(parsed.data), position: null });
-      parts.add(parsed.data);
+      if (parsed.success) parts.add(parsed.data);
     });
     source.addEventListener('queue', (event) => {
       const parsed = queuePositionSchema.safeParse(JSON.parse(String(event.data)));
