@@ -11,14 +11,14 @@ export interface OwnValues {
   readonly ownValues: readonly SheetValue[];
 }
 
-const OWN_COLUMN = { label: 'Own value', share: 11, isFigure: true } as const;
+const OWN_COLUMN = { label: 'Own value', share: 14, isFigure: true } as const;
 
 /** What the checker got, or an empty line to write on. */
 function ownCell({ sheet, ownValues }: OwnValues, line: NumberedLine): PdfParagraph[] {
   return ownValueTexts(ownValues, line, sheet.units).flatMap(({ amount, difference, meets, word }) => [
     { text: amount },
     {
-      text: `${meets ? '✓' : '≠'} ${word} ${difference}`.trim(),
+      text: unbroken(`${meets ? '✓' : '≠'} ${word} ${difference}`.trim()),
       isSmall: true,
       colour: meets ? ('meets' as const) : ('fails' as const),
     },

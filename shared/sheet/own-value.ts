@@ -1,6 +1,7 @@
 import type { UnitSystem } from '../contract/design-basis.ts';
 import type { SheetValue } from '../contract/records.ts';
-import { formatQuantity } from '../print/format-quantity.ts';
+import { formatNumber } from '../print/format-quantity.ts';
+import { toDisplay } from '../print/units.ts';
 import type { NumberedLine } from './sheet.ts';
 
 /** A checker's own value meets the sheet's within this share of it. */
@@ -48,7 +49,8 @@ export function ownValueTexts(
       const compared = compareOwnValue(value, onSheet);
       return {
         ...compared,
-        amount: formatQuantity(value, line.kind, units, { digits: 5, hideUnit: true }),
+        // As it was written: a slide rule's three figures are not made five.
+        amount: formatNumber(toDisplay(value, line.kind, units), 5, true),
         word: compared.meets ? 'meets' : 'differs',
         by: by.name,
       };

@@ -26,8 +26,8 @@ function tokenAt(text: string, at: number): Token {
   if (space !== undefined) return { kind: 'space', text: space };
   const number = matchAt(NUMBER, text, at);
   if (number !== undefined) return { kind: 'number', text: number };
-  // `318M` is the number of a book.
-  const symbol = /\d/.test(text[at - 1] ?? '') ? undefined : findSymbolAt(text, at);
+  // `318M` is the number of a book, `section’s` a word.
+  const symbol = /[\d’]/.test(text[at - 1] ?? '') ? undefined : findSymbolAt(text, at);
   if (symbol !== undefined)
     return { kind: 'symbol', text: text.slice(at, at + symbol.length), parts: symbol.parts };
   const word = text[at] === 'Σ' ? undefined : matchAt(WORD, text, at);

@@ -5,12 +5,51 @@ import { sheetValues } from '#server/db/schema/sheet-values.ts';
 import { calculationSheetPdf } from '#server/files/calculation-sheet-pdf.ts';
 import type { Candidate, CandidateState, SheetValue } from '#shared/contract/records.ts';
 import { largePlan } from '#shared/drawing/large-plan.ts';
+import type { SectionInput } from '#shared/engine/section.ts';
+import { MM_PER_IN } from '#shared/engine/units.ts';
 import { buildSheet } from '#shared/sheet/build-sheet.ts';
 import { candidateOf, HAND_SECTION, US_BASIS, US_DEMAND, US_SECTION } from '../sheet/hand-candidate.ts';
 import { addProject, PRICE_BOOK, type OfficeProject } from '../support/office-project.ts';
 import type { Account, TestOffice } from '../support/office.ts';
 import { pdfPageCount, pdfPageSize, pdfText } from '../support/pdf-text.ts';
 import { openTestOffice } from '../support/test-office.ts';
+
+/** Plain layers every 90 mm. */
+const LAYERED: SectionInput = {
+  ...HAND_SECTION,
+  depthMm: 800,
+  reinforcement: {
+    kind: 'layers',
+    layers: Array.from({ length: 8 }, (_, i) => ({
+      depthMm: 60 + 90 * i,
+      areaMm2: 500,
+      face: i < 2 ? ('compression' as const) : ('tension' as const),
+    })),
+  },
+};
+
+/** Every check and every step there is, in US units. */
+const SPECIAL = {
+  section: {
+    ...US_SECTION,
+    widthMm: 16 * MM_PER_IN,
+    depthMm: 40 * MM_PER_IN,
+    stirrup: { bar: '#4', legs: 4, spacingMm: 12 * MM_PER_IN, isDesigned: true },
+    flange: {
+      shape: 't',
+      thicknessMm: 127,
+      face: 'compression',
+      width: { kind: 'effective', clearToNextWebMm: 2400, spanMm: 9000 },
+    },
+    reinforcement: {
+      kind: 'bars',
+      tension: [{ bar: '#9', count: 8 }],
+      compression: [{ bar: '#8', count: 6 }],
+    },
+  },
+  basis: { ...US_BASIS, seismicSystem: 'special', skinBar: '#4', ductilityMeasure: 'curve-bilinear' },
+  demand: { ...US_DEMAND, vuN: 400e3, spanMm: 9000, support: 'both-ends-continuous' },
+} as const;
 
 let office: TestOffice;
 let project: OfficeProject;
@@ -204,6 +243,14 @@ describe('the sheet as a file', () => {
       expect(pdfPageCount(file)).toBeLessThanOrEqual(4);
       expect(pdfPageSize(file)).toBe(size);
     }
+  });
+
+  test.each([
+    ['with eight layers of steel', 'si', candidateOf({ section: LAYERED })],
+    ['of a T in a special frame, with side bars and designed stirrups', 'us', candidateOf(SPECIAL)],
+  ] as const)('%s stays within four pages, on either paper', async (_, units, candidate) => {
+    for (const paper of ['a4', 'letter'] as const)
+      expect(pdfPageCount(await fileOf(candidate, paper, units))).toBeLessThanOrEqual(4);
   });
 
   test('made on the thread is what it is without one', async () => {

@@ -184,6 +184,9 @@ describe('a formula', () => {
       'In all',
       'At a face',
       'A1–A3',
+      'A615, C50, 0.0756 yd³/ft',
+      'the section’s own',
+      'fc945d57a1',
     ])
       expect([text, textRuns(text, { isProse: true }).filter(({ isSymbol }) => isSymbol)]).toEqual([
         text,
