@@ -64,7 +64,7 @@ export function ComparePanel({ candidates, units, hasMoney }: ComparePanelProps)
           )}
           <CompareTable candidates={candidates} units={units} baselineId={baselineId} hasMoney={hasMoney} />
           {hasMoney && <PriceFlipNote candidates={candidates} />}
-          <section className="mt-8" aria-label="Moment–curvature of all">
+          <section className="mt-8" aria-label="Curves of all">
             <h3 className="mb-2 border-t border-ink pt-2 font-semibold">
               Moment–curvature, one over the other
             </h3>
