@@ -83,6 +83,7 @@ export function RunWorkspace({ run, project }: RunWorkspaceProps) {
       />
       {result !== null && (
         <FellOut
+          isByCurve={(run.basis.ductilityMeasure ?? 'closed') !== 'closed'}
           result={result}
           definition={run.definition}
           reader={reader}

@@ -1,6 +1,7 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import { formatQuantity } from '#shared/print/format-quantity.ts';
 import { unitLabel, type DisplayKind } from '#shared/print/units.ts';
+import { codeSymbols } from '#shared/print/code-symbols.ts';
 import { measureLabel } from '#client/src/lib/measure-labels.ts';
 import { isInputKey, type ExploreKey, type InputKey } from './explore-axis.ts';
 import type { MeasureReader } from './measure-text.ts';
@@ -21,8 +22,14 @@ const INPUTS: Readonly<Record<InputKey, Omit<ExploreLabel, 'unit'>>> = {
   cover: { name: 'Clear cover', symbol: 'cover', kind: 'length' },
 };
 
-export function exploreLabel(key: ExploreKey, { units, currency }: MeasureReader): ExploreLabel {
-  const label = isInputKey(key) ? INPUTS[key] : measureLabel(key, units);
+/** Strengths in the letters of the code. */
+function inputLabel(key: InputKey, code: MeasureReader['code']): Omit<ExploreLabel, 'unit'> {
+  if (code === undefined || (key !== 'fc' && key !== 'fy')) return INPUTS[key];
+  return { ...INPUTS[key], symbol: codeSymbols(code)[key] };
+}
+
+export function exploreLabel(key: ExploreKey, { units, currency, code }: MeasureReader): ExploreLabel {
+  const label = isInputKey(key) ? inputLabel(key, code) : measureLabel(key, units, code);
   const unit = unitLabel(label.kind, units);
   const { name, symbol, kind } = label;
   return { name, symbol, kind, unit: kind === 'money-per-length' ? `${currency ?? ''}${unit}` : unit };

@@ -11,6 +11,8 @@ interface FellOutProps {
   readonly result: ViewResult;
   readonly definition: SweepDefinition;
   readonly reader: MeasureReader;
+  /** μφ is read off the full curve. */
+  readonly isByCurve: boolean;
   readonly onSelect: (index: number) => void;
   /** Shows it all in full. */
   readonly onMore: () => void;
@@ -68,7 +70,7 @@ function Shares({ result }: { readonly result: ViewResult }) {
 }
 
 /** What was asked in vain or at a price, check by check. */
-export function FellOut({ result, definition, reader, onSelect, onMore }: FellOutProps) {
+export function FellOut({ result, definition, reader, isByCurve, onSelect, onMore }: FellOutProps) {
   const prices = pricesOfChecks(result);
   const { x } = result.view;
   return (
@@ -85,6 +87,12 @@ export function FellOut({ result, definition, reader, onSelect, onMore }: FellOu
           In full, with the nearest misses
         </button>
       </p>
+      {isByCurve && (
+        <p className="pt-1 text-xs text-muted">
+          Curvature ductility is read off the full curve, so it was asked only of sections that meet every
+          other check.
+        </p>
+      )}
       {prices.length > 0 && (
         <ul className="mt-3 grid gap-1.5 text-sm text-muted">
           {prices.slice(0, PRICES_TOLD).map(({ check, index, without, best }) => (

@@ -52,10 +52,10 @@ function useDescribe({ source, reader, view, explore }: FrontPanelProps) {
   return useCallback(
     (index: number) => {
       const { section, evaluation } = source.evaluatedAt(index);
-      const { units } = reader;
+      const { units, code } = reader;
       const values = [view.x, view.y].map(
         (measure) =>
-          `${measureLabel(measure, units).symbol} ${measureText(measure, evaluation.measures[measure], reader)}`,
+          `${measureLabel(measure, units, code).symbol} ${measureText(measure, evaluation.measures[measure], reader)}`,
       );
       const ties = front.find((point) => point.index === index)?.tieCount ?? 1;
       const tied = ties > 1 ? `\n${ties} sections with these two values` : '';
@@ -75,6 +75,7 @@ function PairChoice({ run, view, reader, address }: FrontPanelProps) {
       side={side}
       value={view[side]}
       units={units}
+      code={run.basis.ruleSet}
       reasonAgainst={reasonAgainst}
       onChange={(measure) => address.write(viewPart(withMeasure(view, side, measure)))}
     />

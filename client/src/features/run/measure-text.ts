@@ -1,4 +1,5 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
+import type { RuleSetId } from '#shared/engine/section.ts';
 import type { MeasureId } from '#shared/engine/measures.ts';
 import { formatMoney, formatNumber, formatQuantity } from '#shared/print/format-quantity.ts';
 import { measureLabel } from '#client/src/lib/measure-labels.ts';
@@ -8,6 +9,8 @@ import type { ChartAxis } from '#client/src/charts/front-chart-input.ts';
 export interface MeasureReader {
   readonly units: UnitSystem;
   readonly currency: string | null;
+  /** Puts symbols in the code's own letters. */
+  readonly code?: RuleSetId;
 }
 
 /** One measure's value as a reader meets it: `18.9 lb/ft`, `USD 99.2/ft`, `6.02`. */
@@ -30,7 +33,7 @@ const unitText = (measure: MeasureId, { units, currency }: MeasureReader): strin
 
 /** The measure as an axis of the chart. */
 export function chartAxis(measure: MeasureId, reader: MeasureReader, isLog: boolean): ChartAxis {
-  const label = measureLabel(measure, reader.units);
+  const label = measureLabel(measure, reader.units, reader.code);
   const isNamed = label.symbol === label.name || label.kind === 'co2e-per-length';
   return {
     title: isNamed ? label.name : `${label.name} ${label.symbol}`,

@@ -8,9 +8,11 @@ import type { MeasureReader } from './measure-text.ts';
 import type { ValueRange } from './range-filters.ts';
 import { movedRange, shareOn, steppedValue, valueAt, type RangeScale } from './range-scale.ts';
 
+/** A handle is as tall as a finger needs at least (WCAG 2.2, 2.5.8). */
+const HANDLE_PX = 24;
 /** Height of an axis, and the room above and below it that a handle at its end stands in. */
 export const AXIS_PX = 230;
-export const AXIS_PAD_PX = 18;
+export const AXIS_PAD_PX = HANDLE_PX;
 /** What stands above the axis in its column: its name, its unit, and the upper end to type. */
 export const AXIS_HEAD_PX = 72;
 /** The longest bar of a spread, as a share of its column. */
@@ -78,8 +80,8 @@ function Handle(props: RangeAxisProps & { readonly end: 'low' | 'high' }) {
       aria-valuemax={scale.high}
       aria-valuenow={value}
       aria-valuetext={isSet ? exploreText(axis, value, reader) : 'open'}
-      className={`absolute left-1/2 flex h-4.5 w-11 -translate-x-1/2 cursor-ns-resize touch-none justify-center ${end === 'low' ? 'items-start' : 'items-end'}`}
-      style={end === 'low' ? { top: y } : { top: y - 18 }}
+      className={`absolute left-1/2 flex h-6 w-11 -translate-x-1/2 cursor-ns-resize touch-none justify-center ${end === 'low' ? 'items-start' : 'items-end'}`}
+      style={end === 'low' ? { top: y } : { top: y - HANDLE_PX }}
       onPointerDown={(event) => {
         event.currentTarget.setPointerCapture(event.pointerId);
         event.currentTarget.focus();

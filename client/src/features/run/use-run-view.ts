@@ -50,7 +50,10 @@ export function useRunView(run: Run, units: UnitSystem) {
   const view = useMemo(() => readableView(run, { x, y }, units), [run, x, y, units]);
   const { definition, basis } = run;
   const source = useMemo(() => createSectionSource({ definition, basis }), [definition, basis]);
-  const reader = useMemo(() => ({ units, currency: basis.rates?.currency ?? null }), [units, basis.rates]);
+  const reader = useMemo(
+    () => ({ units, currency: basis.rates?.currency ?? null, code: basis.ruleSet }),
+    [units, basis.rates, basis.ruleSet],
+  );
   const { latest, progress, isLive, error, retry } = useProgress(run, view);
   const cancel = useCancelRun(run.id);
 
