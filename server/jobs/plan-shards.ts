@@ -8,7 +8,7 @@ export interface SectionRange {
  * Up to here a run is one shard: some 0.3 s on two threads. Handing a shard over, storing it and merging it costs about
  * 20 ms, which a run has no gain from until it takes longer than that by far.
  */
-export const LARGEST_SINGLE_SHARD = 2 ** 22;
+const LARGEST_SINGLE_SHARD = 2 ** 22;
 /** The first shards of a large run are small, so that its front shows after a tenth of a second. */
 const FIRST_SHARD = 2 ** 19;
 /** Some 0.6 s on two threads: a few per cent of it are the handing over, and no more than that is lost with a worker. */

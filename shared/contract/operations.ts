@@ -7,7 +7,6 @@ export type ProcessKind = (typeof PROCESS_KINDS)[number];
 
 /** How one ended: in order, or without a word. */
 export const PROCESS_ENDS = ['stopped', 'lost'] as const;
-export type ProcessEnd = (typeof PROCESS_ENDS)[number];
 
 const share = z.object({ sections: z.number(), limit: z.number() });
 

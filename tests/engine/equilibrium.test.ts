@@ -34,6 +34,14 @@ const randomSection = fc
     return { ...rest, coverMm: 40, stirrup: null, reinforcement: { kind: 'layers', layers: steel } };
   });
 
+/** Stress of the block, yield stress and crushing strain, written anew: ACI 318 22.2; EN 1992-1-1 3.1.7 and Table 3.1. */
+function limitsOf(fcMPa: number, fyMPa: number, ruleSetId: keyof typeof RULE_SETS) {
+  if (ruleSetId !== 'en1992') return { sigma: 0.85 * fcMPa, fy: fyMPa, crushing: 0.003 };
+  const eta = fcMPa <= 50 ? 1 : 1 - (fcMPa - 50) / 200;
+  const crushing = fcMPa <= 50 ? 0.0035 : (2.6 + 35 * ((90 - fcMPa) / 100) ** 4) / 1000;
+  return { sigma: (eta * fcMPa) / 1.5, fy: fyMPa / 1.15, crushing };
+}
+
 /** Unbalanced force at a trial axis, written anew from the definition: compression minus tension, N. */
 function unbalanced(
   section: SectionInput,
@@ -43,11 +51,11 @@ function unbalanced(
 ): number {
   if (section.reinforcement.kind !== 'layers') throw new Error('layers only');
   const rules = RULE_SETS[ruleSetId];
-  const sigma = 0.85 * section.fcMPa;
+  const { sigma, fy, crushing } = limitsOf(section.fcMPa, section.fyMPa, ruleSetId);
   const a = rules.blockDepthFactor(section.fcMPa) * c;
   return section.reinforcement.layers.reduce(
     (force, { depthMm, areaMm2 }) => {
-      const stress = Math.max(-section.fyMPa, Math.min(section.fyMPa, 200000 * 0.003 * (1 - depthMm / c)));
+      const stress = Math.max(-fy, Math.min(fy, 200000 * crushing * (1 - depthMm / c)));
       const isDeducted =
         displaced === 'deduct' ? depthMm < a : displaced === 'deduct-above-axis' ? depthMm < c : false;
       return force + areaMm2 * (stress - (isDeducted ? sigma : 0));

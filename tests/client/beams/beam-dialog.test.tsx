@@ -10,7 +10,7 @@ import { ProjectContext } from '#client/src/lib/project-context.ts';
 import { ReaderContext } from '#client/src/lib/reader-context.ts';
 
 const READER: Person = { id: 'r', name: 'An engineer', email: 'engineer@office.example', role: 'engineer' };
-const PROJECT = { id: 'p', designBasis: { units: 'us' } } as Project;
+const PROJECT = { id: 'p', designBasis: { units: 'us', ruleSet: 'aci318-19' } } as Project;
 
 let answer: (url: string, body: unknown) => Response;
 const sent: unknown[] = [];
