@@ -13,7 +13,7 @@ export default defineConfig({
           name: 'unit',
           include: ['tests/{engine,sweep,contract,published,print,drawing,sheet}/**/*.test.ts'],
           // thousands of random sections; the limit is for a hang, not for speed
-          testTimeout: 120_000,
+          testTimeout: 400_000,
           sequence: { groupOrder: 0 },
         },
       },
@@ -43,7 +43,7 @@ export default defineConfig({
           include: ['tests/e2e/**/*.test.ts'],
           globalSetup: SERVER_GLOBAL_SETUP,
           fileParallelism: false,
-          testTimeout: 120_000,
+          testTimeout: 400_000,
           hookTimeout: 180_000,
           expect: { poll: { timeout: 15_000 } },
           sequence: { groupOrder: 1 },

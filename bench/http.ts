@@ -103,7 +103,7 @@ async function measure(): Promise<void> {
   const views = pairsOf(MEASURE_IDS);
   const rank = async (i: number) => {
     const stream = await followRun(office, engineer, { runId: small });
-    const answer = await engineer.post(`/runs/${small}/views`, views[i]!).expect(200);
+    const answer = await engineer.post(`/runs/${small}/views`, views[i]).expect(200);
     const viewId = runSchema.shape.id.parse((answer.body as { viewId: unknown }).viewId);
     await stream.until((event) => event.progress.viewId === viewId && hasEnded(event));
     stream.close();

@@ -63,8 +63,8 @@ export class Tracer {
   private readonly yielded: HeldStrain;
   private readonly crushed: HeldStrain;
   private readonly broken: HeldStrain;
-  /** The extreme fibre at its own peak: where concrete falls steeply, so does the moment beyond. */
-  private readonly crested: HeldStrain;
+  /** The extreme fibre at its own peak, and at each bend of a cover that is lost: the moment may crest there. */
+  private readonly crests: readonly HeldStrain[];
   private readonly crushingCause: UltimateCause;
 
   constructor(model: CurveModel) {
@@ -73,7 +73,9 @@ export class Tracer {
     this.yielded = { depthMm: model.yieldDepthMm, strain: -steel.yieldStrain };
     this.crushed = { depthMm: model.crushingDepthMm, strain: model.crushingStrain };
     this.broken = { depthMm: model.deepestMm, strain: -steel.ruptureStrain };
-    this.crested = { depthMm: 0, strain: model.cover.peakStrain };
+    const { peakStrain, kinkStrains } = model.cover;
+    const falls = model.core ? kinkStrains.filter((strain) => strain > peakStrain) : [];
+    this.crests = [peakStrain, ...falls].map((strain) => ({ depthMm: 0, strain }));
     this.crushingCause = model.core ? 'core-crushing' : 'concrete-crushing';
   }
 
@@ -180,11 +182,13 @@ export class Tracer {
       // the end lies behind the curvature already reached: the state before is the last
       if (before && point.curvaturePerMm <= before.curvaturePerMm) break;
       const isYielding = before && !firstYield && excess(point, this.yielded) <= 0;
-      const isCresting = before && excess(before, this.crested) < 0 && excess(point, this.crested) > 0;
+      const crossed = before
+        ? this.crests.filter((crest) => excess(before, crest) < 0 && excess(point, crest) > 0)
+        : [];
       if (isYielding) firstYield = this.reaching(this.yielded, before, point);
-      if (isYielding || isCresting) {
-        const crest = isCresting ? this.reaching(this.crested, before, point) : point;
-        points.push(...inOrder([isYielding && firstYield ? firstYield : point, crest, point]));
+      if (before && (isYielding || crossed.length > 0)) {
+        const crests = crossed.map((crest) => this.reaching(crest, before, point));
+        points.push(...inOrder([isYielding && firstYield ? firstYield : point, ...crests, point]));
       } else points.push(point);
       if (early) break;
     }

@@ -37,7 +37,7 @@ describe('a run of a hundred and seventy million sections', () => {
     await page.goto(`${CLINIC}/sweeps/${sweep.id}`);
     await page.getByRole('button', { name: 'Run', exact: true }).click();
     await page.getByText('Running', { exact: true }).waitFor();
-    await page.getByRole('slider', { name: /^Section along the front/ }).waitFor();
+    await page.getByRole('slider', { name: /^Section along the front/ }).waitFor({ timeout: 60_000 });
     const early = await evaluatedSoFar(page);
     await expect.poll(() => evaluatedSoFar(page)).toBeGreaterThan(early);
 

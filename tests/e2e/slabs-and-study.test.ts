@@ -49,7 +49,7 @@ describe('a beam with its slab, typed by hand', () => {
     await page.getByLabel('Spacing at most').press('Enter');
     await page.getByRole('article', { name: 'Section T 14 × 30 in' }).waitFor();
     await page.getByText('4-#9 top, 3-#8 bottom', { exact: true }).waitFor();
-    await page.getByText(/^Spacing designed for .* governs/).waitFor();
+    await page.getByText(/^Spacing designed for .* governed by/).waitFor();
 
     for (const title of ['Moment–curvature', 'Ductility by every convention', 'Where execution strays'])
       await unfold(page, title);

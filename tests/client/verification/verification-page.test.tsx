@@ -103,7 +103,7 @@ describe('finding a case', () => {
     expect(countText()).toBe(`1 of ${count} cases`);
     expect(topicRows().at(-1)).toContain(`${all.reproduced} of ${all.cases}`);
     choose('Topic', '');
-    expect(shownCases()).toEqual(['HAND-01', 'HAND-02', 'OPT-04']);
+    expect(shownCases()).toEqual(['EN-07', 'HAND-01', 'HAND-02', 'HAND-03', 'OPT-04']);
     choose('Find', 'navfac blast');
     choose('Provenance', '');
     expect(shownCases()).toEqual(['ACI-S07']);

@@ -52,7 +52,7 @@ export function DetailingGroup({ form }: { readonly form: UseFormReturn<ProjectD
       />
       <SelectField
         label="Side bars of deep beams"
-        hint={`${rules.clauses.skinSteel}. They count in weight and cost, not in strength.`}
+        hint={`${rules.clauses.skinSteel}. They count in weight, not in strength.`}
         options={[
           ...(skinBar === undefined ? [{ value: NOT_CHECKED, label: 'not checked' }] : []),
           { value: NONE, label: 'none: deep beams fail' },
