@@ -18,6 +18,10 @@ export const violatesUnique = (error: unknown, constraint: string): boolean => {
 /** Whether a row could not go, or not come, because of another table's reference. */
 export const violatesReference = (error: unknown): boolean => findDatabaseError(error)?.code === '23503';
 
+/** Whether a table or column is not there: the schema is older than this version, or not made yet. */
+export const isSchemaBehind = (error: unknown): boolean =>
+  ['42P01', '42703'].includes(findDatabaseError(error)?.code ?? '');
+
 /** Shutting down, starting up, or all connections taken (PostgreSQL's manual, appendix A). */
 const AWAY_STATES = ['57P01', '57P02', '57P03', '53300', '08000', '08003', '08006'];
 const AWAY_ERRORS = ['ECONNREFUSED', 'ECONNRESET', 'EPIPE', 'ETIMEDOUT'];
