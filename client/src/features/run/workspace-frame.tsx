@@ -14,7 +14,8 @@ interface WorkspaceFrameProps {
  * front first.
  */
 export function WorkspaceFrame({ head, space, front, section, foot }: WorkspaceFrameProps) {
-  const column = 'min-w-0 px-4 py-4 sm:px-5 xl:overflow-y-auto';
+  // Positioned, so that words only a screen reader hears stay inside and do not lengthen the page.
+  const column = 'relative min-w-0 px-4 py-4 sm:px-5 xl:overflow-y-auto';
   return (
     <div className="flex min-h-0 flex-1 flex-col xl:h-[calc(100dvh-46px)] xl:flex-none">
       {head}
