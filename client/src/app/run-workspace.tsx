@@ -8,7 +8,7 @@ import { FrontPanel } from '#client/src/features/run/front-panel.tsx';
 import { NothingFeasible } from '#client/src/features/run/nothing-feasible.tsx';
 import { ProofLine } from '#client/src/features/run/proof-line.tsx';
 import { RangeChips } from '#client/src/features/run/range-chips.tsx';
-import { hasFilters } from '#client/src/features/run/range-filters.ts';
+import { hasFilters } from '#shared/sweep/range-filters.ts';
 import { RunHead } from '#client/src/features/run/run-head.tsx';
 import { SpaceRail } from '#client/src/features/run/space-rail.tsx';
 import { WorkspaceFrame } from '#client/src/features/run/workspace-frame.tsx';

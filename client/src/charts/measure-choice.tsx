@@ -2,7 +2,7 @@ import { useId } from 'react';
 import type { RuleSetId } from '#shared/engine/section.ts';
 import { MEASURE_IDS, type MeasureId } from '#shared/engine/measures.ts';
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
-import { measureLabel } from '#client/src/lib/measure-labels.ts';
+import { measureLabel } from '#shared/print/measure-labels.ts';
 
 interface MeasureChoiceProps {
   readonly side: 'x' | 'y';

@@ -5,7 +5,7 @@ import { formatMoney, formatQuantity } from '#shared/print/format-quantity.ts';
 import { unitLabel } from '#shared/print/units.ts';
 import { KeyValue } from '#client/src/ui/key-value.tsx';
 import { TableFrame } from '#client/src/ui/table-frame.tsx';
-import { positionName } from './position-name.ts';
+import { positionName } from '#shared/print/position-name.ts';
 
 interface QuantitiesTableProps {
   readonly section: Pick<SectionInput, 'flange'>;

@@ -4,7 +4,7 @@ import type { SectionInput } from '#shared/engine/section.ts';
 import { formatMoney, formatQuantity } from '#shared/print/format-quantity.ts';
 import { unitLabel } from '#shared/print/units.ts';
 import { TableFrame } from '#client/src/ui/table-frame.tsx';
-import { positionName } from './position-name.ts';
+import { positionName } from '#shared/print/position-name.ts';
 
 interface TakeoffTableProps {
   readonly section: Pick<SectionInput, 'flange'>;

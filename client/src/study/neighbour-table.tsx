@@ -5,7 +5,7 @@ import { checkLabel } from '#shared/print/check-labels.ts';
 import { codeSymbols } from '#shared/print/code-symbols.ts';
 import { formatDifferenceTo, formatMoney, formatNumber } from '#shared/print/format-quantity.ts';
 import { unitLabel } from '#shared/print/units.ts';
-import { measureLabel } from '#client/src/lib/measure-labels.ts';
+import { measureLabel } from '#shared/print/measure-labels.ts';
 import { Button } from '#client/src/ui/button.tsx';
 import { TableFrame } from '#client/src/ui/table-frame.tsx';
 import { VerdictMark } from '#client/src/ui/verdict-mark.tsx';

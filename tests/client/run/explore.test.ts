@@ -5,11 +5,11 @@ import { prepareSweep } from '#shared/sweep/prepared-sweep.ts';
 import { spaceSize } from '#shared/sweep/space.ts';
 import { sweepRange } from '#shared/sweep/sweep-range.ts';
 import { cutColumns, nearestSection, type Cut, type CutQuery } from '#client/src/features/run/cut.ts';
-import { EXPLORE_KEYS, exploreValue } from '#client/src/features/run/explore-axis.ts';
+import { EXPLORE_KEYS, exploreValue } from '#shared/sweep/explore-axis.ts';
 import { FeasibleColumns } from '#client/src/features/run/feasible-columns.ts';
 import { FeasibleDesk } from '#client/src/features/run/feasible-desk.ts';
 import type { FeasibleAnswer, FeasibleRequest } from '#client/src/features/run/feasible-worker.ts';
-import { isWithinFilters, type RangeFilters } from '#client/src/features/run/range-filters.ts';
+import { isWithinFilters, type RangeFilters } from '#shared/sweep/range-filters.ts';
 import { createSectionSource } from '#client/src/features/run/section-source.ts';
 import { BASIS, DEFINITION } from './problem.ts';
 

@@ -2,7 +2,7 @@ import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Quantities, SteelLine } from '#shared/engine/evaluation.ts';
 import type { SectionInput } from '#shared/engine/section.ts';
 import { formatMoney, formatQuantity } from '#shared/print/format-quantity.ts';
-import { positionName } from '#client/src/sheet/position-name.ts';
+import { positionName } from '#shared/print/position-name.ts';
 import { KeyValue } from '#client/src/ui/key-value.tsx';
 
 interface QuantitiesListProps {

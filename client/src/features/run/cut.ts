@@ -3,9 +3,14 @@ import { BandBuilder, MAX_BAND_KEPT } from '#shared/sweep/band.ts';
 import { FrontBuilder } from '#shared/sweep/front.ts';
 import type { View } from '#shared/sweep/problem.ts';
 import type { DensityCell, EdgeAxis, FrontPoint, Point } from '#shared/sweep/result.ts';
-import type { ExploreKey } from './explore-axis.ts';
+import type { ExploreKey } from '#shared/sweep/explore-axis.ts';
 import type { FeasibleColumns } from './feasible-columns.ts';
-import { filterEntries, highestWithin, lowestWithin, type RangeFilters } from './range-filters.ts';
+import {
+  filterEntries,
+  highestWithin,
+  lowestWithin,
+  type RangeFilters,
+} from '#shared/sweep/range-filters.ts';
 
 /** One side of what the chart shows, stored (SI) units. */
 export interface WindowSide {

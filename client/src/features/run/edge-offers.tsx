@@ -8,7 +8,7 @@ import { unavailableReason } from '#client/src/lib/measure-availability.ts';
 import { Button } from '#client/src/ui/button.tsx';
 import { NumberField } from '#client/src/ui/number-field.tsx';
 import { edgeFindings, type EdgeFinding } from './edge-findings.ts';
-import type { MeasureReader } from './measure-text.ts';
+import type { MeasureReader } from '#shared/print/measure-reader.ts';
 import type { SectionSource } from './section-source.ts';
 
 /** A changed sweep to run, and what was changed in a few words. */

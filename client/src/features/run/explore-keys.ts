@@ -3,7 +3,7 @@ import type { Run } from '#shared/contract/records.ts';
 import { MEASURE_IDS, type MeasureId } from '#shared/engine/measures.ts';
 import type { Space } from '#shared/sweep/problem.ts';
 import { unavailableReason } from '#client/src/lib/measure-availability.ts';
-import { INPUT_KEYS, inputValues, type ExploreKey } from './explore-axis.ts';
+import { INPUT_KEYS, inputValues, type ExploreKey } from '#shared/sweep/explore-axis.ts';
 
 /** In the order a section is read: what it is made of, then what it comes to. */
 const ORDER: readonly ExploreKey[] = [

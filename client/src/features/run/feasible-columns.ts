@@ -3,7 +3,7 @@ import type { BarStandard } from '#shared/engine/section.ts';
 import { prepareSweep, type PreparedSweep } from '#shared/sweep/prepared-sweep.ts';
 import type { Space, SweepProblem, View } from '#shared/sweep/problem.ts';
 import { sweepColumns } from '#shared/sweep/sweep-range.ts';
-import { inputValues, isInputKey, type ExploreKey, type InputKey } from './explore-axis.ts';
+import { inputValues, isInputKey, type ExploreKey, type InputKey } from '#shared/sweep/explore-axis.ts';
 
 /** Sections judged at a time: their columns are 6 MB, and larger ones gained nothing. */
 const STEP = 2 ** 16;

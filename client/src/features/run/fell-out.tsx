@@ -2,9 +2,10 @@ import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
 import type { ViewResult } from '#shared/sweep/result.ts';
 import { checkLabel } from '#shared/print/check-labels.ts';
 import { formatDifferenceTo, formatNumber, formatWhole } from '#shared/print/format-quantity.ts';
-import { measureLabel } from '#client/src/lib/measure-labels.ts';
+import { measureLabel } from '#shared/print/measure-labels.ts';
 import { checkWords } from './check-words.ts';
-import { measureText, type MeasureReader } from './measure-text.ts';
+import type { MeasureReader } from '#shared/print/measure-reader.ts';
+import { measureText } from './measure-text.ts';
 import { pricesOfChecks } from './price-of-checks.ts';
 
 interface FellOutProps {

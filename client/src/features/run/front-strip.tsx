@@ -7,7 +7,8 @@ import { SectionDrawing } from '#client/src/drawing/section-drawing.tsx';
 import { sectionGeometry } from '#shared/drawing/section-geometry.ts';
 import { formatQuantity } from '#shared/print/format-quantity.ts';
 import { barsText, sizeText } from '#shared/print/section-text.ts';
-import { measureText, type MeasureReader } from './measure-text.ts';
+import type { MeasureReader } from '#shared/print/measure-reader.ts';
+import { measureText } from './measure-text.ts';
 import type { SectionSource } from './section-source.ts';
 import { stripScale } from './strip-scale.ts';
 

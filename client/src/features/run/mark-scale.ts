@@ -1,6 +1,6 @@
 import type { MarkScale, MarkStyle } from '#client/src/charts/front-chart-input.ts';
 import type { FrontPoint } from '#shared/sweep/result.ts';
-import { exploreValue, type ExploreKey } from './explore-axis.ts';
+import { exploreValue, type ExploreKey } from '#shared/sweep/explore-axis.ts';
 import type { SectionSource } from './section-source.ts';
 
 export interface ThirdMeasure {

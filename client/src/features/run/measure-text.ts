@@ -1,17 +1,9 @@
-import type { UnitSystem } from '#shared/contract/design-basis.ts';
-import type { RuleSetId } from '#shared/engine/section.ts';
 import type { MeasureId } from '#shared/engine/measures.ts';
 import { formatMoney, formatNumber, formatQuantity } from '#shared/print/format-quantity.ts';
-import { measureLabel } from '#client/src/lib/measure-labels.ts';
+import { measureLabel } from '#shared/print/measure-labels.ts';
+import type { MeasureReader } from '#shared/print/measure-reader.ts';
 import { displayUnit } from '#shared/print/units.ts';
 import type { ChartAxis } from '#client/src/charts/front-chart-input.ts';
-
-export interface MeasureReader {
-  readonly units: UnitSystem;
-  readonly currency: string | null;
-  /** Puts symbols in the code's own letters. */
-  readonly code?: RuleSetId;
-}
 
 /** One measure's value as a reader meets it: `18.9 lb/ft`, `USD 99.2/ft`, `6.02`. */
 export function measureText(

@@ -6,7 +6,8 @@ import { RatioBar } from '#client/src/ui/ratio-bar.tsx';
 import { sizeText } from '#shared/print/section-text.ts';
 import { EmptyState } from '#client/src/ui/empty-state.tsx';
 import { checkWords } from './check-words.ts';
-import { measureText, type MeasureReader } from './measure-text.ts';
+import type { MeasureReader } from '#shared/print/measure-reader.ts';
+import { measureText } from './measure-text.ts';
 import { missedChecks } from './missed-checks.ts';
 import type { SectionSource } from './section-source.ts';
 

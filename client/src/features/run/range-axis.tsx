@@ -2,10 +2,10 @@ import { useRef, type KeyboardEvent, type PointerEvent } from 'react';
 import { MEASURE_DIRECTION } from '#shared/engine/measures.ts';
 import { NumberField } from '#client/src/ui/number-field.tsx';
 import type { Spread } from './cut.ts';
-import { isInputKey, type ExploreKey } from './explore-axis.ts';
-import { bareText, exploreLabel, exploreText, exploreTitle } from './explore-label.ts';
-import type { MeasureReader } from './measure-text.ts';
-import type { ValueRange } from './range-filters.ts';
+import { isInputKey, type ExploreKey } from '#shared/sweep/explore-axis.ts';
+import { bareText, exploreLabel, exploreText, exploreTitle } from '#shared/print/explore-label.ts';
+import type { MeasureReader } from '#shared/print/measure-reader.ts';
+import type { ValueRange } from '#shared/sweep/range-filters.ts';
 import { movedRange, shareOn, steppedValue, valueAt, type RangeScale } from './range-scale.ts';
 
 /** A handle is as tall as a finger needs at least (WCAG 2.2, 2.5.8). */

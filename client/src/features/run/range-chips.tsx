@@ -1,9 +1,8 @@
 import { formatWhole } from '#shared/print/format-quantity.ts';
 import { Button } from '#client/src/ui/button.tsx';
-import { bareText, exploreLabel } from './explore-label.ts';
-import type { MeasureReader } from './measure-text.ts';
-import { filterEntries, withRange, type ValueRange } from './range-filters.ts';
-import type { ExploreKey } from './explore-axis.ts';
+import type { MeasureReader } from '#shared/print/measure-reader.ts';
+import { rangeWords } from '#shared/print/range-words.ts';
+import { filterEntries, withRange } from '#shared/sweep/range-filters.ts';
 import type { Explore } from './use-explore.ts';
 
 interface RangeChipsProps {
@@ -12,15 +11,6 @@ interface RangeChipsProps {
   readonly feasible: number;
   readonly frontCount: number;
   readonly reader: MeasureReader;
-}
-
-function rangeWords(key: ExploreKey, { low, high }: ValueRange, reader: MeasureReader): string {
-  const { symbol, unit } = exploreLabel(key, reader);
-  const print = (value: number | null) => bareText(key, value, reader.units);
-  const tail = unit === '' ? '' : ` ${unit}`;
-  if (low === null) return `${symbol} ≤ ${print(high)}${tail}`;
-  if (high === null) return `${symbol} ≥ ${print(low)}${tail}`;
-  return `${symbol} ${print(low)}–${print(high)}${tail}`;
 }
 
 /** The ranges that are set, in sight of everything they act on, and what lies within them. Nothing but a hand takes one out. */

@@ -2,8 +2,8 @@ import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import { toDisplay, toStored } from '#shared/print/units.ts';
 import type { DisplayKind } from '#shared/print/units.ts';
 import { SPREAD_BINS, type Spread } from './cut.ts';
-import { exploreValue, type ExploreKey } from './explore-axis.ts';
-import type { ValueRange } from './range-filters.ts';
+import { exploreValue, type ExploreKey } from '#shared/sweep/explore-axis.ts';
+import type { ValueRange } from '#shared/sweep/range-filters.ts';
 import type { EvaluatedSection } from './section-source.ts';
 
 /** Ends of one axis of the ranges, stored units, and what its handles snap to (null: to three figures). */

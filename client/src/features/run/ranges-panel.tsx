@@ -1,12 +1,12 @@
 import { useMemo } from 'react';
 import type { Run } from '#shared/contract/records.ts';
-import { exploreValue, type ExploreKey } from './explore-axis.ts';
-import { exploreLabel, exploreTitle } from './explore-label.ts';
+import { exploreValue, type ExploreKey } from '#shared/sweep/explore-axis.ts';
+import { exploreLabel, exploreTitle } from '#shared/print/explore-label.ts';
 import { snapValues } from './explore-keys.ts';
-import type { MeasureReader } from './measure-text.ts';
+import type { MeasureReader } from '#shared/print/measure-reader.ts';
 import { useElementSize } from '#client/src/charts/use-element-size.ts';
 import { AXIS_HEAD_PX, AXIS_PAD_PX, AXIS_PX, RangeAxis } from './range-axis.tsx';
-import { withRange } from './range-filters.ts';
+import { withRange } from '#shared/sweep/range-filters.ts';
 import { listedSpread, shareOn, type RangeScale } from './range-scale.ts';
 import { rowsOf } from './section-rows.ts';
 import type { EvaluatedSection, SectionSource } from './section-source.ts';

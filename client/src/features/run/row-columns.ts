@@ -4,9 +4,9 @@ import { formatQuantity } from '#shared/print/format-quantity.ts';
 import { barsText } from '#shared/print/section-text.ts';
 import { toDisplay } from '#shared/print/units.ts';
 import { columnDecimals } from './column-decimals.ts';
-import { exploreValue, INPUT_KEYS, type ExploreKey } from './explore-axis.ts';
-import { exploreLabel, exploreTitle } from './explore-label.ts';
-import type { MeasureReader } from './measure-text.ts';
+import { exploreValue, INPUT_KEYS, type ExploreKey } from '#shared/sweep/explore-axis.ts';
+import { exploreLabel, exploreTitle } from '#shared/print/explore-label.ts';
+import type { MeasureReader } from '#shared/print/measure-reader.ts';
 import type { RowKey, SectionRow } from './section-rows.ts';
 
 export interface Column {

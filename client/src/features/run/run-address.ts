@@ -2,8 +2,14 @@ import { MEASURE_IDS, type MeasureId } from '#shared/engine/measures.ts';
 import type { View } from '#shared/sweep/problem.ts';
 import type { ChartWindow } from '#client/src/charts/chart-window.ts';
 import { MARK_STYLES, type MarkStyle } from '#client/src/charts/front-chart-input.ts';
-import { isExploreKey, type ExploreKey } from './explore-axis.ts';
-import { filtersText, rangeText, readFilters, readRange, type RangeFilters } from './range-filters.ts';
+import { isExploreKey, type ExploreKey } from '#shared/sweep/explore-axis.ts';
+import {
+  filtersText,
+  rangeText,
+  readFilters,
+  readRange,
+  type RangeFilters,
+} from '#shared/sweep/range-filters.ts';
 
 /** What lies below the strip. */
 export const PANELS = ['table', 'ranges', 'why'] as const;

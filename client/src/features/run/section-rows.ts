@@ -1,7 +1,7 @@
 import type { Point } from '#shared/sweep/result.ts';
 import { barsText, sizeText } from '#shared/print/section-text.ts';
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
-import { exploreValue, type ExploreKey } from './explore-axis.ts';
+import { exploreValue, type ExploreKey } from '#shared/sweep/explore-axis.ts';
 import type { EvaluatedSection, SectionSource } from './section-source.ts';
 
 /** A section as a row of the table behind the chart. */

@@ -3,10 +3,10 @@ import { sizeOf, tintOf } from '#client/src/charts/front-marks.ts';
 import { MARK_STYLES, type MarkStyle } from '#client/src/charts/front-chart-input.ts';
 import { useChartColours } from '#client/src/charts/use-chart-colours.ts';
 import { SegmentedControl } from '#client/src/ui/segmented-control.tsx';
-import type { ExploreKey } from './explore-axis.ts';
-import { bareText, exploreLabel, exploreTitle } from './explore-label.ts';
+import type { ExploreKey } from '#shared/sweep/explore-axis.ts';
+import { bareText, exploreLabel, exploreTitle } from '#shared/print/explore-label.ts';
 import type { ThirdMeasure } from './mark-scale.ts';
-import type { MeasureReader } from './measure-text.ts';
+import type { MeasureReader } from '#shared/print/measure-reader.ts';
 
 interface ThirdChoiceProps {
   readonly value: ExploreKey | null;

@@ -5,8 +5,8 @@ import type { DensityCell, FrontPoint, Point, ViewResult } from '#shared/sweep/r
 import type { ChartLayout, CloudSpot } from '#client/src/charts/front-chart.tsx';
 import { bandWithin } from './band-within.ts';
 import type { Cut, CutQuery } from './cut.ts';
-import type { ExploreKey } from './explore-axis.ts';
-import { filtersText, hasFilters, isWithinFilters, type RangeFilters } from './range-filters.ts';
+import type { ExploreKey } from '#shared/sweep/explore-axis.ts';
+import { filtersText, hasFilters, isWithinFilters, type RangeFilters } from '#shared/sweep/range-filters.ts';
 import { filtersPart, type RunAddress } from './run-address.ts';
 import type { RunAddressControls } from './use-run-address.ts';
 import type { SectionSource } from './section-source.ts';

@@ -3,7 +3,7 @@ import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Run } from '#shared/contract/records.ts';
 import type { View } from '#shared/sweep/problem.ts';
 import type { Point, ViewResult } from '#shared/sweep/result.ts';
-import type { ExploreKey } from './explore-axis.ts';
+import type { ExploreKey } from '#shared/sweep/explore-axis.ts';
 import { exploreKeys, usualAxes } from './explore-keys.ts';
 import { pricesOfChecks } from './price-of-checks.ts';
 import { readableView } from './readable-view.ts';

@@ -4,11 +4,12 @@ import type { ViewResult } from '#shared/sweep/result.ts';
 import { checkLabel } from '#shared/print/check-labels.ts';
 import { formatDifferenceTo, formatNumber, formatWhole } from '#shared/print/format-quantity.ts';
 import { barsText, sizeText, steelText } from '#shared/print/section-text.ts';
-import { measureLabel } from '#client/src/lib/measure-labels.ts';
+import { measureLabel } from '#shared/print/measure-labels.ts';
 import { RatioBar } from '#client/src/ui/ratio-bar.tsx';
 import { TableFrame } from '#client/src/ui/table-frame.tsx';
 import { checkWords } from './check-words.ts';
-import { measureText, type MeasureReader } from './measure-text.ts';
+import type { MeasureReader } from '#shared/print/measure-reader.ts';
+import { measureText } from './measure-text.ts';
 import { ladder, missedChecks, type MissedCheck, type Rung } from './missed-checks.ts';
 import type { SectionSource } from './section-source.ts';
 

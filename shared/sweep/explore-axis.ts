@@ -1,8 +1,8 @@
-import { getBar } from '#shared/engine/bars.ts';
-import { MEASURE_IDS, type MeasureId } from '#shared/engine/measures.ts';
-import type { BarStandard } from '#shared/engine/section.ts';
-import type { Space, SteelSet } from '#shared/sweep/problem.ts';
-import type { EvaluatedSection } from './section-source.ts';
+import { getBar } from '../engine/bars.ts';
+import { MEASURE_IDS, type MeasureId } from '../engine/measures.ts';
+import type { Evaluation } from '../engine/evaluation.ts';
+import type { BarStandard, SectionInput } from '../engine/section.ts';
+import type { Space, SteelSet } from './problem.ts';
 
 /** What a section was made from beside its width and depth, which are measures already. */
 export const INPUT_KEYS = ['fc', 'tensionSteel', 'compressionSteel', 'fy', 'cover'] as const;
@@ -35,8 +35,14 @@ export function inputValues(
   };
 }
 
+/** A section of the space with what the engine makes of it. */
+export interface JudgedSection {
+  readonly section: SectionInput;
+  readonly evaluation: Evaluation;
+}
+
 /** One value of an evaluated section; null where it has none. */
-export function exploreValue({ section, evaluation }: EvaluatedSection, key: ExploreKey): number | null {
+export function exploreValue({ section, evaluation }: JudgedSection, key: ExploreKey): number | null {
   if (!isInputKey(key)) return evaluation.measures[key];
   if (key === 'fc') return section.fcMPa;
   if (key === 'fy') return section.fyMPa;

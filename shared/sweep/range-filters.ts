@@ -1,5 +1,4 @@
-import type { EvaluatedSection } from './section-source.ts';
-import { exploreValue, isExploreKey, type ExploreKey } from './explore-axis.ts';
+import { exploreValue, isExploreKey, type ExploreKey, type JudgedSection } from './explore-axis.ts';
 
 /** Both ends belong to the range; null leaves that side open. Stored (SI) units. */
 export interface ValueRange {
@@ -25,7 +24,7 @@ export const filterEntries = (filters: RangeFilters): (readonly [ExploreKey, Val
 
 export const hasFilters = (filters: RangeFilters): boolean => filterEntries(filters).length > 0;
 
-export const isWithinFilters = (section: EvaluatedSection, filters: RangeFilters): boolean =>
+export const isWithinFilters = (section: JudgedSection, filters: RangeFilters): boolean =>
   filterEntries(filters).every(([key, range]) => isWithinRange(exploreValue(section, key), range));
 
 /** The filters with one range set, or taken out where both its ends are open. */
