@@ -1,9 +1,0 @@
-import type { SteelLine } from '#shared/engine/evaluation.ts';
-import type { SectionInput } from '#shared/engine/section.ts';
-import { faceWord } from '#shared/print/face-word.ts';
-
-/** Where a line of steel lies in the beam as built: `bottom`, `top`, `skin`, `stirrups`. */
-export const positionName = (
-  position: SteelLine['position'],
-  section: Pick<SectionInput, 'flange'>,
-): string => (position === 'tension' || position === 'compression' ? faceWord(position, section) : position);
