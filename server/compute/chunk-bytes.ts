@@ -2,7 +2,7 @@ import { deserialize, serialize } from 'node:v8';
 import type { ChunkResult } from '#shared/sweep/chunk.ts';
 
 /** Tells our blocks from anything else, and this layout from later ones. */
-const HEADER = Buffer.from('FWC1');
+const HEADER = Buffer.from('FWC2');
 
 /**
  * A chunk's result as one block for the database: header, then the structured clone of its columns. Exact, NaN and −0

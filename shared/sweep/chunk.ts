@@ -21,6 +21,8 @@ export interface ChunkResult {
   readonly failed: Float64Array;
   readonly failedOnly: Float64Array;
   /** Best section failing only that check; NaN and −1 for none. */
+  /** Sections of which that check is the first they fail, in the order of CHECK_IDS: with the feasible ones they are all. */
+  readonly failedFirst: Float64Array;
   readonly withoutX: Float64Array;
   readonly withoutY: Float64Array;
   readonly withoutIndex: Float64Array;
@@ -50,6 +52,7 @@ export function emptyChunk(): ChunkResult {
     withoutX: new Float64Array(checks).fill(NaN),
     withoutY: new Float64Array(checks).fill(NaN),
     withoutIndex: new Float64Array(checks).fill(-1),
+    failedFirst: new Float64Array(checks),
     bestValue: new Float64Array(measures).fill(NaN),
     bestIndex: new Float64Array(measures).fill(-1),
     front: [],

@@ -52,7 +52,12 @@ export function finishResult(problem: SweepProblem, view: View, chunk: ChunkResu
     },
     edges: edgeShares(space, front),
   };
-  return { ...withoutHash, hash: fingerprint(JSON.stringify(withoutHash)) };
+  return {
+    ...withoutHash,
+    // Counted later than the rest: left out of the hash, so that the same result keeps the one it had.
+    failures: withoutHash.failures.map((of, i) => ({ ...of, failedFirst: chunk.failedFirst[i]! })),
+    hash: fingerprint(JSON.stringify(withoutHash)),
+  };
 }
 
 function axisCounts(values: readonly number[], feasible: Float64Array, evaluated: Float64Array) {

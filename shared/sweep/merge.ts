@@ -24,6 +24,7 @@ export function mergeChunks(a: ChunkResult, b: ChunkResult): ChunkResult {
     failed: add(a.failed, b.failed),
     failedOnly: add(a.failedOnly, b.failedOnly),
     withoutX: pick(a.withoutX, b.withoutX, without),
+    failedFirst: add(a.failedFirst, b.failedFirst),
     withoutY: pick(a.withoutY, b.withoutY, without),
     withoutIndex: pick(a.withoutIndex, b.withoutIndex, without),
     bestValue: pick(a.bestValue, b.bestValue, best),

@@ -52,6 +52,8 @@ export type EdgeAxis = (typeof EDGE_AXES)[number];
 export interface EdgeShare {
   readonly axis: EdgeAxis;
   readonly end: 'low' | 'high';
+  /** Sections that pass every check before it and fail it. Undefined in results from before it was counted. */
+  readonly failedFirst?: number | undefined;
   readonly share: number;
 }
 

@@ -21,6 +21,7 @@ export class Tally {
   private readonly failedOnly = new Float64Array(CHECK_COUNT);
   readonly widthFeasible: Float64Array;
   readonly widthEvaluated: Float64Array;
+  private readonly failedFirst = new Float64Array(CHECK_COUNT);
   readonly depthFeasible: Float64Array;
   readonly depthEvaluated: Float64Array;
   readonly fcFeasible: Float64Array;
@@ -50,8 +51,12 @@ export class Tally {
   /** Every section, by the checks it fails: bit i is CHECK_IDS[i], none is feasible. */
   countMask(mask: number): void {
     this.evaluated++;
-    if (mask === 0) this.feasible++;
-    else if ((mask & (mask - 1)) === 0) this.failedOnly[31 - Math.clz32(mask)]!++;
+    if (mask === 0) {
+      this.feasible++;
+      return;
+    }
+    this.failedFirst[31 - Math.clz32(mask & -mask)]!++;
+    if ((mask & (mask - 1)) === 0) this.failedOnly[31 - Math.clz32(mask)]!++;
     for (let rest = mask; rest !== 0; rest &= rest - 1) this.failed[31 - Math.clz32(rest & -rest)]!++;
   }
 
@@ -104,7 +109,7 @@ export class Tally {
   }
 
   finish(): ChunkResult {
-    const { evaluated, feasible, failed, failedOnly } = this;
+    const { evaluated, feasible, failed, failedOnly, failedFirst } = this;
     const { widthFeasible, widthEvaluated, depthFeasible, depthEvaluated, fcFeasible, fcEvaluated } = this;
     const { withoutX, withoutY, withoutIndex, bestValue, bestIndex } = this;
     return {
@@ -125,6 +130,7 @@ export class Tally {
       })),
       band: this.band.finish(),
       density: this.density.finish(),
+      failedFirst,
       widthFeasible,
       widthEvaluated,
       depthFeasible,

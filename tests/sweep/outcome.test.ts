@@ -56,7 +56,12 @@ describe('the result of a sweep', () => {
         for (const failure of result.failures) {
           const failing = all.filter((s) => s.failed.includes(failure.check));
           const only = failing.filter((s) => s.failed.length === 1);
-          expect([failure.failed, failure.failedOnlyThis]).toEqual([failing.length, only.length]);
+          const first = failing.filter((s) => s.failed[0] === failure.check);
+          expect([failure.failed, failure.failedOnlyThis, failure.failedFirst]).toEqual([
+            failing.length,
+            only.length,
+            first.length,
+          ]);
           const best = only.filter((s) => s.hasNumbers).sort((a, b) => a.x - b.x || a.index - b.index)[0];
           expect(failure.bestWithout).toEqual(best ? { index: best.index, x: best.x, y: best.y } : null);
         }
