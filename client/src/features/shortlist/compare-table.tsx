@@ -23,6 +23,13 @@ interface CompareTableProps {
   readonly hasMoney: boolean;
 }
 
+/** Two candidates at the ends of a wide screen are hard to compare: so many stand no further apart than this. */
+const WIDTH_OF: Readonly<Record<number, string>> = {
+  2: 'max-w-[52rem]',
+  3: 'max-w-[68rem]',
+  4: 'max-w-[84rem]',
+};
+
 const MONEY_ROWS = ['costPerM', 'cost-total'];
 
 /** Candidates as columns, standing on one ground line at one scale; what is compared as rows. */
@@ -34,7 +41,7 @@ export function CompareTable({ candidates, units, baselineId, hasMoney }: Compar
     new Set(candidates.map(({ takeoff }) => `${takeoff.spanMm}×${takeoff.count}`)).size === 1;
   const { spanMm, count } = candidates[0]!.takeoff;
   return (
-    <TableFrame label="Candidates side by side">
+    <TableFrame label="Candidates side by side" className={WIDTH_OF[candidates.length]}>
       <thead>
         <tr className="border-b-0!">
           <th scope="col" className="sticky left-0 z-10 w-40 min-w-32 bg-paper align-bottom">
