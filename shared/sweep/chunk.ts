@@ -2,6 +2,7 @@ import { CHECK_IDS } from '../engine/evaluation.ts';
 import { MEASURE_IDS } from '../engine/measures.ts';
 import type { BandPoint } from './band.ts';
 import type { Density } from './density.ts';
+import type { FrontInThree } from './front-in-three.ts';
 
 /** A vertex of a chunk's front in oriented measures (less is better). */
 export interface ChunkFrontPoint {
@@ -30,6 +31,8 @@ export interface ChunkResult {
   readonly bestValue: Float64Array;
   readonly bestIndex: Float64Array;
   readonly front: readonly ChunkFrontPoint[];
+  /** Of a view with a third measure. */
+  readonly frontInThree?: FrontInThree | undefined;
   readonly band: readonly BandPoint[];
   readonly density: Density;
   readonly widthFeasible: Float64Array;

@@ -4,7 +4,8 @@ import { MAX_BAND_KEPT } from './band.ts';
 import type { ChunkResult } from './chunk.ts';
 import { densityCells } from './density.ts';
 import { fingerprint } from './hash.ts';
-import type { Space, SweepProblem, View } from './problem.ts';
+import { resultInThree } from './front-in-three.ts';
+import { viewOf, type Space, type SweepProblem, type View } from './problem.ts';
 import { EDGE_AXES, type EdgeAxis, type EdgeShare, type FrontPoint, type ViewResult } from './result.ts';
 import { expandSpace } from './space.ts';
 import { signOf } from './tally.ts';
@@ -22,7 +23,7 @@ export function finishResult(problem: SweepProblem, view: View, chunk: ChunkResu
     ties: point.ties,
   }));
   const withoutHash: Omit<ViewResult, 'hash'> = {
-    view,
+    view: viewOf(view),
     sectionCount: space.size,
     evaluated: chunk.evaluated,
     feasible: chunk.feasible,
@@ -37,6 +38,8 @@ export function finishResult(problem: SweepProblem, view: View, chunk: ChunkResu
           : { index: chunk.withoutIndex[i]!, x: x * chunk.withoutX[i]!, y: y * chunk.withoutY[i]! },
     })),
     front,
+    ...(chunk.frontInThree &&
+      view.z && { frontInThree: resultInThree(chunk.frontInThree, { x, y, z: signOf(view.z) }) }),
     band: chunk.band.slice(0, MAX_BAND_KEPT).map((p) => ({ index: p.index, x: x * p.x, y: y * p.y })),
     isBandCut: chunk.band.length > MAX_BAND_KEPT,
     best: MEASURE_IDS.flatMap((measure, i) =>

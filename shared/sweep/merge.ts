@@ -1,6 +1,7 @@
 import { bestOf } from './band.ts';
 import type { ChunkResult } from './chunk.ts';
 import { addDensities } from './density.ts';
+import { nonDominatedInThree } from './front-in-three.ts';
 import { FrontBuilder } from './front.ts';
 
 /**
@@ -30,6 +31,7 @@ export function mergeChunks(a: ChunkResult, b: ChunkResult): ChunkResult {
     bestValue: pick(a.bestValue, b.bestValue, best),
     bestIndex: pick(a.bestIndex, b.bestIndex, best),
     front: mergeFronts(a, b),
+    ...mergeInThree(a, b),
     band: bestOf([...a.band, ...b.band]),
     density: addDensities(a.density, b.density),
     widthFeasible: add(a.widthFeasible, b.widthFeasible),
@@ -72,4 +74,10 @@ function mergeFronts(a: ChunkResult, b: ChunkResult): ChunkResult['front'] {
     ties: builder.ties[i]!,
     tieCount: builder.tieCounts[i]!,
   }));
+}
+
+/** Nothing without a third measure; the empty chunk has none either way. */
+function mergeInThree(a: ChunkResult, b: ChunkResult): Pick<ChunkResult, 'frontInThree'> {
+  const lists = [a.frontInThree, b.frontInThree].filter((list) => list !== undefined);
+  return lists.length === 0 ? {} : { frontInThree: nonDominatedInThree(lists) };
 }

@@ -74,11 +74,18 @@ export interface Space {
   readonly size: number;
 }
 
-/** What the chart and the front compare: x is the leading measure. */
+/** What the chart and the front compare: x is the leading measure. With z there is a front in three measures as well. */
 export interface View {
   readonly x: MeasureId;
   readonly y: MeasureId;
+  readonly z?: MeasureId | null | undefined;
 }
+
+/** The view alone, as results name it: without a third measure there is no z at all, also in what is hashed. */
+export const viewOf = ({ x, y, z }: View): View => (z === undefined || z === null ? { x, y } : { x, y, z });
+
+export const isSameView = (a: View, b: View): boolean =>
+  a.x === b.x && a.y === b.y && (a.z ?? null) === (b.z ?? null);
 
 /** Everything a run freezes: with it and an index, any section can be recomputed anywhere. */
 export interface SweepProblem {

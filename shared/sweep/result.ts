@@ -17,6 +17,19 @@ export interface FrontPoint extends Point {
   readonly ties: readonly number[];
 }
 
+/** A vertex of the front in three measures. */
+export interface FrontPointInThree extends FrontPoint {
+  readonly z: number;
+}
+
+/** Sections that no other equals or beats in all three measures at once. */
+export interface ResultInThree {
+  /** How many there are, exact ties as one; null where they were too many to be held. */
+  readonly count: number | null;
+  /** From best x, then best y; the first MOST_SHOWN_IN_THREE where there are more. */
+  readonly points: readonly FrontPointInThree[];
+}
+
 /** Feasible sections in one cell of the density grid; bounds are [x0, x1) × [y0, y1) in the measures' SI units. */
 export interface DensityCell {
   readonly x0: number;
@@ -67,6 +80,8 @@ export interface ViewResult {
   readonly failures: readonly CheckFailures[];
   /** Non-dominated sections ordered from best x. */
   readonly front: readonly FrontPoint[];
+  /** Of a view with a third measure only. */
+  readonly frontInThree?: ResultInThree | undefined;
   /** Feasible sections within 10 % of the best x, best first, at most MAX_BAND_KEPT. */
   readonly band: readonly Point[];
   readonly isBandCut: boolean;

@@ -3,6 +3,7 @@ import { DIRECTIONS, MEASURE_DIRECTION, MEASURE_IDS, type MeasureId } from '../e
 import { BandBuilder } from './band.ts';
 import type { ChunkResult } from './chunk.ts';
 import { DensityBuilder } from './density.ts';
+import { FrontInThreeBuilder } from './front-in-three.ts';
 import { FrontBuilder } from './front.ts';
 import type { Space, View } from './problem.ts';
 
@@ -34,12 +35,17 @@ export class Tally {
   private readonly bestValue = new Float64Array(MEASURE_COUNT).fill(NaN);
   private readonly bestIndex = new Float64Array(MEASURE_COUNT).fill(-1);
   private readonly front = new FrontBuilder();
+  private readonly zMeasure: number;
+  /** Null without a third measure. */
+  private readonly frontInThree: FrontInThreeBuilder | null;
   private readonly band = new BandBuilder();
   private readonly density = new DensityBuilder();
 
   constructor(space: Space, view: View) {
     this.xMeasure = MEASURE_IDS.indexOf(view.x);
     this.yMeasure = MEASURE_IDS.indexOf(view.y);
+    this.zMeasure = view.z ? MEASURE_IDS.indexOf(view.z) : 0;
+    this.frontInThree = view.z ? new FrontInThreeBuilder() : null;
     this.widthFeasible = new Float64Array(space.widthsMm.length);
     this.widthEvaluated = new Float64Array(space.widthsMm.length);
     this.depthFeasible = new Float64Array(space.depthsMm.length);
@@ -75,6 +81,8 @@ export class Tally {
     const orientedX = SIGNS[this.xMeasure]! * x;
     const orientedY = SIGNS[this.yMeasure]! * y;
     this.front.add(orientedX, orientedY, index);
+    if (this.frontInThree !== null)
+      this.frontInThree.add(orientedX, orientedY, SIGNS[this.zMeasure]! * measures[this.zMeasure]!, index);
     if (y === y) this.band.add(index, orientedX, orientedY);
     if (x >= 0 && y >= 0) this.density.add(x, y);
   }
@@ -128,6 +136,7 @@ export class Tally {
         ties: this.front.ties[i]!,
         tieCount: this.front.tieCounts[i]!,
       })),
+      ...(this.frontInThree && { frontInThree: this.frontInThree.finish() }),
       band: this.band.finish(),
       density: this.density.finish(),
       failedFirst,

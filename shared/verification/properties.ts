@@ -185,6 +185,21 @@ const sweeps = {
     runs: 1000,
     seed: 3,
   },
+  'naive-front-in-three': {
+    kind: 'comparison',
+    statement: 'The front in three measures equals the O(n²) definition on tie-heavy integer grids',
+    of: 'sets of points',
+    runs: 3000,
+    seed: 3,
+  },
+  'cut-front-in-three': {
+    kind: 'property',
+    statement:
+      'The front in three measures is the same however its points are cut, and in whatever order the parts are joined',
+    of: 'sets of points',
+    runs: 1000,
+    seed: 3,
+  },
   'merge-cuts': {
     kind: 'property',
     statement:

@@ -11,8 +11,8 @@ import { PROPERTIES } from '#shared/verification/properties.ts';
 import { randomProblem } from './random-problems.ts';
 
 const view = fc
-  .uniqueArray(fc.constantFrom(...MEASURE_IDS), { minLength: 2, maxLength: 2 })
-  .map(([x, y]): View => ({ x: x!, y: y! }));
+  .uniqueArray(fc.constantFrom(...MEASURE_IDS), { minLength: 2, maxLength: 3 })
+  .map(([x, y, z]): View => ({ x: x!, y: y!, z }));
 
 /** Cuts 0 … size at the given shares. */
 function cut(size: number, shares: readonly number[]): readonly (readonly [number, number])[] {
