@@ -1,4 +1,6 @@
 import type { ProcessKind } from '#shared/contract/operations.ts';
+import { startBoundsDesk } from './compute/bounds-desk.ts';
+import { startExportDesk } from './compute/export-desk.ts';
 import { startPasswords } from './compute/passwords.ts';
 import { startComputePool } from './compute/pool.ts';
 import { startSheetDesk } from './compute/sheet-desk.ts';
@@ -25,7 +27,11 @@ export interface Services {
 export async function startServices(config: Config): Promise<Services> {
   const { databaseUrl } = config;
   const log = createLog(config.logLevel);
-  const [passwords, sheetDesk] = await Promise.all([startPasswords(config.passwordCost), startSheetDesk()]);
+  const [passwords, sheetDesk, exportDesk] = await Promise.all([
+    startPasswords(config.passwordCost),
+    startSheetDesk(),
+    startExportDesk(),
+  ]);
   const pool = createPool(databaseUrl, log);
   const db = createDatabase(pool);
   const sessionStore = createSessionStore(pool, log);
@@ -36,13 +42,13 @@ export async function startServices(config: Config): Promise<Services> {
     ? await startWork('service', { config, db, log, runEvents, tally })
     : undefined;
   return {
-    deps: { config, log, pool, db, sessionStore, passwords, tally, sheetDesk, runEvents },
+    deps: { config, log, pool, db, sessionStore, passwords, tally, sheetDesk, exportDesk, runEvents },
     endStreams: () => runEvents.endStreams(),
     stop: async () => {
       sessionStore.close();
       await work?.stop();
       await runEvents.stop();
-      await Promise.all([passwords.close(), sheetDesk.close()]);
+      await Promise.all([passwords.close(), sheetDesk.close(), exportDesk.close()]);
       await pool.end();
     },
   };
@@ -82,16 +88,17 @@ async function startWork(
   { config, db, log, runEvents, tally }: WorkOptions,
 ): Promise<{ readonly stop: () => Promise<void> }> {
   const compute = await startComputePool(config.computeThreads);
+  const boundsDesk = await startBoundsDesk(config.computeThreads);
   const { threads } = compute;
   const { listener } = runEvents;
   const registry = new WorkerRegistry({ kind, threads, db, log, listener, tally });
-  const tasks = createTasks({ db, compute, runEvents, log, tally });
+  const tasks = createTasks({ db, compute, boundsDesk, runEvents, log, tally });
   const queue = new Queue({ databaseUrl: config.databaseUrl, db, log, registry, createTasks: tasks });
   await queue.start();
   return {
     stop: async () => {
       await queue.stop();
-      await compute.close();
+      await Promise.all([compute.close(), boundsDesk.close()]);
     },
   };
 }

@@ -1,4 +1,4 @@
-import { and, desc, eq, sql, type SQL } from 'drizzle-orm';
+import { and, desc, eq, isNull, sql, type SQL } from 'drizzle-orm';
 import type { RunSummary } from '#shared/contract/records.ts';
 import type { Database } from './client.ts';
 import { people } from './schema/people.ts';
@@ -16,6 +16,7 @@ export async function listRunSummaries(db: Database, condition: SQL): Promise<Ru
       sweepId: runs.sweepId,
       number: runs.number,
       state: runs.state,
+      method: runs.method,
       sectionCount: runs.sectionCount,
       engineVersion: runs.engineVersion,
       createdAt: runs.createdAt,
@@ -34,6 +35,7 @@ export async function listRunSummaries(db: Database, condition: SQL): Promise<Ru
         eq(runViews.runId, runs.id),
         eq(runViews.x, sql`${runs.definition} -> 'view' ->> 'x'`),
         eq(runViews.y, sql`${runs.definition} -> 'view' ->> 'y'`),
+        isNull(runViews.z),
       ),
     )
     .where(condition)
@@ -41,7 +43,7 @@ export async function listRunSummaries(db: Database, condition: SQL): Promise<Ru
   return rows.map(({ createdAt, evaluated, feasible, frontCount, ...row }) => ({
     ...row,
     evaluated: evaluated ?? 0,
-    feasible: feasible ?? 0,
+    feasible: row.method === 'bounds' ? null : (feasible ?? 0),
     frontCount: frontCount ?? 0,
     createdAt: createdAt.toISOString(),
   }));

@@ -1,6 +1,7 @@
 import { and, eq, inArray, sql, type SQL } from 'drizzle-orm';
 import type { PgUpdateSetSource } from 'drizzle-orm/pg-core';
 import type { RunState } from '#shared/contract/records.ts';
+import { isSameView, type View } from '#shared/sweep/problem.ts';
 import type { Database } from '../db/client.ts';
 import { runViews } from '../db/schema/run-views.ts';
 import { runs } from '../db/schema/runs.ts';
@@ -21,6 +22,7 @@ export type ViewChange = Pick<
   | 'evaluated'
   | 'merged'
   | 'feasible'
+  | 'search'
   | 'elapsedMs'
   | 'countedAt'
   | 'result'
@@ -37,6 +39,7 @@ const CHANGED_COLUMNS = {
   id: runViews.id,
   x: runViews.x,
   y: runViews.y,
+  z: runViews.z,
   state: runViews.state,
   merged: runViews.merged,
   cancelRequestedAt: runViews.cancelRequestedAt,
@@ -70,7 +73,7 @@ export async function changeView(
       .update(runs)
       .set({ eventSequence: sql`${runs.eventSequence} + 1` })
       .where(eq(runs.id, target.runId))
-      .returning({ sequence: runs.eventSequence, view: sql<{ x: string; y: string }>`definition->'view'` });
+      .returning({ sequence: runs.eventSequence, view: sql<View>`definition->'view'` });
     if (run === undefined) return undefined;
     const [view] = await tx
       .update(runViews)
@@ -82,7 +85,7 @@ export async function changeView(
       .where(and(eq(runViews.id, target.viewId), inArray(runViews.state, [...target.from]), target.when))
       .returning(CHANGED_COLUMNS);
     if (view === undefined) return undefined;
-    const isOwnView = run.view.x === view.x && run.view.y === view.y;
+    const isOwnView = isSameView(run.view, view);
     if (isOwnView && change.state !== undefined) await setRunState(tx, target.runId, change.state);
     await notifyViewChanged(tx, { runId: target.runId, viewId: view.id, sequence: run.sequence });
     return view;

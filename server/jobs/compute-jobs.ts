@@ -2,6 +2,7 @@ import { sql, type SQL } from 'drizzle-orm';
 import { z } from 'zod';
 import { idSchema } from '#shared/contract/numbers.ts';
 import { ENGINE_VERSION } from '#shared/engine/version.ts';
+import type { RunMethod } from '#shared/sweep/run-method.ts';
 import type { Database } from '../db/client.ts';
 import { viewShards } from '../db/schema/view-shards.ts';
 import { planShards, type SectionRange } from './plan-shards.ts';
@@ -15,6 +16,8 @@ const taskName = (name: string) => `${name} ${ENGINE_VERSION}`;
 export const SMALL_RUN_TASK = taskName('small-run');
 /** One of several shards. */
 export const SHARD_TASK = taskName('shard');
+/** A whole space searched by bounds, which is never cut. */
+export const BOUNDS_TASK = taskName('bounds');
 export const MERGE_TASK = taskName('merge');
 
 export const shardPayloadSchema = z.object({ viewId: idSchema, from: z.number().int().min(0) });
@@ -30,9 +33,13 @@ export const shardKeyOf = (viewId: SQL | string, from: SQL | number): SQL =>
   sql`'shard:' || ${viewId}::text || ':' || ${from}::text`;
 export const mergeKeyOf = (viewId: SQL | string): SQL => sql`'merge:' || ${viewId}::text`;
 
-/** Cuts a new view's sections into shards, within the caller's transaction. */
-export async function insertShards(tx: Database, viewId: string, range: SectionRange): Promise<void> {
-  const shards = planShards(range);
+/** Cuts a new view's sections into shards, within the caller's transaction; a search by bounds is one piece of work. */
+export async function insertShards(
+  tx: Database,
+  viewId: string,
+  { method, ...range }: SectionRange & { readonly method: RunMethod },
+): Promise<void> {
+  const shards = method === 'bounds' ? [range] : planShards(range);
   await tx
     .insert(viewShards)
     .values(shards.map(({ from, to }) => ({ viewId, fromIndex: from, toIndex: to })));
@@ -51,7 +58,8 @@ export async function enqueueShards(tx: Database, viewId: string, from?: number)
       from view_shards where view_id = ${viewId}
     )
     select graphile_worker.add_jobs(array_agg(row(
-      case when shards = 1 then ${SMALL_RUN_TASK} else ${SHARD_TASK} end,
+      case when (select method from runs join run_views on run_views.run_id = runs.id where run_views.id = ${viewId}) = 'bounds'
+        then ${BOUNDS_TASK} when shards = 1 then ${SMALL_RUN_TASK} else ${SHARD_TASK} end,
       json_build_object('viewId', ${viewId}::text, 'from', from_index),
       null,
       null,

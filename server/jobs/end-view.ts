@@ -1,5 +1,6 @@
 import { and, eq, isNotNull, sql } from 'drizzle-orm';
 import type { RunState } from '#shared/contract/records.ts';
+import type { RunMethod } from '#shared/sweep/run-method.ts';
 import type { Database } from '../db/client.ts';
 import { runViews } from '../db/schema/run-views.ts';
 import { viewShards } from '../db/schema/view-shards.ts';
@@ -14,13 +15,17 @@ interface ViewOfRun {
   readonly runId: string;
   readonly viewId: string;
   readonly sectionCount: number;
+  readonly method: RunMethod;
 }
 
 /**
  * Takes what waits out of the queue and tells who works on it to stop. What is done is kept; the view is cancelled once
  * nobody works on it, at once where nobody does.
  */
-export async function cancelView(tx: Database, { runId, viewId, sectionCount }: ViewOfRun): Promise<void> {
+export async function cancelView(
+  tx: Database,
+  { runId, viewId, sectionCount, method }: ViewOfRun,
+): Promise<void> {
   const target = { runId, viewId, from: UNFINISHED };
   const asked = await changeView(tx, target, { cancelRequestedAt: new Date() });
   if (asked === undefined) return;
@@ -38,7 +43,7 @@ export async function cancelView(tx: Database, { runId, viewId, sectionCount }: 
     state: 'cancelled',
     evaluated: sql`${runViews.merged}`,
     finishedAt: new Date(),
-    message: describePart(asked.merged, sectionCount),
+    message: describePart(asked.merged, { sectionCount, method }),
   });
 }
 
@@ -67,7 +72,10 @@ export async function failView(
 }
 
 /** Takes a cancelled or failed view up again, from the shards it has. Answers whether it was one. */
-export async function resumeView(tx: Database, { runId, viewId, sectionCount }: ViewOfRun): Promise<boolean> {
+export async function resumeView(
+  tx: Database,
+  { runId, viewId, sectionCount, method }: ViewOfRun,
+): Promise<boolean> {
   const resumed = await changeView(
     tx,
     { runId, viewId, from: ['cancelled', 'failed'] },
@@ -75,7 +83,7 @@ export async function resumeView(tx: Database, { runId, viewId, sectionCount }: 
   );
   if (resumed === undefined) return false;
   if ((await tx.$count(viewShards, eq(viewShards.viewId, viewId))) === 0)
-    await insertShards(tx, viewId, { from: 0, to: sectionCount });
+    await insertShards(tx, viewId, { from: 0, to: sectionCount, method });
   await enqueueShards(tx, viewId);
   if ((await countDone(tx, viewId)) === sectionCount) await enqueueMerge(tx, viewId);
   return true;

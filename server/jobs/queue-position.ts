@@ -1,7 +1,7 @@
 import { sql } from 'drizzle-orm';
 import type { QueuePosition } from '#shared/contract/records.ts';
 import type { Database } from '../db/client.ts';
-import { SHARD_TASK, SMALL_RUN_TASK } from './compute-jobs.ts';
+import { BOUNDS_TASK, SHARD_TASK, SMALL_RUN_TASK } from './compute-jobs.ts';
 
 /** Where the views of a run stand of which nothing is in work yet. */
 export async function listQueuePositions(db: Database, runId: string): Promise<QueuePosition[]> {
@@ -9,7 +9,7 @@ export async function listQueuePositions(db: Database, runId: string): Promise<Q
     with waiting as (
       select split_part(key, ':', 2) as view_id, task_identifier, priority, run_at, id
       from graphile_worker.jobs
-      where task_identifier in (${SMALL_RUN_TASK}, ${SHARD_TASK}) and locked_at is null
+      where task_identifier in (${SMALL_RUN_TASK}, ${SHARD_TASK}, ${BOUNDS_TASK}) and locked_at is null
     ), first as (
       select distinct on (view_id) * from waiting order by view_id, priority, run_at, id
     )

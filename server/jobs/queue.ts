@@ -7,9 +7,9 @@ import type { WorkerRegistry } from './worker-registry.ts';
 
 /**
  * Places for small runs and merges, and for shards of large runs. Two shards, so that the threads have one while the other
- * is handed over; a small run never finds all places taken by a large one.
+ * is handed over; a small run never finds all places taken by a large one. A search by bounds takes all threads of its own.
  */
-const CONCURRENCY = { quick: 6, bulk: 2 } as const;
+const CONCURRENCY = { quick: 6, bulk: 2, bounds: 1 } as const;
 /** With the heartbeat's limit, the time within which another worker has what a dead one held. */
 const RECOVERY_INTERVAL_MS = 1500;
 
@@ -33,7 +33,7 @@ export class Queue {
     this.#options = options;
     const { databaseUrl, log, registry, createTasks } = options;
     const tasks = createTasks(this.#stopping.signal);
-    this.#lanes = (['quick', 'bulk'] as const).map(
+    this.#lanes = (['quick', 'bulk', 'bounds'] as const).map(
       (name) =>
         new QueueLane({
           databaseUrl,

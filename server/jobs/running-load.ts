@@ -4,10 +4,10 @@ import type { RunningLimits } from '../config.ts';
 import type { Database } from '../db/client.ts';
 import { runViews } from '../db/schema/run-views.ts';
 import { runs } from '../db/schema/runs.ts';
+import { COUNTED_LEFT } from './counted-sections.ts';
 
 /** Whose a view's sections are: whoever opened it, or started the run. */
 const OWNER = sql`coalesce(${runViews.openedBy}, ${runs.startedBy})`;
-const LEFT = sql`${runs.sectionCount} - ${runViews.evaluated}`;
 
 /** Sections under way, of one person and of everybody, and how many may be. */
 export async function readRunningLoad(
@@ -15,7 +15,7 @@ export async function readRunningLoad(
   personId: string,
   limits: RunningLimits,
 ): Promise<RunningLoad> {
-  const sumOf = (what: SQL) => sql<string>`coalesce(sum(${LEFT}) filter (where ${what}), 0)`;
+  const sumOf = (what: SQL) => sql<string>`coalesce(sum(${COUNTED_LEFT}) filter (where ${what}), 0)`;
   const [row] = await db
     .select({ own: sumOf(sql`${OWNER} = ${personId}`), office: sumOf(sql`true`) })
     .from(runViews)

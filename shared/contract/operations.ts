@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { RUN_METHODS } from '../sweep/run-method.ts';
 import { idSchema } from './numbers.ts';
 
 /** Who takes jobs: the service with its built-in worker, or a worker by itself. */
@@ -36,7 +37,7 @@ export const workerProcessSchema = z.object({
 export type WorkerProcess = z.infer<typeof workerProcessSchema>;
 
 /** What waits in the queue, by kind of job. */
-export const QUEUE_KINDS = ['small-run', 'shard', 'merge'] as const;
+export const QUEUE_KINDS = ['small-run', 'shard', 'bounds', 'merge'] as const;
 export const queueKindSchema = z.object({
   kind: z.enum(QUEUE_KINDS),
   waiting: z.number(),
@@ -75,8 +76,11 @@ export const viewUnderWaySchema = z.object({
   startedBy: z.string(),
   state: z.enum(['queued', 'running']),
   isCancelling: z.boolean(),
+  method: z.enum(RUN_METHODS),
   sectionCount: z.number(),
   evaluated: z.number(),
+  /** Ruled out unseen, by bounds; else 0. */
+  provenUnnecessary: z.number(),
   elapsedMs: z.number(),
   shards: z.number(),
   shardsDone: z.number(),

@@ -2,6 +2,7 @@ import { z } from 'zod';
 import type { Evaluation } from '../engine/evaluation.ts';
 import type { Studies } from '../engine/studies.ts';
 import type { ViewResult } from '../sweep/result.ts';
+import { RUN_METHODS } from '../sweep/run-method.ts';
 import {
   designBasisSchema,
   fullBasisSchema,
@@ -18,7 +19,7 @@ import {
   spanMmSchema,
 } from './numbers.ts';
 import { demandSchema, sectionInputSchema, userRulesSchema } from './section-input.ts';
-import { sweepDefinitionSchema, viewSchema } from './sweep-definition.ts';
+import { openedViewSchema, sweepDefinitionSchema } from './sweep-definition.ts';
 
 /** The engine's and the sweep's own outputs are trusted on the way out; the schema names them without re-checking. */
 const evaluationSchema = z.custom<Evaluation>((v) => typeof v === 'object' && v !== null);
@@ -97,16 +98,29 @@ export type Beam = z.infer<typeof beamSchema>;
 export const RUN_STATES = ['queued', 'running', 'finished', 'cancelled', 'failed'] as const;
 export type RunState = (typeof RUN_STATES)[number];
 
+/** How far a search by bounds is. */
+const searchProgressSchema = z.object({
+  /** Boxes still to be looked into, and done with: split, evaluated or ruled out. */
+  boxesOpen: z.number(),
+  boxesClosed: z.number(),
+  /** Sections in boxes that were ruled out. */
+  provenUnnecessary: z.number(),
+});
+export type SearchProgress = z.infer<typeof searchProgressSchema>;
+
 /** Live state of one view of a run; what the event stream sends. */
 export const viewProgressSchema = z.object({
   viewId: idSchema,
   /** Increases with every change of one of the run's views: of two states of a view, the one with more is the later. */
   sequence: z.number(),
-  view: viewSchema,
+  view: openedViewSchema,
   state: z.enum(RUN_STATES),
   evaluated: z.number(),
-  feasible: z.number(),
+  /** Null by bounds: it is not counted. */
+  feasible: z.number().nullable(),
   sectionCount: z.number(),
+  /** Null where every section is evaluated, and before a search by bounds has begun. */
+  search: searchProgressSchema.nullable(),
   elapsedMs: z.number(),
   /** The final result, or the part that is done. Null until the first chunk. */
   result: viewResultSchema.nullable(),
@@ -126,9 +140,11 @@ export const runSummarySchema = z.object({
   sweepId: idSchema,
   number: z.number(),
   state: z.enum(RUN_STATES),
+  method: z.enum(RUN_METHODS),
   sectionCount: z.number(),
   evaluated: z.number(),
-  feasible: z.number(),
+  /** Null by bounds: it is not counted. */
+  feasible: z.number().nullable(),
   frontCount: z.number(),
   hash: z.string().nullable(),
   engineVersion: z.string(),

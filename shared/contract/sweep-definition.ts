@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { MEASURE_IDS } from '../engine/measures.ts';
 import type { AxisDefinition, SpaceDefinition, SteelSetsDefinition, View } from '../sweep/problem.ts';
+import { RUN_METHODS } from '../sweep/run-method.ts';
 import {
   bounded,
   coverMmSchema,
@@ -151,11 +152,26 @@ export const viewSchema = z
     message: 'Choose two different measures',
   }) satisfies z.ZodType<View>;
 
+/** What a run is looked at through: a pair as above, and a third measure where a front in three is asked for. */
+export const openedViewSchema = z
+  .object({
+    x: z.enum(MEASURE_IDS),
+    y: z.enum(MEASURE_IDS),
+    z: z.enum(MEASURE_IDS).nullable().optional(),
+  })
+  .superRefine(({ x, y, z: third }, ctx) => {
+    if (x === y) ctx.addIssue({ code: 'custom', path: ['y'], message: 'Choose two different measures' });
+    if (third === x || third === y)
+      ctx.addIssue({ code: 'custom', path: ['z'], message: 'Choose a third measure beside the other two' });
+  }) satisfies z.ZodType<View>;
+
 /** What a saved sweep holds; the basis and rates join it when a run is frozen. */
 export const sweepDefinitionSchema = z.object({
   space: spaceSchema,
   demand: demandSchema,
   rules: userRulesSchema,
   view: viewSchema,
+  /** How it is run; left out, by bounds only where it is too large to evaluate every section. */
+  method: z.enum(RUN_METHODS).optional(),
 });
 export type SweepDefinition = z.infer<typeof sweepDefinitionSchema>;

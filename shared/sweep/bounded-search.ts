@@ -1,12 +1,15 @@
 import { barCoverMm } from '../engine/checks-detailing.ts';
 import { isSameLength, isWithinLength } from '../engine/limits.ts';
 import { BoxHeap } from './box-heap.ts';
+import type { ChunkResult } from './chunk.ts';
 import type { FaceEntry } from './face-table.ts';
+import { FrontBuilder } from './front.ts';
 import { placementAt, prepareSweep, type Placement, type PreparedSweep } from './prepared-sweep.ts';
 import type { SweepProblem, View } from './problem.ts';
 import type { FrontPoint } from './result.ts';
 import { BoxBounds, depthRange, type SearchBox } from './search-box.ts';
 import { setTree } from './set-tree.ts';
+import { splitBox } from './split-box.ts';
 import { openSweep, type SweepSteps } from './sweep-range.ts';
 import { signOf } from './tally.ts';
 
@@ -22,10 +25,26 @@ export interface BoundedFront {
   readonly front: readonly FrontPoint[];
 }
 
+/** How far a search is. Of the sections it has, those neither evaluated nor ruled out lie in open boxes. */
+export interface SearchState {
+  readonly evaluated: number;
+  readonly provenUnnecessary: number;
+  readonly boxesOpen: number;
+  readonly boxesClosed: number;
+}
+
+/** One of several searches that share a space between them: it takes every `of`-th placement from `part` on. */
+export interface SearchShare {
+  readonly part: number;
+  readonly of: number;
+}
+
 /** Placements searched together, so that what one holds spares the others; their tables of bars take some 0.3 MB each. */
 const PLACEMENTS_AT_ONCE = 256;
 /** Sections in a box from which it is evaluated rather than split: a bound costs about what four sections do. */
 const LEAF_SECTIONS = 8;
+/** Open boxes from which the search goes down before it goes on, some 150 MB of them: exact in any order. */
+const MOST_OPEN_BOXES = 1_000_000;
 
 /**
  * Branch and bound over a design space (Land and Doig, 1960; for fronts the order of Papadias and others, 2003; memory).
@@ -33,59 +52,68 @@ const LEAF_SECTIONS = 8;
  * measures, is dropped whole; the box with the best leading measure is split next, down to rows which the hot loop
  * evaluates.
  */
-class BoundedSearch {
+export class BoundedSearch {
   private readonly prepared: PreparedSweep;
   private readonly steps: SweepSteps;
-  private readonly view: View;
+  private readonly share: SearchShare;
+  /** What sections found elsewhere measure, so that they beat boxes here: by another part, or by an earlier search. */
+  private readonly elsewhere = new FrontBuilder();
   private boxes = 0;
   private evaluated = 0;
-  private nextPlacement = 0;
+  /** Placements begun, of those of this share. */
+  private begun = 0;
   private openUpTo = PLACEMENTS_AT_ONCE;
   private readonly placementCount: number;
+  private readonly perPlacement: number;
   private readonly heap = new BoxHeap();
+  private sectionsOpen = 0;
 
   /** @throws InvalidSectionError as `prepareSweep` does. */
-  constructor(problem: SweepProblem, view: View) {
+  constructor(problem: SweepProblem, view: View, share: SearchShare = { part: 0, of: 1 }) {
     this.prepared = prepareSweep(problem, view);
     this.steps = openSweep(this.prepared);
-    this.view = view;
-    const { widthsMm, coversMm, stirrups, fyMPa } = this.prepared.space;
-    this.placementCount = widthsMm.length * coversMm.length * stirrups.length * fyMPa.length;
+    this.share = share;
+    const { widthsMm, coversMm, stirrups, fyMPa, size } = this.prepared.space;
+    const placements = widthsMm.length * coversMm.length * stirrups.length * fyMPa.length;
+    this.placementCount = Math.max(0, Math.ceil((placements - share.part) / share.of));
+    this.perPlacement = size / placements;
   }
 
   /** Looks at so many boxes at most; true when nothing is left. */
   advance(boxes: number): boolean {
     for (let i = 0; i < boxes; i++) {
-      if (this.nextPlacement < Math.min(this.placementCount, this.openUpTo)) {
-        this.openPlacement(this.nextPlacement++);
+      if (this.begun < Math.min(this.placementCount, this.openUpTo)) {
+        this.openPlacement(this.share.part + this.begun++ * this.share.of);
         continue;
       }
-      const box = this.heap.pop();
+      const box = this.heap.size > MOST_OPEN_BOXES ? this.heap.popLast() : this.heap.pop();
       if (box) this.look(box);
-      else if (this.nextPlacement < this.placementCount) this.openUpTo += PLACEMENTS_AT_ONCE;
+      else if (this.begun < this.placementCount) this.openUpTo += PLACEMENTS_AT_ONCE;
       else return true;
     }
     return false;
   }
 
-  get progress() {
-    const { boxes, evaluated, nextPlacement, placementCount } = this;
-    return { boxes, evaluated, placements: nextPlacement, placementCount };
+  /** A section of the space, looked at elsewhere, that meets every check; oriented as `signOf` has it. */
+  noteElsewhere(x: number, y: number): void {
+    this.elsewhere.add(x, y, 0);
   }
 
-  finish(): BoundedFront {
-    const { view, boxes, evaluated } = this;
-    const sectionCount = this.prepared.space.size;
-    const x = signOf(view.x);
-    const y = signOf(view.y);
-    const front = this.steps.finish().front.map((point) => ({
-      index: point.ties[0]!,
-      x: x * point.x,
-      y: y * point.y,
-      tieCount: point.tieCount,
-      ties: point.ties,
-    }));
-    return { view, sectionCount, evaluated, provenUnnecessary: sectionCount - evaluated, boxes, front };
+  get state(): SearchState {
+    const { boxes, evaluated, heap } = this;
+    const unbegun = this.placementCount - this.begun;
+    const sections = this.placementCount * this.perPlacement;
+    return {
+      evaluated,
+      provenUnnecessary: sections - evaluated - this.sectionsOpen - unbegun * this.perPlacement,
+      boxesOpen: heap.size + unbegun,
+      boxesClosed: boxes - heap.size,
+    };
+  }
+
+  /** What it has found so far, oriented: less is better in both. */
+  get found(): ChunkResult['front'] {
+    return this.steps.finish().front;
   }
 
   private openPlacement(number: number): void {
@@ -112,14 +140,21 @@ class BoundedSearch {
   /** Keeps a box that may hold something. */
   private offer(box: SearchBox): void {
     this.boxes++;
-    if (box.of.bounds.bound(box) && !this.steps.isBeaten(box.x, box.y)) this.heap.push(box);
+    if (!box.of.bounds.bound(box) || this.isBeaten(box)) return;
+    this.heap.push(box);
+    this.sectionsOpen += sectionsOf(box);
+  }
+
+  private isBeaten({ x, y }: SearchBox): boolean {
+    return this.steps.isBeaten(x, y) || this.elsewhere.isBeaten(x, y);
   }
 
   private look(box: SearchBox): void {
-    if (this.steps.isBeaten(box.x, box.y)) return;
+    this.sectionsOpen -= sectionsOf(box);
+    if (this.isBeaten(box)) return;
     const sets = box.tension.sets.length * box.compression.sets.length * (box.fcTo - box.fcFrom);
     if (sets === 1 || sets * (box.depthTo - box.depthFrom) <= LEAF_SECTIONS) this.evaluate(box);
-    else for (const part of split(box, this.prepared)) this.offer(part);
+    else for (const part of splitBox(box, this.prepared)) this.offer(part);
   }
 
   private evaluate(box: SearchBox): void {
@@ -138,11 +173,30 @@ class BoundedSearch {
   }
 }
 
+const sectionsOf = ({ tension, compression, fcFrom, fcTo, depthFrom, depthTo }: SearchBox): number =>
+  tension.sets.length * compression.sets.length * (fcTo - fcFrom) * (depthTo - depthFrom);
+
+/** What is found, in the measures' own signs. */
+export function frontOf(found: ChunkResult['front'], view: View): FrontPoint[] {
+  const x = signOf(view.x);
+  const y = signOf(view.y);
+  return found.map((point) => ({
+    index: point.ties[0]!,
+    x: x * point.x,
+    y: y * point.y,
+    tieCount: point.tieCount,
+    ties: point.ties,
+  }));
+}
+
 /** The whole search at once. */
 export function boundedFront(problem: SweepProblem, view: View): BoundedFront {
   const search = new BoundedSearch(problem, view);
   while (!search.advance(1 << 16));
-  return search.finish();
+  const { evaluated, provenUnnecessary, boxesClosed } = search.state;
+  const sectionCount = evaluated + provenUnnecessary;
+  const front = frontOf(search.found, view);
+  return { view, sectionCount, evaluated, provenUnnecessary, boxes: boxesClosed, front };
 }
 
 /** Sets that fail a check by themselves, in the hot loop's own comparisons, are not worth a box. */
@@ -167,42 +221,3 @@ function isTensionAllowed(
   const coverMm = barCoverMm(placement.coverMm, placement.stirrupBar);
   return isWithinLength(entry.largestSpacingMm, prepared.ruleSet.crackSpacingMm(fyMPa, coverMm));
 }
-
-/** Two parts of a box, cut across the axis whose ends lie furthest apart for their size. */
-function split(box: SearchBox, { space, concretes }: PreparedSweep): SearchBox[] {
-  const { tension, compression, fcFrom, fcTo, depthFrom, depthTo } = box;
-  const leastH = space.depthsMm[depthFrom]!;
-  const mostH = space.depthsMm[depthTo - 1]!;
-  const ofAll = tension.mostAreaMm2 + compression.mostAreaMm2;
-  const spreads = [
-    tension.left ? (tension.mostAreaMm2 - tension.leastAreaMm2) / ofAll + TINY : 0,
-    compression.left ? (compression.mostAreaMm2 - compression.leastAreaMm2) / ofAll + TINY : 0,
-    fcTo - fcFrom > 1 ? FC_WEIGHT * (1 - concretes[fcFrom]!.fcMPa / concretes[fcTo - 1]!.fcMPa) + TINY : 0,
-    depthTo - depthFrom > 1 ? 1 - leastH / mostH + TINY : 0,
-  ];
-  switch (spreads.indexOf(Math.max(...spreads))) {
-    case 0:
-      return [tension.left!, tension.right!].map((part) => ({ ...box, tension: part }));
-    case 1:
-      return [compression.left!, compression.right!].map((part) => ({ ...box, compression: part }));
-    case 2: {
-      const half = (fcFrom + fcTo) >>> 1;
-      return [
-        { ...box, fcTo: half },
-        { ...box, fcFrom: half },
-      ];
-    }
-    default: {
-      const half = (depthFrom + depthTo) >>> 1;
-      return [
-        { ...box, depthTo: half },
-        { ...box, depthFrom: half },
-      ];
-    }
-  }
-}
-
-/** Strength moves bounds less than steel and depth do. */
-const FC_WEIGHT = 0.3;
-/** An axis that can be cut is preferred to one that cannot, equal ends or not. */
-const TINY = 1e-12;

@@ -40,4 +40,9 @@ export class BoxHeap {
     boxes[at] = last;
     return first;
   }
+
+  /** Any box but, as a rule, one of the better ones: where they are too many to keep. */
+  popLast(): SearchBox | undefined {
+    return this.boxes.pop();
+  }
 }

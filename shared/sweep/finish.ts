@@ -73,7 +73,7 @@ function isAllAt(point: FrontPoint, placeOf: (index: number) => number, edge: nu
 }
 
 /** Share of the front's vertices at each end of an axis with more than one value; ends with none are left out. */
-function edgeShares(space: Space, front: readonly FrontPoint[]): EdgeShare[] {
+export function edgeShares(space: Space, front: readonly FrontPoint[]): EdgeShare[] {
   if (front.length === 0) return [];
   const lengths = { depth: space.depthsMm.length, fc: space.fcMPa.length, width: space.widthsMm.length };
   const perWidth = space.size / lengths.width;

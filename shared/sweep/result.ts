@@ -52,6 +52,8 @@ export interface CheckFailures {
   readonly failed: number;
   /** Sections failing nothing else; for bar fit, sections of which nothing that needs placed bars could be asked. */
   readonly failedOnlyThis: number;
+  /** Sections that pass every check before it and fail it. Undefined in results from before it was counted. */
+  readonly failedFirst?: number | undefined;
   /** Best section in the leading measure among those failing only this; null where there is none or, as for bar fit, it
    * has no numbers. */
   readonly bestWithout: Point | null;
@@ -65,18 +67,37 @@ export type EdgeAxis = (typeof EDGE_AXES)[number];
 export interface EdgeShare {
   readonly axis: EdgeAxis;
   readonly end: 'low' | 'high';
-  /** Sections that pass every check before it and fail it. Undefined in results from before it was counted. */
-  readonly failedFirst?: number | undefined;
   readonly share: number;
 }
 
-/** The finished (or partial) result of a run seen through one view. Plain JSON. */
+/** What a search by bounds says of the sections it never evaluated. */
+export interface BoundsProof {
+  /** Sections of boxes that fail a check whole, or are beaten whole: none of them can be on the front. */
+  readonly provenUnnecessary: number;
+  /** Boxes whose bounds were looked at. */
+  readonly boxes: number;
+  /** False for the front of a search that was stopped: it may yet be beaten. */
+  readonly isProven: boolean;
+}
+
+export interface AxisCounts {
+  readonly width: readonly AxisCount[];
+  readonly depth: readonly AxisCount[];
+  readonly fc: readonly AxisCount[];
+}
+
+/**
+ * The finished (or partial) result of a run seen through one view. Plain JSON. A search by bounds (`bounds` is there)
+ * leaves most sections unseen: what would have to be counted over all of them is null, or a list left empty.
+ */
 export interface ViewResult {
   readonly view: View;
   readonly sectionCount: number;
   readonly evaluated: number;
-  readonly feasible: number;
-  readonly cannotFit: number;
+  /** Null by bounds. */
+  readonly feasible: number | null;
+  readonly cannotFit: number | null;
+  /** Empty by bounds, as are the cloud, and the best of measures other than the two of the view. */
   readonly failures: readonly CheckFailures[];
   /** Non-dominated sections ordered from best x. */
   readonly front: readonly FrontPoint[];
@@ -88,12 +109,11 @@ export interface ViewResult {
   /** Best feasible section of each measure, in its own direction. */
   readonly best: readonly { readonly measure: MeasureId; readonly index: number; readonly value: number }[];
   readonly density: readonly DensityCell[];
-  readonly axisCounts: {
-    readonly width: readonly AxisCount[];
-    readonly depth: readonly AxisCount[];
-    readonly fc: readonly AxisCount[];
-  };
+  /** Null by bounds. */
+  readonly axisCounts: AxisCounts | null;
   readonly edges: readonly EdgeShare[];
+  /** How the front was proven; undefined where every section was evaluated. */
+  readonly bounds?: BoundsProof | undefined;
   /** 16 hex digits in groups of four; equal for equal results whatever the threads and chunks. */
   readonly hash: string;
 }

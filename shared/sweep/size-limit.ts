@@ -1,12 +1,8 @@
 import { isCurveMeasure } from '../engine/curve-basis.ts';
 import type { DesignBasis } from '../engine/section.ts';
 import type { AxisDefinition, SpaceDefinition } from './problem.ts';
+import { methodOf, mostSections, type RunMethod } from './run-method.ts';
 import { axisLengths, spaceSize } from './space.ts';
-
-/** Largest run accepted: about a minute on two threads. Larger spaces are refused with the axis to coarsen. */
-export const MAX_SECTIONS_PER_RUN = 200_000_000;
-/** The same where μφ is read off the full curve, were every section to meet the other checks: a curve takes some 40 µs. */
-const MAX_SECTIONS_WITH_CURVES = 4_000_000;
 
 const NUMERIC_AXES = ['width', 'depth', 'fc', 'fy', 'cover'] as const;
 const AXIS_NAMES = {
@@ -26,7 +22,8 @@ export interface SizeRefusal {
   readonly issues: readonly { readonly path: (string | number)[]; readonly message: string }[];
 }
 
-const WITH_CURVES = ' where ductility is read off the full curve';
+const WITH_CURVES = ' where ductility is read off the full curve, which has no bounds to search by';
+const OF_EVERY_SECTION = ' with every section evaluated';
 
 const print = (count: number) => count.toLocaleString('en-US');
 
@@ -42,14 +39,22 @@ function fieldOf(space: SpaceDefinition, axis: NamedAxis): string {
   return definition.kind === 'range' ? 'step' : 'values';
 }
 
+function wayWords(
+  definition: { readonly space: SpaceDefinition; readonly method?: RunMethod | undefined },
+  basis: Pick<DesignBasis, 'ductilityMeasure'>,
+): string {
+  if (isCurveMeasure(basis)) return WITH_CURVES;
+  return methodOf(definition, basis) === 'bounds' ? '' : OF_EVERY_SECTION;
+}
+
 /** Why a space is too large to run on a basis and which of its axes to coarsen; null where it is not. */
 export function sizeRefusal(
-  { space }: { readonly space: SpaceDefinition },
+  definition: { readonly space: SpaceDefinition; readonly method?: RunMethod | undefined },
   basis: Pick<DesignBasis, 'ductilityMeasure'>,
 ): SizeRefusal | null {
+  const { space } = definition;
   const count = spaceSize(space);
-  const isCurve = isCurveMeasure(basis);
-  const most = isCurve ? MAX_SECTIONS_WITH_CURVES : MAX_SECTIONS_PER_RUN;
+  const most = mostSections(definition, basis);
   if (!(count > most)) return null;
   const lengths = axisLengths(space);
   const numeric = longest(NUMERIC_AXES, lengths);
@@ -58,7 +63,7 @@ export function sizeRefusal(
   const field = fieldOf(space, axis);
   const remedy = field === 'step' ? 'Use a larger step' : 'Leave some out';
   return {
-    message: `${print(count)} sections are more than the ${print(most)} that one run takes${isCurve ? WITH_CURVES : ''}`,
+    message: `${print(count)} sections are more than the ${print(most)} that one run takes${wayWords(definition, basis)}`,
     issues: [
       {
         path: ['space', axis, field],

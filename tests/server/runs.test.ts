@@ -1,12 +1,13 @@
 import { randomUUID } from 'node:crypto';
 import { eq, inArray } from 'drizzle-orm';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
-import { MAX_SECTIONS_PER_RUN } from '#shared/sweep/size-limit.ts';
+import { MAX_SECTIONS_PER_RUN } from '#shared/sweep/run-method.ts';
 import type { Run, ViewProgress } from '#shared/contract/records.ts';
 import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
 import { evaluateSection } from '#shared/engine/evaluate.ts';
 import { finishResult } from '#shared/sweep/finish.ts';
 import { prepareSweep } from '#shared/sweep/prepared-sweep.ts';
+import type { View } from '#shared/sweep/problem.ts';
 import { sweepRange } from '#shared/sweep/sweep-range.ts';
 import { runs } from '#server/db/schema/runs.ts';
 import { addProject, SMALL_SWEEP, type OfficeProject } from '../support/office-project.ts';
@@ -42,8 +43,8 @@ async function finish(run: Run): Promise<ViewProgress> {
 const runOf = async (id: string): Promise<Run> => (await engineer.get(`/runs/${id}`).expect(200)).body;
 
 /** The oracle: the whole range in one go on this thread. */
-function sweepAtOnce(run: Run) {
-  const { space, demand, rules, view } = run.definition;
+function sweepAtOnce(run: Run, view: View = run.definition.view) {
+  const { space, demand, rules } = run.definition;
   const problem = { space, demand, rules, basis: run.basis };
   return finishResult(problem, view, sweepRange(prepareSweep(problem, view), 0, run.sectionCount));
 }
@@ -89,7 +90,7 @@ describe('a run', () => {
     const { state, result, feasible } = await finish(run);
     expect({ state, feasible, front: result!.front }).toEqual({ state: 'finished', feasible: 0, front: [] });
     const strength = result!.failures.find(({ check }) => check === 'strength')!;
-    expect(strength.failed + result!.cannotFit).toBe(2880);
+    expect(strength.failed + result!.cannotFit!).toBe(2880);
   });
 
   test('in which every section meets the checks counts them all, Mu = 0 included', async () => {
@@ -119,10 +120,11 @@ describe('a run', () => {
 });
 
 describe('a run is refused', () => {
-  test('with the count and the axis to coarsen when it has five billion sections', async () => {
+  test('with the count and the axis to coarsen when each of five billion sections is to be evaluated', async () => {
     const { space } = SMALL_SWEEP;
     const sweepId = await project.addSweep({
       ...SMALL_SWEEP,
+      method: 'every-section',
       space: {
         ...space,
         width: { kind: 'range', from: 200, to: 1199, step: 1 },
@@ -190,24 +192,47 @@ describe('a run is refused', () => {
 });
 
 describe('views of a run', () => {
-  test('are computed once from the frozen inputs and found again', async () => {
+  test.for<View>([
+    { x: 'concreteM3PerM', y: 'curvatureDuctility' },
+    { x: 'concreteM3PerM', y: 'curvatureDuctility', z: 'designStrengthNmm' },
+  ])('are computed once from the frozen inputs and found again: %o', async (view) => {
     const run = await start(SMALL_SWEEP);
     await finish(run);
-    const view = { x: 'concreteM3PerM', y: 'curvatureDuctility' } as const;
     const opened = await engineer.post(`/runs/${run.id}/views`, view).expect(200);
     const stream = await followRun(office, engineer, { runId: run.id });
     const { progress } = await stream.until(
       (event) => hasEnded(event) && event.progress.viewId === opened.body.viewId,
     );
     stream.close();
-    const expected = sweepAtOnce({ ...run, definition: { ...run.definition, view } });
+    const expected = sweepAtOnce(run, view);
+    expect(progress.view).toEqual(view);
     expect(progress.result!.hash).toBe(expected.hash);
+    expect(progress.result!.frontInThree).toEqual(expected.frontInThree);
     const again = await engineer.post(`/runs/${run.id}/views`, view).expect(200);
     expect(again.body).toEqual(progress);
     expect((await engineer.get(`/runs/${run.id}/views/${progress.viewId}`).expect(200)).body).toEqual(
       progress,
     );
     expect((await runOf(run.id)).views).toHaveLength(2);
+  });
+
+  test('by a pair and by the same pair with a third measure are two, with one line and one cloud', async () => {
+    const run = await start(SMALL_SWEEP);
+    await finish(run);
+    const { x, y } = run.definition.view;
+    const opened = await engineer.post(`/runs/${run.id}/views`, { x, y, z: 'widthMm' }).expect(200);
+    const own = await engineer.post(`/runs/${run.id}/views`, { x, y, z: null }).expect(200);
+    expect(own.body.viewId).toBe(run.views[0]!.viewId);
+    expect(opened.body.viewId).not.toBe(own.body.viewId);
+    const stream = await followRun(office, engineer, { runId: run.id });
+    const { progress } = await stream.until(
+      (event) => hasEnded(event) && event.progress.viewId === opened.body.viewId,
+    );
+    stream.close();
+    const { front, density, frontInThree } = progress.result!;
+    expect({ front, density }).toEqual({ front: own.body.result.front, density: own.body.result.density });
+    expect(frontInThree!.count).toBeGreaterThan(front.length);
+    expect((await runOf(run.id)).state).toBe('finished');
   });
 
   test('opened by several at once are one', async () => {
@@ -225,10 +250,14 @@ describe('views of a run', () => {
     const path = `/runs/${answer.body.id}/views`;
     const same = await engineer.post(path, { x: 'depthMm', y: 'depthMm' }).expect(400);
     expect(same.body.error.issues[0].path).toEqual(['y']);
+    const third = await engineer.post(path, { x: 'depthMm', y: 'widthMm', z: 'widthMm' }).expect(400);
+    expect(third.body.error.issues[0].path).toEqual(['z']);
     const unknown = await engineer.post(path, { x: 'beauty', y: 'depthMm' }).expect(400);
     expect(unknown.body.error.issues[0].path).toEqual(['x']);
     const cost = await engineer.post(path, { x: 'depthMm', y: 'costPerM' }).expect(400);
     expect(cost.body.error.issues[0].path).toEqual(['y']);
+    const byCost = await engineer.post(path, { x: 'depthMm', y: 'widthMm', z: 'costPerM' }).expect(400);
+    expect(byCost.body.error.issues[0].path).toEqual(['z']);
   });
 });
 

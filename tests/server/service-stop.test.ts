@@ -24,7 +24,11 @@ it('stops in order without a complaint in the log', async () => {
     listener,
     tally: new WorkTally(),
   });
-  const createTasks = () => ({ quick: { quick: () => undefined }, bulk: { bulk: () => undefined } });
+  const createTasks = () => ({
+    quick: { quick: () => undefined },
+    bulk: { bulk: () => undefined },
+    bounds: { bounds: () => undefined },
+  });
   const queue = new Queue({ databaseUrl: database.url, db, log, registry, createTasks });
   await runEvents.start();
   await queue.start();

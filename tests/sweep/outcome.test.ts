@@ -52,7 +52,7 @@ describe('the result of a sweep', () => {
         expect(result.front).toEqual(nonDominated(feasible, { x: 1, y: -1 }));
         expect(sum(result.density)).toBe(feasible.length);
         for (const axis of ['width', 'depth', 'fc'] as const)
-          expect(result.axisCounts[axis].reduce((n, c) => n + c.feasible, 0)).toBe(feasible.length);
+          expect(result.axisCounts![axis].reduce((n, c) => n + c.feasible, 0)).toBe(feasible.length);
         for (const failure of result.failures) {
           const failing = all.filter((s) => s.failed.includes(failure.check));
           const only = failing.filter((s) => s.failed.length === 1);
@@ -85,7 +85,7 @@ describe('the result of a sweep', () => {
     fc.assert(
       fc.property(randomProblem, (problem) => {
         fc.pre(problem.space.tension.kind === 'bars');
-        expect(countCannotFit(problem)).toBe(run(problem).result.cannotFit);
+        expect(countCannotFit(problem)).toBe(run(problem).result.cannotFit!);
       }),
       { numRuns: PROPERTIES['cannot-fit'].runs, seed: PROPERTIES['cannot-fit'].seed },
     );
@@ -157,7 +157,7 @@ describe('degenerate sweeps', () => {
     const { result } = run(changed({ demand: { ...OFFICE_PROBLEM.demand, muNmm: 9e10 } }));
     expect(result.feasible).toBe(0);
     expect(result.failures.find((f) => f.check === 'strength')!.failed).toBe(
-      result.evaluated - result.cannotFit,
+      result.evaluated - result.cannotFit!,
     );
     expect(result.best).toEqual([]);
   });

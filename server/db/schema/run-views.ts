@@ -12,14 +12,14 @@ import {
   unique,
   uuid,
 } from 'drizzle-orm/pg-core';
-import { RUN_STATES } from '#shared/contract/records.ts';
+import { RUN_STATES, type SearchProgress } from '#shared/contract/records.ts';
 import { MEASURE_IDS } from '#shared/engine/measures.ts';
 import type { ViewResult } from '#shared/sweep/result.ts';
 import { oneOf } from './one-of.ts';
 import { people } from './people.ts';
 import { runs } from './runs.ts';
 
-/** A run seen through two measures: computed once from the run's frozen inputs, then kept. */
+/** A run seen through two measures, or three where z is given: computed once from the run's frozen inputs, then kept. */
 export const runViews = pgTable(
   'run_views',
   {
@@ -29,9 +29,13 @@ export const runViews = pgTable(
       .references(() => runs.id),
     x: text({ enum: MEASURE_IDS }).notNull(),
     y: text({ enum: MEASURE_IDS }).notNull(),
+    z: text({ enum: MEASURE_IDS }),
     state: text({ enum: RUN_STATES }).notNull().default('queued'),
     evaluated: bigint({ mode: 'number' }).notNull().default(0),
-    feasible: bigint({ mode: 'number' }).notNull().default(0),
+    /** Null by bounds, which do not count it. */
+    feasible: bigint({ mode: 'number' }).default(0),
+    /** How far a search by bounds is; null where every section is evaluated. */
+    search: jsonb().$type<SearchProgress>(),
     elapsedMs: doublePrecision('elapsed_ms').notNull().default(0),
     /** The final result, or the part that was done when it was cancelled. */
     result: jsonb().$type<ViewResult>(),
@@ -55,17 +59,18 @@ export const runViews = pgTable(
     finishedAt: timestamp('finished_at', { withTimezone: true }),
   },
   (t) => [
-    unique('run_views_measures_key').on(t.runId, t.x, t.y),
+    unique('run_views_measures_key').on(t.runId, t.x, t.y, t.z).nullsNotDistinct(),
     index('run_views_unfinished_idx')
       .on(t.state)
       .where(sql`${t.state} in ('queued', 'running')`),
     check('run_views_x_check', oneOf(t.x, MEASURE_IDS)),
     check('run_views_y_check', oneOf(t.y, MEASURE_IDS)),
-    check('run_views_two_measures_check', sql`${t.x} <> ${t.y}`),
+    check('run_views_z_check', oneOf(t.z, MEASURE_IDS)),
+    check('run_views_measures_differ_check', sql`${t.x} <> ${t.y} and ${t.z} <> ${t.x} and ${t.z} <> ${t.y}`),
     check('run_views_state_check', oneOf(t.state, RUN_STATES)),
     check(
       'run_views_counts_check',
-      sql`0 <= ${t.feasible} and ${t.feasible} <= ${t.merged} and ${t.merged} <= ${t.evaluated}`,
+      sql`0 <= coalesce(${t.feasible}, 0) and coalesce(${t.feasible}, 0) <= ${t.merged} and ${t.merged} <= ${t.evaluated}`,
     ),
     check(
       'run_views_finished_check',

@@ -14,12 +14,13 @@ import {
 import { RUN_STATES } from '#shared/contract/records.ts';
 import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
 import type { DesignBasis } from '#shared/engine/section.ts';
+import { RUN_METHODS } from '#shared/sweep/run-method.ts';
 import { oneOf } from './one-of.ts';
 import { people } from './people.ts';
 import { sweeps } from './sweeps.ts';
 
 /**
- * One execution of a sweep. What it was asked (`definition`, `basis`, `engineVersion`, `sectionCount`) is frozen: a
+ * One execution of a sweep. What it was asked (`definition`, `basis`, `engineVersion`, `method`, `sectionCount`) is frozen: a
  * trigger refuses to change it. The reference to the sweep has no cascade, so that a sweep with runs cannot go.
  */
 export const runs = pgTable(
@@ -34,6 +35,7 @@ export const runs = pgTable(
     definition: jsonb().$type<SweepDefinition>().notNull(),
     basis: jsonb().$type<DesignBasis>().notNull(),
     engineVersion: text('engine_version').notNull(),
+    method: text({ enum: RUN_METHODS }).notNull().default('every-section'),
     sectionCount: bigint('section_count', { mode: 'number' }).notNull(),
     state: text({ enum: RUN_STATES }).notNull().default('queued'),
     startedBy: uuid('started_by')
@@ -52,5 +54,6 @@ export const runs = pgTable(
     check('runs_number_check', sql`${t.number} > 0`),
     check('runs_section_count_check', sql`${t.sectionCount} >= 0`),
     check('runs_state_check', oneOf(t.state, RUN_STATES)),
+    check('runs_method_check', oneOf(t.method, RUN_METHODS)),
   ],
 );

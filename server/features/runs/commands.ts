@@ -1,9 +1,10 @@
-import { and, eq, inArray, max } from 'drizzle-orm';
+import { and, eq, inArray, isNull, max, type SQL } from 'drizzle-orm';
 import type { Person, RunState } from '#shared/contract/records.ts';
 import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
 import type { DesignBasis } from '#shared/engine/section.ts';
 import { ENGINE_VERSION } from '#shared/engine/version.ts';
-import type { View } from '#shared/sweep/problem.ts';
+import { isSameView, type View } from '#shared/sweep/problem.ts';
+import { methodOf } from '#shared/sweep/run-method.ts';
 import { spaceSize } from '#shared/sweep/space.ts';
 import type { RunningLimits } from '../../config.ts';
 import type { Database } from '../../db/client.ts';
@@ -16,6 +17,7 @@ import { frozenBasis } from '../../http/frozen-basis.ts';
 import { requireReadableProject, requireRole } from '../../http/project-access.ts';
 import { changeView } from '../../jobs/change-view.ts';
 import { enqueueShards, insertShards } from '../../jobs/compute-jobs.ts';
+import { countedSections } from '../../jobs/counted-sections.ts';
 import { cancelView, resumeView } from '../../jobs/end-view.ts';
 import { findMissingInputs } from './available-measures.ts';
 import { canSeeView, RUNNERS } from './policy.ts';
@@ -46,7 +48,8 @@ export async function startRun(
     await refuseTooManyRuns(tx, person);
     const basis = frozenBasis(project);
     requireRunnable(sweep.definition, basis, project.designBasis.units);
-    const adding = spaceSize(sweep.definition.space);
+    const method = methodOf(sweep.definition, basis);
+    const adding = countedSections({ method, sectionCount: spaceSize(sweep.definition.space) });
     await refuseTooManySections(tx, { person, limits, adding });
     return insertRun(tx, { sweepId, definition: sweep.definition, basis, startedBy: person.id });
   });
@@ -78,10 +81,11 @@ async function insertRun(tx: Database, { sweepId, definition, basis, startedBy }
       definition,
       basis,
       engineVersion: ENGINE_VERSION,
+      method: methodOf(definition, basis),
       sectionCount: spaceSize(definition.space),
       startedBy,
     })
-    .returning({ id: runs.id, sectionCount: runs.sectionCount });
+    .returning({ id: runs.id, sectionCount: runs.sectionCount, method: runs.method });
   await insertView(tx, run!, { view: definition.view, openedBy: null });
   return run!.id;
 }
@@ -89,16 +93,16 @@ async function insertRun(tx: Database, { sweepId, definition, basis, startedBy }
 /** Answers its id; undefined where the run has such a view already. */
 async function insertView(
   tx: Database,
-  { id: runId, sectionCount }: Pick<RunRecord['run'], 'id' | 'sectionCount'>,
-  { view: { x, y }, openedBy }: { view: View; openedBy: string | null },
+  { id: runId, sectionCount, method }: Pick<RunRecord['run'], 'id' | 'sectionCount' | 'method'>,
+  { view: { x, y, z }, openedBy }: { view: View; openedBy: string | null },
 ): Promise<string | undefined> {
   const [inserted] = await tx
     .insert(runViews)
-    .values({ runId, x, y, openedBy })
+    .values({ runId, x, y, z: z ?? null, openedBy })
     .onConflictDoNothing()
     .returning({ id: runViews.id });
   if (inserted === undefined) return undefined;
-  await insertShards(tx, inserted.id, { from: 0, to: sectionCount });
+  await insertShards(tx, inserted.id, { from: 0, to: sectionCount, method });
   await enqueueShards(tx, inserted.id);
   // No change but the event: whoever follows the run learns of the new view.
   await changeView(tx, { runId, viewId: inserted.id, from: ['queued'] }, {});
@@ -114,7 +118,7 @@ export async function cancelRun(db: Database, person: Person, { run }: RunRecord
       .from(runViews)
       .where(and(eq(runViews.runId, run.id), inArray(runViews.state, UNFINISHED)));
     for (const { viewId } of unfinished)
-      await cancelView(tx, { runId: run.id, viewId, sectionCount: run.sectionCount });
+      await cancelView(tx, { runId: run.id, viewId, sectionCount: run.sectionCount, method: run.method });
   });
 }
 
@@ -131,17 +135,29 @@ export async function resumeRun(
     if (!RESUMABLE.includes(view.state)) return;
     refuseOtherEngine(run);
     await refuseTooManyRuns(tx, person);
-    await refuseTooManySections(tx, { person, limits, adding: run.sectionCount - view.evaluated });
-    await resumeView(tx, { runId: run.id, viewId: view.id, sectionCount: run.sectionCount });
+    await refuseTooManySections(tx, {
+      person,
+      limits,
+      adding: run.method === 'bounds' ? countedSections(run) : run.sectionCount - view.evaluated,
+    });
+    const { sectionCount, method } = run;
+    await resumeView(tx, { runId: run.id, viewId: view.id, sectionCount, method });
   });
 }
 
+const isViewOf = ({ id }: RunRecord['run'], { x, y, z }: View): SQL | undefined =>
+  and(
+    eq(runViews.runId, id),
+    eq(runViews.x, x),
+    eq(runViews.y, y),
+    z ? eq(runViews.z, z) : isNull(runViews.z),
+  );
+
 async function requireOwnView(tx: Database, run: RunRecord['run']) {
-  const { x, y } = run.definition.view;
   const [view] = await tx
     .select({ id: runViews.id, state: runViews.state, evaluated: runViews.evaluated })
     .from(runViews)
-    .where(and(eq(runViews.runId, run.id), eq(runViews.x, x), eq(runViews.y, y)));
+    .where(isViewOf(run, run.definition.view));
   if (view === undefined) throw notFound('View');
   return view;
 }
@@ -166,6 +182,10 @@ export async function openView(
   if (!canSeeView(person, view)) throw forbidden(`Your role (${person.role}) may not see costs`);
   const { run, project } = record;
   const { space, demand, rules } = run.definition;
+  if (view.z && run.method === 'bounds')
+    throw invalidInput([
+      { path: ['z'], message: 'A run by bounds finds fronts in two measures only: leave the third out' },
+    ]);
   const missing = findMissingInputs(view, {
     problem: { space, demand, rules, basis: run.basis },
     units: project.designBasis.units,
@@ -197,15 +217,12 @@ async function refuseTooManyViews(tx: Database, runId: string): Promise<void> {
 async function retryView(
   tx: Database,
   { run }: RunRecord,
-  { x, y }: View,
+  view: View,
 ): Promise<{ id: string; isBegun: boolean }> {
-  const [existing] = await tx
-    .select({ id: runViews.id })
-    .from(runViews)
-    .where(and(eq(runViews.runId, run.id), eq(runViews.x, x), eq(runViews.y, y)));
+  const [existing] = await tx.select({ id: runViews.id }).from(runViews).where(isViewOf(run, view));
   const { id } = existing!;
   const own = run.definition.view;
-  if ((own.x === x && own.y === y) || run.engineVersion !== ENGINE_VERSION) return { id, isBegun: false };
-  const { sectionCount } = run;
-  return { id, isBegun: await resumeView(tx, { runId: run.id, viewId: id, sectionCount }) };
+  if (isSameView(own, view) || run.engineVersion !== ENGINE_VERSION) return { id, isBegun: false };
+  const { sectionCount, method } = run;
+  return { id, isBegun: await resumeView(tx, { runId: run.id, viewId: id, sectionCount, method }) };
 }

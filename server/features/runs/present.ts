@@ -1,5 +1,6 @@
 import { fullBasisSchema } from '#shared/contract/design-basis.ts';
 import type { Person, Run, RunSummary, ViewEvent, ViewProgress } from '#shared/contract/records.ts';
+import { viewOf } from '#shared/sweep/problem.ts';
 import { canSeeRates } from '../../http/project-access.ts';
 import { canSeeView } from './policy.ts';
 import type { RunRecord, ViewRow } from './queries.ts';
@@ -12,11 +13,12 @@ function presentViewState(view: ViewState, sectionCount: number): Omit<ViewProgr
   return {
     viewId: view.id,
     sequence: view.sequence,
-    view: { x: view.x, y: view.y },
+    view: viewOf(view),
     state: view.state,
     evaluated: view.evaluated,
     feasible: view.feasible,
     sectionCount,
+    search: view.search,
     elapsedMs: view.elapsedMs,
     message: view.message,
   };

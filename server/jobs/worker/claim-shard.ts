@@ -1,5 +1,5 @@
 import { and, eq, isNull, sql, type SQL } from 'drizzle-orm';
-import type { SweepProblem, View } from '#shared/sweep/problem.ts';
+import { viewOf, type SweepProblem, type View } from '#shared/sweep/problem.ts';
 import type { Database } from '../../db/client.ts';
 import { runViews } from '../../db/schema/run-views.ts';
 import { runs } from '../../db/schema/runs.ts';
@@ -59,7 +59,7 @@ export async function claimShard(
     from,
     to: shard.to,
     problem: { space, demand, rules, basis: run.basis },
-    view: { x: view.x, y: view.y },
+    view: viewOf(view),
     sectionCount: run.sectionCount,
   };
 }
@@ -71,6 +71,7 @@ async function findShard(db: Database, key: ShardKey) {
       view: {
         x: runViews.x,
         y: runViews.y,
+        z: runViews.z,
         state: runViews.state,
         cancelRequestedAt: runViews.cancelRequestedAt,
       },

@@ -1,3 +1,4 @@
+import type { BoundsDesk } from '../../compute/bounds-desk.ts';
 import type { ComputePool } from '../../compute/pool.ts';
 import type { Database } from '../../db/client.ts';
 import type { Log } from '../../log.ts';
@@ -8,6 +9,7 @@ import type { WorkTally } from '../work-tally.ts';
 export interface WorkContext {
   readonly db: Database;
   readonly compute: ComputePool;
+  readonly boundsDesk: BoundsDesk;
   readonly runEvents: RunEvents;
   readonly log: Log;
   readonly tally: WorkTally;

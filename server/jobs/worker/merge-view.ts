@@ -3,6 +3,7 @@ import { eq, sql } from 'drizzle-orm';
 import { finishResult } from '#shared/sweep/finish.ts';
 import type { SweepProblem, View } from '#shared/sweep/problem.ts';
 import type { ViewResult } from '#shared/sweep/result.ts';
+import type { RunMethod } from '#shared/sweep/run-method.ts';
 import type { Database } from '../../db/client.ts';
 import { isDatabaseAway } from '../../db/database-error.ts';
 import { runViews } from '../../db/schema/run-views.ts';
@@ -24,6 +25,7 @@ interface ViewToMerge {
   readonly problem: SweepProblem;
   readonly view: View;
   readonly sectionCount: number;
+  readonly method: RunMethod;
   readonly isCancelRequested: boolean;
   /** Sections that the stored result covers already. */
   readonly merged: number;
@@ -51,6 +53,8 @@ export async function mergeView(viewId: string, context: MergeContext): Promise<
 
 async function mergeFound(view: ViewToMerge, { db, merged, stopSignal }: MergeContext): Promise<void> {
   const { viewId, problem } = view;
+  // Its worker writes what it finds; there is nothing to join but, after a cancel, an end to write.
+  if (view.method === 'bounds' && !view.isCancelRequested) return;
   if (!view.isCancelRequested && !(await isAllDone(db, viewId)))
     await delay(merged.pauseMs(viewId), undefined, { signal: stopSignal }).catch(() => undefined);
   const { chunk, shardCount } = await merged.bringUpToDate(db, viewId);
@@ -70,7 +74,8 @@ async function findView(db: Database, viewId: string): Promise<ViewToMerge | und
       definition: runs.definition,
       basis: runs.basis,
       sectionCount: runs.sectionCount,
-      view: { x: runViews.x, y: runViews.y },
+      method: runs.method,
+      view: { x: runViews.x, y: runViews.y, z: runViews.z },
       state: runViews.state,
       cancelRequestedAt: runViews.cancelRequestedAt,
       merged: runViews.merged,
@@ -110,7 +115,7 @@ async function showPart(db: Database, view: ViewToMerge, result: ViewResult): Pr
 /** Refused where a shard is still in work, or became done since: its end has the view looked at again. */
 async function endCancelled(
   db: Database,
-  { runId, viewId, sectionCount, merged }: ViewToMerge,
+  { runId, viewId, sectionCount, method, merged }: ViewToMerge,
   { result, shardCount }: { result: ViewResult; shardCount: number },
 ): Promise<void> {
   const isSettled = sql`(
@@ -127,7 +132,7 @@ async function endCancelled(
       ...STOP_COUNTING,
       state: 'cancelled',
       finishedAt: new Date(),
-      message: describePart(evaluated, sectionCount),
+      message: describePart(evaluated, { sectionCount, method }),
     },
   );
 }

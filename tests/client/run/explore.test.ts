@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { MEASURE_DIRECTION } from '#shared/engine/measures.ts';
 import { finishResult } from '#shared/sweep/finish.ts';
 import { nonDominated } from '#shared/sweep/front.ts';
 import { prepareSweep } from '#shared/sweep/prepared-sweep.ts';
@@ -40,7 +41,7 @@ const query = (filters: RangeFilters = {}, more: Partial<CutQuery> = {}): CutQue
 describe('the sections judged again in the browser', () => {
   it('are those the run counted, with every value a section has', () => {
     expect([...COLUMNS.index]).toEqual(ALL.map(({ index }) => index));
-    expect(ALL).toHaveLength(RESULT.feasible);
+    expect(ALL).toHaveLength(RESULT.feasible!);
     for (const key of EXPLORE_KEYS) {
       const column = COLUMNS.column(key);
       ALL.forEach((section, at) => {
@@ -57,7 +58,7 @@ describe('the sections judged again in the browser', () => {
     expect(cut.band).toEqual(RESULT.band);
     expect(cut.count).toBe(RESULT.feasible);
     for (const axis of ['width', 'depth', 'fc'] as const)
-      expect(cut.axisCounts[axis]).toEqual(RESULT.axisCounts[axis].map(({ feasible }) => feasible));
+      expect(cut.axisCounts[axis]).toEqual(RESULT.axisCounts![axis].map(({ feasible }) => feasible));
   });
 
   it('give the front of what lies within ranges, not what is left of the whole front', () => {
@@ -78,6 +79,25 @@ describe('the sections judged again in the browser', () => {
     expect(cut.front).toEqual(nonDominated(points, { x: 1, y: -1 }));
     const survivors = RESULT.front.filter(({ index }) => kept.some((section) => section.index === index));
     expect(cut.front.length).toBeGreaterThan(survivors.length);
+  });
+
+  it('give the front in three measures of what lies within ranges', () => {
+    const filters: RangeFilters = { depthMm: { low: null, high: 600 } };
+    const inThree = { ...view, z: 'depthMm' } as const;
+    const kept = ALL.filter((section) => isWithinFilters(section, filters)).map(({ evaluation }) =>
+      [view.x, view.y, inThree.z].map(
+        (id) => (MEASURE_DIRECTION[id] === 'less' ? 1 : -1) * evaluation.measures[id]!,
+      ),
+    );
+    const isBeaten = (p: number[]) =>
+      kept.some((q) => q.every((value, k) => value <= p[k]!) && q.some((value, k) => value < p[k]!));
+    const expected = new Set(kept.filter((p) => !isBeaten(p)).map(String));
+    const cut = cutColumns(COLUMNS, query(filters, { view: inThree }));
+    expect(expected.size).toBeGreaterThan(cut.front.length);
+    expect(cut.inThree!.count).toBe(expected.size);
+    expect(cut.inThree!.points.map(({ x, y, z }) => String([x, -y, z]))).toEqual(
+      expect.arrayContaining([...expected]),
+    );
   });
 
   it('come to nothing where nothing lies within', () => {

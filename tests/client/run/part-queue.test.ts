@@ -11,6 +11,7 @@ const part = (viewId: string, evaluated: number, state: ViewProgress['state'] = 
   evaluated,
   feasible: 0,
   sectionCount: 100,
+  search: null,
   elapsedMs: 1,
   result: null,
   message: null,

@@ -6,7 +6,7 @@ import { sweepRange } from '#shared/sweep/sweep-range.ts';
 import { spaceSize } from '#shared/sweep/space.ts';
 import type { ViewResult } from '#shared/sweep/result.ts';
 import { rulerMarks } from '#client/src/features/run/axis-ruler-model.ts';
-import { bandWithin } from '#client/src/features/run/band-within.ts';
+import { bandWithin } from '#shared/sweep/band-within.ts';
 import { checkWords } from '#client/src/features/run/check-words.ts';
 import { columnDecimals } from '#client/src/features/run/column-decimals.ts';
 import { pricesOfChecks } from '#client/src/features/run/price-of-checks.ts';
@@ -14,6 +14,7 @@ import {
   filtersPart,
   logPart,
   orderPart,
+  askedView,
   readRunAddress,
   viewPart,
   windowPart,
@@ -114,7 +115,7 @@ describe('the ruler of an axis', () => {
   const frame = { widthPx: 236, insetPx: 12, barPx: 24, labelPitchPx: 30 };
 
   it('stands the largest share highest and marks every value in its place', () => {
-    const marks = rulerMarks(RESULT.axisCounts.depth, frame);
+    const marks = rulerMarks(RESULT.axisCounts!.depth, frame);
     expect(marks.map((mark) => mark.value)).toEqual([400, 450, 500, 550, 600, 650, 700]);
     expect(Math.max(...marks.map((mark) => mark.heightPx))).toBeCloseTo(frame.barPx, 9);
     expect(marks[0]!.xPx).toBe(frame.insetPx);
@@ -194,6 +195,13 @@ describe('the address of a run', () => {
     expect(read('').bandShare).toBe(0.05);
   });
 
+  it('asks for the front in three measures where the third is a measure that no axis shows', () => {
+    const asked = (text: string) => askedView(read(text));
+    expect(asked('by=depthMm&in=3')).toEqual({ ...first, z: 'depthMm' });
+    for (const text of ['by=depthMm', 'in=3', 'by=fc&in=3', 'by=steelKgPerM&in=3', 'by=depthMm&in=three'])
+      expect(asked(text)).toEqual(first);
+  });
+
   it('swaps the measures when one side takes the other’s', () => {
     expect(withMeasure(first, 'x', 'curvatureDuctility')).toEqual({
       x: 'curvatureDuctility',
@@ -212,6 +220,7 @@ describe('answers and events that overtake each other', () => {
     evaluated: 100,
     feasible: 0,
     sectionCount: 1000,
+    search: null,
     elapsedMs: 100,
     result: null,
     message: null,

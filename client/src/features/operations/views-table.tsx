@@ -6,8 +6,8 @@ import { StateTag } from '#client/src/ui/state-tag.tsx';
 import { TableFrame } from '#client/src/ui/table-frame.tsx';
 import { RunLink } from './run-link.tsx';
 
-const shareText = ({ evaluated, sectionCount }: ViewUnderWay): string =>
-  `${formatNumber(sectionCount === 0 ? 0 : (evaluated / sectionCount) * 100, 3, true)} %`;
+const shareText = ({ evaluated, provenUnnecessary, sectionCount }: ViewUnderWay): string =>
+  `${formatNumber(sectionCount === 0 ? 0 : ((evaluated + provenUnnecessary) / sectionCount) * 100, 3, true)} %`;
 
 /** Runs, and views opened of them, that are not done yet. */
 export function ViewsTable({ views }: { readonly views: readonly ViewUnderWay[] }) {
@@ -50,7 +50,7 @@ export function ViewsTable({ views }: { readonly views: readonly ViewUnderWay[] 
             <td className="figure">{formatWhole(view.sectionCount)}</td>
             <td className="figure">{shareText(view)}</td>
             <td className="figure">
-              {view.shardsDone} of {view.shards}
+              {view.method === 'bounds' ? 'by bounds' : `${view.shardsDone} of ${view.shards}`}
             </td>
             <td className="figure">{formatDuration(view.elapsedMs)}</td>
           </tr>

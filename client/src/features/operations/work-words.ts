@@ -21,6 +21,7 @@ export const workerKindText = ({ kind }: WorkerProcess): string =>
 export const QUEUE_KIND_TEXT: Readonly<Record<QueueKind['kind'], string>> = {
   'small-run': 'Small runs',
   shard: 'Shards of large runs',
+  bounds: 'Searches by bounds',
   merge: 'Joining of shards',
 };
 

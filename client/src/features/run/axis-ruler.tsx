@@ -16,6 +16,8 @@ interface AxisRulerProps {
   readonly kind: 'length' | 'stress';
   readonly units: UnitSystem;
   readonly counts: readonly AxisCount[];
+  /** False where nobody counted how many meet every check: then the values stand alone. */
+  readonly isCounted: boolean;
   /** Sections within the ranges set at each value, in the order of the counts; null where none is set. */
   readonly within: readonly number[] | null;
   readonly selected: number | null;
@@ -30,11 +32,22 @@ function edgeWords(edges: readonly EdgeShare[], ends: readonly [string, string])
 }
 
 /** One axis drawn as a scale ruler: what share of each value meets every check, and where the chosen section lies. */
-export function AxisRuler({ name, symbol, kind, units, counts, within, selected, edges }: AxisRulerProps) {
+export function AxisRuler({
+  name,
+  symbol,
+  kind,
+  units,
+  counts,
+  isCounted,
+  within,
+  selected,
+  edges,
+}: AxisRulerProps) {
   const marks = rulerMarks(counts, FRAME, within);
   const barPx = rulerBarPx(counts.length, FRAME);
   const print = (value: number | undefined) => formatQuantity(value, kind, units, { hideUnit: true });
-  const words = edgeWords(edges, [print(marks[0]?.value), print(marks.at(-1)?.value)]);
+  const ends = [print(marks[0]?.value), print(marks.at(-1)?.value)] as const;
+  const words = edgeWords(edges, ends);
   const chosen = marks.find((mark) => selected !== null && Math.abs(mark.value - selected) < 1e-6 * selected);
   const spoken = marks
     .filter((mark) => mark.isLabelled || mark === chosen)
@@ -57,12 +70,18 @@ export function AxisRuler({ name, symbol, kind, units, counts, within, selected,
         viewBox={`0 0 ${FRAME.widthPx} ${HEIGHT}`}
         className="mt-1 block h-auto w-full max-w-[22rem]"
         role="img"
-        aria-label={`Share that meets every check by ${name} ${symbol}: ${spoken}`}
+        aria-label={
+          isCounted
+            ? `Share that meets every check by ${name} ${symbol}: ${spoken}`
+            : `${name} ${symbol}, ${marks.length} values from ${ends[0]} to ${ends[1]}`
+        }
       >
         {marks.map((mark) => (
           <g key={mark.value}>
             <title>
-              {`${print(mark.value)}: ${formatWhole(mark.feasible)} of ${formatWhole(mark.evaluated)} meet every check`}
+              {isCounted
+                ? `${print(mark.value)}: ${formatWhole(mark.feasible)} of ${formatWhole(mark.evaluated)} meet every check`
+                : print(mark.value)}
             </title>
             <rect x={mark.xPx - barPx} y={0} width={2 * barPx} height={BASE_Y} fill="transparent" />
             <rect

@@ -1,6 +1,7 @@
 import { useMemo, useState } from 'react';
 import type { Run } from '#shared/contract/records.ts';
 import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
+import { expandAxis } from '#shared/sweep/axis.ts';
 import type { View } from '#shared/sweep/problem.ts';
 import type { EdgeAxis, ViewResult } from '#shared/sweep/result.ts';
 import { formatNumber, formatQuantity } from '#shared/print/format-quantity.ts';
@@ -86,7 +87,7 @@ const FIRST_CAP = 0.9;
 function CapDepth({ props, onDone }: { readonly props: EdgeOffersProps; readonly onDone: () => void }) {
   const { run, result, source, reader, onVary, isBusy } = props;
   const best = result.front[0];
-  const depths = result.axisCounts.depth.map(({ value }) => value);
+  const depths = expandAxis(run.definition.space.depth);
   const wished = (best === undefined ? 0 : source.sectionAt(best.index).depthMm) * FIRST_CAP;
   const [capMm, setCapMm] = useState<number | null>(
     depths.findLast((depth) => depth <= wished) ?? depths[0] ?? null,

@@ -3,6 +3,7 @@ import type { ViewResult } from '#shared/sweep/result.ts';
 import { checkLabel } from '#shared/print/check-labels.ts';
 import { formatDifferenceTo, formatNumber, formatWhole } from '#shared/print/format-quantity.ts';
 import { measureLabel } from '#shared/print/measure-labels.ts';
+import { NotCounted } from './bounds-note.tsx';
 import { checkWords } from './check-words.ts';
 import type { MeasureReader } from '#shared/print/measure-reader.ts';
 import { measureText } from './measure-text.ts';
@@ -74,6 +75,13 @@ function Shares({ result }: { readonly result: ViewResult }) {
 export function FellOut({ result, definition, reader, isByCurve, onSelect, onMore }: FellOutProps) {
   const prices = pricesOfChecks(result);
   const { x } = result.view;
+  if (result.bounds !== undefined)
+    return (
+      <section className="border-t border-rule pt-3">
+        <h2 className="pb-1 text-xs font-semibold text-muted">Why the rest fell out</h2>
+        <NotCounted />
+      </section>
+    );
   return (
     <section className="border-t border-rule pt-3">
       <h2 className="pb-1 text-xs font-semibold text-muted">Why the rest fell out</h2>

@@ -12,6 +12,7 @@ import { unavailableReason } from '#client/src/lib/measure-availability.ts';
 import { measureLabel } from '#shared/print/measure-labels.ts';
 import { BandSlider } from './band-slider.tsx';
 import type { ExploreKey } from '#shared/sweep/explore-axis.ts';
+import { InThreeChoice } from './in-three-choice.tsx';
 import { thirdMeasure } from './mark-scale.ts';
 import type { MeasureReader } from '#shared/print/measure-reader.ts';
 import { chartAxis, measureText } from './measure-text.ts';
@@ -49,17 +50,17 @@ function targetOf(run: Run, view: View) {
 
 /** A section in a line or two, for the pointer and for screen readers. */
 function useDescribe({ source, reader, view, explore }: FrontPanelProps) {
-  const { front } = explore.shown;
+  const { listed: front } = explore.shown;
   return useCallback(
     (index: number) => {
       const { section, evaluation } = source.evaluatedAt(index);
       const { units, code } = reader;
-      const values = [view.x, view.y].map(
+      const values = [view.x, view.y, ...(view.z ? [view.z] : [])].map(
         (measure) =>
           `${measureLabel(measure, units, code).symbol} ${measureText(measure, evaluation.measures[measure], reader)}`,
       );
       const ties = front.find((point) => point.index === index)?.tieCount ?? 1;
-      const tied = ties > 1 ? `\n${ties} sections with these two values` : '';
+      const tied = ties > 1 ? `\n${ties} sections with these values` : '';
       return `${sizeText(section, units)}, ${steelText(section, units)}\n${values.join(', ')}${tied}`;
     },
     [source, reader, view, front],
@@ -116,16 +117,19 @@ function useChartProps(props: FrontPanelProps) {
 export function FrontPanel(props: FrontPanelProps) {
   const { progress, source, reader, explore, address, keys, pins } = props;
   const result = progress?.result ?? null;
-  const { front, band, isBandCut, cells, outline } = explore.shown;
+  const { front, listed, inThree, band, isBandCut, cells, outline } = explore.shown;
   const chart = useChartProps(props);
   const { third: thirdKey, markStyle } = address;
   const third = useMemo(
-    () => (thirdKey === null ? null : thirdMeasure(front, { key: thirdKey, style: markStyle }, source)),
-    [front, thirdKey, markStyle, source],
+    () => (thirdKey === null ? null : thirdMeasure(listed, { key: thirdKey, style: markStyle }, source)),
+    [listed, thirdKey, markStyle, source],
   );
   const fitted = useMemo(
-    () => ({ cells: result?.density ?? [], front: result?.front ?? [] }),
-    [result?.density, result?.front],
+    () => ({
+      cells: result?.density ?? [],
+      front: [...(result?.front ?? []), ...(result?.frontInThree?.points ?? [])],
+    }),
+    [result?.density, result?.front, result?.frontInThree],
   );
   const isEmpty = result?.front.length === 0 && progress !== null && !isUnderWay(progress.state);
 
@@ -133,11 +137,15 @@ export function FrontPanel(props: FrontPanelProps) {
     <section aria-label="Trade-off" className="flex min-w-0 flex-col">
       <div className="flex flex-wrap items-baseline gap-x-3 gap-y-1 pb-1.5">
         <PairChoice {...props} />
-        <BandSlider
-          share={address.bandShare}
-          count={`${isBandCut ? 'over ' : ''}${band.length}`}
-          onChange={(share) => address.write({ band: String(Math.round(share * 1000) / 10) })}
-        />
+        {result?.bounds === undefined ? (
+          <BandSlider
+            share={address.bandShare}
+            count={`${isBandCut ? 'over ' : ''}${band.length}`}
+            onChange={(share) => address.write({ band: String(Math.round(share * 1000) / 10) })}
+          />
+        ) : (
+          <span className="ml-auto text-sm text-muted">By bounds: the front alone, no cloud and no band</span>
+        )}
       </div>
       {isEmpty ? (
         props.whenEmpty
@@ -152,6 +160,7 @@ export function FrontPanel(props: FrontPanelProps) {
               {...chart}
               cells={cells}
               front={front}
+              marks={listed}
               outline={outline}
               band={band}
               bandShare={address.bandShare}
@@ -164,14 +173,24 @@ export function FrontPanel(props: FrontPanelProps) {
               onSelect={address.select}
               isGrowing={progress !== null && isUnderWay(progress.state)}
               toolbar={
-                <ThirdChoice
-                  value={thirdKey}
-                  style={markStyle}
-                  keys={keys}
-                  third={third}
-                  reader={reader}
-                  onChange={(key, style) => address.write({ by: key, as: style === 'tint' ? null : style })}
-                />
+                <>
+                  <ThirdChoice
+                    value={thirdKey}
+                    style={markStyle}
+                    keys={keys}
+                    third={third}
+                    reader={reader}
+                    onChange={(key, style) => address.write({ by: key, as: style === 'tint' ? null : style })}
+                  />
+                  <InThreeChoice
+                    view={props.view}
+                    third={thirdKey}
+                    inThree={inThree}
+                    isByBounds={props.run.method === 'bounds'}
+                    reader={reader}
+                    onChange={(isInThree) => address.write({ in: isInThree ? '3' : null })}
+                  />
+                </>
               }
             />
           )}

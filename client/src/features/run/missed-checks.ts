@@ -9,16 +9,21 @@ export interface Rung {
   readonly count: number;
 }
 
-/** How many sections are left at each step: placed at all, missing no more than one check, missing none. */
+/**
+ * How many sections are left at each step: placed at all, missing no more than one check, missing none. Empty where a
+ * search by bounds left most sections unseen.
+ */
 export function ladder(result: ViewResult): readonly Rung[] {
+  const { feasible, cannotFit } = result;
+  if (feasible === null || cannotFit === null) return [];
   const missOne = result.failures
     .filter(({ check }) => check !== 'bar-fit')
     .reduce((sum, { failedOnlyThis }) => sum + failedOnlyThis, 0);
   return [
     { words: 'evaluated', count: result.evaluated },
-    { words: 'have bars that fit', count: result.evaluated - result.cannotFit },
-    { words: 'miss one check at most', count: result.feasible + missOne },
-    { words: 'meet every check', count: result.feasible },
+    { words: 'have bars that fit', count: result.evaluated - cannotFit },
+    { words: 'miss one check at most', count: feasible + missOne },
+    { words: 'meet every check', count: feasible },
   ];
 }
 

@@ -5,6 +5,7 @@ import { formatNumber, formatWhole } from '#shared/print/format-quantity.ts';
 import { RatioBar } from '#client/src/ui/ratio-bar.tsx';
 import { sizeText } from '#shared/print/section-text.ts';
 import { EmptyState } from '#client/src/ui/empty-state.tsx';
+import { BoundsLedger, NotCounted } from './bounds-note.tsx';
 import { checkWords } from './check-words.ts';
 import type { MeasureReader } from '#shared/print/measure-reader.ts';
 import { measureText } from './measure-text.ts';
@@ -25,6 +26,21 @@ export function NothingFeasible({ result, definition, source, reader, onSelect }
   const nearest = missedChecks(result, source).flatMap(({ check, nearest: one }) =>
     one === null ? [] : [{ check, ...one }],
   );
+  if (result.bounds !== undefined)
+    return (
+      <EmptyState
+        title={
+          result.bounds.isProven
+            ? `None of ${formatWhole(result.sectionCount)} sections meets every check`
+            : 'No section that meets every check was found before the search was stopped'
+        }
+      >
+        <div className="grid gap-3">
+          <BoundsLedger result={result} bounds={result.bounds} />
+          <NotCounted />
+        </div>
+      </EmptyState>
+    );
   const byMiss = nearest.toSorted((a, b) => (a.result?.ratio ?? Infinity) - (b.result?.ratio ?? Infinity));
   return (
     <EmptyState title={`None of ${formatWhole(result.evaluated)} sections meets every check`}>

@@ -1,25 +1,19 @@
 import type { Run, ViewProgress } from '#shared/contract/records.ts';
 import { formatDuration, formatWhole } from '#shared/print/format-quantity.ts';
+import { feasibleClaim, proofClaim } from './proof-words.ts';
 
 /** What the result rests on: how many sections were judged, how many passed, and the mark that repeats with it. */
 export function ProofLine({ run, progress }: { readonly run: Run; readonly progress: ViewProgress | null }) {
   const result = progress?.result ?? null;
   if (progress === null || result === null)
     return <footer className="min-h-8 border-t border-ink px-4 py-1.5 sm:px-5">&nbsp;</footer>;
-  const isWhole = progress.state === 'finished';
-  const count = formatWhole(result.evaluated);
-  const claim =
-    result.front.length === 0
-      ? `${count} sections evaluated, none meets every check`
-      : isWhole
-        ? `${count} ${result.evaluated === 1 ? 'section' : 'sections'} evaluated, none better than the front`
-        : `${count} of ${formatWhole(result.sectionCount)} evaluated, none of these better than the front`;
+  const claim = proofClaim(result, progress.state);
   return (
     <footer className="num flex flex-wrap gap-x-6 gap-y-1 border-t border-ink px-4 py-1.5 text-sm sm:px-5">
       <strong className={`font-semibold ${result.front.length === 0 ? 'text-fails' : 'text-meets'}`}>
         {claim}
       </strong>
-      <span>{formatWhole(result.feasible)} meet every listed check</span>
+      <span className={result.feasible === null ? 'text-muted' : undefined}>{feasibleClaim(result)}</span>
       <span>front {formatWhole(result.front.length)}</span>
       <span title="Equal for equal results, whatever the machine">{result.hash}</span>
       <span className="ml-auto text-muted">

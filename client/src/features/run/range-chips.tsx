@@ -8,7 +8,7 @@ import type { Explore } from './use-explore.ts';
 interface RangeChipsProps {
   readonly explore: Explore;
   /** Sections of the whole run that meet every check, and on its front. */
-  readonly feasible: number;
+  readonly feasible: number | null;
   readonly frontCount: number;
   readonly reader: MeasureReader;
 }
@@ -19,7 +19,7 @@ export function RangeChips({ explore, feasible, frontCount, reader }: RangeChips
   const entries = filterEntries(filters);
   if (entries.length === 0) return null;
   const found =
-    shown.count === null
+    shown.count === null || feasible === null
       ? `${formatWhole(shown.front.length)} of the ${formatWhole(frontCount)} sections on the front${state === 'coming' ? ', counting all …' : ''}`
       : `${formatWhole(shown.count)} of ${formatWhole(feasible)} sections, front ${formatWhole(shown.front.length)}`;
   return (

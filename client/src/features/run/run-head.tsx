@@ -1,5 +1,5 @@
 import type { ReactNode } from 'react';
-import type { QueuePosition, Run, ViewProgress } from '#shared/contract/records.ts';
+import type { QueuePosition, Run, SearchProgress, ViewProgress } from '#shared/contract/records.ts';
 import { ENGINE_VERSION } from '#shared/engine/version.ts';
 import { formatDuration, formatNumber, formatWhole } from '#shared/print/format-quantity.ts';
 import { runStateLabel } from '#client/src/lib/state-labels.ts';
@@ -24,8 +24,18 @@ function queueWords(position: QueuePosition | null): string {
   return `Waiting, ${formatWhole(position.ahead)} ahead in the queue`;
 }
 
+/** A search by bounds: of the whole space, what is settled, and what is still to be looked into. */
+function searchWords({ evaluated, sectionCount }: ViewProgress, search: SearchProgress): string {
+  const open = sectionCount - evaluated - search.provenUnnecessary;
+  return (
+    `${formatWhole(evaluated)} evaluated, ${formatNumber(((sectionCount - open) / sectionCount) * 100, 4)} % of ` +
+    `${formatWhole(sectionCount)} settled, ${formatWhole(search.boxesOpen)} groups open`
+  );
+}
+
 function progressWords(progress: ViewProgress, live: LiveView): string {
   const { perSecond, leftMs } = paceOf(progress, live.perSecond);
+  if (progress.search !== null && progress.state === 'running') return searchWords(progress, progress.search);
   const done = `${formatWhole(progress.evaluated)} of ${formatWhole(progress.sectionCount)}`;
   if (progress.state === 'queued')
     return progress.evaluated === 0
@@ -37,7 +47,9 @@ function progressWords(progress: ViewProgress, live: LiveView): string {
 
 function stateWords(progress: ViewProgress): string | null {
   if (progress.state === 'cancelled')
-    return `cancelled: ${formatWhole(progress.evaluated)} of ${formatWhole(progress.sectionCount)} evaluated`;
+    return progress.search === null
+      ? `cancelled: ${formatWhole(progress.evaluated)} of ${formatWhole(progress.sectionCount)} evaluated`
+      : `cancelled: ${formatWhole(progress.evaluated)} evaluated, the front is not proven`;
   if (progress.state === 'failed') return progress.message ?? 'The run broke off.';
   return null;
 }

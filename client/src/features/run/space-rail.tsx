@@ -64,7 +64,9 @@ export function SpaceRail({ definition, result, within, units, selected }: Space
   ] as const;
   return (
     <section className="grid gap-4">
-      <h2 className="text-xs font-semibold text-muted">Space, and where it meets every check</h2>
+      <h2 className="text-xs font-semibold text-muted">
+        {result?.bounds === undefined ? 'Space, and where it meets every check' : 'Space'}
+      </h2>
       {RULERS.map(({ axis, name, symbol, kind }) => {
         const fallback = expandAxis(space[axis]).map((value) => ({ value, feasible: 0, evaluated: 0 }));
         return (
@@ -74,7 +76,8 @@ export function SpaceRail({ definition, result, within, units, selected }: Space
             symbol={symbol}
             kind={kind}
             units={units}
-            counts={result?.axisCounts[axis] ?? fallback}
+            counts={result?.axisCounts?.[axis] ?? fallback}
+            isCounted={result === null || result.axisCounts !== null}
             within={within?.[axis] ?? null}
             selected={selected === null ? null : VALUE_OF[axis](selected)}
             edges={(result?.edges ?? []).filter((edge) => edge.axis === axis)}

@@ -42,8 +42,11 @@ export interface Pace {
 
 /** How far a view is and how long the rest will take at the given pace, or at that of the whole way so far. */
 export function paceOf(progress: ViewProgress, recentPerSecond: number | null = null): Pace {
-  const { evaluated, sectionCount, elapsedMs } = progress;
+  const { sectionCount, elapsedMs, search } = progress;
+  const evaluated = progress.evaluated + (search?.provenUnnecessary ?? 0);
   const share = sectionCount === 0 ? 0 : evaluated / sectionCount;
+  // The last boxes hold few sections and take longest: the share of a search says nothing of the time left.
+  if (search !== null) return { share, perSecond: null, leftMs: null };
   if (evaluated === 0 || elapsedMs <= 0) return { share, perSecond: null, leftMs: null };
   const perSecond = recentPerSecond ?? (evaluated / elapsedMs) * 1000;
   const leftMs = perSecond > 0 ? ((sectionCount - evaluated) / perSecond) * 1000 : null;

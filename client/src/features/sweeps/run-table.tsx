@@ -53,9 +53,14 @@ export function RunTable({ projectId, sweepName, runs }: RunTableProps) {
               <StateTag {...runStateLabel(run.state)} />
             </td>
             <td className="figure">
-              {run.evaluated === run.sectionCount
+              {run.evaluated === run.sectionCount || run.method === 'bounds'
                 ? formatWhole(run.sectionCount)
                 : `${formatWhole(run.evaluated)} of ${formatWhole(run.sectionCount)}`}
+              {run.method === 'bounds' && (
+                <span className="block text-xs text-muted">
+                  by bounds, {formatWhole(run.evaluated)} evaluated
+                </span>
+              )}
             </td>
             <td className="figure">{feasibleText(run)}</td>
             <td className="figure">{run.state === 'queued' ? '' : formatWhole(run.frontCount)}</td>
@@ -72,4 +77,10 @@ export function RunTable({ projectId, sweepName, runs }: RunTableProps) {
 }
 
 const feasibleText = (run: RunSummary): string =>
-  run.state === 'queued' ? '' : run.feasible === 0 ? 'none' : formatWhole(run.feasible);
+  run.state === 'queued'
+    ? ''
+    : run.feasible === null
+      ? 'not counted'
+      : run.feasible === 0
+        ? 'none'
+        : formatWhole(run.feasible);

@@ -1,0 +1,38 @@
+import type { RunState } from '#shared/contract/records.ts';
+import type { ViewResult } from '#shared/sweep/result.ts';
+import { formatWhole } from '#shared/print/format-quantity.ts';
+
+const sections = (count: number) => `${formatWhole(count)} ${count === 1 ? 'section' : 'sections'}`;
+
+/** What the front rests on where every section is evaluated, or those that were before somebody stopped it. */
+function evaluatedClaim({ front, evaluated, sectionCount }: ViewResult, isWhole: boolean): string {
+  const count = formatWhole(evaluated);
+  if (front.length === 0) return `${count} sections evaluated, none meets every check`;
+  return isWhole
+    ? `${sections(evaluated)} evaluated, none better than the front`
+    : `${count} of ${formatWhole(sectionCount)} evaluated, none of these better than the front`;
+}
+
+/** The same for a search by bounds: what was evaluated, and what need not have been. */
+function boundsClaim({ front, evaluated, sectionCount, bounds }: ViewResult): string {
+  const whole = sections(sectionCount);
+  const looked = `${formatWhole(evaluated)} evaluated`;
+  if (bounds?.isProven !== true)
+    return front.length === 0
+      ? `${whole}; ${looked}, none of these meets every check; the rest not settled`
+      : `${whole}; ${looked}; front not proven, better ones may be left`;
+  return front.length === 0
+    ? `${whole}; ${looked}, the rest proven unable to meet every check: none does`
+    : `${whole}; ${looked}, the rest proven unnecessary; none better than the front`;
+}
+
+/** The proof line's claim. */
+export function proofClaim(result: ViewResult, state: RunState): string {
+  return result.bounds === undefined ? evaluatedClaim(result, state === 'finished') : boundsClaim(result);
+}
+
+/** How many sections meet every check, or that nobody counted. */
+export const feasibleClaim = ({ feasible }: ViewResult): string =>
+  feasible === null
+    ? 'sections that meet every check: not counted by bounds'
+    : `${formatWhole(feasible)} meet every listed check`;
