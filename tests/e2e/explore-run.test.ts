@@ -47,6 +47,32 @@ describe('a finished run', () => {
     expect(await page.getByLabel('Marks tell').inputValue()).toBe('depthMm');
   });
 
+  it('finds the front in three measures, marks and lists it, and keeps to it over a reload and within ranges', async () => {
+    const visit = await office.visit('engineer');
+    const { page } = visit;
+    await visit.open(`${COST_BY_DUCTILITY}&by=depthMm`);
+    await chart(page).locator('canvas').waitFor();
+    const marks = async () => Number(await chart(page).getAttribute('aria-valuemax'));
+    const told = page.getByRole('region', { name: 'Trade-off' }).getByText(/^Marks: [\d,]+ sections/);
+    const inTwo = await marks();
+    await page.getByLabel('Front in three measures').check();
+    await told.waitFor();
+    const inThree = await marks();
+    expect(inThree).toBeGreaterThan(inTwo);
+    await page.getByText(`Front ${inThree}`, { exact: true }).waitFor();
+    expect(asked(page, 'in')).toBe('3');
+    await page.reload();
+    await told.waitFor();
+    expect(await marks()).toBe(inThree);
+    await page.getByRole('group', { name: 'Shown below the strip' }).getByText('Ranges').click();
+    await page.getByLabel('Depth h to').fill('23');
+    await withinRanges(page);
+    await expect.poll(marks).toBeLessThan(inThree);
+    await page.getByLabel('Front in three measures').uncheck();
+    await expect.poll(() => asked(page, 'in')).toBeNull();
+    await told.waitFor({ state: 'detached' });
+  });
+
   it('keeps every view to the ranges set, by typing, by keys, over a reload, until a hand takes them out', async () => {
     const visit = await office.visit('engineer');
     const { page } = visit;

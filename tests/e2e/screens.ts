@@ -188,6 +188,11 @@ const RUN: readonly Screen[] = [
   at('run-steel-ductility', 'engineer', `${runPath('reading-room')}?x=steelKgPerM&y=curvatureDuctility`),
   at('run-ranges', 'engineer', `${runPath('reading-room')}?show=ranges&f=depthMm:~584.2&by=depthMm`),
   at('run-why', 'engineer', `${runPath('reading-room')}?x=costPerM&y=curvatureDuctility&show=why`),
+  at(
+    'run-in-three',
+    'engineer',
+    `${runPath('reading-room')}?x=costPerM&y=curvatureDuctility&by=depthMm&in=3`,
+  ),
   at('run-log', 'engineer', `${runPath('reading-room-fine')}?log=xy&by=barCount&as=size`),
   at('run-million', 'engineer', runPath('reading-room-fine')),
   at('run-si', 'engineer', runPath('ground-floor', CLINIC)),

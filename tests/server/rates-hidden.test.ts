@@ -87,6 +87,7 @@ test('a viewer’s own evaluation has quantities and carbon, and no cost', async
 test('a viewer cannot open or read a view by cost, and follows such a run without its result', async () => {
   const path = `/runs/${byCost.id}/views`;
   await viewer.post(path, { x: 'costPerM', y: 'widthMm' }).expect(403);
+  await viewer.post(path, { x: 'depthMm', y: 'widthMm', z: 'costPerM' }).expect(403);
   await viewer.get(`${path}/${byCost.views[0]!.viewId}`).expect(403);
   const stream = await followRun(office, viewer, { runId: byCost.id });
   const { progress } = await stream.until(hasEnded);

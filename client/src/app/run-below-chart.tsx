@@ -30,7 +30,7 @@ const PANEL_NAMES: readonly { readonly value: Panel; readonly label: string }[] 
 
 function Strip({ run, state, pinLabels, onPin }: RunBelowChartProps) {
   const { address, view, source, reader, selected, explore } = state;
-  const { front } = explore.shown;
+  const { listed: front } = explore.shown;
   const place = front.findIndex((point) => point.ties.includes(selected?.index ?? -1));
   return (
     <section aria-label="Along the front" className="min-w-0 border-t border-rule pt-2">

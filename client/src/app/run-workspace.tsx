@@ -58,7 +58,7 @@ export function RunWorkspace({ run, project }: RunWorkspaceProps) {
   const { address, view, source, reader, progress, result, selected, explore } = state;
   const pins = useRunPins(run, view, source);
   const selectedIndex = selected?.index ?? null;
-  useRunShortcuts({ front: explore.shown.front, selectedIndex, onSelect: address.select, onPin: pins.pin });
+  useRunShortcuts({ front: explore.shown.listed, selectedIndex, onSelect: address.select, onPin: pins.pin });
   const pinned = pins.own.find((candidate) => candidate.sectionIndex === selectedIndex) ?? null;
   const isOver = progress !== null && !state.isLive;
 

@@ -56,7 +56,10 @@ export interface FrontChartInput {
   readonly xExtent: AxisExtent;
   readonly yExtent: AxisExtent;
   readonly frame: PlotFrame;
+  /** Drawn as the stepped line. */
   readonly front: readonly FrontPoint[];
+  /** What is marked: the front's own points, or those of the front in three measures. */
+  readonly marks: readonly FrontPoint[];
   /** The front without ranges, drawn faintly where ranges are set. */
   readonly outline: readonly Point[];
   readonly markScale: MarkScale | null;

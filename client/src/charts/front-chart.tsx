@@ -138,7 +138,7 @@ function useLayoutReport(props: FrontChartProps, extents: Extents, frame: PlotFr
 
 /** The front over its density cloud. It is moved along like a slider: the arrow keys pick the next real section. */
 export function FrontChart(props: FrontChartProps) {
-  const { front, band, pins, selected, onSelect, describe, cells, bandShare, target, x, y } = props;
+  const { front, marks, band, pins, selected, onSelect, describe, cells, bandShare, target, x, y } = props;
   const { outline, markScale } = props;
   const [ref, size] = useElementSize<HTMLDivElement>();
   const colours = useChartColours();
@@ -148,13 +148,14 @@ export function FrontChart(props: FrontChartProps) {
   const { handlers, box } = useChartGestures(ref, frame, change);
   useLayoutReport(props, extents, frame);
 
-  const place = front.findIndex((point) => point.ties.includes(selected?.index ?? -1));
+  const place = marks.findIndex((point) => point.ties.includes(selected?.index ?? -1));
   const option = useMemo(() => {
     if (frame === null) return null;
     const input = {
       x,
       y,
       front,
+      marks,
       outline,
       markScale,
       band,
@@ -169,6 +170,7 @@ export function FrontChart(props: FrontChartProps) {
     x,
     y,
     front,
+    marks,
     outline,
     markScale,
     band,
@@ -192,12 +194,12 @@ export function FrontChart(props: FrontChartProps) {
 
   const pick = (xPx: number, yPx: number) => {
     if (frame === null) return;
-    const marks = [...pins, ...front, ...(bandShare > 0 ? band : [])].map((point) => ({
+    const places = [...pins, ...marks, ...(bandShare > 0 ? band : [])].map((point) => ({
       index: point.index,
       x: toPlot(x, point.x),
       y: toPlot(y, point.y),
     }));
-    const mark = nearestMark(marks, { xPx, yPx }, { frame, xExtent: extents.x, yExtent: extents.y });
+    const mark = nearestMark(places, { xPx, yPx }, { frame, xExtent: extents.x, yExtent: extents.y });
     if (mark !== undefined) return onSelect(mark.index);
     const perPx = {
       x: (extents.x.max - extents.x.min) / (frame.width - frame.left - frame.right),
@@ -218,9 +220,9 @@ export function FrontChart(props: FrontChartProps) {
     if (zoom !== undefined) change((now) => zoomedExtents(now, zoom));
     else if (event.key === '0') show(null);
     else if (shift !== undefined) change((now) => movedExtents(now, shift));
-    else if (step !== undefined && front.length > 0) {
-      const from = place === -1 ? (step > 0 ? -1 : front.length) : place;
-      onSelect(front[Math.min(Math.max(from + step, 0), front.length - 1)]!.index);
+    else if (step !== undefined && marks.length > 0) {
+      const from = place === -1 ? (step > 0 ? -1 : marks.length) : place;
+      onSelect(marks[Math.min(Math.max(from + step, 0), marks.length - 1)]!.index);
     } else return;
     event.preventDefault();
   };
@@ -251,11 +253,11 @@ export function FrontChart(props: FrontChartProps) {
         <div
           ref={ref}
           role="slider"
-          tabIndex={front.length > 0 ? 0 : -1}
+          tabIndex={marks.length > 0 ? 0 : -1}
           aria-label={`Section along the front, ${y.title} against ${x.title}`}
-          aria-valuemin={front.length > 0 ? 1 : 0}
-          aria-valuemax={front.length}
-          aria-valuenow={Math.max(place + 1, front.length > 0 ? 1 : 0)}
+          aria-valuemin={marks.length > 0 ? 1 : 0}
+          aria-valuemax={marks.length}
+          aria-valuenow={Math.max(place + 1, marks.length > 0 ? 1 : 0)}
           aria-valuetext={selected === null ? 'none selected' : describe(selected.index)}
           onKeyDown={move}
           onDoubleClick={() => show(null)}

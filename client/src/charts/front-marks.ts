@@ -20,14 +20,14 @@ export const sizeOf = (share: number): number => LEAST_SIZED_PX + share * (LARGE
 
 /** The front's marks: open diamonds, or tinted or sized by a third measure. One without a value stays as it is. */
 export function frontMarks(
-  { front, markScale, colours }: FrontChartInput,
+  { marks, markScale, colours }: FrontChartInput,
   place: (point: FrontPoint) => [number, number],
 ) {
-  const bare = front.length > MANY_MARKS ? MARK_PX.many : MARK_PX.few;
+  const bare = marks.length > MANY_MARKS ? MARK_PX.many : MARK_PX.few;
   return {
     symbolSize: bare,
     itemStyle: { color: colours.paper, borderColor: colours.ink, borderWidth: 1.3 },
-    data: front.map((point, k) => {
+    data: marks.map((point, k) => {
       const value = [...place(point), point.index];
       const share = markScale?.shares[k] ?? null;
       if (markScale === null || share === null) return { value };

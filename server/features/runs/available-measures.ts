@@ -17,8 +17,9 @@ interface MeasureContext {
  * sections out in silence, so each mix of the space needs one.
  */
 export function findMissingInputs(view: View, { problem, units, path }: MeasureContext): Issue[] {
-  return (['x', 'y'] as const).flatMap((axis) => {
-    const missing = missingFor(view[axis], problem, units);
+  return (['x', 'y', 'z'] as const).flatMap((axis) => {
+    const measure = view[axis];
+    const missing = measure ? missingFor(measure, problem, units) : undefined;
     return missing === undefined ? [] : [{ path: [...path, axis], message: missing }];
   });
 }

@@ -4,7 +4,7 @@ import { canSeeRates } from '../../http/project-access.ts';
 
 export const RUNNERS: readonly Role[] = ['admin', 'engineer'];
 
-const isCostView = (view: View): boolean => view.x === 'costPerM' || view.y === 'costPerM';
+const isCostView = ({ x, y, z }: View): boolean => [x, y, z].includes('costPerM');
 
 /** A view that ranks by cost shows costs. */
 export const canSeeView = (person: Pick<Person, 'role'>, view: View): boolean =>

@@ -2,7 +2,7 @@ import { z } from 'zod';
 import { idSchema } from '../numbers.ts';
 import { runningLoadSchema } from '../operations.ts';
 import { evaluateOutputSchema, runSchema, viewProgressSchema } from '../records.ts';
-import { viewSchema } from '../sweep-definition.ts';
+import { openedViewSchema } from '../sweep-definition.ts';
 import { byId, nothing } from './endpoint-params.ts';
 
 /** Executions of a sweep and the views of their results. */
@@ -53,7 +53,7 @@ export const runEndpoints = {
     method: 'post',
     path: '/runs/:id/views',
     params: byId,
-    body: viewSchema,
+    body: openedViewSchema,
     response: viewProgressSchema,
     isPublic: false,
   },

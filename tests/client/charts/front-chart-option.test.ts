@@ -37,6 +37,10 @@ const input: FrontChartInput = {
     { index: 4, x: 20, y: 6, tieCount: 2, ties: [4, 9] },
     { index: 5, x: 30, y: 9, tieCount: 1, ties: [5] },
   ],
+  marks: [
+    { index: 4, x: 20, y: 6, tieCount: 2, ties: [4, 9] },
+    { index: 5, x: 30, y: 9, tieCount: 1, ties: [5] },
+  ],
   outline: [],
   markScale: null,
   band: [
@@ -132,9 +136,17 @@ describe('the front chart', () => {
   });
 
   it('draws an empty run without a mark', () => {
-    const series = seriesOf({ front: [], band: [], pins: [], selected: null });
+    const series = seriesOf({ front: [], marks: [], band: [], pins: [], selected: null });
     for (const id of ['front', 'front-steps', 'band', 'band-tint', 'pins', 'selected'])
       expect(series.get(id)!.data).toEqual([]);
+  });
+
+  it('marks the front in three measures beside the line of the front in two', () => {
+    const third = { index: 7, x: 24, y: 4, z: 600, tieCount: 1, ties: [7] };
+    const series = seriesOf({ marks: [input.marks[0]!, third, input.marks[1]!] });
+    expect(series.get('front')!.data).toHaveLength(3);
+    expect(series.get('front')!.data[1]).toEqual({ value: [12, 4, 7] });
+    expect(series.get('front-steps')!.data).toEqual(seriesOf().get('front-steps')!.data);
   });
 
   it('reads a section out in its own words', () => {

@@ -1,12 +1,15 @@
 import { MEASURE_DIRECTION } from '#shared/engine/measures.ts';
 import { BandBuilder, MAX_BAND_KEPT } from '#shared/sweep/band.ts';
 import { FrontBuilder } from '#shared/sweep/front.ts';
+import { FrontInThreeBuilder, resultInThree } from '#shared/sweep/front-in-three.ts';
 import type { View } from '#shared/sweep/problem.ts';
-import type { DensityCell, EdgeAxis, FrontPoint, Point } from '#shared/sweep/result.ts';
+import type { DensityCell, EdgeAxis, FrontPoint, Point, ResultInThree } from '#shared/sweep/result.ts';
+import { signOf } from '#shared/sweep/tally.ts';
 import type { ExploreKey } from '#shared/sweep/explore-axis.ts';
 import type { FeasibleColumns } from './feasible-columns.ts';
 import {
   filterEntries,
+  hasFilters,
   highestWithin,
   lowestWithin,
   type RangeFilters,
@@ -41,6 +44,8 @@ export interface Spread {
 export interface Cut {
   readonly count: number;
   readonly front: readonly FrontPoint[];
+  /** Of a view in three measures where ranges are set; without any the run's own is the same. */
+  readonly inThree: ResultInThree | null;
   readonly band: readonly Point[];
   readonly isBandCut: boolean;
   readonly density: readonly DensityCell[] | null;
@@ -90,6 +95,16 @@ function frontOf(columns: FeasibleColumns, view: View, kept: Uint8Array) {
       .map((point) => ({ index: point.index, x: sx * point.x, y: sy * point.y })),
     isBandCut: near.length > MAX_BAND_KEPT,
   };
+}
+
+function inThreeOf(columns: FeasibleColumns, { x, y, z }: View, kept: Uint8Array): ResultInThree | null {
+  if (!z) return null;
+  const [xs, ys, zs] = [columns.measure(x), columns.measure(y), columns.measure(z)];
+  const signs = { x: signOf(x), y: signOf(y), z: signOf(z) };
+  const front = new FrontInThreeBuilder();
+  for (let i = 0; i < kept.length; i++)
+    if (kept[i] === 1) front.add(signs.x * xs[i]!, signs.y * ys[i]!, signs.z * zs[i]!, columns.index[i]!);
+  return resultInThree(front.finish(), signs);
 }
 
 /** Cells of one side. The last one holds its upper end too: a window fitted to the values ends on one of them. */
@@ -180,6 +195,7 @@ export function cutColumns(columns: FeasibleColumns, query: CutQuery): Cut {
   return {
     count: kept.reduce((sum, one) => sum + one, 0),
     ...frontOf(columns, query.view, kept),
+    inThree: hasFilters(query.filters) ? inThreeOf(columns, query.view, kept) : null,
     density: densityOf(columns, query, kept),
     axisCounts: countByAxis(columns, kept),
     spreads: Object.fromEntries(query.keys.map((key) => [key, spreadOf(columns.column(key), kept)])),

@@ -12,9 +12,11 @@ const ALWAYS: View = { x: 'steelKgPerM', y: 'depthMm' };
  */
 export function readableView(run: Run, asked: View, units: UnitSystem): View {
   const { space, demand } = run.definition;
-  const isReadable = ({ x, y }: View) =>
-    [x, y].every(
+  const isReadable = ({ x, y, z }: View) =>
+    [x, y, z ?? x].every(
       (measure) => unavailableReason(measure, { space, demand, basis: run.basis, units }) === null,
     );
-  return [asked, ...run.views.map(({ view }) => view)].find(isReadable) ?? ALWAYS;
+  const inTwo = { x: asked.x, y: asked.y };
+  const others = run.views.map(({ view }) => ({ x: view.x, y: view.y }));
+  return [asked, inTwo, ...others].find(isReadable) ?? ALWAYS;
 }

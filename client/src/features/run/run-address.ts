@@ -33,6 +33,8 @@ export interface RunAddress {
   readonly bandShare: number;
   /** A third measure, told by the marks of the front. */
   readonly third: ExploreKey | null;
+  /** Whether the front in three measures is asked for, the third one with the two of the axes. */
+  readonly isInThree: boolean;
   readonly markStyle: MarkStyle;
   readonly isXLog: boolean;
   readonly isYLog: boolean;
@@ -97,6 +99,7 @@ export function readRunAddress(params: URLSearchParams, first: View): RunAddress
     index: index !== null && /^\d{1,12}$/.test(index) ? Number(index) : null,
     bandShare: readBand(params.get('band')),
     third: third !== null && isExploreKey(third) ? third : null,
+    isInThree: params.get('in') === '3',
     markStyle: oneOf(MARK_STYLES, params.get('as')),
     isXLog: log.includes('x'),
     isYLog: log.includes('y'),
@@ -146,4 +149,10 @@ export function withMeasure(view: View, side: 'x' | 'y', measure: MeasureId): Vi
   const other = side === 'x' ? view.y : view.x;
   const kept = measure === other ? view[side] : other;
   return side === 'x' ? { x: measure, y: kept } : { x: kept, y: measure };
+}
+
+/** The view an address asks for: in three measures where its third is one of them and no axis shows it already. */
+export function askedView({ view: { x, y }, third, isInThree }: RunAddress): View {
+  const isThird = isInThree && isMeasure(third) && third !== x && third !== y;
+  return isThird ? { x, y, z: third } : { x, y };
 }

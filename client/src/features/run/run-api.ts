@@ -9,7 +9,7 @@ import {
   type ViewEvent,
   type ViewProgress,
 } from '#shared/contract/records.ts';
-import type { View } from '#shared/sweep/problem.ts';
+import { isSameView, type View } from '#shared/sweep/problem.ts';
 import { call } from '#client/src/lib/api.ts';
 import { messageOf } from '#client/src/lib/api-error.ts';
 import { apiUrl } from '#client/src/lib/paths.ts';
@@ -24,11 +24,11 @@ export const runQuery = (runId: string) =>
     queryFn: ({ signal }) => call('getRun', { params: { id: runId }, signal }),
   });
 
-const viewKey = (runId: string, view: View) => queryKeys.view(runId, view.x, view.y);
+const viewKey = (runId: string, view: View) => queryKeys.view(runId, view.x, view.y, view.z ?? null);
 
 /** A view the run already has is read; any other is opened, which queues its computation. */
 async function fetchView(run: Run, view: View, signal: AbortSignal): Promise<ViewProgress> {
-  const known = run.views.find((one) => one.view.x === view.x && one.view.y === view.y);
+  const known = run.views.find((one) => isSameView(one.view, view));
   if (known !== undefined) return call('getView', { params: { id: run.id, viewId: known.viewId }, signal });
   return call('openView', { params: { id: run.id }, body: view, signal });
 }
@@ -38,7 +38,7 @@ const ASK_AGAIN_MS = 2500;
 
 export function useView(run: Run | undefined, view: View | null) {
   const client = useQueryClient();
-  return useQuery({
+  return useQuery<ViewProgress>({
     queryKey: run === undefined || view === null ? ['view', 'none'] : viewKey(run.id, view),
     queryFn: async ({ signal, queryKey }) => {
       const answer = await fetchView(run!, view!, signal);
@@ -46,6 +46,9 @@ export function useView(run: Run | undefined, view: View | null) {
     },
     enabled: run !== undefined && view !== null,
     staleTime: Infinity,
+    // The same pair with or without a third measure is the same cloud and the same line: it stays while the other comes.
+    placeholderData: (previous) =>
+      previous?.view.x === view?.x && previous?.view.y === view?.y ? previous : undefined,
     structuralSharing: false,
     refetchInterval: (query) =>
       query.state.data !== undefined && isUnderWay(query.state.data.state) ? ASK_AGAIN_MS : false,

@@ -198,7 +198,7 @@ export function SectionTable(props: SectionTableProps) {
   const columns = useMemo(() => shownColumns(all, address.columns), [all, address.columns]);
   const order = orderOf(address, all);
   const { key: orderKey = null, isDescending = false } = order ?? {};
-  const points = list === 'front' ? shown.front : shown.band;
+  const points = list === 'front' ? shown.listed : shown.band;
   const listed = useMemo(() => rowsOf(points, source), [points, source]);
   const rows = useMemo(
     () =>
@@ -209,7 +209,7 @@ export function SectionTable(props: SectionTableProps) {
     [listed, words, reader.units, orderKey, isDescending],
   );
   const lists: readonly { readonly value: ListName; readonly label: string }[] = [
-    { value: 'front', label: `Front ${shown.front.length}` },
+    { value: 'front', label: `Front ${shown.listed.length}` },
     { value: 'band', label: `Near-best band ${shown.isBandCut ? 'over ' : ''}${shown.band.length}` },
   ];
 

@@ -1,7 +1,7 @@
 import { useCallback, useMemo, useState } from 'react';
 import type { Run } from '#shared/contract/records.ts';
-import type { View } from '#shared/sweep/problem.ts';
-import type { DensityCell, FrontPoint, Point, ViewResult } from '#shared/sweep/result.ts';
+import { isSameView, type View } from '#shared/sweep/problem.ts';
+import type { DensityCell, FrontPoint, Point, ResultInThree, ViewResult } from '#shared/sweep/result.ts';
 import type { ChartLayout, CloudSpot } from '#client/src/charts/front-chart.tsx';
 import { bandWithin } from './band-within.ts';
 import type { Cut, CutQuery } from './cut.ts';
@@ -15,6 +15,10 @@ import { useFeasible, type FeasibleState } from './use-feasible.ts';
 /** What the chart, the strip and the lists show: one set for all of them. */
 export interface Shown {
   readonly front: readonly FrontPoint[];
+  /** Null in two measures, and until it is found. */
+  readonly inThree: ResultInThree | null;
+  /** What has a mark, a drawing and a row: the front, in three measures where that is at hand. */
+  readonly listed: readonly FrontPoint[];
   readonly band: readonly Point[];
   readonly isBandCut: boolean;
   readonly cells: readonly DensityCell[];
@@ -36,7 +40,10 @@ export interface Explore {
   readonly pick: (spot: CloudSpot) => Promise<number | null>;
 }
 
-const NOTHING: Shown = { front: [], band: [], isBandCut: false, cells: [], outline: [], count: null };
+const NOTHING: Shown = {
+  ...{ front: [], inThree: null, listed: [], band: [], isBandCut: false },
+  ...{ cells: [], outline: [], count: null },
+};
 
 interface ExploreInput {
   readonly run: Run;
@@ -86,33 +93,56 @@ function useQuery(
   return { query, onLayout: setLayout };
 }
 
-const isOfView = (of: CutQuery, { x, y }: View): boolean => of.view.x === x && of.view.y === y;
+/** With what is listed of the front beside it. */
+const withListed = (shown: Omit<Shown, 'listed'>): Shown => ({
+  ...shown,
+  listed: shown.inThree !== null && shown.inThree.points.length > 0 ? shown.inThree.points : shown.front,
+});
+
+interface Asked {
+  readonly view: View;
+  readonly result: ViewResult;
+  readonly source: SectionSource;
+}
+
+/** The run's front in three measures; null while another view's result stands in for it. */
+const ofRun = ({ view, result }: Pick<Asked, 'view' | 'result'>): ResultInThree | null =>
+  isSameView(view, result.view) ? (result.frontInThree ?? null) : null;
 
 /** Without the sections at hand, ranges sort out what the run listed by name; its cloud stays whole. */
-function listedShown(result: ViewResult, filters: RangeFilters, share: number, source: SectionSource): Shown {
+function listedShown({ view, result, source }: Asked, filters: RangeFilters, share: number): Shown {
   const isKept = ({ index }: Point) => isWithinFilters(source.evaluatedAt(index), filters);
   const isFiltered = hasFilters(filters);
   const band = bandWithin(result, share);
-  return {
+  const inThree = ofRun({ view, result });
+  return withListed({
     front: isFiltered ? result.front.filter(isKept) : result.front,
+    inThree: isFiltered && inThree !== null ? keptOf(inThree, isKept) : inThree,
     band: isFiltered ? band.filter(isKept) : band,
     isBandCut: result.isBandCut && band.length === result.band.length,
     cells: result.density,
     outline: isFiltered ? result.front : [],
     count: isFiltered ? null : result.feasible,
-  };
+  });
 }
 
-function cutShown(result: ViewResult, cut: Cut, share: number, isFiltered: boolean): Shown {
+function keptOf({ count, points }: ResultInThree, isKept: (point: Point) => boolean): ResultInThree {
+  const kept = points.filter(isKept);
+  // Where not all of them were listed, how many lie within the ranges is not known.
+  return { count: count === points.length ? kept.length : null, points: kept };
+}
+
+function cutShown({ view, result }: Asked, cut: Cut, share: number, isFiltered: boolean): Shown {
   const band = bandWithin({ view: result.view, front: cut.front, band: cut.band }, share);
-  return {
+  return withListed({
     front: isFiltered ? cut.front : result.front,
+    inThree: isFiltered ? cut.inThree : ofRun({ view, result }),
     band: isFiltered ? band : bandWithin(result, share),
     isBandCut: cut.isBandCut && band.length === cut.band.length,
     cells: cut.density ?? result.density,
     outline: isFiltered ? result.front : [],
     count: cut.count,
-  };
+  });
 }
 
 export function useExplore(input: ExploreInput): Explore {
@@ -122,13 +152,14 @@ export function useExplore(input: ExploreInput): Explore {
   const feasible = useFeasible(run, { isFinished, feasible: result?.feasible ?? null }, query);
   const { bandShare, isXLog, isYLog } = address;
   const answered = feasible.cut;
-  const cut = answered !== null && isOfView(answered.of, view) ? answered : null;
+  const cut = answered !== null && isSameView(answered.of.view, view) ? answered : null;
 
   const shown = useMemo(() => {
     if (result === null) return NOTHING;
-    if (cut === null) return listedShown(result, filters, bandShare, source);
-    return cutShown(result, cut.cut, bandShare, filtersText(cut.of.filters) !== null);
-  }, [result, cut, filters, bandShare, source]);
+    const asked = { view, result, source };
+    if (cut === null) return listedShown(asked, filters, bandShare);
+    return cutShown(asked, cut.cut, bandShare, filtersText(cut.of.filters) !== null);
+  }, [view, result, cut, filters, bandShare, source]);
 
   const { pick: ask } = feasible;
   const pick = useCallback(

@@ -1,7 +1,7 @@
 import { useDeferredValue, useMemo } from 'react';
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Run } from '#shared/contract/records.ts';
-import type { View } from '#shared/sweep/problem.ts';
+import { viewOf, type View } from '#shared/sweep/problem.ts';
 import type { Point, ViewResult } from '#shared/sweep/result.ts';
 import type { ExploreKey } from '#shared/sweep/explore-axis.ts';
 import { exploreKeys, usualAxes } from './explore-keys.ts';
@@ -10,6 +10,7 @@ import { readableView } from './readable-view.ts';
 import { useCancelRun, useRunEvents, useView } from './run-api.ts';
 import { createSectionSource, type EvaluatedSection, type SectionSource } from './section-source.ts';
 import { useExplore } from './use-explore.ts';
+import { askedView } from './run-address.ts';
 import { useRunAddress } from './use-run-address.ts';
 import { isUnderWay } from './view-progress.ts';
 
@@ -46,8 +47,8 @@ function useProgress(run: Run, view: View) {
 /** Everything a run's page shows, from the address, the service and the engine. */
 export function useRunView(run: Run, units: UnitSystem) {
   const address = useRunAddress(run.definition.view);
-  const { x, y } = address.view;
-  const view = useMemo(() => readableView(run, { x, y }, units), [run, x, y, units]);
+  const { x, y, z } = askedView(address);
+  const view = useMemo(() => readableView(run, viewOf({ x, y, z }), units), [run, x, y, z, units]);
   const { definition, basis } = run;
   const source = useMemo(() => createSectionSource({ definition, basis }), [definition, basis]);
   const reader = useMemo(
