@@ -8,6 +8,7 @@ import { beams } from '../db/schema/beams.ts';
 import { candidateComments } from '../db/schema/candidate-comments.ts';
 import { candidateTransitions } from '../db/schema/candidate-transitions.ts';
 import { candidates } from '../db/schema/candidates.ts';
+import { officeStandards } from '../db/schema/office-standards.ts';
 import { people } from '../db/schema/people.ts';
 import { projectMembers } from '../db/schema/project-members.ts';
 import { projects } from '../db/schema/projects.ts';
@@ -21,6 +22,7 @@ import type { DemoRun } from './office.ts';
 import { ownValuesOf } from './own-values.ts';
 import { DEMO_PROJECTS } from './projects.ts';
 import { DEMO_CANDIDATES, type DemoCandidate } from './shortlist.ts';
+import { DEMO_STANDARDS } from './standards.ts';
 import { stableId } from './stable-id.ts';
 
 /** The demo's first day. Fixed, so that two demos tell the same story. */
@@ -50,6 +52,7 @@ export async function writeOffice(
       createdAt: dateOf(0),
     })),
   );
+  await writeStandards(tx);
   await writeProjects(tx);
   for (const run of demoRuns) await writeRun(tx, run);
   const pinned = new Map<string, number>();
@@ -59,6 +62,17 @@ export async function writeOffice(
     pinned.set(run.sweep.project, position + 1);
     await writeCandidate(tx, candidate, { run, label: labelOf(position) });
   }
+}
+
+async function writeStandards(tx: Database): Promise<void> {
+  await tx.insert(officeStandards).values(
+    DEMO_STANDARDS.map(({ key, standard: { name, units, barStandard, ...standard } }) => ({
+      ...{ name, units, barStandard, standard },
+      id: stableId(`standard/${key}`),
+      updatedBy: personId('admin'),
+      updatedAt: dateOf(0),
+    })),
+  );
 }
 
 async function writeProjects(tx: Database): Promise<void> {

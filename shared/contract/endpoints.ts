@@ -1,9 +1,11 @@
 import type { z } from 'zod';
 import { candidateEndpoints } from './endpoints/candidate-endpoints.ts';
 import { officeEndpoints } from './endpoints/office-endpoints.ts';
+import { officeStandardEndpoints } from './endpoints/office-standard-endpoints.ts';
 import { operationsEndpoints } from './endpoints/operations-endpoints.ts';
 import { projectEndpoints } from './endpoints/project-endpoints.ts';
 import { runEndpoints } from './endpoints/run-endpoints.ts';
+import { savedViewEndpoints } from './endpoints/saved-view-endpoints.ts';
 import { shareLinkEndpoints } from './endpoints/share-link-endpoints.ts';
 import { sweepEndpoints } from './endpoints/sweep-endpoints.ts';
 
@@ -13,9 +15,11 @@ import { sweepEndpoints } from './endpoints/sweep-endpoints.ts';
  */
 export const endpoints = {
   ...officeEndpoints,
+  ...officeStandardEndpoints,
   ...projectEndpoints,
   ...sweepEndpoints,
   ...runEndpoints,
+  ...savedViewEndpoints,
   ...candidateEndpoints,
   ...shareLinkEndpoints,
   ...operationsEndpoints,

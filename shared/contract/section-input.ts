@@ -131,23 +131,24 @@ export const demandSchema = z.object({
   support: z.enum(SUPPORTS).nullable().optional(),
 }) satisfies z.ZodType<Demand>;
 
-export const userRulesSchema = z
-  .object({
-    minDepthToWidth: bounded('Least h/b', 0.1, 20, '').nullable(),
-    maxDepthToWidth: bounded('Largest h/b', 0.1, 20, '').nullable(),
-    maxLayers: wholeCount('Layers', 1, 4),
-    oneSizePerFace: z.boolean(),
-    excludedBars: z.array(barDesignationSchema).max(40),
-    columnWidthMm: widthMmSchema.nullable(),
-    minCompressionShare: bounded('Least A′s/As', 0, 1, '').nullable(),
-    requireHangers: z.boolean(),
-  })
-  .superRefine((rules, ctx) => {
-    const { minDepthToWidth: low, maxDepthToWidth: high } = rules;
-    if (low !== null && high !== null && low > high)
-      ctx.addIssue({
-        code: 'custom',
-        path: ['maxDepthToWidth'],
-        message: 'Largest h/b is below the least h/b',
-      });
-  }) satisfies z.ZodType<UserRules>;
+/** The rules one by one; how they go together is asked by `userRulesSchema`. */
+export const userRulesObjectSchema = z.object({
+  minDepthToWidth: bounded('Least h/b', 0.1, 20, '').nullable(),
+  maxDepthToWidth: bounded('Largest h/b', 0.1, 20, '').nullable(),
+  maxLayers: wholeCount('Layers', 1, 4),
+  oneSizePerFace: z.boolean(),
+  excludedBars: z.array(barDesignationSchema).max(40),
+  columnWidthMm: widthMmSchema.nullable(),
+  minCompressionShare: bounded('Least A′s/As', 0, 1, '').nullable(),
+  requireHangers: z.boolean(),
+});
+
+export const userRulesSchema = userRulesObjectSchema.superRefine((rules, ctx) => {
+  const { minDepthToWidth: low, maxDepthToWidth: high } = rules;
+  if (low !== null && high !== null && low > high)
+    ctx.addIssue({
+      code: 'custom',
+      path: ['maxDepthToWidth'],
+      message: 'Largest h/b is below the least h/b',
+    });
+}) satisfies z.ZodType<UserRules>;

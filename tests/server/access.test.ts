@@ -2,22 +2,35 @@ import { randomUUID } from 'node:crypto';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { endpoints, type EndpointName } from '#shared/contract/endpoints.ts';
 import { ROLES, type Role } from '#shared/contract/records.ts';
-import { beamInput, designBasis, evaluateInput, priceBook, sweepDefinition } from '../support/factories.ts';
+import {
+  beamInput,
+  designBasis,
+  evaluateInput,
+  officeStandard,
+  priceBook,
+  sweepDefinition,
+} from '../support/factories.ts';
 import { openBrowser, signedIn, type SignedIn } from '../support/signed-in.ts';
 import { useTestService } from '../support/test-service.ts';
 import { createWorld, type World } from '../support/world.ts';
 
 const EVERYBODY = ROLES;
 const DESIGNERS: readonly Role[] = ['admin', 'engineer'];
+const OFFICE: readonly Role[] = ['admin', 'engineer', 'checker', 'estimator'];
 
 /** One call of an endpoint: the id in its path, its body, and the roles whose members it serves. */
 interface Rule {
   id?: (world: World) => string;
+  /** Of a thing of the office, which everybody in it may ask for. */
+  officeId?: () => string;
   body?: (world: World) => object;
   serves: readonly Role[];
 }
 
 const project = (world: World) => world.project;
+let standardIds: string[];
+const standardInput = () => ({ ...officeStandard, name: randomUUID() });
+const savedView = ({ run }: World) => ({ name: randomUUID(), runId: run, address: { x: 'depthMm' } });
 const sweepInput = () => ({ name: 'Renamed', definition: sweepDefinition });
 const pin = (world: World) => ({
   beamId: world.beam,
@@ -34,6 +47,10 @@ const RULES: Record<
   Rule
 > = {
   listPeople: { serves: DESIGNERS },
+  listOfficeStandards: { serves: OFFICE },
+  createOfficeStandard: { serves: ['admin'], body: standardInput },
+  updateOfficeStandard: { officeId: () => standardIds[0]!, serves: ['admin'], body: standardInput },
+  deleteOfficeStandard: { officeId: () => standardIds[1]!, serves: ['admin'] },
   listProjects: { serves: EVERYBODY },
   createProject: { serves: DESIGNERS, body: () => ({ name: 'New', number: randomUUID(), designBasis }) },
   getProject: { id: project, serves: EVERYBODY },
@@ -59,6 +76,11 @@ const RULES: Record<
   openView: { id: (w) => w.run, serves: EVERYBODY, body: () => ({ x: 'steelKgPerM', y: 'widthMm' }) },
   getView: { id: (w) => w.run, serves: EVERYBODY },
   getSection: { id: (w) => w.run, serves: EVERYBODY },
+  listSavedViews: { id: project, serves: EVERYBODY },
+  createSavedView: { id: (w) => w.sweep, serves: OFFICE, body: savedView },
+  // Whoever made it may too, and whoever leads the project: see saved-views.test.ts.
+  updateSavedView: { id: (w) => w.savedView, serves: ['admin'], body: savedView },
+  deleteSavedView: { id: (w) => w.savedView, serves: ['admin'] },
   evaluate: { id: project, serves: EVERYBODY, body: () => evaluateInput },
   listCandidates: { id: project, serves: EVERYBODY },
   pinCandidate: { id: project, serves: DESIGNERS, body: pin },
@@ -89,12 +111,16 @@ const service = useTestService();
 let author: SignedIn;
 beforeAll(async () => {
   author = await signedIn(service, 'engineer');
+  const admin = await signedIn(service, 'admin');
+  standardIds = [];
+  for (const body of [standardInput(), standardInput()])
+    standardIds.push((await admin.post('/office-standards', body).expect(200)).body.id);
 });
 
 function callAs(caller: Pick<SignedIn, 'call'>, name: keyof typeof RULES, world: World, id?: string) {
   const rule = RULES[name];
   const path = endpoints[name].path
-    .replace(':id', id ?? rule.id?.(world) ?? '')
+    .replace(':id', id ?? rule.id?.(world) ?? rule.officeId?.() ?? '')
     .replace(':viewId', world.view)
     .replace(':index', '7');
   const call = caller.call(endpoints[name].method, path);

@@ -1,5 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import type { PriceBook, ProjectDesignBasis } from '#shared/contract/design-basis.ts';
+import type { OfficeStandardInput } from '#shared/contract/office-standard.ts';
 import type { BeamInput, EvaluateInput, Person, Role } from '#shared/contract/records.ts';
 import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
 import { beams } from '#server/db/schema/beams.ts';
@@ -45,6 +46,38 @@ export const designBasis: ProjectDesignBasis = {
   fyMPa: 420,
   fytMPa: 420,
   coverMm: 40,
+};
+
+export const officeStandard: OfficeStandardInput = {
+  name: 'Metric, EN bars',
+  units: 'si',
+  barStandard: 'iso',
+  bars: {
+    tension: ['16', '20', '25'],
+    compression: ['16', '20'],
+    stirrups: [{ bar: '10', legs: 2, spacingMm: 150 }],
+  },
+  mixesMPa: [25, 30],
+  increments: { widthMm: 50, depthMm: 50 },
+  rules: {
+    minDepthToWidth: 1,
+    maxDepthToWidth: 3,
+    maxLayers: 2,
+    oneSizePerFace: true,
+    minCompressionShare: null,
+    requireHangers: true,
+  },
+  ranges: [
+    {
+      name: 'Floor beams',
+      leastWidthMm: 250,
+      mostWidthMm: 450,
+      leastDepthMm: 400,
+      mostDepthMm: 800,
+      tensionCounts: [2, 3, 4, 5, 6],
+      compressionCounts: [2, 3],
+    },
+  ],
 };
 
 export const priceBook: PriceBook = {

@@ -1,3 +1,4 @@
+import { randomUUID } from 'node:crypto';
 import type { Candidate, Person, Run } from '#shared/contract/records.ts';
 import { createBeam, createProject, createSweep, evaluateInput } from './factories.ts';
 import type { SignedIn } from './signed-in.ts';
@@ -16,6 +17,7 @@ export interface World {
   candidate: string;
   shareLink: string;
   shareToken: string;
+  savedView: string;
 }
 
 export async function createWorld(
@@ -32,6 +34,8 @@ export async function createWorld(
   const run: Run = (await author.post(`/sweeps/${sweep.id}/runs`).expect(200)).body;
   const pin = { beamId: beam.id, source: { kind: 'section', section: evaluateInput.section }, note: '' };
   const pinned: Candidate = (await author.post(`/projects/${project.id}/candidates`, pin).expect(200)).body;
+  const view = { name: randomUUID(), runId: run.id, address: { x: 'costPerM', y: 'depthMm' } };
+  const saved = (await author.post(`/sweeps/${sweep.id}/saved-views`, view).expect(200)).body;
   const link = (await author.post(`/projects/${project.id}/share-links`).expect(200)).body;
   return {
     project: project.id,
@@ -45,5 +49,6 @@ export async function createWorld(
     candidate: pinned.id,
     shareLink: link.id,
     shareToken: link.token,
+    savedView: saved.id,
   };
 }
