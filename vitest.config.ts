@@ -3,6 +3,9 @@ import { defineConfig } from 'vitest/config';
 
 const SERVER_GLOBAL_SETUP = './tests/support/global-setup.ts';
 
+/** For what never ends, not for what is slow: the machine may be shared. */
+const HANG_MS = 180_000;
+
 export default defineConfig({
   test: {
     passWithNoTests: true,
@@ -12,9 +15,9 @@ export default defineConfig({
         test: {
           name: 'unit',
           include: ['tests/{engine,sweep,contract,published,print,drawing,sheet}/**/*.test.ts'],
-          // thousands of random sections; the limit is for a hang, not for speed
-          testTimeout: 400_000,
-          sequence: { groupOrder: 0 },
+          testTimeout: HANG_MS,
+          // Pure functions: one load of the engine serves every file.
+          isolate: false,
         },
       },
       {
@@ -23,7 +26,8 @@ export default defineConfig({
           name: 'client',
           include: ['tests/client/**/*.test.{ts,tsx}'],
           environment: 'happy-dom',
-          sequence: { groupOrder: 0 },
+          testTimeout: HANG_MS,
+          isolate: false,
         },
       },
       {
@@ -31,9 +35,8 @@ export default defineConfig({
           name: 'server',
           include: ['tests/server/**/*.test.ts'],
           globalSetup: SERVER_GLOBAL_SETUP,
-          testTimeout: 20_000,
-          hookTimeout: 60_000,
-          sequence: { groupOrder: 0 },
+          testTimeout: HANG_MS,
+          hookTimeout: HANG_MS,
         },
       },
       {
@@ -43,10 +46,9 @@ export default defineConfig({
           include: ['tests/e2e/**/*.test.ts'],
           globalSetup: SERVER_GLOBAL_SETUP,
           fileParallelism: false,
-          testTimeout: 400_000,
-          hookTimeout: 180_000,
+          testTimeout: HANG_MS,
+          hookTimeout: HANG_MS,
           expect: { poll: { timeout: 15_000 } },
-          sequence: { groupOrder: 1 },
         },
       },
     ],

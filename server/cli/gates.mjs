@@ -33,6 +33,7 @@ async function checkBuild() {
 const GATES = [
   { name: 'types', check: npmScript('typecheck') },
   { name: 'lint', check: npmScript('lint') },
+  { name: 'lint by types', check: npmScript('lint:types') },
   { name: 'import directions', check: npmScript('boundaries') },
   { name: 'unused code', check: npmScript('unused') },
   { name: 'format', check: npmScript('format:check') },

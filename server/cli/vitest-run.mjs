@@ -4,18 +4,20 @@ import { PROJECT_ROOT, TEST_FOLDER } from './project-paths.mjs';
 import { runProgram } from './run-program.mjs';
 
 /**
- * Runs every test project and counts. A test file that cannot even be loaded counts as one failure, and so does a run
- * that ends red for any other reason (an unhandled error, a crash).
+ * Runs some of the test projects and counts. A test file that cannot even be loaded counts as one failure, and so does a
+ * run that ends red for any other reason (an unhandled error, a crash).
  *
- * @param {string[]} filters handed on to vitest
+ * @param {readonly string[]} projects
+ * @param {readonly string[]} filters handed on to vitest
  */
-export async function runTests(filters) {
+export async function runTests(projects, filters) {
   fs.mkdirSync(TEST_FOLDER, { recursive: true });
-  const report = path.join(TEST_FOLDER, 'vitest.json');
+  const report = path.join(TEST_FOLDER, `vitest-${projects.join('-')}.json`);
   fs.rmSync(report, { force: true });
   const vitest = path.join(PROJECT_ROOT, 'node_modules', 'vitest', 'vitest.mjs');
   const reporters = ['--reporter=default', '--reporter=json', `--outputFile.json=${report}`];
-  const { code } = await runProgram(process.execPath, [vitest, 'run', ...reporters, ...filters], {
+  const chosen = projects.map((project) => `--project=${project}`);
+  const { code } = await runProgram(process.execPath, [vitest, 'run', ...chosen, ...reporters, ...filters], {
     cwd: PROJECT_ROOT,
     environment: { NODE_ENV: 'test' },
   });
