@@ -30,7 +30,7 @@ const MAX_STATE_CHANGES = 12;
  * there is an equilibrium with them inside the block, which gives the lower ductility.
  *
  * With a flange in compression the block has the flange's width to its thickness and the web's below: two such quadratics,
- * the lower one with the overhang's whole force as a constant, of which the one whose root lies in its own part holds.
+ * the lower one with the overhang's whole force as a constant; which of them holds is part of the state.
  *
  * Shared by `evaluateSection` and the sweep's hot loop. Returns NaN where no equilibrium exists (no steel in tension).
  */
@@ -52,15 +52,14 @@ export function neutralAxisDepth(
       }
     }
   }
-  if (k.overhangForceN !== 0) {
-    const inFlange = rootWithDeducted(depths, areas, n, k, deducted, true);
-    if (inFlange <= k.flangeReachMm) return inFlange;
-  }
-  return rootWithDeducted(depths, areas, n, k, deducted, false);
+  return rootWithDeducted(depths, areas, n, k, deducted);
 }
 
-/** Compression minus tension, N, with the axis at c and the first `deducted` layers displacing concrete. */
-function unbalancedForce(
+/**
+ * Compression minus tension, N, with the axis at c and the first `deducted` layers displacing concrete. A layer at
+ * Infinity yields.
+ */
+export function unbalancedForce(
   depths: Float64Array,
   areas: Float64Array,
   n: number,
@@ -80,50 +79,52 @@ function unbalancedForce(
   return force;
 }
 
-/** The one root with a fixed set of deducted layers, the block taken to lie in the flange or to reach below it. */
+/** The one root with a fixed set of deducted layers: the axis that is the root of its own state. */
 function rootWithDeducted(
   depths: Float64Array,
   areas: Float64Array,
   n: number,
   k: UltimateConstants,
   deducted: number,
-  isInFlange: boolean,
 ): number {
-  const forcePerMm = isInFlange ? k.flangeForcePerMm : k.blockForcePerMm;
-  const yieldRatio = k.fyMPa / (k.esMPa * k.epsilonCu);
-  const elasticStress = k.esMPa * k.epsilonCu;
-  let displaced = 0;
-  for (let i = 0; i < deducted; i++) displaced += areas[i]!;
-  displaced *= k.blockStressMPa;
-
   let c = 0.25 * depths[n - 1]!;
-  let lastState = -1;
   for (let change = 0; change < MAX_STATE_CHANGES; change++) {
-    const tensionYieldDepth = (1 + yieldRatio) * c;
-    const compressionYieldDepth = (1 - yieldRatio) * c;
-    let p = (isInFlange ? 0 : k.overhangForceN) - displaced;
-    let q = 0;
-    let state = 0;
-    for (let i = 0; i < n; i++) {
-      const d = depths[i]!;
-      const a = areas[i]!;
-      if (d >= tensionYieldDepth) {
-        p -= a * k.fyMPa;
-        state = state * 3;
-      } else if (d <= compressionYieldDepth) {
-        p += a * k.fyMPa;
-        state = state * 3 + 2;
-      } else {
-        p += a * elasticStress;
-        q += a * elasticStress * d;
-        state = state * 3 + 1;
-      }
-    }
-    if (state === lastState) return c;
-    lastState = state;
-    c = positiveRoot(forcePerMm, p, q);
+    const next = rootOfState(depths, areas, n, k, deducted, c);
+    if (next === c) return c;
+    c = next;
   }
   return bracketedRoot(depths, areas, n, k, deducted);
+}
+
+/** Root for the state at an axis c: which layers yield, and whether the block lies in the flange. */
+function rootOfState(
+  depths: Float64Array,
+  areas: Float64Array,
+  n: number,
+  k: UltimateConstants,
+  deducted: number,
+  c: number,
+): number {
+  const yieldRatio = k.fyMPa / (k.esMPa * k.epsilonCu);
+  const elasticStress = k.esMPa * k.epsilonCu;
+  const tensionYieldDepth = (1 + yieldRatio) * c;
+  const compressionYieldDepth = (1 - yieldRatio) * c;
+  const isInFlange = k.overhangForceN !== 0 && c <= k.flangeReachMm;
+  let displaced = 0;
+  for (let i = 0; i < deducted; i++) displaced += areas[i]!;
+  let p = (isInFlange ? 0 : k.overhangForceN) - displaced * k.blockStressMPa;
+  let q = 0;
+  for (let i = 0; i < n; i++) {
+    const d = depths[i]!;
+    const a = areas[i]!;
+    if (d >= tensionYieldDepth) p -= a * k.fyMPa;
+    else if (d <= compressionYieldDepth) p += a * k.fyMPa;
+    else {
+      p += a * elasticStress;
+      q += a * elasticStress * d;
+    }
+  }
+  return positiveRoot(isInFlange ? k.flangeForcePerMm : k.blockForcePerMm, p, q);
 }
 
 /** Positive root of α c² + P c − Q = 0, in the form that does not cancel. */
@@ -132,7 +133,10 @@ function positiveRoot(alpha: number, p: number, q: number): number {
   return p > 0 ? (2 * q) / (p + root) : (root - p) / (2 * alpha);
 }
 
-/** Bisection to the last bit, for the rare state cycle. */
+/**
+ * For states that follow each other in a circle (one section in forty of a wild mixture): bisection until the axis in hand
+ * has the root's own state, so that the root is the same wherever it was looked for from.
+ */
 function bracketedRoot(
   depths: Float64Array,
   areas: Float64Array,
@@ -146,6 +150,8 @@ function bracketedRoot(
   for (;;) {
     const mid = 0.5 * (low + high);
     if (mid <= low || mid >= high) return mid;
+    const c = rootOfState(depths, areas, n, k, deducted, mid);
+    if (rootOfState(depths, areas, n, k, deducted, c) === c) return c;
     if (unbalancedForce(depths, areas, n, k, mid, deducted) > 0) high = mid;
     else low = mid;
   }

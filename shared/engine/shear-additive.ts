@@ -47,14 +47,20 @@ export const hasLeastStirrups = (k: AdditiveShear, spacingMm: number) =>
 /** Vs, N: Av fyt d/s (22.5.8.5.3), counted up to the section limit (22.5.1.2). */
 export function stirrupShearN(k: AdditiveShear, dMm: number, spacingMm = k.spacingMm): number {
   if (k.avMm2 === 0) return 0;
-  const carried = (k.avMm2 * Math.min(k.fytMPa, k.rules.fytCapMPa) * dMm) / spacingMm;
+  const carried = (stirrupForceFactor(k) * dMm) / spacingMm;
   return Math.min(carried, largestStirrupShearN(k, dMm));
 }
 
+/** Av fyt, N: Vs is this times d/s. */
+export const stirrupForceFactor = (k: AdditiveShear) => k.avMm2 * Math.min(k.fytMPa, k.rules.fytCapMPa);
+
 /** Vs counts up to this, N (22.5.1.2). */
 export function largestStirrupShearN(k: AdditiveShear, dMm: number): number {
-  return k.rules.largestStirrupShare * k.rootFc * k.widthMm * dMm;
+  return largestStirrupFactor(k) * dMm;
 }
+
+/** The same over d, N/mm. */
+export const largestStirrupFactor = (k: AdditiveShear) => k.rules.largestStirrupShare * k.rootFc * k.widthMm;
 
 /** φVn, N. */
 export function phiVnN(k: AdditiveShear, dMm: number, concreteN: number, spacingMm: number): number {

@@ -1,2 +1,2 @@
 /** Stamped on every stored result. Raise it whenever a released number can change, and say why in DEVELOPERS.md. */
-export const ENGINE_VERSION = '1.1.0';
+export const ENGINE_VERSION = '1.2.0';

@@ -2,7 +2,8 @@ import { barCoverMm } from '../engine/checks-detailing.ts';
 import { isAtLeastTimes, isSameLength, isWithinLength } from '../engine/limits.ts';
 import type { DesignBasis, UserRules } from '../engine/section.ts';
 import type { SeismicRules } from '../engine/rules/seismic-rules.ts';
-import { concreteShearN, designShearN, detailingSpacingMm, stirrupSpacingLimitMm } from '../engine/shear.ts';
+import { designShearN, detailingSpacingMm } from '../engine/shear.ts';
+import { largestStirrupFactor, stirrupForceFactor } from '../engine/shear-additive.ts';
 import { skinBarsPerSide, skinKgPerM } from '../engine/skin-steel.ts';
 import {
   designSpacingMm,
@@ -29,7 +30,9 @@ import {
   SKIN_STEEL,
   STIRRUP_SPACING,
 } from './kernel-places.ts';
+import { KernelShear } from './kernel-shear.ts';
 import type { PreparedSweep } from './prepared-sweep.ts';
+import type { RowColumns } from './row-columns.ts';
 
 /** The checks that look neither at the depth nor at the numbers. */
 export function fixedMask(
@@ -64,10 +67,6 @@ const barOr = (diameterMm: number, none: number) => (diameterMm === diameterMm ?
 
 /** Crack control, ties, stirrups and side bars of one row of depths, with the spacing and skin steel the weights take. */
 export class KernelDetailing {
-  /** Spacing of the stirrups of the section last looked at, mm. */
-  spacingMm = Infinity;
-  skinKg = 0;
-
   private readonly at = spacingState();
   private readonly basis: DesignBasis;
   private readonly vuN: number;
@@ -75,11 +74,13 @@ export class KernelDetailing {
   private readonly rules = spacingRules();
   private readonly books: SpacingBooks;
   private readonly setting: SpacingSetting;
+  private givenSpacingMm = Infinity;
   private hasStirrups = false;
   private isDesigned = false;
   private isTieTooSmall = false;
   /** Whether hoops are asked, and are there and thick enough. */
   private hasHoopLimit = false;
+  /** Checks of placed bars that no depth changes. */
   private placedMask = 0;
   private tiesMm = Infinity;
   private isTieWithinDepth = false;
@@ -89,11 +90,15 @@ export class KernelDetailing {
   private allowedSkinMm = NaN;
 
   private readonly prepared: PreparedSweep;
+  private readonly columns: RowColumns;
+  private readonly shear: KernelShear;
 
-  constructor(prepared: PreparedSweep) {
+  constructor(prepared: PreparedSweep, columns: RowColumns) {
     this.prepared = prepared;
+    this.columns = columns;
     this.basis = prepared.problem.basis;
     this.vuN = prepared.problem.demand.vuN ?? NaN;
+    this.shear = new KernelShear(columns, this.vuN);
     this.at.vuN = this.vuN;
     const { ruleSet, seismic, skin } = prepared;
     this.books = { basis: this.basis, ruleSet, seismic };
@@ -111,9 +116,7 @@ export class KernelDetailing {
     this.combination = combination;
     this.isDesigned = given?.isDesigned === true;
     this.at.asMm2 = tension.areaMm2;
-    this.at.hasSkin = false;
-    this.spacingMm = given?.spacingMm ?? Infinity;
-    this.skinKg = 0;
+    this.givenSpacingMm = given?.spacingMm ?? Infinity;
     this.hasStirrups = stirrupBar !== null;
     if (given && stirrupBar) {
       const { setting } = this;
@@ -185,67 +188,133 @@ export class KernelDetailing {
     });
   }
 
-  /** Checks of a section of depth h (mm) that want no placed bars: ties of stirrups as given, and least depth. */
-  sizeMask(h: number): number {
-    let mask = isWithinLength(this.leastDepthMm, h) ? 0 : LEAST_DEPTH;
-    if (this.isTieTooSmall || (!this.isDesigned && !this.isTied(this.spacingMm, h))) mask |= COMPRESSION_TIES;
-    return mask;
+  /** Adds what sections at places [from, to) fail without placed bars: ties of stirrups as given, and least depth. */
+  addSizeMasks(from: number, to: number): void {
+    const { leastDepthMm } = this;
+    const { h, masks } = this.columns;
+    // depths ascend, so what the first one meets all of them meet
+    if (!isWithinLength(leastDepthMm, h[from]!))
+      for (let j = from; j < to; j++) if (!isWithinLength(leastDepthMm, h[j]!)) masks[j]! |= LEAST_DEPTH;
+    const isTieSought =
+      this.isTieTooSmall || (!this.isDesigned && !this.isTied(this.givenSpacingMm, h[from]!));
+    if (!isTieSought) return;
+    for (let j = from; j < to; j++)
+      if (this.isTieTooSmall || !this.isTied(this.givenSpacingMm, h[j]!)) masks[j]! |= COMPRESSION_TIES;
   }
 
   private isTied(spacingMm: number, h: number): boolean {
     return isWithinLength(spacingMm, this.tiesMm) && (!this.isTieWithinDepth || isWithinLength(spacingMm, h));
   }
 
-  /** Checks of placed bars: `j` is the depth's place in the space, `innermostMm` the tension layer nearest mid-depth. */
-  placedMaskAt(j: number, h: number, d: number, innermostMm: number): number {
-    let mask = this.placedMask;
-    const { deep } = this.prepared;
-    if (deep !== null) mask |= this.skinMask(deep[j] === 1, h, innermostMm);
-    if (this.spanToDepth !== null) mask |= this.deflectionMask(this.spanToDepth, d);
-    if (this.isDesigned) mask |= this.designMask(h, d);
-    else if (this.vuN === this.vuN) mask |= this.givenMask(d);
-    if (this.hasHoopLimit && !isWithinLength(this.spacingMm, hoopLimitMm(this.rules, d, h, this.at.hasSkin)))
-      mask |= HOOP_SPACING;
-    return mask;
+  /** Spacing and skin steel of sections at places [from, to), and what their placed bars fail. */
+  addPlacedMasks(from: number, to: number): void {
+    const { placedMask } = this;
+    const { masks, spacingMm, skinKg } = this.columns;
+    if (placedMask !== 0) for (let j = from; j < to; j++) masks[j]! |= placedMask;
+    if (this.prepared.deep === null) skinKg.fill(0, from, to);
+    else this.addSkin(this.prepared.deep, from, to);
+    if (this.spanToDepth !== null) this.addDeflection(this.spanToDepth, from, to);
+    if (this.isDesigned) this.addDesign(from, to);
+    else {
+      spacingMm.fill(this.givenSpacingMm, from, to);
+      if (this.vuN === this.vuN) this.addGiven(from, to);
+    }
+    if (this.hasHoopLimit) this.addHoops(from, to);
   }
 
-  private deflectionMask(at: SpanToDepthAt, d: number): number {
-    const leastMm = leastEffectiveDepthMm(this.prepared.ruleSet.largestSpanToDepth!, at, d);
-    return isWithinLength(leastMm, d) ? 0 : LEAST_DEPTH;
-  }
-
-  private skinMask(isDeep: boolean, h: number, innermostMm: number): number {
-    this.at.hasSkin = false;
-    this.skinKg = 0;
-    if (!isDeep) return 0;
+  private addSkin(deep: Uint8Array, from: number, to: number): void {
+    const { tension } = this.combination!;
+    const { h, dt, masks, skinKg } = this.columns;
+    const { allowedSkinMm } = this;
     const bar = this.prepared.skin?.bar ?? null;
-    if (!bar) return SKIN_STEEL;
-    const perSide = skinBarsPerSide(h, innermostMm, this.allowedSkinMm);
-    if (perSide !== perSide) return SKIN_STEEL;
-    this.at.hasSkin = perSide > 0;
-    this.skinKg = skinKgPerM(perSide, bar.massKgPerM);
-    return 0;
+    const innermostMm = tension.offsets[tension.layerCount - 1]!;
+    for (let j = from; j < to; j++) {
+      skinKg[j] = 0;
+      if (deep[j] !== 1) continue;
+      const innermost = tension.shareOfDepth === 0 ? h[j]! - innermostMm : dt[j]!;
+      const perSide = bar ? skinBarsPerSide(h[j]!, innermost, allowedSkinMm) : NaN;
+      if (perSide === perSide) skinKg[j] = skinKgPerM(perSide, bar!.massKgPerM);
+      else masks[j]! |= SKIN_STEEL;
+    }
   }
 
-  private designMask(h: number, d: number): number {
+  private addDeflection(at: SpanToDepthAt, from: number, to: number): void {
+    const { d, masks } = this.columns;
+    const largest = this.prepared.ruleSet.largestSpanToDepth!;
+    for (let j = from; j < to; j++)
+      if (!isWithinLength(leastEffectiveDepthMm(largest, at, d[j]!), d[j]!)) masks[j]! |= LEAST_DEPTH;
+  }
+
+  private addGiven(from: number, to: number): void {
+    const { givenMasks } = this.shear.given(this.combination!, from, to);
+    const { masks } = this.columns;
+    for (let j = from; j < to; j++) masks[j]! |= givenMasks[j]!;
+  }
+
+  /** Spacing by `designSpacingMm`, its limits that the depths of many rows share worked out once. */
+  private addDesign(from: number, to: number): void {
+    const { rules, vuN, tiesMm, isTieWithinDepth } = this;
+    const { shear } = this.combination!;
+    const { h, d, masks, spacingMm, skinKg } = this.columns;
+    const { limitMm, detailMm, concreteN } = this.shear.designed(this.combination!, rules, from, to);
+    const { stepMm, leastMm } = rules;
+    const tiedMm = Math.min(rules.tiesMm, rules.leastSideMm);
+    const isDepthTied = rules.leastSideMm !== Infinity;
+    const ofBars = Math.min(tiedMm, rules.hoopsByBarsMm);
+    const ofBarsWithSkin = Math.min(tiedMm, rules.hoopsByBarsWithSkinMm);
+    const leastAreaMm = shear.avMm2 / shear.leastAvPerMm;
+    const isAsked = vuN === vuN;
+    const isAdditive = shear.form === 'additive';
+    const reduction = isAdditive ? shear.rules.reduction : NaN;
+    const forceFactor = isAdditive ? stirrupForceFactor(shear) : NaN;
+    const largestFactor = isAdditive ? largestStirrupFactor(shear) : NaN;
+    for (let j = from; j < to; j++) {
+      const dMm = d[j]!;
+      const bars = skinKg[j]! > 0 ? ofBarsWithSkin : ofBars;
+      const byRow = isDepthTied && h[j]! < bars ? h[j]! : bars;
+      const neededMm = limitMm[j]! < byRow ? limitMm[j]! : byRow;
+      let spacing = Math.floor((neededMm + 1e-6) / stepMm) * stepMm;
+      if (!(spacing > leastMm && isWithinLength(spacing, neededMm))) spacing = leastMm;
+      let mask = 0;
+      if (isAsked) {
+        const designN = isAdditive
+          ? reduction * (concreteN[j]! + Math.min((forceFactor * dMm) / spacing, largestFactor * dMm))
+          : designShearN(shear, dMm, concreteN[j]!, spacing);
+        const isEnough = designN >= vuN;
+        if (!(spacing <= leastAreaMm) || (!isEnough && spacing > leastMm)) {
+          this.designAt(j);
+          continue;
+        }
+        if (!isEnough) mask = SHEAR;
+      }
+      spacingMm[j] = spacing;
+      if (!isWithinLength(spacing, tiesMm) || (isTieWithinDepth && !isWithinLength(spacing, h[j]!)))
+        mask |= COMPRESSION_TIES;
+      if (!isWithinLength(spacing, detailMm[j]!)) mask |= STIRRUP_SPACING;
+      masks[j]! |= mask;
+    }
+  }
+
+  /** The design of one section step by step: where the least stirrups are not met, or the closed form ends above a step. */
+  private designAt(j: number): void {
     const { at, vuN } = this;
     const { shear } = this.combination!;
-    at.dMm = d;
-    at.depthMm = h;
-    const spacingMm = designSpacingMm(at, shear, this.rules);
-    this.spacingMm = spacingMm;
-    let mask = this.isTied(spacingMm, h) ? 0 : COMPRESSION_TIES;
-    if (vuN === vuN && !(at.designN >= vuN)) mask |= SHEAR;
-    if (!isWithinLength(spacingMm, detailingSpacingMm(shear, d, at.isHalved))) mask |= STIRRUP_SPACING;
-    return mask;
+    const { h, d, masks, spacingMm, skinKg } = this.columns;
+    at.dMm = d[j]!;
+    at.depthMm = h[j]!;
+    at.hasSkin = skinKg[j]! > 0;
+    const spacing = designSpacingMm(at, shear, this.rules);
+    spacingMm[j] = spacing;
+    if (!this.isTied(spacing, h[j]!)) masks[j]! |= COMPRESSION_TIES;
+    if (!(at.designN >= vuN)) masks[j]! |= SHEAR;
+    if (!isWithinLength(spacing, detailingSpacingMm(shear, d[j]!, at.isHalved))) masks[j]! |= STIRRUP_SPACING;
   }
 
-  private givenMask(d: number): number {
-    const { vuN } = this;
-    const { shear, tension } = this.combination!;
-    const concreteN = concreteShearN(shear, d, tension.areaMm2);
-    const mask = designShearN(shear, d, concreteN) >= vuN ? 0 : SHEAR;
-    const limitMm = stirrupSpacingLimitMm(shear, vuN, d, concreteN);
-    return limitMm === Infinity || isWithinLength(shear.spacingMm, limitMm) ? mask : mask | STIRRUP_SPACING;
+  private addHoops(from: number, to: number): void {
+    const { rules } = this;
+    const { h, d, masks, spacingMm, skinKg } = this.columns;
+    for (let j = from; j < to; j++)
+      if (!isWithinLength(spacingMm[j]!, hoopLimitMm(rules, d[j]!, h[j]!, skinKg[j]! > 0)))
+        masks[j]! |= HOOP_SPACING;
   }
 }

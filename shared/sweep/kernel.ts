@@ -1,36 +1,24 @@
-import { crackedAxisDepth } from '../engine/cracked-section.ts';
-import type { ResolvedFlange } from '../engine/flange.ts';
-import { isAtLeastTimes, isAtMostTimes, isWithinLength, requiredSteelMm2 } from '../engine/limits.ts';
-import { MEASURE_IDS } from '../engine/measures.ts';
-import { neutralAxisDepth } from '../engine/neutral-axis.ts';
 import { isCurveMeasure } from '../engine/curve-basis.ts';
+import { isAtLeastTimes, isAtMostTimes, isWithinLength } from '../engine/limits.ts';
+import { MEASURE_IDS } from '../engine/measures.ts';
 import type { Combination } from './combination.ts';
-import { rowAmounts, writeAmounts } from './kernel-amounts.ts';
+import { rowAmounts, writeAmounts, type RowAmounts } from './kernel-amounts.ts';
 import { KernelCurve } from './kernel-curve.ts';
 import { fixedMask, KernelDetailing } from './kernel-detailing.ts';
+import { KernelFlexure } from './kernel-flexure.ts';
 import {
   BAR_FIT,
-  STRENGTH,
-  DUCTILITY,
-  TENSION_STRAIN,
-  LEAST_STEEL,
-  DEPTH_TO_WIDTH,
   DEPTH_CAP,
-  AXIS_DEPTH,
-  MOST_STEEL,
-  MU_PHI,
+  DEPTH_TO_WIDTH,
   DESIGN_STRENGTH,
+  DUCTILITY,
+  MU_PHI,
   UTILISATION,
 } from './kernel-places.ts';
 import { KernelSeismic } from './kernel-seismic.ts';
-import {
-  isAboveTension,
-  isPlain,
-  leastDepthMm,
-  offsetOf,
-  type ConcreteConstants,
-  type PreparedSweep,
-} from './prepared-sweep.ts';
+import { KernelStrength } from './kernel-strength.ts';
+import { isAboveTension, isPlain, leastDepthMm, type PreparedSweep } from './prepared-sweep.ts';
+import { rowColumns, type RowColumns } from './row-columns.ts';
 import type { Tally } from './tally.ts';
 
 /** Per-section columns, for comparing the hot loop with `evaluateSection`; measures are in rows of MEASURE_IDS. */
@@ -52,26 +40,21 @@ interface Row {
   readonly to: number;
 }
 
-/** The hot loop over one row of depths, with what it reuses from row to row. */
+/** Whether a mask has one bit at most: only such sections are of use beyond being counted. */
+const failsOneAtMost = (mask: number) => (mask & (mask - 1)) === 0;
+
+/** The hot loop over one row of depths, pass by pass over its columns, with what it reuses from row to row. */
 export class Kernel {
-  private readonly depths = new Float64Array(MAX_LAYERS);
-  private readonly areas = new Float64Array(MAX_LAYERS);
-  private readonly layers = { depths: this.depths, areas: this.areas, n: 0, compressionCount: 0 };
+  /** The steel of the section in hand as built: its stirrups' spacing and skin steel. */
+  readonly built = { spacingMm: Infinity, skinKg: 0 };
   private readonly measures = new Float64Array(MEASURE_IDS.length);
+  private readonly columns: RowColumns;
+  private readonly flexure: KernelFlexure;
+  private readonly strength: KernelStrength;
   private readonly detailing: KernelDetailing;
   private readonly seismic: KernelSeismic | null;
   /** Null where μφ is the closed path's. */
   private readonly curve: KernelCurve | null;
-  private readonly ultimate;
-  private readonly cracked = {
-    widthMm: 0,
-    modularRatio: 0,
-    ratioAbove: 0,
-    overhangMm: 0,
-    overhangDepthMm: 0,
-  };
-  private readonly leastSteelSection = { fcMPa: 0, fyMPa: 0, widthMm: 0, dMm: 1 };
-
   private readonly prepared: PreparedSweep;
   private readonly tally: Tally;
   private readonly recorder: Recorder;
@@ -80,216 +63,181 @@ export class Kernel {
     this.prepared = prepared;
     this.tally = tally;
     this.recorder = recorder;
-    const { basis } = prepared.problem;
-    this.detailing = new KernelDetailing(prepared);
-    this.seismic = prepared.seismic && new KernelSeismic(prepared, prepared.seismic, MAX_LAYERS);
-    this.curve = isCurveMeasure(basis) ? new KernelCurve(prepared) : null;
-    this.ultimate = {
-      blockForcePerMm: 0,
-      flangeForcePerMm: 0,
-      overhangForceN: 0,
-      flangeReachMm: 0,
-      blockStressMPa: 0,
-      blockDepthFactor: 0,
-      fyMPa: 0,
-      esMPa: basis.esMPa,
-      epsilonCu: 0,
-      displacedConcrete: basis.displacedConcrete,
-    };
+    const columns = rowColumns(prepared.space.depthsMm);
+    this.columns = columns;
+    this.curve = isCurveMeasure(prepared.problem.basis) ? new KernelCurve(prepared) : null;
+    this.flexure = new KernelFlexure(prepared, columns, MAX_LAYERS);
+    this.strength = new KernelStrength(prepared, columns, this.curve === null);
+    this.detailing = new KernelDetailing(prepared, columns);
+    this.seismic = prepared.seismic && new KernelSeismic(prepared, prepared.seismic, columns, MAX_LAYERS);
   }
 
-  /**
-   * The hot loop: all depths of one combination. Longer than a function should be, since each hoisted value is a division
-   * or a call saved a million times. Returns the number of sections that meet every check.
-   */
+  /** The hot loop: all depths of one combination. Returns the number of sections that meet every check. */
   runRow(combination: Combination, row: Row): number {
-    const { placement, tension, compression, concrete, fyMPa } = combination;
-    const { problem, ruleSet, space } = this.prepared;
-    const { basis, demand, rules } = problem;
-    const { tally, recorder, depths, areas, measures, ultimate, cracked } = this;
-    const { depthFeasible, depthEvaluated } = tally;
-    const depthsMm = space.depthsMm;
-    const widthMm = placement.widthMm;
+    const { placement, tension, compression } = combination;
+    this.detailing.begin(combination);
+    this.seismic?.begin(combination);
+    this.startMasks(combination, row);
+    const { depthEvaluated } = this.tally;
+    for (let j = row.from; j < row.to; j++) depthEvaluated[j]!++;
 
-    const muNmm = demand.muNmm;
-    const target = demand.ductilityTarget;
-    const capMm = demand.depthCapMm;
-    const { minDepthToWidth, maxDepthToWidth } = rules;
-    const hoistedMask = fixedMask(combination, rules, this.prepared.seismic);
-    const isPlainSteel = isPlain(tension);
     const leastMm = leastDepthMm(placement, tension, compression);
-
-    const { blockStressMPa, blockDepthFactor } = concrete;
-    const esMPa = basis.esMPa;
-    const epsilonCu = concrete.crushingStrain;
-    // yield stress that strength counts on; the least steel and the detailing rules take fy as it is named
-    const yieldMPa = ruleSet.designYieldMPa(fyMPa);
-    const epsilonTy = yieldMPa / esMPa;
-    const leastStrain = ruleSet.leastTensionStrain(epsilonTy) ?? -Infinity;
-    const largestAxisShare = ruleSet.largestAxisShare(concrete.fcMPa) ?? Infinity;
-    const faceSteelShare = ruleSet.largestFaceSteelShare;
-    const largestFaceSteelMm2 = Math.max(tension.areaMm2, compression.areaMm2);
-    const blockForcePerMm = blockStressMPa * widthMm * blockDepthFactor;
-    const { overhangMm, overhangDepthMm } = placement.overhang;
-    const overhangPerMm = blockStressMPa * overhangMm;
-    ultimate.blockForcePerMm = blockForcePerMm;
-    ultimate.flangeForcePerMm = blockForcePerMm + overhangPerMm * blockDepthFactor;
-    ultimate.overhangForceN = overhangPerMm * overhangDepthMm;
-    ultimate.flangeReachMm = overhangDepthMm / blockDepthFactor;
-    ultimate.blockStressMPa = blockStressMPa;
-    ultimate.blockDepthFactor = blockDepthFactor;
-    ultimate.fyMPa = yieldMPa;
-    ultimate.epsilonCu = epsilonCu;
-    cracked.widthMm = widthMm;
-    cracked.overhangMm = overhangMm;
-    cracked.overhangDepthMm = overhangDepthMm;
-    cracked.modularRatio = concrete.modularRatio;
-    cracked.ratioAbove = concrete.ratioAbove;
-    const deductionReach =
-      basis.displacedConcrete === 'deduct' ? blockDepthFactor : basis.displacedConcrete === 'ignore' ? -1 : 1;
-    const isYieldAtCentroid = basis.yieldCurvatureAt === 'centroid';
-    const leastSteelSection = this.leastSteelSection;
-    leastSteelSection.fcMPa = concrete.fcMPa;
-    leastSteelSection.fyMPa = fyMPa;
-    const tensionFlange = placement.flange?.face === 'tension' ? placement.flange : null;
-    leastSteelSection.widthMm = widthMm;
-    let leastSteelPerMm = ruleSet.leastSteelMm2(leastSteelSection);
-    const asMm2 = tension.areaMm2;
-    const { detailing, seismic, layers, curve } = this;
-    detailing.begin(combination);
-    seismic?.begin(combination);
-    curve?.begin(combination);
-
-    const nc = compression.layerCount;
-    const n = nc + tension.layerCount;
-    for (let i = 0; i < nc; i++) {
-      depths[i] = compression.offsets[i]!;
-      areas[i] = compression.areas[i]!;
-    }
-    for (let i = 0; i < tension.layerCount; i++) areas[n - 1 - i] = tension.areas[i]!;
-    layers.n = n;
-    layers.compressionCount = nc;
-
+    const { h } = this.columns;
+    let placedFrom = row.from;
+    while (placedFrom < row.to && !isWithinLength(leastMm, h[placedFrom]!)) placedFrom++;
+    this.refuse(row, row.from, placedFrom);
+    if (placedFrom === row.to) return 0;
     const amounts = rowAmounts(combination);
+    if (!isPlain(tension)) return this.runPlaced(combination, amounts, row, placedFrom, row.to);
 
-    let feasibleInRow = 0;
-    for (let j = row.from; j < row.to; j++) {
-      const h = depthsMm[j]!;
-      let mask = hoistedMask;
-      if (
-        (minDepthToWidth !== null && !isAtLeastTimes(h, minDepthToWidth, widthMm)) ||
-        (maxDepthToWidth !== null && !isAtMostTimes(h, maxDepthToWidth, widthMm))
-      )
-        mask |= DEPTH_TO_WIDTH;
-      if (capMm !== null && !isWithinLength(h, capMm)) mask |= DEPTH_CAP;
-      mask |= detailing.sizeMask(h);
-      if (seismic !== null) mask |= seismic.sizeMask(h);
-      depthEvaluated[j]!++;
+    let feasible = 0;
+    for (let from = placedFrom; from < row.to;) {
+      const isPlaced = isAboveTension(tension, compression, h[from]!);
+      let to = from + 1;
+      while (to < row.to && isAboveTension(tension, compression, h[to]!) === isPlaced) to++;
+      if (isPlaced) feasible += this.runPlaced(combination, amounts, row, from, to);
+      else this.refuse(row, from, to);
+      from = to;
+    }
+    return feasible;
+  }
 
-      const d = h - offsetOf(tension, h);
-      const isPlaced =
-        isWithinLength(leastMm, h) && (!isPlainSteel || isAboveTension(tension, compression, h));
-      if (tension.shareOfDepth !== 0) depths[n - 1] = d;
-      else for (let i = 0; i < tension.layerCount; i++) depths[n - 1 - i] = h - tension.offsets[i]!;
-      if (nc > 0 && compression.shareOfDepth !== 0) depths[0] = compression.shareOfDepth * h;
-      if (!isPlaced) {
-        mask |= BAR_FIT;
-        tally.countMask(mask);
-        if (recorder) recorder.masks[row.firstIndex + j - recorder.first] = mask;
-        continue;
-      }
+  /** What is failed without placed bars. */
+  private startMasks(combination: Combination, { from, to }: Row): void {
+    const { prepared } = this;
+    const { demand, rules } = prepared.problem;
+    const { h, masks } = this.columns;
+    const { widthMm } = combination.placement;
+    const { minDepthToWidth, maxDepthToWidth } = rules;
+    const least = minDepthToWidth ?? -Infinity;
+    const most = maxDepthToWidth ?? Infinity;
+    const capMm = demand.depthCapMm ?? Infinity;
+    const fixed = fixedMask(combination, rules, prepared.seismic);
+    for (let j = from; j < to; j++) {
+      const depthMm = h[j]!;
+      const isShaped = isAtLeastTimes(depthMm, least, widthMm) && isAtMostTimes(depthMm, most, widthMm);
+      const mask = isShaped ? fixed : fixed | DEPTH_TO_WIDTH;
+      masks[j] = isWithinLength(depthMm, capMm) ? mask : mask | DEPTH_CAP;
+    }
+    this.detailing.addSizeMasks(from, to);
+    this.seismic?.addSizeMasks(from, to);
+  }
 
-      const c = neutralAxisDepth(depths, areas, n, ultimate);
-      const a = blockDepthFactor * c;
-      const deductionDepth = deductionReach * c;
-      const inFlange = Math.min(a, overhangDepthMm);
-      let nominal = -(blockForcePerMm * c) * (a / 2) - overhangPerMm * inFlange * (inFlange / 2);
-      for (let i = 0; i < n; i++) {
-        const depth = depths[i]!;
-        const elastic = esMPa * ((epsilonCu * (depth - c)) / c);
-        const stress = elastic > yieldMPa ? yieldMPa : elastic < -yieldMPa ? -yieldMPa : elastic;
-        nominal += areas[i]! * (depth < deductionDepth ? stress + blockStressMPa : stress) * depth;
-      }
-      const dt = depths[n - 1]!;
-      const epsilonT = (epsilonCu * (dt - c)) / c;
-      const design = ruleSet.strengthReduction(epsilonT, epsilonTy) * nominal;
-      const kd = crackedAxisDepth(depths, areas, n, cracked);
-      let muPhi = epsilonCu / c / (epsilonTy / ((isYieldAtCentroid ? d : dt) - kd));
+  /** Sections at places [from, to) whose bars cannot be placed. */
+  private refuse(row: Row, from: number, to: number): void {
+    const { masks } = this.columns;
+    for (let j = from; j < to; j++) masks[j]! |= BAR_FIT;
+    this.count(from, to);
+    if (!this.recorder) return;
+    const shift = row.firstIndex - this.recorder.first;
+    for (let j = from; j < to; j++) this.recorder.masks[shift + j] = masks[j]!;
+  }
 
-      if (muNmm !== null && !(design >= muNmm)) mask |= STRENGTH;
-      if (curve === null && target !== null && !(muPhi >= target)) mask |= DUCTILITY;
-      if (!(epsilonT >= leastStrain)) mask |= TENSION_STRAIN;
-      if (!(c <= largestAxisShare * d)) mask |= AXIS_DEPTH;
-      if (faceSteelShare !== null && !(largestFaceSteelMm2 <= faceSteelShare * widthMm * h))
-        mask |= MOST_STEEL;
-      if (tensionFlange) leastSteelPerMm = this.leastSteelPerMm(tensionFlange, h);
-      if (!(asMm2 >= leastSteelPerMm * d) && !this.isLeastSteelWaived(asMm2, d, concrete, fyMPa))
-        mask |= LEAST_STEEL;
-      mask |= detailing.placedMaskAt(j, h, d, depths[nc]!);
-      if (seismic !== null) mask |= seismic.placedMaskAt(h, d, layers, nominal);
-      if (curve !== null) {
-        muPhi = mask === 0 ? curve.muPhi(row.firstIndex + j, layers, d, detailing) : NaN;
-        if (mask === 0 && target !== null && !(muPhi >= target)) mask = DUCTILITY;
-      }
-      tally.countMask(mask);
+  private runPlaced(
+    combination: Combination,
+    amounts: RowAmounts,
+    row: Row,
+    from: number,
+    to: number,
+  ): number {
+    const yieldMPa = this.prepared.ruleSet.designYieldMPa(combination.fyMPa);
+    const { flexure, detailing, seismic, curve } = this;
+    flexure.begin(combination, yieldMPa);
+    flexure.fill(from, to);
+    this.strength.fill(combination, yieldMPa, from, to);
+    detailing.addPlacedMasks(from, to);
+    if (seismic !== null) seismic.addPlacedMasks(from, to, flexure);
+    if (curve !== null) this.drawCurves(curve, combination, row, from, to);
+    this.count(from, to);
+    return this.keep(combination, amounts, row, from, to);
+  }
 
-      if (mask !== 0 && (mask & (mask - 1)) !== 0 && recorder === null) continue;
-      writeAmounts(amounts, h, detailing, measures);
-      measures[MU_PHI] = muPhi;
-      measures[DESIGN_STRENGTH] = design;
-      measures[UTILISATION] = muNmm === null ? NaN : muNmm / design;
+  /** μφ off the full curve of the sections that meet every other check, and its own check. */
+  private drawCurves(
+    curve: KernelCurve,
+    combination: Combination,
+    { firstIndex }: Row,
+    from: number,
+    to: number,
+  ): void {
+    const { masks, muPhi } = this.columns;
+    const target = this.prepared.problem.demand.ductilityTarget;
+    curve.begin(combination);
+    for (let j = from; j < to; j++) {
+      muPhi[j] = masks[j] === 0 ? this.curveMuPhi(curve, firstIndex, j) : NaN;
+      if (masks[j] === 0 && target !== null && !(muPhi[j]! >= target)) masks[j] = DUCTILITY;
+    }
+  }
+
+  private curveMuPhi(curve: KernelCurve, firstIndex: number, j: number): number {
+    const { flexure, built } = this;
+    flexure.place(j);
+    this.take(j);
+    return curve.muPhi(firstIndex + j, flexure.layers, this.columns.d[j]!, built);
+  }
+
+  /** Counts the failures of places [from, to); neighbours mostly fail the same. */
+  private count(from: number, to: number): void {
+    const { masks } = this.columns;
+    for (let j = from; j < to;) {
+      const mask = masks[j]!;
+      let next = j + 1;
+      while (next < to && masks[next] === mask) next++;
+      this.tally.countMask(mask, next - j);
+      j = next;
+    }
+  }
+
+  /** Hands on what is feasible, or would be but for one check; returns the number of the feasible. */
+  private keep(
+    combination: Combination,
+    amounts: RowAmounts,
+    { firstIndex }: Row,
+    from: number,
+    to: number,
+  ): number {
+    const { tally, measures, recorder } = this;
+    const { h, masks, muPhi, design } = this.columns;
+    const { depthFeasible } = tally;
+    const muNmm = this.prepared.problem.demand.muNmm ?? NaN;
+    let feasible = 0;
+    for (let j = from; j < to; j++) {
+      const mask = masks[j]!;
+      if (!failsOneAtMost(mask) && recorder === null) continue;
+      this.take(j);
+      writeAmounts(amounts, h[j]!, this.built, measures);
+      measures[MU_PHI] = muPhi[j]!;
+      measures[DESIGN_STRENGTH] = design[j]!;
+      measures[UTILISATION] = muNmm / design[j]!;
       if (recorder) {
-        const place = row.firstIndex + j - recorder.first;
+        const place = firstIndex + j - recorder.first;
         recorder.masks[place] = mask;
         recorder.measures.set(measures, place * MEASURE_IDS.length);
       }
       if (mask === 0) {
-        feasibleInRow++;
+        feasible++;
         depthFeasible[j]!++;
-        tally.addFeasible(row.firstIndex + j, measures);
-      } else if ((mask & (mask - 1)) === 0) {
-        const failed = 31 - Math.clz32(mask);
-        if (curve !== null && mask !== DUCTILITY) {
-          if (!tally.wouldBeBestWithout(failed, measures, MU_PHI)) continue;
-          measures[MU_PHI] = curve.muPhi(row.firstIndex + j, layers, d, detailing);
-          if (target !== null && !(measures[MU_PHI]! >= target)) continue;
-        }
-        tally.addFailingOnly(failed, row.firstIndex + j, measures);
-      }
+        tally.addFeasible(firstIndex + j, measures);
+      } else if (failsOneAtMost(mask)) this.keepFailing(mask, firstIndex, j);
     }
-    return feasibleInRow;
+    return feasible;
   }
 
-  /** Least steel over d where a flange is in tension, by the width that counts at depth h, mm. */
-  private leastSteelPerMm(flange: ResolvedFlange, depthMm: number): number {
-    const { problem, ruleSet } = this.prepared;
-    const { widthMm } = this.cracked;
-    const support = problem.demand.support ?? null;
-    this.leastSteelSection.widthMm = ruleSet.leastSteelWidthMm({ widthMm, depthMm, flange, support });
-    return ruleSet.leastSteelMm2(this.leastSteelSection);
+  /** A section at place j that fails one check, its measures written. */
+  private keepFailing(mask: number, firstIndex: number, j: number): void {
+    const { tally, measures, curve } = this;
+    const failed = 31 - Math.clz32(mask);
+    if (curve !== null && mask !== DUCTILITY) {
+      const target = this.prepared.problem.demand.ductilityTarget;
+      if (!tally.wouldBeBestWithout(failed, measures, MU_PHI)) return;
+      measures[MU_PHI] = this.curveMuPhi(curve, firstIndex, j);
+      if (target !== null && !(measures[MU_PHI]! >= target)) return;
+    }
+    tally.addFailingOnly(failed, firstIndex + j, measures);
   }
 
-  /** As at least 4/3 of the steel Mu requires; asked only where As,min is not met, so it need not be fast. */
-  private isLeastSteelWaived(
-    asMm2: number,
-    dMm: number,
-    concrete: ConcreteConstants,
-    fyMPa: number,
-  ): boolean {
-    const { problem, ruleSet } = this.prepared;
-    const { muNmm } = problem.demand;
-    const waiver = ruleSet.leastSteelWaiver;
-    if (muNmm === null || waiver === null) return false;
-    const { widthMm, overhangMm, overhangDepthMm } = this.cracked;
-    const { blockStressMPa } = concrete;
-    const required = requiredSteelMm2(muNmm, ruleSet.tensionControlledReduction, {
-      widthMm,
-      dMm,
-      blockStressMPa,
-      fyMPa,
-      overhangMm,
-      overhangDepthMm,
-    });
-    return required < Infinity && asMm2 >= waiver * required;
+  private take(j: number): void {
+    this.built.spacingMm = this.columns.spacingMm[j]!;
+    this.built.skinKg = this.columns.skinKg[j]!;
   }
 }

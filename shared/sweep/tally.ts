@@ -54,16 +54,16 @@ export class Tally {
     this.fcEvaluated = new Float64Array(space.fcMPa.length);
   }
 
-  /** Every section, by the checks it fails: bit i is CHECK_IDS[i], none is feasible. */
-  countMask(mask: number): void {
-    this.evaluated++;
+  /** So many sections, by the checks they fail: bit i is CHECK_IDS[i], none is feasible. */
+  countMask(mask: number, count: number): void {
+    this.evaluated += count;
     if (mask === 0) {
-      this.feasible++;
+      this.feasible += count;
       return;
     }
-    this.failedFirst[31 - Math.clz32(mask & -mask)]!++;
-    if ((mask & (mask - 1)) === 0) this.failedOnly[31 - Math.clz32(mask)]!++;
-    for (let rest = mask; rest !== 0; rest &= rest - 1) this.failed[31 - Math.clz32(rest & -rest)]!++;
+    this.failedFirst[31 - Math.clz32(mask & -mask)]! += count;
+    if ((mask & (mask - 1)) === 0) this.failedOnly[31 - Math.clz32(mask)]! += count;
+    for (let rest = mask; rest !== 0; rest &= rest - 1) this.failed[31 - Math.clz32(rest & -rest)]! += count;
   }
 
   /** A section that meets every check. Indices arrive ascending, so the first of equal values has the lowest index. */

@@ -162,7 +162,7 @@ const TEXTS: Texts = {
   serviceStress: 'fs = 2/3 fy',
 };
 
-const clausesOf = (book: string): Clauses => ({
+const clausesOf = (book: string, year: Edition['year']): Clauses => ({
   block: `${book} 22.2.2.4`,
   strengthReduction: `${book} Table 21.2.2`,
   strength: `${book} 9.5.1.1, 22.2`,
@@ -175,12 +175,18 @@ const clausesOf = (book: string): Clauses => ({
   crackControl: `${book} 24.3.2`,
   compressionTies: `${book} 9.7.6.4, 25.7.2`,
   shear: `${book} 22.5`,
+  shearConcrete: `${book} 22.5.5.1`,
+  shearStirrups: `${book} ${year === '19' ? '22.5.8.5.3' : '22.5.10.5.3'}`,
+  shearLimit: `${book} 22.5.1.2`,
   stirrupSpacing: `${book} 9.6.3, 9.7.6.2.2`,
+  spacingAlong: `${book} 9.7.6.2.2`,
+  leastStirrups: `${book} 9.6.3`,
   leastDepth: `${book} Table 9.3.1.1`,
   axisDepth: `${book} 9.3.3.1`,
   mostSteel: `${book} 9.3.3.1`,
   skinSteel: `${book} 9.7.2.3`,
   flangeWidth: `${book} Table 6.3.2.1`,
+  steelLaw: `${book} 20.2.2.1`,
 });
 
 interface Edition {
@@ -223,6 +229,7 @@ export function aci318({ id, year, isMetric }: Edition): RuleSet & { readonly sh
         (TENSION_CONTROLLED - COMPRESSION_CONTROLLED) * Math.max(0, Math.min(1, share))
       );
     },
+    fullReductionStrain: tensionControlledStrain,
     leastTensionStrain: (epsilonTy) => (year === '19' ? epsilonTy + 0.003 : 0.004),
     largestAxisShare: () => null,
     largestFaceSteelShare: null,
@@ -262,7 +269,7 @@ export function aci318({ id, year, isMetric }: Edition): RuleSet & { readonly sh
     designSteps: () => [],
     symbols: ACI_SYMBOLS,
     texts: TEXTS,
-    clauses: clausesOf(book),
+    clauses: clausesOf(book, year),
     formulas: {
       ...c.formulas,
       leastSteelWidth: 'min(bf, 2 b), flange in tension of a cantilever',

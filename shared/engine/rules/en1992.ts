@@ -57,6 +57,7 @@ export function en1992({ nationalValues, isDuctile = false }: En1992Choices = {}
     concreteModulusMPa: secantModulusMPa,
     ruptureModulusMPa: meanTensionMPa,
     strengthReduction: () => 1,
+    fullReductionStrain: () => -Infinity,
     leastTensionStrain: () => null,
     largestAxisShare: (fckMPa) =>
       v.isPlasticAnalysis
@@ -133,12 +134,18 @@ function clausesOf(v: FullNationalValues): Clauses {
     crackControl: `${BOOK} 7.3.3(2), Table 7.3N`,
     compressionTies: `${BOOK} 9.2.1.2(3)`,
     shear: `${BOOK} 6.2.2, 6.2.3`,
+    shearConcrete: `${BOOK} 6.2.2(1)`,
+    shearStirrups: `${BOOK} 6.2.3(1) to (3)`,
+    shearLimit: `${BOOK} 6.2.3(3)`,
     stirrupSpacing: `${BOOK} 9.2.2(5), (6), (8)`,
+    spacingAlong: `${BOOK} 9.2.2(6)`,
+    leastStirrups: `${BOOK} 9.2.2(5)`,
     leastDepth: `${BOOK} 7.4.2(2)`,
     axisDepth: `${BOOK} ${v.isPlasticAnalysis ? '5.6.2(2)' : '5.5(4)'}`,
     mostSteel: `${BOOK} 9.2.1.1(3)`,
     skinSteel: `${BOOK} 7.3.3(3)`,
     flangeWidth: `${BOOK} 5.3.2.1(3)`,
+    steelLaw: `${BOOK} 3.2.7(2)`,
   };
 }
 

@@ -19,13 +19,22 @@ export interface Clauses {
   readonly hangers: string;
   readonly crackControl: string;
   readonly compressionTies: string;
+  /** Shear as a whole; then the concrete's part, that of the stirrups, and the most the section takes. */
   readonly shear: string;
+  readonly shearConcrete: string;
+  readonly shearStirrups: string;
+  readonly shearLimit: string;
+  /** Stirrup spacing as a whole; then the widest along the beam, and the least stirrups. */
   readonly stirrupSpacing: string;
+  readonly spacingAlong: string;
+  readonly leastStirrups: string;
   readonly leastDepth: string;
   readonly axisDepth: string;
   readonly mostSteel: string;
   readonly skinSteel: string;
   readonly flangeWidth: string;
+  /** The steel's elastic–plastic law. */
+  readonly steelLaw: string;
 }
 
 /** The rule as its book prints it, in the book's units, for the working shown beside a result. */
@@ -92,6 +101,8 @@ export interface RuleSet {
   ruptureModulusMPa(fcMPa: number): number;
   /** Strength reduction factor φ for strain εt of the outermost tension layer and yield strain εty. */
   strengthReduction(epsilonT: number, epsilonTy: number): number;
+  /** Strain εt from which that factor no longer changes, so that the hot loop need not ask for it. */
+  fullReductionStrain(epsilonTy: number): number;
   /** Least εt of a beam; null where the code limits the axis depth instead. */
   leastTensionStrain(epsilonTy: number): number | null;
   /** Largest neutral-axis depth over d; null where the code limits the strain instead. */
