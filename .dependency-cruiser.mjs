@@ -53,8 +53,9 @@ const shared = [
 
 const server = [
   never('server-never-imports-client', '^server/', '^client/'),
-  // The pool's own threads carry the engine and nothing else: a worker starts in milliseconds. A sheet's writes a file.
-  only('compute-workers-are-lean', '^server/compute/(?!sheet-)[^/]*worker[.]ts$', [
+  // The pool's own threads carry the engine and nothing else: a worker starts in milliseconds. A sheet's and an export's
+  // write files.
+  only('compute-workers-are-lean', '^server/compute/(?!sheet-|export-)[^/]*worker[.]ts$', [
     '^shared/(engine|sweep)/',
     '^server/compute/',
     '^node_modules/(bcryptjs|piscina)/',

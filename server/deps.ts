@@ -1,5 +1,6 @@
 import type { Store } from 'express-session';
 import type pg from 'pg';
+import type { ExportDesk } from './compute/export-desk.ts';
 import type { Passwords } from './compute/passwords.ts';
 import type { SheetDesk } from './compute/sheet-desk.ts';
 import type { Config } from './config.ts';
@@ -18,5 +19,6 @@ export interface Deps {
   readonly passwords: Passwords;
   readonly tally: WorkTally;
   readonly sheetDesk: SheetDesk;
+  readonly exportDesk: ExportDesk;
   readonly runEvents: RunEvents;
 }

@@ -7,6 +7,13 @@ import {
   SHEET_PDF_PATH,
   type EndpointName,
 } from '#shared/contract/endpoints.ts';
+import {
+  byIdAndFormat,
+  SECTIONS_FILE_PATH,
+  sectionsFileQuerySchema,
+  TAKEOFF_FILE_PATH,
+  takeoffFileQuerySchema,
+} from '#shared/contract/endpoints/file-endpoints.ts';
 import { errorBodySchema } from '#shared/contract/errors.ts';
 import { idSchema } from '#shared/contract/numbers.ts';
 import { viewProgressSchema } from '#shared/contract/records.ts';
@@ -62,11 +69,48 @@ const sheetPdf: ZodOpenApiOperationObject = {
   },
 };
 
+const tableFile = (
+  operationId: string,
+  description: string,
+  query: typeof sectionsFileQuerySchema | typeof takeoffFileQuerySchema,
+): ZodOpenApiOperationObject => ({
+  operationId,
+  description,
+  requestParams: { path: byIdAndFormat, query },
+  security: [{ session: [] }],
+  responses: {
+    '200': {
+      description: 'The file, in the units of the project',
+      content: {
+        'text/csv': { schema: { type: 'string' } },
+        'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet': {
+          schema: { type: 'string', format: 'binary' },
+        },
+      },
+    },
+    default: errorAnswer,
+  },
+});
+
+const tableFiles = {
+  [SECTIONS_FILE_PATH]: tableFile(
+    'sectionsFile',
+    'Sections of a run as a table, with what the reader is shown of them.',
+    sectionsFileQuerySchema,
+  ),
+  [TAKEOFF_FILE_PATH]: tableFile(
+    'takeoffFile',
+    'Takeoff of pinned sections; as XLSX a workbook that recalculates.',
+    takeoffFileQuerySchema,
+  ),
+};
+
 function describePaths(): ZodOpenApiPathsObject {
   const paths: ZodOpenApiPathsObject = {
     [openApiPath(RUN_EVENTS_PATH)]: { get: runEvents },
     [openApiPath(SHEET_PDF_PATH)]: { get: sheetPdf },
   };
+  for (const [path, get] of Object.entries(tableFiles)) paths[openApiPath(path)] = { get };
   for (const name of Object.keys(endpoints) as EndpointName[]) {
     const path = openApiPath(endpoints[name].path);
     paths[path] = { ...paths[path], [endpoints[name].method]: describe(name) };

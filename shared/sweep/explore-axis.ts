@@ -35,6 +35,29 @@ export function inputValues(
   };
 }
 
+/** Place on an input's axis from a section's index; the order of the axes is the space's. */
+export function inputPlace(space: Space, key: InputKey): (index: number) => number {
+  const { depthsMm, fcMPa, fyMPa, compression, tension, stirrups, coversMm } = space;
+  const strengths = depthsMm.length * fcMPa.length;
+  const bars = strengths * fyMPa.length * compression.length;
+  const inner: Readonly<Record<InputKey, number>> = {
+    fc: depthsMm.length,
+    fy: strengths,
+    compressionSteel: strengths * fyMPa.length,
+    tensionSteel: bars,
+    cover: bars * tension.length * stirrups.length,
+  };
+  const length: Readonly<Record<InputKey, number>> = {
+    fc: fcMPa.length,
+    fy: fyMPa.length,
+    compressionSteel: compression.length,
+    tensionSteel: tension.length,
+    cover: coversMm.length,
+  };
+  const [below, values] = [inner[key], length[key]];
+  return (index) => Math.floor(index / below) % values;
+}
+
 /** A section of the space with what the engine makes of it. */
 export interface JudgedSection {
   readonly section: SectionInput;

@@ -8,6 +8,7 @@ import { pino } from 'pino';
 import request from 'supertest';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { endpoints, RUN_EVENTS_PATH, SHEET_PDF_PATH } from '#shared/contract/endpoints.ts';
+import { SECTIONS_FILE_PATH, TAKEOFF_FILE_PATH } from '#shared/contract/endpoints/file-endpoints.ts';
 import { buildApp } from '#server/app.ts';
 import { readConfig } from '#server/config.ts';
 import { createDatabase } from '#server/db/client.ts';
@@ -27,6 +28,8 @@ describe('the API', () => {
       ...endpoints,
       runEvents: { method: 'get', path: RUN_EVENTS_PATH },
       sheetPdf: { method: 'get', path: SHEET_PDF_PATH },
+      sectionsFile: { method: 'get', path: SECTIONS_FILE_PATH },
+      takeoffFile: { method: 'get', path: TAKEOFF_FILE_PATH },
     }).map(([name, { method, path: at }]) => `${name} ${method} ${at.replace(/:(\w+)/g, '{$1}')}`);
     expect(described.sort()).toEqual(expected.sort());
     const signIn = body.paths['/session'].post.requestBody.content['application/json'].schema;

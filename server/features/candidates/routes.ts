@@ -11,6 +11,7 @@ import { presentCandidate, presentSheetValues } from './present.ts';
 import { listCandidates, requireCandidate } from './queries.ts';
 import { registerSheetPdf } from './sheet-pdf.ts';
 import { listSheetValues, setSheetValue } from './sheet-values.ts';
+import { registerTakeoffExport } from './takeoff-export.ts';
 
 export function registerCandidateRoutes(router: Router, deps: Deps): void {
   bind(router, deps, 'listCandidates', async ({ person, params, deps: { db } }) => {
@@ -46,6 +47,7 @@ export function registerCandidateRoutes(router: Router, deps: Deps): void {
   });
 
   registerSheetPdf(router, deps);
+  registerTakeoffExport(router, deps);
 }
 
 async function readSheetValues(

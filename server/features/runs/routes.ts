@@ -18,6 +18,7 @@ import { OpenStreams } from './open-streams.ts';
 import { RUNNERS } from './policy.ts';
 import { presentRun, presentViewProgress } from './present.ts';
 import { getSection, listViews, requireRun, requireView } from './queries.ts';
+import { registerSectionsFile } from './sections-file.ts';
 
 export function registerRunRoutes(router: Router, deps: Deps): void {
   const { runningLimits: limits } = deps.config;
@@ -60,6 +61,7 @@ export function registerRunRoutes(router: Router, deps: Deps): void {
   );
 
   registerRunEvents(router, deps);
+  registerSectionsFile(router, deps);
 }
 
 function registerRunEvents(router: Router, deps: Deps): void {

@@ -3,7 +3,13 @@ import type { BarStandard } from '#shared/engine/section.ts';
 import { prepareSweep, type PreparedSweep } from '#shared/sweep/prepared-sweep.ts';
 import type { Space, SweepProblem, View } from '#shared/sweep/problem.ts';
 import { sweepColumns } from '#shared/sweep/sweep-range.ts';
-import { inputValues, isInputKey, type ExploreKey, type InputKey } from '#shared/sweep/explore-axis.ts';
+import {
+  inputPlace,
+  inputValues,
+  isInputKey,
+  type ExploreKey,
+  type InputKey,
+} from '#shared/sweep/explore-axis.ts';
 
 /** Sections judged at a time: their columns are 6 MB, and larger ones gained nothing. */
 const STEP = 2 ** 16;
@@ -62,29 +68,8 @@ export class FeasibleColumns {
 
   private inputColumn(key: InputKey): Float64Array {
     const values = this.values[key];
-    const placeOf = this.placeOf(key);
+    const placeOf = inputPlace(this.space, key);
     return Float64Array.from(this.index, (index) => values[placeOf(index)]!);
-  }
-
-  /** Place on an input's axis from a section's index; the order of the axes is the space's. */
-  private placeOf(key: InputKey): (index: number) => number {
-    const { depthsMm, fcMPa, fyMPa, compression, tension, stirrups, coversMm } = this.space;
-    const inner: Readonly<Record<InputKey, number>> = {
-      fc: depthsMm.length,
-      fy: depthsMm.length * fcMPa.length,
-      compressionSteel: depthsMm.length * fcMPa.length * fyMPa.length,
-      tensionSteel: depthsMm.length * fcMPa.length * fyMPa.length * compression.length,
-      cover:
-        depthsMm.length * fcMPa.length * fyMPa.length * compression.length * tension.length * stirrups.length,
-    };
-    const length: Readonly<Record<InputKey, number>> = {
-      fc: fcMPa.length,
-      fy: fyMPa.length,
-      compressionSteel: compression.length,
-      tensionSteel: tension.length,
-      cover: coversMm.length,
-    };
-    return (index) => Math.floor(index / inner[key]) % length[key];
   }
 
   private append(index: number, measures: Float64Array, at: number): void {

@@ -3,7 +3,7 @@ import type { Run } from '#shared/contract/records.ts';
 import { isSameView, type View } from '#shared/sweep/problem.ts';
 import type { DensityCell, FrontPoint, Point, ResultInThree, ViewResult } from '#shared/sweep/result.ts';
 import type { ChartLayout, CloudSpot } from '#client/src/charts/front-chart.tsx';
-import { bandWithin } from './band-within.ts';
+import { bandWithin } from '#shared/sweep/band-within.ts';
 import type { Cut, CutQuery } from './cut.ts';
 import type { ExploreKey } from '#shared/sweep/explore-axis.ts';
 import { filtersText, hasFilters, isWithinFilters, type RangeFilters } from '#shared/sweep/range-filters.ts';

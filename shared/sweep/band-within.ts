@@ -1,5 +1,5 @@
-import { MEASURE_DIRECTION } from '#shared/engine/measures.ts';
-import type { Point, ViewResult } from '#shared/sweep/result.ts';
+import { MEASURE_DIRECTION } from '../engine/measures.ts';
+import type { Point, ViewResult } from './result.ts';
 
 /** Rounding of the last digit must not drop a section that lies on the edge of the band. */
 const SLACK = 1e-9;
