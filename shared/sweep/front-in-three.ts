@@ -3,10 +3,10 @@ import { MAX_TIES_KEPT, type Signs } from './front.ts';
 import type { ResultInThree } from './result.ts';
 
 /**
- * The longest front that is held, some 12 MB: rank by rank of real sweeps a hundredth of it is much. A part with more is
- * given up whole, and the result says so; a sample of it would look like a front and be none.
+ * The longest front that is held, some 6 MB; an office's sweep has hundreds, or some thousands with the strength as one of
+ * the three. A part with more is given up whole, and the result says so: a sample of it would look like a front and be none.
  */
-export const MOST_HELD_IN_THREE = 2 ** 18;
+export const MOST_HELD_IN_THREE = 2 ** 17;
 
 /**
  * A front of three measures as columns, oriented (less is better), ordered by x, then y, then z. Ties and duplicates as in
@@ -35,70 +35,93 @@ const withoutPoints = (isTooLong: boolean): FrontInThree => ({
 });
 
 /** Points gathered before they are judged; more where the front itself is longer, so that each is sorted few times. */
-const LEAST_GATHERED = 2 ** 13;
+const LEAST_GATHERED = 2 ** 9;
 
 /**
  * Exact front in three measures, one point at a time: points that a grid over the front cannot show to be beaten are
- * gathered, and judged together by `nonDominatedInThree` whenever they outnumber the front.
+ * gathered, and joined to it whenever they outnumber it.
  */
 export class FrontInThreeBuilder {
   private front: FrontInThree = withoutPoints(false);
   private grid: DominatedGrid | null = null;
-  private x = new Float64Array(LEAST_GATHERED);
-  private y = new Float64Array(LEAST_GATHERED);
-  private z = new Float64Array(LEAST_GATHERED);
-  private index = new Float64Array(LEAST_GATHERED);
-  private gathered = 0;
+  private gathered = columnsOf(LEAST_GATHERED);
+  private count = 0;
 
   /** Offers a section; one with NaN in any measure is never on the front. */
   add(x: number, y: number, z: number, index: number): void {
     if (this.grid !== null && this.grid.isBeaten(x, y, z)) return;
     if (x !== x || y !== y || z !== z || this.front.isTooLong) return;
-    const at = this.gathered++;
-    this.x[at] = x;
-    this.y[at] = y;
-    this.z[at] = z;
-    this.index[at] = index;
-    if (this.gathered === this.x.length) this.judge();
+    const { gathered } = this;
+    const at = this.count++;
+    gathered.x[at] = x;
+    gathered.y[at] = y;
+    gathered.z[at] = z;
+    gathered.ties[at] = index;
+    if (this.count === gathered.x.length) this.judge();
   }
 
   private judge(): void {
-    const n = this.gathered;
-    const gathered: FrontInThree = {
-      x: this.x.subarray(0, n),
-      y: this.y.subarray(0, n),
-      z: this.z.subarray(0, n),
-      tieCounts: new Float64Array(n).fill(1),
-      ties: this.index.subarray(0, n),
-      tieEnds: Uint32Array.from({ length: n }, (_, i) => i + 1),
-      isTooLong: false,
-    };
-    this.front = nonDominatedInThree([this.front, gathered]);
-    this.gathered = 0;
+    this.front = joinFronts(this.front, inOrder(this.gathered, this.count));
     this.grid = new DominatedGrid(this.front);
+    this.count = 0;
     const wanted = Math.max(LEAST_GATHERED, this.front.x.length);
-    if (wanted <= this.x.length) return;
-    this.x = new Float64Array(wanted);
-    this.y = new Float64Array(wanted);
-    this.z = new Float64Array(wanted);
-    this.index = new Float64Array(wanted);
+    if (wanted > this.gathered.x.length) this.gathered = columnsOf(wanted);
   }
 
   finish(): FrontInThree {
-    if (this.gathered > 0) this.judge();
+    if (this.count > 0) this.judge();
     return this.front;
   }
 }
 
+type Columns = Omit<FrontInThree, 'isTooLong'>;
+
+/** Room for so many single points. */
+function columnsOf(count: number, tieCount = count): Columns {
+  return {
+    x: new Float64Array(count),
+    y: new Float64Array(count),
+    z: new Float64Array(count),
+    tieCounts: new Float64Array(count),
+    ties: new Float64Array(tieCount),
+    tieEnds: new Uint32Array(count),
+  };
+}
+
+/** Below 0 where the point at a comes before the one at b: by x, then y, then z. */
+function compare({ x, y, z }: Columns, a: number, b: number): number {
+  const [xa, xb] = [x[a]!, x[b]!];
+  if (xa !== xb) return xa < xb ? -1 : 1;
+  const [ya, yb] = [y[a]!, y[b]!];
+  if (ya !== yb) return ya < yb ? -1 : 1;
+  const [za, zb] = [z[a]!, z[b]!];
+  return za === zb ? 0 : za < zb ? -1 : 1;
+}
+
+/** The first so many single points as a list in order; not a front yet, since they may beat each other. */
+function inOrder(points: Columns, count: number): FrontInThree {
+  const order = Uint32Array.from({ length: count }, (_, i) => i).sort((a, b) => compare(points, a, b));
+  const take = (column: Float64Array) => Float64Array.from(order, (i) => column[i]!);
+  return {
+    x: take(points.x),
+    y: take(points.y),
+    z: take(points.z),
+    tieCounts: new Float64Array(count).fill(1),
+    ties: take(points.ties),
+    tieEnds: order.map((_, i) => i + 1),
+    isTooLong: false,
+  };
+}
+
 /**
- * The non-dominated points of several lists together, O(n log n): by x, then y, then z, each is beaten exactly where one
- * before it has y and z no larger, and the least z of the y so far stands in a tree of prefix minima. (Kung, Luccio and
- * Preparata, "On finding the maxima of a set of vectors", J. ACM 22, 1975; the tree is Fenwick's, 1994.)
+ * The non-dominated points of two lists in order, O(n log n): by x, then y, then z, each is beaten exactly where one before
+ * it has y and z no larger, and the least z of the y so far stands in a tree of prefix minima. (Kung, Luccio and Preparata,
+ * "On finding the maxima of a set of vectors", J. ACM 22, 1975; the tree is Fenwick's, 1994.)
  */
-export function nonDominatedInThree(lists: readonly FrontInThree[]): FrontInThree {
-  if (lists.some((list) => list.isTooLong)) return withoutPoints(true);
-  const all = joined(lists);
-  const order = sorted(all);
+export function joinFronts(first: FrontInThree, second: FrontInThree): FrontInThree {
+  if (first.isTooLong || second.isTooLong) return withoutPoints(true);
+  const all = behind(first, second);
+  const order = mergedOrder(all, first.x.length);
   const ranks = ranksOf(all.y);
   const least = new PrefixLeast(ranks.count);
   const kept = new Kept();
@@ -133,45 +156,26 @@ export function resultInThree(front: FrontInThree, signs: Signs & { readonly z: 
   return { count: front.isTooLong ? null : count, points };
 }
 
-type Columns = Omit<FrontInThree, 'isTooLong'>;
-
-/** Lists one behind the other. */
-function joined(lists: readonly FrontInThree[]): Columns {
-  const count = lists.reduce((sum, list) => sum + list.x.length, 0);
-  const tieCount = lists.reduce((sum, list) => sum + list.ties.length, 0);
-  const all = {
-    x: new Float64Array(count),
-    y: new Float64Array(count),
-    z: new Float64Array(count),
-    tieCounts: new Float64Array(count),
-    ties: new Float64Array(tieCount),
-    tieEnds: new Uint32Array(count),
-  };
-  let at = 0;
-  let tieAt = 0;
-  for (const list of lists) {
-    all.x.set(list.x, at);
-    all.y.set(list.y, at);
-    all.z.set(list.z, at);
-    all.tieCounts.set(list.tieCounts, at);
-    all.ties.set(list.ties, tieAt);
-    for (let i = 0; i < list.x.length; i++) all.tieEnds[at + i] = tieAt + list.tieEnds[i]!;
-    at += list.x.length;
-    tieAt += list.ties.length;
+/** One list behind the other. */
+function behind(first: Columns, second: Columns): Columns {
+  const [count, tieCount] = [first.x.length, first.ties.length];
+  const all = columnsOf(count + second.x.length, tieCount + second.ties.length);
+  for (const column of ['x', 'y', 'z', 'tieCounts', 'tieEnds'] as const) {
+    all[column].set(first[column]);
+    all[column].set(second[column], count);
   }
+  all.ties.set(first.ties);
+  all.ties.set(second.ties, tieCount);
+  for (let i = count; i < all.tieEnds.length; i++) all.tieEnds[i]! += tieCount;
   return all;
 }
 
-/** Places by x, then y, then z. A plain array's sort makes use of the lists being sorted already; a typed one's does not. */
-function sorted({ x, y, z }: Columns): number[] {
-  return Array.from(x, (_, i) => i).sort((a, b) => {
-    const [xa, xb] = [x[a]!, x[b]!];
-    if (xa !== xb) return xa < xb ? -1 : 1;
-    const [ya, yb] = [y[a]!, y[b]!];
-    if (ya !== yb) return ya < yb ? -1 : 1;
-    const [za, zb] = [z[a]!, z[b]!];
-    return za === zb ? 0 : za < zb ? -1 : 1;
-  });
+/** Places in order, where those before `end` are in order and so are the others. */
+function mergedOrder(all: Columns, end: number): Uint32Array {
+  const order = new Uint32Array(all.x.length);
+  for (let at = 0, i = 0, j = end; at < order.length; at++)
+    order[at] = i < end && (j === order.length || compare(all, i, j) <= 0) ? i++ : j++;
+  return order;
 }
 
 /** Rank of each value among the distinct ones, from 0. */

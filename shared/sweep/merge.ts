@@ -1,7 +1,7 @@
 import { bestOf } from './band.ts';
 import type { ChunkResult } from './chunk.ts';
 import { addDensities } from './density.ts';
-import { nonDominatedInThree } from './front-in-three.ts';
+import { joinFronts } from './front-in-three.ts';
 import { FrontBuilder } from './front.ts';
 
 /**
@@ -24,8 +24,8 @@ export function mergeChunks(a: ChunkResult, b: ChunkResult): ChunkResult {
     feasible: a.feasible + b.feasible,
     failed: add(a.failed, b.failed),
     failedOnly: add(a.failedOnly, b.failedOnly),
-    withoutX: pick(a.withoutX, b.withoutX, without),
     failedFirst: add(a.failedFirst, b.failedFirst),
+    withoutX: pick(a.withoutX, b.withoutX, without),
     withoutY: pick(a.withoutY, b.withoutY, without),
     withoutIndex: pick(a.withoutIndex, b.withoutIndex, without),
     bestValue: pick(a.bestValue, b.bestValue, best),
@@ -77,7 +77,7 @@ function mergeFronts(a: ChunkResult, b: ChunkResult): ChunkResult['front'] {
 }
 
 /** Nothing without a third measure; the empty chunk has none either way. */
-function mergeInThree(a: ChunkResult, b: ChunkResult): Pick<ChunkResult, 'frontInThree'> {
-  const lists = [a.frontInThree, b.frontInThree].filter((list) => list !== undefined);
-  return lists.length === 0 ? {} : { frontInThree: nonDominatedInThree(lists) };
+function mergeInThree({ frontInThree: a }: ChunkResult, { frontInThree: b }: ChunkResult) {
+  const frontInThree = a === undefined || b === undefined ? (a ?? b) : joinFronts(a, b);
+  return frontInThree && { frontInThree };
 }

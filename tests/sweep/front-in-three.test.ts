@@ -4,7 +4,7 @@ import {
   FrontInThreeBuilder,
   MOST_HELD_IN_THREE,
   MOST_SHOWN_IN_THREE,
-  nonDominatedInThree,
+  joinFronts,
   resultInThree,
   type FrontInThree,
 } from '#shared/sweep/front-in-three.ts';
@@ -86,9 +86,9 @@ describe('the front of three measures', () => {
           order.slice(Math.max(a, b)),
         ].map((indices) => build(points, indices));
         const [first, second, third] = parts as [FrontInThree, FrontInThree, FrontInThree];
-        expect(nonDominatedInThree(parts)).toEqual(whole);
-        expect(nonDominatedInThree([nonDominatedInThree([third, first]), second])).toEqual(whole);
-        expect(nonDominatedInThree([first, nonDominatedInThree([second, third])])).toEqual(whole);
+        expect(joinFronts(joinFronts(first, second), third)).toEqual(whole);
+        expect(joinFronts(joinFronts(third, first), second)).toEqual(whole);
+        expect(joinFronts(first, joinFronts(second, third))).toEqual(whole);
       }),
       { numRuns: runs, seed },
     );
@@ -140,6 +140,6 @@ describe('the front of three measures', () => {
     for (let i = 0; i <= MOST_HELD_IN_THREE; i++) builder.add(i, 0, -i, i);
     const given = builder.finish();
     expect(resultInThree(given, LESS)).toEqual({ count: null, points: [] });
-    expect(resultInThree(nonDominatedInThree([build([[0, 0, 0]]), given]), LESS).count).toBeNull();
+    expect(resultInThree(joinFronts(build([[0, 0, 0]]), given), LESS).count).toBeNull();
   });
 });
