@@ -3,12 +3,14 @@ import { describe, expect, it } from 'vitest';
 import { CHECK_IDS } from '#shared/engine/evaluation.ts';
 import { evaluateSection } from '#shared/engine/evaluate.ts';
 import { MEASURE_DIRECTION } from '#shared/engine/measures.ts';
+import type { SectionInput } from '#shared/engine/section.ts';
 import { BAND_SHARE } from '#shared/sweep/band.ts';
 import { countCannotFit } from '#shared/sweep/cannot-fit.ts';
 import { finishResult } from '#shared/sweep/finish.ts';
 import { nonDominated } from '#shared/sweep/front.ts';
 import { prepareSweep } from '#shared/sweep/prepared-sweep.ts';
 import type { SweepProblem, View } from '#shared/sweep/problem.ts';
+import { EDGE_AXES } from '#shared/sweep/result.ts';
 import { sectionAt, spaceSize } from '#shared/sweep/space.ts';
 import { sweepRange } from '#shared/sweep/sweep-range.ts';
 import { PROPERTIES } from '#shared/verification/properties.ts';
@@ -26,6 +28,12 @@ function run(problem: SweepProblem, view: View = VIEW) {
   };
 }
 
+const VALUE_ON = {
+  width: (section: SectionInput) => section.widthMm,
+  depth: (section: SectionInput) => section.depthMm,
+  fc: (section: SectionInput) => section.fcMPa,
+};
+
 const sum = (counts: readonly { readonly count: number }[]) =>
   counts.reduce((total, { count }) => total + count, 0);
 
@@ -41,6 +49,7 @@ describe('the result of a sweep', () => {
             index,
             failed,
             hasNumbers: flexure !== null,
+            section: sectionAt(space, index),
             measures,
             x: measures.steelKgPerM!,
             y: measures.curvatureDuctility!,
@@ -65,6 +74,20 @@ describe('the result of a sweep', () => {
           const best = only.filter((s) => s.hasNumbers).sort((a, b) => a.x - b.x || a.index - b.index)[0];
           expect(failure.bestWithout).toEqual(best ? { index: best.index, x: best.x, y: best.y } : null);
         }
+        const ends = EDGE_AXES.flatMap((axis) => {
+          const values = all.map(({ section }) => VALUE_ON[axis](section));
+          const [low, high] = [Math.min(...values), Math.max(...values)];
+          const shareAt = (edge: number) =>
+            result.front.filter(({ x, y }) =>
+              feasible.every((s) => s.x !== x || s.y !== y || VALUE_ON[axis](s.section) === edge),
+            ).length / result.front.length;
+          if (low === high) return [];
+          return [
+            { axis, end: 'low', share: shareAt(low) },
+            { axis, end: 'high', share: shareAt(high) },
+          ];
+        });
+        expect(result.edges).toEqual(ends.filter(({ share }) => share > 0));
         const lightest = Math.min(...feasible.map((s) => s.x));
         const near = feasible
           .filter((s) => s.x <= lightest + BAND_SHARE * lightest)

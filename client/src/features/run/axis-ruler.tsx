@@ -25,10 +25,13 @@ interface AxisRulerProps {
 }
 
 function edgeWords(edges: readonly EdgeShare[], ends: readonly [string, string]): string | null {
-  const worst = edges.toSorted((a, b) => b.share - a.share)[0];
-  if (worst === undefined || worst.share < WORTH_TELLING) return null;
-  const end = worst.end === 'low' ? ends[0] : ends[1];
-  return `${formatNumber(worst.share * 100, 2, true)} % of front at ${end}`;
+  const told = edges.filter(({ share }) => share >= WORTH_TELLING).toSorted((a, b) => b.share - a.share);
+  if (told.length === 0) return null;
+  const parts = told.map(({ share, end }) => {
+    const value = end === 'low' ? ends[0] : ends[1];
+    return `${formatNumber(share * 100, 2, true)} % of front at ${value}`;
+  });
+  return parts.join(', ');
 }
 
 /** One axis drawn as a scale ruler: what share of each value meets every check, and where the chosen section lies. */

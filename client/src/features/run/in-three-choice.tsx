@@ -2,6 +2,7 @@ import { MEASURE_IDS, type MeasureId } from '#shared/engine/measures.ts';
 import { formatWhole } from '#shared/print/format-quantity.ts';
 import { measureLabel } from '#shared/print/measure-labels.ts';
 import type { MeasureReader } from '#shared/print/measure-reader.ts';
+import { MOST_HELD_IN_THREE } from '#shared/sweep/front-in-three.ts';
 import type { ExploreKey } from '#shared/sweep/explore-axis.ts';
 import type { View } from '#shared/sweep/problem.ts';
 import type { ResultInThree } from '#shared/sweep/result.ts';
@@ -19,16 +20,16 @@ interface InThreeChoiceProps {
 const isMeasure = (key: ExploreKey | null): key is MeasureId => MEASURE_IDS.some((id) => id === key);
 
 /** What the marks are, once the front in three measures is asked for. */
-function marksText(inThree: ResultInThree | null, leading: string): string {
+function marksText(inThree: ResultInThree | null, best: string): string {
   if (inThree === null) return 'The front in three measures is being found; the marks are those of the line.';
   const { count, points } = inThree;
   if (count === null && points.length === 0)
-    return 'More sections than can be held are on the front in three measures. Set the axes to measures that go together more closely, or make the ranges of the sweep shorter; the marks are those of the line.';
-  const are = points.length === 1 ? 'section that no other equals' : 'sections that no other equals';
-  const words = `Marks: ${formatWhole(points.length)} ${are} or beats in all three measures. Line: the front in two.`;
+    return `More than ${formatWhole(MOST_HELD_IN_THREE)} sections are on the front in three measures: too many to be held. The marks are those of the line. Another third measure, or shorter ranges in the sweep, give a shorter one.`;
+  const sections = `${formatWhole(points.length)} ${points.length === 1 ? 'section' : 'sections'}`;
+  const words = `Marks: ${sections} that can be bettered in none of the three measures without loss in another. Line: the same in the two of the axes.`;
   return count === null || count === points.length
     ? words
-    : `${words} There are ${formatWhole(count)}; marked and listed are those with the best ${leading}.`;
+    : `${words} There are ${formatWhole(count)}; marked and listed are those with the ${best}.`;
 }
 
 /** Offers the front in three measures where the marks tell a measure that no axis shows. */
@@ -36,9 +37,12 @@ export function InThreeChoice(props: InThreeChoiceProps) {
   const { view, third, inThree, isByBounds, reader, onChange } = props;
   if (!isMeasure(third) || third === view.x || third === view.y) return null;
   const isOn = view.z === third;
+  const leading = measureLabel(view.x, reader.units);
+  const best = `${leading.better === 'less' ? 'least' : 'most'} ${leading.name.toLowerCase()}`;
   return (
-    <span className="flex flex-wrap items-baseline gap-x-3 gap-y-1 text-xs text-muted">
+    <>
       <CheckboxField
+        className="text-xs text-muted"
         label="Front in three measures"
         checked={isOn}
         disabled={isByBounds}
@@ -46,8 +50,10 @@ export function InThreeChoice(props: InThreeChoiceProps) {
         onChange={(event) => onChange(event.target.checked)}
       />
       {isOn && (
-        <span role="status">{marksText(inThree, measureLabel(view.x, reader.units).name.toLowerCase())}</span>
+        <span role="status" className="order-last basis-full text-xs text-muted">
+          {marksText(inThree, best)}
+        </span>
       )}
-    </span>
+    </>
   );
 }

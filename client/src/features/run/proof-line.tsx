@@ -8,6 +8,7 @@ export function ProofLine({ run, progress }: { readonly run: Run; readonly progr
   if (progress === null || result === null)
     return <footer className="min-h-8 border-t border-ink px-4 py-1.5 sm:px-5">&nbsp;</footer>;
   const claim = proofClaim(result, progress.state);
+  const inThree = result.frontInThree?.count ?? null;
   return (
     <footer className="num flex flex-wrap gap-x-6 gap-y-1 border-t border-ink px-4 py-1.5 text-sm sm:px-5">
       <strong className={`font-semibold ${result.front.length === 0 ? 'text-fails' : 'text-meets'}`}>
@@ -15,6 +16,7 @@ export function ProofLine({ run, progress }: { readonly run: Run; readonly progr
       </strong>
       <span className={result.feasible === null ? 'text-muted' : undefined}>{feasibleClaim(result)}</span>
       <span>front {formatWhole(result.front.length)}</span>
+      {inThree !== null && <span>in three measures {formatWhole(inThree)}</span>}
       <span title="Equal for equal results, whatever the machine">{result.hash}</span>
       <span className="ml-auto text-muted">
         {formatDuration(progress.elapsedMs)}, engine {run.engineVersion}
