@@ -1,21 +1,36 @@
 /**
- * A run of a million sections as a person meets it: from the click on Run to the frame that shows the final front, by the
- * browser's own clock, and what a first visit has to fetch before that.
+ * Runs of a million and of ten million sections as a person meets them: from the click on Run to the frame that shows the
+ * final front, by the browser's own clock, and what a first visit has to fetch before that.
  */
 import type { Page } from 'playwright-core';
 import { INITIAL_SCRIPT_LIMIT_KB, measureInitialScriptKb } from '#server/cli/initial-script-size.mjs';
 import { joinPostgres, leavePostgres } from '#server/cli/postgres.mjs';
 import { TEST_FOLDER } from '#server/cli/project-paths.mjs';
 import type { Sweep } from '#shared/contract/records.ts';
+import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
 import { launchChromium, openProfile, Visit } from '../tests/support/browser.ts';
 import { beamId, CLINIC } from '../tests/support/browser-demo.ts';
 import { startDemoService } from '../tests/support/browser-service.ts';
 import { scaledSweep } from '../tests/support/office-project.ts';
 
-const MILLION = scaledSweep(20, 521);
-const MILLION_COUNT = 20 * 521 * 96;
-const ROUNDS = 7;
-const TARGET_MS = 1500;
+interface Size {
+  readonly name: string;
+  readonly definition: SweepDefinition;
+  readonly count: number;
+  readonly rounds: number;
+  readonly targetMs: number;
+}
+
+const SIZES: readonly Size[] = [
+  { name: 'A million', definition: scaledSweep(20, 521), count: 20 * 521 * 96, rounds: 7, targetMs: 1500 },
+  {
+    name: 'Ten million',
+    definition: scaledSweep(58, 1801),
+    count: 58 * 1801 * 96,
+    rounds: 5,
+    targetMs: 2000,
+  },
+];
 
 const { maintenanceUrl } = await joinPostgres(TEST_FOLDER, { isDisposable: true });
 const service = await startDemoService(maintenanceUrl);
@@ -23,44 +38,52 @@ const browser = await launchChromium();
 try {
   const visit = await Visit.begin(await openProfile(browser, service.origin), service.origin);
   await visit.signIn('engineer');
-  await measureRound(visit, 'warm-up');
-  const times: number[] = [];
-  for (let round = 1; round <= ROUNDS; round++) times.push(await measureRound(visit, `round ${round}`));
-  report(times);
+  await measureRound(visit, SIZES[0]!, 'warm-up');
+  for (const size of SIZES) {
+    const times: number[] = [];
+    for (let round = 1; round <= size.rounds; round++)
+      times.push(await measureRound(visit, size, `round ${round}`));
+    report(size, times);
+  }
+  reportScript();
 } finally {
   await browser.close();
   await service.close();
   await leavePostgres(TEST_FOLDER);
 }
 
-function report(times: readonly number[]): void {
-  const sorted = [...times].sort((a, b) => a - b);
-  const median = sorted[ROUNDS >> 1]!;
-  const scriptKb = measureInitialScriptKb();
+function report({ count, rounds, targetMs }: Size, times: readonly number[]): void {
+  const sorted = [...times].sort((x, y) => x - y);
+  const median = sorted[rounds >> 1]!;
   console.log(
-    `run of ${MILLION_COUNT} sections, click to final front on screen: median ${median.toFixed(0)} ms, ` +
+    `run of ${count} sections, click to final front on screen: median ${median.toFixed(0)} ms, ` +
       `${sorted[0]!.toFixed(0)} to ${sorted.at(-1)!.toFixed(0)} ms, ` +
-      `${(median / TARGET_MS).toFixed(2)} of the ${TARGET_MS} ms aimed at`,
+      `${(median / targetMs).toFixed(2)} of the ${targetMs} ms aimed at`,
   );
+  if (median > targetMs) process.exitCode = 1;
+}
+
+function reportScript(): void {
+  const scriptKb = measureInitialScriptKb();
   console.log(
     `initial script: ${scriptKb.toFixed(1)} kB gzip, ` +
       `${(scriptKb / INITIAL_SCRIPT_LIMIT_KB).toFixed(2)} of the ${INITIAL_SCRIPT_LIMIT_KB} kB allowed`,
   );
-  if (median > TARGET_MS || scriptKb > INITIAL_SCRIPT_LIMIT_KB) process.exitCode = 1;
+  if (scriptKb > INITIAL_SCRIPT_LIMIT_KB) process.exitCode = 1;
 }
 
-async function measureRound(visit: Visit, name: string): Promise<number> {
+async function measureRound(visit: Visit, size: Size, round: string): Promise<number> {
   const { page } = visit;
   const sweep = await visit.call<Sweep>('post', `/beams/${beamId('clinic', 'G3')}/sweeps`, {
-    name: `A million, ${name}`,
-    definition: MILLION,
+    name: `${size.name}, ${round}`,
+    definition: size.definition,
   });
   await visit.open(`${CLINIC}/sweeps/${sweep.id}`);
   // Somebody has read the form before they click.
   await page.waitForLoadState('networkidle');
   const painted = timeFromClickToFront(
     page,
-    `${MILLION_COUNT.toLocaleString('en-US')} sections evaluated, none`,
+    `${size.count.toLocaleString('en-US')} sections evaluated, none`,
   );
   await page.getByRole('button', { name: 'Run', exact: true }).click();
   return painted;

@@ -1,7 +1,8 @@
 /**
  * The service as a client meets it, on a database of its own: the time from the click that starts a run of a million, and
- * of ten million, sections to its final result on the stream, and the commonest reads; then what people wait for while a
- * run of a hundred and seventy million keeps the threads busy, and how soon that is cancelled.
+ * of ten million, sections to its final result on the stream, and the commonest reads; sections evaluated for many at once;
+ * then what people wait for while a run of a hundred and seventy million keeps the threads busy, and how soon that is
+ * cancelled. Client and service share a process here, so the service alone is a little faster.
  */
 import { randomUUID } from 'node:crypto';
 import pg from 'pg';
@@ -26,6 +27,10 @@ const LARGE_ROUNDS = 3;
 const CANCELS = 5;
 /** Views opened beside each of them: each pair of measures once. */
 const RANKS = 20;
+/** Views of the run of a million opened beside each: four at once are under way at most. */
+const VIEWS = 4;
+/** People who ask at once, each for the next as soon as they are answered. */
+const CLIENTS = 8;
 /** Of the whole way to the screen, 1.5 s, this much is the server's. */
 const LIMIT_MS = 500;
 const READS = 300;
@@ -111,6 +116,17 @@ async function measure(): Promise<void> {
   const evaluate = () =>
     engineer.post(`/projects/${project.projectId}/evaluations`, evaluateInput).expect(200);
 
+  /** What each of several people at once waits, and how many are answered a second. */
+  async function load(name: string, requests: number): Promise<void> {
+    const startedAt = performance.now();
+    const lanes = await Promise.all(
+      Array.from({ length: CLIENTS }, () => time(requests / CLIENTS, evaluate)),
+    );
+    const perSecond = (requests * 1000) / (performance.now() - startedAt);
+    console.log(`${name}: ${describe(lanes.flat())}, ${p99(lanes.flat())}, ${perSecond.toFixed(0)} a second`);
+  }
+  await load(`${CLIENTS} people evaluating`, 2 * READS);
+
   const beside: Record<string, number[]> = {};
   const cancels: number[] = [];
   for (let round = 0; round < CANCELS; round++) {
@@ -118,14 +134,22 @@ async function measure(): Promise<void> {
     const stream = await followRun(office, engineer, { runId: huge });
     await stream.until(({ progress }) => progress.evaluated > 0);
     const some = READS / CANCELS;
+    const counts: Record<string, number> = {
+      'rank a small run anew': RANKS,
+      'open a view of the million': VIEWS,
+    };
     const act = {
       evaluate,
       'rank a small run anew': () => rank(next++),
       'read a run': () => read(reads[0]!),
+      'open a view of the million': () =>
+        engineer.post(`/runs/${million.runId}/views`, { ...views[++nextView], z: null }).expect(200),
     };
     let next = round * RANKS;
+    let nextView = round * VIEWS;
     for (const [name, once] of Object.entries(act))
-      beside[name] = [...(beside[name] ?? []), ...(await time(name.startsWith('rank') ? RANKS : some, once))];
+      beside[name] = [...(beside[name] ?? []), ...(await time(counts[name] ?? some, once))];
+    if (round === CANCELS - 1) await load(`${CLIENTS} people evaluating beside a sweep`, READS);
     cancels.push(
       ...(await time(1, async () => {
         await engineer.post(`/runs/${huge}/cancel`).expect(200);
@@ -135,9 +159,7 @@ async function measure(): Promise<void> {
     stream.close();
   }
   for (const [name, times] of Object.entries(beside))
-    console.log(
-      `beside a sweep, ${name}: ${describe(times)}, 99th percentile ${percentile(times, 0.99).toFixed(1)} ms (limit ${BESIDE_LIMIT_MS} ms)`,
-    );
+    console.log(`beside a sweep, ${name}: ${describe(times)}, ${p99(times)} (limit ${BESIDE_LIMIT_MS} ms)`);
   console.log(`cancel to what is kept: ${describe(cancels)} (limit 1000 ms)`);
   if (median(million.times) > LIMIT_MS) process.exitCode = 1;
 }
@@ -151,6 +173,8 @@ function percentile(values: readonly number[], share: number): number {
   const sorted = [...values].sort((a, b) => a - b);
   return sorted[Math.min(sorted.length - 1, Math.ceil(share * sorted.length) - 1)]!;
 }
+
+const p99 = (times: readonly number[]) => `99th percentile ${percentile(times, 0.99).toFixed(1)} ms`;
 
 function median(values: readonly number[]): number {
   return [...values].sort((a, b) => a - b)[values.length >> 1]!;
