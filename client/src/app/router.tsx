@@ -35,6 +35,10 @@ const projectRoutes: RouteObject = {
       ...page(async () => (await import('./pages/sweep-page.tsx')).SweepPage),
     },
     { path: 'sweeps/:sweepId', ...page(async () => (await import('./pages/sweep-page.tsx')).SweepPage) },
+    {
+      path: 'runs/:runId/against/:baselineId',
+      ...page(async () => (await import('./pages/difference-page.tsx')).DifferencePage),
+    },
     { path: 'runs/:runId', ...page(async () => (await import('./pages/run-page.tsx')).RunPage) },
     { path: 'section', ...page(async () => (await import('./pages/section-page.tsx')).SectionPage) },
     {
@@ -75,6 +79,18 @@ const routes: RouteObject[] = [
                     ...page(async () => (await import('./pages/new-project-page.tsx')).NewProjectPage),
                   },
                   projectRoutes,
+                  {
+                    path: 'office-standards',
+                    ...page(
+                      async () => (await import('./pages/office-standards-page.tsx')).OfficeStandardsPage,
+                    ),
+                  },
+                  ...['office-standards/new', 'office-standards/:standardId'].map((path) => ({
+                    path,
+                    ...page(
+                      async () => (await import('./pages/office-standard-page.tsx')).OfficeStandardPage,
+                    ),
+                  })),
                   {
                     path: 'verification',
                     ...page(async () => (await import('./pages/verification-page.tsx')).VerificationPage),

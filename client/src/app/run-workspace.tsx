@@ -1,4 +1,4 @@
-import { useMemo } from 'react';
+import { lazy, Suspense, useMemo } from 'react';
 import { useNavigate } from 'react-router-dom';
 import type { Project, Run } from '#shared/contract/records.ts';
 import { Inspector } from '#client/src/features/inspector/inspector.tsx';
@@ -23,6 +23,10 @@ import { Skeleton } from '#client/src/ui/skeleton.tsx';
 import { RunBelowChart } from './run-below-chart.tsx';
 import { useRunPins } from './use-run-pins.ts';
 import { useRunShortcuts } from './use-run-shortcuts.ts';
+
+/** Their floating parts are not needed for the first look. */
+const RunViews = lazy(async () => ({ default: (await import('./run-views.tsx')).RunViews }));
+const RunMenu = lazy(async () => ({ default: (await import('./run-menu.tsx')).RunMenu }));
 
 interface RunWorkspaceProps {
   readonly run: Run;
@@ -196,7 +200,15 @@ export function RunWorkspace({ run, project }: RunWorkspaceProps) {
             mayStop={mayRun}
             isStopping={state.cancel.isPending}
             onStop={() => state.cancel.mutate()}
-            actions={<HeadActions run={run} isUnfinished={isOver && progress.state !== 'finished'} />}
+            actions={
+              <>
+                <Suspense>
+                  <RunViews run={run} state={state} />
+                  <RunMenu run={run} />
+                </Suspense>
+                <HeadActions run={run} isUnfinished={isOver && progress.state !== 'finished'} />
+              </>
+            }
           />
         }
         space={space}

@@ -12,10 +12,16 @@ export const paths = {
   newSweep: (projectId: string, beamId: string) => `/projects/${projectId}/beams/${beamId}/sweeps/new`,
   sweep: (projectId: string, sweepId: string) => `/projects/${projectId}/sweeps/${sweepId}`,
   run: (projectId: string, runId: string) => `/projects/${projectId}/runs/${runId}`,
+  /** One run set against another, which is the baseline. */
+  difference: (projectId: string, runId: string, baselineId: string) =>
+    `/projects/${projectId}/runs/${runId}/against/${baselineId}`,
   section: (projectId: string) => `/projects/${projectId}/section`,
   candidate: (projectId: string, candidateId: string) => `/projects/${projectId}/candidates/${candidateId}`,
   verification: () => '/verification',
   operations: () => '/operations',
+  officeStandards: () => '/office-standards',
+  newOfficeStandard: () => '/office-standards/new',
+  officeStandard: (standardId: string) => `/office-standards/${standardId}`,
   sheet: (projectId: string, candidateId: string) => `/projects/${projectId}/candidates/${candidateId}/sheet`,
   shared: (token: string) => `/shared/${token}`,
 };

@@ -12,6 +12,9 @@ export const ACTIONS = [
   'comment',
   'share',
   'see-rates',
+  'save-views',
+  'see-standards',
+  'set-standards',
   'operate',
 ] as const;
 export type Action = (typeof ACTIONS)[number];
@@ -28,9 +31,11 @@ const ALLOWED: Readonly<Record<Role, readonly Action[]>> = {
     'comment',
     'share',
     'see-rates',
+    'save-views',
+    'see-standards',
   ],
-  checker: ['comment', 'see-rates'],
-  estimator: ['edit-price-book', 'comment', 'see-rates'],
+  checker: ['comment', 'see-rates', 'save-views', 'see-standards'],
+  estimator: ['edit-price-book', 'comment', 'see-rates', 'save-views', 'see-standards'],
   viewer: [],
 };
 

@@ -1,12 +1,14 @@
 /** Keys of everything the client caches; features read and invalidate through them without seeing each other. */
 export const queryKeys = {
   session: () => ['session'] as const,
+  officeStandards: () => ['office-standards'] as const,
   people: () => ['people'] as const,
   projects: () => ['projects'] as const,
   project: (projectId: string) => ['project', projectId] as const,
   beams: (projectId: string) => ['project', projectId, 'beams'] as const,
   sweeps: (projectId: string) => ['project', projectId, 'sweeps'] as const,
   sweep: (sweepId: string) => ['sweep', sweepId] as const,
+  savedViews: (projectId: string) => ['project', projectId, 'saved-views'] as const,
   run: (runId: string) => ['run', runId] as const,
   view: (runId: string, x: string, y: string, z: string | null) => ['run', runId, 'view', x, y, z] as const,
   liveView: (runId: string, viewId: string) => ['run', runId, 'live', viewId] as const,

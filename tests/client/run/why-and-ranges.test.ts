@@ -4,6 +4,8 @@ import { prepareSweep } from '#shared/sweep/prepared-sweep.ts';
 import { spaceSize } from '#shared/sweep/space.ts';
 import { sweepRange } from '#shared/sweep/sweep-range.ts';
 import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
+import { CHECK_IDS } from '#shared/engine/evaluation.ts';
+import { checkSequence } from '#client/src/features/run/check-sequence.ts';
 import { carriedOn, edgeFindings } from '#client/src/features/run/edge-findings.ts';
 import { exploreKeys, snapValues } from '#client/src/features/run/explore-keys.ts';
 import { thirdMeasure } from '#client/src/features/run/mark-scale.ts';

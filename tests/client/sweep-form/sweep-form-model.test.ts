@@ -11,7 +11,7 @@ import {
 } from '#client/src/features/sweep-form/space-estimate.ts';
 import { firstSweepForm, sweepForm } from '#client/src/features/sweep-form/sweep-form-defaults.ts';
 import type { SweepFormValues } from '#client/src/features/sweep-form/sweep-form-values.ts';
-import { parseCounts, parseValueList } from '#client/src/features/sweep-form/value-list.ts';
+import { parseCounts, parseValueList } from '#client/src/lib/value-list.ts';
 import { countsText } from '#client/src/lib/counts-text.ts';
 import { groupsText, parseGroups } from '#client/src/lib/parse-bar-groups.ts';
 import { BEAM, PROJECT } from './office-project.ts';

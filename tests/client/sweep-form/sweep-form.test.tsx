@@ -19,6 +19,7 @@ function show(changed: Partial<SweepFormProps> = {}) {
     runs: [],
     isBusy: false,
     refusal: null,
+    presets: null,
     mayRun: true,
     onEdit: vi.fn(),
     onSave: vi.fn(),

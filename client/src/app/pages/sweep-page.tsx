@@ -1,13 +1,14 @@
-import { useQuery, useQueryClient } from '@tanstack/react-query';
+import { useQueryClient } from '@tanstack/react-query';
 import { useEffect, useState } from 'react';
-import { useNavigate, useParams, useSearchParams } from 'react-router-dom';
+import { useNavigate, useParams } from 'react-router-dom';
 import type { Beam, Sweep } from '#shared/contract/records.ts';
-import { beamsQuery } from '#client/src/features/beams/api.ts';
 import type { SweepInput } from '#client/src/features/sweep-form/read-sweep-form.ts';
 import { sweepDraft } from '#client/src/features/sweep-form/sweep-draft.ts';
+import type { OfficePreset } from '#client/src/features/sweep-form/office-preset.ts';
 import { firstSweepForm, sweepForm } from '#client/src/features/sweep-form/sweep-form-defaults.ts';
 import { SweepForm } from '#client/src/features/sweep-form/sweep-form.tsx';
-import { sweepQuery, useSaveSweep } from '#client/src/features/sweep-form/sweep-api.ts';
+import { useSaveSweep } from '#client/src/features/sweep-form/sweep-api.ts';
+import { ViewLinks } from '#client/src/features/saved-views/view-links.tsx';
 import { RunningLoadNote } from '#client/src/features/running-load/running-load-note.tsx';
 import { useStartRun } from '#client/src/features/sweeps/api.ts';
 import { RunTable } from '#client/src/features/sweeps/run-table.tsx';
@@ -22,17 +23,20 @@ import { PageCrumbs } from '#client/src/ui/page-crumbs.tsx';
 import { PageHeader } from '#client/src/ui/page-header.tsx';
 import { Skeleton } from '#client/src/ui/skeleton.tsx';
 import { notify } from '#client/src/ui/toast.tsx';
+import { useSweepSource, type CopySource } from '../use-sweep-source.ts';
 
 interface EditorProps {
   readonly beam: Beam;
   /** The sweep being changed; null for a new one. */
   readonly sweep: Sweep | null;
   /** The sweep a new one is copied from. */
-  readonly copyOf: Sweep | null;
+  readonly copyOf: CopySource | null;
+  /** Null for who fills no form, and while the standards cannot be had. */
+  readonly presets: readonly OfficePreset[] | null;
 }
 
 /** The form with its draft: what was typed and not saved is there again after a reload or a way back. */
-function SweepEditor({ beam, sweep, copyOf }: EditorProps) {
+function SweepEditor({ beam, sweep, copyOf, presets }: EditorProps) {
   const project = useProject();
   const mayRun = useMay('run-sweeps');
   const navigate = useNavigate();
@@ -40,10 +44,9 @@ function SweepEditor({ beam, sweep, copyOf }: EditorProps) {
   const { units } = project.designBasis;
   const draftId = sweep?.id ?? `${beam.id} ${copyOf?.id ?? ''}`;
   const stored = () => {
-    const source = sweep ?? copyOf;
-    if (source === null) return firstSweepForm(project, beam);
-    const form = sweepForm(source, units);
-    return sweep === null ? { ...form, name: `${form.name}, copy` } : form;
+    if (sweep !== null) return sweepForm(sweep, units);
+    if (copyOf === null) return firstSweepForm(project, beam, presets?.[0] ?? null);
+    return { ...sweepForm(copyOf, units), name: copyOf.copyName.slice(0, LONGEST_NAME) };
   };
   const [start, setStart] = useState(() => {
     const draft = sweepDraft.read(draftId);
@@ -98,6 +101,7 @@ function SweepEditor({ beam, sweep, copyOf }: EditorProps) {
         project={project}
         initial={start.form}
         runs={sweep?.runs ?? []}
+        presets={presets}
         isBusy={save.isPending || run.isPending}
         refusal={save.error ?? run.error}
         mayRun={mayRun}
@@ -110,11 +114,15 @@ function SweepEditor({ beam, sweep, copyOf }: EditorProps) {
         <section className="mt-4 border-t border-ink pt-2">
           <h2 className="pb-2 text-sm font-semibold">Runs of this sweep</h2>
           <RunTable projectId={project.id} sweepName={sweep.name} runs={sweep.runs} />
+          <ViewLinks projectId={project.id} sweepId={sweep.id} />
         </section>
       )}
     </>
   );
 }
+
+/** As the contract takes it. */
+const LONGEST_NAME = 120;
 
 /** The page a run opens on, fetched while its sweep is being typed. */
 const preloadRunPage = (): void => void import('./run-page.tsx');
@@ -127,16 +135,9 @@ export function SweepPage() {
   const project = useProject();
   const mayRun = useMay('run-sweeps');
   useEffect(preloadRunPage, []);
-  const { beamId, sweepId } = useParams();
-  const copyId = useSearchParams()[0].get('from');
-  const beams = useQuery(beamsQuery(project.id));
-  const wantedSweep = sweepId ?? copyId;
-  const sweep = useQuery({ ...sweepQuery(wantedSweep ?? ''), enabled: wantedSweep !== null });
-
-  const beam = beams.data?.find((one) => one.id === (beamId ?? sweep.data?.beamId));
-  const isWaiting = beams.isPending || (wantedSweep !== null && sweep.isPending);
-  const name = sweepId === undefined ? 'New sweep' : (sweep.data?.name ?? 'Sweep');
-  const failure = beams.error ?? (wantedSweep === null ? null : sweep.error);
+  const { sweepId } = useParams();
+  const { beam, sweep, copyOf, presets, isPending, error, retry } = useSweepSource();
+  const name = sweepId === undefined ? 'New sweep' : (sweep?.name ?? 'Sweep');
   return (
     <PageBody>
       <PageCrumbs
@@ -153,19 +154,13 @@ export function SweepPage() {
         }
         actions={
           sweepId !== undefined && beam !== undefined && mayRun ? (
-            <ButtonLink to={`${paths.newSweep(project.id, beam.id)}?from=${sweepId}`}>
-              Copy to a new sweep
-            </ButtonLink>
+            <ButtonLink to={`${paths.newSweep(project.id, beam.id)}?from=${sweepId}`}>Duplicate</ButtonLink>
           ) : undefined
         }
       />
-      {failure !== null ? (
-        <ErrorState
-          error={failure}
-          title="The sweep could not be loaded"
-          onRetry={() => void Promise.all([beams.refetch(), wantedSweep === null ? null : sweep.refetch()])}
-        />
-      ) : isWaiting ? (
+      {error !== null ? (
+        <ErrorState error={error} title="The sweep could not be loaded" onRetry={retry} />
+      ) : isPending ? (
         <Skeleton lines={12} />
       ) : beam === undefined ? (
         <ErrorState
@@ -174,10 +169,11 @@ export function SweepPage() {
         />
       ) : (
         <SweepEditor
-          key={`${beam.id} ${sweepId ?? copyId ?? ''}`}
+          key={`${beam.id} ${sweepId ?? copyOf?.id ?? ''}`}
           beam={beam}
-          sweep={sweepId === undefined ? null : (sweep.data ?? null)}
-          copyOf={sweepId === undefined && copyId !== null ? (sweep.data ?? null) : null}
+          sweep={sweep}
+          copyOf={copyOf}
+          presets={presets}
         />
       )}
     </PageBody>

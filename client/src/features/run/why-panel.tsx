@@ -14,6 +14,7 @@ import { ladder, missedChecks, type MissedCheck, type Rung } from './missed-chec
 import type { SectionSource } from './section-source.ts';
 
 interface WhyPanelProps {
+import { SequenceList } from './sequence-list.tsx';
   readonly result: ViewResult;
   readonly definition: SweepDefinition;
   readonly source: SectionSource;
@@ -117,13 +118,13 @@ function Nearest({ missed, props }: { readonly missed: MissedCheck; readonly pro
 /** Why the rest fell out: how many each check took, what it alone keeps out, and by how much that misses. */
 export function WhyPanel(props: WhyPanelProps) {
   const { result, definition, source, reader } = props;
-  const rungs = useMemo(() => ladder(result), [result]);
+  const sequence = useMemo(() => checkSequence(result), [result]);
   const missed = useMemo(() => missedChecks(result, source), [result, source]);
   const label = measureLabel(result.view.x, reader.units);
   const most = missed[0]?.failed ?? 1;
   return (
     <section aria-label="Why the rest fell out, in full" className="grid grid-cols-[minmax(0,1fr)] gap-5">
-      <Ladder rungs={rungs} />
+      {sequence === null ? <Ladder rungs={ladder(result)} /> : <SequenceList sequence={sequence} />}
       {missed.length === 0 ? (
         <p className="text-sm text-muted">Nothing fell out: every section meets every check.</p>
       ) : (
@@ -138,6 +139,7 @@ export function WhyPanel(props: WhyPanelProps) {
             </span>
             <span className="inline-flex items-center gap-1.5">
               <span className="inline-block h-2.5 w-6 bg-fails" aria-hidden="true" />
+            <span>Each check by itself:</span>
               fail nothing else
             </span>
           </p>
@@ -160,7 +162,7 @@ export function WhyPanel(props: WhyPanelProps) {
                   <th scope="row">
                     {checkLabel(one.check).name}
                     <span className="num block text-xs font-normal text-muted">
-                      {checkWords(one.check, definition, reader.units).replace(/^the .*/, '')}
+                      {checkWords(one.check, definition, reader).replace(/^the .*/, '')}
                     </span>
                   </th>
                   <td>

@@ -62,6 +62,11 @@ export function AccountMenu({ onShortcuts }: { readonly onShortcuts: () => void 
         <DropdownMenu.Item className={item} asChild>
           <Link to={paths.verification()}>Verification book</Link>
         </DropdownMenu.Item>
+        {isAllowed(reader.role, 'see-standards') && (
+          <DropdownMenu.Item className={item} asChild>
+            <Link to={paths.officeStandards()}>Office standards</Link>
+          </DropdownMenu.Item>
+        )}
         {isAllowed(reader.role, 'operate') && (
           <DropdownMenu.Item className={item} asChild>
             <Link to={paths.operations()}>Workers and queue</Link>

@@ -5,7 +5,7 @@ import { SUPPORT_OPTIONS } from '#client/src/lib/support-options.ts';
 import { CheckboxField } from '#client/src/ui/checkbox-field.tsx';
 import { SelectField } from '#client/src/ui/select-field.tsx';
 import { NumberField } from '#client/src/ui/number-field.tsx';
-import { BarRack } from './bar-rack.tsx';
+import { BarRack } from '#client/src/section-fields/bar-rack.tsx';
 import { errorUnder, type FieldErrors } from '#client/src/lib/field-errors.ts';
 import type { SweepFormValues } from './sweep-form-values.ts';
 
@@ -130,7 +130,7 @@ export function RulesFields({ units, standard, values, errors, onChange }: Rules
           onChange={(columnWidthMm) => onChange({ ...values, columnWidthMm })}
         />
         <NumberField
-          label="Top steel A′s/As at least"
+          label="Compression steel A′s/As at least"
           hint="empty: any"
           kind="percent"
           units={units}

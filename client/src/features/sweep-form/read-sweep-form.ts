@@ -5,16 +5,16 @@ import type { z } from 'zod';
 import { errorsByField, type FieldErrors } from '#client/src/lib/field-errors.ts';
 import type { DisplayKind } from '#shared/print/units.ts';
 import { parseGroups } from '#client/src/lib/parse-bar-groups.ts';
+import { readStirrup } from '#client/src/section-fields/stirrup-values.ts';
 import { typedFlange } from '#client/src/section-fields/flange-values.ts';
 import {
   AXIS_NAMES,
   type AxisName,
   type AxisValues,
   type SteelValues,
-  type StirrupValues,
   type SweepFormValues,
 } from './sweep-form-values.ts';
-import { parseCounts, parseValueList } from './value-list.ts';
+import { parseCounts, parseValueList } from '#client/src/lib/value-list.ts';
 
 export type SweepInput = z.infer<typeof sweepInputSchema>;
 
@@ -64,10 +64,6 @@ function readSteel(steel: SteelValues, face: string, units: UnitSystem, problems
     none: steel.none,
     ...(mixed.kind === 'groups' && mixed.groups.length > 0 ? { mixed: mixed.groups } : {}),
   };
-}
-
-function readStirrup({ bar, legs, spacingMm, isDesigned }: StirrupValues) {
-  return bar === '' ? null : { bar, legs, spacingMm, ...(isDesigned ? { isDesigned } : {}) };
 }
 
 /**

@@ -5,7 +5,7 @@ import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import { parseGroups } from '#client/src/lib/parse-bar-groups.ts';
 import { AXIS_KIND } from './read-sweep-form.ts';
 import type { AxisName, AxisValues, SteelValues } from './sweep-form-values.ts';
-import { parseCounts, parseValueList } from './value-list.ts';
+import { parseCounts, parseValueList } from '#client/src/lib/value-list.ts';
 
 /** Two threads of an ordinary machine; corrected by this sweep's own last run where there is one. */
 const USUAL_SECTIONS_PER_SECOND = 8_000_000;

@@ -1,12 +1,13 @@
+import { useDeferredValue, useMemo } from 'react';
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
-import type { DesignBasis } from '#shared/engine/section.ts';
 import { codeSymbols } from '#shared/print/code-symbols.ts';
 import { AxisField } from './axis-field.tsx';
 import { type FieldErrors } from '#client/src/lib/field-errors.ts';
 import { axisCount, steelCount } from './space-estimate.ts';
+import { fitPreview, type FitBasis } from './fit-preview.ts';
 import { SlabField } from './slab-field.tsx';
 import { SteelField } from './steel-field.tsx';
-import { StirrupsField } from './stirrups-field.tsx';
+import { StirrupsField } from '#client/src/section-fields/stirrups-field.tsx';
 import {
   AXIS_NAMES,
   STEEL_FACES,
@@ -17,7 +18,7 @@ import {
 
 interface SpaceFieldsProps {
   readonly units: UnitSystem;
-  readonly basis: Pick<DesignBasis, 'ruleSet' | 'barStandard'>;
+  readonly basis: FitBasis;
   readonly form: SweepFormValues;
   readonly errors: FieldErrors;
   readonly onChange: (form: SweepFormValues) => void;
@@ -34,6 +35,15 @@ function withSteel(form: SweepFormValues, face: SteelFace, next: SteelValues): S
 
 /** Every axis of the space with the number of values it makes. */
 export function SpaceFields({ units, basis, form, errors, onChange }: SpaceFieldsProps) {
+  // Typing goes before the picture of it.
+  const drawn = useDeferredValue(form);
+  const fits = useMemo(
+    () => ({
+      tension: fitPreview(drawn, 'tension', basis, units),
+      compression: fitPreview(drawn, 'compression', basis, units),
+    }),
+    [drawn, basis, units],
+  );
   return (
     <div>
       {AXIS_NAMES.map((name) => (
@@ -59,6 +69,7 @@ export function SpaceFields({ units, basis, form, errors, onChange }: SpaceField
           values={form.steel[face]}
           errors={errors}
           setCount={steelCount(form.steel[face], units)}
+          fit={fits[face]}
           onChange={(values) => onChange(withSteel(form, face, values))}
         />
       ))}
@@ -67,6 +78,8 @@ export function SpaceFields({ units, basis, form, errors, onChange }: SpaceField
         standard={basis.barStandard}
         values={form.stirrups}
         errors={errors}
+        path="space.stirrups"
+        mayBeNone
         onChange={(stirrups) => onChange({ ...form, stirrups })}
       />
     </div>

@@ -6,8 +6,10 @@ import { CheckboxField } from '#client/src/ui/checkbox-field.tsx';
 import { ListField } from '#client/src/ui/list-field.tsx';
 import { NumberField } from '#client/src/ui/number-field.tsx';
 import { SegmentedControl } from '#client/src/ui/segmented-control.tsx';
-import { BarRack } from './bar-rack.tsx';
+import { BarRack } from '#client/src/section-fields/bar-rack.tsx';
 import { errorUnder, type FieldErrors } from '#client/src/lib/field-errors.ts';
+import type { FitPreview } from './fit-preview.ts';
+import { FitTable } from './fit-table.tsx';
 import type { SteelFace, SteelValues } from './sweep-form-values.ts';
 
 const FACE_LABEL: Readonly<Record<SteelFace, string>> = {
@@ -35,6 +37,8 @@ interface SteelFieldProps {
   readonly values: SteelValues;
   readonly errors: FieldErrors;
   readonly setCount: number | null;
+  /** What stands at the ends of the widths; null while that cannot be said. */
+  readonly fit: FitPreview | null;
   readonly onChange: (values: SteelValues) => void;
 }
 
@@ -44,7 +48,7 @@ function PlainAreas({
   values,
   errors,
   onChange,
-}: Omit<SteelFieldProps, 'setCount' | 'standard' | 'hogs'>) {
+}: Omit<SteelFieldProps, 'setCount' | 'standard' | 'hogs' | 'fit'>) {
   const areasError = errorUnder(errors, `space.${face}.areasMm2`);
   const placeError = errorUnder(errors, `space.${face}.at`);
   return (
@@ -93,8 +97,9 @@ function PlainAreas({
 
 /** The choices of steel on one face: sizes times counts, or plain areas of a published problem. */
 export function SteelField(props: SteelFieldProps) {
-  const { face, hogs, standard, values, errors, setCount, onChange } = props;
-  const name = PLACE_NAME[(face === 'tension') === hogs ? 'top' : 'bottom'];
+  const { face, hogs, standard, units, values, errors, setCount, fit, onChange } = props;
+  const place = (face === 'tension') === hogs ? 'top' : 'bottom';
+  const name = PLACE_NAME[place];
   const ownError = errors.get(`space.${face}`);
   return (
     <fieldset className="grid min-w-0 gap-x-5 gap-y-2 border-t border-rule py-3 sm:grid-cols-[9.5rem_7.5rem_minmax(0,1fr)_5.5rem] sm:items-start">
@@ -148,6 +153,7 @@ export function SteelField(props: SteelFieldProps) {
               />
             )}
           </div>
+          {fit !== null && <FitTable preview={fit} name={name} isAtTop={place === 'top'} units={units} />}
         </div>
       ) : (
         <PlainAreas {...props} />

@@ -1,23 +1,24 @@
 import { beamDemand } from '#shared/contract/beam-demand.ts';
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Beam, Project, Sweep } from '#shared/contract/records.ts';
-import type { BarStandard, Stirrup } from '#shared/engine/section.ts';
+import type { BarStandard } from '#shared/engine/section.ts';
 import { MPA_PER_PSI, MM_PER_IN } from '#shared/engine/units.ts';
 import type { AxisDefinition, SteelSetsDefinition } from '#shared/sweep/problem.ts';
 import { countsText } from '#client/src/lib/counts-text.ts';
 import type { DisplayKind } from '#shared/print/units.ts';
 import { groupsText } from '#client/src/lib/parse-bar-groups.ts';
+import { withPreset, type OfficePreset } from './office-preset.ts';
 import { AXIS_KIND } from './read-sweep-form.ts';
 import {
   AXIS_NAMES,
   type AxisName,
   type AxisValues,
   type SteelValues,
-  type StirrupValues,
   type SweepFormValues,
 } from './sweep-form-values.ts';
+import { stirrupValues } from '#client/src/section-fields/stirrup-values.ts';
 import { flangeValues, NO_FLANGE } from '#client/src/section-fields/flange-values.ts';
-import { valueListText } from './value-list.ts';
+import { valueListText } from '#client/src/lib/value-list.ts';
 
 /** Ranges a first sweep starts from: common practice for beams of buildings, no source. */
 const FIRST_RANGES: Readonly<Record<UnitSystem, Readonly<Record<'width' | 'depth' | 'fc', AxisValues>>>> = {
@@ -73,8 +74,17 @@ const bars = (sizes: readonly string[], counts: string, none: boolean, units: Un
   shareOfDepth: null,
 });
 
-/** A new sweep on a beam: the design basis, the beam's demand, and ranges an office would start from. */
-export function firstSweepForm(project: Project, beam: Beam): SweepFormValues {
+/** A new sweep on a beam: the design basis, the beam's demand, and the office's ranges, or those any office would start from. */
+export function firstSweepForm(
+  project: Project,
+  beam: Beam,
+  preset: OfficePreset | null = null,
+): SweepFormValues {
+  const form = plainFirstForm(project, beam);
+  return preset === null ? form : withPreset(form, preset, project.designBasis.units);
+}
+
+function plainFirstForm(project: Project, beam: Beam): SweepFormValues {
   const basis = project.designBasis;
   const { units } = basis;
   const first = FIRST_BARS[basis.barStandard];
@@ -103,6 +113,7 @@ export function firstSweepForm(project: Project, beam: Beam): SweepFormValues {
       requireHangers: true,
     },
     view: { x: 'steelKgPerM', y: 'curvatureDuctility' },
+    filledFrom: null,
   };
 }
 
@@ -134,11 +145,6 @@ function steelValues(sets: SteelSetsDefinition, units: UnitSystem): SteelValues 
     shareOfDepth: 'shareOfDepth' in sets.at ? sets.at.shareOfDepth : null,
   };
 }
-
-const stirrupValues = (stirrup: Stirrup | null): StirrupValues =>
-  stirrup === null
-    ? { bar: '', legs: 2, spacingMm: null, isDesigned: false }
-    : { ...stirrup, isDesigned: stirrup.isDesigned === true };
 
 /** A stored sweep as a form, to change or to copy. */
 export function sweepForm(sweep: Pick<Sweep, 'name' | 'definition'>, units: UnitSystem): SweepFormValues {

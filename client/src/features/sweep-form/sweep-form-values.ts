@@ -28,15 +28,6 @@ export interface SteelValues {
   readonly shareOfDepth: number | null;
 }
 
-export interface StirrupValues {
-  /** Designation; empty for a section without stirrups. */
-  readonly bar: string;
-  readonly legs: number | null;
-  readonly spacingMm: number | null;
-  /** The spacing is found for each section, and what is typed is the widest. */
-  readonly isDesigned: boolean;
-}
-
 export const AXIS_NAMES = ['width', 'depth', 'fc', 'fy', 'cover'] as const;
 export type AxisName = (typeof AXIS_NAMES)[number];
 

@@ -11,6 +11,8 @@ import { DemandFields, RulesFields } from './demand-and-rules-fields.tsx';
 import { FORM_ROOT, readSweepForm, type SweepInput } from './read-sweep-form.ts';
 import { errorsByField, issuesOf } from '#client/src/lib/field-errors.ts';
 import { FirstView } from './first-view.tsx';
+import type { OfficePreset } from './office-preset.ts';
+import { PresetField } from './preset-field.tsx';
 import { SpaceFields } from './space-fields.tsx';
 import { SpaceTally } from './space-tally.tsx';
 import type { SweepFormValues } from './sweep-form-values.ts';
@@ -19,6 +21,8 @@ export interface SweepFormProps {
   readonly project: Project;
   readonly initial: SweepFormValues;
   readonly runs: readonly RunSummary[];
+  /** What the form can be filled from; null where the reader fills none. */
+  readonly presets: readonly OfficePreset[] | null;
   readonly isBusy: boolean;
   /** What the service answered to the last attempt; null after success or before any. */
   readonly refusal: unknown;
@@ -41,7 +45,7 @@ function Part({ title, children }: { readonly title: string; readonly children: 
 
 /** The design space of a sweep, its targets and rules. Everything typed is kept whatever happens. */
 export function SweepForm(props: SweepFormProps) {
-  const { project, initial, runs, isBusy, refusal, mayRun, onEdit, onSave, onRun } = props;
+  const { project, initial, runs, presets, isBusy, refusal, mayRun, onEdit, onSave, onRun } = props;
   const { units, barStandard } = project.designBasis;
   const [form, setForm] = useState(initial);
   const [answered, setAnswered] = useState<SweepFormValues | null>(null);
@@ -100,6 +104,7 @@ export function SweepForm(props: SweepFormProps) {
           />
         </Part>
         <Part title="What may vary">
+          {presets !== null && <PresetField presets={presets} units={units} form={form} onChange={change} />}
           <SpaceFields
             units={units}
             basis={project.designBasis}

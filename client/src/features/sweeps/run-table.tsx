@@ -6,8 +6,8 @@ import { runStateLabel } from '#client/src/lib/state-labels.ts';
 import { StateTag } from '#client/src/ui/state-tag.tsx';
 import { TableFrame } from '#client/src/ui/table-frame.tsx';
 
-/** Run, state, sections, meet all checks, on the front, took, hash, started. */
-const SHARES = [8, 11, 12, 12, 10, 9, 18, 20];
+/** Run, state, sections, meet all checks, on the front, took, hash, started, difference. */
+const SHARES = [7, 10, 12, 11, 9, 8, 16, 17, 10];
 
 interface RunTableProps {
   readonly projectId: string;
@@ -36,10 +36,11 @@ export function RunTable({ projectId, sweepName, runs }: RunTableProps) {
           </th>
           <th scope="col">Hash</th>
           <th scope="col">Started</th>
+          <th scope="col">Difference</th>
         </tr>
       </thead>
       <tbody>
-        {runs.map((run) => (
+        {runs.map((run, k) => (
           <tr key={run.id} className="hover:bg-sheet">
             <th scope="row" className="whitespace-nowrap">
               <Link
@@ -69,10 +70,35 @@ export function RunTable({ projectId, sweepName, runs }: RunTableProps) {
             <td className="whitespace-nowrap text-muted">
               {formatDate(run.createdAt)}, {run.startedBy.name}
             </td>
+            <td className="whitespace-nowrap">
+              <ToEarlier projectId={projectId} run={run} earlier={runs.slice(k + 1)} />
+            </td>
           </tr>
         ))}
       </tbody>
     </TableFrame>
+  );
+}
+
+interface ToEarlierProps {
+  readonly projectId: string;
+  readonly run: RunSummary;
+  /** Runs before it, the latest first. */
+  readonly earlier: readonly RunSummary[];
+}
+
+/** To what changed since the run before that has anything to show. */
+function ToEarlier({ projectId, run, earlier }: ToEarlierProps) {
+  const baseline = earlier.find(({ evaluated }) => evaluated > 0);
+  if (baseline === undefined || run.evaluated === 0) return null;
+  return (
+    <Link
+      to={paths.difference(projectId, run.id, baseline.id)}
+      aria-label={`Run ${run.number} against run ${baseline.number}`}
+      className="underline decoration-concrete-edge hover:decoration-current"
+    >
+      to run {baseline.number}
+    </Link>
   );
 }
 

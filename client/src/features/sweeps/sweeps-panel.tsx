@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query';
-import { useState } from 'react';
+import { useState, type ReactNode } from 'react';
 import { Link, useNavigate } from 'react-router-dom';
 import type { Sweep } from '#shared/contract/records.ts';
 import { messageOf } from '#client/src/lib/api-error.ts';
@@ -16,7 +16,12 @@ import { Skeleton } from '#client/src/ui/skeleton.tsx';
 import { sweepsQuery, useDeleteSweep, useStartRun } from './api.ts';
 import { RunTable } from './run-table.tsx';
 
-export function SweepsPanel() {
+interface SweepsPanelProps {
+  /** What else belongs under a sweep's runs. */
+  readonly below: (sweep: Sweep) => ReactNode;
+}
+
+export function SweepsPanel({ below }: SweepsPanelProps) {
   const project = useProject();
   const sweeps = useQuery(sweepsQuery(project.id));
   const [doomed, setDoomed] = useState<Sweep | null>(null);
@@ -41,14 +46,20 @@ export function SweepsPanel() {
   return (
     <div className="grid grid-cols-[minmax(0,1fr)] gap-8">
       {sweeps.data.map((sweep) => (
-        <SweepEntry key={sweep.id} sweep={sweep} onDelete={() => setDoomed(sweep)} />
+        <SweepEntry key={sweep.id} sweep={sweep} below={below(sweep)} onDelete={() => setDoomed(sweep)} />
       ))}
       {doomed !== null && <DeleteSweepDialog sweep={doomed} onClose={() => setDoomed(null)} />}
     </div>
   );
 }
 
-function SweepEntry({ sweep, onDelete }: { readonly sweep: Sweep; readonly onDelete: () => void }) {
+interface SweepEntryProps {
+  readonly sweep: Sweep;
+  readonly below: ReactNode;
+  readonly onDelete: () => void;
+}
+
+function SweepEntry({ sweep, below, onDelete }: SweepEntryProps) {
   const navigate = useNavigate();
   const start = useStartRun(sweep.projectId);
   const mayRun = useMay('run-sweeps');
@@ -72,6 +83,13 @@ function SweepEntry({ sweep, onDelete }: { readonly sweep: Sweep; readonly onDel
             </Button>
             <ButtonLink
               look="text"
+              to={`${paths.newSweep(sweep.projectId, sweep.beamId)}?from=${sweep.id}`}
+              aria-label={`Duplicate ${sweep.name}`}
+            >
+              Duplicate
+            </ButtonLink>
+            <ButtonLink
+              look="text"
               to={paths.sweep(sweep.projectId, sweep.id)}
               aria-label={`Ranges of ${sweep.name}`}
             >
@@ -89,6 +107,7 @@ function SweepEntry({ sweep, onDelete }: { readonly sweep: Sweep; readonly onDel
       ) : (
         <RunTable projectId={sweep.projectId} sweepName={sweep.name} runs={sweep.runs} />
       )}
+      {below}
     </section>
   );
 }

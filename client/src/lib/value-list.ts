@@ -1,6 +1,6 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import { fieldText } from '#shared/print/format-quantity.ts';
-import { parseNumber } from '#client/src/lib/parse-number.ts';
+import { parseNumber } from './parse-number.ts';
 import { toStored, type DisplayKind } from '#shared/print/units.ts';
 
 /** Values read from a line of text, or what is wrong with it. */

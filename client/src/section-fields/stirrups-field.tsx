@@ -4,15 +4,19 @@ import type { BarStandard } from '#shared/engine/section.ts';
 import { Button } from '#client/src/ui/button.tsx';
 import { NumberField } from '#client/src/ui/number-field.tsx';
 import { SelectField } from '#client/src/ui/select-field.tsx';
-import { SpacingChoice } from '#client/src/section-fields/spacing-choice.tsx';
+import { SpacingChoice } from './spacing-choice.tsx';
 import { type FieldErrors } from '#client/src/lib/field-errors.ts';
-import type { StirrupValues } from './sweep-form-values.ts';
+import type { StirrupValues } from './stirrup-values.ts';
 
 interface StirrupsFieldProps {
   readonly units: UnitSystem;
   readonly standard: BarStandard;
   readonly values: readonly StirrupValues[];
   readonly errors: FieldErrors;
+  /** Of the list in the form's input. */
+  readonly path: string;
+  /** A choice may be a section without stirrups. */
+  readonly mayBeNone?: boolean;
   readonly onChange: (values: readonly StirrupValues[]) => void;
 }
 
@@ -22,15 +26,16 @@ const LARGEST_STIRRUP_MM = 26;
 const small = (text: string) => <span className="text-xs font-normal text-muted">{text}</span>;
 
 /** The choices of stirrups, one line each; every choice multiplies the space. */
-export function StirrupsField({ units, standard, values, errors, onChange }: StirrupsFieldProps) {
+export function StirrupsField(props: StirrupsFieldProps) {
+  const { units, standard, values, errors, path, mayBeNone = false, onChange } = props;
   const sizes = BARS[standard].filter((bar) => bar.diameterMm <= LARGEST_STIRRUP_MM);
   const options = [
-    { value: '', label: 'no stirrups' },
+    ...(mayBeNone ? [{ value: '', label: 'no stirrups' }] : []),
     ...sizes.map((bar) => ({ value: bar.designation, label: bar.designation })),
   ];
   const change = (place: number, part: Partial<StirrupValues>) =>
     onChange(values.map((stirrup, k) => (k === place ? { ...stirrup, ...part } : stirrup)));
-  const listError = errors.get('space.stirrups');
+  const listError = errors.get(path);
   return (
     <fieldset className="grid gap-x-5 gap-y-2 border-t border-rule py-3 sm:grid-cols-[9.5rem_1fr_5.5rem] sm:items-start">
       <legend className="sr-only">Stirrups</legend>
@@ -46,7 +51,7 @@ export function StirrupsField({ units, standard, values, errors, onChange }: Sti
               label={small('size')}
               options={options}
               value={stirrup.bar}
-              error={errors.get(`space.stirrups.${k}.bar`)}
+              error={errors.get(`${path}.${k}.bar`)}
               onChange={(event) => change(k, { bar: event.target.value })}
             />
             {stirrup.bar !== '' && (
@@ -57,7 +62,7 @@ export function StirrupsField({ units, standard, values, errors, onChange }: Sti
                   kind="length"
                   units={units}
                   value={stirrup.spacingMm}
-                  error={errors.get(`space.stirrups.${k}.spacingMm`)}
+                  error={errors.get(`${path}.${k}.spacingMm`)}
                   onChange={(spacingMm) => change(k, { spacingMm })}
                 />
                 <NumberField
@@ -66,7 +71,7 @@ export function StirrupsField({ units, standard, values, errors, onChange }: Sti
                   kind="count"
                   units={units}
                   value={stirrup.legs}
-                  error={errors.get(`space.stirrups.${k}.legs`)}
+                  error={errors.get(`${path}.${k}.legs`)}
                   onChange={(legs) => change(k, { legs })}
                 />
                 <SpacingChoice
