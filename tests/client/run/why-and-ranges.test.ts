@@ -32,6 +32,28 @@ describe('why the rest fell out', () => {
     expect(counts).toEqual(counts.toSorted((a, b) => b - a));
   });
 
+  it('asks one check after another: what each takes of what is left, down to those that meet all', () => {
+    const { steps, feasible, evaluated } = checkSequence(RUN.result)!;
+    expect(steps.map(({ check }) => check)).toEqual(
+      CHECK_IDS.filter((check) => steps.some((step) => step.check === check)),
+    );
+    let left = evaluated;
+    for (const step of steps) {
+      expect(step.taken).toBeGreaterThan(0);
+      expect(step.left).toBe(left - step.taken);
+      left = step.left;
+    }
+    expect([left, feasible]).toEqual([RUN.result.feasible, RUN.result.feasible]);
+    const fit = RUN.result.failures.find(({ check }) => check === 'bar-fit')!;
+    expect(steps[0]).toMatchObject({ check: 'bar-fit', taken: fit.failed });
+  });
+
+  it('says nothing of an order that was not counted: an older result, or one by bounds', () => {
+    const old = RUN.result.failures.map(({ failedFirst: _first, ...failure }) => failure);
+    expect(checkSequence({ ...RUN.result, failures: old })).toBeNull();
+    expect(checkSequence({ ...RUN.result, failures: [], feasible: null })).toBeNull();
+  });
+
   it('gives with each check the best section that it alone keeps out, and by how much that misses', () => {
     const missed = missedChecks(RUN.result, RUN.source);
     expect(missed.map(({ failed }) => failed)).toEqual(

@@ -7,14 +7,15 @@ import { barsText, sizeText, steelText } from '#shared/print/section-text.ts';
 import { measureLabel } from '#shared/print/measure-labels.ts';
 import { RatioBar } from '#client/src/ui/ratio-bar.tsx';
 import { TableFrame } from '#client/src/ui/table-frame.tsx';
+import { checkSequence } from './check-sequence.ts';
 import { checkWords } from './check-words.ts';
 import type { MeasureReader } from '#shared/print/measure-reader.ts';
 import { measureText } from './measure-text.ts';
 import { ladder, missedChecks, type MissedCheck, type Rung } from './missed-checks.ts';
 import type { SectionSource } from './section-source.ts';
+import { SequenceList } from './sequence-list.tsx';
 
 interface WhyPanelProps {
-import { SequenceList } from './sequence-list.tsx';
   readonly result: ViewResult;
   readonly definition: SweepDefinition;
   readonly source: SectionSource;
@@ -130,6 +131,7 @@ export function WhyPanel(props: WhyPanelProps) {
       ) : (
         <div>
           <p className="flex flex-wrap items-center gap-x-4 gap-y-1 pb-2 text-xs text-muted">
+            <span>Each check by itself:</span>
             <span className="inline-flex items-center gap-1.5">
               <span
                 className="hatched inline-block h-2.5 w-6 border border-concrete-edge"
@@ -139,7 +141,6 @@ export function WhyPanel(props: WhyPanelProps) {
             </span>
             <span className="inline-flex items-center gap-1.5">
               <span className="inline-block h-2.5 w-6 bg-fails" aria-hidden="true" />
-            <span>Each check by itself:</span>
               fail nothing else
             </span>
           </p>

@@ -162,5 +162,6 @@ export function sweepForm(sweep: Pick<Sweep, 'name' | 'definition'>, units: Unit
     demand,
     rules,
     view,
+    filledFrom: null,
   };
 }

@@ -1,5 +1,6 @@
 import type { MeasureId } from '#shared/engine/measures.ts';
 import type { Support } from '#shared/engine/section.ts';
+import type { StirrupValues } from '#client/src/section-fields/stirrup-values.ts';
 import type { FlangeValues } from '#client/src/section-fields/flange-values.ts';
 
 /** One axis as typed. Numbers are SI; null is an empty field, NaN text that is not a number. */
@@ -60,4 +61,6 @@ export interface SweepFormValues {
     readonly requireHangers: boolean;
   };
   readonly view: { readonly x: MeasureId; readonly y: MeasureId };
+  /** The preset of the office it was filled from, by name; null for a stored sweep, which does not say. */
+  readonly filledFrom: string | null;
 }
