@@ -3,7 +3,7 @@ import { getBar } from '../engine/bars.ts';
 import { barRuleBreach, barTotal } from '../engine/checks.ts';
 import { throughBars } from '../engine/checks-seismic.ts';
 import { STEEL_KG_PER_M_PER_MM2 } from '../engine/quantities.ts';
-import type { Face, UserRules } from '../engine/section.ts';
+import type { BarStandard, Face, UserRules } from '../engine/section.ts';
 import type { SteelSet } from './problem.ts';
 
 /** One steel set of one face in one width, cover and stirrup: what the hot loop needs of it, flat. mm, mm², kg/m. */
@@ -42,6 +42,18 @@ interface FaceRules {
   readonly throughMm: number;
 }
 
+/** Weight and bars of a set, wherever it is placed. */
+export function amountsOfSet(set: SteelSet, standard: BarStandard): Pick<FaceEntry, 'kgPerM' | 'barCount'> {
+  if (set.kind === 'area') return amountsOfArea(set.areaMm2);
+  const kgPerM = set.bars.reduce((sum, { bar, count }) => sum + count * getBar(standard, bar).massKgPerM, 0);
+  return { kgPerM, barCount: barTotal(set.bars) };
+}
+
+const amountsOfArea = (areaMm2: number) => ({
+  kgPerM: areaMm2 > 0 ? areaMm2 * STEEL_KG_PER_M_PER_MM2 : 0,
+  barCount: NaN,
+});
+
 /** The entry of every set of one face. */
 export function faceTable(
   face: Face,
@@ -75,8 +87,7 @@ function barEntry(
     reachMm: placed.reachMm,
     layerGapMm: placed.layerGapMm,
     shareOfDepth: 0,
-    kgPerM: sum((bar, count) => count * getBar(context.barStandard, bar).massKgPerM),
-    barCount: barTotal(bars),
+    ...amountsOfSet({ kind: 'bars', bars }, context.barStandard),
     breaksBarRules: barRuleBreach(bars, rules) !== null,
     largestSpacingMm: placed.report.largestSpacingMm ?? NaN,
     leastBarMm: bars.length > 0 ? Math.min(...diameters) : NaN,
@@ -100,8 +111,7 @@ function areaEntry({ areaMm2, at }: Extract<SteelSet, { kind: 'area' }>): FaceEn
     reachMm: 0,
     layerGapMm: 0,
     shareOfDepth: isShare ? at.shareOfDepth : 0,
-    kgPerM: hasSteel ? areaMm2 * STEEL_KG_PER_M_PER_MM2 : 0,
-    barCount: NaN,
+    ...amountsOfArea(areaMm2),
     breaksBarRules: false,
     largestSpacingMm: NaN,
     leastBarMm: NaN,

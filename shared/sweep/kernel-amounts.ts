@@ -7,7 +7,7 @@ import type { Placement } from './prepared-sweep.ts';
 
 /** What the amounts of one combination are at every depth. kg/m, money per m. */
 export interface RowAmounts {
-  readonly placement: Placement;
+  readonly placement: Pick<Placement, 'stirrup' | 'widthMm' | 'unformed'>;
   readonly pricing: Pricing;
   /** Bars of the two faces. */
   readonly longitudinalKg: number;
