@@ -3,11 +3,13 @@ import { startBoundsDesk } from './compute/bounds-desk.ts';
 import { startExportDesk } from './compute/export-desk.ts';
 import { startPasswords } from './compute/passwords.ts';
 import { startComputePool } from './compute/pool.ts';
+import { startRankDesk, type RankDesk } from './compute/rank-desk.ts';
 import { startSheetDesk } from './compute/sheet-desk.ts';
 import type { Config, WorkerConfig } from './config.ts';
 import { createDatabase, createPool, type Database } from './db/client.ts';
 import type { Deps } from './deps.ts';
 import { createSessionStore } from './http/session-store.ts';
+import { KeptShelf } from './jobs/kept-shelf.ts';
 import { Queue } from './jobs/queue.ts';
 import { RunEvents } from './jobs/run-events.ts';
 import { WorkTally } from './jobs/work-tally.ts';
@@ -27,28 +29,33 @@ export interface Services {
 export async function startServices(config: Config): Promise<Services> {
   const { databaseUrl } = config;
   const log = createLog(config.logLevel);
-  const [passwords, sheetDesk, exportDesk] = await Promise.all([
+  const [passwords, sheetDesk, exportDesk, rankDesk] = await Promise.all([
     startPasswords(config.passwordCost),
     startSheetDesk(),
     startExportDesk(),
+    startRankDesk(config.computeThreads),
   ]);
   const pool = createPool(databaseUrl, log);
   const db = createDatabase(pool);
+  const keptShelf = new KeptShelf(db);
   const sessionStore = createSessionStore(pool, log);
   const runEvents = new RunEvents({ databaseUrl, log });
   await runEvents.start();
   const tally = new WorkTally();
   const work = config.hasBuiltInWorker
-    ? await startWork('service', { config, db, log, runEvents, tally })
+    ? await startWork('service', { config, db, log, runEvents, tally, rankDesk, keptShelf })
     : undefined;
   return {
-    deps: { config, log, pool, db, sessionStore, passwords, tally, sheetDesk, exportDesk, runEvents },
+    deps: {
+      ...{ config, log, pool, db, sessionStore, passwords, tally, sheetDesk, exportDesk, runEvents },
+      ...{ rankDesk, keptShelf },
+    },
     endStreams: () => runEvents.endStreams(),
     stop: async () => {
       sessionStore.close();
       await work?.stop();
       await runEvents.stop();
-      await Promise.all([passwords.close(), sheetDesk.close(), exportDesk.close()]);
+      await Promise.all([passwords.close(), sheetDesk.close(), exportDesk.close(), rankDesk.close()]);
       await pool.end();
     },
   };
@@ -64,12 +71,15 @@ export async function startWorker(
   const db = createDatabase(pool);
   const runEvents = new RunEvents({ databaseUrl, log });
   await runEvents.start();
-  const work = await startWork('worker', { config, db, log, runEvents, tally: new WorkTally() });
+  const rankDesk = await startRankDesk(config.computeThreads);
+  const keptShelf = new KeptShelf(db);
+  const tally = new WorkTally();
+  const work = await startWork('worker', { config, db, log, runEvents, tally, rankDesk, keptShelf });
   return {
     log,
     stop: async () => {
       await work.stop();
-      await runEvents.stop();
+      await Promise.all([runEvents.stop(), rankDesk.close()]);
       await pool.end();
     },
   };
@@ -81,18 +91,21 @@ interface WorkOptions {
   readonly log: Log;
   readonly runEvents: RunEvents;
   readonly tally: WorkTally;
+  readonly rankDesk: RankDesk;
+  readonly keptShelf: KeptShelf;
 }
 
 async function startWork(
   kind: ProcessKind,
-  { config, db, log, runEvents, tally }: WorkOptions,
+  { config, ...context }: WorkOptions,
 ): Promise<{ readonly stop: () => Promise<void> }> {
   const compute = await startComputePool(config.computeThreads);
   const boundsDesk = await startBoundsDesk(config.computeThreads);
   const { threads } = compute;
+  const { db, log, runEvents, tally } = context;
   const { listener } = runEvents;
   const registry = new WorkerRegistry({ kind, threads, db, log, listener, tally });
-  const tasks = createTasks({ db, compute, boundsDesk, runEvents, log, tally });
+  const tasks = createTasks({ ...context, compute, boundsDesk });
   const queue = new Queue({ databaseUrl: config.databaseUrl, db, log, registry, createTasks: tasks });
   await queue.start();
   return {

@@ -5,7 +5,8 @@ import { ENGINE_VERSION } from '#shared/engine/version.ts';
 import type { RunMethod } from '#shared/sweep/run-method.ts';
 import type { Database } from '../db/client.ts';
 import { viewShards } from '../db/schema/view-shards.ts';
-import { planShards, type SectionRange } from './plan-shards.ts';
+import { cutView } from './cut-view.ts';
+import type { SectionRange } from './plan-shards.ts';
 
 /**
  * The queue's tasks. The engine's version is part of the name: a run is computed by the engine it was started with, so a
@@ -39,7 +40,7 @@ export async function insertShards(
   viewId: string,
   { method, ...range }: SectionRange & { readonly method: RunMethod },
 ): Promise<void> {
-  const shards = method === 'bounds' ? [range] : planShards(range);
+  const shards = method === 'bounds' ? [range] : await cutView(tx, viewId, range);
   await tx
     .insert(viewShards)
     .values(shards.map(({ from, to }) => ({ viewId, fromIndex: from, toIndex: to })));

@@ -162,6 +162,8 @@ export const runSchema = runSummarySchema.extend({
   definition: sweepDefinitionSchema,
   /** Rates are null where the reader may not see them. */
   basis: fullBasisSchema,
+  /** Sections taken over from an earlier run instead of being computed again; null where there were none to take. */
+  taken: z.object({ runId: idSchema, number: z.number(), sections: z.number() }).nullable(),
   views: z.array(viewProgressSchema.omit({ result: true })),
 });
 export type Run = z.infer<typeof runSchema>;

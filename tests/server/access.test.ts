@@ -31,6 +31,12 @@ const project = (world: World) => world.project;
 let standardIds: string[];
 const standardInput = () => ({ ...officeStandard, name: randomUUID() });
 const savedView = ({ run }: World) => ({ name: randomUUID(), runId: run, address: { x: 'depthMm' } });
+const ranking = () => ({
+  view: { x: 'steelKgPerM', y: 'widthMm' },
+  rates: { base: 'run', changes: {} },
+  filters: {},
+  bandShare: 0.05,
+});
 const sweepInput = () => ({ name: 'Renamed', definition: sweepDefinition });
 const pin = (world: World) => ({
   beamId: world.beam,
@@ -74,6 +80,7 @@ const RULES: Record<
   getRunningLoad: { serves: DESIGNERS },
   getOperations: { serves: ['admin'] },
   openView: { id: (w) => w.run, serves: EVERYBODY, body: () => ({ x: 'steelKgPerM', y: 'widthMm' }) },
+  rankRun: { id: (w) => w.run, serves: OFFICE, body: ranking },
   getView: { id: (w) => w.run, serves: EVERYBODY },
   getSection: { id: (w) => w.run, serves: EVERYBODY },
   listSavedViews: { id: project, serves: EVERYBODY },

@@ -181,6 +181,15 @@ const TARGETS: Partial<Record<EndpointName, Target>> = {
   createSweep: { id: () => world.beam, valid: () => ({ name: 'S', definition: sweepDefinition }) },
   updateSweep: { id: () => world.spareSweep, valid: () => ({ name: 'S', definition: sweepDefinition }) },
   openView: { id: () => world.run, valid: () => ({ x: 'steelKgPerM', y: 'costPerM' }) },
+  rankRun: {
+    id: () => world.run,
+    valid: () => ({
+      view: { x: 'steelKgPerM', y: 'costPerM' },
+      rates: { base: 'today', changes: { steel: 10 } },
+      filters: { depthMm: { low: 1, high: 2 } },
+      bandShare: 0.05,
+    }),
+  },
   evaluate: { id: project, valid: () => evaluateInput },
   pinCandidate: {
     id: project,

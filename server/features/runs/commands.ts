@@ -24,6 +24,7 @@ import { canSeeView, RUNNERS } from './policy.ts';
 import { requireView, type RunRecord, type ViewRow } from './queries.ts';
 import { refuseTooManySections, takeTurn } from './running-limits.ts';
 import { requireRunnable } from './runnable.ts';
+import { takeFromEarlierRun } from './taking.ts';
 
 const UNFINISHED: RunState[] = ['queued', 'running'];
 const RESUMABLE: readonly RunState[] = ['cancelled', 'failed'];
@@ -86,7 +87,10 @@ async function insertRun(tx: Database, { sweepId, definition, basis, startedBy }
       startedBy,
     })
     .returning({ id: runs.id, sectionCount: runs.sectionCount, method: runs.method });
-  await insertView(tx, run!, { view: definition.view, openedBy: null });
+  const { space, demand, rules, view } = definition;
+  if (run!.method === 'every-section')
+    await takeFromEarlierRun(tx, { ...run!, sweepId, problem: { space, demand, rules, basis } });
+  await insertView(tx, run!, { view, openedBy: null });
   return run!.id;
 }
 

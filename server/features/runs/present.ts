@@ -44,10 +44,11 @@ export function presentViewEvent(
 
 interface RunParts extends RunRecord {
   readonly summary: RunSummary;
+  readonly taken: Run['taken'];
   readonly views: readonly ViewState[];
 }
 
-export function presentRun({ run, sweep, beam, project, summary, views }: RunParts, person: Person): Run {
+export function presentRun({ run, sweep, beam, project, summary, taken, views }: RunParts, person: Person): Run {
   const { id, mark, location, spanMm, count } = beam;
   return {
     ...summary,
@@ -56,6 +57,7 @@ export function presentRun({ run, sweep, beam, project, summary, views }: RunPar
     sweepName: sweep.name,
     definition: run.definition,
     basis: fullBasisSchema.parse(canSeeRates(person) ? run.basis : { ...run.basis, rates: null }),
+    taken,
     views: views.map((view) => presentViewState(view, run.sectionCount)),
   };
 }

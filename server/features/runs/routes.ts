@@ -18,6 +18,8 @@ import { OpenStreams } from './open-streams.ts';
 import { RUNNERS } from './policy.ts';
 import { presentRun, presentViewProgress } from './present.ts';
 import { getSection, listViews, requireRun, requireView } from './queries.ts';
+import { rankRun } from './ranking.ts';
+import { findTaken } from './taking.ts';
 import { registerSectionsFile } from './sections-file.ts';
 
 export function registerRunRoutes(router: Router, deps: Deps): void {
@@ -49,6 +51,10 @@ export function registerRunRoutes(router: Router, deps: Deps): void {
     const view = await openView(db, person, { record, view: body, limits });
     return presentViewProgress(view, record.run.sectionCount, person);
   });
+
+  bind(router, deps, 'rankRun', async ({ person, params, body, deps: { db, ...rest } }) =>
+    rankRun(rest, person, { record: await requireRun(db, person, params.id), input: body }),
+  );
 
   bind(router, deps, 'getView', async ({ person, params, deps: { db } }) => {
     const { run } = await requireRun(db, person, params.id);
@@ -88,10 +94,11 @@ function registerRunEvents(router: Router, deps: Deps): void {
 
 async function readRun(db: Database, person: Person, runId: string): Promise<Run> {
   const record = await requireRun(db, person, runId);
-  const [views, [summary]] = await Promise.all([
+  const [views, taken, [summary]] = await Promise.all([
     listViews(db, runId),
+    findTaken(db, runId),
     listRunSummaries(db, eq(runs.id, runId)),
   ]);
   if (summary === undefined) throw notFound('Run');
-  return presentRun({ ...record, summary, views }, person);
+  return presentRun({ ...record, summary, taken, views }, person);
 }

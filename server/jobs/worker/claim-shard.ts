@@ -19,6 +19,8 @@ export interface ClaimedShard extends ShardKey, SectionRange {
   readonly workerId: string;
   readonly problem: SweepProblem;
   readonly view: View;
+  /** The view the run was started with: what that finds is kept for the others. */
+  readonly ownView: View;
   readonly sectionCount: number;
 }
 
@@ -60,6 +62,7 @@ export async function claimShard(
     to: shard.to,
     problem: { space, demand, rules, basis: run.basis },
     view: viewOf(view),
+    ownView: run.definition.view,
     sectionCount: run.sectionCount,
   };
 }

@@ -1,12 +1,14 @@
-import { sweepInChunks } from '../../compute/sweep-in-chunks.ts';
+import type { SweptPart } from '../../compute/sweep-in-chunks.ts';
 import { isDatabaseAway } from '../../db/database-error.ts';
 import { failView } from '../end-view.ts';
+import { keepSections } from '../kept-sections.ts';
 import { claimShard, type ClaimedShard, type ShardKey } from './claim-shard.ts';
 import { FAILURE_MESSAGE, type WorkContext } from './context.ts';
 import { endShard } from './end-shard.ts';
 import { ShardProgress } from './shard-progress.ts';
 import { StopSwitch } from './stop-switch.ts';
 import { persistently } from './persistently.ts';
+import { workOnShard } from './work-on-shard.ts';
 
 /**
  * Computes one shard of a view from the run's frozen inputs. May run again, also while another worker is still at it:
@@ -47,18 +49,23 @@ async function computeClaimed(
 ): Promise<void> {
   const startedAt = performance.now();
   const progress = new ShardProgress(context, shard, stopSwitch);
-  const part = await sweepInChunks({
-    pool: context.compute,
-    key: shard.viewId,
-    problem: shard.problem,
-    view: shard.view,
-    from: shard.from,
-    to: shard.to,
-    cancelFlag: stopSwitch.flag,
-    onProgress: (grown) => progress.offer(grown),
-  });
+  const onProgress = (grown: SweptPart) => progress.offer(grown);
+  const part = await workOnShard({ shard, cancelFlag: stopSwitch.flag, onProgress }, context);
   await progress.settle();
   const tookMs = performance.now() - startedAt;
-  await persistently(() => endShard(context, shard, { part, tookMs, isToGoOn: !stopSwitch.isCancelled }));
+  const end = { part, tookMs, isToGoOn: !stopSwitch.isCancelled };
+  const isWritten = await persistently(() => endShard(context, shard, end));
   if (part.doneTo === shard.to) context.tally.addShard(tookMs);
+  if (isWritten) await keepFor(shard, part, context);
+}
+
+/** After the result, which people wait for; nothing is lost but time where it cannot be written. */
+async function keepFor(shard: ClaimedShard, part: SweptPart, { db, log }: WorkContext): Promise<void> {
+  const { kept, chunk, doneTo } = part;
+  if (kept === null || doneTo === shard.from) return;
+  try {
+    await keepSections(db, { runId: shard.runId, range: { from: shard.from, to: doneTo }, chunk, kept });
+  } catch (error) {
+    log.warn({ err: error, runId: shard.runId }, 'Sections could not be kept for other views');
+  }
 }

@@ -1,7 +1,9 @@
 import type { BoundsDesk } from '../../compute/bounds-desk.ts';
 import type { ComputePool } from '../../compute/pool.ts';
+import type { RankDesk } from '../../compute/rank-desk.ts';
 import type { Database } from '../../db/client.ts';
 import type { Log } from '../../log.ts';
+import type { KeptShelf } from '../kept-shelf.ts';
 import type { RunEvents } from '../run-events.ts';
 import type { WorkTally } from '../work-tally.ts';
 
@@ -10,6 +12,8 @@ export interface WorkContext {
   readonly db: Database;
   readonly compute: ComputePool;
   readonly boundsDesk: BoundsDesk;
+  readonly rankDesk: RankDesk;
+  readonly keptShelf: KeptShelf;
   readonly runEvents: RunEvents;
   readonly log: Log;
   readonly tally: WorkTally;

@@ -22,30 +22,30 @@ interface ShardEnd {
 
 /**
  * Writes what is done of a shard and gives the rest of it free as a shard of its own, so that nothing that was computed
- * is computed again. A run that is one shard is finished right here.
+ * is computed again. A run that is one shard is finished right here. Answers whether it was written, by nobody before.
  */
 export async function endShard(
   { db }: Pick<WorkContext, 'db'>,
   shard: ClaimedShard,
   { part, tookMs, isToGoOn }: ShardEnd,
-): Promise<void> {
+): Promise<boolean> {
   const { problem, view, viewId, from, to, sectionCount } = shard;
   if (part !== undefined && from === 0 && part.doneTo === sectionCount) {
-    await finishView(db, shard, finishResult(problem, view, part.chunk));
-    return;
+    return finishView(db, shard, finishResult(problem, view, part.chunk));
   }
-  await db.transaction(async (tx) => {
+  return db.transaction(async (tx) => {
     const doneTo = part?.doneTo ?? from;
     const isWritten =
       part === undefined || doneTo === from
         ? await giveFree(tx, shard)
         : await writeResult(tx, shard, { part, tookMs });
-    if (!isWritten) return;
+    if (!isWritten) return false;
     if (doneTo > from && doneTo < to) {
       await tx.insert(viewShards).values({ viewId, fromIndex: doneTo, toIndex: to });
     }
     if (doneTo < to && isToGoOn) await putBack(tx, shard, doneTo);
     await enqueueMerge(tx, viewId);
+    return true;
   });
 }
 

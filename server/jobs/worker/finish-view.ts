@@ -7,14 +7,14 @@ import { changeView, STOP_COUNTING } from '../change-view.ts';
 import { dequeueShards } from '../compute-jobs.ts';
 import { describeResult, describeSearch } from '../describe-result.ts';
 
-/** Writes the result of the whole space, once; its shards have served and go. */
+/** Writes the result of the whole space, once; its shards have served and go. Answers whether it was. */
 export async function finishView(
   db: Database,
   { runId, viewId }: { readonly runId: string; readonly viewId: string },
   result: ViewResult,
   search?: SearchProgress,
-): Promise<void> {
-  await db.transaction(async (tx) => {
+): Promise<boolean> {
+  return db.transaction(async (tx) => {
     const finished = await changeView(
       tx,
       { runId, viewId, from: ['queued', 'running'] },
@@ -27,8 +27,9 @@ export async function finishView(
         finishedAt: new Date(),
       },
     );
-    if (finished === undefined) return;
+    if (finished === undefined) return false;
     await dequeueShards(tx, viewId);
     await tx.delete(viewShards).where(eq(viewShards.viewId, viewId));
+    return true;
   });
 }

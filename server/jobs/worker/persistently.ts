@@ -6,11 +6,10 @@ const ATTEMPTS = 20;
 const RETRY_MS = 500;
 
 /** Writes, and tries again for a while when the database is away. What it writes must be alike when written twice. */
-export async function persistently(write: () => Promise<void>): Promise<void> {
+export async function persistently<T>(write: () => Promise<T>): Promise<T> {
   for (let attempt = 1; ; attempt++) {
     try {
-      await write();
-      return;
+      return await write();
     } catch (error) {
       if (!isDatabaseAway(error) || attempt === ATTEMPTS) throw error;
       await delay(RETRY_MS);

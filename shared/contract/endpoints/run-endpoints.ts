@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { idSchema } from '../numbers.ts';
 import { runningLoadSchema } from '../operations.ts';
+import { rankingInputSchema, rankingSchema } from '../ranking.ts';
 import { evaluateOutputSchema, runSchema, viewProgressSchema } from '../records.ts';
 import { openedViewSchema } from '../sweep-definition.ts';
 import { byId, nothing } from './endpoint-params.ts';
@@ -55,6 +56,15 @@ export const runEndpoints = {
     params: byId,
     body: openedViewSchema,
     response: viewProgressSchema,
+    isPublic: false,
+  },
+  /** Ranks the run's sections at other rates; kept nowhere. */
+  rankRun: {
+    method: 'post',
+    path: '/runs/:id/rankings',
+    params: byId,
+    body: rankingInputSchema,
+    response: rankingSchema,
     isPublic: false,
   },
   getView: {
