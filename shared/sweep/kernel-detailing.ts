@@ -188,18 +188,22 @@ export class KernelDetailing {
     });
   }
 
-  /** Adds what sections at places [from, to) fail without placed bars: ties of stirrups as given, and least depth. */
+  /** Adds the least depth to the size masks at places [from, to). */
   addSizeMasks(from: number, to: number): void {
     const { leastDepthMm } = this;
+    const { h, sizeMasks } = this.columns;
+    for (let j = from; j < to; j++) if (!isWithinLength(leastDepthMm, h[j]!)) sizeMasks[j]! |= LEAST_DEPTH;
+  }
+
+  /** Adds the ties of stirrups as given, placed bars or not. */
+  addTies(from: number, to: number): void {
     const { h, masks } = this.columns;
-    // depths ascend, so what the first one meets all of them meet
-    if (!isWithinLength(leastDepthMm, h[from]!))
-      for (let j = from; j < to; j++) if (!isWithinLength(leastDepthMm, h[j]!)) masks[j]! |= LEAST_DEPTH;
-    const isTieSought =
-      this.isTieTooSmall || (!this.isDesigned && !this.isTied(this.givenSpacingMm, h[from]!));
-    if (!isTieSought) return;
+    const { isTieTooSmall, givenSpacingMm } = this;
+    // depths ascend, so what ties the first one ties all of them
+    const isMet = !isTieTooSmall && (this.isDesigned || this.isTied(givenSpacingMm, h[from]!));
+    if (isMet) return;
     for (let j = from; j < to; j++)
-      if (this.isTieTooSmall || !this.isTied(this.givenSpacingMm, h[j]!)) masks[j]! |= COMPRESSION_TIES;
+      if (isTieTooSmall || !this.isTied(givenSpacingMm, h[j]!)) masks[j]! |= COMPRESSION_TIES;
   }
 
   private isTied(spacingMm: number, h: number): boolean {

@@ -127,8 +127,8 @@ export class KernelFlexure {
     const { axis } = this;
     axis.find(compression, tension, h[to - 1]!, this.ultimate);
     const innermostMm = tension.offsets[tension.layerCount - 1]!;
-    let first = to;
-    while (first > from && h[first - 1]! - innermostMm >= axis.fromMm) first--;
+    let first = from;
+    while (first < to && !(h[first]! - innermostMm >= axis.fromMm)) first++;
     return first;
   }
 

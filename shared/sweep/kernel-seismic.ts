@@ -75,14 +75,14 @@ export class KernelSeismic {
     setOverhang(this.reversal, reversedOverhang(placement.widthMm, placement.flange));
   }
 
-  /** Adds the least width at places [from, to). */
+  /** Adds the least width to the size masks at places [from, to). */
   addSizeMasks(from: number, to: number): void {
     const { leastWidth } = this.seismic;
     if (!leastWidth) return;
-    const { h, masks } = this.columns;
+    const { h, sizeMasks } = this.columns;
     const { widthMm } = this.combination!.placement;
     for (let j = from; j < to; j++)
-      if (!isWithinLength(leastWebMm(leastWidth, h[j]!), widthMm)) masks[j]! |= SEISMIC_WIDTH;
+      if (!isWithinLength(leastWebMm(leastWidth, h[j]!), widthMm)) sizeMasks[j]! |= SEISMIC_WIDTH;
   }
 
   /** Adds span, steel of both faces and the strength bent the other way, for placed bars at places [from, to). */

@@ -40,6 +40,7 @@ export class KernelStrength {
     const epsilonCu = combination.concrete.crushingStrain;
     const epsilonTy = yieldMPa / esMPa;
     const leastStrain = ruleSet.leastTensionStrain(epsilonTy) ?? -Infinity;
+    const axisShare = ruleSet.largestAxisShare(combination.concrete.fcMPa) ?? Infinity;
     const fullStrain = ruleSet.fullReductionStrain(epsilonTy);
     const fullReduction = ruleSet.strengthReduction(Infinity, epsilonTy);
     const muNmm = problem.demand.muNmm ?? -Infinity;
@@ -60,17 +61,11 @@ export class KernelStrength {
       if (isStrengthAsked && !(designNmm >= muNmm)) mask |= STRENGTH;
       if (isDuctilityAsked && !(ductility >= target)) mask |= DUCTILITY;
       if (!(epsilonT >= leastStrain)) mask |= TENSION_STRAIN;
+      if (!(axis <= axisShare * d[j]!)) mask |= AXIS_DEPTH;
       masks[j] = mask;
     }
-    this.addAxisDepth(combination, from, to);
     this.addMostSteel(combination, from, to);
     this.addLeastSteel(combination, from, to);
-  }
-
-  private addAxisDepth({ concrete }: Combination, from: number, to: number): void {
-    const { c, d, masks } = this.columns;
-    const share = this.prepared.ruleSet.largestAxisShare(concrete.fcMPa) ?? Infinity;
-    for (let j = from; j < to; j++) if (!(c[j]! <= share * d[j]!)) masks[j]! |= AXIS_DEPTH;
   }
 
   private addMostSteel({ placement, tension, compression }: Combination, from: number, to: number): void {

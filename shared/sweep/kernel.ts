@@ -17,7 +17,13 @@ import {
 } from './kernel-places.ts';
 import { KernelSeismic } from './kernel-seismic.ts';
 import { KernelStrength } from './kernel-strength.ts';
-import { isAboveTension, isPlain, leastDepthMm, type PreparedSweep } from './prepared-sweep.ts';
+import {
+  isAboveTension,
+  isPlain,
+  leastDepthMm,
+  type Placement,
+  type PreparedSweep,
+} from './prepared-sweep.ts';
 import { rowColumns, type RowColumns } from './row-columns.ts';
 import type { Tally } from './tally.ts';
 
@@ -40,6 +46,13 @@ interface Row {
   readonly to: number;
 }
 
+interface Sized {
+  readonly placement: Placement | null;
+  readonly fyMPa: number;
+  readonly from: number;
+  readonly to: number;
+}
+
 /** Whether a mask has one bit at most: only such sections are of use beyond being counted. */
 const failsOneAtMost = (mask: number) => (mask & (mask - 1)) === 0;
 
@@ -49,6 +62,8 @@ export class Kernel {
   readonly built = { spacingMm: Infinity, skinKg: 0 };
   private readonly measures = new Float64Array(MEASURE_IDS.length);
   private readonly columns: RowColumns;
+  /** What the size masks are filled for. */
+  private sized: Sized = { placement: null, fyMPa: NaN, from: 0, to: 0 };
   private readonly flexure: KernelFlexure;
   private readonly strength: KernelStrength;
   private readonly detailing: KernelDetailing;
@@ -104,20 +119,29 @@ export class Kernel {
 
   /** What is failed without placed bars. */
   private startMasks(combination: Combination, { from, to }: Row): void {
-    const { prepared } = this;
-    const { demand, rules } = prepared.problem;
-    const { h, masks } = this.columns;
-    const { widthMm } = combination.placement;
-    const { minDepthToWidth, maxDepthToWidth } = rules;
-    const least = minDepthToWidth ?? -Infinity;
-    const most = maxDepthToWidth ?? Infinity;
+    const { prepared, sized } = this;
+    const { masks, sizeMasks } = this.columns;
+    const { placement, fyMPa } = combination;
+    const isKnown = sized.placement === placement && sized.fyMPa === fyMPa;
+    if (!isKnown || from < sized.from || to > sized.to) {
+      this.fillSizeMasks(placement, from, to);
+      this.sized = { placement, fyMPa, from, to };
+    }
+    const fixed = fixedMask(combination, prepared.problem.rules, prepared.seismic);
+    for (let j = from; j < to; j++) masks[j] = sizeMasks[j]! | fixed;
+    this.detailing.addTies(from, to);
+  }
+
+  private fillSizeMasks({ widthMm }: Placement, from: number, to: number): void {
+    const { demand, rules } = this.prepared.problem;
+    const { h, sizeMasks } = this.columns;
+    const least = rules.minDepthToWidth ?? -Infinity;
+    const most = rules.maxDepthToWidth ?? Infinity;
     const capMm = demand.depthCapMm ?? Infinity;
-    const fixed = fixedMask(combination, rules, prepared.seismic);
     for (let j = from; j < to; j++) {
       const depthMm = h[j]!;
       const isShaped = isAtLeastTimes(depthMm, least, widthMm) && isAtMostTimes(depthMm, most, widthMm);
-      const mask = isShaped ? fixed : fixed | DEPTH_TO_WIDTH;
-      masks[j] = isWithinLength(depthMm, capMm) ? mask : mask | DEPTH_CAP;
+      sizeMasks[j] = (isShaped ? 0 : DEPTH_TO_WIDTH) | (isWithinLength(depthMm, capMm) ? 0 : DEPTH_CAP);
     }
     this.detailing.addSizeMasks(from, to);
     this.seismic?.addSizeMasks(from, to);

@@ -19,6 +19,8 @@ export interface RowColumns {
   /** Spacing of the stirrups as built, mm, and skin steel, kg/m. */
   readonly spacingMm: Float64Array;
   readonly skinKg: Float64Array;
+  /** Checks that the size alone fails, of one width, cover, stirrup and fy. */
+  readonly sizeMasks: Int32Array;
   /** Checks failed so far. */
   readonly masks: Int32Array;
 }
@@ -37,6 +39,7 @@ export function rowColumns(depthsMm: readonly number[]): RowColumns {
     muPhi: column(),
     spacingMm: column(),
     skinKg: column(),
+    sizeMasks: new Int32Array(length),
     masks: new Int32Array(length),
   };
 }
