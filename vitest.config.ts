@@ -14,9 +14,12 @@ export default defineConfig({
       {
         test: {
           name: 'unit',
-          include: ['tests/{engine,sweep,contract,published,print,drawing,sheet}/**/*.test.ts'],
+          include: [
+            'tests/{engine,sweep,contract,published,print,drawing,sheet}/**/*.test.ts',
+            'tests/client/**/*.test.ts',
+          ],
           testTimeout: HANG_MS,
-          // Pure functions: one load of the engine serves every file.
+          // Pure functions: one load of the engine serves every file, and none needs a document.
           isolate: false,
         },
       },
@@ -24,7 +27,7 @@ export default defineConfig({
         plugins: [react()],
         test: {
           name: 'client',
-          include: ['tests/client/**/*.test.{ts,tsx}'],
+          include: ['tests/client/**/*.test.tsx'],
           environment: 'happy-dom',
           testTimeout: HANG_MS,
           isolate: false,

@@ -20,6 +20,9 @@ function findStartTicks(pid) {
 }
 
 /** @param {number} pid */
+export const isLiveProcess = (pid) => findStartTicks(pid) !== undefined;
+
+/** @param {number} pid */
 const markName = (pid) => `${pid}-${findStartTicks(pid)}`;
 
 /** @param {string} mark */

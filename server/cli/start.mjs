@@ -5,6 +5,7 @@ import { DEMO_ACCOUNTS, DEMO_PASSWORD } from './demo-accounts.mjs';
 import { isPortFree } from './free-port.mjs';
 import { requireNodeVersion } from './node-version.mjs';
 import { ensurePackages } from './packages.mjs';
+import { endedBesidePostgres } from './postgres-watch.mjs';
 import { joinPostgres, leavePostgres } from './postgres.mjs';
 import { dataFolder, PROJECT_ROOT } from './project-paths.mjs';
 import { requireProgram } from './run-program.mjs';
@@ -92,7 +93,7 @@ async function serve() {
     throw error;
   });
   announce();
-  return service.ended;
+  return endedBesidePostgres(service, { folder, cluster: database.cluster, stopRequest });
 }
 
 async function main() {

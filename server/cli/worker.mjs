@@ -3,6 +3,7 @@
 import { ensureBuilt } from './build.mjs';
 import { requireNodeVersion } from './node-version.mjs';
 import { ensurePackages } from './packages.mjs';
+import { endedBesidePostgres } from './postgres-watch.mjs';
 import { joinPostgres, leavePostgres } from './postgres.mjs';
 import { dataFolder, PROJECT_ROOT } from './project-paths.mjs';
 import { startService } from './service.mjs';
@@ -13,13 +14,19 @@ const folder = dataFolder();
 const given = process.env.DATABASE_URL;
 
 async function work() {
-  const databaseUrl = given ?? (await joinPostgres(folder)).url;
+  const own = given === undefined ? await joinPostgres(folder) : undefined;
   await ensureBuilt();
   stopRequest.throwIfMade();
-  const environment = { NODE_ENV: 'production', APP_ROOT: PROJECT_ROOT, DATABASE_URL: databaseUrl };
+  const environment = {
+    NODE_ENV: 'production',
+    APP_ROOT: PROJECT_ROOT,
+    DATABASE_URL: given ?? own?.url ?? '',
+  };
   const worker = startService(['--enable-source-maps', 'dist/server/worker.js'], environment);
   stopRequest.onMade(worker.stop);
-  return worker.ended;
+  return own === undefined
+    ? worker.ended
+    : endedBesidePostgres(worker, { folder, cluster: own.cluster, stopRequest });
 }
 
 try {

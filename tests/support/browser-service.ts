@@ -28,6 +28,7 @@ const environmentOf = (databaseUrl: string, port: number): Record<string, string
   HOST: '127.0.0.1',
   PORT: String(port),
   LOG_LEVEL: 'error',
+  PASSWORD_COST: '4',
 });
 
 /** The service as it is built and started for real, on a port and a copy of the seeded demo office of its own. */
