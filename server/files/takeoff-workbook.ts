@@ -20,6 +20,9 @@ export interface TakeoffWorkbookInput {
 
 const FIRST_OPTION = 2;
 
+/** The order of the rows, as a beam is read. */
+const POSITIONS = ['bottom', 'top', 'skin', 'stirrups'];
+
 const TOTAL_WORDS: Readonly<Record<TotalName, string>> = {
   laps: 'Laps',
   waste: 'Waste',
@@ -128,7 +131,9 @@ class OptionsSheet {
     const items = new Map<string, SteelItem>();
     for (const { masses } of this.options) for (const [key, { item }] of masses) items.set(key, item);
     const unit = unitLabel('tonnes', this.input.units);
-    for (const [key, { position, bar }] of items) {
+    const placeOf = ([, { position }]: [string, SteelItem]) => POSITIONS.indexOf(position);
+    const sorted = [...items].toSorted((a, b) => placeOf(a) - placeOf(b));
+    for (const [key, { position, bar }] of sorted) {
       const words =
         position === 'stirrups' ? `Stirrups ${bar}` : `Bars ${bar}, ${position}`.replace('  ', ' ');
       this.values(words, unit, { numberFormat: '0.000' }, (i) => {

@@ -1,12 +1,15 @@
-import { lazy, Suspense, useMemo } from 'react';
+import { lazy, Suspense, useCallback, useMemo, useRef } from 'react';
 import { useNavigate } from 'react-router-dom';
 import type { Project, Run } from '#shared/contract/records.ts';
+import type { FrontPicture } from '#client/src/charts/front-chart-input.ts';
+import { drawingExports } from '#client/src/drawing/drawing-exports.ts';
 import { Inspector } from '#client/src/features/inspector/inspector.tsx';
 import { PinPanel } from '#client/src/features/inspector/pin-panel.tsx';
 import { FellOut } from '#client/src/features/run/fell-out.tsx';
 import { FrontPanel } from '#client/src/features/run/front-panel.tsx';
 import { NothingFeasible } from '#client/src/features/run/nothing-feasible.tsx';
 import { ProofLine } from '#client/src/features/run/proof-line.tsx';
+import { RatesBar } from '#client/src/features/run/rates-bar.tsx';
 import { RangeChips } from '#client/src/features/run/range-chips.tsx';
 import { hasFilters } from '#shared/sweep/range-filters.ts';
 import { RunHead } from '#client/src/features/run/run-head.tsx';
@@ -18,6 +21,7 @@ import { paths } from '#client/src/lib/paths.ts';
 import { useMay } from '#client/src/lib/reader-context.ts';
 import { Button, ButtonLink } from '#client/src/ui/button.tsx';
 import { ErrorState } from '#client/src/ui/error-state.tsx';
+import { ExportMenu } from '#client/src/ui/export-menu.tsx';
 import { PageCrumbs } from '#client/src/ui/page-crumbs.tsx';
 import { Skeleton } from '#client/src/ui/skeleton.tsx';
 import { RunBelowChart } from './run-below-chart.tsx';
@@ -26,6 +30,7 @@ import { useRunShortcuts } from './use-run-shortcuts.ts';
 
 /** Their floating parts are not needed for the first look. */
 const RunViews = lazy(async () => ({ default: (await import('./run-views.tsx')).RunViews }));
+const RunExports = lazy(async () => ({ default: (await import('./run-exports.tsx')).RunExports }));
 const RunMenu = lazy(async () => ({ default: (await import('./run-menu.tsx')).RunMenu }));
 
 interface RunWorkspaceProps {
@@ -62,6 +67,10 @@ export function RunWorkspace({ run, project }: RunWorkspaceProps) {
   const { address, view, source, reader, progress, result, selected, explore } = state;
   const pins = useRunPins(run, view, source);
   const selectedIndex = selected?.index ?? null;
+  const picture = useRef<FrontPicture | null>(null);
+  const keepPicture = useCallback((drawn: FrontPicture) => {
+    picture.current = drawn;
+  }, []);
   useRunShortcuts({ front: explore.shown.listed, selectedIndex, onSelect: address.select, onPin: pins.pin });
   const pinned = pins.own.find((candidate) => candidate.sectionIndex === selectedIndex) ?? null;
   const isOver = progress !== null && !state.isLive;
@@ -111,8 +120,9 @@ export function RunWorkspace({ run, project }: RunWorkspaceProps) {
             reader={reader}
           />
         )}
+        <RatesBar ranked={state.ranked} address={address} reader={reader} />
         <FrontPanel
-          run={run}
+          run={state.ranked.run}
           view={view}
           progress={progress}
           source={source}
@@ -122,6 +132,7 @@ export function RunWorkspace({ run, project }: RunWorkspaceProps) {
           keys={state.keys}
           pins={pins.flags}
           selected={state.place}
+          onDrawn={keepPicture}
           whenEmpty={
             result !== null && (
               <NothingFeasible
@@ -173,7 +184,7 @@ export function RunWorkspace({ run, project }: RunWorkspaceProps) {
                 source={{ kind: 'run', runId: run.id, index: selected.index }}
                 pinned={pinned}
               />
-              <p className="text-sm">
+              <p className="flex flex-wrap gap-x-4 text-sm">
                 <ButtonLink
                   look="text"
                   className="text-sm"
@@ -181,12 +192,25 @@ export function RunWorkspace({ run, project }: RunWorkspaceProps) {
                 >
                   Change it by hand
                 </ButtonLink>
+                <ExportMenu
+                  look="text"
+                  words="Drawing as a file"
+                  groups={[
+                    drawingExports({
+                      section: selected.section,
+                      evaluation: selected.evaluation,
+                      standard: run.basis.barStandard,
+                      units,
+                      source: [project.number, run.beam.mark, 'run', run.number, 'section', selected.index],
+                    }),
+                  ]}
+                />
               </p>
             </div>
           }
         />
       ),
-    [selected, isOver, state.error, run, project.id, units, pinned, source, select],
+    [selected, isOver, state.error, run, project.id, project.number, units, pinned, source, select],
   );
 
   return (
@@ -204,6 +228,7 @@ export function RunWorkspace({ run, project }: RunWorkspaceProps) {
               <>
                 <Suspense>
                   <RunViews run={run} state={state} />
+                  <RunExports run={run} project={project} state={state} picture={picture} />
                   <RunMenu run={run} />
                 </Suspense>
                 <HeadActions run={run} isUnfinished={isOver && progress.state !== 'finished'} />
@@ -214,7 +239,7 @@ export function RunWorkspace({ run, project }: RunWorkspaceProps) {
         space={space}
         front={front}
         section={section}
-        foot={<ProofLine run={run} progress={progress} />}
+        foot={<ProofLine run={run} progress={progress} ranking={state.ranked.ranking} />}
       />
     </>
   );

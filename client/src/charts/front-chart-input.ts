@@ -1,5 +1,5 @@
 import type { Direction } from '#shared/engine/measures.ts';
-import type { FrontPoint, Point } from '#shared/sweep/result.ts';
+import type { DensityCell, FrontPoint, Point } from '#shared/sweep/result.ts';
 import type { AxisExtent } from './axis-extent.ts';
 import type { AxisScale } from './plot-axis.ts';
 
@@ -73,6 +73,11 @@ export interface FrontChartInput {
   /** What the pointer reads on a section. */
   readonly describe: (index: number) => string;
 }
+
+/** What is drawn, whatever its size and colours: a picture of it can be made in any. */
+export type FrontPicture = Omit<FrontChartInput, 'frame' | 'colours'> & {
+  readonly cells: readonly DensityCell[];
+};
 
 /** Direction words beside the title, with the arrow along the axis they belong to. */
 export function betterWords(axis: 'x' | 'y', direction: Direction): string {

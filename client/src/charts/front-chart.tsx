@@ -16,7 +16,7 @@ import { movedExtents, windowOf, zoomedExtents, type ChartWindow, type Extents }
 import { boxAt, cloudBoxes } from './cloud-boxes.ts';
 import { CloudLayer } from './cloud-layer.tsx';
 import { CELL_PX } from './density-cells.ts';
-import type { ChartAxis, FrontChartInput, PlotFrame } from './front-chart-input.ts';
+import type { ChartAxis, FrontChartInput, FrontPicture, PlotFrame } from './front-chart-input.ts';
 import { frontChartOption } from './front-chart-option.ts';
 import { nearestMark, REACH_PX } from './nearest-mark.ts';
 import { fromPlot, toPlot } from './plot-axis.ts';
@@ -54,6 +54,8 @@ export interface FrontChartProps extends Omit<
   readonly onLog: (isXLog: boolean, isYLog: boolean) => void;
   /** Stands above the drawing, before what the chart itself offers. */
   readonly toolbar: ReactNode;
+  /** Told what is drawn, for whoever wants it as a picture. */
+  readonly onDrawn?: ((picture: FrontPicture) => void) | undefined;
   /** While it is, the axes stay as they are as long as everything fits on them. */
   readonly isGrowing: boolean;
 }
@@ -149,40 +151,19 @@ export function FrontChart(props: FrontChartProps) {
   useLayoutReport(props, extents, frame);
 
   const place = marks.findIndex((point) => point.ties.includes(selected?.index ?? -1));
-  const option = useMemo(() => {
-    if (frame === null) return null;
-    const input = {
-      x,
-      y,
-      front,
-      marks,
-      outline,
-      markScale,
-      band,
-      bandShare,
-      pins,
-      target,
-      describe,
-      selected,
-    };
-    return frontChartOption({ ...input, xExtent: extents.x, yExtent: extents.y, frame, colours });
-  }, [
-    x,
-    y,
-    front,
-    marks,
-    outline,
-    markScale,
-    band,
-    bandShare,
-    pins,
-    target,
-    describe,
-    selected,
-    extents,
-    frame,
-    colours,
-  ]);
+  const input = useMemo(
+    () => ({
+      ...{ x, y, front, marks, outline, markScale, band, bandShare, pins, target, describe, selected },
+      ...{ xExtent: extents.x, yExtent: extents.y },
+    }),
+    [x, y, front, marks, outline, markScale, band, bandShare, pins, target, describe, selected, extents],
+  );
+  const option = useMemo(
+    () => (frame === null ? null : frontChartOption({ ...input, frame, colours })),
+    [input, frame, colours],
+  );
+  const { onDrawn } = props;
+  useEffect(() => onDrawn?.({ ...input, cells }), [onDrawn, input, cells]);
 
   const boxes = useMemo(
     () => (frame === null ? [] : cloudBoxes({ x, y, cells, frame, xExtent: extents.x, yExtent: extents.y })),

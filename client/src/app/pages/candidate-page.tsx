@@ -1,15 +1,19 @@
 import { useQuery } from '@tanstack/react-query';
 import { Link, useParams } from 'react-router-dom';
+import { drawingExports } from '#client/src/drawing/drawing-exports.ts';
 import { candidateQuery } from '#client/src/features/shortlist/api.ts';
 import { CandidateFlag } from '#client/src/features/shortlist/candidate-flag.tsx';
 import { CandidateSheet } from '#client/src/features/shortlist/candidate-sheet.tsx';
 import { CommentsPanel } from '#client/src/features/shortlist/comments-panel.tsx';
 import { StatePanel } from '#client/src/features/shortlist/state-panel.tsx';
+import { takeoffExports } from '#client/src/features/shortlist/takeoff-exports.ts';
 import { formatDate } from '#shared/print/format-quantity.ts';
 import { paths } from '#client/src/lib/paths.ts';
 import { useProject } from '#client/src/lib/project-context.ts';
 import { useMay } from '#client/src/lib/reader-context.ts';
-import { Button, ButtonLink } from '#client/src/ui/button.tsx';
+import { addressExports } from '#client/src/ui/address-exports.ts';
+import { ButtonLink } from '#client/src/ui/button.tsx';
+import { ExportMenu } from '#client/src/ui/export-menu.tsx';
 import { PageBody } from '#client/src/ui/page-body.tsx';
 import { PageCrumbs } from '#client/src/ui/page-crumbs.tsx';
 import { PageHeader } from '#client/src/ui/page-header.tsx';
@@ -67,7 +71,19 @@ export function CandidatePage() {
         actions={
           <>
             <ButtonLink to={paths.sheet(project.id, candidate.id)}>Calculation sheet</ButtonLink>
-            <Button onClick={() => window.print()}>Print</Button>
+            <ExportMenu
+              groups={[
+                drawingExports({
+                  section: candidate.snapshot.section,
+                  evaluation: candidate.snapshot.evaluation,
+                  standard: candidate.snapshot.basis.barStandard,
+                  units: project.designBasis.units,
+                  source: [project.number, beam.mark, 'candidate', candidate.label],
+                }),
+                takeoffExports(project, [candidate.id], 'this candidate'),
+                addressExports(),
+              ]}
+            />
           </>
         }
       />

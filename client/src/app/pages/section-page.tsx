@@ -4,6 +4,7 @@ import { useSearchParams } from 'react-router-dom';
 import type { EvaluateInput, Run } from '#shared/contract/records.ts';
 import type { EvaluationContext } from '#shared/engine/evaluate.ts';
 import { expandSpace, sectionAt } from '#shared/sweep/space.ts';
+import { drawingExports } from '#client/src/drawing/drawing-exports.ts';
 import { beamsQuery } from '#client/src/features/beams/api.ts';
 import { sectionDraft, useEvaluate } from '#client/src/features/evaluate-section/evaluate-api.ts';
 import { SectionForm } from '#client/src/features/evaluate-section/section-form.tsx';
@@ -19,6 +20,7 @@ import { paths } from '#client/src/lib/paths.ts';
 import { useProject } from '#client/src/lib/project-context.ts';
 import { useMay } from '#client/src/lib/reader-context.ts';
 import { EmptyState } from '#client/src/ui/empty-state.tsx';
+import { ExportMenu } from '#client/src/ui/export-menu.tsx';
 import { PageBody } from '#client/src/ui/page-body.tsx';
 import { PageCrumbs } from '#client/src/ui/page-crumbs.tsx';
 import { PageHeader } from '#client/src/ui/page-header.tsx';
@@ -109,7 +111,26 @@ function SectionEditor({
             units={units}
             context={context}
             areWorkingLinesOpen
-            actions={<PinToBeam projectId={project.id} section={answer.section} />}
+            actions={
+              <div className="grid gap-3">
+                <PinToBeam projectId={project.id} section={answer.section} />
+                <p className="text-sm">
+                  <ExportMenu
+                    look="text"
+                    words="Drawing as a file"
+                    groups={[
+                      drawingExports({
+                        section: answer.section,
+                        evaluation: answer.evaluation,
+                        standard: barStandard,
+                        units,
+                        source: [project.number, 'section by hand'],
+                      }),
+                    ]}
+                  />
+                </p>
+              </div>
+            }
           />
         )}
       </div>

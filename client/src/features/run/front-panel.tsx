@@ -4,7 +4,7 @@ import type { MeasureId } from '#shared/engine/measures.ts';
 import type { View } from '#shared/sweep/problem.ts';
 import type { Point } from '#shared/sweep/result.ts';
 import { FrontChart, type CloudSpot } from '#client/src/charts/front-chart.tsx';
-import type { ChartPin } from '#client/src/charts/front-chart-input.ts';
+import type { ChartPin, FrontPicture } from '#client/src/charts/front-chart-input.ts';
 import { MeasureChoice } from '#client/src/charts/measure-choice.tsx';
 import { formatNumber } from '#shared/print/format-quantity.ts';
 import { sizeText, steelText } from '#shared/print/section-text.ts';
@@ -37,6 +37,8 @@ interface FrontPanelProps {
   readonly selected: Point | null;
   /** Stands in the chart's place when a whole run found nothing. */
   readonly whenEmpty: ReactNode;
+  /** Told what the chart draws; the same function always. */
+  readonly onDrawn: (picture: FrontPicture) => void;
 }
 
 /** The target belongs on the chart when the ductility is one of its axes. */
@@ -170,6 +172,7 @@ export function FrontPanel(props: FrontPanelProps) {
               selected={props.selected}
               window={address.window}
               onLayout={explore.onLayout}
+              onDrawn={props.onDrawn}
               onSelect={address.select}
               isGrowing={progress !== null && isUnderWay(progress.state)}
               toolbar={

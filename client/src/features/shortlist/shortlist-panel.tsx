@@ -5,9 +5,11 @@ import { paths } from '#client/src/lib/paths.ts';
 import { useProject } from '#client/src/lib/project-context.ts';
 import { useMay } from '#client/src/lib/reader-context.ts';
 import { useSearchValue } from '#client/src/lib/use-search-value.ts';
+import { addressExports } from '#client/src/ui/address-exports.ts';
 import { Button, ButtonLink } from '#client/src/ui/button.tsx';
 import { EmptyState } from '#client/src/ui/empty-state.tsx';
 import { ErrorState } from '#client/src/ui/error-state.tsx';
+import { ExportMenu } from '#client/src/ui/export-menu.tsx';
 import { Skeleton } from '#client/src/ui/skeleton.tsx';
 import { candidatesQuery } from './api.ts';
 import { CandidateList } from './candidate-list.tsx';
@@ -15,6 +17,7 @@ import { ComparePanel } from './compare-panel.tsx';
 import { groupByBeam } from './group-by-beam.ts';
 import { COMPARE_MAX, readSelection, toggleSelection } from './selection.ts';
 import { ShareDialog } from './share-dialog.tsx';
+import { takeoffExports } from './takeoff-exports.ts';
 
 export function ShortlistPanel() {
   const project = useProject();
@@ -42,7 +45,8 @@ export function ShortlistPanel() {
 }
 
 function Shortlist({ candidates }: { readonly candidates: readonly Candidate[] }) {
-  const { designBasis } = useProject();
+  const project = useProject();
+  const { designBasis } = project;
   const hasMoney = useMay('see-rates');
   const mayShare = useMay('share');
   const [isSharing, setSharing] = useState(false);
@@ -65,6 +69,7 @@ function Shortlist({ candidates }: { readonly candidates: readonly Candidate[] }
               Untick all
             </Button>
           )}
+          <ExportMenu groups={[takeoffExports(project, selected), addressExports()]} />
           {mayShare && <Button onClick={() => setSharing(true)}>Share the shortlist</Button>}
         </span>
       </div>
