@@ -16,6 +16,23 @@ export function costs(
   return { best: sorted[0]!, median: sorted[Math.floor(rounds / 2)]! };
 }
 
+/** µs of `work` on each of some things, each in the best of some rounds by the clock: the median of them, and where the slowest tenth begins. */
+export function bestOfEach<T>(
+  rounds: number,
+  things: readonly T[],
+  work: (thing: T) => unknown,
+): { readonly median: number; readonly slowTenth: number } {
+  const best = things.map(() => Infinity);
+  for (let round = 0; round < rounds; round++)
+    things.forEach((thing, i) => {
+      const start = performance.now();
+      work(thing);
+      best[i] = Math.min(best[i]!, (performance.now() - start) * 1000);
+    });
+  best.sort((a, b) => a - b);
+  return { median: best[Math.floor(best.length / 2)]!, slowTenth: best[Math.floor(0.9 * best.length)]! };
+}
+
 export const median = (repeats: number, work: () => number): { readonly nsEach: number } => ({
   nsEach: costs(repeats, work).median,
 });

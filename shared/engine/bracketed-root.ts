@@ -2,16 +2,25 @@ const MOST_STEPS = 80;
 /** Width of a bracket, over the root, that is none. */
 const NO_WIDTH = 1e-13;
 
+/** A function of one number whose root is sought. */
+export interface Sought {
+  valueAt(x: number): number;
+}
+
+/** `rootOf` a function. */
+export const bracketedRoot = (valueAt: (x: number) => number, low: number, high: number): number =>
+  rootOf({ valueAt }, low, high);
+
 /**
  * Root of a continuous function between two bounds; NaN unless they bracket one. Inverse quadratic interpolation wherever
  * the last three values bend little enough for it, halving elsewhere, so that a kink cannot hold it up (Chandrupatla,
  * Advances in Engineering Software 28, 1997; memory).
  */
-export function bracketedRoot(valueAt: (x: number) => number, low: number, high: number): number {
+export function rootOf(sought: Sought, low: number, high: number): number {
   let last = low;
-  let lastValue = valueAt(last);
+  let lastValue = sought.valueAt(last);
   let other = high;
-  let otherValue = valueAt(other);
+  let otherValue = sought.valueAt(other);
   if (lastValue === 0) return last;
   if (otherValue === 0) return other;
   if (!(lastValue < 0 !== otherValue < 0) || Number.isNaN(lastValue + otherValue)) return NaN;
@@ -19,7 +28,7 @@ export function bracketedRoot(valueAt: (x: number) => number, low: number, high:
   let share = lastValue / (lastValue - otherValue);
   for (let step = 0; step < MOST_STEPS; step++) {
     const x = last + share * (other - last);
-    const value = valueAt(x);
+    const value = sought.valueAt(x);
     if (value === 0) return x;
     let before = last;
     let beforeValue = lastValue;

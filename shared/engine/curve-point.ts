@@ -11,26 +11,41 @@ export interface CurvePoint {
   readonly tensionStrain: number;
 }
 
+/** Three states of one curve, in any order. */
+export type ThreeStates = readonly [CurvePoint, CurvePoint, CurvePoint];
+
 /** Least distance of a trial from the highest point, over the bracket: keeps both sides moving where the crown is a kink. */
 const LEAST_TRIAL = 0.03;
 
-/** Top strain expected at a curvature from the last three states (Newton's divided differences); −1 from none. */
+/** Top strain expected at a curvature from the last three states; from one or two, by a straight line. */
 export function extrapolated(curvature: number, points: readonly CurvePoint[]): number {
-  const before = points[points.length - 1];
+  const before = points[points.length - 1]!;
   const earlier = points[points.length - 2];
   const earliest = points[points.length - 3];
-  if (!before) return -1;
   if (!earlier) return (before.topStrain * curvature) / before.curvaturePerMm;
-  const from = curvature - before.curvaturePerMm;
-  const slope = slopeBetween(earlier, before);
-  const linear = before.topStrain + slope * from;
-  if (!earliest) return linear;
-  const bend = (slope - slopeBetween(earliest, earlier)) / (before.curvaturePerMm - earliest.curvaturePerMm);
-  return linear + bend * from * (curvature - earlier.curvaturePerMm);
+  if (earliest) return topStrainThrough([earliest, earlier, before], curvature);
+  return before.topStrain + slopeBetween(earlier, before) * (curvature - before.curvaturePerMm);
+}
+
+/** Top strain at a curvature on the parabola through three states (Newton's divided differences). */
+export function topStrainThrough([a, b, c]: ThreeStates, curvature: number): number {
+  const slope = slopeBetween(b, c);
+  const bend = (slope - slopeBetween(a, b)) / (c.curvaturePerMm - a.curvaturePerMm);
+  const from = curvature - c.curvaturePerMm;
+  return c.topStrain + from * (slope + bend * (curvature - b.curvaturePerMm));
+}
+
+/** Moment at a curvature on the parabola through three states. */
+export function momentThrough([a, b, c]: ThreeStates, curvature: number): number {
+  const slope = (c.momentNmm - b.momentNmm) / (c.curvaturePerMm - b.curvaturePerMm);
+  const before = (b.momentNmm - a.momentNmm) / (b.curvaturePerMm - a.curvaturePerMm);
+  const bend = (slope - before) / (c.curvaturePerMm - a.curvaturePerMm);
+  const from = curvature - c.curvaturePerMm;
+  return c.momentNmm + from * (slope + bend * (curvature - b.curvaturePerMm));
 }
 
 /** Curvature of the crown of the parabola through three states, the middle one highest, held off the middle one. */
-export function crownOf(left: CurvePoint, middle: CurvePoint, right: CurvePoint): number {
+export function crownOf([left, middle, right]: ThreeStates): number {
   const x = middle.curvaturePerMm;
   const down = x - left.curvaturePerMm;
   const up = right.curvaturePerMm - x;

@@ -1,14 +1,17 @@
 import { bracketedRoot } from './bracketed-root.ts';
-import { curvatureGrid } from './curve-grid.ts';
+import { CurvatureGrid, GRID_POINTS } from './curve-grid.ts';
 import type { CurveModel } from './curve-model.ts';
 import {
   crownOf,
   excess,
   extrapolated,
   inOrder,
+  momentThrough,
   slopeBetween,
+  topStrainThrough,
   withPeak,
   type CurvePoint,
+  type ThreeStates,
 } from './curve-point.ts';
 import type { UltimateCause } from './ultimate-cause.ts';
 import {
@@ -35,6 +38,8 @@ const SHORT = 1e-3;
 /** Steps past the expected end, over the curvature before. */
 const BEYOND = 1.03;
 const PEAK_STEPS = 5;
+/** Share of the moment within which a parabola foretold a state: its crown is the curve's. */
+const SAME_CROWN = 1e-9;
 /** Steps where the crown is as sharp as that of a slab being lost: until both neighbours are within this share of it. */
 const MOST_PEAK_STEPS = 14;
 const CROWN_SHARE = 0.002;
@@ -159,40 +164,49 @@ export class Tracer {
 
   /** Points from rest to the end; a step in which the axis leaps, as where the cover spalls, is halved and halved again. */
   private walk(end: { curvature: number; cause: UltimateCause }) {
-    const grid = curvatureGrid(this.model, end.curvature);
+    const grid = new CurvatureGrid(this.model, end.curvature);
     const points: CurvePoint[] = [];
     const pending: number[] = [];
     let firstYield: CurvePoint | null = null;
     let { cause } = end;
-    for (let next = 0; next < grid.length || pending.length > 0 || this.isShort(points, cause);) {
+    for (let next = 0; next < GRID_POINTS || pending.length > 0 || this.isShort(points, cause);) {
       const before = points[points.length - 1];
-      const curvature = pending.pop() ?? grid[next++] ?? BEYOND * before!.curvaturePerMm;
-      const guess = extrapolated(curvature, points);
+      const curvature =
+        pending.pop() ?? (next < GRID_POINTS ? grid.at(next++) : BEYOND * before!.curvaturePerMm);
+      const guess = before ? extrapolated(curvature, points) : curvature * grid.elasticAxisMm;
       let point = this.pointAt(curvature, guess);
-      if (
-        before &&
-        this.isLeap(point, guess) &&
-        curvature - before.curvaturePerMm > LEAST_STEP * end.curvature
-      ) {
+      if (!before) {
+        points.push(point);
+        continue;
+      }
+      if (this.isLeap(point, guess) && curvature - before.curvaturePerMm > LEAST_STEP * end.curvature) {
         pending.push(curvature, 0.5 * (before.curvaturePerMm + curvature));
         continue;
       }
-      const early = before && this.endWithin(before, point);
+      const early = this.endWithin(before, point);
       if (early) ({ point, cause } = early);
       // the end lies behind the curvature already reached: the state before is the last
-      if (before && point.curvaturePerMm <= before.curvaturePerMm) break;
-      const isYielding = before && !firstYield && excess(point, this.yielded) <= 0;
-      const crossed = before
-        ? this.crests.filter((crest) => excess(before, crest) < 0 && excess(point, crest) > 0)
-        : [];
-      if (isYielding) firstYield = this.reaching(this.yielded, before, point);
-      if (before && (isYielding || crossed.length > 0)) {
-        const crests = crossed.map((crest) => this.reaching(crest, before, point));
-        points.push(...inOrder([isYielding && firstYield ? firstYield : point, ...crests, point]));
+      if (point.curvaturePerMm <= before.curvaturePerMm) break;
+      const found = this.crestsBetween(before, point);
+      if (!firstYield && excess(point, this.yielded) <= 0) {
+        firstYield = this.reaching(this.yielded, before, point);
+        found.push(firstYield);
+      }
+      if (found.length > 0) {
+        found.push(point);
+        points.push(...inOrder(found));
       } else points.push(point);
       if (early) break;
     }
     return { points, firstYield, cause };
+  }
+
+  /** States between two others at which the moment may crest. */
+  private crestsBetween(from: CurvePoint, to: CurvePoint): CurvePoint[] {
+    const found: CurvePoint[] = [];
+    for (const crest of this.crests)
+      if (excess(from, crest) < 0 && excess(to, crest) > 0) found.push(this.reaching(crest, from, to));
+    return found;
   }
 
   /**
@@ -300,14 +314,18 @@ export class Tracer {
         Math.abs(best.momentNmm - right.momentNmm),
       );
       if (step >= PEAK_STEPS && furthest < CROWN_SHARE * best.momentNmm) break;
-      const point = this.pointAt(crownOf(left, best, right), best.topStrain);
-      const isLeft = point.curvaturePerMm < best.curvaturePerMm;
+      const three: ThreeStates = [left, best, right];
+      const at = crownOf(three);
+      const point = this.pointAt(at, topStrainThrough(three, at));
+      const isParabola = Math.abs(point.momentNmm - momentThrough(three, at)) < SAME_CROWN * point.momentNmm;
+      const isLeft = at < best.curvaturePerMm;
       if (sign * (point.momentNmm - best.momentNmm) > 0) {
         if (isLeft) right = best;
         else left = best;
         best = point;
       } else if (isLeft) left = point;
       else right = point;
+      if (isParabola) break;
     }
     return best;
   }

@@ -1,4 +1,4 @@
-import { bracketedRoot } from './bracketed-root.ts';
+import { rootOf, type Sought } from './bracketed-root.ts';
 import type { CurveModel } from './curve-model.ts';
 
 /**
@@ -73,12 +73,12 @@ function stretchedOverhang(model: CurveModel, axisMm: number, power: 1 | 2): num
   return (model.overhangMm * (far ** (power + 1) - near ** (power + 1))) / (power + 1);
 }
 
-/**
- * How the net force grows with the top strain, N, but for what displaced concrete adds and a core that reaches beyond the
- * axis: good enough for a first step.
- */
+/** Step in a bar's strain, over it, by which the slope of the concrete it displaces is read. */
+const SLOPE_STEP = 1e-5;
+
+/** How the net force grows with the top strain, N, but for a core that reaches beyond the axis: for a first step. */
 function stiffnessN(model: CurveModel, curvature: number, topStrain: number): number {
-  const { cover, core, steel, depths, areas } = model;
+  const { cover, core, steel, depths, areas, isDisplacedDeducted } = model;
   let stiffness = model.widthMm * cover.nearStress(topStrain);
   if (core) {
     const atTop = topStrain - curvature * model.coreTopMm;
@@ -90,8 +90,17 @@ function stiffnessN(model: CurveModel, curvature: number, topStrain: number): nu
       model.overhangMm * (cover.nearStress(topStrain) - (atBottom > 0 ? cover.nearStress(atBottom) : 0));
   }
   stiffness /= curvature;
-  for (let i = 0; i < depths.length; i++)
-    stiffness += areas[i]! * steel.tangent(topStrain - curvature * depths[i]!);
+  for (let i = 0; i < depths.length; i++) {
+    const depth = depths[i]!;
+    const strain = topStrain - curvature * depth;
+    let tangent = steel.tangent(strain);
+    if (strain > 0 && isDisplacedDeducted) {
+      const step = SLOPE_STEP * strain;
+      const rise = concreteStressAt(model, depth, strain + step) - concreteStressAt(model, depth, strain);
+      tangent -= rise / step;
+    }
+    stiffness += areas[i]! * tangent;
+  }
   return stiffness;
 }
 
@@ -184,11 +193,16 @@ const MOST_STEPS = 80;
 /** Unbalanced force, over the concrete's compression, that counts as none: where the top strain is sought, and a curvature. */
 const BALANCED = 2e-10;
 const HELD_BALANCED = 1e-13;
+/** Unbalanced force, over the concrete's compression, above which no step is taken unseen, as a bar may yield within it. */
+const NEARLY_BALANCED = 1e-6;
+/** Length of the last step, over the strain, above which its end may have been near by luck. */
+const CLOSE = 0.02;
 
 /**
  * Top strain that balances the cracked section at a curvature: one step of Newton from a guess, then secants, inside a
  * bracket that shrinks with every step. At zero strain every bar pulls; with the axis at the deepest bar none does. A step
- * that leaves the bracket, or is not half the last, halves it instead.
+ * that leaves the bracket, or is not half the last, halves it instead. A secant lessens the force by as much as the last step
+ * did, at least; where that ends within `BALANCED` the last step need not be looked at.
  */
 export function balancedTopStrain(model: CurveModel, curvature: number, guess: number, out: Balance): number {
   let low = 0;
@@ -197,18 +211,23 @@ export function balancedTopStrain(model: CurveModel, curvature: number, guess: n
   let slope = stiffnessN(model, curvature, strain);
   let lastStrain = strain;
   let lastForce = 0;
+  let lastOff = 0;
   let lastStep = high;
   for (let count = 0; count < MOST_STEPS; count++) {
     balance(model, curvature, strain, out);
     if (out.forceN > 0) high = strain;
     else low = strain;
-    if (Math.abs(out.forceN) <= BALANCED * out.concreteN) break;
+    const off = Math.abs(out.forceN) / out.concreteN;
+    if (off <= BALANCED) break;
     if (count > 0) slope = (out.forceN - lastForce) / (strain - lastStrain);
     lastStrain = strain;
     lastForce = out.forceN;
     const step = -out.forceN / slope;
     const isGood = strain + step > low && strain + step < high && Math.abs(step) < 0.5 * lastStep;
     strain = isGood ? strain + step : 0.5 * (low + high);
+    const isNear = off <= NEARLY_BALANCED && lastStep <= CLOSE * lastStrain;
+    if (isGood && isNear && off * off <= BALANCED * lastOff) break;
+    lastOff = off;
     lastStep = Math.abs(strain - lastStrain);
     if (high - low <= Number.EPSILON * high) break;
   }
@@ -222,6 +241,33 @@ export interface HeldStrain {
 }
 
 /**
+ * Net force with a strain held at a depth: by the radius of curvature where the section is cracked, in which the concrete's
+ * part is straight, else by the curvature, in which all of it nearly is; so the root is soon found.
+ */
+class HeldForce implements Sought {
+  private readonly model: CurveModel;
+  private readonly held: HeldStrain;
+  private readonly out: Balance;
+  private readonly stage: Stage;
+
+  constructor(model: CurveModel, held: HeldStrain, out: Balance, stage: Stage) {
+    this.model = model;
+    this.held = held;
+    this.out = out;
+    this.stage = stage;
+  }
+
+  valueAt(x: number): number {
+    const { model, held, out, stage } = this;
+    const curvature = stage === 'cracked' ? 1 / x : x;
+    const topStrain = held.strain + curvature * held.depthMm;
+    balance(model, curvature, topStrain, out);
+    const force = stage === 'cracked' ? out.forceN : out.forceN - tensionForce(model, curvature, topStrain);
+    return Math.abs(force) <= HELD_BALANCED * out.concreteN ? 0 : force;
+  }
+}
+
+/**
  * Curvature between two bounds at which the section balances with a strain held at a depth; NaN where the bounds do not
  * bracket one.
  */
@@ -232,10 +278,6 @@ export function balancedCurvature(
   out: Balance,
   stage: Stage = 'cracked',
 ): number {
-  const forceAt = (curvature: number) => {
-    const topStrain = held.strain + curvature * held.depthMm;
-    const force = netForceN(model, stage, { curvature, topStrain }, out);
-    return Math.abs(force) <= HELD_BALANCED * out.concreteN ? 0 : force;
-  };
-  return bracketedRoot(forceAt, low, high);
+  const force = new HeldForce(model, held, out, stage);
+  return stage === 'cracked' ? 1 / rootOf(force, 1 / high, 1 / low) : rootOf(force, low, high);
 }

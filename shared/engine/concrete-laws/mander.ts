@@ -13,6 +13,10 @@ const LARGEST_SECANT_SHARE = 0.9;
 /** Steps of the table to twice the peak strain, and beyond it. */
 const STEPS_TO_TWICE_PEAK = 48;
 const STEPS_BEYOND = 32;
+/** ln x at the steps to twice the peak strain, the same for every curve; −∞ at zero, where x^r is zero. */
+const LOGS_TO_TWICE_PEAK = Array.from({ length: STEPS_TO_TWICE_PEAK + 1 }, (_, i) =>
+  Math.log((2 * i) / STEPS_TO_TWICE_PEAK),
+);
 
 /** Ec = 5000 √f′c, MPa: the modulus that belongs to this law. */
 const manderModulusMPa = (fcMPa: number) => 5000 * Math.sqrt(fcMPa);
@@ -64,7 +68,7 @@ class ManderLaw implements ConcreteLaw {
     this.bend = 2 * peakStrain;
     this.end = endStrain;
     const nearStretch = { from: 0, to: this.bend, steps: STEPS_TO_TWICE_PEAK };
-    this.near = new IntegralTable(this.curve, nearStretch, { force: 0, moment: 0 });
+    this.near = new IntegralTable(this.curve, nearStretch, { force: 0, moment: 0 }, LOGS_TO_TWICE_PEAK);
     this.stressAtBend = this.near.stress(this.bend);
     this.forceAtBend = this.near.force(this.bend);
     this.momentAtBend = this.near.moment(this.bend);
