@@ -62,7 +62,7 @@ const END_OF: Readonly<Record<UltimateCause, (model: CurveModel) => string>> = {
 const shown = (strain: number) => String(Number(strain.toPrecision(4)));
 
 /** The strain at which the steel yields, as it is written. */
-export const yieldStrainOf = (model: CurveModel) => (model.isDesignStrength ? 'fyd/Es' : 'fy/Es');
+export const yieldStrainOf = ({ symbols }: CurveModel) => `${symbols.fyDesign}/Es`;
 
 /** What ended a curve, as a clause after “where”. */
 export const endOf = (model: CurveModel, cause: UltimateCause) => END_OF[cause](model);

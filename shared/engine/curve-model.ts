@@ -9,6 +9,7 @@ import { todeschini } from './concrete-laws/todeschini.ts';
 import { flangeOf, grossOverhang } from './flange.ts';
 import type { Arrangement } from './evaluation.ts';
 import { assertPositive, InvalidSectionError } from './preconditions.ts';
+import type { CodeSymbols } from './rules/code-symbols.ts';
 import type { RuleSet } from './rules/rule-set.ts';
 import { ruleSetOf } from './rules/rule-set-of.ts';
 import type { DesignBasis, SectionInput } from './section.ts';
@@ -42,6 +43,8 @@ export interface CurveModel {
   readonly steel: SteelLaw;
   /** The laws are at a code's design strengths, fcd and fyd. */
   readonly isDesignStrength: boolean;
+  /** The code's letters, for what is said of the curve. */
+  readonly symbols: CodeSymbols;
   readonly depths: Float64Array;
   readonly areas: Float64Array;
   readonly isDisplacedDeducted: boolean;
@@ -103,7 +106,7 @@ export function curveMaterials(
     cover: isConfinedLaw(concreteLaw)
       ? unconfinedLaw(concreteLaw, fcMPa, ecMPa, { peakShare, peakStrain })
       : plain,
-    steel: steelOf(rules.designYieldMPa(fyMPa), basis.esMPa, choices),
+    steel: steelOf(rules, { fyMPa: rules.designYieldMPa(fyMPa), esMPa: basis.esMPa }, choices),
     isDesignStrength: rules.designYieldMPa(fyMPa) !== fyMPa,
     tension: { ecMPa, crackingStrain: rules.ruptureModulusMPa(fcMPa) / ecMPa },
   };
@@ -128,6 +131,7 @@ export function curveModelOf(input: CurveInput, materials: CurveMaterials): Curv
     confinementNote,
     steel,
     isDesignStrength,
+    symbols: rules.symbols,
     depths: layout.depths,
     areas: layout.areas,
     isDisplacedDeducted: basis.displacedConcrete !== 'ignore',
@@ -230,12 +234,17 @@ function unconfinedLaw(law: ConcreteLawId, fcMPa: number, ecMPa: number, setting
   }
 }
 
-function steelOf(fyMPa: number, esMPa: number, choices: CurveChoices): SteelLaw {
+function steelOf(
+  { symbols, clauses }: RuleSet,
+  bars: { readonly fyMPa: number; readonly esMPa: number },
+  choices: CurveChoices,
+): SteelLaw {
   const { steelLaw, ruptureStrain, strengthRatio, hardeningStrain } = choices;
+  const grade = { ...bars, ruptureStrain, yieldName: symbols.fyDesign, clause: clauses.steelLaw };
   const law =
     steelLaw === 'elastic-plastic'
-      ? elasticPlastic({ fyMPa, esMPa, ruptureStrain })
-      : strainHardening({ fyMPa, esMPa, ruptureStrain, strengthRatio, hardeningStrain });
+      ? elasticPlastic(grade)
+      : strainHardening({ ...grade, strengthRatio, hardeningStrain });
   const last = law.kinkStrains[law.kinkStrains.length - 1]!;
   if (!(law.ruptureStrain > last))
     throw new InvalidSectionError(

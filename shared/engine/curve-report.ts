@@ -140,7 +140,13 @@ function marksOf(curve: MomentCurvature): readonly CurveMark[] {
       ? 'the outermost tension layer'
       : 'the centroid of the tension steel';
   const marks = [
-    cracking && at('cracking', 'cracking', cracking, 'the tension face reaches fr, uncracked'),
+    cracking &&
+      at(
+        'cracking',
+        'cracking',
+        cracking,
+        `the tension face reaches ${model.symbols.ruptureModulus}, uncracked`,
+      ),
     firstYield && at('first-yield', 'first yield', firstYield, `${where} reaches ${yieldStrainOf(model)}`),
     bilinear && {
       id: 'bilinear-yield' as const,

@@ -50,7 +50,7 @@ const METHOD =
 const UNEXPLAINED = 'no reason found: treat both values with care';
 
 const LABELS: Readonly<Record<OpinionId, string>> = {
-  'closed-strength': 'Mn, closed form',
+  'closed-strength': 'strength, closed form',
   'closed-curvature': 'φu, closed form',
   'first-yield': 'curvature at first yield',
   peak: 'highest moment',

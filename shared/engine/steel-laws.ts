@@ -18,30 +18,40 @@ export interface SteelLaw {
 
 /** Strain at which a bar of ordinary grade breaks, unless set (Priestley, Seible and Calvi, 1996, for Grade 60; memory). */
 const RUPTURE_STRAIN = 0.12;
+const RUPTURE_SOURCE = 'rupture at 0.12 by Priestley, Seible and Calvi (1996)';
 
 export interface SteelGrade {
   readonly fyMPa: number;
   readonly esMPa: number;
   readonly ruptureStrain?: number | undefined;
+  /** How the code names the yield stress, and where it gives the law; fy unless set. */
+  readonly yieldName?: string | undefined;
+  readonly clause?: string | undefined;
 }
+
+const shown = (value: number) => Number(value.toPrecision(4));
 
 class ElasticPlasticLaw implements SteelLaw {
   readonly name = 'elastic–plastic';
-  readonly source = 'ACI 318 20.2.2.1, from memory';
+  readonly source: string;
   readonly fyMPa: number;
   readonly esMPa: number;
   readonly yieldStrain: number;
   readonly ruptureStrain: number;
 
-  constructor({ fyMPa, esMPa, ruptureStrain = RUPTURE_STRAIN }: SteelGrade) {
+  private readonly yieldName: string;
+
+  constructor({ fyMPa, esMPa, ruptureStrain, yieldName = 'fy', clause = 'common practice' }: SteelGrade) {
     this.fyMPa = fyMPa;
     this.esMPa = esMPa;
     this.yieldStrain = fyMPa / esMPa;
-    this.ruptureStrain = ruptureStrain;
+    this.ruptureStrain = ruptureStrain ?? RUPTURE_STRAIN;
+    this.yieldName = yieldName;
+    this.source = `${clause}${ruptureStrain === undefined ? `; ${RUPTURE_SOURCE}` : ''}; from memory`;
   }
 
   get formula(): string {
-    return `σ = Es ε, at most fy; breaks at ${this.ruptureStrain}`;
+    return `σ = Es ε, at most ${this.yieldName} = ${shown(this.fyMPa)} MPa; breaks at ${this.ruptureStrain}`;
   }
 
   get kinkStrains(): readonly number[] {
@@ -82,10 +92,12 @@ class HardeningLaw implements SteelLaw {
   private readonly fuMPa: number;
   private readonly start: number;
   private readonly exponent: number;
+  private readonly yieldName: string;
 
   constructor({
     fyMPa,
     esMPa,
+    yieldName = 'fy',
     ruptureStrain = RUPTURE_STRAIN,
     strengthRatio = 1.25,
     hardeningStrain = 0.008,
@@ -99,10 +111,12 @@ class HardeningLaw implements SteelLaw {
     // steel so strong that it would yield after hardening began has no flat
     this.start = Math.max(hardeningStrain, this.yieldStrain);
     this.exponent = exponent;
+    this.yieldName = yieldName;
   }
 
   get formula(): string {
-    return `σ = Es ε to fy, flat to εsh = ${this.start}, then fu − (fu − fy) ((εsu − ε)/(εsu − εsh))^${this.exponent}; fu = ${Number(this.fuMPa.toPrecision(4))} MPa, breaks at εsu = ${this.ruptureStrain}`;
+    const { yieldName, start, exponent, ruptureStrain } = this;
+    return `σ = Es ε to ${yieldName} = ${shown(this.fyMPa)} MPa, flat to εsh = ${shown(start)}, then fu − (fu − ${yieldName}) ((εsu − ε)/(εsu − εsh))^${exponent}; fu = ${shown(this.fuMPa)} MPa, breaks at εsu = ${ruptureStrain}`;
   }
 
   get kinkStrains(): readonly number[] {

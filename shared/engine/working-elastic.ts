@@ -135,7 +135,7 @@ export function ductilitySteps({
       'fc-yield',
       'ductility',
       [
-        `fc/${symbols.fc} at yield`,
+        `${symbols.concreteStress}/${symbols.fc} at yield`,
         `${ec[0]} φy kd/${symbols.fc}`,
         elastic.concreteStressShareAtYield,
         'ratio',

@@ -1,10 +1,13 @@
 import { faceSteelOf } from './checks-seismic.ts';
 import type { WorkingStep } from './evaluation.ts';
+import { flangeOf } from './flange.ts';
 import { reversedStrength } from './reversal.ts';
 import { FACES } from './section.ts';
 import { leastWebMm } from './seismic.ts';
 import { materialInputs, type WorkingSource } from './working-source.ts';
 import { STATICS, step, type Input } from './working-step.ts';
+
+const OTHER_FACE = 'As of the other face';
 
 /** What the moment frame asks, with numbers. Hoops are with the stirrups. */
 export function seismicSteps(source: WorkingSource): WorkingStep[] {
@@ -42,53 +45,54 @@ function spanStep({ demand, layout, seismic }: WorkingSource): WorkingStep[] {
 }
 
 function steelSteps(source: WorkingSource): WorkingStep[] {
-  const { section, ruleSet, seismic } = source;
   return FACES.flatMap((face) => {
     const of = faceSteelOf(source, face);
     if (!of) return [];
-    const inputs: Input[] = [
-      ['b', section.widthMm, 'length'],
-      ['d', of.dMm, 'length'],
-      [ruleSet.symbols.fc, section.fcMPa, 'stress'],
-      [ruleSet.symbols.fy, section.fyMPa, 'stress'],
-      ['As of the other face', of.otherMm2, 'area'],
-    ];
-    const { clauses, formulas } = seismic!;
-    const steps = [
+    const { clauses, formulas } = source.seismic!;
+    const stepOf = (which: 'least' | 'most', formula: string, value: number, clause: string) =>
       step(
-        `seismic-least-${face}`,
+        `seismic-${which}-${face}`,
         'limits',
-        [`As,min ${face}`, formulas.leastSteel, of.leastMm2, 'area'],
-        [...inputs, ...designInputs(source, formulas.leastSteel)],
-        clauses.steel,
-      ),
-    ];
-    if (of.mostMm2 < Infinity)
-      steps.push(
-        step(
-          `seismic-most-${face}`,
-          'limits',
-          [`As,max ${face}`, formulas.mostSteel, of.mostMm2, 'area'],
-          [...inputs, ...designInputs(source, formulas.mostSteel)],
-          clauses.steel,
-        ),
+        [`As,${which === 'least' ? 'min' : 'max'} ${face}`, formula, value, 'area'],
+        steelInputs(source, of, formula),
+        clause,
       );
-    return steps;
+    const least = stepOf('least', formulas.leastSteel(face), of.leastMm2, clauses.leastSteel(face));
+    if (of.mostMm2 === Infinity) return [least];
+    return [least, stepOf('most', formulas.mostSteel, of.mostMm2, clauses.mostSteel)];
   });
 }
 
-/** Design values a limit names besides the strengths, and the curvature ductility it is to allow. */
-function designInputs({ section, basis, demand, ruleSet }: WorkingSource, formula: string): Input[] {
+/** Sizes, strengths and design values a limit names; all of its strengths for one told in words. */
+function steelInputs(
+  { section, basis, demand, ruleSet }: WorkingSource,
+  of: { readonly dMm: number; readonly otherMm2: number },
+  formula: string,
+): Input[] {
   const { fc, fy, epsilonY } = ruleSet.symbols;
-  const named = materialInputs(formula, section, ruleSet).filter(
-    ([symbol]) => symbol !== fc && symbol !== fy,
-  );
+  const isOfOther = formula.includes(OTHER_FACE);
+  const isOfOwn = !isOfOther || formula.includes('b d');
+  const named = materialInputs(formula, section, ruleSet);
+  const strengths: Input[] = [
+    [fc, section.fcMPa, 'stress'],
+    [fy, section.fyMPa, 'stress'],
+  ];
   const { ductilityTarget } = demand;
-  if (ductilityTarget === null || !formula.includes('μφ')) return named;
   return [
-    ...named,
-    [epsilonY, ruleSet.designYieldMPa(section.fyMPa) / basis.esMPa, 'strain'],
-    ['μφ', ductilityTarget, 'ratio'],
+    ...(isOfOwn
+      ? ([
+          ['b', section.widthMm, 'length'],
+          ['d', of.dMm, 'length'],
+        ] as const)
+      : []),
+    ...(isOfOther ? ([[OTHER_FACE, of.otherMm2, 'area']] as const) : []),
+    ...(named.length > 0 || !isOfOwn ? named : strengths),
+    ...(ductilityTarget !== null && formula.includes('μφ')
+      ? ([
+          [epsilonY, ruleSet.designYieldMPa(section.fyMPa) / basis.esMPa, 'strain'],
+          ['μφ', ductilityTarget, 'ratio'],
+        ] as const)
+      : []),
   ];
 }
 
@@ -102,6 +106,17 @@ function reversalSteps({ section, layout, basis, ruleSet, seismic, flexure }: Wo
     [`d${i + 1}`, section.depthMm - layout.depths[n - 1 - i]!, 'length'],
     [`A${i + 1}`, layout.areas[n - 1 - i]!, 'area'],
   ]).flat();
+  const flange = flangeOf(section, ruleSet);
+  const widths: Input[] = [
+    ['b', section.widthMm, 'length'],
+    // the slab at the tension face is at the compression face now
+    ...(flange?.face === 'tension'
+      ? ([
+          ['bf', flange.widthMm, 'length'],
+          ['hf', flange.thicknessMm, 'length'],
+        ] as const)
+      : []),
+  ];
   const axis: Input = [symbols.axis, neutralAxisMm, 'length'];
   const least: Input = [`${symbols.nominalMoment},min`, share * flexure.nominalMomentNmm, 'moment'];
   const strength = step(
@@ -113,7 +128,7 @@ function reversalSteps({ section, layout, basis, ruleSet, seismic, flexure }: Wo
       momentNmm,
       'moment',
     ],
-    [...(neutralAxisMm > 0 ? [axis] : []), ...layers],
+    [...(neutralAxisMm > 0 ? [axis] : []), ...widths, ...layers],
     STATICS,
   );
   return [

@@ -2,6 +2,7 @@ import type { WorkingStep } from './evaluation.ts';
 import { cotTheta, longitudinalShare, sizeFactor, vRdMaxN, vRdsN, type StrutShear } from './shear-strut.ts';
 import { designShearN, stirrupSpacingLimitMm } from './shear.ts';
 import type { ShearState } from './checks-detailing.ts';
+import type { Clauses } from './rules/rule-set.ts';
 import type { WorkingSource } from './working-source.ts';
 import { step, type Input } from './working-step.ts';
 
@@ -11,7 +12,8 @@ export function strutShearSteps(
   { dMm, asMm2, concreteN }: ShearState,
   k: StrutShear,
 ): WorkingStep[] {
-  const clause = ruleSet.clauses.shear;
+  const { clauses } = ruleSet;
+  const clause = clauses.shearConcrete;
   const b: Input = ['b', k.widthMm, 'length'];
   const d: Input = ['d', dMm, 'length'];
   const fck: Input = ['fck', k.fckMPa, 'stress'];
@@ -35,11 +37,12 @@ export function strutShearSteps(
       clause,
     ),
   ];
-  return k.avMm2 === 0 ? steps : [...steps, ...trussSteps(k, dMm, alone, clause)];
+  return k.avMm2 === 0 ? steps : [...steps, ...trussSteps(k, dMm, alone, clauses)];
 }
 
-function trussSteps(k: StrutShear, dMm: number, alone: Input, clause: string): WorkingStep[] {
+function trussSteps(k: StrutShear, dMm: number, alone: Input, clauses: Clauses): WorkingStep[] {
   const { rules } = k;
+  const clause = clauses.shearStirrups;
   const cotValue = cotTheta(k, k.spacingMm);
   const z: Input = ['z', rules.leverArmShare * dMm, 'length'];
   const cot: Input = ['cot θ', cotValue, 'ratio'];
@@ -85,14 +88,14 @@ function trussSteps(k: StrutShear, dMm: number, alone: Input, clause: string): W
       'limits',
       [struts[0], 'b z ν1 fcd/(cot θ + tan θ)', struts[1], 'force'],
       [b, z, ...strut, cot],
-      clause,
+      clauses.shearLimit,
     ),
     step(
       'phi-vn',
       'limits',
       ['VRd', 'max(VRd,c, min(VRd,s, VRd,max))', designShearN(k, dMm, alone[1]), 'force'],
       [alone, stirrups, struts],
-      clause,
+      clauses.shear,
     ),
   ];
 }
@@ -107,7 +110,7 @@ export function strutSpacingSteps(
   if (!(limitMm > 0)) return [];
   const { rules } = k;
   const least: Input = ['Asw,min/s', k.leastAvPerMm, 'length'];
-  const clause = ruleSet.clauses.stirrupSpacing;
+  const { clauses } = ruleSet;
   return [
     step(
       'least-stirrups',
@@ -118,14 +121,14 @@ export function strutSpacingSteps(
         ['b', k.widthMm, 'length'],
         ['fywk', k.fytMPa, 'stress'],
       ],
-      clause,
+      clauses.leastStirrups,
     ),
     step(
       'stirrup-spacing',
       'limits',
       ['s,max', `min(${rules.longestSpacingShare} d, Asw/(Asw,min/s))`, limitMm, 'length'],
       [['d', dMm, 'length'], ['Asw', k.avMm2, 'area'], least],
-      clause,
+      clauses.stirrupSpacing,
     ),
   ];
 }

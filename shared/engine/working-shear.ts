@@ -28,7 +28,7 @@ function additiveSteps(
   { dMm, asMm2, concreteN: vc }: ShearState,
   k: AdditiveShear,
 ): WorkingStep[] {
-  const clause = ruleSet.clauses.shear;
+  const { clauses } = ruleSet;
   const isReduced = k.rules.concreteWithoutStirrups !== null && !hasLeastStirrups(k, k.spacingMm);
   const shared: Input[] = [
     ['f′c', section.fcMPa, 'stress'],
@@ -43,14 +43,20 @@ function additiveSteps(
       'limits',
       ['Vc', formula, vc, 'force'],
       [...shared, ...(isReduced ? [['As', asMm2, 'area'] as const] : [])],
-      clause,
+      clauses.shearConcrete,
     ),
   ];
   const vs: Input = ['Vs', stirrupShearN(k, dMm), 'force'];
   if (k.avMm2 > 0) {
     const most: Input = ['Vs,max', largestStirrupShearN(k, dMm), 'force'];
     steps.push(
-      step('vs-max', 'limits', [most[0], formulas.stirrupLimit, most[1], 'force'], shared, clause),
+      step(
+        'vs-max',
+        'limits',
+        [most[0], formulas.stirrupLimit, most[1], 'force'],
+        shared,
+        clauses.shearLimit,
+      ),
       step(
         'vs',
         'limits',
@@ -62,7 +68,7 @@ function additiveSteps(
           ['s', k.spacingMm, 'length'],
           most,
         ],
-        clause,
+        clauses.shearStirrups,
       ),
     );
   }
@@ -72,7 +78,7 @@ function additiveSteps(
       'limits',
       ['φVn', 'φ (Vc + Vs)', designShearN(k, dMm, vc), 'force'],
       [['φ', k.rules.reduction, 'ratio'], ['Vc', vc, 'force'], vs],
-      clause,
+      clauses.shear,
     ),
   );
   return steps;
@@ -89,7 +95,7 @@ function additiveSpacingSteps(
   const isHalved = isSpacingHalved(k, vuN, dMm, concreteN);
   const longest: Input = ['s,long', k.rules.longestSpacingMm / (isHalved ? 2 : 1), 'length'];
   const least: Input = ['Av,min/s', k.leastAvPerMm, 'length'];
-  const clause = ruleSet.clauses.stirrupSpacing;
+  const { clauses } = ruleSet;
   return [
     step(
       'least-stirrups',
@@ -100,14 +106,14 @@ function additiveSpacingSteps(
         ['b', section.widthMm, 'length'],
         ['fyt', Math.min(k.fytMPa, k.rules.fytCapMPa), 'stress'],
       ],
-      clause,
+      clauses.leastStirrups,
     ),
     step(
       'stirrup-spacing',
       'limits',
       ['s,max', `min(d/${isHalved ? 4 : 2}, s,long, Av/(Av,min/s))`, limitMm, 'length'],
       [['d', dMm, 'length'], longest, ['Av', k.avMm2, 'area'], least],
-      clause,
+      clauses.stirrupSpacing,
     ),
   ];
 }

@@ -163,7 +163,7 @@ function strengthStep(source: WorkingSource, limitMm: number): WorkingStep[] {
         'length',
       ],
       inputs,
-      ruleSet.clauses.shear,
+      ruleSet.clauses.shearStirrups,
     ),
   ];
 }
@@ -172,7 +172,7 @@ function spacingSteps(source: WorkingSource, alongMm: number, areaMm: number): W
   const { ruleSet, section } = source;
   const { state, constants: k } = source.stirrups.design!;
   const { symbols } = ruleSet;
-  const clause = ruleSet.clauses.stirrupSpacing;
+  const clause = ruleSet.clauses.leastStirrups;
   const least: Input = [`${symbols.stirrupArea},min/s`, k.leastAvPerMm, 'length'];
   const leastFormula =
     k.form === 'additive' ? k.rules.formulas.leastStirrups : `${k.rules.leastStirrupRoot} √fck b/fywk; MPa`;
@@ -204,7 +204,7 @@ function alongStep(source: WorkingSource, vuN: number, alongMm: number, k: Shear
   const { layout, ruleSet } = source;
   const { dMm } = layout;
   const d: Input = ['d', dMm, 'length'];
-  const clause = ruleSet.clauses.stirrupSpacing;
+  const clause = ruleSet.clauses.spacingAlong;
   if (k.form !== 'additive')
     return step(
       'spacing-along',

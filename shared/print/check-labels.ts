@@ -39,8 +39,9 @@ const CHECKS: Readonly<Record<CheckId, CheckLabel>> = {
 export function checkLabel(id: CheckId, code?: RuleSetId): CheckLabel {
   const label = CHECKS[id];
   if (code === undefined) return label;
-  const { designMoment, designShear, compressionSteel } = codeSymbols(code);
+  const { designMoment, designShear, compressionSteel, spanDepth } = codeSymbols(code);
   if (id === 'strength') return { ...label, symbol: designMoment };
   if (id === 'shear') return { ...label, symbol: designShear };
+  if (id === 'least-depth') return { ...label, symbol: spanDepth };
   return id === 'compression-share' ? { ...label, symbol: `${compressionSteel}/As` } : label;
 }

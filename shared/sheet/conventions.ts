@@ -1,8 +1,9 @@
 import type { UnitSystem } from '../contract/design-basis.ts';
 import type { Snapshot } from '../contract/records.ts';
 import type { CodeSymbols } from '../engine/rules/code-symbols.ts';
-import type { YieldCurvatureAt } from '../engine/section.ts';
+import type { SectionInput, YieldCurvatureAt } from '../engine/section.ts';
 import { codeSymbols } from '../print/code-symbols.ts';
+import { isHogging } from '../print/face-word.ts';
 import { formatNumber } from '../print/format-quantity.ts';
 
 const DISPLACED = {
@@ -37,15 +38,24 @@ const BEND = {
   none: 'Corner bars touch both legs of the stirrup; no allowance is made for its bend.',
 } as const;
 
+/** A slab in tension lies at the top, so that the section hogs; all that is printed is of that bending, without a sign. */
+const bendingOf = (section: SectionInput): string =>
+  isHogging(section)
+    ? 'The section hogs: tension at the top, in the slab. Its moments are printed without a sign; depths are measured from the compression face, the bottom.'
+    : 'Sagging moments are positive; depths are measured from the compression face, the top.';
+
 /** How the numbers are to be read: signs, units, and each choice on which they depend. */
-export function conventionsOf({ evaluation }: Snapshot, units: UnitSystem): string[] {
+export function conventionsOf({ evaluation, section }: Snapshot, units: UnitSystem): string[] {
   const { conventions, flexure, elastic } = evaluation;
   const symbols = codeSymbols(evaluation.ruleSet.id);
   const crushing = flexure ? `${symbols.epsilonCu} = ${formatNumber(flexure.epsilonCu, 4, true)}, ` : '';
   const share = elastic === null ? '' : formatNumber(elastic.concreteStressShareAtYield, 2);
   return [
-    'Sagging moments are positive; depths are measured from the compression face. In steel, tension is positive in strain, stress and force; C is the compression in the concrete. Moments are taken about the compression face.',
+    `${bendingOf(section)} In steel, tension is positive in strain, stress and force; C is the compression in the concrete. Moments are taken about the compression face.`,
     `Ultimate: plane sections, no tension in concrete, rectangular block, ${crushing}steel elastic and then perfectly plastic, each layer at its own strain; no layer is assumed to yield.`,
+    ...(section.flange
+      ? ['In the formulas b is the width of the web, bw; bf and hf are of the flange.']
+      : []),
     DISPLACED[conventions.displacedConcrete],
     ...designValues(symbols),
     yieldConvention(conventions.yieldCurvatureAt, symbols),

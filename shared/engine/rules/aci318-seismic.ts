@@ -27,13 +27,15 @@ function clausesOf({ title }: Book, section: string): SeismicClauses {
     width: `${title} 18.6.2.1`,
     span: `${title} 18.6.2.1`,
     steel: `${title} 18.6.3.1`,
+    leastSteel: () => `${title} 18.6.3.1`,
+    mostSteel: `${title} 18.6.3.1`,
     bars: `${title} ${section}`,
     reversal: `${title} 18.6.3.2`,
     hoops: `${title} 18.6.4.4`,
   };
 }
 
-const NO_FORMULAS = { width: '', leastSteel: '', mostSteel: '', hoops: '' };
+const NO_FORMULAS = { width: '', leastSteel: () => '', mostSteel: '', hoops: '' };
 
 function ordinary(book: Book): SeismicRules {
   return {
@@ -106,7 +108,7 @@ function special(book: Book): SeismicRules {
     clauses: clausesOf(book, '18.6.3.1'),
     formulas: {
       width: `min(0.3 h, ${isMetric ? '250 mm' : '10 in'})`,
-      leastSteel: 'As,min of the face, not waived',
+      leastSteel: () => 'As,min of the face, not waived',
       mostSteel: knowsGrade80 ? `0.025 b d to ${grades[0]}, 0.020 b d to ${grades[1]}` : '0.025 b d',
       hoops: knowsGrade80
         ? `min(d/4, 6 db to ${grades[0]} or 5 db to ${grades[1]}, ${isMetric ? '150 mm' : '6 in'})`

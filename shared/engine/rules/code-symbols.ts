@@ -15,6 +15,10 @@ export interface CodeSymbols {
   readonly axis: string;
   readonly concreteModulus: string;
   readonly ruptureModulus: string;
+  /** Concrete's stress where it is not its strength. */
+  readonly concreteStress: string;
+  /** Depth that the span is held against. */
+  readonly spanDepth: string;
   /** Moment and shear asked of the section, and what it can carry. */
   readonly moment: string;
   readonly shear: string;
@@ -40,6 +44,8 @@ export const ACI_SYMBOLS: CodeSymbols = {
   axis: 'c',
   concreteModulus: 'Ec',
   ruptureModulus: 'fr',
+  concreteStress: 'fc',
+  spanDepth: 'h',
   moment: 'Mu',
   shear: 'Vu',
   nominalMoment: 'Mn',
@@ -62,6 +68,8 @@ export const EN_SYMBOLS: CodeSymbols = {
   axis: 'x',
   concreteModulus: 'Ecm',
   ruptureModulus: 'fct,eff',
+  concreteStress: 'σc',
+  spanDepth: 'd',
   moment: 'MEd',
   shear: 'VEd',
   nominalMoment: 'MRd',

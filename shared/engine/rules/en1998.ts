@@ -21,6 +21,8 @@ export function en1998(values: FullNationalValues): SeismicSystems {
 function ductile(level: 'M' | 'H', values: FullNationalValues): SeismicRules {
   const isHigh = level === 'H';
   const section = isHigh ? '5.5.3.1' : '5.4.3.1';
+  // the limits of class M are those of class H too
+  const steel = isHigh ? '5.5.3.1.3, 5.4.3.1.2' : '5.4.3.1.2';
   const [fixedMm, bars] = isHigh ? [175, 6] : [225, 8];
   return {
     title: `frame of ductility class ${level}`,
@@ -52,13 +54,15 @@ function ductile(level: 'M' | 'H', values: FullNationalValues): SeismicRules {
       width: `${BOOK} 5.5.1.2.1(1)`,
       span: BOOK,
       steel: `${BOOK} ${section}.${isHigh ? '3' : '2'}`,
+      leastSteel: (face) => `${BOOK} ${steel}${face === 'tension' ? '(5)' : '(4)'}`,
+      mostSteel: `${BOOK} ${steel}(4)`,
       bars: `${BOOK} 5.5.3.1.3(5)`,
       reversal: BOOK,
       hoops: `${BOOK} ${section}.${isHigh ? '3(6)' : '2(6)'}`,
     },
     formulas: {
       width: '200 mm',
-      leastSteel: '0.5 fctm b d/fyk; at the compression face half of As',
+      leastSteel: (face) => (face === 'tension' ? '0.5 fctm b d/fyk' : 'As of the other face/2'),
       mostSteel: 'As of the other face + 0.0018 fcd b d/(μφ εyd fyd)',
       hoops: `min(h/4, 24 ds, ${fixedMm} mm, ${bars} db)`,
     },

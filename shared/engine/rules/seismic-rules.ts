@@ -4,7 +4,10 @@ import type { Face, SeismicSystem } from '../section.ts';
 export interface SeismicClauses {
   readonly width: string;
   readonly span: string;
+  /** Steel of the faces as a whole; then the least and the most of one face. */
   readonly steel: string;
+  leastSteel(face: Face): string;
+  readonly mostSteel: string;
   readonly bars: string;
   readonly reversal: string;
   readonly hoops: string;
@@ -13,7 +16,7 @@ export interface SeismicClauses {
 /** The rule as its book prints it, for the working. */
 interface SeismicFormulas {
   readonly width: string;
-  readonly leastSteel: string;
+  leastSteel(face: Face): string;
   readonly mostSteel: string;
   readonly hoops: string;
 }
