@@ -105,9 +105,9 @@ describe('what a check costs', () => {
   });
 
   it('says in the reader’s units what was asked', () => {
-    expect(checkWords('curvature-ductility', DEFINITION, 'si')).toBe('μφ ≥ 4');
-    expect(checkWords('depth-cap', DEFINITION, 'us')).toBe('h ≤ 25.59 in');
-    expect(checkWords('bar-fit', DEFINITION, 'si')).toBe('the bar fit');
+    expect(checkWords('curvature-ductility', DEFINITION, { units: 'si', currency: null })).toBe('μφ ≥ 4');
+    expect(checkWords('depth-cap', DEFINITION, { units: 'us', currency: null })).toBe('h ≤ 25.59 in');
+    expect(checkWords('bar-fit', DEFINITION, { units: 'si', currency: null })).toBe('the bar fit');
   });
 });
 

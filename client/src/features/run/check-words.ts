@@ -1,25 +1,26 @@
-import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
 import type { CheckId } from '#shared/engine/evaluation.ts';
 import { checkLabel } from '#shared/print/check-labels.ts';
 import { formatQuantity } from '#shared/print/format-quantity.ts';
+import type { MeasureReader } from '#shared/print/measure-reader.ts';
 
 /** What a check asks for in this run, short enough for a sentence: `μφ ≥ 6`, `h ≤ 28 in`, `the bar fit`. */
 export function checkWords(
   check: CheckId,
   { demand, rules }: Pick<SweepDefinition, 'demand' | 'rules'>,
-  units: UnitSystem,
+  { units, code }: MeasureReader,
 ): string {
+  const { symbol } = checkLabel(check, code);
   const length = (mm: number) => formatQuantity(mm, 'length', units);
   if (check === 'strength' && demand.muNmm !== null)
-    return `φMn ≥ ${formatQuantity(demand.muNmm, 'moment', units)}`;
+    return `${symbol} ≥ ${formatQuantity(demand.muNmm, 'moment', units)}`;
   if (check === 'curvature-ductility' && demand.ductilityTarget !== null)
     return `μφ ≥ ${formatQuantity(demand.ductilityTarget, 'count', units)}`;
   if (check === 'shear' && typeof demand.vuN === 'number')
-    return `φVn ≥ ${formatQuantity(demand.vuN, 'force', units)}`;
+    return `${symbol} ≥ ${formatQuantity(demand.vuN, 'force', units)}`;
   if (check === 'depth-cap' && demand.depthCapMm !== null) return `h ≤ ${length(demand.depthCapMm)}`;
   if (check === 'column-width' && rules.columnWidthMm !== null) return `b = ${length(rules.columnWidthMm)}`;
   if (check === 'compression-share' && rules.minCompressionShare !== null)
-    return `A′s ≥ ${formatQuantity(rules.minCompressionShare, 'percent', units)} of As`;
+    return `${symbol} ≥ ${formatQuantity(rules.minCompressionShare, 'percent', units)}`;
   return `the ${checkLabel(check).name.toLowerCase()}`;
 }

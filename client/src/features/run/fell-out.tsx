@@ -106,7 +106,7 @@ export function FellOut({ result, definition, reader, isByCurve, onSelect, onMor
         <ul className="mt-3 grid gap-1.5 text-sm text-muted">
           {prices.slice(0, PRICES_TOLD).map(({ check, index, without, best }) => (
             <li key={check}>
-              Without {checkWords(check, definition, reader.units)} the best would be{' '}
+              Without {checkWords(check, definition, reader)} the best would be{' '}
               <button
                 type="button"
                 className="num text-ink underline decoration-concrete-edge hover:decoration-current"

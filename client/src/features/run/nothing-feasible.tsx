@@ -49,7 +49,7 @@ export function NothingFeasible({ result, definition, source, reader, onSelect }
           <p>
             {checkLabel(worst.check).name} removed most:{' '}
             <span className="num">{formatNumber((worst.failed / result.evaluated) * 100, 3, true)} %</span> do
-            not reach {checkWords(worst.check, definition, reader.units)}.
+            not reach {checkWords(worst.check, definition, reader)}.
           </p>
         )}
         {nearest.length === 0 ? (
@@ -61,7 +61,7 @@ export function NothingFeasible({ result, definition, source, reader, onSelect }
               {byMiss.map(({ check, index, value, result: judged }) => (
                 <li key={check} className="grid items-center gap-x-4 sm:grid-cols-[minmax(0,1fr)_16rem_6rem]">
                   <span>
-                    without {checkWords(check, definition, reader.units)}:{' '}
+                    without {checkWords(check, definition, reader)}:{' '}
                     <button
                       type="button"
                       className="num text-ink underline decoration-concrete-edge hover:decoration-current"

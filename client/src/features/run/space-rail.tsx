@@ -4,6 +4,7 @@ import type { SectionInput } from '#shared/engine/section.ts';
 import { expandAxis } from '#shared/sweep/axis.ts';
 import type { AxisDefinition, SteelSetsDefinition } from '#shared/sweep/problem.ts';
 import type { EdgeAxis, ViewResult } from '#shared/sweep/result.ts';
+import { faceWord } from '#shared/print/face-word.ts';
 import { formatQuantity } from '#shared/print/format-quantity.ts';
 import { stirrupText } from '#shared/print/section-text.ts';
 import { AxisRuler } from './axis-ruler.tsx';
@@ -52,12 +53,14 @@ const VALUE_OF: Readonly<Record<EdgeAxis, (section: SectionInput) => number>> = 
   fc: (section) => section.fcMPa,
 };
 
+const barsLabel = (place: 'bottom' | 'top') => (place === 'top' ? 'Top bars' : 'Bottom bars');
+
 /** The design space beside its result: where on each axis the sections that meet every check lie. */
 export function SpaceRail({ definition, result, within, units, selected }: SpaceRailProps) {
   const { space } = definition;
   const rows = [
-    ['Bottom bars', setsText(space.tension)],
-    ['Top bars', setsText(space.compression)],
+    [barsLabel(faceWord('tension', space)), setsText(space.tension)],
+    [barsLabel(faceWord('compression', space)), setsText(space.compression)],
     ['Stirrups', space.stirrups.map((stirrup) => stirrupText(stirrup, units)).join('; ')],
     ['Steel fy', axisText(space.fy, 'stress', units)],
     ['Clear cover', axisText(space.cover, 'length', units)],
