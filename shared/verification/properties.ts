@@ -225,6 +225,15 @@ const sweeps = {
 } as const satisfies Record<string, TestedProperty>;
 
 const curves = {
+  'curve-lean': {
+    kind: 'property',
+    statement:
+      'The ductility that a sweep reads off a curve, and its first yield, peak and ultimate, are those of the whole curve to the bit',
+    of: 'sections',
+    runs: 400,
+    seed: 77,
+    atLeast: { count: 200, what: 'curves that yield' },
+  },
   'law-integrals': {
     kind: 'comparison',
     statement:
@@ -286,7 +295,42 @@ const curves = {
   },
 } as const satisfies Record<string, TestedProperty>;
 
-export const PROPERTIES = { ...ductility, ...strength, ...flanges, ...bars, ...curves, ...sweeps };
+const stirrups = {
+  'stirrups-largest': {
+    kind: 'comparison',
+    statement:
+      'A designed stirrup spacing is the largest of all multiples of the step that meets every limit, tried one by one; with none, a check fails',
+    of: 'sections',
+    runs: 150,
+    seed: 3,
+    atLeast: { count: 60, what: 'spacings' },
+  },
+  'stirrups-shear': {
+    kind: 'property',
+    statement: 'A designed stirrup spacing is never wider under a heavier shear',
+    of: 'sections',
+    runs: 150,
+    seed: 4,
+  },
+  'stirrups-books': {
+    kind: 'property',
+    statement:
+      'The inch-pound and the metric edition of ACI 318-19 design stirrup spacings at most one step apart',
+    of: 'sections',
+    runs: 150,
+    seed: 5,
+  },
+} as const satisfies Record<string, TestedProperty>;
+
+export const PROPERTIES = {
+  ...ductility,
+  ...strength,
+  ...flanges,
+  ...bars,
+  ...stirrups,
+  ...curves,
+  ...sweeps,
+};
 
 export const TESTED_PROPERTIES: readonly TestedProperty[] = Object.values(PROPERTIES);
 

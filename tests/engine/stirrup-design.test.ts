@@ -4,6 +4,7 @@ import { evaluateSection } from '#shared/engine/evaluate.ts';
 import type { CheckId, Evaluation } from '#shared/engine/evaluation.ts';
 import type { DesignBasis, Demand, SectionInput } from '#shared/engine/section.ts';
 import { MM_PER_IN } from '#shared/engine/units.ts';
+import { PROPERTIES } from '#shared/verification/properties.ts';
 import { METRIC_BASIS, NO_DEMAND, NO_RULES } from '#shared/verification/layered-section.ts';
 
 /** 300 × 500, 3-25 bottom, 2-16 top, f′c 30, fy 420, cover 40, two legs of 10 designed up to 300: d 437.5; by hand. */
@@ -152,7 +153,8 @@ const randomCase = fc.record({
 describe('the spacing found', () => {
   const judged: readonly CheckId[] = ['shear', 'stirrup-spacing', 'compression-ties', 'hoop-spacing'];
 
-  it('is the largest of all multiples of the step that meets every limit, tried one by one; with none, a check fails', () => {
+  const largest = PROPERTIES['stirrups-largest'];
+  it(largest.statement, () => {
     let found = 0;
     fc.assert(
       fc.property(randomCase, ({ legs, top, vuN, ruleSet, seismicSystem, skinBar, ...size }) => {
@@ -185,12 +187,13 @@ describe('the spacing found', () => {
         found++;
         return designed.stirrups!.spacingMm === met;
       }),
-      { numRuns: 150, seed: 3 },
+      { numRuns: largest.runs, seed: largest.seed },
     );
-    expect(found).toBeGreaterThan(60);
+    expect(found).toBeGreaterThanOrEqual(largest.atLeast.count);
   });
 
-  it('is never wider under a heavier shear', () => {
+  const heavier = PROPERTIES['stirrups-shear'];
+  it(heavier.statement, () => {
     fc.assert(
       fc.property(randomCase, fc.double({ min: 0, max: 4e5, noNaN: true }), (of, moreN) => {
         const spacing = (vuN: number) =>
@@ -201,11 +204,12 @@ describe('the spacing found', () => {
           }).stirrups!.spacingMm;
         expect(spacing(of.vuN + moreN)).toBeLessThanOrEqual(spacing(of.vuN));
       }),
-      { numRuns: 150, seed: 4 },
+      { numRuns: heavier.runs, seed: heavier.seed },
     );
   });
 
-  it('is the same in both books but for their rounding, at most one step apart', () => {
+  const books = PROPERTIES['stirrups-books'];
+  it(books.statement, () => {
     fc.assert(
       fc.property(randomCase, ({ widthMm, depthMm, fcMPa, vuN }) => {
         const of = (ruleSet: 'aci318-19' | 'aci318m-19') =>
@@ -218,7 +222,7 @@ describe('the spacing found', () => {
           MM_PER_IN + 1e-6,
         );
       }),
-      { numRuns: 150, seed: 5 },
+      { numRuns: books.runs, seed: books.seed },
     );
   });
 });
