@@ -54,6 +54,17 @@ const SI_BASIS: ProjectDesignBasis = {
   coverMm: 40,
 };
 
+/** Frames of ductility class M by the Eurocodes, with the values they recommend. */
+const EN_BASIS: ProjectDesignBasis = {
+  ...SI_BASIS,
+  ruleSet: 'en1992',
+  slabMm: 160,
+  fyMPa: 500,
+  fytMPa: 500,
+  coverMm: 35,
+  seismicSystem: 'dcm',
+};
+
 const US_RATES: PriceBook = {
   source: 'Invented rates for the demonstration, not a quotation',
   currency: 'USD',
@@ -137,6 +148,15 @@ const CLINIC_BEAMS: readonly BeamRow[] = [
   ['G3', 'Imaging suite', 10, 4, 640, 260, 6, null],
 ];
 
+/** μφ of a frame with q₀ 3.9 and a period above TC: 2 q₀ − 1 (EN 1998-1 5.2.3.4; memory). */
+const EN_DUCTILITY = 6.8;
+
+const ARCADE_BEAMS: readonly BeamRow[] = [
+  ['P1', 'Levels 1 to 3, at the columns of grids 2 to 5', 6.4, 24, 240, 165, EN_DUCTILITY, 600],
+  ['P2', 'Levels 1 to 3, middle of the bays', 6.4, 24, 150, 70, null, 600],
+  ['P3', 'Over the arcade', 8, 4, 380, 230, EN_DUCTILITY, null],
+];
+
 export const DEMO_PROJECTS: readonly DemoProject[] = [
   {
     key: 'library',
@@ -157,6 +177,16 @@ export const DEMO_PROJECTS: readonly DemoProject[] = [
     priceBook: SI_RATES,
     hasMembers: true,
     beams: CLINIC_BEAMS.map(siBeam),
+  },
+  {
+    key: 'arcade',
+    name: 'Saltmarket Arcade',
+    number: 'TP-1060',
+    day: 12,
+    designBasis: EN_BASIS,
+    priceBook: SI_RATES,
+    hasMembers: true,
+    beams: ARCADE_BEAMS.map(siBeam),
   },
   {
     key: 'depot',

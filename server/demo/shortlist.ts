@@ -99,4 +99,38 @@ export const DEMO_CANDIDATES: readonly DemoCandidate[] = [
     steps: [{ ...CHECKED, after: 2 }],
     comments: [],
   },
+  {
+    sweep: 'plant-room',
+    alongFront: 0,
+    day: 8,
+    note: 'Cheapest with the slab worked in',
+    steps: [],
+    comments: [
+      { by: 'checker', text: 'Openings for ducts cut the slab on grid 4: is bf the same there?', after: 1 },
+    ],
+  },
+  {
+    sweep: 'plant-room',
+    alongFront: 0.5,
+    day: 8,
+    note: 'Four inches shallower, for the ducts under it',
+    steps: [],
+    comments: [],
+  },
+  {
+    sweep: 'arcade-columns',
+    alongFront: 0,
+    day: 16,
+    note: 'Least steel at the columns',
+    steps: [{ ...CHECKED, after: 2 }],
+    comments: [{ by: 'checker', text: 'Bars within the web only; the slab’s own run on top.', after: 1 }],
+  },
+  {
+    sweep: 'arcade-columns',
+    alongFront: 0.6,
+    day: 16,
+    note: 'Shallower, to be held against the arcade’s ceiling',
+    steps: [],
+    comments: [],
+  },
 ];

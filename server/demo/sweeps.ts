@@ -57,6 +57,11 @@ const US_FIXED = {
   cover: list(1.5 * MM_PER_IN),
   stirrups: [{ bar: '#3', legs: 2, spacingMm: 8 * MM_PER_IN }],
 };
+const EN_FIXED = {
+  fy: list(500),
+  cover: list(35),
+  stirrups: [{ bar: '8', legs: 2, spacingMm: 250, isDesigned: true }],
+};
 const SI_FIXED = {
   fy: list(420),
   cover: list(40),
@@ -177,5 +182,61 @@ export const DEMO_SWEEPS: readonly DemoSweep[] = [
     rules: RULES,
     view: COST_BY_DEPTH,
     moreViews: [STEEL_BY_DEPTH],
+  },
+  {
+    key: 'plant-room',
+    project: 'library',
+    beam: 'B7',
+    name: 'Slab worked in, stirrups designed',
+    day: 6,
+    // 4 × 9 × 2 × (4 × 7) × (1 + 2 × 3) = 14,112 sections.
+    space: {
+      ...US_FIXED,
+      stirrups: [{ bar: '#4', legs: 2, spacingMm: 12 * MM_PER_IN, isDesigned: true }],
+      width: inches(12, 18, 2),
+      depth: inches(18, 30, 1.5),
+      fc: psi(4000, 5000),
+      tension: bars(['#7', '#8', '#9', '#10'], 8),
+      compression: bars(['#5', '#6'], 4, true),
+      flange: {
+        shape: 't',
+        thicknessMm: 5 * MM_PER_IN,
+        face: 'compression',
+        width: { kind: 'effective', clearToNextWebMm: 84 * MM_PER_IN, spanMm: 300 * MM_PER_IN },
+      },
+    },
+    rules: RULES,
+    view: COST_BY_DEPTH,
+    moreViews: [STEEL_BY_DEPTH],
+  },
+  {
+    key: 'arcade-columns',
+    project: 'arcade',
+    beam: 'P1',
+    name: 'Hogging at the columns, slab in tension',
+    day: 14,
+    // 5 × 8 × 3 × (3 × 7) × (2 × 5) = 25,200 sections.
+    space: {
+      ...EN_FIXED,
+      width: range(250, 450, 50),
+      depth: range(400, 750, 50),
+      fc: list(25, 30, 35),
+      tension: bars(['16', '20', '25'], 8),
+      compression: bars(['16', '20'], 6),
+      flange: {
+        shape: 't',
+        thicknessMm: 160,
+        face: 'tension',
+        width: {
+          kind: 'effective',
+          clearToNextWebMm: 2700,
+          spanMm: 6400,
+          support: 'both-ends-continuous',
+        },
+      },
+    },
+    rules: RULES,
+    view: STEEL_BY_DEPTH,
+    moreViews: [COST_BY_DEPTH, { x: 'steelKgPerM', y: 'curvatureDuctility' }],
   },
 ];
