@@ -18,6 +18,8 @@ const PAGES_SIGNED_IN = [
   `${runPath('reading-room')}?show=why`,
   '/projects',
   '/projects/new',
+  '/office-standards',
+  `${runPath('roof')}/against/${runPath('stacks').split('/').at(-1)}`,
   ...['beams', 'sweeps', 'basis', 'prices', 'people'].map((tab) => `${LIBRARY}/${tab}`),
   `${LIBRARY}/shortlist?compare=${COMPARED}&base=${candidateId('A')}`,
   `${LIBRARY}/beams/${beamId('library', 'B6')}/sweeps/new`,
@@ -99,7 +101,8 @@ describe('every page, on light and dark paper and at every width', () => {
   });
 
   it('has nothing that axe finds and fits its window, for who runs the service', async () => {
-    expect(await inspect([await office.visit('admin')], ['/operations'])).toEqual([]);
+    const addresses = ['/operations', '/office-standards/new'];
+    expect(await inspect([await office.visit('admin')], addresses)).toEqual([]);
   });
 
   it('has nothing that axe finds and fits its window, for a stranger', async () => {

@@ -2,12 +2,14 @@ import type { Page } from 'playwright-core';
 import type { Project, Role, Run, ShareLink, Sweep } from '#shared/contract/records.ts';
 import type { Visit } from '../support/browser.ts';
 import {
+  ARCADE,
   beamId,
   candidateId,
   candidatePath,
   CLINIC,
   LIBRARY,
   runPath,
+  sweepId,
   sweepPath,
 } from '../support/browser-demo.ts';
 import { scaledSweep } from '../support/office-project.ts';
@@ -75,6 +77,32 @@ async function openHugeRun(visit: Visit): Promise<Run> {
   return run;
 }
 
+/** Two runs of one sweep: the second wider, and stricter about ductility. */
+async function openDifference(visit: Visit): Promise<void> {
+  const sweep = await visit.call<Sweep>('get', `/sweeps/${sweepId('roof')}`);
+  const { space, demand } = sweep.definition;
+  const wider = { ...space, width: { kind: 'range' as const, from: 254, to: 457.2, step: 50.8 } };
+  const definition = { ...sweep.definition, space: wider, demand: { ...demand, ductilityTarget: 6 } };
+  await visit.call('put', `/sweeps/${sweep.id}`, { name: sweep.name, definition });
+  const run = await visit.call<Run>('post', `/sweeps/${sweep.id}/runs`);
+  await visit.open(`${LIBRARY}/runs/${run.id}/against/${sweep.runs.at(-1)!.id}`);
+  await visit.page.getByRole('table', { name: 'How many sections' }).waitFor();
+}
+
+/** A view saved under a name, and the menu that lists it. */
+async function openSavedViews(visit: Visit): Promise<void> {
+  const { page } = visit;
+  await visit.open(`${runPath('reading-room')}?x=costPerM&y=depthMm&f=depthMm:~584.2&by=barCount`);
+  const menu = page.getByRole('button', { name: /^Views/ });
+  await menu.click();
+  await page.getByRole('menuitem', { name: 'Save this view' }).click();
+  await page.getByLabel('Name of the view').fill('Under the ceiling');
+  await page.getByRole('button', { name: 'Save view' }).click();
+  await page.getByRole('dialog').waitFor({ state: 'detached' });
+  await menu.click();
+  await page.getByRole('menuitem', { name: /^Under the ceiling/ }).waitFor();
+}
+
 async function openSharedShortlist(visit: Visit): Promise<void> {
   await visit.signIn('engineer');
   const { token } = await visit.call<ShareLink>('post', `${LIBRARY}/share-links`);
@@ -111,6 +139,13 @@ const OFFICE: readonly Screen[] = [
     },
   },
   at('new-project', 'engineer', '/projects/new'),
+  at('office-standards', 'admin', '/office-standards'),
+  at('office-standards-read', 'engineer', '/office-standards'),
+  after('office-standard', ['admin', '/office-standards'], async (page) => {
+    await page.getByRole('link', { name: /^Change US/ }).click();
+    await page.getByLabel('Name of the standard').waitFor();
+  }),
+  at('office-standard-new', 'admin', '/office-standards/new'),
   after('account-menu', ['engineer', '/projects'], async (page) => {
     await page.getByRole('button', { name: /Engineer/ }).click();
     await page.getByRole('menu').waitFor();
@@ -196,8 +231,15 @@ const RUN: readonly Screen[] = [
   at('run-log', 'engineer', `${runPath('reading-room-fine')}?log=xy&by=barCount&as=size`),
   at('run-million', 'engineer', runPath('reading-room-fine')),
   at('run-si', 'engineer', runPath('ground-floor', CLINIC)),
+  at('run-hogging-en', 'engineer', runPath('arcade-columns', ARCADE)),
   at('run-nothing-feasible', 'engineer', runPath('entrance-shallow')),
   at('run-viewer', 'viewer', runPath('reading-room-fine')),
+  { name: 'run-difference', role: 'engineer', arrive: openDifference },
+  { name: 'run-views', role: 'engineer', arrive: openSavedViews },
+  after('run-more', ['engineer', runPath('roof')], async (page) => {
+    await page.getByRole('button', { name: 'More' }).click();
+    await page.getByRole('menuitem', { name: /^Run it again/ }).waitFor();
+  }),
   after('run-pinning', ['engineer', runPath('roof')], async (page) => {
     await page.getByRole('button', { name: 'Pin to shortlist' }).click();
     await page.getByRole('button', { name: 'Pin', exact: true }).waitFor();
@@ -237,6 +279,11 @@ const SECTION: readonly Screen[] = [
 const SHORTLIST: readonly Screen[] = [
   at('compare', 'estimator', COMPARED),
   ...['A', 'B', 'C', 'D', 'E'].map((label) => at(`candidate-${label}`, 'checker', candidatePath(label))),
+  at('candidate-slab', 'checker', candidatePath('F')),
+  at('candidate-hogging-en', 'checker', candidatePath('A', 'arcade')),
+  at('sheet', 'checker', `${candidatePath('B')}/sheet`),
+  at('sheet-slab', 'checker', `${candidatePath('F')}/sheet`),
+  at('sheet-hogging-en', 'checker', `${candidatePath('A', 'arcade')}/sheet`),
   after('candidate-check', ['checker', candidatePath('E')], async (page) => {
     await page.getByRole('button', { name: 'Mark as checked' }).click();
     await page.getByRole('dialog').waitFor();

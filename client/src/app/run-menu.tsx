@@ -41,7 +41,7 @@ export function RunMenu({ run }: { readonly run: Run }) {
       <DropdownMenu.Trigger asChild>
         <Button isBusy={vary.isPending}>
           More
-          <span aria-hidden="true" className="text-2xs text-muted">
+          <span aria-hidden="true" className="text-2xs">
             ▾
           </span>
         </Button>

@@ -44,7 +44,11 @@ export function BestsTable({ baseline, other, reader }: BestsTableProps) {
   if (rows.length === 0)
     return <p className="text-muted">Neither run has a section that meets every check.</p>;
   return (
-    <TableFrame label="The best of each measure by itself" minWidth="34rem">
+    <TableFrame
+      label="The best of each measure by itself"
+      minWidth="40rem"
+      columnShares={[28, 24, 24, 12, 12]}
+    >
       <thead>
         <tr>
           <th scope="col">Measure</th>

@@ -26,7 +26,7 @@ export function CountsTable({ baseline, other }: ComparedRuns) {
   const checks = checkDifferences(baseline.result, other.result);
   const heads = [`Run ${baseline.run.number}`, `Run ${other.run.number}`];
   return (
-    <TableFrame label="How many sections" minWidth="34rem" columnShares={[34, 22, 22, 22]}>
+    <TableFrame label="How many sections" minWidth="40rem" columnShares={[28, 24, 24, 12, 12]}>
       <thead>
         <tr>
           <th scope="col">Sections</th>
@@ -37,6 +37,9 @@ export function CountsTable({ baseline, other }: ComparedRuns) {
           ))}
           <th scope="col" className="figure">
             Difference
+          </th>
+          <th scope="col">
+            <span className="sr-only">In points</span>
           </th>
         </tr>
       </thead>
@@ -49,15 +52,15 @@ export function CountsTable({ baseline, other }: ComparedRuns) {
             <td className="figure">{whole(before)}</td>
             <td className="figure">{whole(after)}</td>
             <td className="figure">{signed(before, after)}</td>
+            <td />
           </tr>
         ))}
       </tbody>
       {checks.length > 0 && (
         <tbody>
           <tr>
-            <th scope="rowgroup" colSpan={4} className="pt-4! font-semibold">
+            <th scope="rowgroup" colSpan={5} className="pt-4! font-semibold">
               Fail the check, of those evaluated{' '}
-              <span className="font-normal text-muted">(difference in points)</span>
             </th>
           </tr>
           {checks.map(({ check, before, after, failedBefore, failedAfter }) => (
@@ -72,6 +75,7 @@ export function CountsTable({ baseline, other }: ComparedRuns) {
                 {percent(after)}
               </td>
               <td className="figure">{signedPoints(before, after)}</td>
+              <td className="text-xs text-muted">points</td>
             </tr>
           ))}
         </tbody>

@@ -15,7 +15,7 @@ export function InputsTable({ differences, names }: InputsTableProps) {
       </p>
     );
   return (
-    <TableFrame label="What went into the runs" minWidth="36rem" columnShares={[26, 37, 37]}>
+    <TableFrame label="What went into the runs" minWidth="36rem" columnShares={[28, 36, 36]}>
       <thead>
         <tr>
           <th scope="col">Input</th>

@@ -10,6 +10,9 @@ import type { ComparedRun, ComparedRuns } from './compared-run.ts';
 import { verdictOf } from './result-differences.ts';
 import { VerdictText } from './verdict-text.tsx';
 
+/** Measure, the two runs, difference, direction: one grid for the tables of the page. */
+const SHARES = [28, 24, 24, 12, 12];
+
 /** Height of the taller section, px. */
 const DRAWING_PX = 200;
 
@@ -102,7 +105,7 @@ export function WinnersTable({ baseline, other, reader }: WinnersTableProps) {
   const pxPerMm = DRAWING_PX / tallestMm;
   const lead = measureLabel(baseline.result.view.x, reader.units, reader.code);
   return (
-    <TableFrame label="The best of each run, side by side" minWidth="44rem">
+    <TableFrame label="The best of each run, side by side" minWidth="44rem" columnShares={SHARES}>
       <thead>
         <tr>
           <th scope="col" className="align-bottom">

@@ -80,7 +80,7 @@ export function RunHead({ run, progress, mayStop, isStopping, onStop, actions }:
         <p className="num min-w-0 text-sm text-muted" role="status">
           {words}
         </p>
-        <div className="ml-auto flex items-center gap-3">
+        <div className="ml-auto flex flex-wrap items-center justify-end gap-3">
           {isLive && mayStop && (
             <Button onClick={onStop} isBusy={isStopping}>
               Cancel

@@ -28,8 +28,8 @@ export function ViewsMenu({ views, shown, units, maySave, onOpen }: ViewsMenuPro
       <DropdownMenu.Root modal={false}>
         <DropdownMenu.Trigger asChild>
           <Button>
-            Views{views.length > 0 && <span className="num text-muted"> {views.length}</span>}
-            <span aria-hidden="true" className="text-2xs text-muted">
+            Views{views.length > 0 && <span className="num font-normal">{views.length}</span>}
+            <span aria-hidden="true" className="text-2xs">
               ▾
             </span>
           </Button>

@@ -15,7 +15,7 @@ interface FitTableProps {
 }
 
 /** The widest width is drawn this wide; the others to the same scale. */
-const WIDEST_PX = 132;
+const WIDEST_PX = 116;
 
 function Cell({
   fit,
@@ -29,7 +29,7 @@ function Cell({
   const { most } = fit;
   return (
     <td>
-      <span className="flex flex-wrap items-center gap-x-4 gap-y-1">
+      <span className="grid grid-cols-[7.5rem_minmax(0,1fr)] items-center gap-x-3">
         <FaceStrip
           preview={props.preview}
           widthMm={fit.widthMm}
@@ -37,9 +37,9 @@ function Cell({
           isAtTop={props.isAtTop}
           pxPerMm={pxPerMm}
         />
-        <span className="min-w-36 flex-1 text-sm">
+        <span className="text-xs">
           <span className={`num ${most === null ? 'text-fails' : ''}`}>{fitWords(fit)}</span>
-          {most !== null && <span className="block text-xs text-muted">drawn: {barsText(most.group)}</span>}
+          {most !== null && <span className="block text-muted">drawn: {barsText(most.group)}</span>}
         </span>
       </span>
     </td>
@@ -59,13 +59,12 @@ export function FitTable(props: FitTableProps) {
     <div>
       <TableFrame
         label={`${name}: what stands in one layer`}
-        minWidth={widths.length === 1 ? '24rem' : '40rem'}
+        columnShares={widths.length === 1 ? [14, 86] : [11, 44, 45]}
+        minWidth={widths.length === 1 ? '24rem' : '37rem'}
       >
         <thead>
           <tr>
-            <th scope="col" className="w-24">
-              Size
-            </th>
+            <th scope="col">Size</th>
             {widths.map((widthMm, k) => (
               <th key={widthMm} scope="col">
                 At the {ends[k]}, <span className="num">{formatQuantity(widthMm, 'length', units)}</span>

@@ -102,7 +102,7 @@ export function SteelField(props: SteelFieldProps) {
   const name = PLACE_NAME[place];
   const ownError = errors.get(`space.${face}`);
   return (
-    <fieldset className="grid min-w-0 gap-x-5 gap-y-2 border-t border-rule py-3 sm:grid-cols-[9.5rem_7.5rem_minmax(0,1fr)_5.5rem] sm:items-start">
+    <fieldset className="grid min-w-0 grid-cols-[minmax(0,1fr)] gap-x-5 gap-y-2 border-t border-rule py-3 sm:grid-cols-[9.5rem_7.5rem_minmax(0,1fr)_5.5rem] sm:items-start">
       <legend className="sr-only">{name}</legend>
       <div className="sm:pt-1" aria-hidden="true">
         <span className="font-medium">{name}</span>
@@ -116,7 +116,7 @@ export function SteelField(props: SteelFieldProps) {
         onChange={(kind) => onChange({ ...values, kind })}
       />
       {values.kind === 'bars' ? (
-        <div className="grid gap-4">
+        <div className="grid grid-cols-[minmax(0,1fr)] gap-4">
           <BarRack
             legend={`${name}: sizes`}
             isLegendHidden

@@ -36,7 +36,9 @@ export function RunTable({ projectId, sweepName, runs }: RunTableProps) {
           </th>
           <th scope="col">Hash</th>
           <th scope="col">Started</th>
-          <th scope="col">Difference</th>
+          <th scope="col">
+            <span className={runs.length > 1 ? undefined : 'sr-only'}>Difference</span>
+          </th>
         </tr>
       </thead>
       <tbody>
