@@ -90,7 +90,7 @@ function Panels({ run, state }: RunBelowChartProps) {
       )}
       {address.panel === 'why' && (
         <WhyPanel
-          result={result}
+          result={state.recorded ?? result}
           definition={run.definition}
           source={source}
           reader={reader}

@@ -11,6 +11,8 @@ export const queryKeys = {
   savedViews: (projectId: string) => ['project', projectId, 'saved-views'] as const,
   run: (runId: string) => ['run', runId] as const,
   view: (runId: string, x: string, y: string, z: string | null) => ['run', runId, 'view', x, y, z] as const,
+  ranking: (runId: string, view: string, rates: string, bandShare: number) =>
+    ['run', runId, 'ranking', view, rates, bandShare] as const,
   liveView: (runId: string, viewId: string) => ['run', runId, 'live', viewId] as const,
   runSection: (runId: string, index: number) => ['run', runId, 'section', index] as const,
   candidates: (projectId: string) => ['project', projectId, 'candidates'] as const,

@@ -1,4 +1,4 @@
-import type { RunState } from '#shared/contract/records.ts';
+import type { Run, RunState } from '#shared/contract/records.ts';
 import type { ViewResult } from '#shared/sweep/result.ts';
 import { formatWhole } from '#shared/print/format-quantity.ts';
 
@@ -36,3 +36,8 @@ export const feasibleClaim = ({ feasible }: ViewResult): string =>
   feasible === null
     ? 'sections that meet every check: not counted by bounds'
     : `${formatWhole(feasible)} meet every listed check`;
+
+/** Which sections were not computed again, for they are another run's too; null where all were. */
+export const takenClaim = ({ taken, sectionCount }: Pick<Run, 'taken' | 'sectionCount'>): string | null =>
+  taken &&
+  `${sections(taken.sections)} taken from run ${taken.number}, ${formatWhole(sectionCount - taken.sections)} new computed`;

@@ -1,3 +1,4 @@
+import { readRates, type AskedRates } from './asked-rates.ts';
 import { MEASURE_IDS, type MeasureId } from '#shared/engine/measures.ts';
 import type { View } from '#shared/sweep/problem.ts';
 import type { ChartWindow } from '#client/src/charts/chart-window.ts';
@@ -31,6 +32,8 @@ export interface RunAddress {
   readonly index: number | null;
   /** Near-best band as a share, 0 … 0.1. */
   readonly bandShare: number;
+  /** Rates the sections are ranked at; null for the run's own. */
+  readonly rates: AskedRates | null;
   /** A third measure, told by the marks of the front. */
   readonly third: ExploreKey | null;
   /** Whether the front in three measures is asked for, the third one with the two of the axes. */
@@ -98,6 +101,7 @@ export function readRunAddress(params: URLSearchParams, first: View): RunAddress
     view: isView ? { x, y } : first,
     index: index !== null && /^\d{1,12}$/.test(index) ? Number(index) : null,
     bandShare: readBand(params.get('band')),
+    rates: readRates(params.get('rates')),
     third: third !== null && isExploreKey(third) ? third : null,
     isInThree: params.get('in') === '3',
     markStyle: oneOf(MARK_STYLES, params.get('as')),

@@ -5,6 +5,7 @@ import { formatDuration, formatNumber, formatWhole } from '#shared/print/format-
 import { runStateLabel } from '#client/src/lib/state-labels.ts';
 import { Button } from '#client/src/ui/button.tsx';
 import { StateTag } from '#client/src/ui/state-tag.tsx';
+import { takenClaim } from './proof-words.ts';
 import { useLiveView, useResumeRun, type LiveView } from './run-api.ts';
 import { isUnderWay, paceOf } from './view-progress.ts';
 
@@ -75,6 +76,7 @@ export function RunHead({ run, progress, mayStop, isStopping, onStop, actions }:
         </h1>
         <p className="min-w-0 truncate text-muted">
           {run.sweepName}, run {run.number}
+          {run.taken !== null && `, ${takenClaim(run)}`}
         </p>
         <StateTag {...runStateLabel(state)} />
         <p className="num min-w-0 text-sm text-muted" role="status">

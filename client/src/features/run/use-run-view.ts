@@ -1,6 +1,6 @@
 import { useDeferredValue, useMemo } from 'react';
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
-import type { Run } from '#shared/contract/records.ts';
+import type { Run, ViewProgress } from '#shared/contract/records.ts';
 import { viewOf, type View } from '#shared/sweep/problem.ts';
 import type { Point, ViewResult } from '#shared/sweep/result.ts';
 import type { ExploreKey } from '#shared/sweep/explore-axis.ts';
@@ -11,6 +11,7 @@ import { useCancelRun, useRunEvents, useView } from './run-api.ts';
 import { createSectionSource, type EvaluatedSection, type SectionSource } from './section-source.ts';
 import { useExplore } from './use-explore.ts';
 import { askedView } from './run-address.ts';
+import { useRanking, type RankedRun } from './use-ranking.ts';
 import { useRunAddress } from './use-run-address.ts';
 import { isUnderWay } from './view-progress.ts';
 
@@ -31,6 +32,12 @@ function placeOf(chosen: EvaluatedSection | null, { x, y }: View): Point | null 
   return chosen === null || across === null || up === null ? null : { index: chosen.index, x: across, y: up };
 }
 
+/** The view with the ranking's result where other rates are asked for; nothing until that has come. */
+function atRates(progress: ViewProgress | null, { asked, ranking }: RankedRun): ViewProgress | null {
+  if (asked === null || progress === null) return progress;
+  return { ...progress, result: ranking?.result ?? null };
+}
+
 const NO_KEYS: readonly ExploreKey[] = [];
 
 /** The view, live or finished, and how it comes: what the service is asked and told. */
@@ -49,13 +56,17 @@ export function useRunView(run: Run, units: UnitSystem) {
   const address = useRunAddress(run.definition.view);
   const { x, y, z } = askedView(address);
   const view = useMemo(() => readableView(run, viewOf({ x, y, z }), units), [run, x, y, z, units]);
-  const { definition, basis } = run;
+  const ranked = useRanking(run, { view, rates: address.rates, bandShare: address.bandShare });
+  // The run as it would be at the rates asked for; its own record stays what the head and the pins go by.
+  const { definition, basis } = ranked.run;
   const source = useMemo(() => createSectionSource({ definition, basis }), [definition, basis]);
   const reader = useMemo(
     () => ({ units, currency: basis.rates?.currency ?? null, code: basis.ruleSet }),
     [units, basis.rates, basis.ruleSet],
   );
-  const { latest, progress, isLive, error, retry } = useProgress(run, view);
+  const own = useProgress(run, view);
+  const { latest, isLive, error, retry } = own;
+  const progress = useMemo(() => atRates(own.progress, ranked), [own.progress, ranked]);
   const cancel = useCancelRun(run.id);
 
   const result = progress?.result ?? null;
@@ -72,7 +83,7 @@ export function useRunView(run: Run, units: UnitSystem) {
     [address.axes, keys],
   );
   const explore = useExplore({
-    run,
+    run: ranked.run,
     view,
     result,
     isFinished: progress?.state === 'finished',
@@ -82,12 +93,15 @@ export function useRunView(run: Run, units: UnitSystem) {
   });
   return {
     address,
+    ranked,
     view,
     source,
     reader,
     latest,
     progress,
     result,
+    /** What the run found itself, at its own rates. */
+    recorded: own.progress?.result ?? null,
     selected,
     place,
     isLive,
