@@ -2,7 +2,7 @@ import type { Cell, CellStyle, CellValue, WriteSheet } from 'hucre';
 import { plainCell, type PlainCell } from './plain-cell.ts';
 
 /** Looks of a cell; `input` is what a reader may type over. */
-export const CELL_STYLES = {
+const CELL_STYLES = {
   plain: {},
   title: { font: { bold: true, size: 14 } },
   head: {
