@@ -1,3 +1,4 @@
+import { readFile } from 'node:fs/promises';
 import type { Locator, Page } from 'playwright-core';
 import { describe, expect, it } from 'vitest';
 import { runPath } from '../support/browser-demo.ts';
@@ -100,6 +101,28 @@ describe('a finished run', () => {
     await page.getByRole('button', { name: 'Clear all' }).click();
     await page.getByRole('region', { name: 'Ranges set' }).waitFor({ state: 'detached' });
     expect(asked(page, 'f')).toBeNull();
+  });
+
+  it('is taken away by the keyboard: the sections within the ranges as a table, the chart and the drawing', async () => {
+    const visit = await office.visit('engineer');
+    const { page } = visit;
+    await visit.open(`${COST_BY_DUCTILITY}&f=depthMm:~584.2`);
+    const count = await withinRanges(page);
+    await chart(page).locator('canvas').waitFor();
+    const take = async (menu: string, item: RegExp): Promise<{ name: string; text: string }> => {
+      await page.getByRole('button', { name: menu }).press('Enter');
+      await page.getByRole('menuitem', { name: item }).focus();
+      const [download] = await Promise.all([page.waitForEvent('download'), page.keyboard.press('Enter')]);
+      return { name: download.suggestedFilename(), text: await readFile(await download.path(), 'utf8') };
+    };
+    const table = await take('Export', /^All within the ranges, CSV/);
+    expect(table.name).toMatch(/-run-1-all\.csv$/);
+    expect(table.text).toContain(`Rows,${count}\r\n`);
+    expect(table.text).toContain('Ranges,h ≤ 23 in');
+    const picture = await take('Export', /^Chart as SVG/);
+    expect(picture.text).toMatch(/^<svg [^]*Curvature ductility μφ[^]*only h ≤ 23 in[^]*<\/svg>$/);
+    const drawing = await take('Drawing as a file', /^Drawing as DXF/);
+    expect(drawing.text).toMatch(/BARS[^]*CIRCLE[^]*EOF/);
   });
 
   it('is walked along the strip with the keys, pinned from there at once, and the pin taken back', async () => {

@@ -8,6 +8,7 @@ import { formatNumber, formatWhole } from '#shared/print/format-quantity.ts';
 import { rangeWords } from '#shared/print/range-words.ts';
 import { filterEntries, hasFilters } from '#shared/sweep/range-filters.ts';
 import type { FrontPicture } from '#client/src/charts/front-chart-input.ts';
+import { ratesWords } from '#client/src/features/run/asked-rates.ts';
 import { sectionsFileUrl } from '#client/src/features/run/sections-file-url.ts';
 import type { useRunView } from '#client/src/features/run/use-run-view.ts';
 import { fetchAndSave, saveFile } from '#client/src/lib/save-file.ts';
@@ -31,9 +32,9 @@ function sectionItems({ run, state }: RunExportsProps): ExportItem[] {
   const lists: readonly { list: SectionList; words: string; count: number | null; note: string }[] = [
     {
       list: 'front',
-      words: 'Front',
-      count: shown.front.length,
-      note: `${formatWhole(shown.front.length)} sections`,
+      words: view.z ? 'Front in three measures' : 'Front',
+      count: shown.listed.length,
+      note: `${formatWhole(shown.inThree?.count ?? shown.listed.length)} sections`,
     },
     {
       list: 'band',
@@ -51,12 +52,16 @@ function sectionItems({ run, state }: RunExportsProps): ExportItem[] {
   return lists
     .filter(({ list }) => list !== 'band' || address.bandShare > 0)
     .flatMap(({ list, words, count, note }) => {
-      const isTooLong = count !== null && count > MOST_ROWS_IN_FILE;
+      const isTooLong = address.rates === null && count !== null && count > MOST_ROWS_IN_FILE;
       const isUnavailable = result === null || isTooLong || (list === 'all' && !isFinished);
       const asked = { runId: run.id, list, view, bandShare: address.bandShare, filters };
       return FORMATS.map((format) => ({
         label: `${words}, ${format.toUpperCase()}`,
-        note: isTooLong ? `${note}: more than ${formatWhole(MOST_ROWS_IN_FILE)}, set a range` : note,
+        note: isTooLong
+          ? `${note}: more than ${formatWhole(MOST_ROWS_IN_FILE)}, set a range`
+          : address.rates === null
+            ? note
+            : 'at the run’s own rates, not those on the page',
         isUnavailable,
         run: () => fetchAndSave(sectionsFileUrl(asked, format), `sections.${format}`),
       }));
@@ -69,6 +74,7 @@ function captionOf({ run, project, state }: RunExportsProps): string[] {
   const { third, markStyle, bandShare } = address;
   const ranges = filterEntries(explore.filters).map(([key, range]) => rangeWords(key, range, reader));
   const shown = [
+    address.rates === null ? '' : `ranked at ${ratesWords(address.rates)}: no record of the run`,
     bandShare > 0 ? `near-best band ${formatNumber(bandShare * 100, 3, true)} %` : '',
     third === null
       ? ''
