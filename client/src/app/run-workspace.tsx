@@ -92,6 +92,7 @@ export function RunWorkspace({ run, project }: RunWorkspaceProps) {
         result={result}
         within={hasFilters(explore.filters) ? explore.axisCounts : null}
         units={units}
+        code={run.basis.ruleSet}
         selected={selected?.section ?? null}
       />
       {result !== null && (

@@ -1,12 +1,13 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
-import type { SectionInput } from '#shared/engine/section.ts';
+import type { RuleSetId, SectionInput } from '#shared/engine/section.ts';
 import { expandAxis } from '#shared/sweep/axis.ts';
 import type { AxisDefinition, SteelSetsDefinition } from '#shared/sweep/problem.ts';
 import type { EdgeAxis, ViewResult } from '#shared/sweep/result.ts';
+import { codeSymbols } from '#shared/print/code-symbols.ts';
 import { faceWord } from '#shared/print/face-word.ts';
 import { formatQuantity } from '#shared/print/format-quantity.ts';
-import { stirrupText } from '#shared/print/section-text.ts';
+import { givenStirrupText } from '#shared/print/section-text.ts';
 import { AxisRuler } from './axis-ruler.tsx';
 import { countsText } from '#client/src/lib/counts-text.ts';
 
@@ -44,6 +45,8 @@ interface SpaceRailProps {
   /** Sections within the ranges at each value; null where no range is set or they are not at hand. */
   readonly within: Readonly<Record<EdgeAxis, readonly number[]>> | null;
   readonly units: UnitSystem;
+  /** Whose letters the strengths are in. */
+  readonly code: RuleSetId;
   readonly selected: SectionInput | null;
 }
 
@@ -56,13 +59,14 @@ const VALUE_OF: Readonly<Record<EdgeAxis, (section: SectionInput) => number>> = 
 const barsLabel = (place: 'bottom' | 'top') => (place === 'top' ? 'Top bars' : 'Bottom bars');
 
 /** The design space beside its result: where on each axis the sections that meet every check lie. */
-export function SpaceRail({ definition, result, within, units, selected }: SpaceRailProps) {
+export function SpaceRail({ definition, result, within, units, code, selected }: SpaceRailProps) {
   const { space } = definition;
+  const symbols = codeSymbols(code);
   const rows = [
     [barsLabel(faceWord('tension', space)), setsText(space.tension)],
     [barsLabel(faceWord('compression', space)), setsText(space.compression)],
-    ['Stirrups', space.stirrups.map((stirrup) => stirrupText(stirrup, units)).join('; ')],
-    ['Steel fy', axisText(space.fy, 'stress', units)],
+    ['Stirrups', space.stirrups.map((stirrup) => givenStirrupText(stirrup, units)).join('; ')],
+    [`Steel ${symbols.fy}`, axisText(space.fy, 'stress', units)],
     ['Clear cover', axisText(space.cover, 'length', units)],
   ] as const;
   return (
@@ -76,7 +80,7 @@ export function SpaceRail({ definition, result, within, units, selected }: Space
           <AxisRuler
             key={axis}
             name={name}
-            symbol={symbol}
+            symbol={axis === 'fc' ? symbols.fc : symbol}
             kind={kind}
             units={units}
             counts={result?.axisCounts?.[axis] ?? fallback}
