@@ -27,7 +27,7 @@ export function inputGroups(snapshot: Snapshot, beam: Candidate['beam'], units: 
     { title: 'Demand', items: demandItems(snapshot, beam, print) },
     { title: 'Design basis', items: basisItems(snapshot, print) },
     { title: 'National values', items: nationalItems(snapshot, print) },
-    { title: 'Bars as placed', items: placedItems(snapshot, units, print) },
+    { title: 'Bars as placed', isResult: true, items: placedItems(snapshot, units, print) },
   ].filter(({ items }) => items.length > 0);
 }
 
@@ -62,7 +62,8 @@ function demandItems({ demand, evaluation }: Snapshot, beam: Candidate['beam'], 
 }
 
 function placedItems(snapshot: Snapshot, units: UnitSystem, print: Print): KeyText[] {
-  const { geometry, arrangement } = snapshot.evaluation;
+  const { geometry, arrangement, ruleSet } = snapshot.evaluation;
+  const { compressionSteel } = codeSymbols(ruleSet.id);
   const area = (value: number) => formatQuantity(value, 'area', units, { digits: 4 });
   const ratio = (value: number) => formatQuantity(value, 'ratio', 'si', { digits: 4 });
   return [
@@ -76,7 +77,7 @@ function placedItems(snapshot: Snapshot, units: UnitSystem, print: Print): KeyTe
             ? []
             : [
                 {
-                  label: 'A′s, ρ′ = A′s/(b d)',
+                  label: `${compressionSteel}, ρ′ = ${compressionSteel}/(b d)`,
                   value: `${area(geometry.asPrimeMm2)}, ${ratio(geometry.rhoPrime)}`,
                 },
               ]),
@@ -98,7 +99,7 @@ function builtItems({ evaluation }: Snapshot, units: UnitSystem, print: Print): 
             : [
                 {
                   label: 'Spacing by',
-                  value: `${stirrups.governs.replaceAll('-', ' ')}, ${print(stirrups.neededMm, 'length')} before rounding down`,
+                  value: `${stirrups.reason.replace(/^governed by /, '')}${stirrups.neededMm !== null && stirrups.neededMm >= stirrups.spacingMm ? `, ${print(stirrups.neededMm, 'length')} before rounding down` : ''}`,
                 },
               ]),
         ]

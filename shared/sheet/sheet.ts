@@ -30,6 +30,8 @@ export interface KeyText {
 
 export interface InputGroup {
   readonly title: string;
+  /** Follows from the inputs, as where the bars stand. */
+  readonly isResult?: boolean;
   readonly items: readonly KeyText[];
 }
 

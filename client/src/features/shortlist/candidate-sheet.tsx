@@ -50,7 +50,7 @@ export function CandidateSheet({ candidate, units, hasMoney }: CandidateSheetPro
         </div>
       </div>
       <Part title="What it was computed from">
-        <FrozenInputs snapshot={candidate.snapshot} units={units} />
+        <FrozenInputs snapshot={candidate.snapshot} beam={candidate.beam} units={units} />
       </Part>
       <div className="@container grid min-w-0">
         <LazySectionStudy
