@@ -29,7 +29,7 @@ export interface SteelGrade {
   readonly clause?: string | undefined;
 }
 
-const shown = (value: number) => Number(value.toPrecision(4));
+const shown = (value: number) => Number(value.toPrecision(5));
 
 class ElasticPlasticLaw implements SteelLaw {
   readonly name = 'elastic–plastic';

@@ -6,7 +6,7 @@ const LAST_STRAIN = 0.0038;
 const FALL = 0.15;
 
 const formulaOf = ({ peakStressMPa, peakStrain }: ConcreteLaw) =>
-  `f = f″c (2x − x²), x = ε/ε₀; beyond ε₀ f″c (1 − 0.15 (ε − ε₀)/(0.0038 − ε₀)); f″c = ${Number(peakStressMPa.toPrecision(4))} MPa, ε₀ = ${peakStrain}`;
+  `f = f″c (2x − x²), x = ε/ε₀; beyond ε₀ f″c (1 − 0.15 (ε − ε₀)/(0.0038 − ε₀)); f″c = ${Number(peakStressMPa.toPrecision(5))} MPa, ε₀ = ${peakStrain}`;
 
 /**
  * Hognestad: parabola to f″c at ε₀, then a straight fall of 15 % at 0.0038 (Hognestad, University of Illinois Bulletin

@@ -18,7 +18,7 @@ function halfStrengthStrain(fcMPa: number): number {
   return (3 + 0.29 * fc) / (145 * fc - 1000);
 }
 
-const shown = (value: number) => Number(value.toPrecision(4));
+const shown = (value: number) => Number(value.toPrecision(5));
 
 const unconfinedFormula = ({ peakStrain, fallPerStrain }: ParabolaLineLaw) =>
   `f = f′c (2x − x²), x = ε/ε₀, ε₀ = ${peakStrain}; then f′c (1 − Z (ε − ε₀)) ≥ 0.2 f′c; Z = 0.5/((3 + 0.29 f′c)/(145 f′c − 1000) − ε₀) = ${shown(fallPerStrain)}, MPa`;

@@ -20,7 +20,7 @@ const LOGS_TO_TWICE_PEAK = Array.from({ length: STEPS_TO_TWICE_PEAK + 1 }, (_, i
 
 /** Ec = 5000 √f′c, MPa: the modulus that belongs to this law. */
 const manderModulusMPa = (fcMPa: number) => 5000 * Math.sqrt(fcMPa);
-const shown = (value: number) => Number(value.toPrecision(4));
+const shown = (value: number) => Number(value.toPrecision(5));
 
 function unconfinedPeakStrain(fcMPa: number, given = PEAK_STRAIN): number {
   return Math.max(given, fcMPa / (LARGEST_SECANT_SHARE * manderModulusMPa(fcMPa)));

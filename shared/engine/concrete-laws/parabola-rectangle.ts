@@ -43,7 +43,7 @@ class ParabolaRectangleLaw implements ConcreteLaw {
 
   get formula(): string {
     const [peak, strain, n] = [this.peakStressMPa, this.peakStrain, this.exponent].map((value) =>
-      Number(value.toPrecision(4)),
+      Number(value.toPrecision(5)),
     );
     return `σ = fcd (1 − (1 − ε/εc2)^n) to εc2 = ${strain}, then fcd = ${peak} MPa; n = ${n}`;
   }

@@ -28,7 +28,7 @@ class TodeschiniLaw implements ConcreteLaw {
   }
 
   get formula(): string {
-    const [peak, strain] = [this.peakStressMPa, this.peakStrain].map((value) => Number(value.toPrecision(4)));
+    const [peak, strain] = [this.peakStressMPa, this.peakStrain].map((value) => Number(value.toPrecision(5)));
     return `f = 2 f″c x/(1 + x²), x = ε/ε₀; f″c = ${peak} MPa, ε₀ = ${strain} (0.9 f′c and 1.71 f′c/Ec unless set)`;
   }
 
