@@ -68,14 +68,17 @@ describe('with the keyboard alone', () => {
     const { page } = visit;
     await visit.open(`${LIBRARY}/beams/${beamId('library', 'B6')}/sweeps/new`);
     await page.getByLabel('Name of the sweep').focus();
-    const axes = ['Width b', 'Depth h', 'Concrete f′c'].flatMap((axis) =>
+    const axes = ['Width b', 'Depth h'].flatMap((axis) =>
       ['from', 'to', 'by'].map((end) => `${axis} ${end}`),
     );
     expectInOrder(await tabTo(page, 'Save'), [
       'Moment Mu',
       'Ductility μφ at least',
       'Depth h at most',
+      'office standard',
+      'Fill from it',
       ...axes,
+      'Concrete f′c values, parted by commas',
       '#6',
       '#9',
       'number of bars, as 2–8 or 2, 4, 6',

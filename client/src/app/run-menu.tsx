@@ -1,9 +1,10 @@
 import { useQuery } from '@tanstack/react-query';
 import { DropdownMenu } from 'radix-ui';
 import { useState } from 'react';
-import { Link } from 'react-router-dom';
+import { Link, useLocation } from 'react-router-dom';
 import type { Run } from '#shared/contract/records.ts';
-import { sweepQuery } from '#client/src/features/sweep-form/sweep-api.ts';
+import { sweepsQuery } from '#client/src/features/sweeps/api.ts';
+import { carriedSearch } from '#client/src/lib/carried-search.ts';
 import { paths } from '#client/src/lib/paths.ts';
 import { useMay } from '#client/src/lib/reader-context.ts';
 import { Button } from '#client/src/ui/button.tsx';
@@ -12,21 +13,32 @@ import { useVarySweep } from './use-vary-sweep.ts';
 const item =
   'flex cursor-pointer items-baseline gap-2 px-3 py-1.5 outline-none data-highlighted:bg-concrete data-highlighted:text-ink';
 
-/** So many other runs are offered here; the rest on the page of the difference. */
-const MOST_OFFERED = 5;
+/** So many runs of this sweep, and of other sweeps of the beam, are offered here; the rest on the page of the difference. */
+const MOST_OFFERED = 4;
 
 function OtherRuns({ run }: { readonly run: Run }) {
-  const sweep = useQuery(sweepQuery(run.sweepId));
-  const others = sweep.data?.runs.filter(({ id, evaluated }) => id !== run.id && evaluated > 0) ?? [];
-  if (others.length === 0)
+  const sweeps = useQuery(sweepsQuery(run.projectId));
+  const told = (sweeps.data ?? [])
+    .filter(({ beamId }) => beamId === run.beam.id)
+    .flatMap(({ id, name, runs }) => runs.map((one) => ({ ...one, isOwn: id === run.sweepId, name })))
+    .filter(({ id, evaluated }) => id !== run.id && evaluated > 0);
+  const offered = [true, false].flatMap((isOwn) =>
+    told.filter((one) => one.isOwn === isOwn).slice(0, MOST_OFFERED),
+  );
+  if (offered.length === 0)
     return (
       <DropdownMenu.Label className="max-w-64 px-3 py-1.5 text-sm text-muted">
-        {sweep.isPending ? 'Looking for other runs' : 'No other run of this sweep to set it against.'}
+        {sweeps.isPending ? 'Looking for other runs' : 'No other run for this beam to set it against.'}
       </DropdownMenu.Label>
     );
-  return others.slice(0, MOST_OFFERED).map(({ id, number }) => (
+  return offered.map(({ id, number, isOwn, name }) => (
     <DropdownMenu.Item key={id} className={item} asChild>
-      <Link to={paths.difference(run.projectId, run.id, id)}>Set against run {number}</Link>
+      <Link to={paths.difference(run.projectId, run.id, id)}>
+        <span>
+          Set against run {number}
+          {!isOwn && <span className="block text-xs text-muted">of {name}</span>}
+        </span>
+      </Link>
     </DropdownMenu.Item>
   ));
 }
@@ -34,6 +46,7 @@ function OtherRuns({ run }: { readonly run: Run }) {
 /** What can be made of a run: run as it was again, varied in a sweep of its own, set against another. */
 export function RunMenu({ run }: { readonly run: Run }) {
   const mayRun = useMay('run-sweeps');
+  const { search } = useLocation();
   const vary = useVarySweep(run);
   const [isOpen, setOpen] = useState(false);
   return (
@@ -65,7 +78,10 @@ export function RunMenu({ run }: { readonly run: Run }) {
               </span>
             </DropdownMenu.Item>
             <DropdownMenu.Item className={item} asChild>
-              <Link to={`${paths.newSweep(run.projectId, run.beam.id)}?run=${run.id}`}>
+              <Link
+                to={`${paths.newSweep(run.projectId, run.beam.id)}?run=${run.id}`}
+                state={{ runSearch: carriedSearch(search, ['x', 'y']) }}
+              >
                 Vary it in a new sweep
               </Link>
             </DropdownMenu.Item>

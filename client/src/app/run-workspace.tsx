@@ -1,5 +1,5 @@
 import { lazy, Suspense, useCallback, useMemo, useRef } from 'react';
-import { useNavigate } from 'react-router-dom';
+import { useLocation, useNavigate } from 'react-router-dom';
 import type { Project, Run } from '#shared/contract/records.ts';
 import type { FrontPicture } from '#client/src/charts/front-chart-input.ts';
 import { drawingExports } from '#client/src/drawing/drawing-exports.ts';
@@ -17,6 +17,7 @@ import { SpaceRail } from '#client/src/features/run/space-rail.tsx';
 import { WorkspaceFrame } from '#client/src/features/run/workspace-frame.tsx';
 import { useRunView } from '#client/src/features/run/use-run-view.ts';
 import { useStartRun } from '#client/src/features/sweeps/api.ts';
+import { carriedSearch } from '#client/src/lib/carried-search.ts';
 import { paths } from '#client/src/lib/paths.ts';
 import { useMay } from '#client/src/lib/reader-context.ts';
 import { Button, ButtonLink } from '#client/src/ui/button.tsx';
@@ -42,11 +43,12 @@ interface RunWorkspaceProps {
 function HeadActions({ run, isUnfinished }: { readonly run: Run; readonly isUnfinished: boolean }) {
   const mayRun = useMay('run-sweeps');
   const navigate = useNavigate();
+  const { search } = useLocation();
   const again = useStartRun(run.projectId);
   if (!mayRun) return null;
   const runAgain = () =>
     again.mutate(run.sweepId, {
-      onSuccess: (started) => void navigate(paths.run(run.projectId, started.id)),
+      onSuccess: (started) => void navigate(paths.run(run.projectId, started.id) + carriedSearch(search)),
     });
   return (
     <>
@@ -55,7 +57,12 @@ function HeadActions({ run, isUnfinished }: { readonly run: Run; readonly isUnfi
           Run again
         </Button>
       )}
-      <ButtonLink to={paths.sweep(run.projectId, run.sweepId)}>Change the sweep</ButtonLink>
+      <ButtonLink
+        to={paths.sweep(run.projectId, run.sweepId)}
+        state={{ runSearch: carriedSearch(search, ['x', 'y']) }}
+      >
+        Change the sweep
+      </ButtonLink>
     </>
   );
 }
@@ -95,15 +102,18 @@ export function RunWorkspace({ run, project }: RunWorkspaceProps) {
         code={run.basis.ruleSet}
         selected={selected?.section ?? null}
       />
-      {result !== null && (
+      {state.recorded !== null && (
         <FellOut
           isByCurve={(run.basis.ductilityMeasure ?? 'closed') !== 'closed'}
-          result={result}
+          result={state.recorded}
           definition={run.definition}
           reader={reader}
           onSelect={address.select}
           onMore={() => address.write({ show: 'why' })}
         />
+      )}
+      {state.ranked.asked !== null && (
+        <p className="text-xs text-muted">What each check costs is told at the run’s own rates.</p>
       )}
     </div>
   );

@@ -1,9 +1,10 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
-import { useNavigate } from 'react-router-dom';
+import { useLocation, useNavigate } from 'react-router-dom';
 import type { Run } from '#shared/contract/records.ts';
 import type { SweepVariation } from '#client/src/features/run/edge-offers.tsx';
 import { sweepQuery, useSaveSweep } from '#client/src/features/sweep-form/sweep-api.ts';
 import { useStartRun } from '#client/src/features/sweeps/api.ts';
+import { carriedSearch } from '#client/src/lib/carried-search.ts';
 import { messageOf } from '#client/src/lib/api-error.ts';
 import { paths } from '#client/src/lib/paths.ts';
 import { queryKeys } from '#client/src/lib/query-keys.ts';
@@ -16,6 +17,7 @@ import { notify } from '#client/src/ui/toast.tsx';
 export function useVarySweep(run: Run) {
   const client = useQueryClient();
   const navigate = useNavigate();
+  const { search } = useLocation();
   const save = useSaveSweep(run.projectId);
   const start = useStartRun(run.projectId);
   return useMutation({
@@ -32,7 +34,7 @@ export function useVarySweep(run: Run) {
     onSuccess: (started, { words }) => {
       client.setQueryData(queryKeys.run(started.id), started);
       notify.done(`Run ${started.number} with ${words}`);
-      void navigate(paths.run(run.projectId, started.id));
+      void navigate(paths.run(run.projectId, started.id) + carriedSearch(search));
     },
     onError: (error) => notify.failed(messageOf(error)),
   });

@@ -1,17 +1,17 @@
 import { useQuery } from '@tanstack/react-query';
 import { useMemo } from 'react';
 import { useNavigate, useParams, useSearchParams } from 'react-router-dom';
-import type { Project, Run, RunSummary } from '#shared/contract/records.ts';
+import type { Project, Run, Sweep } from '#shared/contract/records.ts';
 import { MeasureChoice } from '#client/src/charts/measure-choice.tsx';
 import type { ComparedRun } from '#client/src/features/run-difference/compared-run.ts';
 import { RunDifference } from '#client/src/features/run-difference/run-difference.tsx';
-import { RunPair } from '#client/src/features/run-difference/run-pair.tsx';
+import { RunPair, type ComparableRun } from '#client/src/features/run-difference/run-pair.tsx';
 import { readableView } from '#client/src/features/run/readable-view.ts';
 import { readRunAddress, withMeasure } from '#client/src/features/run/run-address.ts';
 import { runQuery, useRunEvents, useView } from '#client/src/features/run/run-api.ts';
 import { createSectionSource } from '#client/src/features/run/section-source.ts';
 import { isUnderWay } from '#client/src/features/run/view-progress.ts';
-import { sweepQuery } from '#client/src/features/sweep-form/sweep-api.ts';
+import { sweepsQuery } from '#client/src/features/sweeps/api.ts';
 import { unavailableReason } from '#client/src/lib/measure-availability.ts';
 import { paths } from '#client/src/lib/paths.ts';
 import { useProject } from '#client/src/lib/project-context.ts';
@@ -95,7 +95,7 @@ function Difference({ project, baseline, other }: DifferenceProps) {
   const wanted = readableView(baseline, readableView(other, { x: asked.x, y: asked.y }, units), units);
   const view = useMemo(() => ({ x: wanted.x, y: wanted.y }), [wanted.x, wanted.y]);
   const sides = [useCompared(baseline, view), useCompared(other, view)] as const;
-  const sweep = useQuery(sweepQuery(other.sweepId));
+  const sweeps = useQuery(sweepsQuery(project.id));
   const failed = sides.find(({ error }) => error !== null);
   const [before, after] = [sides[0].compared, sides[1].compared];
   const choose = (side: 'x' | 'y') => (measure: View['x']) => {
@@ -112,21 +112,23 @@ function Difference({ project, baseline, other }: DifferenceProps) {
       <PageCrumbs
         crumbs={[
           { label: project.name, to: paths.project(project.id) },
-          { label: other.beam.mark, to: paths.project(project.id, 'beams') },
           { label: other.sweepName, to: paths.sweep(project.id, other.sweepId) },
-          { label: `Run ${other.number}`, to: paths.run(project.id, other.id) },
-          { label: `Against run ${baseline.number}` },
+          { label: `Run ${other.number} against run ${baseline.number}` },
         ]}
       />
       <PageHeader
         title={`Run ${other.number} against run ${baseline.number}`}
-        lead={`${other.sweepName}, beam ${other.beam.mark}`}
+        lead={
+          other.sweepId === baseline.sweepId
+            ? `${other.sweepName}, beam ${other.beam.mark}`
+            : `${other.sweepName} against ${baseline.sweepName}, beam ${other.beam.mark}`
+        }
         actions={<ButtonLink to={paths.run(project.id, other.id)}>To run {other.number}</ButtonLink>}
       />
       <div className="grid gap-4 pb-6 print:hidden">
-        {sweep.data !== undefined && (
+        {sweeps.data !== undefined && (
           <RunPair
-            runs={withRuns(sweep.data.runs, [baseline, other])}
+            runs={comparableRuns(sweeps.data, [baseline, other])}
             baselineId={baseline.id}
             otherId={other.id}
             onChoose={(pair) =>
@@ -173,7 +175,12 @@ function Difference({ project, baseline, other }: DifferenceProps) {
   );
 }
 
-/** The runs of the sweep, with those compared wherever they come from. */
-function withRuns(runs: readonly RunSummary[], pair: readonly Run[]): readonly RunSummary[] {
-  return [...runs, ...pair.filter(({ id }) => runs.every((run) => run.id !== id))];
+/** The runs of the beam that have anything to show, with those compared. */
+function comparableRuns(sweeps: readonly Sweep[], pair: readonly Run[]): readonly ComparableRun[] {
+  const beamIds = pair.map(({ beam }) => beam.id);
+  const told = sweeps
+    .filter(({ beamId }) => beamIds.includes(beamId))
+    .flatMap(({ name, runs }) => runs.map((run) => ({ ...run, sweepName: name })))
+    .filter(({ evaluated }) => evaluated > 0);
+  return [...told, ...pair.filter(({ id }) => told.every((run) => run.id !== id))];
 }

@@ -1,6 +1,6 @@
 import { useQueryClient } from '@tanstack/react-query';
 import { useEffect, useState } from 'react';
-import { useNavigate, useParams } from 'react-router-dom';
+import { useLocation, useNavigate, useParams } from 'react-router-dom';
 import type { Beam, Sweep } from '#shared/contract/records.ts';
 import type { SweepInput } from '#client/src/features/sweep-form/read-sweep-form.ts';
 import { sweepDraft } from '#client/src/features/sweep-form/sweep-draft.ts';
@@ -40,6 +40,7 @@ function SweepEditor({ beam, sweep, copyOf, presets }: EditorProps) {
   const project = useProject();
   const mayRun = useMay('run-sweeps');
   const navigate = useNavigate();
+  const runSearch = searchCarriedBy(useLocation().state);
   const client = useQueryClient();
   const { units } = project.designBasis;
   const draftId = sweep?.id ?? `${beam.id} ${copyOf?.id ?? ''}`;
@@ -76,7 +77,7 @@ function SweepEditor({ beam, sweep, copyOf, presets }: EditorProps) {
       .then((started) => {
         client.setQueryData(queryKeys.run(started.id), started);
         void client.invalidateQueries({ queryKey: queryKeys.sweep(started.sweepId) });
-        return navigate(paths.run(project.id, started.id));
+        return navigate(paths.run(project.id, started.id) + runSearch);
       })
       .catch(ignoreHere);
 
@@ -119,6 +120,12 @@ function SweepEditor({ beam, sweep, copyOf, presets }: EditorProps) {
       )}
     </>
   );
+}
+
+/** Ranges, columns and band of the run one came from, for the run that follows. */
+function searchCarriedBy(state: unknown): string {
+  const isCarried = typeof state === 'object' && state !== null && 'runSearch' in state;
+  return isCarried && typeof state.runSearch === 'string' ? state.runSearch : '';
 }
 
 /** As the contract takes it. */

@@ -44,11 +44,7 @@ export function BestsTable({ baseline, other, reader }: BestsTableProps) {
   if (rows.length === 0)
     return <p className="text-muted">Neither run has a section that meets every check.</p>;
   return (
-    <TableFrame
-      label="The best of each measure by itself"
-      minWidth="40rem"
-      columnShares={[28, 24, 24, 12, 12]}
-    >
+    <TableFrame label="Best of each measure" minWidth="40rem" columnShares={[28, 24, 24, 12, 12]}>
       <thead>
         <tr>
           <th scope="col">Measure</th>

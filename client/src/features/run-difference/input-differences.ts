@@ -1,6 +1,7 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Run } from '#shared/contract/records.ts';
-import { INPUT_GROUPS, runInputs, type InputGroup, type RunInput } from './run-inputs.ts';
+import { INPUT_GROUPS, type InputGroup, type RunInput } from './run-input.ts';
+import { runInputs } from './run-inputs.ts';
 
 export interface InputDifference {
   readonly label: string;

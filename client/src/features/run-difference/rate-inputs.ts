@@ -1,6 +1,6 @@
 import type { Rates } from '#shared/engine/section.ts';
 import type { DisplayKind } from '#shared/print/units.ts';
-import type { RunInput } from './run-inputs.ts';
+import type { RunInput } from './run-input.ts';
 
 type Print = (value: number | null | undefined, kind: DisplayKind) => string;
 

@@ -25,18 +25,7 @@ import { groupsText } from '#client/src/lib/parse-bar-groups.ts';
 import { SUPPORT_OPTIONS } from '#client/src/lib/support-options.ts';
 import { valueListText } from '#client/src/lib/value-list.ts';
 import { rateInputs } from './rate-inputs.ts';
-
-export const INPUT_GROUPS = ['Ranges', 'Demand', 'Rules', 'Design basis', 'Rates', 'How it ran'] as const;
-export type InputGroup = (typeof INPUT_GROUPS)[number];
-
-/** One thing that went into a run, as it prints. */
-export interface RunInput {
-  readonly group: InputGroup;
-  readonly label: string;
-  /** As stored: two runs differ where this does, however they print. */
-  readonly stored: unknown;
-  readonly text: string;
-}
+import type { RunInput } from './run-input.ts';
 
 type InputRun = Pick<Run, 'definition' | 'basis' | 'engineVersion'>;
 type Print = (value: number | null | undefined, kind: DisplayKind) => string;

@@ -3,18 +3,24 @@ import { formatDate } from '#shared/print/format-quantity.ts';
 import { Button } from '#client/src/ui/button.tsx';
 import { SelectField } from '#client/src/ui/select-field.tsx';
 
+/** A run that may be compared, with the sweep it is of. */
+export interface ComparableRun extends Pick<RunSummary, 'id' | 'number' | 'createdAt' | 'startedBy'> {
+  readonly sweepName: string;
+}
+
 interface RunPairProps {
-  readonly runs: readonly RunSummary[];
+  readonly runs: readonly ComparableRun[];
   readonly baselineId: string;
   readonly otherId: string;
   readonly onChoose: (pair: { readonly baselineId: string; readonly otherId: string }) => void;
 }
 
-/** Which two runs are set against each other; any other two of the sweep may be chosen. */
+/** Which two runs are set against each other; any other two of the beam may be chosen. */
 export function RunPair({ runs, baselineId, otherId, onChoose }: RunPairProps) {
-  const options = runs.map(({ id, number, createdAt, startedBy }) => ({
+  const isOneSweep = new Set(runs.map(({ sweepName }) => sweepName)).size === 1;
+  const options = runs.map(({ id, number, createdAt, startedBy, sweepName }) => ({
     value: id,
-    label: `Run ${number}, ${formatDate(createdAt)}, ${startedBy.name}`,
+    label: `${isOneSweep ? `Run ${number}` : `${sweepName}, run ${number}`}, ${formatDate(createdAt)}, ${startedBy.name}`,
   }));
   return (
     <div className="flex flex-wrap items-end gap-x-5 gap-y-2">

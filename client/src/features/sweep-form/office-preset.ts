@@ -1,13 +1,12 @@
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { OfficeStandard, UsualRanges } from '#shared/contract/office-standard.ts';
-import { expandAxis } from '#shared/sweep/axis.ts';
 import { formatQuantity } from '#shared/print/format-quantity.ts';
 import { givenStirrupText } from '#shared/print/section-text.ts';
 import { countsText } from '#client/src/lib/counts-text.ts';
 import { stirrupValues } from '#client/src/section-fields/stirrup-values.ts';
-import { axisCount } from './space-estimate.ts';
-import type { AxisName, AxisValues, SweepFormValues } from './sweep-form-values.ts';
-import { parseValueList, valueListText } from '#client/src/lib/value-list.ts';
+import { axisValues } from './axis-values.ts';
+import type { AxisValues, SweepFormValues } from './sweep-form-values.ts';
+import { valueListText } from '#client/src/lib/value-list.ts';
 
 /** One kind of beam of one standard of the office: what a sweep's form can be filled from. */
 export interface OfficePreset {
@@ -79,15 +78,6 @@ const SLACK = 1e-6;
 const isIn = (value: number, list: readonly number[]) =>
   list.some((one) => Math.abs(one - value) <= SLACK * Math.max(1, one));
 
-/** Values of an axis as typed; none while it cannot be read. */
-function valuesOf(axis: AxisValues, name: AxisName, units: UnitSystem): readonly number[] {
-  if (axisCount(axis, name, units) === null) return [];
-  if (axis.kind === 'range')
-    return expandAxis({ kind: 'range', from: axis.from!, to: axis.to!, step: axis.step! });
-  const list = parseValueList(axis.listText, name === 'fc' ? 'stress' : 'length', units);
-  return list.kind === 'values' ? list.values : [];
-}
-
 function sizeDepartures(form: SweepFormValues, standard: OfficeStandard, units: UnitSystem): string[] {
   const length = (mm: number) => formatQuantity(mm, 'length', units);
   const axes = [
@@ -95,7 +85,7 @@ function sizeDepartures(form: SweepFormValues, standard: OfficeStandard, units: 
     ['depth', 'h', standard.increments.depthMm],
   ] as const;
   return axes.flatMap(([name, symbol, stepMm]) => {
-    const odd = valuesOf(form.axes[name], name, units).find((value) => {
+    const odd = axisValues(form.axes[name], name, units).find((value) => {
       const steps = value / stepMm;
       return Math.abs(steps - Math.round(steps)) > SLACK * Math.max(1, steps);
     });
@@ -131,7 +121,7 @@ export function departuresFrom(
   standard: OfficeStandard,
   units: UnitSystem,
 ): readonly string[] {
-  const mixes = valuesOf(form.axes.fc, 'fc', units).filter((value) => !isIn(value, standard.mixesMPa));
+  const mixes = axisValues(form.axes.fc, 'fc', units).filter((value) => !isIn(value, standard.mixesMPa));
   const words = mixes.map((value) => formatQuantity(value, 'stress', units)).join(', ');
   return [
     ...sizeDepartures(form, standard, units),

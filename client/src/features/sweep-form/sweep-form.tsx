@@ -7,6 +7,7 @@ import { preloadChart } from '#client/src/charts/chart.tsx';
 import { Button } from '#client/src/ui/button.tsx';
 import { FormError } from '#client/src/ui/form-error.tsx';
 import { TextField } from '#client/src/ui/text-field.tsx';
+import { askedInVain } from './asked-in-vain.ts';
 import { DemandFields, RulesFields } from './demand-and-rules-fields.tsx';
 import { FORM_ROOT, readSweepForm, type SweepInput } from './read-sweep-form.ts';
 import { errorsByField, issuesOf } from '#client/src/lib/field-errors.ts';
@@ -73,6 +74,7 @@ export function SweepForm(props: SweepFormProps) {
     }
     element.current?.querySelector<HTMLElement>('[aria-invalid="true"]')?.focus();
   };
+  const vain = useMemo(() => askedInVain(form, units), [form, units]);
   const isRefused = refusal !== null && answered === form;
 
   return (
