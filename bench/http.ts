@@ -2,20 +2,15 @@
  * The service as a client meets it, on a database of its own: the time from the click that starts a run of a million, and
  * of ten million, sections to its final result on the stream, and the commonest reads; sections evaluated for many at once;
  * then what people wait for while a run of a hundred and seventy million keeps the threads busy, and how soon that is
- * cancelled. Client and service share a process here, so the service alone is a little faster.
+ * cancelled. The service has a process of its own; client, service, threads and database share the cores.
  */
-import { randomUUID } from 'node:crypto';
-import pg from 'pg';
-import { joinPostgres, leavePostgres } from '#server/cli/postgres.mjs';
-import { TEST_FOLDER } from '#server/cli/project-paths.mjs';
-import { runSchema } from '#shared/contract/records.ts';
 import type { SweepDefinition } from '#shared/contract/sweep-definition.ts';
+import { idSchema } from '#shared/contract/numbers.ts';
 import { MEASURE_IDS, type MeasureId } from '#shared/engine/measures.ts';
-import { migrateDatabase } from '#server/db/migrate.ts';
-import { openOffice } from '../tests/support/office.ts';
 import { evaluateInput } from '../tests/support/factories.ts';
-import { addProject, scaledSweep, SMALL_SWEEP } from '../tests/support/office-project.ts';
+import { scaledSweep, SMALL_SWEEP } from '../tests/support/office-project.ts';
 import { followRun, hasEnded } from '../tests/support/run-stream.ts';
+import { openOfficeApart } from './office-apart.ts';
 
 const MILLION = scaledSweep(20, 521);
 const MILLION_COUNT = 20 * 521 * 96;
@@ -29,6 +24,8 @@ const CANCELS = 5;
 const RANKS = 20;
 /** Views of the run of a million opened beside each: four at once are under way at most. */
 const VIEWS = 4;
+/** Past the pairs that begin with the measure of the run's own. */
+const OTHER_PAIRS = MEASURE_IDS.length - 1;
 /** People who ask at once, each for the next as soon as they are answered. */
 const CLIENTS = 8;
 /** Of the whole way to the screen, 1.5 s, this much is the server's. */
@@ -37,34 +34,21 @@ const READS = 300;
 /** Evaluating one section, or ranking a small run anew, beside a sweep: 99 of 100 within this. */
 const BESIDE_LIMIT_MS = 50;
 
-const { maintenanceUrl } = await joinPostgres(TEST_FOLDER, { isDisposable: true });
-const name = `bench_${randomUUID().replaceAll('-', '')}`;
-const url = maintenanceUrl.replace(/\/postgres$/, `/${name}`);
-await administer(`create database ${name}`);
-await migrateDatabase(url);
-const office = await openOffice({ url, drop: () => administer(`drop database ${name} with (force)`) });
+const office = await openOfficeApart();
 try {
   await measure();
 } finally {
   await office.close();
-  await leavePostgres(TEST_FOLDER);
-}
-
-async function administer(sql: string): Promise<void> {
-  const connection = new pg.Client({ connectionString: maintenanceUrl });
-  await connection.connect();
-  await connection.query(sql);
-  await connection.end();
 }
 
 async function measure(): Promise<void> {
-  const project = await addProject(office);
-  const engineer = await office.as('engineer');
+  const { project, engineer, call } = office;
+  const idIn = (answer: unknown, key: 'id' | 'viewId') =>
+    idSchema.parse((answer as Record<typeof key, unknown>)[key]);
 
   async function start(definition: SweepDefinition): Promise<string> {
     const sweepId = await project.addSweep(definition);
-    const answer = await engineer.post(`/sweeps/${sweepId}/runs`).expect(200);
-    return runSchema.shape.id.parse((answer.body as { id: unknown }).id);
+    return idIn(await call('POST', `/sweeps/${sweepId}/runs`, {}), 'id');
   }
 
   async function timeRuns(definition: SweepDefinition, rounds: number) {
@@ -98,7 +82,7 @@ async function measure(): Promise<void> {
   const large = await timeRuns(TEN_MILLION, LARGE_ROUNDS);
   console.log(`run of ${TEN_MILLION_COUNT} sections, click to final result: ${describe(large.times)}`);
   const reads = [`/runs/${million.runId}`, `/runs/${million.runId}/sections/123456`];
-  const read = (path: string) => engineer.get(path).expect(200);
+  const read = (path: string) => call('GET', path);
   for (const path of reads)
     console.log(
       `GET ${path.replace(million.runId, ':id')}: ${describe(await time(READS, () => read(path)))}`,
@@ -108,13 +92,11 @@ async function measure(): Promise<void> {
   const views = pairsOf(MEASURE_IDS);
   const rank = async (i: number) => {
     const stream = await followRun(office, engineer, { runId: small });
-    const answer = await engineer.post(`/runs/${small}/views`, views[i]).expect(200);
-    const viewId = runSchema.shape.id.parse((answer.body as { viewId: unknown }).viewId);
+    const viewId = idIn(await call('POST', `/runs/${small}/views`, views[i]), 'viewId');
     await stream.until((event) => event.progress.viewId === viewId && hasEnded(event));
     stream.close();
   };
-  const evaluate = () =>
-    engineer.post(`/projects/${project.projectId}/evaluations`, evaluateInput).expect(200);
+  const evaluate = () => call('POST', `/projects/${project.projectId}/evaluations`, evaluateInput);
 
   /** What each of several people at once waits, and how many are answered a second. */
   async function load(name: string, requests: number): Promise<void> {
@@ -123,8 +105,10 @@ async function measure(): Promise<void> {
       Array.from({ length: CLIENTS }, () => time(requests / CLIENTS, evaluate)),
     );
     const perSecond = (requests * 1000) / (performance.now() - startedAt);
-    console.log(`${name}: ${describe(lanes.flat())}, ${p99(lanes.flat())}, ${perSecond.toFixed(0)} a second`);
+    console.log(`${name}: ${describeTail(lanes.flat())}, ${perSecond.toFixed(0)} a second`);
   }
+  await time(READS, evaluate);
+  console.log(`evaluate: ${describeTail(await time(READS, evaluate))}`);
   await load(`${CLIENTS} people evaluating`, 2 * READS);
 
   const beside: Record<string, number[]> = {};
@@ -133,6 +117,8 @@ async function measure(): Promise<void> {
     const huge = await start(HUGE);
     const stream = await followRun(office, engineer, { runId: huge });
     await stream.until(({ progress }) => progress.evaluated > 0);
+    stream.close();
+    const leave = await office.follow(huge);
     const some = READS / CANCELS;
     const counts: Record<string, number> = {
       'rank a small run anew': RANKS,
@@ -142,24 +128,25 @@ async function measure(): Promise<void> {
       evaluate,
       'rank a small run anew': () => rank(next++),
       'read a run': () => read(reads[0]!),
-      'open a view of the million': () =>
-        engineer.post(`/runs/${million.runId}/views`, { ...views[++nextView], z: null }).expect(200),
+      'open a view of the million': () => call('POST', `/runs/${million.runId}/views`, views[nextView++]),
     };
     let next = round * RANKS;
-    let nextView = round * VIEWS;
+    let nextView = OTHER_PAIRS + round * VIEWS;
     for (const [name, once] of Object.entries(act))
       beside[name] = [...(beside[name] ?? []), ...(await time(counts[name] ?? some, once))];
     if (round === CANCELS - 1) await load(`${CLIENTS} people evaluating beside a sweep`, READS);
+    leave();
+    const cancelled = await followRun(office, engineer, { runId: huge });
     cancels.push(
       ...(await time(1, async () => {
-        await engineer.post(`/runs/${huge}/cancel`).expect(200);
-        await stream.until(hasEnded);
+        await call('POST', `/runs/${huge}/cancel`, {});
+        await cancelled.until(hasEnded);
       })),
     );
-    stream.close();
+    cancelled.close();
   }
   for (const [name, times] of Object.entries(beside))
-    console.log(`beside a sweep, ${name}: ${describe(times)}, ${p99(times)} (limit ${BESIDE_LIMIT_MS} ms)`);
+    console.log(`beside a sweep, ${name}: ${describeTail(times)} (limit ${BESIDE_LIMIT_MS} ms)`);
   console.log(`cancel to what is kept: ${describe(cancels)} (limit 1000 ms)`);
   if (median(million.times) > LIMIT_MS) process.exitCode = 1;
 }
@@ -174,7 +161,9 @@ function percentile(values: readonly number[], share: number): number {
   return sorted[Math.min(sorted.length - 1, Math.ceil(share * sorted.length) - 1)]!;
 }
 
-const p99 = (times: readonly number[]) => `99th percentile ${percentile(times, 0.99).toFixed(1)} ms`;
+function describeTail(times: readonly number[]): string {
+  return `${describe(times)}, 99th percentile ${percentile(times, 0.99).toFixed(1)} ms`;
+}
 
 function median(values: readonly number[]): number {
   return [...values].sort((a, b) => a - b)[values.length >> 1]!;
