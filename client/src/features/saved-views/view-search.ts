@@ -19,7 +19,7 @@ export function keptAddress(
   return address;
 }
 
-export const searchOf = (address: ViewAddress): string => new URLSearchParams(address).toString();
+const searchOf = (address: ViewAddress): string => new URLSearchParams(address).toString();
 
 /** The run's page as it was saved. */
 export const viewPath = (projectId: string, { runId, address }: SavedView): string =>

@@ -139,6 +139,13 @@ export function SweepForm(props: SweepFormProps) {
         aria-label="Size of the space"
       >
         <SpaceTally project={project} reading={reading} runs={runs} />
+        {vain.length > 0 && (
+          <ul className="mt-3 grid gap-1 border-l-2 border-near-mark py-0.5 pl-3 text-sm text-near">
+            {vain.map((words) => (
+              <li key={words}>△ {words}.</li>
+            ))}
+          </ul>
+        )}
         <div className="mt-6 grid gap-3">
           {isRefused && <FormError message={messageOf(refusal)} />}
           <div className="flex flex-wrap gap-3">
