@@ -1,4 +1,5 @@
 import type { MessagePort } from 'node:worker_threads';
+import type { BandPoint } from '#shared/sweep/band.ts';
 import type { SearchShare, SearchState } from '#shared/sweep/bounded-search.ts';
 import type { ChunkResult } from '#shared/sweep/chunk.ts';
 import type { SweepProblem, View } from '#shared/sweep/problem.ts';
@@ -31,4 +32,6 @@ export interface BoundsReport {
 export interface BoundsReply extends BoundsReport {
   /** False where it was told to stop. */
   readonly isDone: boolean;
+  /** Near-best sections, oriented. */
+  readonly near: readonly BandPoint[];
 }

@@ -22,5 +22,5 @@ export default function boundsTask(task: BoundsTask): BoundsReply {
     port.postMessage({ state: search.state, found: search.found });
   }
   port.close();
-  return { state: search.state, found: search.found, isDone };
+  return { state: search.state, found: search.found, near: search.near, isDone };
 }

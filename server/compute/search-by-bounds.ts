@@ -1,4 +1,5 @@
 import { MessageChannel, type MessagePort } from 'node:worker_threads';
+import { bestOf } from '#shared/sweep/band.ts';
 import type { SearchState } from '#shared/sweep/bounded-search.ts';
 import type { ChunkResult } from '#shared/sweep/chunk.ts';
 import { FrontBuilder } from '#shared/sweep/front.ts';
@@ -40,7 +41,11 @@ export async function searchByBounds(search: SharedSearch): Promise<BoundsReply>
   });
   try {
     const replies = await Promise.all(shares);
-    return { ...joined.report(), isDone: replies.every(({ isDone }) => isDone) };
+    return {
+      ...joined.report(),
+      near: bestOf(replies.flatMap(({ near }) => near)),
+      isDone: replies.every(({ isDone }) => isDone),
+    };
   } catch (error) {
     Atomics.store(cancelFlag, 0, 1);
     await Promise.allSettled(shares);

@@ -23,9 +23,16 @@ const byBest = (a: BandPoint, b: BandPoint) => a.x - b.x || a.index - b.index;
 export class BandBuilder {
   private points: BandPoint[] = [];
   private limit = Infinity;
+  private best = Infinity;
+
+  /** No section with a larger x can be in the band of all that were added, or will be. */
+  get reach(): number {
+    return Math.min(this.limit, bandLimit(this.best));
+  }
 
   add(index: number, x: number, y: number): void {
     if (!(x <= this.limit)) return;
+    if (x < this.best) this.best = x;
     this.points.push({ index, x, y });
     if (this.points.length >= 4 * MAX_BAND_KEPT) this.cut();
   }

@@ -1,5 +1,7 @@
 import { barCoverMm } from '../engine/checks-detailing.ts';
+import type { MeasureId } from '../engine/measures.ts';
 import { isSameLength, isWithinLength } from '../engine/limits.ts';
+import type { BandPoint } from './band.ts';
 import { BoxHeap } from './box-heap.ts';
 import type { ChunkResult } from './chunk.ts';
 import type { FaceEntry } from './face-table.ts';
@@ -23,6 +25,8 @@ export interface BoundedFront {
   readonly boxes: number;
   /** As a sweep of every section gives it, ties too. */
   readonly front: readonly FrontPoint[];
+  /** Oriented; see `BoundedSearch.near`. */
+  readonly near: readonly BandPoint[];
 }
 
 /** How far a search is. Of the sections it has, those neither evaluated nor ruled out lie in open boxes. */
@@ -41,8 +45,8 @@ export interface SearchShare {
 
 /** Placements searched together, so that what one holds spares the others; their tables of bars take some 0.3 MB each. */
 const PLACEMENTS_AT_ONCE = 256;
-/** Sections in a box from which it is evaluated rather than split: a bound costs about what four sections do. */
-const LEAF_SECTIONS = 8;
+/** Sections in a box from which it is evaluated rather than split: bounds of its parts would cost as much. */
+const LEAF_SECTIONS = 16;
 /** Open boxes from which the search goes down before it goes on, some 150 MB of them: exact in any order. */
 const MOST_OPEN_BOXES = 1_000_000;
 
@@ -67,12 +71,14 @@ export class BoundedSearch {
   private readonly perPlacement: number;
   private readonly heap = new BoxHeap();
   private sectionsOpen = 0;
+  private readonly hasBand: boolean;
 
   /** @throws InvalidSectionError as `prepareSweep` does. */
   constructor(problem: SweepProblem, view: View, share: SearchShare = { part: 0, of: 1 }) {
     this.prepared = prepareSweep(problem, view);
     this.steps = openSweep(this.prepared);
     this.share = share;
+    this.hasBand = hasBand(view);
     const { widthsMm, coversMm, stirrups, fyMPa, size } = this.prepared.space;
     const placements = widthsMm.length * coversMm.length * stirrups.length * fyMPa.length;
     this.placementCount = Math.max(0, Math.ceil((placements - share.part) / share.of));
@@ -116,6 +122,11 @@ export class BoundedSearch {
     return this.steps.finish().front;
   }
 
+  /** The near-best band, oriented and one longer than is shown, once nothing is left; empty where it is not looked for. */
+  get near(): readonly BandPoint[] {
+    return this.hasBand ? this.steps.finish().band : [];
+  }
+
   private openPlacement(number: number): void {
     const { prepared } = this;
     const { space, problem } = prepared;
@@ -145,8 +156,12 @@ export class BoundedSearch {
     this.sectionsOpen += sectionsOf(box);
   }
 
+  /** Nothing of the box can be on the front, nor in the near-best band where that is looked for. */
   private isBeaten({ x, y }: SearchBox): boolean {
-    return this.steps.isBeaten(x, y) || this.elsewhere.isBeaten(x, y);
+    return (
+      (this.steps.isBeaten(x, y) || this.elsewhere.isBeaten(x, y)) &&
+      !(this.hasBand && x <= this.steps.bandReach())
+    );
   }
 
   private look(box: SearchBox): void {
@@ -173,6 +188,18 @@ export class BoundedSearch {
   }
 }
 
+/** Measures of which so many sections share each value that the best few hundred would be any of them. */
+const FLAT_MEASURES: readonly MeasureId[] = [
+  'depthMm',
+  'widthMm',
+  'concreteM3PerM',
+  'formworkM2PerM',
+  'barCount',
+];
+
+/** Whether a search finds the near-best band of a view besides its front. */
+export const hasBand = ({ x }: View): boolean => !FLAT_MEASURES.includes(x);
+
 const sectionsOf = ({ tension, compression, fcFrom, fcTo, depthFrom, depthTo }: SearchBox): number =>
   tension.sets.length * compression.sets.length * (fcTo - fcFrom) * (depthTo - depthFrom);
 
@@ -196,7 +223,7 @@ export function boundedFront(problem: SweepProblem, view: View): BoundedFront {
   const { evaluated, provenUnnecessary, boxesClosed } = search.state;
   const sectionCount = evaluated + provenUnnecessary;
   const front = frontOf(search.found, view);
-  return { view, sectionCount, evaluated, provenUnnecessary, boxes: boxesClosed, front };
+  return { view, sectionCount, evaluated, provenUnnecessary, boxes: boxesClosed, front, near: search.near };
 }
 
 /** Sets that fail a check by themselves, in the hot loop's own comparisons, are not worth a box. */

@@ -78,6 +78,8 @@ export interface BoundsProof {
   readonly boxes: number;
   /** False for the front of a search that was stopped: it may yet be beaten. */
   readonly isProven: boolean;
+  /** Whether the near-best band was looked for too: it is exact then. */
+  readonly hasBand: boolean;
 }
 
 export interface AxisCounts {

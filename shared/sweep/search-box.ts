@@ -61,6 +61,8 @@ export class BoxBounds {
       widthMm: placement.widthMm + placement.overhang.overhangMm,
       mostBlockStressMPa: 0,
       mostBlockPerMm2: 0,
+      leastDisplacedMPa: 0,
+      leastDeductionReach: 1,
       leastCrushingStrain: 0,
       mostCrushingStrain: 0,
       leastModularRatio: 0,
@@ -76,6 +78,8 @@ export class BoxBounds {
       leastInnermostDepthMm: 0,
       leastCompressionDepthMm: 0,
       mostCompressionDepthMm: 0,
+      leastTensionCentroidMm: 0,
+      leastCompressionCentroidMm: 0,
       compressionSpreadMm: 0,
     };
   }
@@ -115,25 +119,36 @@ export class BoxBounds {
       e.mostModularRatio =
       e.mostRatioAbove =
         0;
-    e.leastCrushingStrain = e.leastModularRatio = Infinity;
+    e.leastCrushingStrain = e.leastModularRatio = e.leastDisplacedMPa = Infinity;
+    e.leastDeductionReach = 1;
+    const { displacedConcrete } = this.prepared.problem.basis;
     for (let i = fcFrom; i < fcTo; i++) {
       const k = concretes[i]!;
       e.mostBlockStressMPa = Math.max(e.mostBlockStressMPa, k.blockStressMPa);
       e.mostBlockPerMm2 = Math.max(e.mostBlockPerMm2, k.blockStressMPa * k.blockDepthFactor);
+      e.leastDisplacedMPa = Math.min(e.leastDisplacedMPa, k.blockStressMPa);
+      if (displacedConcrete === 'deduct')
+        e.leastDeductionReach = Math.min(e.leastDeductionReach, k.blockDepthFactor);
       e.leastCrushingStrain = Math.min(e.leastCrushingStrain, k.crushingStrain);
       e.mostCrushingStrain = Math.max(e.mostCrushingStrain, k.crushingStrain);
       e.leastModularRatio = Math.min(e.leastModularRatio, k.modularRatio);
       e.mostModularRatio = Math.max(e.mostModularRatio, k.modularRatio);
       e.mostRatioAbove = Math.max(e.mostRatioAbove, k.ratioAbove);
     }
+    if (displacedConcrete === 'ignore') e.leastDisplacedMPa = 0;
     e.leastTensionMm2 = tension.leastAreaMm2;
     e.mostTensionMm2 = tension.mostAreaMm2;
     e.mostCompressionMm2 = compression.mostAreaMm2;
     e.mostTensionDepthMm = mostH * (1 - tension.leastShare) - tension.leastCentroidMm;
     e.mostOutermostDepthMm = mostH * (1 - tension.leastShare) - tension.nearestMm;
     e.leastInnermostDepthMm = leastH * (1 - tension.mostShare) - tension.furthestMm;
-    e.leastCompressionDepthMm = compression.leastShare * leastH + compression.nearestMm;
+    const hasSteel = compression.mostAreaMm2 > 0;
+    e.leastCompressionDepthMm = hasSteel ? compression.leastShare * leastH + compression.nearestMm : 0;
     e.mostCompressionDepthMm = compression.mostShare * mostH + compression.furthestMm;
+    e.leastTensionCentroidMm = leastH * (1 - tension.mostShare) - tension.mostCentroidMm;
+    e.leastCompressionCentroidMm = hasSteel
+      ? compression.leastShare * leastH + compression.leastCentroidMm
+      : 0;
     e.compressionSpreadMm = compression.mostSpreadMm;
   }
 

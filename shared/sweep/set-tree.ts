@@ -69,9 +69,10 @@ function nodeOf(sets: readonly number[], entries: readonly FaceEntry[]): SetNode
 
 function leafOf(sets: readonly number[], entry: FaceEntry): SetNode {
   const { layerCount, offsets } = entry;
-  // an empty face has no layer: what an absent bar would lie at bounds nothing, its area being zero
-  const nearestMm = layerCount > 0 ? offsets[0]! : 0;
-  const furthestMm = layerCount > 0 ? offsets[layerCount - 1]! : 0;
+  // An empty face has no layer: beside others it widens no range, and alone it bounds nothing, its area being zero.
+  const hasSteel = layerCount > 0;
+  const nearestMm = hasSteel ? offsets[0]! : Infinity;
+  const furthestMm = hasSteel ? offsets[layerCount - 1]! : 0;
   return {
     sets,
     left: null,
@@ -82,10 +83,10 @@ function leafOf(sets: readonly number[], entry: FaceEntry): SetNode {
     leastKgPerMm2: entry.areaMm2 > 0 ? entry.kgPerM / entry.areaMm2 : 0,
     fewestBars: entry.barCount,
     nearestMm,
-    leastCentroidMm: entry.centroidOffsetMm,
-    mostCentroidMm: entry.centroidOffsetMm,
+    leastCentroidMm: hasSteel ? entry.centroidOffsetMm : Infinity,
+    mostCentroidMm: hasSteel ? entry.centroidOffsetMm : 0,
     furthestMm,
-    mostSpreadMm: furthestMm - nearestMm,
+    mostSpreadMm: hasSteel ? furthestMm - nearestMm : 0,
     leastShare: entry.shareOfDepth,
     mostShare: entry.shareOfDepth,
     leastReachMm: entry.reachMm,

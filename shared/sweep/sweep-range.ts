@@ -23,6 +23,8 @@ export interface SweepSteps {
   advance(from: number, to: number): void;
   /** Whether a section found so far is at least as good as (x, y), oriented, in both measures and better in one. */
   isBeaten(x: number, y: number): boolean;
+  /** Largest oriented x that a section of the near-best band can have, by those found so far. */
+  bandReach(): number;
   finish(): ChunkResult;
   /** What was kept for other views; null where nothing was to be. */
   kept(): KeptPiece | null;
@@ -53,6 +55,7 @@ export function openSweep(
     advance: (from, to) =>
       added === null ? forEachRow(prepared, from, to, run) : added.visit(from, to, run),
     isBeaten: (x, y) => tally.isBeaten(x, y),
+    bandReach: () => tally.bandReach,
     finish: () => tally.finish(),
     kept: () => keeper?.finish() ?? null,
   };

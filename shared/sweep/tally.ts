@@ -6,6 +6,7 @@ import { DensityBuilder } from './density.ts';
 import { FrontInThreeBuilder } from './front-in-three.ts';
 import { FrontBuilder } from './front.ts';
 import type { Space, View } from './problem.ts';
+import type { SectionKeeper } from './section-keeper.ts';
 
 const CHECK_COUNT = CHECK_IDS.length;
 const MEASURE_COUNT = MEASURE_IDS.length;
@@ -20,9 +21,9 @@ export class Tally {
   private feasible = 0;
   private readonly failed = new Float64Array(CHECK_COUNT);
   private readonly failedOnly = new Float64Array(CHECK_COUNT);
+  private readonly failedFirst = new Float64Array(CHECK_COUNT);
   readonly widthFeasible: Float64Array;
   readonly widthEvaluated: Float64Array;
-  private readonly failedFirst = new Float64Array(CHECK_COUNT);
   readonly depthFeasible: Float64Array;
   readonly depthEvaluated: Float64Array;
   readonly fcFeasible: Float64Array;
@@ -40,6 +41,8 @@ export class Tally {
   private readonly frontInThree: FrontInThreeBuilder | null;
   private readonly band = new BandBuilder();
   private readonly density = new DensityBuilder();
+  /** Told of each section that other views are ranked from; null where none are kept. */
+  keeper: SectionKeeper | null = null;
 
   constructor(space: Space, view: View) {
     this.xMeasure = MEASURE_IDS.indexOf(view.x);
@@ -68,6 +71,7 @@ export class Tally {
 
   /** A section that meets every check. Indices arrive ascending, so the first of equal values has the lowest index. */
   addFeasible(index: number, measures: Float64Array): void {
+    if (this.keeper !== null) this.keeper.addFeasible(index, measures);
     const { bestValue, bestIndex } = this;
     for (let i = 0; i < MEASURE_COUNT; i++) {
       const value = SIGNS[i]! * measures[i]!;
@@ -101,6 +105,7 @@ export class Tally {
 
   /** A section that fails exactly the check of this bit and has numbers. */
   addFailingOnly(bit: number, index: number, measures: Float64Array): void {
+    if (this.keeper !== null) this.keeper.addFailingOnly(bit, index, measures);
     const x = SIGNS[this.xMeasure]! * measures[this.xMeasure]!;
     const y = SIGNS[this.yMeasure]! * measures[this.yMeasure]!;
     if (y !== y) return;
@@ -116,6 +121,11 @@ export class Tally {
     return this.front.isBeaten(x, y);
   }
 
+  /** Largest oriented x that a section of the near-best band can have, by those found so far. */
+  get bandReach(): number {
+    return this.band.reach;
+  }
+
   finish(): ChunkResult {
     const { evaluated, feasible, failed, failedOnly, failedFirst } = this;
     const { widthFeasible, widthEvaluated, depthFeasible, depthEvaluated, fcFeasible, fcEvaluated } = this;
@@ -125,6 +135,7 @@ export class Tally {
       feasible,
       failed,
       failedOnly,
+      failedFirst,
       withoutX,
       withoutY,
       withoutIndex,
@@ -139,7 +150,6 @@ export class Tally {
       ...(this.frontInThree && { frontInThree: this.frontInThree.finish() }),
       band: this.band.finish(),
       density: this.density.finish(),
-      failedFirst,
       widthFeasible,
       widthEvaluated,
       depthFeasible,

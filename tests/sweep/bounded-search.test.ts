@@ -1,9 +1,10 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { MEASURE_IDS } from '#shared/engine/measures.ts';
-import { boundedFront } from '#shared/sweep/bounded-search.ts';
+import { BoundedSearch, boundedFront, frontOf, hasBand } from '#shared/sweep/bounded-search.ts';
 import { prepareSweep } from '#shared/sweep/prepared-sweep.ts';
 import { finishResult } from '#shared/sweep/finish.ts';
+import { nonDominated } from '#shared/sweep/front.ts';
 import { sweepRange } from '#shared/sweep/sweep-range.ts';
 import { OFFICE_PROBLEM, OFFICE_SIZE } from './office-problem.ts';
 import { randomProblem } from './random-problems.ts';
@@ -38,20 +39,39 @@ const problems = fc.oneof(
 );
 
 describe('branch and bound', () => {
-  it('finds the front that evaluating every section finds, ties and all, in 500 random spaces', () => {
+  it('finds the front and the near-best band that evaluating every section finds, ties and all, in 500 random spaces', () => {
     let withFront = 0;
     fc.assert(
       fc.property(problems, views, (problem, view) => {
         const prepared = prepareSweep(problem, view);
-        const { front } = finishResult(problem, view, sweepRange(prepared, 0, prepared.space.size));
+        const swept = sweepRange(prepared, 0, prepared.space.size);
+        const { front } = finishResult(problem, view, swept);
         const bounded = boundedFront(problem, view);
         if (front.length > 0) withFront++;
         expect(bounded.front).toEqual(front);
+        expect(bounded.near).toEqual(hasBand(view) ? swept.band : []);
         expect(bounded.evaluated + bounded.provenUnnecessary).toBe(prepared.space.size);
       }),
       { numRuns: 500, seed: 500 },
     );
     expect(withFront).toBeGreaterThan(100);
+  });
+
+  it('finds it also from shares of the space that hear of each other, in steps, and from what was known before', () => {
+    const view = { x: 'steelKgPerM', y: 'depthMm' } as const;
+    const { front } = boundedFront(OFFICE_PROBLEM, view);
+    const shares = [0, 1, 2].map((part) => new BoundedSearch(OFFICE_PROBLEM, view, { part, of: 3 }));
+    for (const share of shares) share.noteElsewhere(front[1]!.x, front[1]!.y);
+    while (shares.map((share) => share.advance(50)).includes(false))
+      for (const share of shares)
+        for (const { x, y } of share.found)
+          for (const other of shares) if (other !== share) other.noteElsewhere(x, y);
+    const all = shares.flatMap((share) => frontOf(share.found, view));
+    expect(nonDominated(all, { x: 1, y: 1 }).map(({ index }) => index)).toEqual(
+      front.map(({ index }) => index),
+    );
+    const looked = shares.map(({ state }) => state.evaluated + state.provenUnnecessary);
+    expect(looked.reduce((sum, count) => sum + count)).toBe(OFFICE_SIZE);
   });
 
   it.each([

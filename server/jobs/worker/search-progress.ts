@@ -56,6 +56,7 @@ export class SearchProgress {
       const result = boundedResult(problem, view, {
         state,
         found: known.joinedWith(found),
+        near: [],
         isProven: false,
       });
       const changed = await db.transaction(async (tx) => {

@@ -82,6 +82,7 @@ async function endCancelled(
   const result = boundedResult(problem, view, {
     state: reply.state,
     found: known.joinedWith(reply.found),
+    near: [],
     isProven: false,
   });
   await db.transaction(async (tx) => {

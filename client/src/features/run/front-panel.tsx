@@ -11,6 +11,7 @@ import { sizeText, steelText } from '#shared/print/section-text.ts';
 import { unavailableReason } from '#client/src/lib/measure-availability.ts';
 import { measureLabel } from '#shared/print/measure-labels.ts';
 import { BandSlider } from './band-slider.tsx';
+import { boundsWords } from './proof-words.ts';
 import type { ExploreKey } from '#shared/sweep/explore-axis.ts';
 import { InThreeChoice } from './in-three-choice.tsx';
 import { thirdMeasure } from './mark-scale.ts';
@@ -139,14 +140,15 @@ export function FrontPanel(props: FrontPanelProps) {
     <section aria-label="Trade-off" className="flex min-w-0 flex-col">
       <div className="flex flex-wrap items-baseline gap-x-3 gap-y-1 pb-1.5">
         <PairChoice {...props} />
-        {result?.bounds === undefined ? (
+        {result?.bounds !== undefined && (
+          <span className="ml-auto text-sm text-muted">{boundsWords(result.bounds)}</span>
+        )}
+        {result?.bounds?.hasBand !== false && (
           <BandSlider
             share={address.bandShare}
             count={`${isBandCut ? 'over ' : ''}${band.length}`}
             onChange={(share) => address.write({ band: String(Math.round(share * 1000) / 10) })}
           />
-        ) : (
-          <span className="ml-auto text-sm text-muted">By bounds: the front alone, no cloud and no band</span>
         )}
       </div>
       {isEmpty ? (

@@ -1,5 +1,5 @@
 import type { Run, RunState } from '#shared/contract/records.ts';
-import type { ViewResult } from '#shared/sweep/result.ts';
+import type { BoundsProof, ViewResult } from '#shared/sweep/result.ts';
 import { formatWhole } from '#shared/print/format-quantity.ts';
 
 const sections = (count: number) => `${formatWhole(count)} ${count === 1 ? 'section' : 'sections'}`;
@@ -41,3 +41,11 @@ export const feasibleClaim = ({ feasible }: ViewResult): string =>
 export const takenClaim = ({ taken, sectionCount }: Pick<Run, 'taken' | 'sectionCount'>): string | null =>
   taken &&
   `${sections(taken.sections)} taken from run ${taken.number}, ${formatWhole(sectionCount - taken.sections)} new computed`;
+
+/** What a chart of a run by bounds does not show. */
+export function boundsWords({ isProven, hasBand }: BoundsProof): string {
+  if (!isProven) return 'By bounds: front so far, no cloud';
+  return hasBand
+    ? 'By bounds: no cloud'
+    : 'By bounds: no cloud, and no band of a measure that many sections share';
+}

@@ -16,7 +16,7 @@ const WORTH_ASKING = 1_000_000;
 
 /** What a search by bounds finds, and what it leaves out. */
 const WHAT_IT_IS =
-  'Finds the same exact front without evaluating every section: those whose bounds fail a check, or that a section found beats, are ruled out in groups. How many meet every check, the near-best band and why the rest fell out are not counted then.';
+  'Finds the same exact front without evaluating every section: those whose bounds fail a check, or that a section found beats, are ruled out in groups. How many meet every check and why the rest fell out is not counted then.';
 
 /** Whether the space is searched by bounds; where it is too large for anything else, that it will be. */
 export function BoundsChoice({ size, isByCurve, value, onChange }: BoundsChoiceProps) {
