@@ -41,6 +41,7 @@ const after = (
   },
 });
 
+const COUNTS = Array.from({ length: 11 }, (_, i) => i + 2);
 const NEW_SWEEP = `${LIBRARY}/beams/${beamId('library', 'B6')}/sweeps/new`;
 const COMPARED = `${LIBRARY}/shortlist?compare=${candidateId('A')},${candidateId('B')}&base=${candidateId('A')}`;
 
@@ -75,6 +76,45 @@ async function openHugeRun(visit: Visit): Promise<Run> {
   await visit.open(`${CLINIC}/runs/${run.id}`);
   await visit.page.getByRole('slider', { name: /^Section along the front/ }).waitFor();
   return run;
+}
+
+/** A run by bounds of half a billion sections, ended or stopped on the way. */
+async function openRunByBounds(visit: Visit, { isStopped = false, query = '' } = {}): Promise<void> {
+  const { page } = visit;
+  const definition = scaledSweep(1001, 1801);
+  const tension = { kind: 'bars' as const, sizes: ['20', '25', '28'], counts: COUNTS, none: false };
+  const sweep = await visit.call<Sweep>('post', `/beams/${beamId('clinic', 'G3')}/sweeps`, {
+    name: 'Every millimetre and bar',
+    definition: { ...definition, space: { ...definition.space, tension } },
+  });
+  const run = await visit.call<Run>('post', `/sweeps/${sweep.id}/runs`);
+  if (isStopped) await visit.call('post', `/runs/${run.id}/cancel`);
+  await visit.open(`${CLINIC}/runs/${run.id}${query}`);
+  await page
+    .getByText(isStopped ? /front is not proven/ : /proven unnecessary/)
+    .first()
+    .waitFor();
+}
+
+/** A run of a sweep with further widths, which takes over the sections of the run before. */
+async function openWidenedRun(visit: Visit): Promise<void> {
+  const definition = scaledSweep(20, 30);
+  const sweep = await visit.call<Sweep>('post', `/beams/${beamId('clinic', 'G1')}/sweeps`, {
+    name: 'A few more widths',
+    definition,
+  });
+  const start = () => visit.call<Run>('post', `/sweeps/${sweep.id}/runs`);
+  const waitFor = async (run: Run) => {
+    await visit.open(`${CLINIC}/runs/${run.id}`);
+    await visit.page.getByText(/none better than the front|none meets every check/).waitFor();
+  };
+  await waitFor(await start());
+  const width = { kind: 'range' as const, from: 300, to: 450, step: 100 / 19 };
+  await visit.call('put', `/sweeps/${sweep.id}`, {
+    name: sweep.name,
+    definition: { ...definition, space: { ...definition.space, width } },
+  });
+  await waitFor(await start());
 }
 
 /** Two runs of one sweep: the second wider, and stricter about ductility. */
@@ -201,12 +241,17 @@ const SWEEP: readonly Screen[] = [
     await fill(page, { 'Width b to': '8', 'Depth h by': '0' });
     await page.getByText('2 fields need attention.').waitFor();
   }),
+  after('sweep-by-bounds', ['engineer', NEW_SWEEP], async (page) => {
+    await fill(page, { 'Width b to': '60', 'Width b by': '0.05', 'Depth h by': '0.01' });
+    await page.getByText(/that can be evaluated one by one/).waitFor();
+  }),
   after('sweep-too-large', ['engineer', NEW_SWEEP], async (page) => {
     await fill(page, {
       'Width b from': '10',
       'Width b to': '60',
       'Width b by': '0.05',
       'Depth h by': '0.01',
+      'Concrete f′c by': '0.005',
     });
     await page.getByText(/that one run takes/).waitFor();
   }),
@@ -228,7 +273,24 @@ const RUN: readonly Screen[] = [
     'engineer',
     `${runPath('reading-room')}?x=costPerM&y=curvatureDuctility&by=depthMm&in=3`,
   ),
+  at(
+    'run-other-rates',
+    'engineer',
+    `${runPath('reading-room')}?x=costPerM&y=depthMm&rates=today;steel:25;formwork:-20`,
+  ),
+  { name: 'run-widened', role: 'engineer', arrive: openWidenedRun },
   at('run-log', 'engineer', `${runPath('reading-room-fine')}?log=xy&by=barCount&as=size`),
+  { name: 'run-by-bounds', role: 'engineer', arrive: (visit) => openRunByBounds(visit) },
+  {
+    name: 'run-by-bounds-why',
+    role: 'engineer',
+    arrive: (visit) => openRunByBounds(visit, { query: '?show=why' }),
+  },
+  {
+    name: 'run-by-bounds-stopped',
+    role: 'engineer',
+    arrive: (visit) => openRunByBounds(visit, { isStopped: true }),
+  },
   at('run-million', 'engineer', runPath('reading-room-fine')),
   at('run-si', 'engineer', runPath('ground-floor', CLINIC)),
   at('run-hogging-en', 'engineer', runPath('arcade-columns', ARCADE)),
@@ -239,6 +301,10 @@ const RUN: readonly Screen[] = [
   after('run-more', ['engineer', runPath('roof')], async (page) => {
     await page.getByRole('button', { name: 'More' }).click();
     await page.getByRole('menuitem', { name: /^Run it again/ }).waitFor();
+  }),
+  after('run-export', ['engineer', runPath('roof')], async (page) => {
+    await page.getByRole('button', { name: 'Export' }).click();
+    await page.getByRole('menuitem', { name: /^Front, CSV/ }).waitFor();
   }),
   after('run-pinning', ['engineer', runPath('roof')], async (page) => {
     await page.getByRole('button', { name: 'Pin to shortlist' }).click();

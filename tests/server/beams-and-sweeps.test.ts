@@ -189,11 +189,12 @@ describe('a sweep', () => {
       width: fine,
       depth: { ...fine, from: 400 },
       fc: { kind: 'range', from: 20, to: 74, step: 1 },
+      fy: { kind: 'range', from: 300, to: 500, step: 0.5 },
     }).expect(200);
     const tooLarge = await engineer.post(`/sweeps/${body.id}/runs`);
     expect([tooLarge.status, tooLarge.body.error.code]).toEqual([422, 'too-many-sections']);
-    // 2001 widths × 1801 depths × 55 strengths × 2 sizes × 3 counts.
-    expect(tooLarge.body.error.message).toContain((2001 * 1801 * 55 * 6).toLocaleString('en-US'));
+    // 2001 widths × 1801 depths × 55 strengths × 401 yields × 2 sizes × 3 counts: more than bounds search.
+    expect(tooLarge.body.error.message).toContain((2001 * 1801 * 55 * 401 * 6).toLocaleString('en-US'));
     expect(tooLarge.body.error.issues[0].path).toEqual(['definition', 'space', 'width', 'step']);
   });
 

@@ -202,9 +202,12 @@ describe('the size while typing', () => {
   });
 
   it('takes the time from this sweep’s own last long run', () => {
-    const run = { state: 'finished', evaluated: 1_000_000, elapsedMs: 1000 } as Parameters<
-      typeof estimatedMs
-    >[1][number];
+    const run = {
+      method: 'every-section',
+      state: 'finished',
+      evaluated: 1_000_000,
+      elapsedMs: 1000,
+    } as Parameters<typeof estimatedMs>[1][number];
     expect(estimatedMs(2_000_000, [run]) - estimatedMs(1_000_000, [run])).toBeCloseTo(1000, 6);
     expect(estimatedMs(2_000_000, [{ ...run, evaluated: 10 }])).toBe(estimatedMs(2_000_000, []));
     expect(estimatedMs(2_000_000, [run], true)).toBeGreaterThan(4 * estimatedMs(2_000_000, [run]));

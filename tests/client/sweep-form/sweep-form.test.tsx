@@ -74,8 +74,10 @@ describe('the sweep form', () => {
   it('refuses a space too large with its count, at the range to coarsen', async () => {
     const { user, props } = show();
     await retype(user, 'Depth h by', '0.01');
-    await retype(user, 'Width b by', '0.05');
-    expect(screen.getByText(/are more than the 200,000,000/)).toBeTruthy();
+    await retype(user, 'Width b by', '0.01');
+    expect(screen.getByText(/can be evaluated one by one/)).toBeTruthy();
+    await retype(user, 'Concrete f′c by', '0.002');
+    expect(screen.getByText(/are more than the 200,000,000,000/)).toBeTruthy();
     expect(field('Depth h by').getAttribute('aria-invalid')).toBe('true');
     await user.click(screen.getByRole('button', { name: 'Run' }));
     expect(props.onRun).not.toHaveBeenCalled();

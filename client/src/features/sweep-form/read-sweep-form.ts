@@ -88,6 +88,7 @@ export function readSweepForm(form: SweepFormValues, units: UnitSystem): SweepFo
       demand: form.demand,
       rules: form.rules,
       view: form.view,
+      method: form.method,
     },
   });
   if (input.success && problems.length === 0) return { kind: 'complete', input: input.data };

@@ -57,7 +57,11 @@ export function steelCount(steel: SteelValues, units: UnitSystem): number | null
 export function estimatedMs(sections: number, runs: readonly RunSummary[], isOffCurve = false): number {
   if (isOffCurve) return HANDOVER_MS + (1000 * sections) / USUAL_WITH_CURVES_PER_SECOND;
   const telling = runs.find(
-    (run) => run.state === 'finished' && run.elapsedMs !== null && run.evaluated >= TELLING_SECTIONS,
+    (run) =>
+      run.method === 'every-section' &&
+      run.state === 'finished' &&
+      run.elapsedMs !== null &&
+      run.evaluated >= TELLING_SECTIONS,
   );
   const perMs =
     telling?.elapsedMs == null ? USUAL_SECTIONS_PER_SECOND / 1000 : telling.evaluated / telling.elapsedMs;

@@ -148,7 +148,7 @@ function steelValues(sets: SteelSetsDefinition, units: UnitSystem): SteelValues 
 
 /** A stored sweep as a form, to change or to copy. */
 export function sweepForm(sweep: Pick<Sweep, 'name' | 'definition'>, units: UnitSystem): SweepFormValues {
-  const { space, demand, rules, view } = sweep.definition;
+  const { space, demand, rules, view, method } = sweep.definition;
   const axes = Object.fromEntries(AXIS_NAMES.map((name) => [name, axisValues(space[name], name, units)]));
   return {
     name: sweep.name,
@@ -162,6 +162,7 @@ export function sweepForm(sweep: Pick<Sweep, 'name' | 'definition'>, units: Unit
     demand,
     rules,
     view,
+    method,
     filledFrom: null,
   };
 }

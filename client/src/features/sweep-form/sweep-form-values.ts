@@ -1,5 +1,6 @@
 import type { MeasureId } from '#shared/engine/measures.ts';
 import type { Support } from '#shared/engine/section.ts';
+import type { RunMethod } from '#shared/sweep/run-method.ts';
 import type { StirrupValues } from '#client/src/section-fields/stirrup-values.ts';
 import type { FlangeValues } from '#client/src/section-fields/flange-values.ts';
 
@@ -61,6 +62,8 @@ export interface SweepFormValues {
     readonly requireHangers: boolean;
   };
   readonly view: { readonly x: MeasureId; readonly y: MeasureId };
+  /** How it is run, where somebody chose; else the size decides. */
+  readonly method?: RunMethod | undefined;
   /** The preset of the office it was filled from, by name; null for a stored sweep, which does not say. */
   readonly filledFrom: string | null;
 }

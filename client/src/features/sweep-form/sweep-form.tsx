@@ -138,7 +138,12 @@ export function SweepForm(props: SweepFormProps) {
         className="border-t border-ink pt-3 lg:sticky lg:top-4 lg:self-start"
         aria-label="Size of the space"
       >
-        <SpaceTally project={project} reading={reading} runs={runs} />
+        <SpaceTally
+          project={project}
+          reading={reading}
+          runs={runs}
+          onMethod={(method) => change({ ...form, method })}
+        />
         {vain.length > 0 && (
           <ul className="mt-3 grid gap-1 border-l-2 border-near-mark py-0.5 pl-3 text-sm text-near">
             {vain.map((words) => (
