@@ -37,7 +37,7 @@ export interface SearchState {
   readonly boxesClosed: number;
 }
 
-/** One of several searches that share a space between them: it takes every `of`-th placement from `part` on. */
+/** One of several searches that share the placements of a space between them: part 0 … of − 1. */
 export interface SearchShare {
   readonly part: number;
   readonly of: number;
@@ -59,7 +59,6 @@ const MOST_OPEN_BOXES = 1_000_000;
 export class BoundedSearch {
   private readonly prepared: PreparedSweep;
   private readonly steps: SweepSteps;
-  private readonly share: SearchShare;
   /** What sections found elsewhere measure, so that they beat boxes here: by another part, or by an earlier search. */
   private readonly elsewhere = new FrontBuilder();
   private boxes = 0;
@@ -67,7 +66,8 @@ export class BoundedSearch {
   /** Placements begun, of those of this share. */
   private begun = 0;
   private openUpTo = PLACEMENTS_AT_ONCE;
-  private readonly placementCount: number;
+  /** Numbers of the placements of this share. */
+  private readonly placements: readonly number[];
   private readonly perPlacement: number;
   private readonly heap = new BoxHeap();
   private sectionsOpen = 0;
@@ -77,24 +77,23 @@ export class BoundedSearch {
   constructor(problem: SweepProblem, view: View, share: SearchShare = { part: 0, of: 1 }) {
     this.prepared = prepareSweep(problem, view);
     this.steps = openSweep(this.prepared);
-    this.share = share;
     this.hasBand = hasBand(view);
     const { widthsMm, coversMm, stirrups, fyMPa, size } = this.prepared.space;
     const placements = widthsMm.length * coversMm.length * stirrups.length * fyMPa.length;
-    this.placementCount = Math.max(0, Math.ceil((placements - share.part) / share.of));
+    this.placements = placementsOf(share, placements);
     this.perPlacement = size / placements;
   }
 
   /** Looks at so many boxes at most; true when nothing is left. */
   advance(boxes: number): boolean {
     for (let i = 0; i < boxes; i++) {
-      if (this.begun < Math.min(this.placementCount, this.openUpTo)) {
-        this.openPlacement(this.share.part + this.begun++ * this.share.of);
+      if (this.begun < Math.min(this.placements.length, this.openUpTo)) {
+        this.openPlacement(this.placements[this.begun++]!);
         continue;
       }
       const box = this.heap.size > MOST_OPEN_BOXES ? this.heap.popLast() : this.heap.pop();
       if (box) this.look(box);
-      else if (this.begun < this.placementCount) this.openUpTo += PLACEMENTS_AT_ONCE;
+      else if (this.begun < this.placements.length) this.openUpTo += PLACEMENTS_AT_ONCE;
       else return true;
     }
     return false;
@@ -107,8 +106,8 @@ export class BoundedSearch {
 
   get state(): SearchState {
     const { boxes, evaluated, heap } = this;
-    const unbegun = this.placementCount - this.begun;
-    const sections = this.placementCount * this.perPlacement;
+    const unbegun = this.placements.length - this.begun;
+    const sections = this.placements.length * this.perPlacement;
     return {
       evaluated,
       provenUnnecessary: sections - evaluated - this.sectionsOpen - unbegun * this.perPlacement,
@@ -186,6 +185,20 @@ export class BoundedSearch {
           this.evaluated += box.depthTo - box.depthFrom;
         }
   }
+}
+
+/**
+ * The numbers whose digits to the base of the shares add up to the part: neighbours and multiples fall to different ones,
+ * so that no share has all of one stirrup, or all the narrow widths, where most of the work is.
+ */
+function placementsOf({ part, of }: SearchShare, count: number): number[] {
+  const all = Array.from({ length: count }, (_, number) => number);
+  if (of === 1) return all;
+  return all.filter((number) => {
+    let sum = 0;
+    for (let rest = number; rest > 0; rest = Math.floor(rest / of)) sum += rest % of;
+    return sum % of === part;
+  });
 }
 
 /** Measures of which so many sections share each value that the best few hundred would be any of them. */

@@ -47,15 +47,21 @@ const raised = (bound: number) => bound + RELATIVE_SLACK * Math.abs(bound);
 export class BoxBounds {
   private readonly prepared: PreparedSweep;
   private readonly placement: Placement;
-  private readonly fyMPa: number;
   private readonly extremes: BoxExtremes;
   private readonly isDuctilityBounded: boolean;
+  /** As,min over d for each strength, mm; it is proportional to d (see `RuleSet`). */
+  private readonly leastSteelPerMm: Float64Array;
+  private readonly required;
 
   constructor(prepared: PreparedSweep, placement: Placement, fyMPa: number) {
     this.prepared = prepared;
     this.placement = placement;
-    this.fyMPa = fyMPa;
     const { basis } = prepared.problem;
+    const { widthMm, overhang } = placement;
+    this.leastSteelPerMm = Float64Array.from(prepared.concretes, ({ fcMPa }) =>
+      prepared.ruleSet.leastSteelMm2({ fcMPa, fyMPa, widthMm, dMm: 1 }),
+    );
+    this.required = { widthMm, dMm: 0, blockStressMPa: 0, fyMPa, ...overhang };
     this.isDuctilityBounded = (basis.ductilityMeasure ?? 'closed') === 'closed';
     this.extremes = {
       widthMm: placement.widthMm + placement.overhang.overhangMm,
@@ -181,28 +187,19 @@ export class BoxBounds {
 
   /** As,min of the box's least d and weakest concrete, or its waiver's where that asks for less. */
   private leastSteelMm2({ tension, fcFrom, fcTo }: SearchBox, leastH: number, mostH: number): number {
-    const { ruleSet, concretes, problem } = this.prepared;
-    const { widthMm } = this.placement;
+    const { ruleSet, problem } = this.prepared;
     const leastD = leastH * (1 - tension.mostShare) - tension.mostCentroidMm;
-    const mostD = mostH * (1 - tension.leastShare) - tension.leastCentroidMm;
-    let least = Infinity;
-    let waived = Infinity;
-    for (let i = fcFrom; i < fcTo; i++) {
-      const { fcMPa, blockStressMPa } = concretes[i]!;
-      const section = { fcMPa, fyMPa: this.fyMPa, widthMm, dMm: leastD };
-      least = Math.min(least, ruleSet.leastSteelMm2(section));
-      const { muNmm } = problem.demand;
-      if (muNmm === null || ruleSet.leastSteelWaiver === null) continue;
-      const needed = requiredSteelMm2(muNmm, ruleSet.tensionControlledReduction, {
-        widthMm,
-        dMm: mostD,
-        blockStressMPa,
-        fyMPa: this.fyMPa,
-        ...this.placement.overhang,
-      });
-      waived = Math.min(waived, ruleSet.leastSteelWaiver * needed);
-    }
-    return Math.min(least, waived);
+    let leastPerMm = Infinity;
+    for (let i = fcFrom; i < fcTo; i++) leastPerMm = Math.min(leastPerMm, this.leastSteelPerMm[i]!);
+    const { muNmm } = problem.demand;
+    const { leastSteelWaiver } = ruleSet;
+    if (muNmm === null || leastSteelWaiver === null) return leastPerMm * leastD;
+    // The stronger the block, the nearer its force lies to the face, and the less steel a moment needs.
+    const { required } = this;
+    required.blockStressMPa = this.extremes.mostBlockStressMPa;
+    required.dMm = mostH * (1 - tension.leastShare) - tension.leastCentroidMm;
+    const needed = requiredSteelMm2(muNmm, ruleSet.tensionControlledReduction, required);
+    return Math.min(leastPerMm * leastD, leastSteelWaiver * needed);
   }
 
   private oriented(
