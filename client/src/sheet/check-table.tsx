@@ -45,7 +45,7 @@ function CheckRow({ check, units, code }: Omit<CheckTableProps, 'checks'> & { re
   const print = (value: number | null) => formatQuantity(value, check.kind, units, { hideUnit: true });
   return (
     <tr>
-      <th scope="row" className="min-w-32">
+      <th scope="row" className="min-w-20 sm:min-w-32">
         <span className="font-medium">
           {name} {symbol !== '' && <span className="text-muted">{symbol}</span>}
         </span>
@@ -61,7 +61,7 @@ function CheckRow({ check, units, code }: Omit<CheckTableProps, 'checks'> & { re
       </th>
       <td className="figure">{print(check.demand)}</td>
       <td className="figure">{print(check.capacity)}</td>
-      <td className="w-[38%] min-w-34">
+      <td className="w-[38%] min-w-33 sm:min-w-34">
         <RatioBar ratio={check.ratio} passes={check.passes} isExact={check.kind === 'count'} />
       </td>
     </tr>

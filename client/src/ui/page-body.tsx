@@ -9,7 +9,9 @@ export function PageBody({
   readonly isNarrow?: boolean;
 }) {
   return (
-    <div className={`mx-auto w-full px-4 py-6 sm:px-6 lg:px-8 ${isNarrow ? 'max-w-3xl' : 'max-w-[90rem]'}`}>
+    <div
+      className={`mx-auto w-full px-4 py-6 sm:px-6 lg:px-8 print:p-0 ${isNarrow ? 'max-w-3xl' : 'max-w-[90rem]'}`}
+    >
       {children}
     </div>
   );

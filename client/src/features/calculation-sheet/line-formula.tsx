@@ -23,7 +23,7 @@ export function LineFormula({ line }: { readonly line: WorkingLine }) {
         <SetFormula tex={tex} />
       </Suspense>
       {remark !== '' && (
-        <span className="block text-2xs text-muted">
+        <span className="block text-2xs text-muted print:ml-2 print:inline">
           <SymbolText runs={textRuns(remark, { isProse: true })} />
         </span>
       )}

@@ -24,7 +24,7 @@ const prose = (text: string) => <SymbolText runs={textRuns(text, { isProse: true
 export function SheetDocument({ sheet, evaluation, standard, reading }: SheetDocumentProps) {
   const { verdict, drawing, inputs, units } = sheet;
   return (
-    <div className="grid min-w-0 grid-cols-[minmax(0,1fr)] gap-7">
+    <div className="dense-print grid min-w-0 grid-cols-[minmax(0,1fr)] gap-7">
       <p className={`font-semibold ${verdict.meets ? 'text-meets' : 'text-fails'}`}>
         <span aria-hidden="true">{verdict.meets ? '✓' : '✕'}</span> {verdict.text}
       </p>
@@ -38,9 +38,9 @@ export function SheetDocument({ sheet, evaluation, standard, reading }: SheetDoc
             units={units}
           />
         </figure>
-        <div className="grid gap-x-10 gap-y-5 md:grid-cols-2 print:grid-cols-2">
+        <div className="gap-x-10 md:columns-2 print:columns-2">
           {inputs.map(({ title, items }) => (
-            <section key={title} className="keep-together">
+            <section key={title} className="break-inside-avoid pb-5 print:pb-2">
               <h2 className="pb-1 font-semibold">{title}</h2>
               <KeyValue items={items.map(({ label, value }) => ({ label: prose(label), value }))} />
             </section>

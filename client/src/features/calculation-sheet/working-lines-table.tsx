@@ -15,7 +15,7 @@ interface WorkingLinesTableProps {
 /** Steps of the working: formula, numbers put in, result, own value, clause. */
 export function WorkingLinesTable({ title, lines, reading }: WorkingLinesTableProps) {
   return (
-    <TableFrame label={title} columnShares={[4, 34, 27, 13, 11, 11]} minWidth="56rem">
+    <TableFrame label={title} columnShares={[4, 31, 32, 12, 10, 11]} minWidth="56rem">
       <thead>
         <tr>
           <th scope="col" className="figure">
