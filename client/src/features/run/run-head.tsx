@@ -27,16 +27,21 @@ function queueWords(position: QueuePosition | null): string {
 
 /** A search by bounds: of the whole space, what is settled, and what is still to be looked into. */
 function searchWords({ evaluated, sectionCount }: ViewProgress, search: SearchProgress): string {
-  const open = sectionCount - evaluated - search.provenUnnecessary;
+  const settled = (evaluated + search.provenUnnecessary) / sectionCount;
+  // Down: not 100 % while groups are open.
+  const percent = Math.floor(settled * 10_000) / 100;
   return (
-    `${formatWhole(evaluated)} evaluated, ${formatNumber(((sectionCount - open) / sectionCount) * 100, 4)} % of ` +
+    `${formatWhole(evaluated)} evaluated, ${formatNumber(percent, 4)} % of ` +
     `${formatWhole(sectionCount)} settled, ${formatWhole(search.boxesOpen)} groups open`
   );
 }
 
 function progressWords(progress: ViewProgress, live: LiveView): string {
   const { perSecond, leftMs } = paceOf(progress, live.perSecond);
-  if (progress.search !== null && progress.state === 'running') return searchWords(progress, progress.search);
+  if (progress.search !== null)
+    return progress.state === 'running'
+      ? searchWords(progress, progress.search)
+      : `The search begins again with the front it had. ${queueWords(live.position)}`;
   const done = `${formatWhole(progress.evaluated)} of ${formatWhole(progress.sectionCount)}`;
   if (progress.state === 'queued')
     return progress.evaluated === 0
