@@ -7,8 +7,8 @@ export interface SectionRange {
 /**
  * Up to here a run is one shard: some 0.3 s on two threads. Handing a shard over, storing it and merging it costs about
  * 20 ms, which a run has no gain from until it takes longer than that by far. Measured: at 2²⁰ runs of two to four million
- * took 1.5 to 1.7 times as long; at 2²⁴ ten million took 0.77, but could not be shared with another machine, and would hold
- * a place among the small runs for a second.
+ * took 1.5 to 1.7 times as long; at 2²⁴ ten million gained no more than two alike differ by, could not be shared with another
+ * machine, and would hold a place among the small runs for a second.
  */
 const LARGEST_SINGLE_SHARD = 2 ** 22;
 /** The first shards of a large run are small, so that its front shows after a tenth of a second. */
