@@ -29,7 +29,7 @@ export function OwnValueCell({
   const own = values.find((value) => value.line === line.id && value.by.id === readerId);
   const shown = ownValueTexts(values, line, units);
   if (!mayWrite && shown.length === 0)
-    return <span className="hidden h-4 border-b border-ink print:block" aria-hidden="true" />;
+    return <span className="hidden h-3 border-b border-ink print:block" aria-hidden="true" />;
   return (
     <>
       {mayWrite && <OwnValueField line={line} reading={reading} saved={own?.value ?? null} />}

@@ -17,7 +17,7 @@ const prose = (text: string) => textRuns(text, { isProse: true });
 /** What holds for every row of a table. */
 export function Remarks({ remarks }: Pick<SheetTable, 'remarks'>) {
   return remarks.map((remark) => (
-    <p key={remark} className="mb-1 max-w-[68rem] text-xs text-muted">
+    <p key={remark} className="mb-1 max-w-[68rem] text-xs text-muted print:mb-0.5 print:max-w-none">
       <SymbolText runs={prose(remark)} />
     </p>
   ));
@@ -84,7 +84,7 @@ function RowCell({ row, text, isFirst, column }: RowCellProps) {
     <Cell scope={isFirst ? 'row' : undefined} className={weight}>
       <SymbolText runs={prose(text)} />
       {isFirst && row.note !== undefined && row.note !== '' && (
-        <span className="block max-w-prose text-2xs font-normal text-muted">
+        <span className="block max-w-prose text-2xs font-normal text-muted print:max-w-none">
           <SymbolText runs={prose(row.note)} />
         </span>
       )}

@@ -112,7 +112,9 @@ function Words({ title, paragraphs, isStrong = false }: WordsProps) {
   return (
     <section className="keep-together">
       <Heading>{title}</Heading>
-      <div className={`grid max-w-[52rem] gap-1 text-sm ${isStrong ? 'font-semibold' : ''}`}>
+      <div
+        className={`grid max-w-[52rem] gap-1 text-sm print:max-w-none print:gap-0.5 ${isStrong ? 'font-semibold' : ''}`}
+      >
         {paragraphs.map((text) => (
           <p key={text}>{prose(text)}</p>
         ))}
