@@ -14,6 +14,7 @@ import { projectMembers } from '../db/schema/project-members.ts';
 import { projects } from '../db/schema/projects.ts';
 import { runViews } from '../db/schema/run-views.ts';
 import { runs } from '../db/schema/runs.ts';
+import { savedViews } from '../db/schema/saved-views.ts';
 import { sweeps } from '../db/schema/sweeps.ts';
 import { sheetValues } from '../db/schema/sheet-values.ts';
 import { labelOf } from '../features/candidates/label.ts';
@@ -22,6 +23,7 @@ import type { DemoRun } from './office.ts';
 import { ownValuesOf } from './own-values.ts';
 import { DEMO_PROJECTS } from './projects.ts';
 import { DEMO_CANDIDATES, type DemoCandidate } from './shortlist.ts';
+import { DEMO_VIEWS } from './saved-views.ts';
 import { DEMO_STANDARDS } from './standards.ts';
 import { stableId } from './stable-id.ts';
 
@@ -55,6 +57,7 @@ export async function writeOffice(
   await writeStandards(tx);
   await writeProjects(tx);
   for (const run of demoRuns) await writeRun(tx, run);
+  await writeSavedViews(tx);
   const pinned = new Map<string, number>();
   for (const candidate of DEMO_CANDIDATES) {
     const run = demoRuns.find(({ sweep }) => sweep.key === candidate.sweep)!;
@@ -145,6 +148,19 @@ async function writeRun(tx: Database, { sweep, definition, basis, views }: DemoR
       createdAt: startedAt,
       startedAt,
       finishedAt: startedAt,
+    })),
+  );
+}
+
+async function writeSavedViews(tx: Database): Promise<void> {
+  await tx.insert(savedViews).values(
+    DEMO_VIEWS.map(({ sweep, name, by, day, address }) => ({
+      ...{ name, address },
+      id: stableId(`saved-view/${sweep}/${name}`),
+      sweepId: sweepId(sweep),
+      runId: runId(sweep),
+      createdBy: personId(by),
+      createdAt: dateOf(day),
     })),
   );
 }

@@ -2,7 +2,14 @@ import fc from 'fast-check';
 import type { Agent } from 'supertest';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { endpoints, type EndpointName } from '#shared/contract/endpoints.ts';
-import { beamInput, designBasis, evaluateInput, priceBook, sweepDefinition } from '../support/factories.ts';
+import {
+  beamInput,
+  designBasis,
+  evaluateInput,
+  officeStandard,
+  priceBook,
+  sweepDefinition,
+} from '../support/factories.ts';
 import { signedIn, type SignedIn } from '../support/signed-in.ts';
 import { useTestService } from '../support/test-service.ts';
 import { createWorld, type World } from '../support/world.ts';
@@ -11,11 +18,14 @@ const service = useTestService();
 let admin: SignedIn;
 let checker: SignedIn;
 let world: World;
+let standardId: string;
 beforeAll(async () => {
   admin = await signedIn(service, 'admin');
   const author = await signedIn(service, 'engineer');
   checker = await signedIn(service, 'checker');
   world = await createWorld(service, author, [admin.person, checker.person]);
+  const standard = { ...officeStandard, name: 'To be damaged' };
+  standardId = (await admin.post('/office-standards', standard).expect(200)).body.id;
 });
 
 /** Stands for a number that JSON can write and a double cannot hold. */
@@ -189,6 +199,16 @@ const TARGETS: Partial<Record<EndpointName, Target>> = {
       filters: { depthMm: { low: 1, high: 2 } },
       bandShare: 0.05,
     }),
+  },
+  createOfficeStandard: { id: () => '', valid: () => officeStandard },
+  updateOfficeStandard: { id: () => standardId, valid: () => officeStandard },
+  createSavedView: {
+    id: () => world.sweep,
+    valid: () => ({ name: 'V', runId: world.run, address: { x: 'depthMm' } }),
+  },
+  updateSavedView: {
+    id: () => world.savedView,
+    valid: () => ({ name: 'V', runId: world.run, address: { x: 'depthMm' } }),
   },
   evaluate: { id: project, valid: () => evaluateInput },
   pinCandidate: {

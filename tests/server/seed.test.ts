@@ -29,6 +29,8 @@ async function digestOf(database: TestDatabase): Promise<string[]> {
     'candidates',
     'candidate_transitions',
     'candidate_comments',
+    'office_standards',
+    'saved_views',
   ];
   const digests: string[] = [];
   for (const table of tables) {
