@@ -9,7 +9,7 @@ import { expandSpace } from './space.ts';
 import { signOf } from './tally.ts';
 
 /** What a search by bounds came to, or had when it was stopped. */
-export interface BoundedOutcome {
+interface BoundedOutcome {
   readonly state: SearchState;
   /** Oriented. */
   readonly found: ChunkResult['front'];

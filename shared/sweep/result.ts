@@ -82,7 +82,7 @@ export interface BoundsProof {
   readonly hasBand: boolean;
 }
 
-export interface AxisCounts {
+interface AxisCounts {
   readonly width: readonly AxisCount[];
   readonly depth: readonly AxisCount[];
   readonly fc: readonly AxisCount[];

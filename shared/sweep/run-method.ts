@@ -10,7 +10,7 @@ export type RunMethod = (typeof RUN_METHODS)[number];
 /** Largest run in which every section is evaluated: about a minute on two threads. */
 export const MAX_SECTIONS_PER_RUN = 200_000_000;
 /** The same where μφ is read off the full curve, were every section to meet the other checks: a curve takes some 40 µs. */
-export const MAX_SECTIONS_WITH_CURVES = 4_000_000;
+const MAX_SECTIONS_WITH_CURVES = 4_000_000;
 /** Largest space searched by bounds. */
 export const MAX_SECTIONS_BY_BOUNDS = 200_000_000_000;
 

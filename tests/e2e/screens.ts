@@ -251,8 +251,8 @@ const SWEEP: readonly Screen[] = [
       'Width b to': '60',
       'Width b by': '0.05',
       'Depth h by': '0.01',
-      'Concrete f′c by': '0.005',
     });
+    for (const counts of await page.getByLabel(/^number of bars/).all()) await counts.fill('2–60');
     await page.getByText(/that one run takes/).waitFor();
   }),
   after('session-ended', ['engineer', NEW_SWEEP], async (page) => {

@@ -69,6 +69,7 @@ function Panels({ run, state }: RunBelowChartProps) {
       {address.panel === 'table' && (
         <SectionTable
           shown={explore.shown}
+          bounds={result.bounds}
           keys={keys}
           source={source}
           reader={reader}

@@ -16,10 +16,10 @@ function evaluatedClaim({ front, evaluated, sectionCount }: ViewResult, isWhole:
 /** The same for a search by bounds: what was evaluated, and what need not have been. */
 function boundsClaim({ front, evaluated, sectionCount, bounds }: ViewResult): string {
   const whole = sections(sectionCount);
-  const looked = `${formatWhole(evaluated)} evaluated`;
+  const looked = evaluated === 0 ? 'none evaluated yet' : `${formatWhole(evaluated)} evaluated`;
   if (bounds?.isProven !== true)
     return front.length === 0
-      ? `${whole}; ${looked}, none of these meets every check; the rest not settled`
+      ? `${whole}; ${looked}${evaluated === 0 ? '' : ', none of these meets every check'}; the rest not settled`
       : `${whole}; ${looked}; front not proven, better ones may be left`;
   return front.length === 0
     ? `${whole}; ${looked}, the rest proven unable to meet every check: none does`

@@ -1,3 +1,4 @@
+import type { BoundsProof } from '#shared/sweep/result.ts';
 import { useVirtualizer } from '@tanstack/react-virtual';
 import { useEffect, useId, useMemo, useRef, type KeyboardEvent } from 'react';
 import { sizeText } from '#shared/print/section-text.ts';
@@ -14,6 +15,8 @@ import type { RunAddressControls } from './use-run-address.ts';
 
 interface SectionTableProps {
   readonly shown: Shown;
+  /** Of a run by bounds. */
+  readonly bounds: BoundsProof | undefined;
   readonly keys: readonly ExploreKey[];
   readonly source: SectionSource;
   readonly reader: MeasureReader;
@@ -189,9 +192,15 @@ function Rows(props: RowsProps) {
   );
 }
 
+/** Why a run by bounds has no near-best band. */
+const noBandWords = ({ isProven }: BoundsProof): string =>
+  isProven
+    ? 'By bounds no band is looked for where many sections share each value of the leading measure.'
+    : 'By bounds the band is known once the search has ended.';
+
 /** The numbers behind the chart, for those who would rather read them, and for screen readers. */
 export function SectionTable(props: SectionTableProps) {
-  const { shown, keys, source, reader, address, selectedIndex } = props;
+  const { shown, bounds, keys, source, reader, address, selectedIndex } = props;
   const { list, find: words, write, select } = address;
   const searchId = useId();
   const all = useMemo(() => allColumns(keys, reader, source.sectionAt(0)), [keys, reader, source]);
@@ -210,7 +219,13 @@ export function SectionTable(props: SectionTableProps) {
   );
   const lists: readonly { readonly value: ListName; readonly label: string }[] = [
     { value: 'front', label: `Front ${shown.listed.length}` },
-    { value: 'band', label: `Near-best band ${shown.isBandCut ? 'over ' : ''}${shown.band.length}` },
+    {
+      value: 'band',
+      label:
+        bounds?.hasBand === false
+          ? 'Near-best band: not found'
+          : `Near-best band ${shown.isBandCut ? 'over ' : ''}${shown.band.length}`,
+    },
   ];
 
   return (
@@ -254,9 +269,11 @@ export function SectionTable(props: SectionTableProps) {
         <p className="py-2 text-sm text-muted">
           {listed.length > 0
             ? 'No section listed has these bars or this size.'
-            : list === 'band' && address.bandShare === 0
-              ? 'The band is 0 % wide: widen it above the chart.'
-              : 'Nothing lies within the ranges set.'}
+            : list === 'band' && bounds?.hasBand === false
+              ? noBandWords(bounds)
+              : list === 'band' && address.bandShare === 0
+                ? 'The band is 0 % wide: widen it above the chart.'
+                : 'Nothing lies within the ranges set.'}
         </p>
       )}
     </section>

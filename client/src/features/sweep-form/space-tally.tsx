@@ -75,7 +75,7 @@ export function SpaceTally({ project, reading, runs, onMethod }: SpaceTallyProps
             {size === null || refusal !== null
               ? '…'
               : isByBounds
-                ? 'seconds, or a few minutes'
+                ? 'seconds to minutes'
                 : timeText(estimatedMs(size, runs, isCurveMeasure(designBasis)))}
           </dd>
         </div>
