@@ -1,15 +1,14 @@
 import { encodeFrame, type CodedColumn } from './feasible-frame.ts';
+import { DESIGN_STRENGTH, MU_PHI } from './kernel-places.ts';
 
 /** Values a column of codes tells apart; beyond them sections are not kept. */
 const MOST_VALUES = 65_536;
 const FIRST_CAPACITY = 1024;
 
-/** What is kept of one section besides its index. */
-export interface KeptSection {
+/** What of a section's steel follows from its depth: its stirrups' spacing as built, and skin steel, kg/m. */
+export interface BuiltSteel {
   spacingMm: number;
   skinKg: number;
-  muPhi: number;
-  designNmm: number;
 }
 
 const grown = <T extends Uint8Array | Uint16Array | Float64Array>(old: T, make: (length: number) => T): T => {
@@ -41,18 +40,19 @@ export class FrameBuilder {
     this.#design = new Float64Array(hasNumbers ? FIRST_CAPACITY : 0);
   }
 
-  add(index: number, { spacingMm, skinKg, muPhi, designNmm }: KeptSection): void {
+  /** `measures`: a row in the order of MEASURE_IDS. */
+  add(index: number, steel: Readonly<BuiltSteel>, measures: Float64Array): void {
     const at = this.count++;
     if (at === 0) this.#from = this.#written = this.#runFirst = this.#runEnd = index;
-    this.#spacings.add(at, spacingMm);
-    this.#skins.add(at, skinKg);
+    this.#spacings.add(at, steel.spacingMm);
+    this.#skins.add(at, steel.skinKg);
     if (this.#hasNumbers) {
       if (at === this.#muPhi.length) {
         this.#muPhi = grown(this.#muPhi, (length) => new Float64Array(length));
         this.#design = grown(this.#design, (length) => new Float64Array(length));
       }
-      this.#muPhi[at] = muPhi;
-      this.#design[at] = designNmm;
+      this.#muPhi[at] = measures[MU_PHI]!;
+      this.#design[at] = measures[DESIGN_STRENGTH]!;
     }
     if (index === this.#runEnd) {
       this.#runEnd++;

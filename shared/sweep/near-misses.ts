@@ -31,12 +31,21 @@ const take = (to: NearMisses, place: number, index: number, row: ArrayLike<numbe
   to.rows.set(row, place * MEASURES);
 };
 
-/** A section that fails exactly the check of this bit and has numbers. Indices arrive ascending. */
-export function offerNearMiss(to: NearMisses, bit: number, index: number, measures: Float64Array): void {
-  for (let i = 0, place = bit * MEASURES; i < MEASURES; i++, place++) {
-    const value = SIGNS[i]! * measures[i]!;
-    if (to.indices[place] === -1 ? value === value : value < valueAt(to, place))
-      take(to, place, index, measures);
+/** Gathers near misses as the hot loop finds them, by ascending index. */
+export class NearMissBuilder {
+  readonly found = noNearMisses();
+  /** Oriented best of each place; NaN for none, which nothing compares with. */
+  readonly #best = new Float64Array(CHECKS * MEASURES).fill(NaN);
+
+  /** A section that fails exactly the check of this bit and has numbers. */
+  offer(bit: number, index: number, measures: Float64Array): void {
+    const best = this.#best;
+    for (let i = 0, place = bit * MEASURES; i < MEASURES; i++, place++) {
+      const value = SIGNS[i]! * measures[i]!;
+      if (value >= best[place]! || value !== value) continue;
+      best[place] = value;
+      take(this.found, place, index, measures);
+    }
   }
 }
 

@@ -3,6 +3,7 @@ import type { Rates } from '../engine/section.ts';
 import { amountsOfRow, pricingsOf, rowDigits, type AmountTables } from './amount-tables.ts';
 import type { ChunkResult } from './chunk.ts';
 import { forEachRun, type FeasibleFrame } from './feasible-frame.ts';
+import type { BuiltSteel } from './frame-builder.ts';
 import { writeAmounts } from './kernel-amounts.ts';
 import { DESIGN_STRENGTH, MU_PHI, UTILISATION } from './kernel-places.ts';
 import type { View } from './problem.ts';
@@ -19,11 +20,6 @@ export const isSolved = (measure: MeasureId): boolean => SOLVED.includes(measure
 export interface RankWitness {
   beginRow(rowNumber: number): void;
   see(index: number, depthMm: number, steel: BuiltSteel, measures: Float64Array): void;
-}
-
-export interface BuiltSteel {
-  spacingMm: number;
-  skinKg: number;
 }
 
 export interface Ranking {

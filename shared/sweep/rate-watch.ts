@@ -4,7 +4,8 @@ import { amountsOfRow, pricingsOf, rowDigits, type AmountTables } from './amount
 import { BAND_SHARE } from './band.ts';
 import { writeAmounts, type RowAmounts } from './kernel-amounts.ts';
 import type { View } from './problem.ts';
-import type { BuiltSteel, RankWitness } from './rank-frames.ts';
+import type { BuiltSteel } from './frame-builder.ts';
+import { isSolved, type RankWitness } from './rank-frames.ts';
 import { signOf } from './tally.ts';
 
 /** Oriented measures of a view: less is better. */
@@ -29,19 +30,29 @@ export class RateWatch implements RankWitness {
   count = 0;
   readonly #tables: AmountTables;
   readonly #pricings: ReturnType<typeof pricingsOf>;
-  readonly #places: readonly [number, number];
-  readonly #signs: readonly [number, number];
+  readonly #xAt: number;
+  readonly #yAt: number;
+  readonly #xSign: number;
+  readonly #ySign: number;
+  /** Whether each measure of the view is no amount, and so the same at any rates. */
+  readonly #isXSolved: boolean;
+  readonly #isYSolved: boolean;
   readonly #measures = new Float64Array(MEASURE_IDS.length);
   #amounts: RowAmounts | null = null;
   #near: Float64Array<ArrayBuffer>;
   #best = Infinity;
+  #leadingX = Infinity;
 
   /** `rates`: the other ones; `most`: sections to come. */
   constructor(tables: AmountTables, { x, y }: View, { rates, most }: { rates: Rates | null; most: number }) {
     this.#tables = tables;
+    this.#isXSolved = isSolved(x);
+    this.#isYSolved = isSolved(y);
     this.#pricings = pricingsOf(tables, rates);
-    this.#places = [MEASURE_IDS.indexOf(x), MEASURE_IDS.indexOf(y)];
-    this.#signs = [signOf(x), signOf(y)];
+    this.#xAt = MEASURE_IDS.indexOf(x);
+    this.#yAt = MEASURE_IDS.indexOf(y);
+    this.#xSign = signOf(x);
+    this.#ySign = signOf(y);
     this.#near = new Float64Array(most);
   }
 
@@ -51,17 +62,19 @@ export class RateWatch implements RankWitness {
   }
 
   see(index: number, depthMm: number, steel: BuiltSteel, asked: Float64Array): void {
-    const [xAt, yAt] = this.#places;
-    const [xSign, ySign] = this.#signs;
-    const x = xSign * asked[xAt]!;
+    const x = this.#xSign * asked[this.#xAt]!;
+    const y = this.#ySign * asked[this.#yAt]!;
+    if (y !== y) return;
     this.#near[this.count++] = x;
     if (x < this.#best) this.#best = x;
     const measures = this.#measures;
-    measures.set(asked);
     writeAmounts(this.#amounts!, depthMm, steel, measures);
-    const own = { x: xSign * measures[xAt]!, y: ySign * measures[yAt]! };
-    if (own.x !== own.x || own.y !== own.y || !isAhead(own, index, this.winner)) return;
-    this.winner = { index, own, asked: { x, y: ySign * asked[yAt]! } };
+    const ownX = this.#xSign * (this.#isXSolved ? asked : measures)[this.#xAt]!;
+    if (!(ownX <= this.#leadingX)) return;
+    const own = { x: ownX, y: this.#ySign * (this.#isYSolved ? asked : measures)[this.#yAt]! };
+    if (own.y !== own.y || !isAhead(own, index, this.winner)) return;
+    this.#leadingX = ownX;
+    this.winner = { index, own, asked: { x, y } };
   }
 
   /** Oriented leading values within the widest band of the best. */

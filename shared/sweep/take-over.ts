@@ -2,7 +2,8 @@ import { MEASURE_IDS } from '../engine/measures.ts';
 import type { ChunkResult } from './chunk.ts';
 import { emptyChunk } from './chunk.ts';
 import { forEachRun, type FeasibleFrame } from './feasible-frame.ts';
-import { FrameBuilder, type KeptSection } from './frame-builder.ts';
+import { FrameBuilder, type BuiltSteel } from './frame-builder.ts';
+import { DESIGN_STRENGTH, MU_PHI } from './kernel-places.ts';
 import type { Space } from './problem.ts';
 import { renumbering, type Widening } from './widening.ts';
 
@@ -15,17 +16,18 @@ export function takeOverFrame(
   const indexOf = renumbering(widening, wide);
   const { numbers, spacingsMm, skinsKg } = frame;
   const builder = new FrameBuilder(numbers !== null);
-  const section: KeptSection = { spacingMm: 0, skinKg: 0, muPhi: NaN, designNmm: NaN };
+  const steel: BuiltSteel = { spacingMm: 0, skinKg: 0 };
+  const measures = new Float64Array(MEASURE_IDS.length).fill(NaN);
   forEachRun(frame, (first, length, at) => {
     for (let i = 0; i < length; i++) {
       const place = at + i;
-      section.spacingMm = spacingsMm.values[spacingsMm.codes?.[place] ?? 0]!;
-      section.skinKg = skinsKg.values[skinsKg.codes?.[place] ?? 0]!;
+      steel.spacingMm = spacingsMm.values[spacingsMm.codes?.[place] ?? 0]!;
+      steel.skinKg = skinsKg.values[skinsKg.codes?.[place] ?? 0]!;
       if (numbers !== null) {
-        section.muPhi = numbers.muPhi[place]!;
-        section.designNmm = numbers.design[place]!;
+        measures[MU_PHI] = numbers.muPhi[place]!;
+        measures[DESIGN_STRENGTH] = numbers.design[place]!;
       }
-      builder.add(indexOf(first + i), section);
+      builder.add(indexOf(first + i), steel, measures);
     }
   });
   return builder.finish();

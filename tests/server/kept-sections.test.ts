@@ -16,7 +16,13 @@ import { runs } from '#server/db/schema/runs.ts';
 import { sweeps } from '#server/db/schema/sweeps.ts';
 import { takenSections } from '#server/db/schema/taken-sections.ts';
 import { isKeptWhole, keepSections, makeRoom } from '#server/jobs/kept-sections.ts';
-import { addProject, PRICE_BOOK, SMALL_SWEEP, type OfficeProject } from '../support/office-project.ts';
+import {
+  addProject,
+  PRICE_BOOK,
+  scaledSweep,
+  SMALL_SWEEP,
+  type OfficeProject,
+} from '../support/office-project.ts';
 import { followRun, hasEnded } from '../support/run-stream.ts';
 import type { TestOffice } from '../support/office.ts';
 import type { SignedIn } from '../support/signed-in.ts';
@@ -126,6 +132,32 @@ describe('what a run keeps', () => {
     expect(await db.select().from(keptSections).where(mine)).toEqual([before]);
     await expect(db.update(keptSections).set({ feasible: 0 }).where(mine)).rejects.toThrow();
   });
+
+  test('is whole and without overlaps after a cancel in the middle and a resume', async () => {
+    const { db } = office.deps;
+    // Over 2²² sections: several shards.
+    const sweepId = await project.addSweep(scaledSweep(120, 370));
+    const { body: run } = await engineer.post(`/sweeps/${sweepId}/runs`).expect(200);
+    const stream = await followRun(office, engineer, { runId: run.id });
+    await stream.until(({ progress }) => progress.evaluated > 0);
+    await engineer.post(`/runs/${run.id}/cancel`).expect(200);
+    await stream.until(hasEnded);
+    stream.close();
+    await engineer.post(`/runs/${run.id}/resume`).expect(200);
+    await until(run, ({ state }) => state === 'finished');
+    await expect.poll(() => isKeptWhole(db, run.id), { timeout: 10_000 }).toBe(true);
+    const pieces = await db
+      .select({ from: keptSections.fromPlace, to: keptSections.toPlace })
+      .from(keptSections)
+      .where(eq(keptSections.runId, run.id))
+      .orderBy(keptSections.fromPlace);
+    expect(pieces.length).toBeGreaterThan(1);
+    expect(pieces.map(({ to }) => to)).toEqual([
+      ...pieces.slice(1).map(({ from }) => from),
+      run.sectionCount,
+    ]);
+    expect((await openView(run, COST_AND_DEPTH)).result!.hash).toBe(sweepAtOnce(run, COST_AND_DEPTH).hash);
+  }, 60_000);
 
   test('makes room, the oldest first, but not where a run that is not done takes it over', async () => {
     const { db } = office.deps;
