@@ -4,7 +4,7 @@ import { openSweep } from '#shared/sweep/sweep-range.ts';
 import { AddedSections, type Widening } from '#shared/sweep/widening.ts';
 import type { SweepReply, SweepTask } from './protocol.ts';
 
-/** Sections between two looks at the cancel flag: some 7 ms at 5 million sections a second. */
+/** Sections between two looks at the cancel flag: some 3 ms at 10 million sections a second. */
 const BATCH_SECTIONS = 2 ** 15;
 /** As many runs as are computed side by side (see the queue's concurrency), so that taking turns prepares nothing twice. */
 const MAX_PREPARED = 8;

@@ -113,7 +113,14 @@ export class KernelDetailing {
     const { ruleSet, skin } = this.prepared;
     const { placement, tension, compression, fyMPa } = combination;
     const { given, stirrupBar, coverMm, widthMm } = placement;
+    const last = this.combination;
     this.combination = combination;
+    const isSameSteel =
+      last !== null && last.tension === tension && last.compression === compression && last.fyMPa === fyMPa;
+    if (isSameSteel) {
+      this.beginDeflection(combination);
+      return;
+    }
     this.isDesigned = given?.isDesigned === true;
     this.at.asMm2 = tension.areaMm2;
     this.givenSpacingMm = given?.spacingMm ?? Infinity;
@@ -215,12 +222,12 @@ export class KernelDetailing {
     const { placedMask } = this;
     const { masks, spacingMm, skinKg } = this.columns;
     if (placedMask !== 0) for (let j = from; j < to; j++) masks[j]! |= placedMask;
-    if (this.prepared.deep === null) skinKg.fill(0, from, to);
+    if (this.prepared.deep === null) for (let j = from; j < to; j++) skinKg[j] = 0;
     else this.addSkin(this.prepared.deep, from, to);
     if (this.spanToDepth !== null) this.addDeflection(this.spanToDepth, from, to);
     if (this.isDesigned) this.addDesign(from, to);
     else {
-      spacingMm.fill(this.givenSpacingMm, from, to);
+      for (let j = from; j < to; j++) spacingMm[j] = this.givenSpacingMm;
       if (this.vuN === this.vuN) this.addGiven(from, to);
     }
     if (this.hasHoopLimit) this.addHoops(from, to);

@@ -88,7 +88,8 @@ export class KernelFlexure {
     }
     layers.n = nc + nt;
     layers.compressionCount = nc;
-    this.state.above = -1;
+    // the layers above the last row's axis are mostly those above this one's
+    if (this.state.above >= 0) this.setAbove(Math.min(this.state.above, nc));
   }
 
   /** The layers of the section at place j, into `layers`. */
@@ -166,8 +167,11 @@ export class KernelFlexure {
     const { tension, compression } = this.combination!;
     const { h, c, nominal } = this.columns;
     const { axisMm } = this.axis;
-    c.fill(axisMm, from, to);
-    nominal.fill(this.momentOf(axisMm, compression.layerCount), from, to);
+    const ofCompression = this.momentOf(axisMm, compression.layerCount);
+    for (let j = from; j < to; j++) {
+      c[j] = axisMm;
+      nominal[j] = ofCompression;
+    }
     for (let i = tension.layerCount - 1; i >= 0; i--) {
       const forceN = tension.areas[i]! * this.ultimate.fyMPa;
       const offsetMm = tension.offsets[i]!;
@@ -215,13 +219,19 @@ export class KernelFlexure {
     }
   }
 
-  /** Fixes the layers above a cracked axis at `kd` for the sections that follow; none where a tension layer is one. */
+  /** Fixes the layers above a cracked axis at `kd` for the sections that follow. */
   private countAbove(kd: number): void {
+    const { depths, n } = this.layers;
+    let above = 0;
+    while (above < n && depths[above]! < kd) above++;
+    this.setAbove(above);
+  }
+
+  /** The sums and bounds of an axis below so many layers; none where one of them is a tension layer. */
+  private setAbove(above: number): void {
     const { state, transformedMm2 } = this;
     const { depths, areas, n, compressionCount } = this.layers;
     const { modularRatio, ratioAbove } = this.cracked;
-    let above = 0;
-    while (above < n && depths[above]! < kd) above++;
     state.above = above <= compressionCount ? above : -1;
     state.low = above > 0 ? depths[above - 1]! * (1 + MARGIN) : 0;
     state.high = above < compressionCount ? depths[above]! * (1 - MARGIN) : Infinity;
