@@ -35,9 +35,9 @@ export function exploreLabel(key: ExploreKey, { units, currency, code }: Measure
   return { name, symbol, kind, unit: kind === 'money-per-length' ? `${currency ?? ''}${unit}` : unit };
 }
 
-/** `Depth h`, and `Steel` where the symbol is the name. */
+/** `Depth h`, and `Steel` or `Clear cover` where the symbol is the name or its last word. */
 export const exploreTitle = ({ name, symbol }: Pick<ExploreLabel, 'name' | 'symbol'>): string =>
-  name === symbol ? name : `${name} ${symbol}`;
+  name === symbol || name.endsWith(` ${symbol}`) ? name : `${name} ${symbol}`;
 
 /** The value with its unit, as in `24 in` and `72.7 USD/ft`. */
 export function exploreText(key: ExploreKey, value: number | null, reader: MeasureReader): string {

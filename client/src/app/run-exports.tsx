@@ -85,7 +85,7 @@ function captionOf({ run, project, state }: RunExportsProps): string[] {
   const part = progress !== null && progress.state !== 'finished' ? `, ${progress.state}` : '';
   return [
     `${project.name} (${project.number}) · ${run.beam.mark} ${run.beam.location} · ${run.sweepName}, run ${run.number}`,
-    `${formatWhole(progress?.evaluated ?? 0)} of ${formatWhole(run.sectionCount)} sections evaluated${part} · hash ${hash.slice(0, 16)} · engine ${run.engineVersion} · ${ruleSetLabel(run.basis.ruleSet)}`,
+    `${formatWhole(progress?.evaluated ?? 0)} of ${formatWhole(run.sectionCount)} sections evaluated${part} · hash ${hash} · engine ${run.engineVersion} · ${ruleSetLabel(run.basis.ruleSet)}`,
     ...(shown.length === 0 ? [] : [`Shown: ${shown.join('; ')}`]),
     'Each section drawn meets the listed checks. A licensed engineer verifies the design under the codes that apply.',
   ];
@@ -93,8 +93,9 @@ function captionOf({ run, project, state }: RunExportsProps): string[] {
 
 function chartGroup(props: RunExportsProps): ExportGroup {
   const { run, project, picture, state } = props;
+  const measures = [state.view.y, state.view.x].map((measure) => exploreLabel(measure, state.reader).name);
   const name = (extension: string) =>
-    fileName([project.number, run.beam.mark, 'run', run.number, state.view.y, state.view.x], extension);
+    fileName([project.number, run.beam.mark, 'run', run.number, ...measures], extension);
   const drawn = () => {
     if (picture.current === null) throw new Error('There is no chart yet');
     return picture.current;

@@ -131,7 +131,9 @@ export function RunWorkspace({ run, project }: RunWorkspaceProps) {
             reader={reader}
           />
         )}
-        <RatesBar ranked={state.ranked} address={address} reader={reader} />
+        <div className={address.rates === null ? 'print:hidden' : undefined}>
+          <RatesBar ranked={state.ranked} address={address} reader={reader} />
+        </div>
         <FrontPanel
           run={state.ranked.run}
           view={view}

@@ -45,7 +45,7 @@ export function ButtonLink({
   ...rest
 }: LinkProps & { readonly look?: ButtonLook }) {
   const hover = LOOK[look].replaceAll('hover:enabled:', 'hover:');
-  return <Link {...rest} className={classNames(base, hover, className)} />;
+  return <Link {...rest} className={classNames(base, hover, 'print:hidden', className)} />;
 }
 
 /** A link that looks like a button, to a file that the service hands over. */

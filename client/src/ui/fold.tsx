@@ -8,12 +8,12 @@ interface FoldProps {
   readonly children: ReactNode;
 }
 
-/** A part that can be folded away; what is inside is made when it is opened first, and kept from then on. */
+/** A part that can be folded away; what is inside is made when it is opened first, and kept from then on. Paper has what is open. */
 export function Fold({ title, note, isOpen = false, children }: FoldProps) {
   const [wasOpened, setOpened] = useState(isOpen);
   return (
     <details
-      className="border-t border-ink"
+      className="border-t border-ink print:not-open:hidden"
       open={isOpen}
       onToggle={(event) => setOpened((was) => was || event.currentTarget.open)}
     >

@@ -87,7 +87,7 @@ function StripCell(props: CellProps) {
         aria-pressed={isChosen}
         tabIndex={props.isStop ? 0 : -1}
         onClick={() => onSelect(point.index)}
-        className="flex w-full flex-col items-center -outline-offset-2"
+        className="on-paper flex w-full flex-col items-center -outline-offset-2"
         style={{ paddingTop: HEAD_PX }}
       >
         <SectionDrawing

@@ -169,7 +169,7 @@ function Rows(props: RowsProps) {
                         type="button"
                         data-row={at}
                         tabIndex={at === stop ? 0 : -1}
-                        className={isChosen ? 'font-semibold' : 'underline decoration-rule'}
+                        className={isChosen ? 'on-paper font-semibold' : 'on-paper underline decoration-rule'}
                         aria-label={`Look at ${sizeText(row.section, reader.units)}`}
                         onClick={() => onSelect(row.index)}
                       >
