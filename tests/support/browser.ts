@@ -2,8 +2,9 @@ import { type APIResponse, type Browser, type BrowserContext, chromium, type Pag
 import type { Role } from '#shared/contract/records.ts';
 import { findChromium } from '#server/cli/chromium.mjs';
 import { DEMO_ACCOUNTS, DEMO_PASSWORD } from '#server/cli/demo-accounts.mjs';
+import { stableId } from '#server/demo/stable-id.ts';
 
-const FLAGS = [
+export const CHROMIUM_FLAGS = [
   '--no-sandbox',
   '--disable-gpu',
   '--disable-quic',
@@ -19,7 +20,7 @@ const PATIENCE_MS = 15_000;
 export async function launchChromium(): Promise<Browser> {
   const executablePath = findChromium();
   if (executablePath === undefined) throw new Error('There is no chromium on the PATH');
-  return chromium.launch({ executablePath, args: FLAGS });
+  return chromium.launch({ executablePath, args: CHROMIUM_FLAGS });
 }
 
 /** A browser profile: one person's cookies and cache at one machine. */
@@ -29,10 +30,22 @@ export async function openProfile(browser: Browser, origin: string): Promise<Bro
     viewport: { width: 1440, height: 900 },
     reducedMotion: 'reduce',
   });
+  await furnish(context);
+  return context;
+}
+
+/** What every profile of the tests and benches has, however it was opened. */
+export async function furnish(context: BrowserContext): Promise<void> {
   context.setDefaultTimeout(PATIENCE_MS);
   // Outside of the tests tsx names functions by a helper of its own, which code handed to a page does not find there.
   await context.addInitScript('globalThis.__name = (named) => named;');
-  return context;
+  // The first steps come up once for each person; here everybody has seen them.
+  const people = DEMO_ACCOUNTS.map(({ role }) => stableId(`person/${role}`));
+  await context.addInitScript((ids) => {
+    // An empty page keeps nothing and says so.
+    if (location.protocol === 'about:') return;
+    for (const id of ids) localStorage.setItem(`fairweight.first-steps.${id}`, 'seen');
+  }, people);
 }
 
 /** One window of a profile, and whatever the browser complained of in it. */

@@ -1,6 +1,7 @@
-import { lazy, Suspense, useState } from 'react';
+import { lazy, Suspense, useCallback, useMemo, useState } from 'react';
 import { Link, Outlet, ScrollRestoration, useNavigation } from 'react-router-dom';
 import { CrumbsContext } from '#client/src/lib/crumbs-context.ts';
+import { hasSeenFirstSteps, rememberFirstSteps } from '#client/src/lib/first-steps-seen.ts';
 import { paths } from '#client/src/lib/paths.ts';
 import { useReader } from '#client/src/lib/reader-context.ts';
 import { Wordmark } from '#client/src/ui/wordmark.tsx';
@@ -12,13 +13,40 @@ const AccountMenu = lazy(async () => ({
   default: (await import('#client/src/features/session/account-menu.tsx')).AccountMenu,
 }));
 
+const CommandPalette = lazy(async () => ({
+  default: (await import('./command-palette.tsx')).CommandPalette,
+}));
+const FirstSteps = lazy(async () => ({ default: (await import('./first-steps.tsx')).FirstSteps }));
+
+/** What lies over the page: at most one dialog, and the first steps beside it. */
+function useOverlays(personId: string) {
+  const [dialog, setDialog] = useState<'help' | 'palette' | null>(null);
+  const [areStepsOpen, setStepsOpen] = useState(() => !hasSeenFirstSteps(personId));
+  const close = useCallback(() => setDialog(null), []);
+  const openHelp = useCallback(() => setDialog('help'), []);
+  const openPalette = useCallback(() => setDialog('palette'), []);
+  const openSteps = useCallback(() => setStepsOpen(true), []);
+  const closeSteps = useCallback(() => {
+    rememberFirstSteps(personId);
+    setStepsOpen(false);
+  }, [personId]);
+  return { dialog, areStepsOpen, close, openHelp, openPalette, openSteps, closeSteps };
+}
+
 /** The top bar on every page of the office: name, trail, person. The page fills what is below. */
 export function AppShell() {
   const [crumbsSlot, setCrumbsSlot] = useState<HTMLElement | null>(null);
   const reader = useReader();
-  const [isHelpOpen, setHelpOpen] = useState(false);
+  const { dialog, areStepsOpen, ...overlays } = useOverlays(reader.id);
   const isArriving = useNavigation().state === 'loading';
-  useShortcuts(() => setHelpOpen(true));
+  useShortcuts(overlays.openHelp, overlays.openPalette);
+  const everywhere = useMemo(
+    () => [
+      { name: 'Keyboard shortcuts', key: '?', act: overlays.openHelp },
+      { name: 'First steps', act: overlays.openSteps },
+    ],
+    [overlays.openHelp, overlays.openSteps],
+  );
   return (
     <CrumbsContext value={crumbsSlot}>
       <div className="flex min-h-dvh flex-col">
@@ -40,7 +68,11 @@ export function AppShell() {
           </nav>
           <span className="ml-auto" />
           <Suspense fallback={<span className="px-1">{reader.name}</span>}>
-            <AccountMenu onShortcuts={() => setHelpOpen(true)} />
+            <AccountMenu
+              onPalette={overlays.openPalette}
+              onShortcuts={overlays.openHelp}
+              onFirstSteps={overlays.openSteps}
+            />
           </Suspense>
           {isArriving && <span className="arriving" aria-hidden="true" />}
         </header>
@@ -48,7 +80,11 @@ export function AppShell() {
           <Outlet />
         </main>
       </div>
-      <ShortcutsDialog isOpen={isHelpOpen} onClose={() => setHelpOpen(false)} />
+      <ShortcutsDialog isOpen={dialog === 'help'} onClose={overlays.close} />
+      <Suspense fallback={null}>
+        {areStepsOpen && <FirstSteps onClose={overlays.closeSteps} />}
+        {dialog === 'palette' && <CommandPalette onClose={overlays.close} everywhere={everywhere} />}
+      </Suspense>
       <ScrollRestoration />
     </CrumbsContext>
   );

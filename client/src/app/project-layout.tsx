@@ -3,6 +3,7 @@ import { Outlet, useLocation } from 'react-router-dom';
 import { RenameProjectDialog } from '#client/src/features/projects/rename-project-dialog.tsx';
 import { ruleSetLabel } from '#shared/print/basis-labels.ts';
 import { formatQuantity } from '#shared/print/format-quantity.ts';
+import { usePageActions } from '#client/src/lib/page-actions.ts';
 import { paths, PROJECT_TABS, type ProjectTab } from '#client/src/lib/paths.ts';
 import { useProject } from '#client/src/lib/project-context.ts';
 import { useMay } from '#client/src/lib/reader-context.ts';
@@ -27,6 +28,7 @@ export function ProjectLayout() {
   const { pathname } = useLocation();
   const [isRenaming, setRenaming] = useState(false);
   const mayEdit = useMay('edit-basis');
+  usePageActions(mayEdit ? [{ name: 'Name and number of the project', act: () => setRenaming(true) }] : []);
   const { designBasis: basis } = project;
   const tab = PROJECT_TABS.find((name) => pathname.endsWith(`/${name}`)) ?? 'beams';
   const counts: Partial<Record<ProjectTab, number>> = {

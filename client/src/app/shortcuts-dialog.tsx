@@ -8,6 +8,7 @@ interface Shortcut {
 }
 
 const EVERYWHERE: readonly Shortcut[] = [
+  { keys: ['Ctrl', 'K'], name: 'Go to anything by name, or do it (⌘ K)' },
   ...GO_TO.map(({ key, name }) => ({ keys: ['g', key], name })),
   { keys: ['?'], name: 'This list' },
   { keys: ['Esc'], name: 'Close a dialog' },

@@ -1,5 +1,6 @@
 import { useEffect, useRef } from 'react';
 import type { FrontPoint } from '#shared/sweep/result.ts';
+import { usePageActions } from '#client/src/lib/page-actions.ts';
 
 /** Keys of a run's page, as the list under "?" names them. */
 export const RUN_KEYS: readonly { readonly keys: readonly string[]; readonly name: string }[] = [
@@ -36,6 +37,13 @@ function act({ front, selectedIndex, onSelect, onPin }: RunShortcuts, key: strin
 
 /** Keys that act wherever one is on the page and is not typing. */
 export function useRunShortcuts(shortcuts: RunShortcuts): void {
+  usePageActions([
+    ...(shortcuts.onPin === null || shortcuts.selectedIndex === null
+      ? []
+      : [{ name: 'Pin the chosen section', key: 'p', act: () => act(shortcuts, 'p') }]),
+    { name: 'Next section of the front', key: ']', act: () => act(shortcuts, ']') },
+    { name: 'Previous section of the front', key: '[', act: () => act(shortcuts, '[') },
+  ]);
   const latest = useRef(shortcuts);
   useEffect(() => {
     latest.current = shortcuts;

@@ -22,14 +22,23 @@ const isTyping = (target: EventTarget | null): boolean =>
   target instanceof HTMLElement &&
   (target.isContentEditable || ['INPUT', 'TEXTAREA', 'SELECT'].includes(target.tagName));
 
-export function useShortcuts(openHelp: () => void): void {
+/** Ctrl K, or ⌘ K, also while a field is being typed in: nothing else is written by it. */
+const isPaletteKey = ({ key, ctrlKey, metaKey, altKey, shiftKey }: KeyboardEvent): boolean =>
+  key.toLowerCase() === 'k' && (ctrlKey || metaKey) && !altKey && !shiftKey;
+
+export function useShortcuts(openHelp: () => void, openPalette: () => void): void {
   const navigate = useNavigate();
   const { projectId } = useParams();
   useEffect(() => {
     let wentAt = Number.NEGATIVE_INFINITY;
     const onKey = (event: KeyboardEvent) => {
-      if (event.ctrlKey || event.metaKey || event.altKey || isTyping(event.target)) return;
-      if (document.querySelector('[role="dialog"]') !== null) return;
+      const isInDialog = document.querySelector('[role="dialog"]') !== null;
+      if (isPaletteKey(event)) {
+        event.preventDefault();
+        if (!isInDialog) openPalette();
+        return;
+      }
+      if (event.ctrlKey || event.metaKey || event.altKey || isTyping(event.target) || isInDialog) return;
       if (event.key === '?') openHelp();
       else if (event.key === 'g') wentAt = event.timeStamp;
       else if (event.timeStamp - wentAt < SECOND_KEY_WITHIN_MS) {
@@ -43,5 +52,5 @@ export function useShortcuts(openHelp: () => void): void {
     };
     window.addEventListener('keydown', onKey);
     return () => window.removeEventListener('keydown', onKey);
-  }, [navigate, openHelp, projectId]);
+  }, [navigate, openHelp, openPalette, projectId]);
 }

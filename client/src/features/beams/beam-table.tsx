@@ -1,3 +1,4 @@
+import { useLocation } from 'react-router-dom';
 import type { UnitSystem } from '#shared/contract/design-basis.ts';
 import type { Beam } from '#shared/contract/records.ts';
 import { formatQuantity } from '#shared/print/format-quantity.ts';
@@ -34,8 +35,12 @@ const figuresOf = ({ moment, shear }: CodeSymbols): readonly Figure[] => [
   { head: 'Candidates', kind: 'count', of: (beam) => beam.candidateCount },
 ];
 
+/** A beam that was gone to by name. */
+const showRow = (row: HTMLTableRowElement | null) => row?.scrollIntoView({ block: 'center' });
+
 export function BeamTable({ beams, units, symbols, onEdit, onDelete, mayEdit, maySweep }: BeamTableProps) {
   const figures = figuresOf(symbols);
+  const { hash } = useLocation();
   return (
     <TableFrame label="Beams">
       <thead>
@@ -56,7 +61,12 @@ export function BeamTable({ beams, units, symbols, onEdit, onDelete, mayEdit, ma
       </thead>
       <tbody>
         {beams.map((beam) => (
-          <tr key={beam.id} className="hover:bg-sheet">
+          <tr
+            key={beam.id}
+            ref={hash === `#beam-${beam.id}` ? showRow : undefined}
+            className="hover:bg-sheet aria-[current]:bg-sheet"
+            aria-current={hash === `#beam-${beam.id}` || undefined}
+          >
             <th scope="row" className="font-semibold whitespace-nowrap">
               {beam.mark}
             </th>

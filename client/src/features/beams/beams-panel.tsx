@@ -2,6 +2,7 @@ import { useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import { codeSymbols } from '#shared/print/code-symbols.ts';
 import type { Beam } from '#shared/contract/records.ts';
+import { usePageActions } from '#client/src/lib/page-actions.ts';
 import { useProject } from '#client/src/lib/project-context.ts';
 import { useMay } from '#client/src/lib/reader-context.ts';
 import { Button } from '#client/src/ui/button.tsx';
@@ -20,6 +21,7 @@ export function BeamsPanel() {
   const maySweep = useMay('run-sweeps');
   const [edited, setEdited] = useState<Beam | 'new' | null>(null);
   const [doomed, setDoomed] = useState<Beam | null>(null);
+  usePageActions(mayEdit ? [{ name: 'Add a beam', act: () => setEdited('new') }] : []);
   const addButton = mayEdit ? (
     <Button look="solid" onClick={() => setEdited('new')}>
       Add a beam

@@ -18,8 +18,14 @@ const THEME_NAME: Readonly<Record<Theme, string>> = {
 const item =
   'flex cursor-pointer items-center gap-2 px-3 py-1.5 outline-none data-highlighted:bg-concrete data-highlighted:text-ink';
 
+interface AccountMenuProps {
+  readonly onPalette: () => void;
+  readonly onShortcuts: () => void;
+  readonly onFirstSteps: () => void;
+}
+
 /** Who is signed in, the page's light, and the way out. */
-export function AccountMenu({ onShortcuts }: { readonly onShortcuts: () => void }) {
+export function AccountMenu({ onPalette, onShortcuts, onFirstSteps }: AccountMenuProps) {
   const reader = useReader();
   const signOut = useSignOut();
   const [theme, setChosen] = useState(currentTheme);
@@ -72,6 +78,13 @@ export function AccountMenu({ onShortcuts }: { readonly onShortcuts: () => void 
             <Link to={paths.operations()}>Workers and queue</Link>
           </DropdownMenu.Item>
         )}
+        <DropdownMenu.Item className={item} onSelect={onPalette}>
+          Go to, or do
+          <kbd className="num ml-auto text-muted">Ctrl K</kbd>
+        </DropdownMenu.Item>
+        <DropdownMenu.Item className={item} onSelect={onFirstSteps}>
+          First steps
+        </DropdownMenu.Item>
         <DropdownMenu.Item className={item} onSelect={onShortcuts}>
           Keyboard shortcuts
           <kbd className="num ml-auto text-muted">?</kbd>

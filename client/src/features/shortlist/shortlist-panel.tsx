@@ -1,6 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import type { Candidate } from '#shared/contract/records.ts';
+import { usePageActions } from '#client/src/lib/page-actions.ts';
 import { paths } from '#client/src/lib/paths.ts';
 import { useProject } from '#client/src/lib/project-context.ts';
 import { useMay } from '#client/src/lib/reader-context.ts';
@@ -50,6 +51,7 @@ function Shortlist({ candidates }: { readonly candidates: readonly Candidate[] }
   const hasMoney = useMay('see-rates');
   const mayShare = useMay('share');
   const [isSharing, setSharing] = useState(false);
+  usePageActions(mayShare ? [{ name: 'Share the shortlist', act: () => setSharing(true) }] : []);
   const ids = candidates.map((candidate) => candidate.id);
   const [selected, setSelected] = useSearchValue('compare', (text) => readSelection(text, ids));
   const tallestMm = Math.max(...candidates.map((candidate) => candidate.snapshot.section.depthMm));
