@@ -52,10 +52,20 @@ export function formatNumber(value: number, digits = 3, isTrimmed = false): stri
 
 const exponentOf = (value: number): number => Math.floor(Math.log10(Math.abs(value)));
 
+const formats = new Map<string, Intl.NumberFormat>();
+
+/** Kept, because making one takes longer than all the rest of writing a number, and a page writes thousands. */
+function formatOf(least: number, most: number): Intl.NumberFormat {
+  const key = `${least} ${most}`;
+  const known = formats.get(key);
+  if (known !== undefined) return known;
+  const made = new Intl.NumberFormat('en-US', { minimumFractionDigits: least, maximumFractionDigits: most });
+  formats.set(key, made);
+  return made;
+}
+
 const withDecimals = (value: number, least: number, most: number): string =>
-  value
-    .toLocaleString('en-US', { minimumFractionDigits: least, maximumFractionDigits: most })
-    .replace('-', '−');
+  formatOf(least, most).format(value).replace('-', '−');
 
 function asPowerOfTen(value: number, digits: number): string {
   const [mantissa = '', exponent = ''] = value.toExponential(digits - 1).split('e');
