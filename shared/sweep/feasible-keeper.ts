@@ -31,6 +31,7 @@ export class FeasibleKeeper implements SectionKeeper {
     this.#nearMisses.offer(bit, index, measures);
   }
 
+  /** Once, when all have come. */
   finish(): KeptPiece {
     const { count } = this.#frame;
     return {

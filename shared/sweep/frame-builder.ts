@@ -17,7 +17,17 @@ const grown = <T extends Uint8Array | Uint16Array | Float64Array>(old: T, make: 
   return larger;
 };
 
-/** Gathers the sections of one frame, by ascending index. */
+/** Columns of frames that are finished, for the next: making them anew had the collector run all the time. */
+const SPARE: Float64Array<ArrayBuffer>[] = [];
+const MOST_SPARE = 4;
+
+const spareColumn = (): Float64Array<ArrayBuffer> => SPARE.pop() ?? new Float64Array(FIRST_CAPACITY);
+
+function giveBack(column: Float64Array<ArrayBuffer>): void {
+  if (SPARE.length < MOST_SPARE) SPARE.push(column);
+}
+
+/** Gathers the sections of one frame, by ascending index; finished once. */
 export class FrameBuilder {
   count = 0;
   readonly #hasNumbers: boolean;
@@ -36,8 +46,8 @@ export class FrameBuilder {
 
   constructor(hasNumbers: boolean) {
     this.#hasNumbers = hasNumbers;
-    this.#muPhi = new Float64Array(hasNumbers ? FIRST_CAPACITY : 0);
-    this.#design = new Float64Array(hasNumbers ? FIRST_CAPACITY : 0);
+    this.#muPhi = hasNumbers ? spareColumn() : new Float64Array(0);
+    this.#design = hasNumbers ? spareColumn() : new Float64Array(0);
   }
 
   /** `measures`: a row in the order of MEASURE_IDS. */
@@ -47,10 +57,9 @@ export class FrameBuilder {
     this.#spacings.add(at, steel.spacingMm);
     this.#skins.add(at, steel.skinKg);
     if (this.#hasNumbers) {
-      if (at === this.#muPhi.length) {
-        this.#muPhi = grown(this.#muPhi, (length) => new Float64Array(length));
+      if (at === this.#muPhi.length) this.#muPhi = grown(this.#muPhi, (length) => new Float64Array(length));
+      if (at === this.#design.length)
         this.#design = grown(this.#design, (length) => new Float64Array(length));
-      }
       this.#muPhi[at] = measures[MU_PHI]!;
       this.#design[at] = measures[DESIGN_STRENGTH]!;
     }
@@ -91,7 +100,12 @@ export class FrameBuilder {
       ? { muPhi: this.#muPhi.subarray(0, count), design: this.#design.subarray(0, count) }
       : null;
     const runs = this.#runs.subarray(0, this.#runBytes);
-    return encodeFrame({ from: this.#from, count, numbers, spacingsMm, skinsKg, runs });
+    const bytes = encodeFrame({ from: this.#from, count, numbers, spacingsMm, skinsKg, runs });
+    if (numbers !== null) {
+      giveBack(this.#muPhi);
+      giveBack(this.#design);
+    }
+    return bytes;
   }
 }
 

@@ -154,7 +154,7 @@ export function FrontPanel(props: FrontPanelProps) {
       {isEmpty ? (
         props.whenEmpty
       ) : (
-        <div className="h-[clamp(21rem,50dvh,38rem)] xl:h-[clamp(20rem,calc(100dvh-33.5rem),38rem)]">
+        <div className="h-[clamp(21rem,50dvh,38rem)] xl:h-[clamp(20rem,calc(100dvh-36rem),38rem)]">
           {result === null ? (
             <div className="h-full animate-pulse border-b border-l border-rule" role="status">
               <span className="sr-only">The chart appears with the first results</span>
