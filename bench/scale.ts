@@ -1,10 +1,13 @@
+import { emptyChunk } from '#shared/sweep/chunk.ts';
 import { finishResult } from '#shared/sweep/finish.ts';
+import { mergeChunks } from '#shared/sweep/merge.ts';
 import { prepareSweep } from '#shared/sweep/prepared-sweep.ts';
 import type { SweepProblem, View } from '#shared/sweep/problem.ts';
 import { spaceSize } from '#shared/sweep/space.ts';
 import { sweepRange } from '#shared/sweep/sweep-range.ts';
 import { startComputePool } from '#server/compute/pool.ts';
 import { createCancelFlag, sweepInChunks } from '#server/compute/sweep-in-chunks.ts';
+import { planShards } from '#server/jobs/plan-shards.ts';
 import { OFFICE_PROBLEM } from '../tests/sweep/office-problem.ts';
 import { report } from './report.ts';
 
@@ -45,19 +48,34 @@ const sizes: readonly (readonly [widths: number, depths: number])[] = [
 
 const mostMB = () => process.resourceUsage().maxRSS / MB;
 
-/** Five times ten to the seven on both threads of the service's own pool, which lives in this process as it does there. */
+/** All there may be room for: the most a shard can hold for other views. */
+const KEEP_ALL = { sections: 1e8, numbers: 1e8 };
+
+/**
+ * Five times ten to the seven on both threads of the service's own pool, which lives in this process as it does there; shard
+ * by shard, each with what it keeps for other views.
+ */
 async function memory(view: View): Promise<void> {
   const problem = frame(56, 340);
   const pool = await startComputePool(2);
-  const to = spaceSize(problem.space);
-  const { chunk } = await sweepInChunks({
-    ...{ pool, key: JSON.stringify(view), problem, view, to, cancelFlag: createCancelFlag() },
-  });
+  let whole = emptyChunk();
+  let keptMB = 0;
+  for (const range of planShards({ from: 0, to: spaceSize(problem.space) })) {
+    const { chunk, kept } = await sweepInChunks({
+      ...{ pool, key: JSON.stringify(view), problem, view, cancelFlag: createCancelFlag() },
+      ...range,
+      keepRoom: KEEP_ALL,
+    });
+    whole = mergeChunks(whole, chunk);
+    const bytes = kept?.frames.reduce((sum, { byteLength }) => sum + byteLength, 0) ?? 0;
+    keptMB = Math.max(keptMB, bytes / MB / MB);
+  }
   await pool.close();
   report(`memory, ${Object.values(view).join(', ')}`, {
-    sections: chunk.evaluated,
-    'feasible, %': (100 * chunk.feasible) / chunk.evaluated,
-    'points of the front': chunk.front.length,
+    sections: whole.evaluated,
+    'feasible, %': (100 * whole.feasible) / whole.evaluated,
+    'points of the front': whole.front.length,
+    'MB kept of a shard': keptMB,
     'MB at most, of 500': mostMB(),
   });
 }
