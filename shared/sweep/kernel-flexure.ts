@@ -13,7 +13,7 @@ const MARGIN = 1e-9;
 export class KernelFlexure {
   /** Layers of the section last placed, by depth. */
   readonly layers: SortedLayers;
-  readonly ultimate: UltimateConstants;
+  private readonly ultimate: UltimateConstants;
   private readonly cracked = {
     widthMm: 0,
     modularRatio: 0,

@@ -16,7 +16,7 @@ import { SHEAR, STIRRUP_SPACING } from './kernel-places.ts';
 import type { RowColumns } from './row-columns.ts';
 
 /** What shear asks at each depth, of one tension set and one concrete. */
-export interface ShearColumns {
+interface ShearColumns {
   /** Whose they are, and the places that are filled. */
   shear: ShearConstants | null;
   from: number;
