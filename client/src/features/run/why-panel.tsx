@@ -7,6 +7,7 @@ import { barsText, sizeText, steelText } from '#shared/print/section-text.ts';
 import { measureLabel } from '#shared/print/measure-labels.ts';
 import { RatioBar } from '#client/src/ui/ratio-bar.tsx';
 import { TableFrame } from '#client/src/ui/table-frame.tsx';
+import { BoundsLedger, NotCounted } from './bounds-note.tsx';
 import { checkSequence } from './check-sequence.ts';
 import { checkWords } from './check-words.ts';
 import type { MeasureReader } from '#shared/print/measure-reader.ts';
@@ -123,6 +124,13 @@ export function WhyPanel(props: WhyPanelProps) {
   const missed = useMemo(() => missedChecks(result, source), [result, source]);
   const label = measureLabel(result.view.x, reader.units);
   const most = missed[0]?.failed ?? 1;
+  if (result.bounds !== undefined)
+    return (
+      <section aria-label="Why the rest fell out, in full" className="grid gap-4">
+        <BoundsLedger result={result} bounds={result.bounds} />
+        <NotCounted />
+      </section>
+    );
   return (
     <section aria-label="Why the rest fell out, in full" className="grid grid-cols-[minmax(0,1fr)] gap-5">
       {sequence === null ? <Ladder rungs={ladder(result)} /> : <SequenceList sequence={sequence} />}
