@@ -72,9 +72,16 @@ export class BoundedSearch {
   private readonly heap = new BoxHeap();
   private sectionsOpen = 0;
   private readonly hasBand: boolean;
+  private readonly mostOpenBoxes: number;
 
   /** @throws InvalidSectionError as `prepareSweep` does. */
-  constructor(problem: SweepProblem, view: View, share: SearchShare = { part: 0, of: 1 }) {
+  constructor(
+    problem: SweepProblem,
+    view: View,
+    share: SearchShare = { part: 0, of: 1 },
+    mostOpenBoxes = MOST_OPEN_BOXES,
+  ) {
+    this.mostOpenBoxes = mostOpenBoxes;
     this.prepared = prepareSweep(problem, view);
     this.steps = openSweep(this.prepared);
     this.hasBand = hasBand(view);
@@ -91,7 +98,7 @@ export class BoundedSearch {
         this.openPlacement(this.placements[this.begun++]!);
         continue;
       }
-      const box = this.heap.size > MOST_OPEN_BOXES ? this.heap.popLast() : this.heap.pop();
+      const box = this.heap.size > this.mostOpenBoxes ? this.heap.popLast() : this.heap.pop();
       if (box) this.look(box);
       else if (this.begun < this.placements.length) this.openUpTo += PLACEMENTS_AT_ONCE;
       else return true;

@@ -74,6 +74,13 @@ describe('branch and bound', () => {
     expect(looked.reduce((sum, count) => sum + count)).toBe(OFFICE_SIZE);
   });
 
+  it('finds it also where it keeps few boxes open at a time', () => {
+    const view = { x: 'steelKgPerM', y: 'curvatureDuctility' } as const;
+    const narrow = new BoundedSearch(OFFICE_PROBLEM, view, { part: 0, of: 1 }, 8);
+    while (!narrow.advance(1000));
+    expect(frontOf(narrow.found, view)).toEqual(boundedFront(OFFICE_PROBLEM, view).front);
+  });
+
   it.each([
     ['steelKgPerM', 'curvatureDuctility'],
     ['costPerM', 'depthMm'],
