@@ -18,7 +18,7 @@ import { resolveWorkerFile } from './worker-file.ts';
 
 type WithoutPart<T> = Omit<T, 'kind' | 'part'>;
 
-export interface KeptBlock {
+interface KeptBlock {
   readonly block: SharedArrayBuffer;
   readonly frames: readonly FramePlace[];
 }

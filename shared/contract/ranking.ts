@@ -6,7 +6,7 @@ import { ratesSchema } from './design-basis.ts';
 import { bounded } from './numbers.ts';
 import { openedViewSchema } from './sweep-definition.ts';
 
-export const RATE_BASES = ['run', 'today'] as const;
+const RATE_BASES = ['run', 'today'] as const;
 export type RateBase = (typeof RATE_BASES)[number];
 
 const end = z.number({ error: 'A range ends at a number' }).refine(Number.isFinite).nullable();

@@ -69,7 +69,7 @@ export const renumberNearMisses = (from: NearMisses, indexOf: (index: number) =>
 });
 
 /** For each check the best section by the leading measure. */
-export interface BestWithout {
+interface BestWithout {
   /** −1 for none. */
   readonly indices: Float64Array;
   readonly valueOf: (check: number, measure: MeasureId) => number;

@@ -9,7 +9,7 @@ import { isSolved, type RankWitness } from './rank-frames.ts';
 import { signOf } from './tally.ts';
 
 /** Oriented measures of a view: less is better. */
-export interface OrientedPlace {
+interface OrientedPlace {
   readonly x: number;
   readonly y: number;
 }

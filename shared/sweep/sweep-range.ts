@@ -101,7 +101,7 @@ function forEachRow({ space }: PreparedSweep, from: number, to: number, visitRow
 }
 
 /** One row of depths: its combination, and where it stands on the axes that are counted. */
-export interface RowPlace {
+interface RowPlace {
   readonly combination: Combination;
   readonly widthAt: number;
   readonly fcAt: number;

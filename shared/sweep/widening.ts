@@ -3,7 +3,7 @@ import type { Space, SweepProblem } from './problem.ts';
 import { expandSpace, SPACE_AXES, type SpaceAxis } from './space.ts';
 
 /** For each axis, outermost first, the place in the wider space of each of its values in the narrower one; ascending. */
-export type AxisPlaces = Readonly<Record<SpaceAxis, readonly number[]>>;
+type AxisPlaces = Readonly<Record<SpaceAxis, readonly number[]>>;
 
 /** A space that holds every section of another, and more. Plain data that crosses threads. */
 export interface Widening {
@@ -26,7 +26,7 @@ const valuesOf = (space: Space): Readonly<Record<SpaceAxis, readonly unknown[]>>
 });
 
 /** Whether two pieces of JSON say the same, whatever the order of their keys; what is undefined is as if left out. */
-export function isSameData(a: unknown, b: unknown): boolean {
+function isSameData(a: unknown, b: unknown): boolean {
   if (typeof a !== 'object' || typeof b !== 'object' || a === null || b === null) return a === b;
   const keysOf = (of: object) =>
     Object.entries(of).flatMap(([key, value]) => (value === undefined ? [] : [key]));
