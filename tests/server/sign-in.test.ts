@@ -1,7 +1,7 @@
 import { once } from 'node:events';
 import { get, type IncomingMessage } from 'node:http';
 import type { AddressInfo } from 'node:net';
-import { eq } from 'drizzle-orm';
+import { eq, gt } from 'drizzle-orm';
 import { describe, expect, it } from 'vitest';
 import { startPasswords } from '#server/compute/passwords.ts';
 import { people } from '#server/db/schema/people.ts';
@@ -172,6 +172,20 @@ describe('the session', () => {
     const { headers } = await (await openBrowser(service.app)).agent.get('/api/session');
     expect(cookieOf(headers)).toMatch(/HttpOnly/);
     expect(cookieOf(headers)).toMatch(/SameSite=Lax/);
+  });
+
+  it('lasts longer with use, which is written down once a minute at most: answers wait for that', async () => {
+    const { db } = service.deps;
+    const someone = await signedIn(service, 'engineer');
+    const HOUR_MS = 3_600_000;
+    const endInAnHour = () => db.update(session).set({ expire: new Date(Date.now() + HOUR_MS) });
+    const countPutOff = () => db.$count(session, gt(session.expire, new Date(Date.now() + 11 * HOUR_MS)));
+    await endInAnHour();
+    await someone.get('/session').expect(200);
+    expect(await countPutOff()).toBe(1);
+    await endInAnHour();
+    await someone.get('/session').expect(200);
+    expect(await countPutOff()).toBe(0);
   });
 
   it('ends with signing out', async () => {
