@@ -1,6 +1,7 @@
 import { MEASURE_DIRECTION, MEASURE_IDS, type MeasureId } from '#shared/engine/measures.ts';
 import { inputPlace, inputValues, isInputKey, type ExploreKey } from '#shared/sweep/explore-axis.ts';
 import { FrontBuilder } from '#shared/sweep/front.ts';
+import { FrontInThreeBuilder, MOST_HELD_IN_THREE } from '#shared/sweep/front-in-three.ts';
 import { prepareSweep, type PreparedSweep } from '#shared/sweep/prepared-sweep.ts';
 import type { SweepProblem, View } from '#shared/sweep/problem.ts';
 import {
@@ -84,6 +85,29 @@ function selectFront(prepared: PreparedSweep, { view, filters }: SelectQuery): S
   return { count: sections.length, sections };
 }
 
+/** The front in three measures; `sections` is null where it is too long to be held. */
+function selectFrontInThree(
+  prepared: PreparedSweep,
+  { view, filters }: SelectQuery,
+  third: MeasureId,
+): Selection {
+  const front = new FrontInThreeBuilder();
+  const [x, y, z] = [view.x, view.y, third].map((measure) => MEASURE_IDS.indexOf(measure)) as Three;
+  const [sx, sy, sz] = [view.x, view.y, third].map(signOf) as Three;
+  visitWithin(prepared, filters, (index, measures, at) =>
+    front.add(sx * measures[at + x]!, sy * measures[at + y]!, sz * measures[at + z]!, index),
+  );
+  const { tieCounts, ties, tieEnds, isTooLong } = front.finish();
+  if (isTooLong) return { count: MOST_HELD_IN_THREE, sections: null };
+  const sections = Array.from(tieCounts, (tieCount, i) => ({
+    index: ties[i === 0 ? 0 : tieEnds[i - 1]!]!,
+    tieCount,
+  }));
+  return { count: sections.length, sections };
+}
+
+type Three = [number, number, number];
+
 interface Placed extends SelectedSection {
   readonly x: number;
 }
@@ -119,7 +143,9 @@ function bestOf(prepared: PreparedSweep, { view, filters }: SelectQuery): number
 
 export function selectSections(query: SelectQuery): Selection {
   const prepared = prepareSweep(query.problem, query.view);
-  if (query.list === 'front') return selectFront(prepared, query);
+  const { z } = query.view;
+  if (query.list === 'front')
+    return z ? selectFrontInThree(prepared, query, z) : selectFront(prepared, query);
   if (query.list === 'all') return selectUpTo(prepared, query, Infinity);
   const best = bestOf(prepared, query);
   if (best === Infinity) return { count: 0, sections: [] };

@@ -11,6 +11,7 @@ import type { View } from '#shared/sweep/problem.ts';
 import { sweepRange } from '#shared/sweep/sweep-range.ts';
 import { runs } from '#server/db/schema/runs.ts';
 import { addProject, SMALL_SWEEP, type OfficeProject } from '../support/office-project.ts';
+import { parseCsv, readTable } from '../support/read-table.ts';
 import { followRun, hasEnded } from '../support/run-stream.ts';
 import type { TestOffice } from '../support/office.ts';
 import type { SignedIn } from '../support/signed-in.ts';
@@ -233,6 +234,14 @@ describe('views of a run', () => {
     expect({ front, density }).toEqual({ front: own.body.result.front, density: own.body.result.density });
     expect(frontInThree!.count).toBeGreaterThan(front.length);
     expect((await runOf(run.id)).state).toBe('finished');
+
+    const listed = async (query: string) => {
+      const { text } = await engineer.get(`/runs/${run.id}/sections.csv?list=front&x=${x}&y=${y}${query}`);
+      return readTable(parseCsv(Buffer.from(text))).rows.map((row) => Number(row['Section']));
+    };
+    expect(await listed('&z=widthMm')).toEqual(frontInThree!.points.map(({ index }) => index));
+    // At one width the third measure tells nothing: what is left is a front of two.
+    expect(await listed('&z=widthMm&f=widthMm:300~300')).toEqual(await listed('&f=widthMm:300~300'));
   });
 
   test('opened by several at once are one', async () => {

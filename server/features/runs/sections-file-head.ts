@@ -19,10 +19,12 @@ export interface SectionsAsked {
 }
 
 function listWords({ list, bandShare, view }: SectionsAsked, reader: MeasureReader): string {
-  const [x, y] = [view.x, view.y].map((measure) => {
+  const [x, y, z] = [view.x, view.y, ...(view.z ? [view.z] : [])].map((measure) => {
     const { name, betterText } = measureLabel(measure, reader.units, reader.code);
     return `${name} (${betterText})`;
   });
+  if (list === 'front' && z !== undefined)
+    return `Front of ${x}, ${y} and ${z}: none can be bettered in one without loss in another`;
   if (list === 'front') return `Front of ${x} and ${y}: none is better in both`;
   if (list === 'band')
     return `Near-best band: within ${formatNumber(bandShare * 100, 3, true)} % of the best ${x}`;

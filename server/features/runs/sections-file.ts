@@ -11,7 +11,7 @@ import { fileName } from '#shared/print/file-name.ts';
 import { formatWhole } from '#shared/print/format-quantity.ts';
 import { bandWithin } from '#shared/sweep/band-within.ts';
 import { hasFilters } from '#shared/sweep/range-filters.ts';
-import type { View } from '#shared/sweep/problem.ts';
+import { isSameView, viewOf as namedView, type View } from '#shared/sweep/problem.ts';
 import { methodOf } from '#shared/sweep/run-method.ts';
 import type { Database } from '../../db/client.ts';
 import type { Deps } from '../../deps.ts';
@@ -65,14 +65,13 @@ export function registerSectionsFile(router: Router, deps: Deps): void {
   });
 }
 
-function viewOf(
-  { x, y }: { x?: View['x'] | undefined; y?: View['y'] | undefined },
-  { run }: RunRecord,
-): View {
+function viewOf({ x, y, z }: Partial<View>, { run }: RunRecord): View {
   if (x === undefined && y === undefined) return run.definition.view;
   if (x === undefined || y === undefined || x === y)
     throw invalidInput([{ path: ['y'], message: 'Give two different measures, x and y' }]);
-  return { x, y };
+  if (z === x || z === y)
+    throw invalidInput([{ path: ['z'], message: 'Give a third measure beside x and y, or none' }]);
+  return namedView({ x, y, z });
 }
 
 /** The view as the run keeps it, where the reader may see what is asked of it and it can be had. */
@@ -86,7 +85,7 @@ async function readView(
   // A range on the cost would tell the cost, section by section.
   if (!canSeeView(person, asked.view) || (asked.filters.costPerM !== undefined && !canSeeRates(person)))
     throw forbidden(`Your role (${person.role}) may not see costs`);
-  const kept = (await listViews(db, run.id)).find(({ x, y }) => x === asked.view.x && y === asked.view.y);
+  const kept = (await listViews(db, run.id)).find((one) => isSameView(one, asked.view));
   if (kept === undefined)
     throw conflict('Nobody has opened this comparison yet: open it on the run’s page first');
   const view = await requireView(db, person, { runId: run.id, viewId: kept.id });
@@ -97,9 +96,13 @@ async function readView(
 }
 
 /** What the result names itself; null where the sections have to be found again. */
-function knownSections({ result }: ViewRow, { list, filters, bandShare }: SectionsAsked) {
+function knownSections({ result }: ViewRow, { view, list, filters, bandShare }: SectionsAsked) {
   if (result === null || list === 'all' || hasFilters(filters)) return null;
-  if (list === 'front') return result.front.map(({ index, tieCount }) => ({ index, tieCount }));
+  const { frontInThree } = result;
+  // The view does not name them all.
+  if (list === 'front' && view.z && frontInThree?.count !== frontInThree?.points.length) return null;
+  if (list === 'front')
+    return (frontInThree?.points ?? result.front).map(({ index, tieCount }) => ({ index, tieCount }));
   const band = bandWithin(result, bandShare);
   if (result.isBandCut && band.length === result.band.length) return null;
   return band.map(({ index }) => ({ index, tieCount: 1 }));

@@ -36,6 +36,8 @@ export const sectionsFileQuerySchema = z.object({
   /** The view whose front is meant; the run's own without it. */
   x: z.enum(MEASURE_IDS, { error: 'x must be a measure' }).optional(),
   y: z.enum(MEASURE_IDS, { error: 'y must be a measure' }).optional(),
+  /** With it the front is the one in three measures. */
+  z: z.enum(MEASURE_IDS, { error: 'z must be a measure' }).optional(),
   /** Width of the near-best band, per cent of the best. */
   band: z.coerce.number({ error: 'The band is a number of per cent' }).min(0).max(10).default(5),
   /** Ranges, `depthMm:500~700;costPerM:~90` in stored (SI) units. */

@@ -21,6 +21,7 @@ export function sectionsFileUrl(
   format: TableFormat,
 ): string {
   const query = new URLSearchParams({ list, x: view.x, y: view.y });
+  if (list === 'front' && view.z) query.set('z', view.z);
   if (list === 'band') query.set('band', String(Math.round(bandShare * 1000) / 10));
   const ranges = filtersText(filters);
   if (ranges !== null) query.set('f', ranges);
