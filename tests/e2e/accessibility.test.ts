@@ -15,7 +15,7 @@ const PAGES_SIGNED_IN = [
   candidatePath('B'),
   runPath('reading-room'),
   `${runPath('reading-room')}?show=ranges&f=depthMm:~584.2&by=fc`,
-  `${runPath('reading-room')}?show=why`,
+  `${runPath('reading-room')}?show=why&by=widthMm&in=3`,
   '/projects',
   '/projects/new',
   '/office-standards',
