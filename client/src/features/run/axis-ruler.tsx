@@ -57,7 +57,7 @@ export function AxisRuler({
     .map((mark) => `${print(mark.value)}: ${formatNumber(mark.share * 100, 2, true)} %`)
     .join('; ');
   return (
-    <div>
+    <div className="keep-together">
       <p className="flex flex-wrap items-baseline gap-x-2">
         <span className="font-semibold">
           {name} {symbol}

@@ -65,7 +65,7 @@ function Heads(props: {
             >
               <button
                 type="button"
-                className="hover:text-ink hover:underline"
+                className="on-paper hover:text-ink hover:underline"
                 onClick={() => props.onOrder(nextOrder(props.order, key))}
               >
                 {head}
