@@ -17,13 +17,17 @@ import { startDemoService } from '../tests/support/browser-service.ts';
 /** The last that runs on Node 20. */
 const LIGHTHOUSE = 'lighthouse@12.8.2';
 const TOOLS = path.join(PROJECT_ROOT, '.data', 'tools');
-const AIMS = { performance: 90, accessibility: 95, 'best-practices': 95 } as const;
+/** The timed one last and three times, the middle one counts: the first visit after a start is nobody's usual one. */
+const AIMS = {
+  accessibility: { aim: 95, passes: 1 },
+  'best-practices': { aim: 95, passes: 1 },
+  performance: { aim: 90, passes: 3 },
+} as const;
 const WORST_AUDITS = 12;
 
 interface Audit {
   readonly id: string;
   readonly score: number | null;
-  readonly scoreDisplayMode: string;
   readonly displayValue?: string;
 }
 interface Outcome {
@@ -61,21 +65,37 @@ try {
   await visit.signIn('engineer');
   await visit.page.goto(`${service.origin}/projects`);
   await visit.page.close();
-  const flags = { port, output: 'json', disableStorageReset: true, onlyCategories: Object.keys(AIMS) };
   const address = `${service.origin}${runPath('reading-room')}`;
-  const { lhr } = await lighthouse.default(address, flags, lighthouse.desktopConfig);
-  writeFileSync(path.join(TEST_FOLDER, 'lighthouse.json'), JSON.stringify(lhr));
-  for (const [category, aim] of Object.entries(AIMS)) {
-    const score = Math.round((lhr.categories[category]?.score ?? 0) * 100);
-    console.log(`${category}: ${score}, at least ${aim} aimed at`);
+  // One at a time: reading the source maps for the others would count as the page's own work.
+  for (const [category, { aim, passes }] of Object.entries(AIMS)) {
+    const reports = [];
+    for (let pass = 0; pass < passes; pass++) reports.push(await look(address, category));
+    reports.sort((a, b) => a.score - b.score);
+    const { score, audits } = reports[passes >> 1]!;
+    console.log(`${category}: ${reports.map((one) => one.score).join(', ')}; at least ${aim} aimed at`);
     if (score < aim) process.exitCode = 1;
+    const poor = audits.filter((audit) => audit.score !== null && audit.score < 0.9);
+    for (const { id, score: part, displayValue = '' } of poor.slice(0, WORST_AUDITS))
+      console.log(`  ${id}: ${Math.round(part! * 100)} ${displayValue}`);
   }
-  const poor = Object.values(lhr.audits).filter(({ score }) => score !== null && score < 0.9);
-  for (const { id, score, displayValue = '' } of poor.slice(0, WORST_AUDITS))
-    console.log(`  ${id}: ${Math.round(score! * 100)} ${displayValue}`);
 } finally {
   await context.close();
   await service.close();
   await leavePostgres(TEST_FOLDER);
   rmSync(profile, { recursive: true, force: true });
+}
+
+async function look(address: string, category: string) {
+  const flags = {
+    port,
+    disableStorageReset: true,
+    disableFullPageScreenshot: true,
+    onlyCategories: [category],
+  };
+  const { lhr } = await lighthouse.default(address, flags, lighthouse.desktopConfig);
+  writeFileSync(path.join(TEST_FOLDER, `lighthouse-${category}.json`), JSON.stringify(lhr));
+  return {
+    score: Math.round((lhr.categories[category]?.score ?? 0) * 100),
+    audits: Object.values(lhr.audits),
+  };
 }

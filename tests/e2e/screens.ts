@@ -194,6 +194,16 @@ const OFFICE: readonly Screen[] = [
     await page.keyboard.press('?');
     await page.getByRole('dialog', { name: 'Keyboard shortcuts' }).waitFor();
   }),
+  after('go-to', ['engineer', `${LIBRARY}/beams`], async (page) => {
+    await page.keyboard.press('Control+k');
+    await page.getByRole('option', { name: /^Beam B6/ }).waitFor();
+  }),
+  after('first-steps', ['engineer', `${LIBRARY}/beams`], async (page) => {
+    await page.keyboard.press('Control+k');
+    await page.getByRole('combobox').fill('first steps');
+    await page.keyboard.press('Enter');
+    await page.getByRole('complementary', { name: 'First steps' }).waitFor();
+  }),
   at('verification', 'engineer', '/verification'),
   at('operations-idle', 'admin', '/operations'),
   at('not-found', 'engineer', '/no-such-page'),
