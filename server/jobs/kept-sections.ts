@@ -10,7 +10,7 @@ import type { SectionRange } from './plan-shards.ts';
 /** Sections a run keeps for other views at most: about a byte each. With more, views are computed from the space. */
 const MOST_KEPT = 2 ** 25;
 /** So many of them keep μφ and strength, 16 bytes more; of the others the hot loop works them out again. */
-const MOST_WITH_NUMBERS = 2 ** 21;
+const MOST_WITH_NUMBERS = 2 ** 20;
 /** What all runs keep; the oldest go first. */
 const MOST_BYTES = 2 ** 31;
 
