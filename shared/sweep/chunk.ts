@@ -21,9 +21,9 @@ export interface ChunkResult {
   readonly feasible: number;
   readonly failed: Float64Array;
   readonly failedOnly: Float64Array;
-  /** Best section failing only that check; NaN and −1 for none. */
   /** Sections of which that check is the first they fail, in the order of CHECK_IDS: with the feasible ones they are all. */
   readonly failedFirst: Float64Array;
+  /** Best section failing only that check; NaN and −1 for none. */
   readonly withoutX: Float64Array;
   readonly withoutY: Float64Array;
   readonly withoutIndex: Float64Array;
@@ -52,10 +52,10 @@ export function emptyChunk(): ChunkResult {
     feasible: 0,
     failed: new Float64Array(checks),
     failedOnly: new Float64Array(checks),
+    failedFirst: new Float64Array(checks),
     withoutX: new Float64Array(checks).fill(NaN),
     withoutY: new Float64Array(checks).fill(NaN),
     withoutIndex: new Float64Array(checks).fill(-1),
-    failedFirst: new Float64Array(checks),
     bestValue: new Float64Array(measures).fill(NaN),
     bestIndex: new Float64Array(measures).fill(-1),
     front: [],

@@ -84,6 +84,7 @@ function SharedBody({ shared }: { readonly shared: SharedShortlist }) {
             </h2>
             {group.length >= 2 && (
               <CompareTable
+                label={`Candidates side by side, ${group[0]!.beam.mark}`}
                 candidates={group.slice(0, COMPARE_MAX)}
                 units={shared.units}
                 baselineId={null}

@@ -21,6 +21,8 @@ interface CompareTableProps {
   readonly units: UnitSystem;
   readonly baselineId: string | null;
   readonly hasMoney: boolean;
+  /** Names the table where a page has several. */
+  readonly label?: string;
 }
 
 /** Two candidates at the ends of a wide screen are hard to compare: so many stand no further apart than this. */
@@ -33,7 +35,8 @@ const WIDTH_OF: Readonly<Record<number, string>> = {
 const MONEY_ROWS = ['costPerM', 'cost-total'];
 
 /** Candidates as columns, standing on one ground line at one scale; what is compared as rows. */
-export function CompareTable({ candidates, units, baselineId, hasMoney }: CompareTableProps) {
+export function CompareTable(props: CompareTableProps) {
+  const { candidates, units, baselineId, hasMoney, label = 'Candidates side by side' } = props;
   const tallestMm = Math.max(...candidates.map((candidate) => candidate.snapshot.section.depthMm));
   const shown = (row: ComparisonRow) => hasMoney || !MONEY_ROWS.includes(row.id);
   const costLines = costRows(candidates, baselineId, hasMoney);
@@ -41,7 +44,7 @@ export function CompareTable({ candidates, units, baselineId, hasMoney }: Compar
     new Set(candidates.map(({ takeoff }) => `${takeoff.spanMm}×${takeoff.count}`)).size === 1;
   const { spanMm, count } = candidates[0]!.takeoff;
   return (
-    <TableFrame label="Candidates side by side" className={WIDTH_OF[candidates.length]}>
+    <TableFrame label={label} className={WIDTH_OF[candidates.length]}>
       <thead>
         <tr className="border-b-0!">
           <th scope="col" className="sticky left-0 z-10 w-40 min-w-32 bg-paper align-bottom">
