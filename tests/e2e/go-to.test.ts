@@ -1,5 +1,5 @@
 import { AxeBuilder } from '@axe-core/playwright';
-import type { Page } from 'playwright-core';
+import type { Locator, Page } from 'playwright-core';
 import { describe, expect, it } from 'vitest';
 import { candidatePath, LIBRARY, runPath } from '../support/browser-demo.ts';
 import { useBrowserOffice } from '../support/browser-office.ts';
@@ -13,13 +13,14 @@ async function axeFindings(page: Page): Promise<string[]> {
 
 const pathOf = (page: Page): string => new URL(page.url()).pathname;
 
+const palette = (page: Page): Locator => page.getByRole('dialog', { name: 'Go to, or do' });
+
 async function choose(page: Page, typed: string, name: RegExp): Promise<void> {
   await page.keyboard.press('Control+k');
-  await page.getByRole('combobox').fill(typed);
-  const first = page.getByRole('option').first();
-  await first.filter({ hasText: name }).waitFor();
+  await palette(page).getByRole('combobox').fill(typed);
+  await palette(page).getByRole('option').first().filter({ hasText: name }).waitFor();
   await page.keyboard.press('Enter');
-  await page.getByRole('combobox').waitFor({ state: 'detached' });
+  await palette(page).waitFor({ state: 'detached' });
 }
 
 describe('everything by name, under Ctrl K', () => {
@@ -28,9 +29,11 @@ describe('everything by name, under Ctrl K', () => {
     const { page } = visit;
     await visit.open(`${LIBRARY}/beams`);
     await page.keyboard.press('Control+k');
-    await page.getByRole('option', { name: /^Beam B6/ }).waitFor();
+    await palette(page)
+      .getByRole('option', { name: /^Beam B6/ })
+      .waitFor();
     expect(await axeFindings(page)).toEqual([]);
-    await page.getByRole('combobox').fill('no such thing at all');
+    await palette(page).getByRole('combobox').fill('no such thing at all');
     await page.getByText(/^Nothing here is called/).waitFor();
     expect(await axeFindings(page)).toEqual([]);
     await page.keyboard.press('Escape');
