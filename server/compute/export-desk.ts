@@ -45,7 +45,7 @@ export async function startExportDesk(): Promise<ExportDesk> {
       const file = path.join(tmpdir(), `fairweight-${randomUUID()}`);
       inWork++;
       try {
-        const reply = await piscina.run({ ...order, path: file } as ExportTask, { signal });
+        const reply = await piscina.run({ ...order, path: file }, { signal });
         await use(file, reply);
       } finally {
         inWork--;

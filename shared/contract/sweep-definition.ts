@@ -145,7 +145,7 @@ const spaceSchema = z
       });
   }) satisfies z.ZodType<SpaceDefinition>;
 
-export const viewSchema = z
+const viewSchema = z
   .object({ x: z.enum(MEASURE_IDS), y: z.enum(MEASURE_IDS) })
   .refine((view) => view.x !== view.y, {
     path: ['y'],

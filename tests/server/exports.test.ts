@@ -208,7 +208,7 @@ describe('takeoff', () => {
     const rate = cellAfter(rowsOf(workbook.get('A')!), 'Rate of longitudinal bars, XTS/kg');
     const dearer = new Map(workbook).set(
       'A',
-      new Map(workbook.get('A')!).set(rate.name, { value: Number(rate.value) * 2, formula: null }),
+      new Map(workbook.get('A')).set(rate.name, { value: Number(rate.value) * 2, formula: null }),
     );
     const options = rowsOf(workbook.get('Options')!);
     const total = cellAfter(options, 'Cost in all', 2).name;

@@ -48,7 +48,10 @@ interface RunParts extends RunRecord {
   readonly views: readonly ViewState[];
 }
 
-export function presentRun({ run, sweep, beam, project, summary, taken, views }: RunParts, person: Person): Run {
+export function presentRun(
+  { run, sweep, beam, project, summary, taken, views }: RunParts,
+  person: Person,
+): Run {
   const { id, mark, location, spanMm, count } = beam;
   return {
     ...summary,

@@ -14,7 +14,7 @@ const STANDARDS = DEMO_STANDARDS.map(({ key, standard }): OfficeStandard => ({
   updatedAt: '2026-01-01T00:00:00.000Z',
 }));
 const PRESETS = presetsFor(STANDARDS, PROJECT.designBasis);
-const [floor] = PRESETS;
+const floor = PRESETS[0]!;
 
 describe('presets of the office', () => {
   it('are those of standards for the project’s bars in its units', () => {
@@ -27,12 +27,12 @@ describe('presets of the office', () => {
   });
 
   it('fill a new sweep, which can be run as it stands and says what it was filled from', () => {
-    const form = firstSweepForm(PROJECT, BEAM, floor!);
+    const form = firstSweepForm(PROJECT, BEAM, floor);
     expect(form.filledFrom).toBe('US customary, Grade 60: Floor beams');
     const reading = readSweepForm(form, 'us');
     if (reading.kind === 'incomplete') throw new Error([...reading.errors.values()].join('; '));
     const { space, demand, rules } = reading.input.definition;
-    const { standard, ranges } = floor!;
+    const { standard, ranges } = floor;
     expect(space.width).toEqual({
       kind: 'range',
       from: ranges.leastWidthMm,
@@ -57,13 +57,13 @@ describe('presets of the office', () => {
 
   it('leave demand, slab, cover, fy and the measures as they were', () => {
     const own = firstSweepForm(PROJECT, BEAM);
-    const filled = withPreset(own, floor!, 'us');
+    const filled = withPreset(own, floor, 'us');
     for (const key of ['name', 'demand', 'flange', 'view'] as const) expect(filled[key]).toBe(own[key]);
     expect([filled.axes.fy, filled.axes.cover]).toEqual([own.axes.fy, own.axes.cover]);
   });
 
   it('say each thing in which a form departs from what the office builds', () => {
-    const form = firstSweepForm(PROJECT, BEAM, floor!);
+    const form = firstSweepForm(PROJECT, BEAM, floor);
     const odd = {
       ...form,
       axes: {
@@ -74,7 +74,7 @@ describe('presets of the office', () => {
       steel: { ...form.steel, tension: { ...form.steel.tension, sizes: ['#8', '#14'] } },
       stirrups: [{ bar: '#4', legs: 2, spacingMm: 6 * MM_PER_IN, isDesigned: false }],
     };
-    expect(departuresFrom(odd, floor!.standard, 'us')).toEqual([
+    expect(departuresFrom(odd, floor.standard, 'us')).toEqual([
       'h = 16.5 in is no multiple of the office’s 1 in',
       '6.5 ksi, 8 ksi are no mixes of the office',
       '#14 is not on the office’s bar list',
@@ -83,7 +83,7 @@ describe('presets of the office', () => {
   });
 
   it('are not guessed for a stored sweep', () => {
-    const reading = readSweepForm(firstSweepForm(PROJECT, BEAM, floor!), 'us');
+    const reading = readSweepForm(firstSweepForm(PROJECT, BEAM, floor), 'us');
     if (reading.kind === 'incomplete') throw new Error('not complete');
     expect(sweepForm(reading.input, 'us').filledFrom).toBeNull();
   });

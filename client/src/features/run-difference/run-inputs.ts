@@ -123,7 +123,8 @@ function ruleInputs({ definition }: InputRun, print: Print): RunInput[] {
 
 function curveInputs(basis: DesignBasis): readonly (readonly [string, unknown, string])[] {
   const { curve } = basis;
-  const rest = curve === undefined ? {} : { ...curve, concreteLaw: null, steelLaw: null };
+  const rest: Readonly<Record<string, unknown>> =
+    curve === undefined ? {} : { ...curve, concreteLaw: null, steelLaw: null };
   return [
     [
       'Concrete law of the curve',
@@ -139,7 +140,7 @@ function curveInputs(basis: DesignBasis): readonly (readonly [string, unknown, s
       'Values of the laws',
       rest,
       Object.entries(rest)
-        .flatMap(([key, value]) => (value === null ? [] : [`${key} ${String(value)}`]))
+        .flatMap(([key, value]) => (value === null ? [] : [`${key} ${JSON.stringify(value)}`]))
         .join(', ') || 'their own',
     ],
   ];
