@@ -58,7 +58,7 @@ describe('the sweep form', () => {
     await openSweepForm(page);
     const sizes = page.getByRole('group', { name: 'Bottom bars: sizes' });
     const toggle = (size: string) => sizes.getByLabel(size, { exact: true }).press('Space');
-    for (const size of ['#6', '#7', '#8', '#9']) await toggle(size);
+    for (const size of ['#6', '#7', '#8', '#9', '#10']) await toggle(size);
     await sizes.getByText('Tension bars: choose at least one size').waitFor();
     await tally(page).getByText('One field needs attention.').waitFor();
     await toggle('#9');

@@ -64,7 +64,7 @@ describe('a finished run', () => {
     expect(asked(page, 'in')).toBe('3');
     await page.reload();
     await told.waitFor();
-    expect(await marks()).toBe(inThree);
+    await expect.poll(marks).toBe(inThree);
     await page.getByRole('group', { name: 'Shown below the strip' }).getByText('Ranges').click();
     await page.getByLabel('Depth h to').fill('23');
     await withinRanges(page);
