@@ -4,7 +4,7 @@ import { defineConfig } from 'vitest/config';
 const SERVER_GLOBAL_SETUP = './tests/support/global-setup.ts';
 
 /** For what never ends, not for what is slow: the machine may be shared. */
-const HANG_MS = 180_000;
+const HANG_MS = 400_000;
 
 export default defineConfig({
   test: {
