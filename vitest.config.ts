@@ -5,6 +5,8 @@ const SERVER_GLOBAL_SETUP = './tests/support/global-setup.ts';
 
 /** For what never ends, not for what is slow: the machine may be shared. */
 const HANG_MS = 400_000;
+/** What is waited for comes; how soon is no test's business. */
+const POLL_MS = 60_000;
 
 export default defineConfig({
   test: {
@@ -30,6 +32,7 @@ export default defineConfig({
           include: ['tests/client/**/*.test.tsx'],
           environment: 'happy-dom',
           testTimeout: HANG_MS,
+          expect: { poll: { timeout: POLL_MS } },
           isolate: false,
         },
       },
@@ -40,6 +43,7 @@ export default defineConfig({
           globalSetup: SERVER_GLOBAL_SETUP,
           testTimeout: HANG_MS,
           hookTimeout: HANG_MS,
+          expect: { poll: { timeout: POLL_MS } },
         },
       },
       {
@@ -51,7 +55,7 @@ export default defineConfig({
           fileParallelism: false,
           testTimeout: HANG_MS,
           hookTimeout: HANG_MS,
-          expect: { poll: { timeout: 15_000 } },
+          expect: { poll: { timeout: POLL_MS } },
         },
       },
     ],
