@@ -58,6 +58,8 @@ describe('a finished run', () => {
     const inTwo = await marks();
     await page.getByLabel('Front in three measures').check();
     await told.waitFor();
+    // Until then it is the front of what has been ranked so far.
+    await page.getByText(/sections evaluated, none better than the front/).waitFor();
     await expect.poll(marks).toBeGreaterThan(inTwo);
     const inThree = Number(/Marks: ([\d,]+) sections/.exec(await told.innerText())![1]!.replace(',', ''));
     await expect.poll(marks).toBe(inThree);
