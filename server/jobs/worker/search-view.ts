@@ -2,48 +2,28 @@ import { and, eq, isNull } from 'drizzle-orm';
 import { boundedResult } from '#shared/sweep/bounded-result.ts';
 import type { BoundsReply } from '../../compute/bounds-protocol.ts';
 import { searchByBounds } from '../../compute/search-by-bounds.ts';
-import { isDatabaseAway } from '../../db/database-error.ts';
 import { viewShards } from '../../db/schema/view-shards.ts';
 import { changeView, STOP_COUNTING } from '../change-view.ts';
 import { describePart, describeSearch } from '../describe-result.ts';
-import { failView } from '../end-view.ts';
-import { claimShard, isShard, type ClaimedShard, type ShardKey } from './claim-shard.ts';
-import { FAILURE_MESSAGE, type WorkContext } from './context.ts';
+import { isShard, type ClaimedShard, type ShardKey } from './claim-shard.ts';
+import type { WorkContext } from './context.ts';
 import { endShard } from './end-shard.ts';
 import { finishView } from './finish-view.ts';
 import { persistently } from './persistently.ts';
 import { readKnownFront, type KnownFront } from './known-front.ts';
 import { SearchProgress } from './search-progress.ts';
-import { StopSwitch } from './stop-switch.ts';
+import type { StopSwitch } from './stop-switch.ts';
+import { workOnClaimed } from './work-on-claimed.ts';
 
 /**
  * Searches the space of a view by bounds, from the run's frozen inputs. A search that was broken off begins again, but what
  * it had found spares the new one most of the way.
  */
-export async function searchView(
+export const searchView = (
   key: ShardKey & { readonly workerId: string },
   context: WorkContext,
-): Promise<void> {
-  const shard = await claimShard(context.db, key);
-  if (shard === undefined) return;
-  const stopSwitch = new StopSwitch(shard.viewId, context);
-  try {
-    await searchClaimed(shard, stopSwitch, context);
-  } catch (error) {
-    // The queue hands the search out again once there is a database.
-    if (isDatabaseAway(error)) throw error;
-    if (context.stopSignal.aborted) {
-      await endShard(context, shard, { part: undefined, tookMs: 0, isToGoOn: true });
-      return;
-    }
-    context.tally.addFailure();
-    context.log.error({ err: error, viewId: shard.viewId }, 'A space could not be searched');
-    await failView(context.db, shard, FAILURE_MESSAGE);
-    await endShard(context, shard, { part: undefined, tookMs: 0, isToGoOn: false });
-  } finally {
-    stopSwitch.release();
-  }
-}
+): Promise<void> =>
+  workOnClaimed(key, context, { work: searchClaimed, failure: 'A space could not be searched' });
 
 async function searchClaimed(
   shard: ClaimedShard,
